@@ -1,0 +1,27 @@
+package coldseam.mesh.triangulation;
+
+import coldseam.mesh.partition.Partition;
+import java.util.function.IntPredicate;
+
+/**
+ * Makes a coarse, graded, constrained Delaunay mesh of a partition: no angle under 20° but where
+ * the drawing itself has a smaller one, and but in ladders, the right-angled triangles that fill
+ * faces thinner than about 1/20 of their length.
+ */
+public final class Triangulator {
+  private Triangulator() {}
+
+  /**
+   * Triangulates the faces whose label is accepted.
+   *
+   * @param partition the faces
+   * @param meshed accepts the labels to be filled with triangles (others, and uncovered ground, are
+   *     left open)
+   * @param size the longest side wanted at each place
+   * @return the mesh, with the longest side of each triangle as its side 0
+   * @throws IllegalArgumentException if no face is accepted
+   */
+  public static Mesh triangulate(Partition partition, IntPredicate meshed, SizeField size) {
+    throw new UnsupportedOperationException();
+  }
+}
