@@ -1,0 +1,41 @@
+package coldseam.solver.conduction;
+
+import coldseam.mesh.partition.Partition;
+import coldseam.solver.detail.Accuracy;
+import coldseam.solver.detail.Conditions;
+
+/** Solves one detail with one film set: the adaptive loop and nothing else. */
+public final class Conduction {
+  private Conduction() {}
+
+  /**
+   * What the adaptive loop has to meet.
+   *
+   * @param accuracy the half-widths asked for and the cap on unknowns
+   * @param psiAsked whether a ψ is wanted, so that its absolute accuracy counts
+   * @param transmittanceAsked whether a U is wanted
+   * @param surfaceTemperatures whether coldest and warmest surface points are wanted: refinement
+   *     then also goes on until they move by less than 0.01 K (for spaces 25 K apart, scaled)
+   * @param temperaturesC temperature of every space, °C; decides which points are coldest
+   */
+  public record Goal(
+      Accuracy accuracy,
+      boolean psiAsked,
+      boolean transmittanceAsked,
+      boolean surfaceTemperatures,
+      double[] temperaturesC) {}
+
+  /**
+   * Solves.
+   *
+   * @param partition the partition of the detail
+   * @param conditions conditions on its edges
+   * @param goal what to meet
+   * @param progress told of each pass
+   * @return the solution on the final mesh
+   */
+  public static Solution solve(
+      Partition partition, Conditions conditions, Goal goal, Progress progress) {
+    throw new UnsupportedOperationException();
+  }
+}

@@ -1,0 +1,35 @@
+package coldseam.solver.detail;
+
+/**
+ * The half-widths asked for.
+ *
+ * @param couplingRelative of L2D, relative to it; the smaller of this and the next counts
+ * @param couplingWPerMK of L2D, W/(m·K)
+ * @param psiWPerMK of ψ, W/(m·K)
+ * @param transmittanceRelative of U, relative to it
+ * @param mostUnknowns where refinement stops, whatever is reached
+ */
+public record Accuracy(
+    double couplingRelative,
+    double couplingWPerMK,
+    double psiWPerMK,
+    double transmittanceRelative,
+    int mostUnknowns) {
+  /** L2D the smaller of 0.2 % and 0.001 W/(m·K); ψ 0.001 W/(m·K); U 0.2 %. */
+  public static final Accuracy STANDARD = new Accuracy(0.002, 0.001, 0.001, 0.002, 2_000_000);
+
+  /**
+   * Checks the figures.
+   *
+   * @throws IllegalArgumentException unless every figure is more than 0
+   */
+  public Accuracy {
+    if (!(couplingRelative > 0)
+        || !(couplingWPerMK > 0)
+        || !(psiWPerMK > 0)
+        || !(transmittanceRelative > 0)
+        || mostUnknowns <= 0) {
+      throw new IllegalArgumentException("every accuracy is more than 0");
+    }
+  }
+}

@@ -1,0 +1,75 @@
+package coldseam.solver.detail;
+
+import coldseam.mesh.partition.LabelledArea;
+import java.util.ArrayList;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Set;
+
+/**
+ * One junction as it is to be solved. Immutable.
+ *
+ * @param title as typed in the case
+ * @param geometry plane or axisymmetric
+ * @param view how the section lies in the building
+ * @param areas in the order laid, a later one over the earlier
+ * @param spaces every space, laid as an area or not; their order is that of all results
+ * @param stretches named pieces of outline
+ * @param flanks flanks named in the case; others are found by the solver
+ * @param wanted the results asked for
+ * @param assumptions what reading the case had to assume
+ */
+public record Detail(
+    String title,
+    Geometry geometry,
+    View view,
+    List<Area> areas,
+    List<Space> spaces,
+    List<Stretch> stretches,
+    List<Flank> flanks,
+    List<Wanted> wanted,
+    List<Assumption> assumptions) {
+  /** Copies the lists. */
+  public Detail {
+    areas = List.copyOf(areas);
+    spaces = List.copyOf(spaces);
+    stretches = List.copyOf(stretches);
+    flanks = List.copyOf(flanks);
+    wanted = List.copyOf(wanted);
+    assumptions = List.copyOf(assumptions);
+  }
+
+  /** The distinct fills of the areas in the order first laid; a fill's index is its label. */
+  public List<Fill> fills() {
+    Set<Fill> distinct = new LinkedHashSet<>();
+    for (Area area : areas) {
+      distinct.add(area.fill());
+    }
+    return List.copyOf(distinct);
+  }
+
+  /** The areas with the index of their fill as label, ready to be made into a partition. */
+  public List<LabelledArea> labelledAreas() {
+    List<Fill> fills = fills();
+    List<LabelledArea> labelled = new ArrayList<>(areas.size());
+    for (Area area : areas) {
+      labelled.add(new LabelledArea(fills.indexOf(area.fill()), area.rings()));
+    }
+    return labelled;
+  }
+
+  /**
+   * Index of a space.
+   *
+   * @param name its name
+   * @return the index in {@link #spaces()}, or −1
+   */
+  public int spaceIndex(String name) {
+    for (int i = 0; i < spaces.size(); i++) {
+      if (spaces.get(i).name().equals(name)) {
+        return i;
+      }
+    }
+    return -1;
+  }
+}

@@ -1,0 +1,257 @@
+package coldseam.solver.result;
+
+import coldseam.mesh.plane.Point;
+import coldseam.solver.conduction.Quantity;
+import coldseam.solver.conduction.Solution;
+import coldseam.solver.detail.Assumption;
+import coldseam.solver.detail.Bracket;
+import coldseam.solver.detail.Detail;
+import coldseam.solver.detail.DimensionSystem;
+import coldseam.solver.detail.FilmSet;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
+
+/**
+ * Everything wanted of one detail. Heat flow is positive from a space into the detail.
+ *
+ * @param detail what was solved
+ * @param couplings coupling coefficients between all pairs of spaces
+ * @param psi linear transmittances in the order asked
+ * @param transmittances effective U in the order asked
+ * @param spaces one entry a space, in the detail's order
+ * @param stretches one entry a named stretch, in the detail's order
+ * @param points temperatures at named points
+ * @param profiles temperatures along lines and surfaces
+ * @param weights temperature weighting factors of the coldest point of each space and of the named
+ *     points; empty for fewer than three spaces
+ * @param flanks every flank, named or found
+ * @param assumptions everything chosen for the user
+ * @param warnings sentences, each with its figures
+ * @param balance in = out
+ * @param largestDisplacementM how far resolving the section moved any point, m
+ * @param heatLoss the fields with the films for heat loss
+ * @param surface the fields with the films for surface temperatures; empty if no surface
+ *     temperature is finite or wanted
+ * @param triangles triangles of the final heat-loss mesh
+ * @param unknowns unknowns of the temperature problem on it
+ * @param timesMs milliseconds by stage, in the order run
+ */
+public record Result(
+    Detail detail,
+    List<Coupling> couplings,
+    List<LinearTransmittance> psi,
+    List<EffectiveTransmittance> transmittances,
+    List<SpaceResult> spaces,
+    List<StretchResult> stretches,
+    List<PointResult> points,
+    List<ProfileResult> profiles,
+    List<Weight> weights,
+    List<FlankResult> flanks,
+    List<Assumption> assumptions,
+    List<String> warnings,
+    Balance balance,
+    double largestDisplacementM,
+    Solution heatLoss,
+    Optional<Solution> surface,
+    int triangles,
+    int unknowns,
+    Map<String, Double> timesMs) {
+
+  /**
+   * L2D of a pair.
+   *
+   * @param from a space
+   * @param to another
+   * @param valueWPerMK W/(m·K)
+   */
+  public record Coupling(String from, String to, Quantity valueWPerMK) {}
+
+  /**
+   * One term taken off L2D.
+   *
+   * @param name the flank or part
+   * @param uWPerM2K its U, W/(m²·K); empty when another detail's L2D is taken off
+   * @param lengthM its length, m
+   * @param weight b, mostly 1
+   * @param valueWPerMK what is taken off, W/(m·K)
+   * @param derivation where U and length come from, in words
+   */
+  public record Subtracted(
+      String name,
+      Optional<Bracket> uWPerM2K,
+      OptionalDouble lengthM,
+      double weight,
+      Bracket valueWPerMK,
+      String derivation) {}
+
+  /**
+   * ψ.
+   *
+   * @param name its name in the case
+   * @param of the junction or "glass edge"
+   * @param warm spaces on the warm side
+   * @param cold spaces on the cold side
+   * @param dimensions how lengths are measured
+   * @param couplingWPerMK the (weighted) L2D it starts from
+   * @param valueWPerMK ψ, W/(m·K)
+   * @param subtracted what was taken off
+   * @param parts each pair's part of the L2D, when spaces were merged: name "warm – cold"
+   */
+  public record LinearTransmittance(
+      String name,
+      String of,
+      List<String> warm,
+      List<String> cold,
+      DimensionSystem dimensions,
+      Quantity couplingWPerMK,
+      Quantity valueWPerMK,
+      List<Subtracted> subtracted,
+      List<Coupling> parts) {}
+
+  /**
+   * Effective U.
+   *
+   * @param of what it is of
+   * @param warm spaces on the warm side
+   * @param cold spaces on the cold side
+   * @param valueWPerM2K U, W/(m²·K)
+   * @param resistanceM2KPerW total resistance 1/U, films included, m²·K/W
+   * @param widthM module width, m
+   */
+  public record EffectiveTransmittance(
+      String of,
+      List<String> warm,
+      List<String> cold,
+      Quantity valueWPerM2K,
+      Quantity resistanceM2KPerW,
+      double widthM) {}
+
+  /**
+   * A point of a surface; an estimate, never certified.
+   *
+   * @param filmSet films it was computed with
+   * @param temperatureC °C
+   * @param at the place, in the coordinates of the drawing, m
+   * @param filmM2KPerW local Rs, m²·K/W
+   * @param fRsi temperature factor relative to the coldest space; empty where it has no meaning
+   * @param estimatedErrorK a guess at the error, K
+   */
+  public record SurfacePoint(
+      FilmSet filmSet,
+      double temperatureC,
+      Point at,
+      double filmM2KPerW,
+      OptionalDouble fRsi,
+      double estimatedErrorK) {}
+
+  /**
+   * What concerns one space.
+   *
+   * @param name its name
+   * @param temperatureC °C, a result if it floats
+   * @param floating whether the temperature is a result
+   * @param heatFlowWPerM into the detail, W/m; infinite where two fixed temperatures meet
+   * @param coldest its coldest surface point, if it faces anything
+   * @param warmest its warmest surface point
+   * @param referenceSpace the space f_Rsi is relative to, if any
+   */
+  public record SpaceResult(
+      String name,
+      double temperatureC,
+      boolean floating,
+      double heatFlowWPerM,
+      Optional<SurfacePoint> coldest,
+      Optional<SurfacePoint> warmest,
+      Optional<String> referenceSpace) {}
+
+  /**
+   * What concerns one stretch.
+   *
+   * @param name its name
+   * @param space the space it faces, empty on cut-offs and prescribed flows
+   * @param heatFlowWPerM into the detail, W/m
+   * @param lengthM developed length, m
+   */
+  public record StretchResult(String name, String space, double heatFlowWPerM, double lengthM) {}
+
+  /**
+   * A temperature at a point.
+   *
+   * @param name its name
+   * @param filmSet films it was computed with
+   * @param at the place, m
+   * @param temperatureC °C
+   */
+  public record PointResult(String name, FilmSet filmSet, Point at, double temperatureC) {}
+
+  /**
+   * Temperatures along a line or a surface.
+   *
+   * @param name its name
+   * @param filmSet films they were computed with
+   * @param samples in order
+   */
+  public record ProfileResult(String name, FilmSet filmSet, List<Sample> samples) {}
+
+  /**
+   * One temperature of a profile.
+   *
+   * @param distanceM developed distance from the start, m
+   * @param at the place, m
+   * @param temperatureC °C, NaN outside the conducting section
+   */
+  public record Sample(double distanceM, Point at, double temperatureC) {}
+
+  /**
+   * A temperature weighting factor: θ(point) = Σ g_k θ_k (ISO 10211).
+   *
+   * @param point name of the point, or "coldest of SPACE"
+   * @param filmSet films it was computed with
+   * @param space the space
+   * @param g the factor
+   */
+  public record Weight(String point, FilmSet filmSet, String space, double g) {}
+
+  /**
+   * A flank.
+   *
+   * @param name its name, or one given by the solver
+   * @param uWPerM2K U between its two spaces, W/(m²·K)
+   * @param warm the warmer space it separates
+   * @param cold the colder space
+   * @param cutStart one end of its cut-off plane, m; empty if typed altogether
+   * @param cutEnd the other end, m
+   * @param layers what was met at the plane, warm to cold, in words with thickness in mm
+   * @param lengthM lengths by dimension system where known, m
+   */
+  public record FlankResult(
+      String name,
+      Bracket uWPerM2K,
+      String warm,
+      String cold,
+      Optional<Point> cutStart,
+      Optional<Point> cutEnd,
+      List<String> layers,
+      Map<DimensionSystem, Length> lengthM) {}
+
+  /**
+   * A reference length and the line it was measured along.
+   *
+   * @param valueM m
+   * @param from one end for drawing, m; empty when typed
+   * @param to the other end, m
+   * @param derivation how it was found, in words
+   */
+  public record Length(
+      double valueM, Optional<Point> from, Optional<Point> to, String derivation) {}
+
+  /**
+   * The balance of heat.
+   *
+   * @param sumWPerM sum of all flows into the detail, W/m
+   * @param relative the same over half the sum of their absolute values
+   */
+  public record Balance(double sumWPerM, double relative) {}
+}
