@@ -1,0 +1,49 @@
+package coldseam.cases;
+
+import coldseam.solver.detail.Accuracy;
+import coldseam.solver.detail.Detail;
+import coldseam.solver.detail.Fault;
+import java.nio.file.Path;
+import java.util.List;
+import java.util.Optional;
+
+/** A case file that was read without a problem. Immutable. */
+public interface Case {
+  /** The file. */
+  Path file();
+
+  /** The title typed in it. */
+  String title();
+
+  /** Names of its variants in the order written. */
+  List<String> variants();
+
+  /**
+   * The detail of the base case or of a variant.
+   *
+   * @param variant a name of {@link #variants()}, empty for the base case
+   * @return the detail
+   * @throws CaseException if the variant's changes do not make a valid case
+   */
+  Detail detail(Optional<String> variant) throws CaseException;
+
+  /** The accuracy asked for in the case, the standard one where it says nothing. */
+  Accuracy accuracy();
+
+  /** What it expects of itself. */
+  List<Expectation> expectations();
+
+  /** Name of the length unit that the case draws in: "mm", "cm", "m" or "in". */
+  String unit();
+
+  /** Metres per length unit. */
+  double metresPerUnit();
+
+  /**
+   * Puts a fault that the solver found in its place in the file.
+   *
+   * @param fault the fault
+   * @return the problem with line and column where the thing at fault is written
+   */
+  Problem locate(Fault fault);
+}
