@@ -1,6 +1,7 @@
 package coldseam.solver.detail;
 
 import coldseam.mesh.partition.Partition;
+import java.util.BitSet;
 import java.util.List;
 
 /** What happens on every edge of the outline of the conducting section, for one film set. */
@@ -21,7 +22,33 @@ public final class Conditions {
     HOLLOW
   }
 
-  private Conditions() {}
+  private final FilmSet filmSet;
+  private final Partition partition;
+  private final Material[] materials;
+  private final Kind[] kinds;
+  private final int[] spaces;
+  private final double[] films;
+  private final double[] flows;
+  private final BitSet glazing;
+  private final BitSet symmetry;
+  private final int spaceCount;
+  private final List<CutOffPlane> cutOffPlanes;
+  private final List<Assumption> assumptions;
+
+  Conditions(OutlineReading reading) {
+    filmSet = reading.filmSet();
+    partition = reading.partition();
+    materials = reading.materials();
+    kinds = reading.kinds();
+    spaces = reading.spaces();
+    films = reading.films();
+    flows = reading.flows();
+    glazing = reading.glazing();
+    symmetry = reading.symmetry();
+    spaceCount = reading.detail().spaces().size();
+    cutOffPlanes = List.copyOf(reading.cutOffPlanes());
+    assumptions = List.copyOf(reading.assumptions());
+  }
 
   /**
    * Works out the condition of every edge.
@@ -30,70 +57,91 @@ public final class Conditions {
    * @param partition its areas and stretches; a stretch's index is its line label
    * @param filmSet which films
    * @return the conditions
-   * @throws DetailException if a space faces nothing, a stretch lies on no outline, or a part of
-   *     the section touches no space
+   * @throws DetailException if a space faces nothing, a stretch lies on no outline, a part of the
+   *     section touches no film and no fixed temperature, or nothing conducts; all such faults
+   *     together
+   * @throws IllegalArgumentException if the partition is not one of this detail
    */
   public static Conditions of(Detail detail, Partition partition, FilmSet filmSet) {
-    throw new UnsupportedOperationException();
+    OutlineReading reading = new OutlineReading(detail, partition, filmSet);
+    List<Fault> faults = new DetailCheck(reading).faults();
+    if (!faults.isEmpty()) {
+      throw new DetailException(faults);
+    }
+    return new Conditions(reading);
   }
 
   /** The film set. */
   public FilmSet filmSet() {
-    throw new UnsupportedOperationException();
+    return filmSet;
   }
 
   /** The kind of a partition edge. */
   public Kind kind(int partitionEdge) {
-    throw new UnsupportedOperationException();
+    return kinds[partitionEdge];
   }
 
   /** Index of the space that a FILM or FIXED edge faces, else −1. */
   public int space(int partitionEdge) {
-    throw new UnsupportedOperationException();
+    return spaces[partitionEdge];
   }
 
   /** Rs of a FILM edge, m²·K/W; 0 on other edges. */
   public double filmM2KPerW(int partitionEdge) {
-    throw new UnsupportedOperationException();
+    return films[partitionEdge];
   }
 
   /** Heat flow into the detail on a FLOW edge, W/m²; 0 on other edges. */
   public double flowWPerM2(int partitionEdge) {
-    throw new UnsupportedOperationException();
+    return flows[partitionEdge];
   }
 
   /** Indices of the stretches on an edge, ascending. */
   public List<Integer> stretches(int partitionEdge) {
-    throw new UnsupportedOperationException();
+    return partition.linesOn(partitionEdge);
   }
 
   /** Whether an edge counts as glazing or frame. */
   public boolean glazing(int partitionEdge) {
-    throw new UnsupportedOperationException();
+    return glazing.get(partitionEdge);
   }
 
   /** Whether a cut-off edge is marked as a plane of symmetry. */
   public boolean symmetry(int partitionEdge) {
-    throw new UnsupportedOperationException();
+    return symmetry.get(partitionEdge);
   }
 
   /** Whether triangles with this label conduct: the label's fill is a material with λ &gt; 0. */
   public boolean conducts(int label) {
-    throw new UnsupportedOperationException();
+    return label != Partition.NONE && materials[label] != null;
   }
 
-  /** The material of a label that conducts. */
+  /**
+   * The material of a label that conducts.
+   *
+   * @param label the label
+   * @return its material
+   * @throws IllegalArgumentException if the label does not conduct
+   */
   public Material material(int label) {
-    throw new UnsupportedOperationException();
+    if (!conducts(label)) {
+      throw new IllegalArgumentException("label " + label + " does not conduct");
+    }
+    return materials[label];
   }
 
   /** How many spaces the detail has. */
   public int spaceCount() {
-    throw new UnsupportedOperationException();
+    return spaceCount;
+  }
+
+  /** The straight runs of cut-off edges, in the order of their lowest edge. */
+  public List<CutOffPlane> cutOffPlanes() {
+    return cutOffPlanes;
   }
 
   /** What was chosen: films by direction, cut-off planes. */
   public List<Assumption> assumptions() {
-    throw new UnsupportedOperationException();
+    return assumptions;
   }
 }

@@ -1,6 +1,7 @@
 package coldseam.solver.detail;
 
 import coldseam.mesh.partition.LabelledArea;
+import coldseam.mesh.partition.LabelledLine;
 import java.util.ArrayList;
 import java.util.LinkedHashSet;
 import java.util.List;
@@ -54,6 +55,15 @@ public record Detail(
     List<LabelledArea> labelled = new ArrayList<>(areas.size());
     for (Area area : areas) {
       labelled.add(new LabelledArea(fills.indexOf(area.fill()), area.rings()));
+    }
+    return labelled;
+  }
+
+  /** The lines of the stretches with their index as label, ready to be noded with the areas. */
+  public List<LabelledLine> labelledLines() {
+    List<LabelledLine> labelled = new ArrayList<>(stretches.size());
+    for (int i = 0; i < stretches.size(); i++) {
+      labelled.add(new LabelledLine(i, stretches.get(i).along()));
     }
     return labelled;
   }

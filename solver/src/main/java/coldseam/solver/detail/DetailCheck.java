@@ -1,0 +1,187 @@
+package coldseam.solver.detail;
+
+import coldseam.mesh.partition.Partition;
+import coldseam.mesh.plane.Point;
+import coldseam.solver.detail.Conditions.Kind;
+import java.util.ArrayList;
+import java.util.BitSet;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.Set;
+import java.util.TreeMap;
+import java.util.TreeSet;
+
+/** Everything that keeps a detail from being solved, found in one go. */
+final class DetailCheck {
+  private final OutlineReading reading;
+  private final Detail detail;
+  private final Partition partition;
+
+  DetailCheck(OutlineReading reading) {
+    this.reading = reading;
+    detail = reading.detail();
+    partition = reading.partition();
+  }
+
+  List<Fault> faults() {
+    List<Fault> faults = new ArrayList<>(reading.faults());
+    if (nothingConducts()) {
+      faults.add(
+          new Fault(
+              "section",
+              "",
+              "no material with a conductivity above 0 is left in the section",
+              Optional.empty()));
+      return faults;
+    }
+    faults.addAll(spacesFacingNothing());
+    faults.addAll(stretchesOffOutline());
+    faults.addAll(isolatedParts());
+    return faults;
+  }
+
+  private boolean nothingConducts() {
+    for (int face = 0; face < partition.faceCount(); face++) {
+      if (conducting(face)) {
+        return false;
+      }
+    }
+    return true;
+  }
+
+  private List<Fault> spacesFacingNothing() {
+    BitSet faced = new BitSet();
+    for (int space : reading.spaces()) {
+      if (space >= 0) {
+        faced.set(space);
+      }
+    }
+    for (Space space : detail.spaces()) {
+      space
+          .floating()
+          .filter(floating -> detail.spaceIndex(floating.to()) >= 0)
+          .ifPresent(floating -> faced.set(detail.spaceIndex(floating.to())));
+    }
+    List<Fault> faults = new ArrayList<>();
+    for (int i = 0; i < detail.spaces().size(); i++) {
+      if (!faced.get(i)) {
+        faults.add(
+            new Fault(
+                "space",
+                detail.spaces().get(i).name(),
+                "touches no material: lay it where it meets the section, or let a stretch of the"
+                    + " outline face it",
+                Optional.empty()));
+      }
+    }
+    return faults;
+  }
+
+  private List<Fault> stretchesOffOutline() {
+    double[] on = new double[detail.stretches().size()];
+    for (int edge = 0; edge < partition.edgeCount(); edge++) {
+      if (reading.outline(edge)) {
+        for (int stretch : partition.linesOn(edge)) {
+          on[stretch] += partition.edgeLength(edge);
+        }
+      }
+    }
+    List<Fault> faults = new ArrayList<>();
+    for (int i = 0; i < on.length; i++) {
+      Stretch stretch = detail.stretches().get(i);
+      if (on[i] == 0) {
+        faults.add(
+            new Fault(
+                "stretch",
+                stretch.name(),
+                "none of its "
+                    + Wording.length(length(stretch.along()))
+                    + " lies on the outline of the conducting section; draw it along an edge where"
+                    + " material ends",
+                Optional.of(stretch.along().get(0))));
+      }
+    }
+    return faults;
+  }
+
+  private static double length(List<Point> along) {
+    double sum = 0;
+    for (int i = 1; i < along.size(); i++) {
+      sum += along.get(i - 1).distance(along.get(i));
+    }
+    return sum;
+  }
+
+  private List<Fault> isolatedParts() {
+    int[] part = edgeConnectedParts();
+    BitSet held = new BitSet();
+    Map<Integer, Set<String>> names = new TreeMap<>();
+    for (int face = 0; face < partition.faceCount(); face++) {
+      if (conducting(face)) {
+        names
+            .computeIfAbsent(root(part, face), p -> new TreeSet<>())
+            .add(reading.fills().get(partition.faceLabel(face)).name());
+      }
+    }
+    for (int edge = 0; edge < partition.edgeCount(); edge++) {
+      if (reading.kinds()[edge] == Kind.FILM || reading.kinds()[edge] == Kind.FIXED) {
+        int face =
+            reading.conductsLeft(edge) ? partition.leftFace(edge) : partition.rightFace(edge);
+        held.set(root(part, face));
+      }
+    }
+    List<Fault> faults = new ArrayList<>();
+    names.forEach(
+        (root, materials) -> {
+          if (!held.get(root)) {
+            Point at = corner(root);
+            faults.add(
+                new Fault(
+                    "section",
+                    String.join(", ", materials),
+                    "a part of the section around "
+                        + Wording.place(at)
+                        + " ("
+                        + String.join(", ", materials)
+                        + ") touches no space, so that its temperature is undetermined",
+                    Optional.of(at)));
+          }
+        });
+    return faults;
+  }
+
+  private int[] edgeConnectedParts() {
+    int[] part = new int[partition.faceCount()];
+    for (int face = 0; face < part.length; face++) {
+      part[face] = face;
+    }
+    for (int edge = 0; edge < partition.edgeCount(); edge++) {
+      if (reading.inside(edge)) {
+        int a = root(part, partition.leftFace(edge));
+        int b = root(part, partition.rightFace(edge));
+        part[Math.max(a, b)] = Math.min(a, b);
+      }
+    }
+    return part;
+  }
+
+  private static int root(int[] part, int face) {
+    int root = face;
+    while (part[root] != root) {
+      part[root] = part[part[root]];
+      root = part[root];
+    }
+    return root;
+  }
+
+  private boolean conducting(int face) {
+    return reading.materials()[partition.faceLabel(face)] != null;
+  }
+
+  private Point corner(int face) {
+    int vertex = partition.faceRings(face).get(0)[0];
+    return new Point(
+        partition.origin().x() + partition.x(vertex), partition.origin().y() + partition.y(vertex));
+  }
+}
