@@ -22,6 +22,23 @@ public final class Triangulator {
    * @throws IllegalArgumentException if no face is accepted
    */
   public static Mesh triangulate(Partition partition, IntPredicate meshed, SizeField size) {
-    throw new UnsupportedOperationException();
+    return triangulate(Linework.of(partition), meshed, size);
+  }
+
+  static Mesh triangulate(Linework lines, IntPredicate meshed, SizeField size) {
+    boolean[] wanted = new boolean[lines.faceLabel.length];
+    boolean any = false;
+    for (int f = 0; f < wanted.length; f++) {
+      wanted[f] = meshed.test(lines.faceLabel[f]);
+      any |= wanted[f];
+    }
+    if (!any) {
+      throw new IllegalArgumentException("no face of the partition is to be meshed");
+    }
+    Linework ordered = lines.alongCurve();
+    ConstrainedDelaunay plane = new ConstrainedDelaunay(ordered);
+    plane.fillFaces(ordered);
+    new DelaunayRefinement(plane, ordered, wanted, size).run();
+    return MeshAssembly.assemble(plane, ordered, wanted);
   }
 }

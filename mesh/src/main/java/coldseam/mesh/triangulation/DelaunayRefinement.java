@@ -1,0 +1,368 @@
+package coldseam.mesh.triangulation;
+
+import coldseam.mesh.plane.Predicates;
+import java.util.Arrays;
+
+/**
+ * Refines a constrained Delaunay triangulation until no triangle has an angle under 20° or a side
+ * longer than wanted: a vertex at the centre of a bad triangle's circle, or nearer where that
+ * suffices (off-centres, Üngör 2004), shortest bad triangles first; a kept edge that such a vertex
+ * cannot see past, or whose diametral circle it would lie in, is split instead (Ruppert 1995).
+ * Edges that meet under less than 60° are split on circles around their common vertex, and a
+ * triangle between two points of such a circle is let be (Miller, Pav and Walkington 2003), so that
+ * the process ends on any drawing.
+ */
+final class DelaunayRefinement {
+  /** The least angle, degrees; Ruppert's process ends for anything under 20.7. */
+  static final double LEAST_ANGLE_DEGREES = 20;
+
+  private static final double SHARP_DEGREES = 60;
+
+  /** No side is made shorter than this part of the extent of the drawing. */
+  private static final double SHORTEST = 1e-9;
+
+  /** Two lengths on one circle around a vertex agree to this part of themselves. */
+  private static final double SAME_CIRCLE = 1e-6;
+
+  private static final double COS_SQUARED = square(Math.cos(Math.toRadians(LEAST_ANGLE_DEGREES)));
+
+  /** Height over base of the tallest triangle wanted, a little less than the limit. */
+  private static final double TALLEST = 0.475 / Math.tan(Math.toRadians(LEAST_ANGLE_DEGREES / 2));
+
+  /** Vertex of the drawing. */
+  private static final int GIVEN = -2;
+
+  private final ConstrainedDelaunay plane;
+  private final Linework lines;
+  private final boolean[] meshed;
+  private final SizeField size;
+  private final double extent;
+  private final WorkQueue queue = new WorkQueue();
+
+  /** For each vertex the partition edge it was put on, NONE within a face, or GIVEN. */
+  private int[] edgeOf;
+
+  private boolean[] sharp;
+  private int[] stamp;
+  private int stamps;
+  private int[] cavity = new int[64];
+
+  /**
+   * Prepares.
+   *
+   * @param plane the triangulation, faces filled in
+   * @param lines the drawing
+   * @param meshed for each face whether it is wanted
+   * @param size the longest sides wanted
+   */
+  DelaunayRefinement(ConstrainedDelaunay plane, Linework lines, boolean[] meshed, SizeField size) {
+    this.plane = plane;
+    this.lines = lines;
+    this.meshed = meshed;
+    this.size = size;
+    extent = lines.extent();
+    edgeOf = new int[plane.x.length];
+    Arrays.fill(edgeOf, 0, plane.vertexCount, GIVEN);
+    stamp = new int[plane.face.length];
+    sharp = new boolean[plane.vertexCount];
+    for (int h = 0; h < 3 * plane.triangleCount; h++) {
+      if (plane.kept[h] != ConstrainedDelaunay.NONE && isMeshed(h / 3) && isSharp(h)) {
+        sharp[plane.start(h)] = true;
+      }
+    }
+  }
+
+  /** Refines until nothing bad is left that can be bettered. */
+  void run() {
+    for (int t = 0; t < plane.triangleCount; t++) {
+      consider(t);
+    }
+    plane.touchedCount = 0;
+    while (queue.poll()) {
+      int t = queue.triangle();
+      if (plane.corner[3 * t] == queue.corner(0)
+          && plane.corner[3 * t + 1] == queue.corner(1)
+          && plane.corner[3 * t + 2] == queue.corner(2)) {
+        boolean acted = improve(t);
+        for (int i = 0; i < plane.touchedCount; i++) {
+          consider(plane.touched[i]);
+        }
+        plane.touchedCount = 0;
+        if (acted) {
+          consider(t);
+        }
+      }
+    }
+  }
+
+  private boolean isMeshed(int t) {
+    int face = plane.face[t];
+    return face >= 0 && meshed[face];
+  }
+
+  /** Whether the next kept edge counter-clockwise around the start of h is less than 60° away. */
+  private boolean isSharp(int h) {
+    int c = ConstrainedDelaunay.next(h);
+    double angle = 0;
+    while (angle < SHARP_DEGREES) {
+      angle += Math.toDegrees(angleAt(c));
+      if (plane.kept[ConstrainedDelaunay.next(c)] != ConstrainedDelaunay.NONE) {
+        return angle < SHARP_DEGREES;
+      }
+      c = plane.counterClockwise(c);
+    }
+    return false;
+  }
+
+  private double angleAt(int c) {
+    int v = plane.corner[c];
+    int a = plane.start(c);
+    int b = plane.end(c);
+    double ax = plane.x[a] - plane.x[v];
+    double ay = plane.y[a] - plane.y[v];
+    double bx = plane.x[b] - plane.x[v];
+    double by = plane.y[b] - plane.y[v];
+    return Math.atan2(ax * by - ay * bx, ax * bx + ay * by);
+  }
+
+  /** Queues a triangle if it is bad and may be bettered. */
+  private void consider(int t) {
+    if (!isMeshed(t)) {
+      return;
+    }
+    int shortest = shortestSide(t);
+    double length = plane.length(shortest);
+    if (isThin(t, shortest) && !isExcused(shortest) || isTooLarge(t)) {
+      queue.add(length, t, plane.corner[3 * t], plane.corner[3 * t + 1], plane.corner[3 * t + 2]);
+    }
+  }
+
+  private int shortestSide(int t) {
+    double a = plane.length(3 * t);
+    double b = plane.length(3 * t + 1);
+    double c = plane.length(3 * t + 2);
+    return a <= b && a <= c ? 3 * t : b <= c ? 3 * t + 1 : 3 * t + 2;
+  }
+
+  /** Whether the angle opposite the shortest side is too small. */
+  private boolean isThin(int t, int shortest) {
+    int v = plane.apex(shortest);
+    int a = plane.start(shortest);
+    int b = plane.end(shortest);
+    double ax = plane.x[a] - plane.x[v];
+    double ay = plane.y[a] - plane.y[v];
+    double bx = plane.x[b] - plane.x[v];
+    double by = plane.y[b] - plane.y[v];
+    double dot = ax * bx + ay * by;
+    return dot * dot > COS_SQUARED * (ax * ax + ay * ay) * (bx * bx + by * by);
+  }
+
+  /** Whether the small angle is the drawing's own, or lies between two points of one circle. */
+  private boolean isExcused(int shortest) {
+    int h = ConstrainedDelaunay.next(shortest);
+    int g = ConstrainedDelaunay.previous(shortest);
+    if (edgeOf[plane.apex(shortest)] == GIVEN
+        && plane.kept[h] != ConstrainedDelaunay.NONE
+        && plane.kept[g] != ConstrainedDelaunay.NONE) {
+      return true;
+    }
+    int p = plane.start(shortest);
+    int q = plane.end(shortest);
+    int e = edgeOf[p];
+    int f = edgeOf[q];
+    if (e < 0 || f < 0 || e == f) {
+      return false;
+    }
+    int z = commonVertex(e, f);
+    if (z == ConstrainedDelaunay.NONE) {
+      return false;
+    }
+    double toP = plane.distance(z, p);
+    double toQ = plane.distance(z, q);
+    return Math.abs(toP - toQ) < SAME_CIRCLE * toP && plane.distance(p, q) < toP;
+  }
+
+  private int commonVertex(int e, int f) {
+    int a = lines.start[e];
+    int b = lines.end[e];
+    if (a == lines.start[f] || a == lines.end[f]) {
+      return a + ConstrainedDelaunay.FIRST;
+    }
+    return b == lines.start[f] || b == lines.end[f]
+        ? b + ConstrainedDelaunay.FIRST
+        : ConstrainedDelaunay.NONE;
+  }
+
+  private boolean isTooLarge(int t) {
+    if (size == SizeField.NONE) {
+      return false;
+    }
+    int a = plane.corner[3 * t];
+    int b = plane.corner[3 * t + 1];
+    int c = plane.corner[3 * t + 2];
+    double limit =
+        size.longestSideM(
+            (plane.x[a] + plane.x[b] + plane.x[c]) / 3, (plane.y[a] + plane.y[b] + plane.y[c]) / 3);
+    double longest =
+        Math.max(plane.length(3 * t), Math.max(plane.length(3 * t + 1), plane.length(3 * t + 2)));
+    return longest > limit && longest > 4 * SHORTEST * extent;
+  }
+
+  /** Puts one vertex to better a triangle; false if that is not possible. */
+  private boolean improve(int t) {
+    int shortest = shortestSide(t);
+    int a = plane.start(shortest);
+    int b = plane.end(shortest);
+    int c = plane.apex(shortest);
+    // The circle's centre, from the middle of the shortest side along its normal.
+    double dx = plane.x[b] - plane.x[a];
+    double dy = plane.y[b] - plane.y[a];
+    double ux = plane.x[c] - plane.x[a];
+    double uy = plane.y[c] - plane.y[a];
+    double twiceArea = dx * uy - dy * ux;
+    double rise = 0.5 * (ux * (ux - dx) + uy * (uy - dy)) / twiceArea;
+    if (isThin(t, shortest)) {
+      rise = Math.min(rise, TALLEST);
+    }
+    double px = 0.5 * (plane.x[a] + plane.x[b]) - rise * dy;
+    double py = 0.5 * (plane.y[a] + plane.y[b]) + rise * dx;
+    int place = walk(t, px, py);
+    int encroached = place < 0 ? ~place : encroachedBy(place, px, py);
+    if (encroached != ConstrainedDelaunay.NONE) {
+      return split(encroached);
+    }
+    return place(place, px, py);
+  }
+
+  /** The triangle reached going straight from a triangle to a point, or ~h if side h bars it. */
+  private int walk(int from, double px, double py) {
+    int a = plane.corner[3 * from];
+    int b = plane.corner[3 * from + 1];
+    int c = plane.corner[3 * from + 2];
+    double sx = (plane.x[a] + plane.x[b] + plane.x[c]) / 3;
+    double sy = (plane.y[a] + plane.y[b] + plane.y[c]) / 3;
+    int t = from;
+    int h = 3 * t;
+    for (int k = 0; k < 3; k++) {
+      // The side that the ray from the centre leaves by.
+      if (hand(sx, sy, px, py, plane.start(3 * t + k)) <= 0
+          && hand(sx, sy, px, py, plane.end(3 * t + k)) > 0) {
+        h = 3 * t + k;
+      }
+    }
+    while (plane.orientation(plane.start(h), plane.end(h), px, py) < 0) {
+      if (plane.kept[h] != ConstrainedDelaunay.NONE) {
+        return ~h;
+      }
+      int entered = plane.twin[h];
+      t = entered / 3;
+      h =
+          hand(sx, sy, px, py, plane.apex(entered)) > 0
+              ? ConstrainedDelaunay.next(entered)
+              : ConstrainedDelaunay.previous(entered);
+    }
+    return t;
+  }
+
+  private int hand(double sx, double sy, double px, double py, int v) {
+    return Predicates.orientation(sx, sy, px, py, plane.x[v], plane.y[v]);
+  }
+
+  /** A kept side that sees a new point under a right angle or more, or NONE. */
+  private int encroachedBy(int t, double px, double py) {
+    if (stamp.length < plane.triangleCount) {
+      stamp = Arrays.copyOf(stamp, 2 * plane.triangleCount);
+    }
+    stamps++;
+    int count = 0;
+    cavity[count++] = t;
+    stamp[t] = stamps;
+    for (int i = 0; i < count; i++) {
+      for (int h = 3 * cavity[i]; h < 3 * cavity[i] + 3; h++) {
+        if (plane.kept[h] != ConstrainedDelaunay.NONE) {
+          if (seesUnderRightAngle(h, px, py)) {
+            return h;
+          }
+          continue;
+        }
+        int other = plane.twin[h] / 3;
+        if (stamp[other] != stamps && plane.circleContains(other, px, py)) {
+          stamp[other] = stamps;
+          if (count == cavity.length) {
+            cavity = Arrays.copyOf(cavity, 2 * count);
+          }
+          cavity[count++] = other;
+        }
+      }
+    }
+    return ConstrainedDelaunay.NONE;
+  }
+
+  private boolean seesUnderRightAngle(int h, double px, double py) {
+    int a = plane.start(h);
+    int b = plane.end(h);
+    return (plane.x[a] - px) * (plane.x[b] - px) + (plane.y[a] - py) * (plane.y[b] - py) <= 0;
+  }
+
+  private boolean place(int t, double px, double py) {
+    int on = ConstrainedDelaunay.NONE;
+    for (int h = 3 * t; h < 3 * t + 3; h++) {
+      if (plane.orientation(plane.start(h), plane.end(h), px, py) == 0) {
+        on = h;
+      }
+      if (Math.hypot(plane.x[plane.apex(h)] - px, plane.y[plane.apex(h)] - py)
+          < SHORTEST * extent) {
+        return false;
+      }
+    }
+    int v = on < 0 ? plane.insertInside(t, px, py) : plane.insertOn(on, px, py);
+    record(v, ConstrainedDelaunay.NONE);
+    return true;
+  }
+
+  /** Splits a kept side in the middle, or on a circle around a sharp corner. */
+  private boolean split(int h) {
+    int a = plane.start(h);
+    int b = plane.end(h);
+    double length = plane.length(h);
+    if (length < 2 * SHORTEST * extent) {
+      return false;
+    }
+    double part = 0.5;
+    boolean sharpA = edgeOf[a] == GIVEN && sharp[a];
+    boolean sharpB = edgeOf[b] == GIVEN && sharp[b];
+    if (sharpA != sharpB) {
+      double radius = extent;
+      while (length < 1.5 * radius) {
+        radius *= 0.5;
+      }
+      part = sharpA ? radius / length : 1 - radius / length;
+    }
+    double px = plane.x[a] + part * (plane.x[b] - plane.x[a]);
+    double py = plane.y[a] + part * (plane.y[b] - plane.y[a]);
+    if (!fits(h, px, py) || !fits(plane.twin[h], px, py)) {
+      return false;
+    }
+    int edge = plane.kept[h];
+    record(plane.insertOn(h, px, py), edge);
+    return true;
+  }
+
+  /** Whether the two parts of a triangle split at a point on its side h turn the right way. */
+  private boolean fits(int h, double px, double py) {
+    int apex = plane.apex(h);
+    return plane.orientation(apex, plane.start(h), px, py) > 0
+        && plane.orientation(plane.end(h), apex, px, py) > 0;
+  }
+
+  private void record(int vertex, int edge) {
+    if (vertex >= edgeOf.length) {
+      edgeOf = Arrays.copyOf(edgeOf, 2 * edgeOf.length);
+    }
+    edgeOf[vertex] = edge;
+  }
+
+  private static double square(double value) {
+    return value * value;
+  }
+}
