@@ -2,6 +2,7 @@ package coldseam.mesh.partition;
 
 import coldseam.mesh.plane.Point;
 import coldseam.mesh.plane.Resolution;
+import java.util.ArrayList;
 import java.util.List;
 
 /**
@@ -15,7 +16,44 @@ public final class Partition {
   /** The label of ground that no area covers, and the face index there. */
   public static final int NONE = -1;
 
-  private Partition() {}
+  private final Point origin;
+  private final Boundaries edges;
+  private final int[] leftFace;
+  private final int[] rightFace;
+  private final int[] faceLabel;
+  private final double[] faceArea;
+  private final List<List<int[]>> faceRings;
+  private final List<Defect> defects;
+  private final double largestDisplacementM;
+
+  /** Takes over what the builder made. */
+  Partition(
+      Point origin,
+      Boundaries edges,
+      FaceRings rings,
+      List<Defect> defects,
+      double largestDisplacementM) {
+    this.origin = origin;
+    this.edges = edges;
+    this.defects = List.copyOf(defects);
+    this.largestDisplacementM = largestDisplacementM;
+    leftFace = new int[edges.edgeCount];
+    rightFace = new int[edges.edgeCount];
+    for (int e = 0; e < edges.edgeCount; e++) {
+      leftFace[e] = rings.faceOf(2 * e);
+      rightFace[e] = rings.faceOf(2 * e + 1);
+    }
+    int n = rings.faces().size();
+    faceLabel = new int[n];
+    faceArea = new double[n];
+    faceRings = new ArrayList<>(n);
+    for (int f = 0; f < n; f++) {
+      FaceRings.Face face = rings.faces().get(f);
+      faceLabel[f] = face.label();
+      faceArea[f] = rings.area(face);
+      faceRings.add(face.rings());
+    }
+  }
 
   /**
    * Makes a partition.
@@ -28,82 +66,88 @@ public final class Partition {
    */
   public static Partition of(
       List<LabelledArea> areas, List<LabelledLine> lines, Resolution resolution) {
-    throw new UnsupportedOperationException();
+    return new PartitionBuilder(areas, resolution).build(lines);
   }
 
   /** The point of the drawing at local (0, 0). */
   public Point origin() {
-    throw new UnsupportedOperationException();
+    return origin;
   }
 
   public int vertexCount() {
-    throw new UnsupportedOperationException();
+    return edges.vertexCount;
   }
 
   /** Local x of a vertex, m. */
   public double x(int vertex) {
-    throw new UnsupportedOperationException();
+    return edges.x[vertex];
   }
 
   /** Local y of a vertex, m. */
   public double y(int vertex) {
-    throw new UnsupportedOperationException();
+    return edges.y[vertex];
   }
 
   public int edgeCount() {
-    throw new UnsupportedOperationException();
+    return edges.edgeCount;
   }
 
   public int edgeStart(int edge) {
-    throw new UnsupportedOperationException();
+    return edges.start[edge];
   }
 
   public int edgeEnd(int edge) {
-    throw new UnsupportedOperationException();
+    return edges.end[edge];
   }
 
   /** Length of an edge, m. */
   public double edgeLength(int edge) {
-    throw new UnsupportedOperationException();
+    int a = edges.start[edge];
+    int b = edges.end[edge];
+    return Math.hypot(edges.x[b] - edges.x[a], edges.y[b] - edges.y[a]);
   }
 
   /** The face to the left when walking from {@link #edgeStart} to {@link #edgeEnd}, or NONE. */
   public int leftFace(int edge) {
-    throw new UnsupportedOperationException();
+    return leftFace[edge];
   }
 
   /** The face to the right when walking from {@link #edgeStart} to {@link #edgeEnd}, or NONE. */
   public int rightFace(int edge) {
-    throw new UnsupportedOperationException();
+    return rightFace[edge];
   }
 
   /** The label of the left face, or NONE. */
   public int leftLabel(int edge) {
-    throw new UnsupportedOperationException();
+    return leftFace[edge] == NONE ? NONE : faceLabel[leftFace[edge]];
   }
 
   /** The label of the right face, or NONE. */
   public int rightLabel(int edge) {
-    throw new UnsupportedOperationException();
+    return rightFace[edge] == NONE ? NONE : faceLabel[rightFace[edge]];
   }
 
   /** Labels of the lines that lie on an edge, ascending; mostly empty. */
   public List<Integer> linesOn(int edge) {
-    throw new UnsupportedOperationException();
+    List<Integer> labels = new ArrayList<>(edges.lines[edge].length);
+    for (int line : edges.lines[edge]) {
+      labels.add(line);
+    }
+    return List.copyOf(labels);
   }
 
   public int faceCount() {
-    throw new UnsupportedOperationException();
+    return faceLabel.length;
   }
 
   /** The label of a face, 0 or more. */
   public int faceLabel(int face) {
-    throw new UnsupportedOperationException();
+    return faceLabel[face];
   }
 
   /** Area of a face, m². */
   public double faceArea(int face) {
-    throw new UnsupportedOperationException();
+    return faceArea[face];
   }
 
   /**
@@ -111,21 +155,31 @@ public final class Partition {
    * clockwise. Rings touch at most in single vertices.
    */
   public List<int[]> faceRings(int face) {
-    throw new UnsupportedOperationException();
+    List<int[]> copies = new ArrayList<>(faceRings.get(face).size());
+    for (int[] ring : faceRings.get(face)) {
+      copies.add(ring.clone());
+    }
+    return List.copyOf(copies);
   }
 
   /** Area with the label, all faces together, m². */
   public double labelArea(int label) {
-    throw new UnsupportedOperationException();
+    double sum = 0;
+    for (int f = 0; f < faceLabel.length; f++) {
+      if (faceLabel[f] == label) {
+        sum += faceArea[f];
+      }
+    }
+    return sum;
   }
 
   /** Everything doubtful that was found, in a stable order. */
   public List<Defect> defects() {
-    throw new UnsupportedOperationException();
+    return defects;
   }
 
   /** How far any point of the drawing was moved, at most, m. */
   public double largestDisplacementM() {
-    throw new UnsupportedOperationException();
+    return largestDisplacementM;
   }
 }
