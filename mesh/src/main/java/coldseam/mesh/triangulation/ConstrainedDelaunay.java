@@ -17,6 +17,9 @@ final class ConstrainedDelaunay {
   /** No half-edge across (outline of the box); no kept edge. */
   static final int NONE = -1;
 
+  /** A vertex of the drawing or of the box. */
+  static final int GIVEN = -2;
+
   /** The first vertex that is not a corner of the box. */
   static final int FIRST = 4;
 
@@ -25,6 +28,10 @@ final class ConstrainedDelaunay {
 
   double[] x;
   double[] y;
+
+  /** For each vertex the kept edge it was put on, NONE if on none, GIVEN if of the drawing. */
+  int[] edgeOf;
+
   int vertexCount;
 
   /** Vertex at each corner. */
@@ -63,6 +70,7 @@ final class ConstrainedDelaunay {
     int vertices = 2 * lines.x.length + 256;
     x = new double[vertices];
     y = new double[vertices];
+    edgeOf = new int[vertices];
     cornerAt = new int[vertices];
     corner = new int[6 * vertices];
     twin = new int[6 * vertices];
@@ -86,6 +94,7 @@ final class ConstrainedDelaunay {
             "two vertices at (" + lines.x[v] + ", " + lines.y[v] + ")");
       }
     }
+    Arrays.fill(edgeOf, 0, vertexCount, GIVEN);
     for (int e = 0; e < lines.start.length; e++) {
       keep(FIRST + lines.start[e], FIRST + lines.end[e], e);
     }
@@ -234,6 +243,7 @@ final class ConstrainedDelaunay {
   /** Inserts a vertex on a side; if the side is kept, so are its two parts. */
   int insertOn(int h, double px, double py) {
     int v = addVertex(px, py);
+    edgeOf[v] = kept[h];
     int g = twin[h];
     int right = splitAt(h, v);
     if (g != NONE) {
@@ -363,6 +373,29 @@ final class ConstrainedDelaunay {
       }
     }
     throw new IllegalStateException("no triangle at (" + px + ", " + py + ")");
+  }
+
+  /** Whether the straight way between two vertices meets no other vertex and no kept edge. */
+  boolean isClear(int a, int b) {
+    if (find(a, b) != NONE) {
+      return true;
+    }
+    int h = leavingCorner(a, b);
+    if (orientation(a, b, start(h)) == 0) {
+      return false;
+    }
+    while (kept[h] == NONE) {
+      int across = twin[h];
+      if (apex(across) == b) {
+        return true;
+      }
+      int hand = orientation(a, b, apex(across));
+      if (hand == 0) {
+        return false;
+      }
+      h = onwards(across, hand);
+    }
+    return false;
   }
 
   /** The first vertex met on the way from a to b that lies exactly on it: at last b. */
@@ -565,10 +598,12 @@ final class ConstrainedDelaunay {
     if (vertexCount == x.length) {
       x = Arrays.copyOf(x, 2 * vertexCount);
       y = Arrays.copyOf(y, 2 * vertexCount);
+      edgeOf = Arrays.copyOf(edgeOf, 2 * vertexCount);
       cornerAt = Arrays.copyOf(cornerAt, 2 * vertexCount);
     }
     x[vertexCount] = px;
     y[vertexCount] = py;
+    edgeOf[vertexCount] = NONE;
     return vertexCount++;
   }
 
@@ -583,7 +618,8 @@ final class ConstrainedDelaunay {
     return triangleCount++;
   }
 
-  private void touch(int t) {
+  /** Notes a triangle as changed. */
+  void touch(int t) {
     if (touchedCount == touched.length) {
       touched = Arrays.copyOf(touched, 2 * touchedCount);
     }

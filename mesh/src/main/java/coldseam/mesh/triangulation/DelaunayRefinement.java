@@ -29,18 +29,13 @@ final class DelaunayRefinement {
   /** Height over base of the tallest triangle wanted, a little less than the limit. */
   private static final double TALLEST = 0.475 / Math.tan(Math.toRadians(LEAST_ANGLE_DEGREES / 2));
 
-  /** Vertex of the drawing. */
-  private static final int GIVEN = -2;
-
   private final ConstrainedDelaunay plane;
   private final Linework lines;
+  private final Ladders ladders;
   private final boolean[] meshed;
   private final SizeField size;
   private final double extent;
   private final WorkQueue queue = new WorkQueue();
-
-  /** For each vertex the partition edge it was put on, NONE within a face, or GIVEN. */
-  private int[] edgeOf;
 
   private boolean[] sharp;
   private int[] stamp;
@@ -52,21 +47,29 @@ final class DelaunayRefinement {
    *
    * @param plane the triangulation, faces filled in
    * @param lines the drawing
+   * @param ladders the thin parts, made already
    * @param meshed for each face whether it is wanted
    * @param size the longest sides wanted
    */
-  DelaunayRefinement(ConstrainedDelaunay plane, Linework lines, boolean[] meshed, SizeField size) {
+  DelaunayRefinement(
+      ConstrainedDelaunay plane,
+      Linework lines,
+      Ladders ladders,
+      boolean[] meshed,
+      SizeField size) {
     this.plane = plane;
     this.lines = lines;
+    this.ladders = ladders;
     this.meshed = meshed;
     this.size = size;
     extent = lines.extent();
-    edgeOf = new int[plane.x.length];
-    Arrays.fill(edgeOf, 0, plane.vertexCount, GIVEN);
     stamp = new int[plane.face.length];
     sharp = new boolean[plane.vertexCount];
     for (int h = 0; h < 3 * plane.triangleCount; h++) {
-      if (plane.kept[h] != ConstrainedDelaunay.NONE && isMeshed(h / 3) && isSharp(h)) {
+      if (plane.kept[h] != ConstrainedDelaunay.NONE
+          && isMeshed(h / 3)
+          && !ladders.isLadder(h / 3)
+          && isSharp(h)) {
         sharp[plane.start(h)] = true;
       }
     }
@@ -132,7 +135,8 @@ final class DelaunayRefinement {
     }
     int shortest = shortestSide(t);
     double length = plane.length(shortest);
-    if (isThin(t, shortest) && !isExcused(shortest) || isTooLarge(t)) {
+    boolean thin = !ladders.isLadder(t) && isThin(t, shortest) && !isExcused(shortest);
+    if (thin || isTooLarge(t)) {
       queue.add(length, t, plane.corner[3 * t], plane.corner[3 * t + 1], plane.corner[3 * t + 2]);
     }
   }
@@ -161,15 +165,15 @@ final class DelaunayRefinement {
   private boolean isExcused(int shortest) {
     int h = ConstrainedDelaunay.next(shortest);
     int g = ConstrainedDelaunay.previous(shortest);
-    if (edgeOf[plane.apex(shortest)] == GIVEN
+    if (plane.edgeOf[plane.apex(shortest)] == ConstrainedDelaunay.GIVEN
         && plane.kept[h] != ConstrainedDelaunay.NONE
         && plane.kept[g] != ConstrainedDelaunay.NONE) {
       return true;
     }
     int p = plane.start(shortest);
     int q = plane.end(shortest);
-    int e = edgeOf[p];
-    int f = edgeOf[q];
+    int e = plane.edgeOf[p];
+    int f = plane.edgeOf[q];
     if (e < 0 || f < 0 || e == f) {
       return false;
     }
@@ -210,6 +214,9 @@ final class DelaunayRefinement {
 
   /** Puts one vertex to better a triangle; false if that is not possible. */
   private boolean improve(int t) {
+    if (ladders.isLadder(t)) {
+      return isTooLarge(t) && split(partitionSide(t));
+    }
     int shortest = shortestSide(t);
     int a = plane.start(shortest);
     int b = plane.end(shortest);
@@ -232,6 +239,19 @@ final class DelaunayRefinement {
       return split(encroached);
     }
     return place(place, px, py);
+  }
+
+  /** The side of a triangle in a ladder that lies on a partition edge. */
+  private int partitionSide(int t) {
+    int longest = ConstrainedDelaunay.NONE;
+    for (int h = 3 * t; h < 3 * t + 3; h++) {
+      boolean longer =
+          longest == ConstrainedDelaunay.NONE || plane.length(h) > plane.length(longest);
+      if (plane.kept[h] >= 0 && longer) {
+        longest = h;
+      }
+    }
+    return longest;
   }
 
   /** The triangle reached going straight from a triangle to a point, or ~h if side h bars it. */
@@ -315,13 +335,20 @@ final class DelaunayRefinement {
         return false;
       }
     }
-    int v = on < 0 ? plane.insertInside(t, px, py) : plane.insertOn(on, px, py);
-    record(v, ConstrainedDelaunay.NONE);
+    if (on == ConstrainedDelaunay.NONE) {
+      plane.insertInside(t, px, py);
+    } else {
+      plane.insertOn(on, px, py);
+    }
     return true;
   }
 
   /** Splits a kept side in the middle, or on a circle around a sharp corner. */
   private boolean split(int h) {
+    if (plane.kept[h] == Ladders.RUNG) {
+      ladders.retreat(h);
+      return true;
+    }
     int a = plane.start(h);
     int b = plane.end(h);
     double length = plane.length(h);
@@ -329,8 +356,8 @@ final class DelaunayRefinement {
       return false;
     }
     double part = 0.5;
-    boolean sharpA = edgeOf[a] == GIVEN && sharp[a];
-    boolean sharpB = edgeOf[b] == GIVEN && sharp[b];
+    boolean sharpA = plane.edgeOf[a] == ConstrainedDelaunay.GIVEN && sharp[a];
+    boolean sharpB = plane.edgeOf[b] == ConstrainedDelaunay.GIVEN && sharp[b];
     if (sharpA != sharpB) {
       double radius = extent;
       while (length < 1.5 * radius) {
@@ -340,26 +367,7 @@ final class DelaunayRefinement {
     }
     double px = plane.x[a] + part * (plane.x[b] - plane.x[a]);
     double py = plane.y[a] + part * (plane.y[b] - plane.y[a]);
-    if (!fits(h, px, py) || !fits(plane.twin[h], px, py)) {
-      return false;
-    }
-    int edge = plane.kept[h];
-    record(plane.insertOn(h, px, py), edge);
-    return true;
-  }
-
-  /** Whether the two parts of a triangle split at a point on its side h turn the right way. */
-  private boolean fits(int h, double px, double py) {
-    int apex = plane.apex(h);
-    return plane.orientation(apex, plane.start(h), px, py) > 0
-        && plane.orientation(plane.end(h), apex, px, py) > 0;
-  }
-
-  private void record(int vertex, int edge) {
-    if (vertex >= edgeOf.length) {
-      edgeOf = Arrays.copyOf(edgeOf, 2 * edgeOf.length);
-    }
-    edgeOf[vertex] = edge;
+    return ladders.split(h, px, py) != ConstrainedDelaunay.NONE;
   }
 
   private static double square(double value) {

@@ -38,7 +38,9 @@ public final class Triangulator {
     Linework ordered = lines.alongCurve();
     ConstrainedDelaunay plane = new ConstrainedDelaunay(ordered);
     plane.fillFaces(ordered);
-    new DelaunayRefinement(plane, ordered, wanted, size).run();
+    Ladders ladders = new Ladders(plane, ordered);
+    ladders.build(LadderSearch.search(plane, wanted));
+    new DelaunayRefinement(plane, ordered, ladders, wanted, size).run();
     return MeshAssembly.assemble(plane, ordered, wanted);
   }
 }
