@@ -1,0 +1,158 @@
+package coldseam.solver.conduction;
+
+import coldseam.solver.algebra.SymmetricSystem;
+import coldseam.solver.detail.Conditions;
+import java.util.Arrays;
+
+/**
+ * Makes and solves the system of the unit fields: conduction over the triangles plus films over the
+ * surface. All fields share one factorisation.
+ */
+final class Assembly {
+  private final Discretisation d;
+
+  /** Fields solved for: all but that of the last space, which is 1 less the other spaces'. */
+  private final int[] solved;
+
+  private final double[][] load;
+  private int[] rows;
+  private int[] columns;
+  private double[] values;
+  private int count;
+
+  private Assembly(Discretisation d) {
+    this.d = d;
+    int fields = d.spaces - 1 + (d.hasFlow ? 1 : 0);
+    solved = new int[fields];
+    for (int f = 0; f < fields; f++) {
+      solved[f] = f < d.spaces - 1 ? f : d.spaces;
+    }
+    load = new double[fields][d.unknowns];
+    int capacity = 21 * d.mesh.triangleCount() + 6 * d.outline.count;
+    rows = new int[capacity];
+    columns = new int[capacity];
+    values = new double[capacity];
+  }
+
+  /**
+   * Solves for the unit fields.
+   *
+   * @param d the discretisation
+   * @return the nodal values of each space's unit field, then of the field of the given flows (all
+   *     0 if there are none)
+   */
+  static double[][] unitFields(Discretisation d) {
+    Assembly assembly = new Assembly(d);
+    double[][] fields = new double[d.spaces + 1][d.nodeCount];
+    if (assembly.solved.length > 0) {
+      assembly.conduction();
+      assembly.films();
+      assembly.flows();
+      assembly.solve(fields);
+    }
+    double[] last = fields[d.spaces - 1];
+    Arrays.fill(last, 1);
+    for (int f = 0; f < d.spaces - 1; f++) {
+      for (int n = 0; n < last.length; n++) {
+        last[n] -= fields[f][n];
+      }
+    }
+    return fields;
+  }
+
+  /** ∫∇φ_p·λ∇φ_q over the triangles. */
+  private void conduction() {
+    for (int t = 0; t < d.mesh.triangleCount(); t++) {
+      int at = QuadraticElement.NODES * t;
+      for (int p = 0; p < QuadraticElement.NODES; p++) {
+        for (int q = 0; q <= p; q++) {
+          add(d.nodes[at + p], d.nodes[at + q], QuadraticElement.stiffness(d.couplings, t, p, q));
+        }
+      }
+    }
+  }
+
+  /** ∫φ_p φ_q/Rs over the surfaces with a film, and ∫φ_p/Rs for the space behind it. */
+  private void films() {
+    Outline o = d.outline;
+    for (int s = 0; s < o.count; s++) {
+      if (o.kind[s] != Conditions.Kind.FILM) {
+        continue;
+      }
+      double unit = o.lengthM[s] / (30 * o.filmM2KPerW[s]);
+      add(o.start[s], o.start[s], 4 * unit);
+      add(o.end[s], o.end[s], 4 * unit);
+      add(o.middle[s], o.middle[s], 16 * unit);
+      add(o.start[s], o.middle[s], 2 * unit);
+      add(o.end[s], o.middle[s], 2 * unit);
+      add(o.start[s], o.end[s], -unit);
+      if (o.space[s] < d.spaces - 1) {
+        spread(s, load[o.space[s]], 30 * unit);
+      }
+    }
+  }
+
+  /** ∫φ_p g over the surfaces with a given flow. */
+  private void flows() {
+    Outline o = d.outline;
+    for (int s = 0; s < o.count; s++) {
+      if (o.kind[s] == Conditions.Kind.FLOW) {
+        spread(s, load[solved.length - 1], o.lengthM[s] * o.flowWPerM2[s]);
+      }
+    }
+  }
+
+  private void spread(int s, double[] b, double total) {
+    Outline o = d.outline;
+    toLoad(b, o.start[s], total / 6);
+    toLoad(b, o.middle[s], 4 * total / 6);
+    toLoad(b, o.end[s], total / 6);
+  }
+
+  private void toLoad(double[] b, int node, double value) {
+    if (d.unknown[node] >= 0) {
+      b[d.unknown[node]] += value;
+    }
+  }
+
+  /** Adds an entry; what multiplies a fixed node goes to the right-hand side. */
+  private void add(int p, int q, double value) {
+    int row = d.unknown[p];
+    int column = d.unknown[q];
+    if (value == 0 || row < 0 && column < 0) {
+      return;
+    }
+    if (row >= 0 && column >= 0) {
+      rows[count] = row;
+      columns[count] = column;
+      values[count++] = value;
+      return;
+    }
+    int free = Math.max(row, column);
+    int fixed = row < 0 ? p : q;
+    for (int f = 0; f < solved.length; f++) {
+      if (solved[f] < d.spaces) {
+        load[f][free] -= value * d.fixedValue(fixed, solved[f]);
+      }
+    }
+  }
+
+  private void solve(double[][] fields) {
+    SymmetricSystem system =
+        d.unknowns == 0 ? null : SymmetricSystem.factor(d.unknowns, rows, columns, values, count);
+    rows = null;
+    columns = null;
+    values = null;
+    for (int f = 0; f < solved.length; f++) {
+      double[] field = fields[solved[f]];
+      double[] x = system == null ? new double[0] : system.solve(load[f]).x();
+      for (int n = 0; n < d.nodeCount; n++) {
+        if (d.unknown[n] >= 0) {
+          field[n] = x[d.unknown[n]];
+        } else if (solved[f] < d.spaces) {
+          field[n] = d.fixedValue(n, solved[f]);
+        }
+      }
+    }
+  }
+}

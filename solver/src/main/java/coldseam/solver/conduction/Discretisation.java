@@ -1,0 +1,120 @@
+package coldseam.solver.conduction;
+
+import coldseam.mesh.triangulation.Mesh;
+import coldseam.solver.algebra.FillReducingOrder;
+import coldseam.solver.detail.Conditions;
+import java.util.Arrays;
+import java.util.HashMap;
+import java.util.Map;
+
+/**
+ * A mesh with its nodes, the couplings of its triangles, its outline and the nodes whose
+ * temperature is fixed. Nodes are the vertices, then the middles of the sides.
+ */
+final class Discretisation {
+  private static final int FREE = -1;
+  private static final int SHARED = -2;
+
+  final Mesh mesh;
+  final int spaces;
+  final int nodeCount;
+  final int[] nodes;
+  final double[] couplings;
+  final Outline outline;
+
+  /** Place of a node's unknown in the order of elimination, −1 for fixed nodes. */
+  final int[] unknown;
+
+  final int unknowns;
+
+  /** Whether heat is made to enter anywhere. */
+  final boolean hasFlow;
+
+  private final int[] fixedSpace;
+  private final Map<Integer, int[]> sharedNodes = new HashMap<>();
+
+  Discretisation(Mesh mesh, Conditions conditions) {
+    this.mesh = mesh;
+    spaces = conditions.spaceCount();
+    nodeCount = mesh.vertexCount() + mesh.sideCount();
+    nodes = new int[QuadraticElement.NODES * mesh.triangleCount()];
+    couplings = new double[3 * mesh.triangleCount()];
+    double[] x = new double[mesh.triangleCount()];
+    double[] y = new double[mesh.triangleCount()];
+    for (int t = 0; t < mesh.triangleCount(); t++) {
+      for (int k = 0; k < 3; k++) {
+        int vertex = mesh.vertex(t, k);
+        nodes[QuadraticElement.NODES * t + k] = vertex;
+        nodes[QuadraticElement.NODES * t + 3 + k] = mesh.vertexCount() + mesh.side(t, k);
+        x[t] += mesh.x(vertex);
+        y[t] += mesh.y(vertex);
+      }
+      QuadraticElement.couplings(
+          mesh, t, conditions.material(mesh.label(t)), couplings, 3 * t);
+    }
+    outline = new Outline(mesh, conditions);
+    fixedSpace = new int[nodeCount];
+    Arrays.fill(fixedSpace, FREE);
+    boolean flow = false;
+    for (int s = 0; s < outline.count; s++) {
+      flow |= outline.kind[s] == Conditions.Kind.FLOW;
+      if (outline.kind[s] == Conditions.Kind.FIXED) {
+        fix(outline.start[s], outline.space[s]);
+        fix(outline.middle[s], outline.space[s]);
+        fix(outline.end[s], outline.space[s]);
+      }
+    }
+    hasFlow = flow;
+    boolean[] free = new boolean[nodeCount];
+    int count = 0;
+    for (int n = 0; n < nodeCount; n++) {
+      free[n] = fixedSpace[n] == FREE;
+      count += free[n] ? 1 : 0;
+    }
+    unknowns = count;
+    unknown = FillReducingOrder.of(free, nodes, QuadraticElement.NODES, x, y);
+  }
+
+  private void fix(int node, int space) {
+    if (fixedSpace[node] == FREE) {
+      fixedSpace[node] = space;
+    } else if (fixedSpace[node] == SHARED) {
+      int[] before = sharedNodes.get(node);
+      if (Arrays.stream(before).noneMatch(other -> other == space)) {
+        int[] more = Arrays.copyOf(before, before.length + 1);
+        more[before.length] = space;
+        sharedNodes.put(node, more);
+      }
+    } else if (fixedSpace[node] != space) {
+      sharedNodes.put(node, new int[] {fixedSpace[node], space});
+      fixedSpace[node] = SHARED;
+    }
+  }
+
+  /** Whether the temperature of a node is fixed. */
+  boolean fixed(int node) {
+    return fixedSpace[node] != FREE;
+  }
+
+  /**
+   * Value of a fixed node in the unit field of a space: 1 or 0, or a mean where fixed temperatures
+   * meet.
+   */
+  double fixedValue(int node, int field) {
+    if (fixedSpace[node] != SHARED) {
+      return fixedSpace[node] == field ? 1 : 0;
+    }
+    int[] meeting = sharedNodes.get(node);
+    for (int space : meeting) {
+      if (space == field) {
+        return 1.0 / meeting.length;
+      }
+    }
+    return 0;
+  }
+
+  /** The nodes where fixed temperatures of different spaces meet, with those spaces. */
+  Map<Integer, int[]> sharedNodes() {
+    return sharedNodes;
+  }
+}
