@@ -60,8 +60,7 @@ public final class FillReducingOrder {
     for (boolean f : free) {
       unknowns += f ? 1 : 0;
     }
-    FillReducingOrder order =
-        new FillReducingOrder(free.length, nodes, perElement, x, y, unknowns);
+    FillReducingOrder order = new FillReducingOrder(free.length, nodes, perElement, x, y, unknowns);
     for (int n = 0; n < free.length; n++) {
       order.seen[n] = free[n] ? 0 : Integer.MAX_VALUE;
     }

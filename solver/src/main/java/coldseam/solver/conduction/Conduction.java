@@ -1,6 +1,9 @@
 package coldseam.solver.conduction;
 
 import coldseam.mesh.partition.Partition;
+import coldseam.mesh.triangulation.Mesh;
+import coldseam.mesh.triangulation.SizeField;
+import coldseam.mesh.triangulation.Triangulator;
 import coldseam.solver.detail.Accuracy;
 import coldseam.solver.detail.Conditions;
 
@@ -36,6 +39,22 @@ public final class Conduction {
    */
   public static Solution solve(
       Partition partition, Conditions conditions, Goal goal, Progress progress) {
-    throw new UnsupportedOperationException();
+    Mesh coarse = Triangulator.triangulate(partition, conditions::conducts, SizeField.NONE);
+    return new AdaptiveLoop(partition, conditions, goal, progress, Double.NaN).run(coarse);
+  }
+
+  /**
+   * Solves another film set of a detail, beginning with the mesh that the first one ended with.
+   *
+   * @param first the solution with the first film set, from this class
+   * @param conditions conditions on the same partition's edges
+   * @param goal what to meet
+   * @param progress told of each pass
+   * @return the solution on the final mesh
+   */
+  public static Solution solveNext(
+      Solution first, Conditions conditions, Goal goal, Progress progress) {
+    double ratio = ((FieldSolution) first).errorRatio();
+    return new AdaptiveLoop(first.partition(), conditions, goal, progress, ratio).run(first.mesh());
   }
 }

@@ -6,6 +6,7 @@ import coldseam.solver.detail.Conditions;
 import java.util.Arrays;
 import java.util.HashMap;
 import java.util.Map;
+import java.util.Set;
 
 /**
  * A mesh with its nodes, the couplings of its triangles, its outline and the nodes whose
@@ -30,6 +31,9 @@ final class Discretisation {
   /** Whether heat is made to enter anywhere. */
   final boolean hasFlow;
 
+  /** Square of the mesh's extent, m². */
+  final double extentSquared;
+
   private final int[] fixedSpace;
   private final Map<Integer, int[]> sharedNodes = new HashMap<>();
 
@@ -49,9 +53,9 @@ final class Discretisation {
         x[t] += mesh.x(vertex);
         y[t] += mesh.y(vertex);
       }
-      QuadraticElement.couplings(
-          mesh, t, conditions.material(mesh.label(t)), couplings, 3 * t);
+      QuadraticElement.couplings(mesh, t, conditions.material(mesh.label(t)), couplings, 3 * t);
     }
+    extentSquared = extentSquared(mesh);
     outline = new Outline(mesh, conditions);
     fixedSpace = new int[nodeCount];
     Arrays.fill(fixedSpace, FREE);
@@ -73,6 +77,20 @@ final class Discretisation {
     }
     unknowns = count;
     unknown = FillReducingOrder.of(free, nodes, QuadraticElement.NODES, x, y);
+  }
+
+  private static double extentSquared(Mesh mesh) {
+    double left = Double.POSITIVE_INFINITY;
+    double right = Double.NEGATIVE_INFINITY;
+    double bottom = Double.POSITIVE_INFINITY;
+    double top = Double.NEGATIVE_INFINITY;
+    for (int v = 0; v < mesh.vertexCount(); v++) {
+      left = Math.min(left, mesh.x(v));
+      right = Math.max(right, mesh.x(v));
+      bottom = Math.min(bottom, mesh.y(v));
+      top = Math.max(top, mesh.y(v));
+    }
+    return (right - left) * (right - left) + (top - bottom) * (top - bottom);
   }
 
   private void fix(int node, int space) {
@@ -113,8 +131,21 @@ final class Discretisation {
     return 0;
   }
 
-  /** The nodes where fixed temperatures of different spaces meet, with those spaces. */
-  Map<Integer, int[]> sharedNodes() {
-    return sharedNodes;
+  /** Which spaces' fixed temperatures meet in a point. */
+  boolean[][] meeting() {
+    boolean[][] meeting = new boolean[spaces][spaces];
+    for (int[] group : sharedNodes.values()) {
+      for (int i : group) {
+        for (int j : group) {
+          meeting[i][j] |= i != j;
+        }
+      }
+    }
+    return meeting;
+  }
+
+  /** The vertices where fixed temperatures of different spaces meet. */
+  Set<Integer> sharedNodes() {
+    return sharedNodes.keySet();
   }
 }

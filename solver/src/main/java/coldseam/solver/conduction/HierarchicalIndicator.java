@@ -200,14 +200,15 @@ final class HierarchicalIndicator {
     return k;
   }
 
-  /** How stiffly a triangle answers to a flux through a side: λ over the smaller of height, side. */
+  /**
+   * How stiffly a triangle answers to a flux through a side: λ over the smaller of height, side.
+   */
   private double stiffness(int t, int k) {
     double g0 = d.couplings[3 * t];
     double g1 = d.couplings[3 * t + 1];
     double g2 = d.couplings[3 * t + 2];
-    double conductivity = 2 * Math.sqrt(g0 * g1 + g1 * g2 + g2 * g0);
     double across = 2 * (d.couplings[3 * t + k] - g0 - g1 - g2);
-    return Math.max(conductivity, across);
+    return Math.max(QuadraticElement.conductivity(d.couplings, t), across);
   }
 
   private static double[][] reference() {
@@ -228,8 +229,7 @@ final class HierarchicalIndicator {
         for (int k = 0; k < 3; k++) {
           for (int p = 0; p < SIZE; p++) {
             for (int q = 0; q < SIZE; q++) {
-              sums[k][p * SIZE + q] +=
-                  weight * along(derivative[p], k) * along(derivative[q], k);
+              sums[k][p * SIZE + q] += weight * along(derivative[p], k) * along(derivative[q], k);
             }
           }
         }

@@ -4,19 +4,19 @@ import java.util.ArrayList;
 import java.util.List;
 
 /**
- * What the passes of the adaptive loop found, and what is still missing by their decrease.
- * Energies of nested meshes only fall. What is left is guessed by extrapolation: in proportion to
- * the local indicators, and by the rate at which the last falls came (Richardson). It is no bound.
+ * What the passes of the adaptive loop found, and what is still missing by their decrease. Energies
+ * of nested meshes only fall. What is left is guessed by extrapolation: in proportion to the local
+ * indicators, and by the rate at which the last falls came (Richardson). It is no bound.
  */
 final class History {
   /** Lacking energy over the indicators' sum, before two passes have shown it. */
   private static final double FIRST_RATIO = 2;
 
-  /** The rate energies are trusted to fall at: error ∝ unknowns^−2 for quadratics. */
-  private static final double BEST_RATE = 2;
+  /** How many passes back the falls are compared. */
+  private static final int PASSES_COMPARED = 3;
 
-  /** The slowest rate that is extrapolated with. */
-  private static final double WORST_RATE = 0.25;
+  /** Smaller falls of the indicators, in parts of them, tell nothing. */
+  private static final double CLEAR_FALL = 0.2;
 
   private final List<ConductanceMatrix> matrices = new ArrayList<>();
   private final List<double[]> lacking = new ArrayList<>();
@@ -61,26 +61,20 @@ final class History {
     if (last == 0) {
       return (Double.isNaN(earlierRatio) ? FIRST_RATIO : earlierRatio) * indicated;
     }
-    double fall = Math.max(0, form(last - 1, x) - form(last, x));
-    double before = indicated(last - 1, x);
-    double byIndicator = before > indicated ? fall * indicated / (before - indicated) : fall;
-    return Math.max(byIndicator, byRate(last, x, fall));
+    return ratioSeen(x) * indicated;
   }
 
-  private double byRate(int last, double[] x, double fall) {
-    double growth = unknowns.get(last) / (double) unknowns.get(last - 1);
-    if (!(growth > 1)) {
-      return fall;
-    }
-    double rate = BEST_RATE;
-    if (last >= 2) {
-      double fallBefore = Math.max(0, form(last - 2, x) - form(last - 1, x));
-      if (fall > 0 && fallBefore > 0) {
-        rate = Math.log(fallBefore / fall) / Math.log(growth);
+  /** The fall of the energy over that of the indicators, the largest seen lately. */
+  private double ratioSeen(double[] x) {
+    int last = passes() - 1;
+    double ratio = 0;
+    for (int before = last - 1; before >= Math.max(0, last - PASSES_COMPARED); before--) {
+      double fall = indicated(before, x) - indicated(last, x);
+      if (fall > CLEAR_FALL * indicated(before, x)) {
+        ratio = Math.max(ratio, (form(before, x) - form(last, x)) / fall);
       }
     }
-    rate = Math.min(BEST_RATE, Math.max(WORST_RATE, rate));
-    return fall / (Math.pow(growth, rate) - 1);
+    return ratio > 0 ? ratio : Double.isNaN(earlierRatio) ? FIRST_RATIO : earlierRatio;
   }
 
   /** Lacking energy over the indicators' sum in the last pass, for a similar problem. */
@@ -89,7 +83,8 @@ final class History {
     return indicated > 0 ? error(x) / indicated : FIRST_RATIO;
   }
 
-  private double indicated(int pass, double[] x) {
+  /** Sum of the indicators for xᵀAx in a pass. */
+  double indicated(int pass, double[] x) {
     // |Σ x_i e_i|² ≤ Σ x_i² |Σ e_i²| would forget cross terms: the triangle inequality does not
     double sum = 0;
     for (int i = 0; i < x.length; i++) {
@@ -98,7 +93,8 @@ final class History {
     return sum * sum;
   }
 
-  private double form(int pass, double[] x) {
+  /** xᵀAx in a pass. */
+  double form(int pass, double[] x) {
     double[][] a = matrices.get(pass).a;
     double sum = 0;
     for (int i = 0; i < x.length; i++) {

@@ -79,8 +79,7 @@ final class Outline {
     start[s] = mesh.vertex(t, (k + 1) % 3);
     end[s] = mesh.vertex(t, (k + 2) % 3);
     middle[s] = mesh.vertexCount() + mesh.side(t, k);
-    lengthM[s] =
-        Math.hypot(mesh.x(end[s]) - mesh.x(start[s]), mesh.y(end[s]) - mesh.y(start[s]));
+    lengthM[s] = Math.hypot(mesh.x(end[s]) - mesh.x(start[s]), mesh.y(end[s]) - mesh.y(start[s]));
     kind[s] = conditions.kind(edge);
     space[s] = conditions.space(edge);
     filmM2KPerW[s] = conditions.filmM2KPerW(edge);

@@ -46,6 +46,14 @@ final class QuadraticElement {
     out[at + 2] = -turned(xx, xy, yy, x0, y0, x2, y2) / fourAreas;
   }
 
+  /** √det λ of a triangle's material, W/(m·K). */
+  static double conductivity(double[] g, int t) {
+    double g0 = g[3 * t];
+    double g1 = g[3 * t + 1];
+    double g2 = g[3 * t + 2];
+    return 2 * Math.sqrt(g0 * g1 + g1 * g2 + g2 * g0);
+  }
+
   private static double turned(
       double xx, double xy, double yy, double ax, double ay, double bx, double by) {
     return xx * ay * by - xy * (ay * bx + ax * by) + yy * ax * bx;
@@ -119,7 +127,8 @@ final class QuadraticElement {
       double vm = 2 * (v[nodes[at + 3 + a]] - v[nodes[at + 3 + b]]);
       sum -=
           g[3 * t + k]
-              * ((up + uq) * (vp + vq) + (up - uq + um) * (vp - vq + vm)
+              * ((up + uq) * (vp + vq)
+                  + (up - uq + um) * (vp - vq + vm)
                   + (uq - up + um) * (vq - vp + vm));
     }
     return sum / 3;

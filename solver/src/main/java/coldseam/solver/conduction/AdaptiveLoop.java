@@ -1,0 +1,254 @@
+package coldseam.solver.conduction;
+
+import coldseam.mesh.partition.Partition;
+import coldseam.mesh.triangulation.Mesh;
+import coldseam.solver.detail.Accuracy;
+import coldseam.solver.detail.Conditions;
+import java.util.Arrays;
+import java.util.BitSet;
+import java.util.concurrent.CancellationException;
+
+/** Solve, estimate, mark, refine, until what is asked is met. */
+final class AdaptiveLoop {
+  /** Part of a relative accuracy that the guessed error may take. */
+  private static final double PART_OF_RELATIVE = 0.1;
+
+  /** Part of an absolute accuracy that the guessed error may take. */
+  private static final double PART_OF_ABSOLUTE = 0.3;
+
+  /** How far surface temperatures may move, in parts of the temperature difference (0.01 in 25). */
+  private static final double STEADY = 4e-4;
+
+  /** Temperature error aimed at where heat flows are infinite, in parts of the difference. */
+  private static final double TEMPERATURE = 1e-4;
+
+  /** The part of the indicators' sum that a pass splits at most. */
+  private static final double BULK = 0.9;
+
+  /** What splitting leaves of a triangle's indicator, cautiously. */
+  private static final double LEFT_BY_SPLITTING = 0.2;
+
+  /** The loop ends after this many passes whatever is reached. */
+  private static final int MOST_PASSES = 60;
+
+  private final Partition partition;
+  private final Conditions conditions;
+  private final Conduction.Goal goal;
+  private final Progress progress;
+  private final History history;
+
+  // of the present pass
+  private Discretisation d;
+  private double[][] fields;
+  private ConductanceMatrix matrix;
+  private HierarchicalIndicator indicator;
+  private boolean[][] meeting;
+  private double[] sums;
+  private double[] targets;
+  private SurfaceExtremes extremes;
+
+  AdaptiveLoop(
+      Partition partition,
+      Conditions conditions,
+      Conduction.Goal goal,
+      Progress progress,
+      double earlierRatio) {
+    this.partition = partition;
+    this.conditions = conditions;
+    this.goal = goal;
+    this.progress = progress;
+    history = new History(earlierRatio);
+  }
+
+  FieldSolution run(Mesh start) {
+    Mesh mesh = start;
+    while (true) {
+      solve(mesh);
+      BitSet besides = new BitSet(mesh.triangleCount());
+      double reached = Math.max(energyRatio(), Math.max(jumpRatio(), surfaceRatio(besides)));
+      tell(reached);
+      if (reached <= 1 || history.passes() >= MOST_PASSES) {
+        break;
+      }
+      Mesh finer = Marking.refine(mesh, wishes(), part(reached), besides);
+      if (finer == mesh
+          || finer.vertexCount() + finer.sideCount() > goal.accuracy().mostUnknowns()) {
+        break;
+      }
+      mesh = finer;
+    }
+    return new FieldSolution(partition, conditions, d, fields, matrix, history);
+  }
+
+  private void solve(Mesh mesh) {
+    d = new Discretisation(mesh, conditions);
+    fields = Assembly.unitFields(d);
+    matrix = ConductanceMatrix.of(d, fields);
+    meeting = d.meeting();
+    boolean[] wanted = new boolean[d.spaces + 1];
+    Arrays.fill(wanted, 0, d.spaces > 2 ? d.spaces : d.spaces - 1, true);
+    wanted[d.spaces] = d.hasFlow;
+    indicator = new HierarchicalIndicator(d, fields, wanted);
+    sums = new double[d.spaces + 1];
+    for (int f = 0; f < sums.length; f++) {
+      if (wanted[f]) {
+        for (double lacking : indicator.energy[f]) {
+          sums[f] += lacking;
+        }
+      }
+    }
+    if (d.spaces == 2) {
+      sums[1] = sums[0];
+    }
+    history.add(matrix, Arrays.copyOf(sums, d.spaces), d.unknowns);
+    setTargets();
+  }
+
+  private void setTargets() {
+    Accuracy accuracy = goal.accuracy();
+    double relative = accuracy.couplingRelative();
+    double absolute = accuracy.couplingWPerMK();
+    if (goal.transmittanceAsked()) {
+      relative = Math.min(relative, accuracy.transmittanceRelative());
+    }
+    if (goal.psiAsked()) {
+      absolute = Math.min(absolute, accuracy.psiWPerMK());
+    }
+    targets = new double[d.spaces + 1];
+    for (int i = 0; i < d.spaces; i++) {
+      targets[i] =
+          infinite(i)
+              ? Double.POSITIVE_INFINITY
+              : Math.min(PART_OF_RELATIVE * relative * matrix.a[i][i], PART_OF_ABSOLUTE * absolute);
+    }
+    targets[d.spaces] = PART_OF_RELATIVE * relative * matrix.flowEnergy;
+  }
+
+  private boolean infinite(int space) {
+    for (boolean meets : meeting[space]) {
+      if (meets) {
+        return true;
+      }
+    }
+    return false;
+  }
+
+  /** Guessed errors of the conductances over what they may be. */
+  private double energyRatio() {
+    double worst = 0;
+    double[] x = new double[d.spaces];
+    for (int i = 0; i < d.spaces; i++) {
+      if (!infinite(i) && targets[i] > 0) {
+        x[i] = 1;
+        worst = Math.max(worst, history.error(x) / targets[i]);
+        x[i] = 0;
+      }
+    }
+    if (d.hasFlow && targets[d.spaces] > 0) {
+      worst = Math.max(worst, sums[d.spaces] / targets[d.spaces]);
+    }
+    return worst;
+  }
+
+  /** The same for temperatures in fields of infinite energy. */
+  private double jumpRatio() {
+    double sum = 0;
+    for (int i = 0; i < d.spaces; i++) {
+      if (infinite(i) && indicator.energy[i] != null) {
+        for (int t = 0; t < d.mesh.triangleCount(); t++) {
+          sum += jumpWish(i, t);
+        }
+      }
+    }
+    return sum;
+  }
+
+  /** Square of the temperature error that a triangle causes elsewhere, over what it may be. */
+  private double jumpWish(int field, int t) {
+    double size = d.mesh.area(t) / d.extentSquared;
+    double error = indicator.energy[field][t] / QuadraticElement.conductivity(d.couplings, t);
+    return size * error / (TEMPERATURE * TEMPERATURE);
+  }
+
+  private double[] wishes() {
+    double[] wishes = new double[d.mesh.triangleCount()];
+    for (int f = 0; f <= d.spaces; f++) {
+      if (indicator.energy[f] == null || !(targets[f] > 0)) {
+        continue;
+      }
+      boolean jumps = Double.isInfinite(targets[f]);
+      for (int t = 0; t < wishes.length; t++) {
+        wishes[t] += jumps ? jumpWish(f, t) : indicator.energy[f][t] / targets[f];
+      }
+    }
+    return wishes;
+  }
+
+  /** The part to be split so that the last pass does not overshoot by much. */
+  private double part(double reached) {
+    double enough = (1 - 0.7 / reached) / (1 - LEFT_BY_SPLITTING);
+    return Math.min(BULK, Math.max(0.3, enough));
+  }
+
+  /** How unsteady the coldest and warmest points are, and the triangles around them. */
+  private double surfaceRatio(BitSet around) {
+    if (!goal.surfaceTemperatures()) {
+      return 0;
+    }
+    double[] temperatures = goal.temperaturesC();
+    double low = Arrays.stream(temperatures).min().orElse(0);
+    double high = Arrays.stream(temperatures).max().orElse(0);
+    SurfaceExtremes before = extremes;
+    extremes = new SurfaceExtremes(d, FieldSolution.nodal(d, fields, temperatures));
+    if (!(high > low)) {
+      return 0;
+    }
+    double may = STEADY * (high - low);
+    double worst = before == null ? 0 : extremes.change(before) / may;
+    for (int i = 0; i < d.spaces; i++) {
+      worst = Math.max(worst, around(extremes.coldestSide[i], temperatures, may, around));
+      worst = Math.max(worst, around(extremes.warmestSide[i], temperatures, may, around));
+    }
+    return worst;
+  }
+
+  private double around(int side, double[] temperatures, double may, BitSet around) {
+    if (side < 0) {
+      return 0;
+    }
+    double worst = 0;
+    int start = d.outline.start[side];
+    int end = d.outline.end[side];
+    for (int t = 0; t < d.mesh.triangleCount(); t++) {
+      boolean near = false;
+      for (int k = 0; k < 3; k++) {
+        near |= d.mesh.vertex(t, k) == start || d.mesh.vertex(t, k) == end;
+      }
+      if (near) {
+        double error = localError(t, temperatures);
+        worst = Math.max(worst, error / may);
+        if (error > may / 4) {
+          around.set(t);
+        }
+      }
+    }
+    return worst;
+  }
+
+  private double localError(int t, double[] temperatures) {
+    double sum = 0;
+    for (int i = 0; i < d.spaces; i++) {
+      if (indicator.amplitude[i] != null) {
+        double reference = temperatures[d.spaces - 1];
+        sum += indicator.amplitude[i][t] * Math.abs(temperatures[i] - reference);
+      }
+    }
+    return sum + (d.hasFlow ? indicator.amplitude[d.spaces][t] : 0);
+  }
+
+  private void tell(double reached) {
+    if (!progress.pass(conditions.filmSet().toString(), history.passes(), d.unknowns, reached)) {
+      throw new CancellationException("cancelled after pass " + history.passes());
+    }
+  }
+}

@@ -1,0 +1,168 @@
+package coldseam.solver.conduction;
+
+import coldseam.mesh.partition.Partition;
+import coldseam.mesh.triangulation.Mesh;
+import coldseam.solver.detail.Conditions;
+
+/** The unit fields on the final mesh and what follows from them. */
+final class FieldSolution implements Solution {
+  static final String NOT_PROVED =
+      "bounds are not computed yet: the error is guessed from what refinement still changed";
+  static final String MEETING =
+      "two fixed temperatures meet in a point, so the heat flow between them is infinite:"
+          + " only temperatures have a meaning";
+
+  private final Partition partition;
+  private final Conditions conditions;
+  private final Discretisation d;
+  private final double[][] fields;
+  private final ConductanceMatrix matrix;
+  private final History history;
+  private final boolean[][] meeting;
+  private volatile StretchFlows stretchFlows;
+
+  FieldSolution(
+      Partition partition,
+      Conditions conditions,
+      Discretisation d,
+      double[][] fields,
+      ConductanceMatrix matrix,
+      History history) {
+    this.partition = partition;
+    this.conditions = conditions;
+    this.d = d;
+    this.fields = fields;
+    this.matrix = matrix;
+    this.history = history;
+    meeting = d.meeting();
+  }
+
+  /** Guessed error over the sum of the indicators, the worst of the spaces. */
+  double errorRatio() {
+    double worst = 0;
+    for (int i = 0; i < d.spaces; i++) {
+      double[] x = new double[d.spaces];
+      x[i] = 1;
+      worst = Math.max(worst, history.ratio(x));
+    }
+    return worst;
+  }
+
+  History history() {
+    return history;
+  }
+
+  @Override
+  public Mesh mesh() {
+    return d.mesh;
+  }
+
+  @Override
+  public Partition partition() {
+    return partition;
+  }
+
+  @Override
+  public Conditions conditions() {
+    return conditions;
+  }
+
+  @Override
+  public int unknowns() {
+    return d.unknowns;
+  }
+
+  @Override
+  public int passes() {
+    return history.passes();
+  }
+
+  @Override
+  public double matrix(int i, int j) {
+    if (i != j) {
+      return meeting[i][j] ? Double.NEGATIVE_INFINITY : matrix.a[i][j];
+    }
+    for (boolean infinite : meeting[i]) {
+      if (infinite) {
+        return Double.POSITIVE_INFINITY;
+      }
+    }
+    return matrix.a[i][i];
+  }
+
+  @Override
+  public Quantity coupling(int[] warm, int[] cold) {
+    double[] x = new double[d.spaces];
+    double[] y = new double[d.spaces];
+    double value = 0;
+    for (int i : warm) {
+      x[i] = 1;
+      for (int j : cold) {
+        if (meeting[i][j]) {
+          return new Quantity(
+              Double.POSITIVE_INFINITY,
+              new Certificate.NotCertified(MEETING, Double.POSITIVE_INFINITY));
+        }
+        y[j] = 1;
+        value -= matrix.a[i][j];
+      }
+    }
+    double halfWidth = Math.sqrt(history.error(x) * history.error(y));
+    return new Quantity(value, new Certificate.NotCertified(NOT_PROVED, halfWidth));
+  }
+
+  @Override
+  public double spaceFlow(int space, double[] temperaturesC) {
+    double sum = matrix.drivenFlow[space];
+    for (int j = 0; j < d.spaces; j++) {
+      double difference = temperaturesC[j] - temperaturesC[space];
+      if (j == space || difference == 0) {
+        continue;
+      }
+      if (meeting[space][j]) {
+        return difference < 0 ? Double.POSITIVE_INFINITY : Double.NEGATIVE_INFINITY;
+      }
+      sum += matrix.a[space][j] * difference;
+    }
+    return sum;
+  }
+
+  @Override
+  public double stretchFlow(int stretch, double[] temperaturesC) {
+    StretchFlows ready = stretchFlows;
+    if (ready == null) {
+      ready = new StretchFlows(d, conditions, fields);
+      stretchFlows = ready;
+    }
+    return ready.flow(stretch, temperaturesC);
+  }
+
+  @Override
+  public double prescribedFlow() {
+    return matrix.prescribedFlow;
+  }
+
+  @Override
+  public double[] unitField(int space) {
+    return fields[space].clone();
+  }
+
+  @Override
+  public TemperatureField temperatures(double[] temperaturesC) {
+    return new TemperatureField(d.mesh, nodal(d, fields, temperaturesC));
+  }
+
+  /** Nodal temperatures; spaces of one temperature give exactly that temperature. */
+  static double[] nodal(Discretisation d, double[][] fields, double[] temperaturesC) {
+    double[] nodal = new double[d.nodeCount];
+    double reference = temperaturesC[0];
+    for (int n = 0; n < nodal.length; n++) {
+      double sum = fields[d.spaces][n];
+      for (int i = 1; i < d.spaces; i++) {
+        sum += (temperaturesC[i] - reference) * fields[i][n];
+      }
+      nodal[n] = reference + sum;
+    }
+    return nodal;
+  }
+}

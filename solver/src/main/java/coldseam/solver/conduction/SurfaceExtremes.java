@@ -1,0 +1,80 @@
+package coldseam.solver.conduction;
+
+import coldseam.solver.detail.Conditions;
+import java.util.Arrays;
+
+/** Coldest and warmest point of the surface that faces each space through a film. */
+final class SurfaceExtremes {
+  /** Lowest temperature by space, °C; +∞ where the space has no film. */
+  final double[] coldestC;
+
+  /** Highest temperature by space, °C; −∞ where the space has no film. */
+  final double[] warmestC;
+
+  /** Side of the outline where it is lowest, or −1. */
+  final int[] coldestSide;
+
+  /** Side of the outline where it is highest, or −1. */
+  final int[] warmestSide;
+
+  /**
+   * Searches.
+   *
+   * @param d the discretisation
+   * @param nodalC temperatures of the nodes, °C
+   */
+  SurfaceExtremes(Discretisation d, double[] nodalC) {
+    coldestC = new double[d.spaces];
+    warmestC = new double[d.spaces];
+    coldestSide = new int[d.spaces];
+    warmestSide = new int[d.spaces];
+    Arrays.fill(coldestC, Double.POSITIVE_INFINITY);
+    Arrays.fill(warmestC, Double.NEGATIVE_INFINITY);
+    Arrays.fill(coldestSide, -1);
+    Arrays.fill(warmestSide, -1);
+    Outline o = d.outline;
+    for (int s = 0; s < o.count; s++) {
+      if (o.kind[s] != Conditions.Kind.FILM) {
+        continue;
+      }
+      double a = nodalC[o.start[s]];
+      double m = nodalC[o.middle[s]];
+      double b = nodalC[o.end[s]];
+      int space = o.space[s];
+      double low = Math.min(Math.min(a, b), turningPoint(a, m, b));
+      double high = Math.max(Math.max(a, b), turningPoint(a, m, b));
+      if (low < coldestC[space]) {
+        coldestC[space] = low;
+        coldestSide[space] = s;
+      }
+      if (high > warmestC[space]) {
+        warmestC[space] = high;
+        warmestSide[space] = s;
+      }
+    }
+  }
+
+  /** Value of the parabola where it turns between its ends, else its middle. */
+  private static double turningPoint(double a, double m, double b) {
+    double slope = (b - a) / 2;
+    double curvature = (a - m) + (b - m);
+    return Math.abs(slope) < Math.abs(curvature) ? m - slope * slope / (2 * curvature) : m;
+  }
+
+  /**
+   * The largest change against another pass.
+   *
+   * @param other the other pass
+   * @return K
+   */
+  double change(SurfaceExtremes other) {
+    double most = 0;
+    for (int i = 0; i < coldestC.length; i++) {
+      if (coldestSide[i] >= 0) {
+        most = Math.max(most, Math.abs(coldestC[i] - other.coldestC[i]));
+        most = Math.max(most, Math.abs(warmestC[i] - other.warmestC[i]));
+      }
+    }
+    return most;
+  }
+}
