@@ -1,16 +1,34 @@
 package coldseam.solver;
 
 import coldseam.mesh.partition.Partition;
+import coldseam.mesh.plane.Resolution;
+import coldseam.solver.conduction.Conduction;
 import coldseam.solver.conduction.Progress;
+import coldseam.solver.conduction.Quantity;
+import coldseam.solver.conduction.Solution;
 import coldseam.solver.detail.Accuracy;
 import coldseam.solver.detail.Assumption;
 import coldseam.solver.detail.Conditions;
 import coldseam.solver.detail.Detail;
+import coldseam.solver.detail.DetailException;
+import coldseam.solver.detail.Fault;
+import coldseam.solver.detail.FilmSet;
+import coldseam.solver.detail.Geometry;
+import coldseam.solver.detail.Subtraction;
+import coldseam.solver.result.Plan;
 import coldseam.solver.result.Result;
+import java.util.Collections;
+import java.util.IdentityHashMap;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.function.Supplier;
 
 /** The door of this module: a detail and an accuracy in, a result out. */
 public final class Solver {
+  private static final double NANOS_PER_MS = 1e6;
+
   private Solver() {}
 
   /**
@@ -39,7 +57,17 @@ public final class Solver {
    * @throws coldseam.solver.detail.DetailException if it cannot be solved as it stands
    */
   public static Inspection inspect(Detail detail) {
-    throw new UnsupportedOperationException();
+    Resolved resolved = Resolved.of(detail);
+    for (Subtraction.OfDetail other : resolved.plan().otherDetails()) {
+      nested(other, () -> Resolved.of(other.detail()));
+    }
+    return new Inspection(
+        resolved.partition(),
+        resolved.heatLoss(),
+        resolved.surface(),
+        resolved.plan().flanks(),
+        resolved.plan().assumptions(),
+        resolved.plan().warnings());
   }
 
   /**
@@ -52,6 +80,131 @@ public final class Solver {
    * @throws coldseam.solver.detail.DetailException if it cannot be solved as it stands
    */
   public static Result solve(Detail detail, Accuracy accuracy, Progress progress) {
-    throw new UnsupportedOperationException();
+    Map<String, Double> times = new LinkedHashMap<>();
+    long start = System.nanoTime();
+    Resolved resolved = Resolved.of(detail);
+    Plan plan = resolved.plan();
+    start = lap(times, "resolve", start);
+
+    boolean surfaceNeeded = plan.surfaceNeeded();
+    boolean shared = surfaceNeeded && plan.sameFilms();
+    Solution heatLoss =
+        resolved.solve(resolved.heatLoss(), accuracy, shared, plan.statedTemperatures(), progress);
+    Map<Subtraction.OfDetail, Quantity> others = solveOthers(plan, accuracy, progress);
+    start = lap(times, "heat loss", start);
+
+    Optional<Solution> surface = Optional.empty();
+    if (shared) {
+      surface = Optional.of(heatLoss);
+    } else if (surfaceNeeded) {
+      surface =
+          Optional.of(
+              resolved.solve(
+                  resolved.surface(), accuracy, true, plan.temperatures(heatLoss), progress));
+    }
+    long last = lap(times, "surface temperatures", start);
+
+    return plan.result(
+        heatLoss,
+        surface,
+        others::get,
+        () -> {
+          lap(times, "results", last);
+          return Collections.unmodifiableMap(times);
+        });
+  }
+
+  private static Map<Subtraction.OfDetail, Quantity> solveOthers(
+      Plan plan, Accuracy accuracy, Progress progress) {
+    Map<Subtraction.OfDetail, Quantity> others = new IdentityHashMap<>();
+    for (Subtraction.OfDetail other : plan.otherDetails()) {
+      others.put(
+          other,
+          nested(
+              other,
+              () -> {
+                Resolved resolved = Resolved.of(other.detail());
+                Solution solution =
+                    resolved.solve(
+                        resolved.heatLoss(),
+                        accuracy,
+                        false,
+                        resolved.plan().statedTemperatures(),
+                        progress);
+                return resolved.plan().coupling(solution, other.warm(), other.cold());
+              }));
+    }
+    return others;
+  }
+
+  /** Names the subtracted detail in whatever is at fault in it. */
+  private static <T> T nested(Subtraction.OfDetail other, Supplier<T> work) {
+    try {
+      return work.get();
+    } catch (DetailException e) {
+      throw new DetailException(
+          e.faults().stream()
+              .map(
+                  fault ->
+                      new Fault(
+                          "psi",
+                          other.name(),
+                          "in the detail it subtracts, "
+                              + fault.part()
+                              + (fault.name().isEmpty() ? "" : " '" + fault.name() + "'")
+                              + ": "
+                              + fault.message(),
+                          Optional.empty()))
+              .toList());
+    }
+  }
+
+  private static long lap(Map<String, Double> times, String stage, long start) {
+    long now = System.nanoTime();
+    times.put(stage, (now - start) / NANOS_PER_MS);
+    return now;
+  }
+
+  /** A detail with its partition, conditions and plan. */
+  private record Resolved(
+      Detail detail, Partition partition, Conditions heatLoss, Conditions surface, Plan plan) {
+    static Resolved of(Detail detail) {
+      if (detail.geometry() != Geometry.PLANE) {
+        throw new DetailException(
+            List.of(
+                new Fault("section", "", "only plane sections can be solved", Optional.empty())));
+      }
+      Partition partition = partition(detail);
+      Conditions heatLoss = Conditions.of(detail, partition, FilmSet.HEAT_LOSS);
+      Conditions surface = Conditions.of(detail, partition, FilmSet.SURFACE);
+      return new Resolved(
+          detail, partition, heatLoss, surface, Plan.of(detail, partition, heatLoss, surface));
+    }
+
+    private static Partition partition(Detail detail) {
+      try {
+        return Partition.of(
+            detail.labelledAreas(), detail.labelledLines(), Resolution.STANDARD);
+      } catch (IllegalArgumentException e) {
+        throw new DetailException(
+            List.of(new Fault("section", "", e.getMessage(), Optional.empty())));
+      }
+    }
+
+    Solution solve(
+        Conditions conditions,
+        Accuracy accuracy,
+        boolean surfaceTemperatures,
+        double[] temperaturesC,
+        Progress progress) {
+      Conduction.Goal goal =
+          new Conduction.Goal(
+              accuracy,
+              plan.psiWanted(),
+              plan.transmittanceWanted(),
+              surfaceTemperatures,
+              temperaturesC);
+      return Conduction.solve(partition, conditions, goal, progress);
+    }
   }
 }

@@ -1,0 +1,230 @@
+package coldseam.solver.result;
+
+import coldseam.solver.conduction.Certificate;
+import coldseam.solver.conduction.Quantity;
+import coldseam.solver.conduction.Solution;
+import coldseam.solver.detail.Conditions;
+import coldseam.solver.detail.Detail;
+import coldseam.solver.detail.DetailException;
+import coldseam.solver.detail.Fault;
+import coldseam.solver.detail.Space;
+import java.util.ArrayList;
+import java.util.BitSet;
+import java.util.List;
+import java.util.Optional;
+import java.util.stream.IntStream;
+
+/**
+ * Coupling coefficients of a solution (ISO 10211, several environments): the matrix A with A_ij =
+ * −L_ij, to which the stated conductances of floating spaces are added. A floating space f has no
+ * net flow, Σ_j A_fj θ_j + Φ_f = 0, and is eliminated by the Schur complement.
+ */
+final class Couplings {
+  private final Detail detail;
+  private final Solution solution;
+  private final double[][] matrix;
+  private final int count;
+
+  Couplings(Detail detail, Solution solution) {
+    this.detail = detail;
+    this.solution = solution;
+    count = detail.spaces().size();
+    matrix = new double[count][count];
+    for (int i = 0; i < count; i++) {
+      for (int j = 0; j < count; j++) {
+        matrix[i][j] = solution.matrix(i, j);
+      }
+    }
+    for (int i = 0; i < count; i++) {
+      Optional<Space.Floating> floating = detail.spaces().get(i).floating();
+      if (floating.isPresent() && floating.get().conductanceWPerMK() > 0) {
+        join(i, detail.spaceIndex(floating.get().to()), floating.get().conductanceWPerMK());
+      }
+    }
+  }
+
+  private void join(int i, int j, double conductance) {
+    matrix[i][i] += conductance;
+    matrix[j][j] += conductance;
+    matrix[i][j] -= conductance;
+    matrix[j][i] -= conductance;
+  }
+
+  /** L2D of every pair of spaces that the section faces. */
+  List<Result.Coupling> pairs() {
+    BitSet faced = faced(solution);
+    List<Result.Coupling> pairs = new ArrayList<>();
+    for (int i = faced.nextSetBit(0); i >= 0; i = faced.nextSetBit(i + 1)) {
+      for (int j = faced.nextSetBit(i + 1); j >= 0; j = faced.nextSetBit(j + 1)) {
+        pairs.add(
+            new Result.Coupling(name(i), name(j), solution.coupling(new int[] {i}, new int[] {j})));
+      }
+    }
+    return pairs;
+  }
+
+  static BitSet faced(Solution solution) {
+    return faced(solution.partition().edgeCount(), solution.conditions());
+  }
+
+  static BitSet faced(int edgeCount, Conditions conditions) {
+    BitSet faced = new BitSet();
+    for (int edge = 0; edge < edgeCount; edge++) {
+      if (conditions.space(edge) >= 0) {
+        faced.set(conditions.space(edge));
+      }
+    }
+    return faced;
+  }
+
+  String name(int space) {
+    return detail.spaces().get(space).name();
+  }
+
+  /**
+   * Coupling of two groups of spaces with floating ones eliminated.
+   *
+   * @param warm one group
+   * @param cold the other
+   * @param floating indices of the spaces to eliminate, none of them in the groups
+   */
+  Quantity between(int[] warm, int[] cold, int[] floating) {
+    Quantity direct = solution.coupling(warm, cold);
+    if (floating.length == 0 || !Double.isFinite(direct.value())) {
+      return direct;
+    }
+    double[][] responses = responses(floating);
+    double through = 0;
+    double estimate = direct.halfWidth();
+    String reason = "a floating space lies between";
+    for (int f = 0; f < floating.length; f++) {
+      for (int w : warm) {
+        for (int c : cold) {
+          through -= matrix[w][floating[f]] * responses[f][c];
+        }
+      }
+      estimate += solution.coupling(warm, new int[] {floating[f]}).halfWidth();
+      estimate += solution.coupling(new int[] {floating[f]}, cold).halfWidth();
+    }
+    if (direct.certificate() instanceof Certificate.NotCertified not) {
+      reason = not.reason();
+    }
+    return new Quantity(direct.value() + through, new Certificate.NotCertified(reason, estimate));
+  }
+
+  /** By how much a floating space warms when the cold group warms by 1 K, 0 … 1. */
+  double response(int[] floating, int which, int[] cold) {
+    double[][] responses = responses(floating);
+    double sum = 0;
+    for (int f = 0; f < floating.length; f++) {
+      if (floating[f] == which) {
+        for (int c : cold) {
+          sum += responses[f][c];
+        }
+      }
+    }
+    return sum;
+  }
+
+  /** Row f: temperature of floating space f per kelvin of each other space. */
+  private double[][] responses(int[] floating) {
+    int size = floating.length;
+    double[][] system = new double[size][size + count];
+    for (int f = 0; f < size; f++) {
+      for (int g = 0; g < size; g++) {
+        system[f][g] = matrix[floating[f]][floating[g]];
+      }
+      for (int j = 0; j < count; j++) {
+        if (!contains(floating, j)) {
+          system[f][size + j] = -matrix[floating[f]][j];
+        }
+      }
+    }
+    eliminate(system, floating);
+    double[][] responses = new double[size][count];
+    for (int f = 0; f < size; f++) {
+      System.arraycopy(system[f], size, responses[f], 0, count);
+    }
+    return responses;
+  }
+
+  /** Gauss–Jordan without exchanges: the matrix is symmetric positive definite. */
+  private void eliminate(double[][] system, int[] floating) {
+    int size = floating.length;
+    for (int k = 0; k < size; k++) {
+      double pivot = system[k][k];
+      if (!(pivot > 0) || !Double.isFinite(pivot)) {
+        throw undetermined(floating[k]);
+      }
+      for (int j = 0; j < system[k].length; j++) {
+        system[k][j] /= pivot;
+      }
+      for (int i = 0; i < size; i++) {
+        double factor = system[i][k];
+        if (i != k && factor != 0) {
+          for (int j = 0; j < system[i].length; j++) {
+            system[i][j] -= factor * system[k][j];
+          }
+        }
+      }
+    }
+  }
+
+  private DetailException undetermined(int space) {
+    return new DetailException(
+        List.of(
+            new Fault(
+                "space",
+                name(space),
+                "floats, but its temperature cannot be worked out: its surface has a fixed"
+                    + " temperature that meets another one in a point, or no heat reaches it",
+                Optional.empty())));
+  }
+
+  /** Temperature of every space, °C; of the floating ones as they follow from the others. */
+  double[] temperatures() {
+    int[] floating = floating(detail);
+    double[] temperatures = new double[count];
+    for (int i = 0; i < count; i++) {
+      temperatures[i] = contains(floating, i) ? 0 : detail.spaces().get(i).temperatureC();
+    }
+    if (floating.length == 0) {
+      return temperatures;
+    }
+    int size = floating.length;
+    double[][] system = new double[size][size + 1];
+    for (int f = 0; f < size; f++) {
+      double received = -solution.spaceFlow(floating[f], new double[count]);
+      for (int g = 0; g < size; g++) {
+        system[f][g] = matrix[floating[f]][floating[g]];
+      }
+      for (int j = 0; j < count; j++) {
+        if (!contains(floating, j) && matrix[floating[f]][j] != 0) {
+          received -= matrix[floating[f]][j] * temperatures[j];
+        }
+      }
+      system[f][size] = received;
+    }
+    eliminate(system, floating);
+    for (int f = 0; f < size; f++) {
+      temperatures[floating[f]] = system[f][size];
+    }
+    return temperatures;
+  }
+
+  /** Indices of the floating spaces. */
+  static int[] floating(Detail detail) {
+    return IntStream.range(0, detail.spaces().size())
+        .filter(i -> detail.spaces().get(i).floating().isPresent())
+        .toArray();
+  }
+
+  static boolean contains(int[] indices, int index) {
+    for (int i : indices) {
+      if (i == index) {
+        return true;
+      }
+    }
+    return false;
+  }
+}

@@ -1,0 +1,376 @@
+package coldseam.solver.result;
+
+import coldseam.mesh.plane.Point;
+import coldseam.solver.detail.Bracket;
+import coldseam.solver.detail.CutOffPlane;
+import coldseam.solver.detail.DimensionSystem;
+import coldseam.solver.detail.Wording;
+import java.util.EnumMap;
+import java.util.HashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+
+/**
+ * Reference lengths of flanks from the drawing (ISO 13789; ISO 14683: internal, overall internal,
+ * external dimensions).
+ *
+ * <p>A length runs along the inner (or outer) face of a flank from its cut-off plane to where the
+ * face turns away. Where two flanks have faces in one line, what lies between their ends (a slab, a
+ * partition) is halved in overall internal and external dimensions; a face that runs through from
+ * one plane to another is shared. Sharing asks for equal U, so that only the sum matters. Whatever
+ * cannot be derived without doubt has a reason instead of a length.
+ */
+final class FlankLengths {
+  /** Relative difference up to which two U count as equal. */
+  static final double EQUAL_U = 1e-9;
+
+  private final Outline outline;
+  private final List<PlacedFlank> flanks;
+  private final Map<String, Faces> faces = new HashMap<>();
+  private final Map<String, Map<DimensionSystem, Outcome>> outcomes = new HashMap<>();
+
+  /** A length, or why there is none. */
+  record Outcome(Optional<Result.Length> length, String reason) {
+    static Outcome of(Result.Length length) {
+      return new Outcome(Optional.of(length), "");
+    }
+
+    static Outcome none(String reason) {
+      return new Outcome(Optional.empty(), reason);
+    }
+  }
+
+  private record Faces(Face inner, Face outer) {}
+
+  /** The straight face of a flank on one side and where the outline beyond it leads. */
+  private record Face(FaceWalk walk, FaceEnd end, boolean inner) {
+    String side() {
+      return inner ? "inner" : "outer";
+    }
+  }
+
+  private record Partner(PlacedFlank flank, Face face, double gapM) {}
+
+  FlankLengths(Outline outline, List<PlacedFlank> flanks) {
+    this.outline = outline;
+    this.flanks = flanks;
+    for (PlacedFlank flank : flanks) {
+      if (flank.plane().isPresent()
+          && flank.inner().isPresent()
+          && flank.outer().isPresent()
+          && flank.inner().get().space() >= 0
+          && flank.outer().get().space() >= 0) {
+        faces.put(
+            flank.name(),
+            new Faces(face(flank.inner().get(), true), face(flank.outer().get(), false)));
+      }
+    }
+    for (PlacedFlank flank : flanks) {
+      outcomes.put(flank.name(), derive(flank));
+    }
+  }
+
+  /** The length of a flank in one system, or why it has none. */
+  Outcome of(PlacedFlank flank, DimensionSystem system) {
+    return outcomes.get(flank.name()).get(system);
+  }
+
+  /** All lengths of a flank that are known. */
+  Map<DimensionSystem, Result.Length> known(PlacedFlank flank) {
+    Map<DimensionSystem, Result.Length> known = new EnumMap<>(DimensionSystem.class);
+    outcomes
+        .get(flank.name())
+        .forEach((system, outcome) -> outcome.length().ifPresent(l -> known.put(system, l)));
+    return known;
+  }
+
+  private Map<DimensionSystem, Outcome> derive(PlacedFlank flank) {
+    Map<DimensionSystem, Outcome> derived = new EnumMap<>(DimensionSystem.class);
+    for (DimensionSystem system : DimensionSystem.values()) {
+      Double typed = flank.typedLengths().get(system);
+      if (typed != null) {
+        derived.put(
+            system,
+            Outcome.of(
+                new Result.Length(
+                    typed, Optional.empty(), Optional.empty(), "length typed in the case")));
+      } else if (!faces.containsKey(flank.name())) {
+        derived.put(
+            system, Outcome.none("its cut-off plane does not end at a surface on both sides"));
+      } else {
+        derived.put(system, derive(flank, system));
+      }
+    }
+    return derived;
+  }
+
+  private Outcome derive(PlacedFlank flank, DimensionSystem system) {
+    Faces of = faces.get(flank.name());
+    return switch (system) {
+      case INTERNAL -> own(flank, of.inner());
+      case OVERALL_INTERNAL -> withGap(flank, of.inner());
+      case EXTERNAL -> withGap(flank, of.outer());
+    };
+  }
+
+  private Face face(FlankEnd end, boolean inner) {
+    FaceWalk walk = outline.walk(end.face(), end.forward());
+    return new Face(walk, outline.follow(walk), inner);
+  }
+
+  /** The face alone: to where it turns away, or half of it when it runs through. */
+  private Outcome own(PlacedFlank flank, Face face) {
+    Optional<PlacedFlank> through = runsThroughTo(flank, face);
+    if (through.isPresent()) {
+      return shared(flank, face, through.get());
+    }
+    Optional<String> doubt = doubt(flank, face);
+    if (doubt.isPresent()) {
+      return Outcome.none(doubt.get());
+    }
+    return Outcome.of(
+        length(
+            face,
+            face.walk().lengthM(),
+            "along the " + face.side() + " face from the cut-off plane to " + endWords(face)));
+  }
+
+  /** The face with half the gap to the flank whose face lies in line with it. */
+  private Outcome withGap(PlacedFlank flank, Face face) {
+    Outcome alone = own(flank, face);
+    if (runsThroughTo(flank, face).isPresent()) {
+      return alone;
+    }
+    Optional<Partner> partner = inLine(flank, face);
+    if (partner.isPresent() && partner.get().gapM() > tolerance(face)) {
+      return halfGap(flank, face, partner.get());
+    }
+    Optional<PlacedFlank> beside = partnerByOutline(flank, face);
+    if (beside.isPresent() && alone.length().isPresent()) {
+      Face other = faceOf(beside.get(), face.inner());
+      double gap = gap(face, other);
+      if (partner.isEmpty() && opposite(face, other) && Math.abs(gap) > tolerance(face)) {
+        return Outcome.none(
+            "its "
+                + face.side()
+                + " face and that of '"
+                + beside.get().name()
+                + "' are parallel but not in line, with "
+                + Wording.length(Math.abs(gap))
+                + " between their ends");
+      }
+    }
+    return alone;
+  }
+
+  private Outcome halfGap(PlacedFlank flank, Face face, Partner partner) {
+    if (!equalU(flank, partner.flank())) {
+      return Outcome.none(
+          "the "
+              + Wording.length(partner.gapM())
+              + " between its "
+              + face.side()
+              + " face and that of '"
+              + partner.flank().name()
+              + "' cannot be shared, their U differ");
+    }
+    return Outcome.of(
+        length(
+            face,
+            face.walk().lengthM() + partner.gapM() / 2,
+            "along the "
+                + face.side()
+                + " face from the cut-off plane to where it turns away, and half of the "
+                + Wording.length(partner.gapM())
+                + " to the face of '"
+                + partner.flank().name()
+                + "'"));
+  }
+
+  private Outcome shared(PlacedFlank flank, Face face, PlacedFlank other) {
+    if (!equalU(flank, other)) {
+      return Outcome.none(
+          "its "
+              + face.side()
+              + " face runs through to '"
+              + other.name()
+              + "', whose U differs, so that the "
+              + Wording.length(face.walk().lengthM())
+              + " cannot be shared");
+    }
+    double whole = face.walk().lengthM();
+    Faces own = faces.get(flank.name());
+    Optional<Partner> facing =
+        inLine(flank, face.inner() ? own.outer() : own.inner())
+            .filter(partner -> partner.flank().name().equals(other.name()));
+    if (facing.isPresent() && facing.get().gapM() > tolerance(face)) {
+      FaceWalk across = (face.inner() ? own.outer() : own.inner()).walk();
+      double part =
+          outline.along(face.walk().direction(), face.walk().from(), across.to())
+              + facing.get().gapM() / 2;
+      return Outcome.of(
+          length(
+              face,
+              part,
+              "along the "
+                  + face.side()
+                  + " face, which runs through to '"
+                  + other.name()
+                  + "', as far as the middle of the "
+                  + Wording.length(facing.get().gapM())
+                  + " between the faces opposite"));
+    }
+    return Outcome.of(
+        length(
+            face,
+            whole / 2,
+            "half of the "
+                + face.side()
+                + " face, which runs through to '"
+                + other.name()
+                + "' ("
+                + Wording.length(whole)
+                + ")"));
+  }
+
+  private Result.Length length(Face face, double valueM, String derivation) {
+    FaceWalk walk = face.walk();
+    Point from = outline.point(walk.from());
+    Point to =
+        new Point(
+            from.x() + valueM * walk.direction().x(), from.y() + valueM * walk.direction().y());
+    return new Result.Length(valueM, Optional.of(from), Optional.of(to), derivation);
+  }
+
+  private String endWords(Face face) {
+    int stop = face.walk().stop();
+    if (planeOf(stop).map(CutOffPlane::symmetry).orElse(false)) {
+      return "the plane of symmetry";
+    }
+    if (planeOf(stop).isPresent()) {
+      return "the cut-off plane opposite";
+    }
+    if (stop >= 0 && outline.conditions().space(stop) != face.walk().space()) {
+      return "where it faces another space";
+    }
+    return "where it turns away";
+  }
+
+  /** The flank at whose cut-off plane a straight face ends. */
+  private Optional<PlacedFlank> runsThroughTo(PlacedFlank flank, Face face) {
+    return flankAt(face.walk().stop()).filter(other -> !other.name().equals(flank.name()));
+  }
+
+  /** The flank at whose cut-off plane the outline that faces the space ends. */
+  private Optional<PlacedFlank> partnerByOutline(PlacedFlank flank, Face face) {
+    return flankAt(face.end().stop())
+        .filter(other -> !other.name().equals(flank.name()) && faces.containsKey(other.name()))
+        .filter(other -> faceOf(other, face.inner()).walk().space() == face.walk().space());
+  }
+
+  private Optional<PlacedFlank> flankAt(int edge) {
+    return flanks.stream()
+        .filter(flank -> flank.plane().isPresent() && flank.plane().get().edges().contains(edge))
+        .findFirst();
+  }
+
+  private Optional<CutOffPlane> planeOf(int edge) {
+    return outline.conditions().cutOffPlanes().stream()
+        .filter(plane -> plane.edges().contains(edge))
+        .findFirst();
+  }
+
+  private Face faceOf(PlacedFlank flank, boolean inner) {
+    Faces both = faces.get(flank.name());
+    return inner ? both.inner() : both.outer();
+  }
+
+  /** The nearest flank whose face lies in line with this one and comes towards it. */
+  private Optional<Partner> inLine(PlacedFlank flank, Face face) {
+    Partner nearest = null;
+    for (PlacedFlank other : flanks) {
+      if (other.name().equals(flank.name()) || !faces.containsKey(other.name())) {
+        continue;
+      }
+      Face facing = faceOf(other, face.inner());
+      double gap = gap(face, facing);
+      double reach = outline.distance(face.walk().from(), facing.walk().from());
+      boolean inLine =
+          opposite(face, facing)
+              && Math.abs(
+                      outline.across(
+                          face.walk().direction(), face.walk().from(), facing.walk().from()))
+                  <= Outline.offset(reach)
+              && gap >= -tolerance(face);
+      if (inLine && (nearest == null || gap < nearest.gapM())) {
+        nearest = new Partner(other, facing, gap);
+      }
+    }
+    return Optional.ofNullable(nearest);
+  }
+
+  /** From the end of one face to the end of another, along the first, m. */
+  private double gap(Face face, Face other) {
+    return outline.along(face.walk().direction(), face.walk().to(), other.walk().to());
+  }
+
+  private static boolean opposite(Face face, Face other) {
+    return Math.abs(face.walk().direction().cross(other.walk().direction()))
+            <= FlankLayers.PARALLEL_SINE
+        && face.walk().direction().dot(other.walk().direction()) < 0;
+  }
+
+  private static double tolerance(Face face) {
+    return Outline.offset(face.walk().lengthM());
+  }
+
+  private static boolean equalU(PlacedFlank a, PlacedFlank b) {
+    Optional<Bracket> ua = a.uWPerM2K();
+    Optional<Bracket> ub = b.uWPerM2K();
+    return ua.isPresent()
+        && ub.isPresent()
+        && near(ua.get().lower(), ub.get().lower())
+        && near(ua.get().upper(), ub.get().upper());
+  }
+
+  private static boolean near(double a, double b) {
+    return Math.abs(a - b) <= EQUAL_U * Math.max(Math.abs(a), Math.abs(b));
+  }
+
+  /** Why the end of a face may not be the end of its element. */
+  private Optional<String> doubt(PlacedFlank flank, Face face) {
+    Optional<PlacedFlank> beside = partnerByOutline(flank, face);
+    if (beside.isPresent()) {
+      Face other = faceOf(beside.get(), face.inner());
+      boolean parallel =
+          Math.abs(face.walk().direction().cross(other.walk().direction()))
+              <= FlankLayers.PARALLEL_SINE;
+      if (!parallel && face.walk().to() != other.walk().to()) {
+        return Optional.of(
+            "its "
+                + face.side()
+                + " face and that of '"
+                + beside.get().name()
+                + "' do not meet in one corner");
+      }
+      return Optional.empty();
+    }
+    boolean turned = face.walk().to() != face.end().at();
+    boolean goesOn =
+        turned
+            && Math.abs(face.walk().direction().cross(face.end().run()))
+                <= FlankLayers.PARALLEL_SINE
+            && face.walk().direction().dot(face.end().run()) > 0;
+    if (goesOn) {
+      return Optional.of(
+          "its "
+              + face.side()
+              + " face turns away at "
+              + Wording.place(outline.point(face.walk().to()))
+              + " but goes on in the same direction from "
+              + Wording.place(outline.point(face.end().runStart())));
+    }
+    return Optional.empty();
+  }
+}

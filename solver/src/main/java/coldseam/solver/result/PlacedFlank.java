@@ -1,0 +1,102 @@
+package coldseam.solver.result;
+
+import coldseam.solver.detail.Bracket;
+import coldseam.solver.detail.CutOffPlane;
+import coldseam.solver.detail.DimensionSystem;
+import coldseam.solver.detail.Flank;
+import coldseam.solver.detail.Wording;
+import java.util.ArrayList;
+import java.util.Collections;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
+
+/**
+ * A flank with its place in the detail.
+ *
+ * @param name its name in the case, or the one given here
+ * @param typed what the case says of it
+ * @param plane its cut-off plane; empty if it is typed altogether
+ * @param warm the warmer space it separates, or −1
+ * @param cold the colder space, or −1
+ * @param warmEnd the end of the plane at the warmer space
+ * @param coldEnd the end at the colder space
+ * @param innerIsWarm whether internal dimensions are measured on the warm side
+ * @param reading the layers met at the plane
+ */
+record PlacedFlank(
+    String name,
+    Optional<Flank> typed,
+    Optional<CutOffPlane> plane,
+    int warm,
+    int cold,
+    Optional<FlankEnd> warmEnd,
+    Optional<FlankEnd> coldEnd,
+    boolean innerIsWarm,
+    FlankLayers.Reading reading) {
+
+  /** U of the drawn layers, W/(m²·K); empty if the section is not layered at the plane. */
+  OptionalDouble drawnUWPerM2K() {
+    return reading.layers().isPresent()
+        ? OptionalDouble.of(1 / reading.layers().get().resistanceM2KPerW())
+        : OptionalDouble.empty();
+  }
+
+  /** U as typed, else of the drawn layers. */
+  Optional<Bracket> uWPerM2K() {
+    Optional<Bracket> stated = typed.flatMap(Flank::typedUWPerM2K);
+    if (stated.isPresent() || drawnUWPerM2K().isEmpty()) {
+      return stated;
+    }
+    return Optional.of(Bracket.of(drawnUWPerM2K().getAsDouble()));
+  }
+
+  boolean typedU() {
+    return typed.flatMap(Flank::typedUWPerM2K).isPresent();
+  }
+
+  Optional<FlankEnd> inner() {
+    return innerIsWarm ? warmEnd : coldEnd;
+  }
+
+  Optional<FlankEnd> outer() {
+    return innerIsWarm ? coldEnd : warmEnd;
+  }
+
+  /** The layers in words, warm to cold. */
+  List<String> layerWords() {
+    if (reading.layers().isEmpty()) {
+      return List.of();
+    }
+    List<String> words = new ArrayList<>();
+    reading.layers().get().layers().forEach(layer -> words.add(layer.words()));
+    if (plane.isPresent() && warmEnd.isPresent() && warmEnd.get().vertex() != plane.get().first()) {
+      Collections.reverse(words);
+    }
+    return words;
+  }
+
+  String uWords() {
+    if (typedU()) {
+      return "U typed in the case";
+    }
+    return "U from the layers met at the cut-off plane: " + String.join(", ", layerWords());
+  }
+
+  /** The two ends of its plane in words. */
+  String placeWords(Outline outline) {
+    return plane
+        .map(
+            p ->
+                "the cut-off plane "
+                    + Wording.place(outline.point(p.first()))
+                    + " to "
+                    + Wording.place(outline.point(p.last())))
+        .orElse("no plane of its own");
+  }
+
+  Map<DimensionSystem, Double> typedLengths() {
+    return typed.map(Flank::typedLengthM).orElse(Map.of());
+  }
+}

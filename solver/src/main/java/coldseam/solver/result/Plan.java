@@ -1,0 +1,348 @@
+package coldseam.solver.result;
+
+import coldseam.mesh.partition.Partition;
+import coldseam.solver.conduction.Quantity;
+import coldseam.solver.conduction.Solution;
+import coldseam.solver.detail.Assumption;
+import coldseam.solver.detail.Bracket;
+import coldseam.solver.detail.Conditions;
+import coldseam.solver.detail.Detail;
+import coldseam.solver.detail.DetailException;
+import coldseam.solver.detail.Exposure;
+import coldseam.solver.detail.Fault;
+import coldseam.solver.detail.FilmSet;
+import coldseam.solver.detail.Space;
+import coldseam.solver.detail.Subtraction;
+import coldseam.solver.detail.Wanted;
+import coldseam.solver.detail.Wording;
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.BitSet;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.Set;
+import java.util.function.Function;
+import java.util.function.Supplier;
+
+/**
+ * Everything that is settled about the results of one detail before it is solved: flanks with U and
+ * lengths, what each ψ subtracts, module widths, which film sets are needed, what is assumed and
+ * what looks doubtful. With the solutions it makes the {@link Result}.
+ */
+public final class Plan {
+  /** Relative difference of a typed U from the drawn layers above which a warning is given. */
+  private static final double TYPED_U_DIFFERS = 1e-3;
+
+  private final Detail detail;
+  private final Partition partition;
+  private final Conditions heatLoss;
+  private final Conditions surface;
+  private final List<PlacedFlank> flanks;
+  private final FlankLengths lengths;
+  private final LinearTransmittances psi;
+  private final EffectiveTransmittances transmittances;
+  private final CutOffChecks cutOffs;
+  private final boolean module;
+  private final List<Assumption> assumptions;
+  private final List<String> warnings;
+
+  private Plan(Detail detail, Partition partition, Conditions heatLoss, Conditions surface) {
+    this.detail = detail;
+    this.partition = partition;
+    this.heatLoss = heatLoss;
+    this.surface = surface;
+    Outline outline = new Outline(partition, heatLoss);
+    FlankFinder finder = new FlankFinder(detail, outline);
+    flanks = finder.flanks();
+    lengths = new FlankLengths(outline, flanks);
+    psi = new LinearTransmittances(detail, outline, flanks, lengths);
+    transmittances = new EffectiveTransmittances(detail, outline);
+    SectionChecks section = new SectionChecks(detail, outline);
+    cutOffs = new CutOffChecks(outline);
+    module = transmittances.any() && !psi.any();
+    List<Fault> faults = new ArrayList<>(finder.faults());
+    faults.addAll(psi.faults());
+    faults.addAll(transmittances.faults());
+    faults.addAll(section.faults());
+    if (!faults.isEmpty()) {
+      throw new DetailException(faults);
+    }
+    assumptions = collectAssumptions();
+    warnings = new ArrayList<>(section.warnings());
+    if (!module) {
+      warnings.addAll(cutOffs.distances());
+    }
+    flanks.forEach(this::warnOfFlank);
+  }
+
+  /**
+   * Settles what can be settled.
+   *
+   * @param detail the detail
+   * @param partition its partition
+   * @param heatLoss conditions with the films for heat loss
+   * @param surface conditions with the films for surface temperatures
+   * @return the plan
+   * @throws DetailException if a flank has no U, a length or width that is needed cannot be
+   *     derived, or a wanted result names what is not there; all such faults together
+   */
+  public static Plan of(
+      Detail detail, Partition partition, Conditions heatLoss, Conditions surface) {
+    return new Plan(detail, partition, heatLoss, surface);
+  }
+
+  /** Every flank that has a U, named or found, in the order named, then found. */
+  public List<Result.FlankResult> flanks() {
+    List<Result.FlankResult> results = new ArrayList<>();
+    Outline outline = new Outline(partition, heatLoss);
+    for (PlacedFlank flank : flanks) {
+      flank
+          .uWPerM2K()
+          .ifPresent(
+              u ->
+                  results.add(
+                      new Result.FlankResult(
+                          flank.name(),
+                          u,
+                          name(flank.warm()),
+                          name(flank.cold()),
+                          flank.warmEnd().map(end -> outline.point(end.vertex())),
+                          flank.coldEnd().map(end -> outline.point(end.vertex())),
+                          flank.layerWords(),
+                          lengths.known(flank))));
+    }
+    return results;
+  }
+
+  private String name(int space) {
+    return space < 0 ? "" : detail.spaces().get(space).name();
+  }
+
+  /** Everything chosen for the user. */
+  public List<Assumption> assumptions() {
+    return List.copyOf(assumptions);
+  }
+
+  /** Warnings that need no solution. */
+  public List<String> warnings() {
+    return List.copyOf(warnings);
+  }
+
+  /** Whether a ψ is wanted. */
+  public boolean psiWanted() {
+    return psi.any();
+  }
+
+  /** Whether a U is wanted. */
+  public boolean transmittanceWanted() {
+    return transmittances.any();
+  }
+
+  /** The other details whose L2D is taken off. */
+  public List<Subtraction.OfDetail> otherDetails() {
+    return psi.otherDetails();
+  }
+
+  /**
+   * Whether the films for surface temperatures are needed: an inside space touches the section, or
+   * a point or profile asks for them.
+   */
+  public boolean surfaceNeeded() {
+    BitSet faced = Couplings.faced(partition.edgeCount(), heatLoss);
+    boolean inside =
+        faced.stream().anyMatch(i -> detail.spaces().get(i).exposure() == Exposure.INSIDE);
+    return inside || detail.wanted().stream().anyMatch(Plan::asksForSurfaceFilms);
+  }
+
+  private static boolean asksForSurfaceFilms(Wanted wanted) {
+    return (wanted instanceof Wanted.Temperature point && point.filmSet() == FilmSet.SURFACE)
+        || (wanted instanceof Wanted.Profile line && line.filmSet() == FilmSet.SURFACE)
+        || (wanted instanceof Wanted.SurfaceProfile face && face.filmSet() == FilmSet.SURFACE);
+  }
+
+  /** Whether both film sets say the same on every edge, so that one solution serves for both. */
+  public boolean sameFilms() {
+    for (int edge = 0; edge < partition.edgeCount(); edge++) {
+      if (heatLoss.kind(edge) != surface.kind(edge)
+          || heatLoss.space(edge) != surface.space(edge)
+          || heatLoss.filmM2KPerW(edge) != surface.filmM2KPerW(edge)
+          || heatLoss.flowWPerM2(edge) != surface.flowWPerM2(edge)) {
+        return false;
+      }
+    }
+    return true;
+  }
+
+  /**
+   * Temperatures to start from: those stated, and the mean of the stated ones for floating spaces.
+   */
+  public double[] statedTemperatures() {
+    double mean =
+        detail.spaces().stream()
+            .filter(space -> space.floating().isEmpty())
+            .mapToDouble(Space::temperatureC)
+            .average()
+            .orElse(0);
+    return detail.spaces().stream()
+        .mapToDouble(space -> space.floating().isEmpty() ? space.temperatureC() : mean)
+        .toArray();
+  }
+
+  /**
+   * Temperature of every space, of floating ones as they follow from the heat-loss solution.
+   *
+   * @param heatLossSolution the solution with the films for heat loss
+   * @return °C, in the order of the spaces
+   */
+  public double[] temperatures(Solution heatLossSolution) {
+    return new Couplings(detail, heatLossSolution).temperatures();
+  }
+
+  /**
+   * L2D of two groups of spaces with floating ones eliminated.
+   *
+   * @param heatLossSolution the solution with the films for heat loss
+   * @param warm names on one side
+   * @param cold names on the other
+   * @return W/(m·K)
+   * @throws DetailException if a name is not one of the spaces
+   */
+  public Quantity coupling(Solution heatLossSolution, List<String> warm, List<String> cold) {
+    SpaceGroups groups = new SpaceGroups(detail, "section", detail.title());
+    int[] one = groups.indices(warm);
+    int[] other = groups.indices(cold);
+    groups.checkApart(one, other);
+    if (!groups.faults().isEmpty()) {
+      throw new DetailException(groups.faults());
+    }
+    int[] floating =
+        Arrays.stream(Couplings.floating(detail))
+            .filter(f -> !Couplings.contains(one, f) && !Couplings.contains(other, f))
+            .toArray();
+    return new Couplings(detail, heatLossSolution).between(one, other, floating);
+  }
+
+  /**
+   * Makes the result.
+   *
+   * @param heatLossSolution the solution with the films for heat loss
+   * @param surfaceSolution the one for surface temperatures; the same one if {@link #sameFilms()};
+   *     empty if not {@link #surfaceNeeded()}
+   * @param others L2D of each of {@link #otherDetails()}
+   * @param timesMs milliseconds by stage, in the order run; asked for last
+   * @return the result
+   */
+  public Result result(
+      Solution heatLossSolution,
+      Optional<Solution> surfaceSolution,
+      Function<Subtraction.OfDetail, Quantity> others,
+      Supplier<Map<String, Double>> timesMs) {
+    Couplings couplings = new Couplings(detail, heatLossSolution);
+    double[] temperatures = couplings.temperatures();
+    FieldSet lossFields = new FieldSet(FilmSet.HEAT_LOSS, heatLossSolution, temperatures);
+    Optional<FieldSet> surfaceFields =
+        surfaceSolution.map(solution -> new FieldSet(FilmSet.SURFACE, solution, temperatures));
+    FieldSet coldestFields = surfaceFields.orElse(lossFields);
+    Profiles.Sets sets = set -> set == FilmSet.HEAT_LOSS ? lossFields : surfaceFields.orElseThrow();
+    SurfaceTemperatures surfaces = new SurfaceTemperatures(detail, temperatures, coldestFields);
+    Balances balances = new Balances(detail, heatLossSolution, temperatures);
+    Profiles profiles = new Profiles(detail, sets);
+    List<String> allWarnings = new ArrayList<>(warnings);
+    if (!module) {
+      allWarnings.addAll(cutOffs.profiles(lossFields, temperatures));
+    }
+    return new Result(
+        detail,
+        couplings.pairs(),
+        psi.evaluate(couplings, others),
+        transmittances.evaluate(couplings),
+        surfaces.spaces(balances::ofSpace),
+        balances.stretches(),
+        profiles.points(),
+        profiles.profiles(),
+        Weights.of(detail, surfaces, coldestFields, sets),
+        flanks(),
+        assumptions(),
+        List.copyOf(allWarnings),
+        balances.balance(),
+        partition.largestDisplacementM(),
+        heatLossSolution,
+        surfaceSolution,
+        heatLossSolution.mesh().triangleCount(),
+        heatLossSolution.unknowns(),
+        timesMs.get());
+  }
+
+  private List<Assumption> collectAssumptions() {
+    Set<Assumption> all = new LinkedHashSet<>(detail.assumptions());
+    all.addAll(heatLoss.assumptions());
+    if (surfaceNeeded()) {
+      all.addAll(surface.assumptions());
+    }
+    for (PlacedFlank flank : flanks) {
+      if (!flank.typedU() && flank.uWPerM2K().isPresent()) {
+        all.add(
+            new Assumption(
+                "U of flank '" + flank.name() + "'",
+                Wording.figure(flank.uWPerM2K().get().mid())
+                    + " W/(m²·K): "
+                    + String.join(", ", flank.layerWords()),
+                "ISO 6946, layers met at the cut-off plane with the films there"));
+      }
+    }
+    all.addAll(psi.assumptions());
+    all.addAll(transmittances.assumptions());
+    if (module && cutOffs.any()) {
+      all.add(
+          new Assumption(
+              "cut-off planes of the module",
+              "taken as planes of symmetry",
+              "by convention of this tool"));
+    }
+    if (Couplings.floating(detail).length > 0) {
+      all.add(
+          new Assumption(
+              "temperature of floating spaces",
+              "from the balance with the films for heat loss, used for surface temperatures too",
+              "by convention of this tool"));
+    }
+    return new ArrayList<>(all);
+  }
+
+  private void warnOfFlank(PlacedFlank flank) {
+    String name = "flank '" + flank.name() + "': ";
+    if (flank.typedU() && flank.drawnUWPerM2K().isPresent()) {
+      Bracket typed = flank.uWPerM2K().orElseThrow();
+      double drawn = flank.drawnUWPerM2K().getAsDouble();
+      if (drawn < typed.lower() - TYPED_U_DIFFERS * drawn
+          || drawn > typed.upper() + TYPED_U_DIFFERS * drawn) {
+        List<String> shifts = psi.shifts(flank);
+        warnings.add(
+            name
+                + "its typed U "
+                + Wording.figure(typed.mid())
+                + " differs from the "
+                + Wording.figure(drawn)
+                + " W/(m²·K) of the drawn layers"
+                + (shifts.isEmpty() ? "" : "; this shifts " + String.join(", ", shifts)));
+      }
+    }
+    if (flank.typedU() || flank.reading().layers().isEmpty()) {
+      return;
+    }
+    if (flank.reading().layers().get().oblique()) {
+      warnings.add(
+          name
+              + "its cut-off plane is not square to the layers; thicknesses for U are measured"
+              + " square to the layers");
+    }
+    if (flank.reading().layers().get().obliqueConductivity()) {
+      warnings.add(
+          name
+              + "a conductivity lies oblique to the layers; U takes the conductivity across them,"
+              + " and the cut-off plane disturbs the flow");
+    }
+  }
+}

@@ -1,0 +1,155 @@
+package coldseam.solver.result;
+
+import coldseam.mesh.partition.Defect;
+import coldseam.mesh.partition.Partition;
+import coldseam.mesh.plane.Point;
+import coldseam.mesh.plane.Resolution;
+import coldseam.solver.detail.Detail;
+import coldseam.solver.detail.Fault;
+import coldseam.solver.detail.Fill;
+import coldseam.solver.detail.Stretch;
+import coldseam.solver.detail.Wanted;
+import coldseam.solver.detail.Wording;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.stream.Collectors;
+
+/** What looks doubtful in the drawing, and places asked about that lie outside the section. */
+final class SectionChecks {
+  /** Part of a stretch that may lie off the outline without a word. */
+  private static final double OFF_OUTLINE = 1e-6;
+
+  private final Detail detail;
+  private final Outline outline;
+  private final Partition partition;
+
+  SectionChecks(Detail detail, Outline outline) {
+    this.detail = detail;
+    this.outline = outline;
+    partition = outline.partition();
+  }
+
+  List<String> warnings() {
+    List<String> warnings = new ArrayList<>();
+    for (Defect defect : partition.defects()) {
+      if (defect.kind() != Defect.Kind.LINE_OFF_EDGE) {
+        warnings.add(words(defect));
+      }
+    }
+    warnings.addAll(stretchesPartlyOff());
+    return warnings;
+  }
+
+  private String words(Defect defect) {
+    String fills = fills(defect.labels());
+    String at = " at " + Wording.place(defect.where());
+    String size = Wording.length(defect.sizeM());
+    return switch (defect.kind()) {
+      case CLOSED_GAP -> "gap of " + size + " between " + fills + at + ": closed";
+      case GAP -> "gap of " + size + " between " + fills + at + ": left open, no heat crosses it";
+      case SLIVER -> "sliver " + size + " thin of " + fills + at + ": is it meant?";
+      case UNCOVERED ->
+          "place enclosed by "
+              + fills
+              + at
+              + " that nothing covers, mean width "
+              + size
+              + ": no heat crosses it";
+      case SELF_CROSSING ->
+          "outline of " + fills + " crosses itself" + at + ": filled by the even-odd rule";
+      case ZERO_AREA -> "shape of " + fills + at + " has no area: left out";
+      case HIDDEN -> "shape of " + fills + at + " is covered by later ones: nothing of it is left";
+      case LINE_OFF_EDGE -> throw new IllegalStateException("stretches are checked on their own");
+    };
+  }
+
+  private String fills(List<Integer> labels) {
+    List<Fill> fills = detail.fills();
+    return labels.stream()
+        .filter(label -> label >= 0 && label < fills.size())
+        .map(label -> "'" + fills.get(label).name() + "'")
+        .collect(Collectors.joining(" and "));
+  }
+
+  private List<String> stretchesPartlyOff() {
+    double[] on = new double[detail.stretches().size()];
+    for (int edge = 0; edge < partition.edgeCount(); edge++) {
+      if (outline.contains(edge)) {
+        for (int stretch : outline.conditions().stretches(edge)) {
+          on[stretch] += partition.edgeLength(edge);
+        }
+      }
+    }
+    List<String> warnings = new ArrayList<>();
+    for (int i = 0; i < on.length; i++) {
+      Stretch stretch = detail.stretches().get(i);
+      double drawn = 0;
+      for (int k = 1; k < stretch.along().size(); k++) {
+        drawn += stretch.along().get(k - 1).distance(stretch.along().get(k));
+      }
+      double off = drawn - on[i];
+      int corners = stretch.along().size();
+      if (off > Math.max(OFF_OUTLINE * drawn, corners * Resolution.STANDARD.closeM())) {
+        warnings.add(
+            "stretch '"
+                + stretch.name()
+                + "': "
+                + Wording.length(off)
+                + " of its "
+                + Wording.length(drawn)
+                + " lie off the outline of the conducting section and count for nothing");
+      }
+    }
+    return warnings;
+  }
+
+  /** Faults of points and profiles asked for. */
+  List<Fault> faults() {
+    List<Fault> faults = new ArrayList<>();
+    SectionShape shape = new SectionShape(outline);
+    double reach = Resolution.STANDARD.closeM() + partition.largestDisplacementM();
+    for (Wanted wanted : detail.wanted()) {
+      if (wanted instanceof Wanted.Temperature point && !shape.contains(point.at())) {
+        double distance = shape.distanceToOutline(point.at());
+        if (distance > reach) {
+          faults.add(pointOutside(point.name(), point.at(), distance));
+        }
+      } else if (wanted instanceof Wanted.Profile line && line.points() < 2) {
+        faults.add(
+            new Fault(
+                "profile", line.name(), "needs two points or more", Optional.of(line.from())));
+      } else if (wanted instanceof Wanted.SurfaceProfile surface) {
+        checkSpace(surface, faults);
+      }
+    }
+    return faults;
+  }
+
+  private void checkSpace(Wanted.SurfaceProfile surface, List<Fault> faults) {
+    int space = detail.spaceIndex(surface.space());
+    if (space < 0) {
+      faults.add(
+          new Fault(
+              "profile",
+              surface.name(),
+              "names '" + surface.space() + "', which is not one of the spaces",
+              Optional.empty()));
+    } else if (!Couplings.faced(partition.edgeCount(), outline.conditions()).get(space)) {
+      faults.add(
+          new Fault(
+              "profile",
+              surface.name(),
+              "'" + surface.space() + "' touches no material",
+              Optional.empty()));
+    }
+  }
+
+  private static Fault pointOutside(String name, Point at, double distance) {
+    return new Fault(
+        "point",
+        name,
+        "lies outside the conducting section, " + Wording.length(distance) + " from its outline",
+        Optional.of(at));
+  }
+}
