@@ -99,8 +99,11 @@ public final class Solver {
     } else if (surfaceNeeded) {
       surface =
           Optional.of(
-              resolved.solve(
-                  resolved.surface(), accuracy, true, plan.temperatures(heatLoss), progress));
+              Conduction.solveNext(
+                  heatLoss,
+                  resolved.surface(),
+                  new Conduction.Goal(accuracy, false, false, true, plan.temperatures(heatLoss)),
+                  progress));
     }
     long last = lap(times, "surface temperatures", start);
 
@@ -183,8 +186,7 @@ public final class Solver {
 
     private static Partition partition(Detail detail) {
       try {
-        return Partition.of(
-            detail.labelledAreas(), detail.labelledLines(), Resolution.STANDARD);
+        return Partition.of(detail.labelledAreas(), detail.labelledLines(), Resolution.STANDARD);
       } catch (IllegalArgumentException e) {
         throw new DetailException(
             List.of(new Fault("section", "", e.getMessage(), Optional.empty())));

@@ -20,21 +20,8 @@ final class Balances {
     this.temperaturesC = temperaturesC;
   }
 
-  /**
-   * Flow of a space, W/m; infinite where its fixed surface temperature meets another one in a
-   * point, with the sign of the difference.
-   */
+  /** Flow of a space, W/m; infinite where two fixed temperatures meet in a point. */
   double ofSpace(int space) {
-    double sign = 0;
-    for (int other = 0; other < temperaturesC.length; other++) {
-      double difference = temperaturesC[space] - temperaturesC[other];
-      if (other != space && difference != 0 && !Double.isFinite(solution.matrix(space, other))) {
-        sign += Math.signum(difference);
-      }
-    }
-    if (sign != 0) {
-      return sign * Double.POSITIVE_INFINITY;
-    }
     return solution.spaceFlow(space, temperaturesC);
   }
 
@@ -43,7 +30,10 @@ final class Balances {
     double sum = solution.prescribedFlow();
     double size = Math.abs(sum);
     for (int i = 0; i < detail.spaces().size(); i++) {
-      double flow = solution.spaceFlow(i, temperaturesC);
+      double flow = ofSpace(i);
+      if (!Double.isFinite(flow)) {
+        return new Result.Balance(Double.NaN, Double.NaN);
+      }
       sum += flow;
       size += Math.abs(flow);
     }

@@ -248,7 +248,7 @@ public record Result(
       double valueM, Optional<Point> from, Optional<Point> to, String derivation) {}
 
   /**
-   * The balance of heat.
+   * The balance of heat; both figures NaN where a flow is infinite.
    *
    * @param sumWPerM sum of all flows into the detail, W/m
    * @param relative the same over half the sum of their absolute values
