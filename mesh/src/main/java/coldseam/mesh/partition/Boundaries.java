@@ -60,6 +60,10 @@ final class Boundaries {
     return all;
   }
 
+  double length(int edge) {
+    return Math.hypot(x[end[edge]] - x[start[edge]], y[end[edge]] - y[start[edge]]);
+  }
+
   int addVertex(double px, double py) {
     if (vertexCount == x.length) {
       x = Arrays.copyOf(x, vertexCount + vertexCount / 2 + 16);

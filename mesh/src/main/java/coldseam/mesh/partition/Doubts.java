@@ -2,14 +2,10 @@ package coldseam.mesh.partition;
 
 import coldseam.mesh.plane.Point;
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.List;
 
 /** Lists what looks doubtful in a drawing, in the order of {@link Defect.Kind}. */
 final class Doubts {
-  /** A leftover strip is called a sliver up to this many closing lengths. */
-  private static final double SLIVER_CLOSING_LENGTHS = 1000;
-
   /** A face is a leftover when at least this part of its outline belongs to other areas. */
   private static final double LEFTOVER = 0.25;
 
@@ -48,8 +44,8 @@ final class Doubts {
     byKind.get(kind.ordinal()).add(new Defect(kind, where, sizeM, concerned));
   }
 
-  void addClosed(List<GapClosing.Closed> closed) {
-    for (GapClosing.Closed gap : closed) {
+  void addClosed(List<ClosedGaps.Gap> closed) {
+    for (ClosedGaps.Gap gap : closed) {
       add(Defect.Kind.CLOSED_GAP, gap.x(), gap.y(), gap.widthM(), gap.labels());
     }
   }
@@ -91,109 +87,107 @@ final class Doubts {
     }
   }
 
-  /** Slivers among the faces, enclosed ground that nothing covers, and gaps. */
+  /**
+   * Slivers among the faces, enclosed ground that nothing covers, and thin strips of either that
+   * open into more of the same.
+   */
   void addFaces(
       Boundaries edges, HalfEdges halves, FaceRings rings, int[] topOfLoop, double closeM) {
-    double[] leftover = new double[rings.faces().size()];
-    double[] outline = new double[leftover.length];
-    double[] thinnest = new double[leftover.length];
-    Arrays.fill(thinnest, Double.POSITIVE_INFINITY);
-    LabelSet[] beside = new LabelSet[leftover.length];
-    for (int h = 0; h < halves.loop.length; h++) {
+    int n = halves.loop.length;
+    GapSearch.Sides sides =
+        new GapSearch.Sides(new boolean[n], new int[n], new boolean[n], new double[n]);
+    for (int h = 0; h < n; h++) {
+      boolean forward = (h & 1) == 0;
+      int area = topOfLoop[forward ? edges.leftLoop[h >> 1] : edges.rightLoop[h >> 1]];
+      sides.label()[h] = area == NONE ? NONE : labels[area];
+      sides.isOwn()[h] = forward ? edges.leftOwn[h >> 1] : edges.rightOwn[h >> 1];
+      sides.thickness()[h] = area == NONE ? 0 : thickness[area];
+    }
+    double leftoverM = GapSearch.LEFTOVER_CLOSING_LENGTHS * closeM;
+    boolean[] sliver = addSlivers(edges, halves, rings, sides, leftoverM);
+    boolean[] thinHole = addHoles(edges, halves, rings, sides);
+    for (int h = 0; h < n; h++) {
       int face = rings.faceOf(h);
-      if (face == NONE) {
-        continue;
-      }
-      double length = length(edges, h);
-      outline[face] += length;
-      leftover[face] += isOwn(edges, h) ? 0 : length;
-      thinnest[face] = Math.min(thinnest[face], thickness[topOfLoop[side(edges, h)]]);
-      if (beside[face] == null) {
-        beside[face] = new LabelSet();
-      }
-      beside[face].add(label(edges, h, topOfLoop));
-      beside[face].add(label(edges, h ^ 1, topOfLoop));
+      int hole = rings.holeOf(h);
+      sides.searched()[h] = !(face >= 0 && sliver[face]) && !(hole >= 0 && thinHole[hole]);
     }
-    for (int f = 0; f < leftover.length; f++) {
-      FaceRings.Face face = rings.faces().get(f);
-      double width = 2 * rings.area(face) / outline[f];
-      boolean thin = width <= GapSearch.THIN * outline[f] / 2;
-      if (thin
-          && width <= SLIVER_CLOSING_LENGTHS * closeM
-          && width <= GapSearch.MUCH_THINNER * thinnest[f]
-          && leftover[f] >= LEFTOVER * outline[f]) {
-        double[] at = Shape.of(face.rings(), edges.x, edges.y).innerPoint();
-        add(Defect.Kind.SLIVER, at[0], at[1], width, beside[f].ascending());
+    for (GapSearch.Gap gap : new GapSearch(edges, halves, sides, closeM).find()) {
+      LabelSet concerned = new LabelSet();
+      concerned.add(gap.label());
+      for (int h : gap.halves()) {
+        concerned.add(sides.label()[h ^ 1]);
       }
+      Defect.Kind kind = gap.label() == NONE ? Defect.Kind.GAP : Defect.Kind.SLIVER;
+      add(kind, gap.x(), gap.y(), gap.widthM(), concerned.ascending());
     }
-    addHoles(edges, halves, rings, topOfLoop);
   }
 
-  private void addHoles(Boundaries edges, HalfEdges halves, FaceRings rings, int[] topOfLoop) {
+  private boolean[] addSlivers(
+      Boundaries edges,
+      HalfEdges halves,
+      FaceRings rings,
+      GapSearch.Sides sides,
+      double leftoverM) {
+    boolean[] sliver = new boolean[rings.faces().size()];
+    for (int f = 0; f < sliver.length; f++) {
+      FaceRings.Face face = rings.faces().get(f);
+      double outline = 0;
+      double leftover = 0;
+      double thinnest = Double.POSITIVE_INFINITY;
+      for (int loop : face.loops()) {
+        int h = halves.loopStart[loop];
+        do {
+          double length = edges.length(h >> 1);
+          outline += length;
+          leftover += sides.isOwn()[h] ? 0 : length;
+          thinnest = Math.min(thinnest, sides.thickness()[h]);
+          h = halves.next[h];
+        } while (h != halves.loopStart[loop]);
+      }
+      double width = 2 * rings.area(face) / outline;
+      sliver[f] =
+          width <= GapSearch.THIN * outline / 2
+              && width <= leftoverM
+              && width <= GapSearch.MUCH_THINNER * thinnest
+              && leftover >= LEFTOVER * outline;
+      if (sliver[f]) {
+        addFace(Defect.Kind.SLIVER, face, width, edges, halves, sides);
+      }
+    }
+    return sliver;
+  }
+
+  private boolean[] addHoles(
+      Boundaries edges, HalfEdges halves, FaceRings rings, GapSearch.Sides sides) {
     boolean[] thin = new boolean[rings.holes().size()];
     for (int i = 0; i < thin.length; i++) {
       FaceRings.Face hole = rings.holes().get(i);
-      Shape shape = Shape.of(hole.rings(), edges.x, edges.y);
-      double half = shape.perimeterM() / 2;
+      double half = Shape.of(hole.rings(), edges.x, edges.y).perimeterM() / 2;
       double width = rings.area(hole) / half;
       thin[i] = width <= GapSearch.THIN * half;
-      LabelSet beside = new LabelSet();
-      for (int loop : hole.loops()) {
-        int first = halves.loopStart[loop];
-        int h = first;
-        do {
-          beside.add(label(edges, h ^ 1, topOfLoop));
-          h = halves.next[h];
-        } while (h != first);
-      }
-      double[] at = shape.innerPoint();
       Defect.Kind kind = thin[i] ? Defect.Kind.GAP : Defect.Kind.UNCOVERED;
-      add(kind, at[0], at[1], width, beside.ascending());
+      addFace(kind, hole, width, edges, halves, sides);
     }
-    addOpenGaps(edges, halves, rings, topOfLoop, thin);
+    return thin;
   }
 
-  private void addOpenGaps(
-      Boundaries edges, HalfEdges halves, FaceRings rings, int[] topOfLoop, boolean[] thinHole) {
-    boolean[] open = new boolean[halves.loop.length];
-    double[] beyond = new double[open.length];
-    boolean any = false;
-    for (int h = 0; h < open.length; h++) {
-      if (label(edges, h, topOfLoop) == NONE) {
-        int hole = rings.holeOf(h);
-        open[h] = hole < 0 || !thinHole[hole];
-        beyond[h] = thickness[topOfLoop[side(edges, h ^ 1)]];
-        any |= open[h];
-      }
+  private void addFace(
+      Defect.Kind kind,
+      FaceRings.Face face,
+      double width,
+      Boundaries edges,
+      HalfEdges halves,
+      GapSearch.Sides sides) {
+    LabelSet concerned = new LabelSet();
+    concerned.add(face.label());
+    for (int loop : face.loops()) {
+      int h = halves.loopStart[loop];
+      do {
+        concerned.add(sides.label()[h ^ 1]);
+        h = halves.next[h];
+      } while (h != halves.loopStart[loop]);
     }
-    if (!any) {
-      return;
-    }
-    for (GapSearch.Gap gap : new GapSearch(edges, halves, open, beyond).find()) {
-      LabelSet beside = new LabelSet();
-      for (int h : gap.halves()) {
-        beside.add(label(edges, h ^ 1, topOfLoop));
-      }
-      add(Defect.Kind.GAP, gap.x(), gap.y(), gap.widthM(), beside.ascending());
-    }
-  }
-
-  private static double length(Boundaries edges, int h) {
-    int a = edges.start[h >> 1];
-    int b = edges.end[h >> 1];
-    return Math.hypot(edges.x[b] - edges.x[a], edges.y[b] - edges.y[a]);
-  }
-
-  private static boolean isOwn(Boundaries edges, int h) {
-    return (h & 1) == 0 ? edges.leftOwn[h >> 1] : edges.rightOwn[h >> 1];
-  }
-
-  private static int side(Boundaries edges, int h) {
-    return (h & 1) == 0 ? edges.leftLoop[h >> 1] : edges.rightLoop[h >> 1];
-  }
-
-  private int label(Boundaries edges, int h, int[] topOfLoop) {
-    int area = topOfLoop[side(edges, h)];
-    return area == NONE ? NONE : labels[area];
+    double[] at = Shape.of(face.rings(), edges.x, edges.y).innerPoint();
+    add(kind, at[0], at[1], width, concerned.ascending());
   }
 }

@@ -27,6 +27,7 @@ final class FaceRings {
   private final int[] positionOnPath;
   private final List<Face> all = new ArrayList<>();
   private final int[] faceOfLoop;
+  private final int[] holeOfLoop;
   private final List<Face> faces = new ArrayList<>();
   private final List<Face> holes = new ArrayList<>();
 
@@ -45,6 +46,8 @@ final class FaceRings {
     this.faceOfLoop = new int[halves.loopCount];
     Arrays.fill(positionOnPath, -1);
     Arrays.fill(faceOfLoop, NONE);
+    this.holeOfLoop = new int[halves.loopCount];
+    Arrays.fill(holeOfLoop, NONE);
     for (int h = 0; h < halves.loop.length; h++) {
       int loop = (h & 1) == 0 ? edges.leftLoop[h >> 1] : edges.rightLoop[h >> 1];
       labels[halves.loop[h]] = loopLabels[loop];
@@ -73,12 +76,7 @@ final class FaceRings {
 
   /** The enclosed uncovered ground to the left of a half-edge as an index, or NONE. */
   int holeOf(int half) {
-    for (int i = 0; i < holes.size(); i++) {
-      if (holes.get(i).loops.contains(halves.loop[half])) {
-        return i;
-      }
-    }
-    return NONE;
+    return holeOfLoop[halves.loop[half]];
   }
 
   /** Area of a face, m². */
@@ -224,14 +222,12 @@ final class FaceRings {
 
   private void number() {
     for (Face face : all) {
-      if (face.label == NONE) {
-        holes.add(face);
-      } else {
-        for (int loop : face.loops) {
-          faceOfLoop[loop] = faces.size();
-        }
-        faces.add(face);
+      List<Face> kind = face.label == NONE ? holes : faces;
+      int[] ofLoop = face.label == NONE ? holeOfLoop : faceOfLoop;
+      for (int loop : face.loops) {
+        ofLoop[loop] = kind.size();
       }
+      kind.add(face);
     }
   }
 }

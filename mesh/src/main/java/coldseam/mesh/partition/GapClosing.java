@@ -1,14 +1,13 @@
 package coldseam.mesh.partition;
 
-import java.util.ArrayList;
 import java.util.Arrays;
-import java.util.List;
 
 /**
  * Finds the gaps no wider than the closing length and moves their vertices onto the other side. A
  * gap is uncovered ground between two edges, or the same strip of an area laid earlier that shows
  * between later ones; a strip of which both sides were drawn as its own outline is a sheet and is
- * left alone, however thin. Vertices within the joining length of an edge are always moved onto it.
+ * left alone, however thin. Vertices left within the joining length of an edge are always moved
+ * onto it: a crossing made by noding may lie on a third edge.
  */
 final class GapClosing {
   /** Cosine of the angle up to which an edge counts as lying across a gap: 45°. */
@@ -40,16 +39,6 @@ final class GapClosing {
 
   /** The two edges that face each other across a gap, and the width there. */
   private record Facing(int edge, int otherEdge, double widthM, int label, int otherLabel) {}
-
-  /**
-   * One gap that was closed.
-   *
-   * @param x local x of its middle, m
-   * @param y local y of its middle, m
-   * @param widthM its largest width
-   * @param labels what lay on its sides
-   */
-  record Closed(double x, double y, double widthM, List<Integer> labels) {}
 
   GapClosing(
       Linework linework,
@@ -89,39 +78,42 @@ final class GapClosing {
    * @param closed receives the gaps closed
    * @return whether anything was moved
    */
-  boolean close(double[] x, double[] y, List<Closed> closed) {
+  boolean close(double[] x, double[] y, ClosedGaps closed) {
     find();
     int n = linework.vertexCount;
     boolean[] pinned = new boolean[n];
     boolean[] moved = new boolean[n];
-    List<Facing> facings = new ArrayList<>();
-    List<Integer> movedVertices = new ArrayList<>();
+    boolean any = false;
     for (int v = 0; v < n; v++) {
       if (pinned[v]) {
         continue;
       }
       int w = joinTo[v];
       int e = moveOnto[v];
+      Facing facing;
       if (w >= 0 && !moved[w]) {
         x[v] = linework.x[w];
         y[v] = linework.y[w];
         pinned[w] = true;
-        facings.add(joinFacing[v]);
+        facing = joinFacing[v];
       } else if (w < 0 && !awaited[v] && e >= 0 && isStill(e, moved)) {
         moveToFoot(v, e, x, y);
         pinned[linework.start[e]] = true;
         pinned[linework.end[e]] = true;
-        facings.add(moveFacing[v]);
+        facing = moveFacing[v];
       } else {
         continue;
       }
       moved[v] = true;
-      movedVertices.add(v);
+      any = true;
       double distance = Math.hypot(x[v] - linework.x[v], y[v] - linework.y[v]);
       largestMoveM = Math.max(largestMoveM, distance);
+      if (facing != null) {
+        int[] sides = {facing.label, facing.otherLabel};
+        closed.add(linework, v, facing.edge, facing.otherEdge, facing.widthM, sides);
+      }
     }
-    list(facings, movedVertices, closed);
-    return !movedVertices.isEmpty();
+    return any;
   }
 
   private boolean isStill(int e, boolean[] moved) {
@@ -140,63 +132,66 @@ final class GapClosing {
 
   private void find() {
     boolean[] used = new boolean[linework.vertexCount];
-    int count = 0;
+    int[] vertices = new int[linework.vertexCount];
+    for (int v = 0; v < vertices.length; v++) {
+      vertices[v] = v;
+    }
     for (int e = 0; e < linework.edgeCount; e++) {
       kept[e] = label(2 * e) != label(2 * e + 1);
-      if (kept[e]) {
-        count += (used[linework.start[e]] ? 0 : 1) + (used[linework.end[e]] ? 0 : 1);
-        used[linework.start[e]] = true;
-        used[linework.end[e]] = true;
-      }
-    }
-    int[] vertices = new int[count];
-    int n = 0;
-    for (int v = 0; v < linework.vertexCount; v++) {
-      if (used[v]) {
-        vertices[n++] = v;
-      }
+      used[linework.start[e]] |= kept[e];
+      used[linework.end[e]] |= kept[e];
     }
     VertexGrid grid = new VertexGrid(linework.x, linework.y, vertices);
     for (int e = 0; e < linework.edgeCount; e++) {
-      if (!kept[e]) {
-        continue;
-      }
       int a = linework.start[e];
       int b = linework.end[e];
-      int found = grid.near(linework.x[a], linework.y[a], linework.x[b], linework.y[b], closeM);
+      double margin = kept[e] ? closeM : snapM;
+      int found = grid.near(linework.x[a], linework.y[a], linework.x[b], linework.y[b], margin);
       for (int i = 0; i < found; i++) {
         int v = grid.hit(i);
         if (v != a && v != b) {
-          consider(v, e);
+          consider(v, e, kept[e] && used[v]);
         }
       }
     }
   }
 
-  private void consider(int v, int e) {
+  private void consider(int v, int e, boolean mayBeGap) {
     int a = linework.start[e];
     int b = linework.end[e];
-    double toA = distance(v, a);
-    double toB = distance(v, b);
-    if (Math.min(toA, toB) <= closeM) {
-      considerJoin(v, toA <= toB ? a : b);
-      return;
-    }
     double vx = linework.x[v];
     double vy = linework.y[v];
     double d =
         Segments.distance(vx, vy, linework.x[a], linework.y[a], linework.x[b], linework.y[b]);
-    if (moveOnto[v] >= 0 && moveDistance[v] <= d) {
-      return;
+    if (d <= snapM) {
+      if (moveOnto[v] < 0 || moveDistance[v] > d) {
+        moveOnto[v] = e;
+        moveDistance[v] = d;
+        moveFacing[v] = null;
+      }
+    } else if (mayBeGap) {
+      double toA = distance(v, a);
+      double toB = distance(v, b);
+      double nearest = Math.min(toA, toB);
+      boolean joins = nearest <= closeM && considerJoin(v, toA <= toB ? a : b);
+      // A foot that falls onto an end of the edge is no place to move to.
+      boolean apart = nearest * nearest - d * d > snapM * snapM;
+      if (!joins && apart && (moveOnto[v] < 0 || moveDistance[v] > d)) {
+        considerMove(v, e, d);
+      }
     }
-    double ex = linework.x[b] - linework.x[a];
-    double ey = linework.y[b] - linework.y[a];
-    boolean onLeft = ex * (vy - linework.y[a]) - ey * (vx - linework.x[a]) > 0;
+  }
+
+  private void considerMove(int v, int e, double d) {
+    int a = linework.start[e];
+    double ex = linework.x[linework.end[e]] - linework.x[a];
+    double ey = linework.y[linework.end[e]] - linework.y[a];
+    boolean onLeft =
+        ex * (linework.y[v] - linework.y[a]) - ey * (linework.x[v] - linework.x[a]) > 0;
     // Across the gap: from v at right angles onto e.
     double dx = onLeft ? ey : -ey;
     double dy = onLeft ? -ex : ex;
-    int side = onLeft ? 2 * e : 2 * e + 1;
-    Facing facing = facing(v, dx, dy, side, d);
+    Facing facing = facing(v, dx, dy, onLeft ? 2 * e : 2 * e + 1, d);
     if (facing != null) {
       moveOnto[v] = e;
       moveDistance[v] = d;
@@ -204,11 +199,12 @@ final class GapClosing {
     }
   }
 
-  private void considerJoin(int v, int w) {
+  /** Plans to join the later of two near vertices to the earlier if a gap lies between them. */
+  private boolean considerJoin(int v, int w) {
     int low = Math.min(v, w);
     int high = Math.max(v, w);
     if (joinTo[high] >= 0 && joinTo[high] <= low) {
-      return;
+      return true;
     }
     double d = distance(v, w);
     int link = keptHalfEdge(low, high);
@@ -226,11 +222,13 @@ final class GapClosing {
       int side = moreAcross(h, other ^ 1, dx, dy) ? h : other ^ 1;
       facing = facing(high, dx, dy, side, d);
     }
-    if (facing != null) {
-      joinTo[high] = low;
-      joinFacing[high] = facing;
-      awaited[low] = true;
+    if (facing == null) {
+      return false;
     }
+    joinTo[high] = low;
+    joinFacing[high] = facing;
+    awaited[low] = true;
+    return true;
   }
 
   /**
@@ -241,9 +239,6 @@ final class GapClosing {
     int h = wedge(v, dx, dy);
     int other = counterClockwiseKept(h);
     int near = moreAcross(h, other ^ 1, dx, dy) ? h : other ^ 1;
-    if (widthM <= snapM) {
-      return new Facing(near >> 1, side >> 1, widthM, label(near ^ 1), label(side ^ 1));
-    }
     if (label(near) != label(side) || isDrawn(near, side)) {
       return null;
     }
@@ -261,8 +256,7 @@ final class GapClosing {
             && cosine(far, dx, dy) < ACROSS
             && turnsLeft(near, dx, dy)
             && turnsLeft(far, dx, dy);
-    boolean join = widthM <= snapM;
-    if (!join && (!open || isDrawn(near ^ 1, far))) {
+    if (!open || isDrawn(near ^ 1, far)) {
       return null;
     }
     return new Facing(near >> 1, far >> 1, widthM, label(near), label(far ^ 1));
@@ -356,56 +350,5 @@ final class GapClosing {
   private int label(int h) {
     int area = faces.top(halves.loop[h]);
     return area == NONE ? NONE : labels[area];
-  }
-
-  /** Puts moves along the same facing edges together, so that each gap is listed once. */
-  private void list(List<Facing> facings, List<Integer> movedVertices, List<Closed> closed) {
-    int n = facings.size();
-    DisjointSets gaps = new DisjointSets(n);
-    int[] firstOnEdge = new int[linework.edgeCount];
-    Arrays.fill(firstOnEdge, -1);
-    for (int i = 0; i < n; i++) {
-      Facing f = facings.get(i);
-      if (f.widthM <= snapM) {
-        continue;
-      }
-      uniteOn(f.edge, i, firstOnEdge, gaps);
-      uniteOn(f.otherEdge, i, firstOnEdge, gaps);
-    }
-    for (int i = 0; i < n; i++) {
-      if (gaps.find(i) == i && facings.get(i).widthM > snapM) {
-        closed.add(gather(i, facings, movedVertices, gaps));
-      }
-    }
-  }
-
-  private static void uniteOn(int edge, int i, int[] firstOnEdge, DisjointSets gaps) {
-    if (firstOnEdge[edge] < 0) {
-      firstOnEdge[edge] = i;
-    } else {
-      gaps.unite(firstOnEdge[edge], i);
-    }
-  }
-
-  private Closed gather(
-      int gap, List<Facing> facings, List<Integer> movedVertices, DisjointSets gaps) {
-    double sumX = 0;
-    double sumY = 0;
-    double width = 0;
-    int count = 0;
-    LabelSet sides = new LabelSet();
-    for (int i = gap; i < facings.size(); i++) {
-      if (gaps.find(i) == gap) {
-        Facing f = facings.get(i);
-        int v = movedVertices.get(i);
-        sumX += linework.x[v];
-        sumY += linework.y[v];
-        width = Math.max(width, f.widthM);
-        count++;
-        sides.add(f.label);
-        sides.add(f.otherLabel);
-      }
-    }
-    return new Closed(sumX / count, sumY / count, width, sides.ascending());
   }
 }

@@ -5,16 +5,26 @@ import java.util.Arrays;
 import java.util.List;
 
 /**
- * Finds thin strips of uncovered ground that are open at an end: two edges that face each other
- * across it, nearly parallel, the strip much longer than wide and much thinner than what lies on
- * its sides.
+ * Finds thin strips that run along two edges facing each other, nearly parallel, much longer than
+ * wide and much thinner than the areas concerned: uncovered ground between two areas, or what shows
+ * of an earlier area between later ones. A strip that was drawn, with its own outline on both
+ * sides, is neither.
  */
 final class GapSearch {
+  /**
+   * Widens every limit a little: lengths in drawings are round numbers, and a strip right at a
+   * limit is to fall on the same side of it however the drawing is turned.
+   */
+  static final double TIE = 1 + 1e-5;
+
   /** Wider than this part of its length a strip is not thin. */
-  static final double THIN = 1.0 / 50;
+  static final double THIN = TIE / 50;
 
   /** Wider than this part of the thicker area on its sides a strip is not a slip of the hand. */
-  static final double MUCH_THINNER = 1.0 / 10;
+  static final double MUCH_THINNER = TIE / 10;
+
+  /** A strip of an earlier area is called a leftover up to this many closing lengths. */
+  static final double LEFTOVER_CLOSING_LENGTHS = 1000;
 
   /** Sine of the largest angle between two edges that are nearly parallel. */
   private static final double NEARLY_PARALLEL = 0.1;
@@ -23,43 +33,62 @@ final class GapSearch {
 
   private final Boundaries edges;
   private final HalfEdges halves;
-  private final boolean[] open;
-  private final double[] thicknessBeyond;
+  private final Sides sides;
+  private final double closeM;
+  private final double leftoverM;
   private final List<Strip> strips = new ArrayList<>();
 
-  /** Two half-edges with uncovered ground on their left that face each other. */
+  /**
+   * What is seen on the left of each half-edge.
+   *
+   * @param searched whether strips are looked for there
+   * @param label the label seen, or NONE
+   * @param isOwn whether the area seen has its own outline there
+   * @param thickness thickness of the area seen, m
+   */
+  record Sides(boolean[] searched, int[] label, boolean[] isOwn, double[] thickness) {}
+
+  /** Two half-edges that face each other across a strip on the left of both. */
   private record Strip(int half, int other, double widthM, double lengthM, double x, double y) {}
 
-  /** An open gap: its middle, mean width and the half-edges on its sides. */
-  record Gap(double x, double y, double widthM, List<Integer> halves) {}
+  /** A thin strip: its label or NONE, its middle, mean width and the half-edges on its sides. */
+  record Gap(int label, double x, double y, double widthM, List<Integer> halves) {}
 
   /**
    * Prepares the search.
    *
    * @param edges merged edges
    * @param halves their half-edges
-   * @param open for each half-edge whether uncovered ground to be searched is on its left
-   * @param thicknessBeyond for each half-edge the thickness of the area on its right, m
+   * @param sides what is seen beside them
+   * @param closeM the closing length, m
    */
-  GapSearch(Boundaries edges, HalfEdges halves, boolean[] open, double[] thicknessBeyond) {
+  GapSearch(Boundaries edges, HalfEdges halves, Sides sides, double closeM) {
     this.edges = edges;
     this.halves = halves;
-    this.open = open;
-    this.thicknessBeyond = thicknessBeyond;
+    this.sides = sides;
+    this.closeM = closeM;
+    this.leftoverM = LEFTOVER_CLOSING_LENGTHS * closeM;
   }
 
-  /** The gaps, in the order of their first edge. */
+  /** The strips, in the order of their first edge. */
   List<Gap> find() {
-    VertexGrid grid = new VertexGrid(edges.x, edges.y, openVertices());
+    int[] vertices = new int[edges.vertexCount];
+    for (int v = 0; v < vertices.length; v++) {
+      vertices[v] = v;
+    }
+    VertexGrid grid = new VertexGrid(edges.x, edges.y, vertices);
     PairIndex seen = new PairIndex(64);
-    for (int h = 0; h < open.length; h++) {
-      if (!open[h]) {
+    for (int h = 0; h < sides.searched.length; h++) {
+      if (!sides.searched[h]) {
         continue;
       }
       int a = halves.from(h);
       int b = halves.to(h);
       // A strip's width at a vertex is at most twice its mean width.
       double margin = 2 * THIN * length(h);
+      if (sides.label[h] != NONE) {
+        margin = Math.min(margin, 2 * leftoverM);
+      }
       int found = grid.near(edges.x[a], edges.y[a], edges.x[b], edges.y[b], margin);
       for (int i = 0; i < found; i++) {
         int v = grid.hit(i);
@@ -73,33 +102,28 @@ final class GapSearch {
     return gather();
   }
 
-  private int[] openVertices() {
-    boolean[] used = new boolean[edges.vertexCount];
-    int count = 0;
-    for (int h = 0; h < open.length; h++) {
-      if (open[h] && !used[halves.from(h)]) {
-        used[halves.from(h)] = true;
-        count++;
-      }
-    }
-    int[] vertices = new int[count];
-    int n = 0;
-    for (int v = 0; v < edges.vertexCount; v++) {
-      if (used[v]) {
-        vertices[n++] = v;
-      }
-    }
-    return vertices;
-  }
-
   private double length(int h) {
     int a = halves.from(h);
     int b = halves.to(h);
     return Math.hypot(edges.x[b] - edges.x[a], edges.y[b] - edges.y[a]);
   }
 
+  private boolean mayFace(int h, int g) {
+    boolean drawn = sides.label[h] != NONE && sides.isOwn[h] && sides.isOwn[g];
+    return sides.searched[g] && (h >> 1) != (g >> 1) && sides.label[h] == sides.label[g] && !drawn;
+  }
+
+  /** The widest strip between two half-edges that is much thinner than the areas concerned, m. */
+  private double widest(int h, int g) {
+    if (sides.label[h] == NONE) {
+      return MUCH_THINNER * Math.max(sides.thickness[h ^ 1], sides.thickness[g ^ 1]);
+    }
+    double thinner = Math.min(sides.thickness[h], sides.thickness[g]);
+    return Math.min(leftoverM, MUCH_THINNER * thinner);
+  }
+
   private void consider(int h, int g, PairIndex seen) {
-    if (!open[g] || (h >> 1) == (g >> 1)) {
+    if (!mayFace(h, g)) {
       return;
     }
     int known = seen.count();
@@ -128,8 +152,7 @@ final class GapSearch {
     double wFrom = wd + (from - td) * slope;
     double wTo = wd + (to - td) * slope;
     double width = (wFrom + wTo) / 2;
-    double thicker = Math.max(thicknessBeyond[h], thicknessBeyond[g]);
-    if (to <= from || wFrom < 0 || wTo < 0 || width <= 0 || width > MUCH_THINNER * thicker) {
+    if (to - from <= closeM || wFrom < 0 || wTo < 0 || width <= 0 || width > widest(h, g)) {
       return;
     }
     double middle = (from + to) / 2;
@@ -140,7 +163,7 @@ final class GapSearch {
 
   private List<Gap> gather() {
     DisjointSets sets = new DisjointSets(strips.size());
-    int[] firstOnHalf = new int[open.length];
+    int[] firstOnHalf = new int[sides.searched.length];
     Arrays.fill(firstOnHalf, NONE);
     for (int i = 0; i < strips.size(); i++) {
       unite(strips.get(i).half, i, firstOnHalf, sets);
@@ -167,20 +190,20 @@ final class GapSearch {
     double length = 0;
     double area = 0;
     Strip longest = strips.get(set);
-    List<Integer> sides = new ArrayList<>();
+    List<Integer> along = new ArrayList<>();
     for (int i = set; i < strips.size(); i++) {
       if (sets.find(i) == set) {
         Strip strip = strips.get(i);
         length += strip.lengthM;
         area += strip.lengthM * strip.widthM;
         longest = strip.lengthM > longest.lengthM ? strip : longest;
-        sides.add(strip.half);
-        sides.add(strip.other);
+        along.add(strip.half);
+        along.add(strip.other);
       }
     }
     double width = area / length;
     if (width <= THIN * length && isClear(longest)) {
-      gaps.add(new Gap(longest.x, longest.y, width, sides));
+      gaps.add(new Gap(sides.label[longest.half], longest.x, longest.y, width, along));
     }
   }
 

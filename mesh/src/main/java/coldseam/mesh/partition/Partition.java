@@ -102,9 +102,7 @@ public final class Partition {
 
   /** Length of an edge, m. */
   public double edgeLength(int edge) {
-    int a = edges.start[edge];
-    int b = edges.end[edge];
-    return Math.hypot(edges.x[b] - edges.x[a], edges.y[b] - edges.y[a]);
+    return edges.length(edge);
   }
 
   /** The face to the left when walking from {@link #edgeStart} to {@link #edgeEnd}, or NONE. */

@@ -2,7 +2,6 @@ package coldseam.mesh.partition;
 
 import coldseam.mesh.plane.Point;
 import coldseam.mesh.plane.Resolution;
-import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 
@@ -17,11 +16,12 @@ final class PartitionBuilder {
   private static final int NONE = Partition.NONE;
 
   private final List<LabelledArea> laid;
-  private final Resolution resolution;
+  private final double snapM;
+  private final double closeM;
   private final int[] labels;
   private final Outlines outlines;
   private final Noding noding;
-  private final List<GapClosing.Closed> closed = new ArrayList<>();
+  private final ClosedGaps closed;
   private SelfCrossings crossings;
   private Linework linework;
   private HalfEdges halves;
@@ -33,13 +33,15 @@ final class PartitionBuilder {
       throw new IllegalArgumentException("a partition needs an area");
     }
     this.laid = laid;
-    this.resolution = resolution;
+    snapM = resolution.snapM();
+    closeM = GapSearch.TIE * resolution.closeM();
     labels = new int[laid.size()];
     for (int a = 0; a < labels.length; a++) {
       labels[a] = laid.get(a).label();
     }
-    outlines = new Outlines(laid, resolution.snapM());
-    noding = new Noding(resolution.snapM());
+    outlines = new Outlines(laid, snapM);
+    noding = new Noding(snapM);
+    closed = new ClosedGaps(closeM);
   }
 
   Point origin() {
@@ -64,29 +66,29 @@ final class PartitionBuilder {
     }
     Doubts doubts = new Doubts(outlines, labels, checkedAreas());
     doubts.addCrossings(crossings);
-    doubts.addClosed(closed);
+    doubts.addClosed(closed.gaps());
     doubts.addLost(halves, faces);
 
     Boundaries all = Boundaries.of(linework, halves, faces);
-    LineLaying laying = new LineLaying(all, loopLabels, resolution.closeM() + displacementM);
+    LineLaying laying = new LineLaying(all, loopLabels, closeM + displacementM);
     for (LabelledLine line : lines) {
       layLine(laying, line);
     }
     doubts.addOff(laying.off());
 
-    Merging merging = new Merging(laying.laid(), loopLabels, resolution.snapM());
+    Merging merging = new Merging(laying.laid(), loopLabels, snapM);
     Boundaries edges = merging.merged();
     displacementM += merging.largestShiftM();
     HalfEdges merged = new HalfEdges(edges.x, edges.y, edges.start, edges.end);
     FaceRings rings = new FaceRings(edges, merged, loopLabels);
     PartitionCheck.faces(edges, merged, rings, loopLabels);
-    doubts.addFaces(edges, merged, rings, topOfLoop, resolution.closeM());
+    doubts.addFaces(edges, merged, rings, topOfLoop, closeM);
     return new Partition(outlines.origin(), edges, rings, doubts.all(), displacementM);
   }
 
   private void nodeAndLabel() {
     linework = outlines.node(noding);
-    crossings = new SelfCrossings(outlines, noding, linework);
+    crossings = new SelfCrossings(outlines, noding, linework, snapM);
     displacementM = outlines.largestJoinM() + noding.largestBendM();
     for (int turn = 0; ; turn++) {
       halves = new HalfEdges(linework.x, linework.y, linework.start, linework.end);
@@ -95,9 +97,7 @@ final class PartitionBuilder {
       double[] x = linework.x.clone();
       double[] y = linework.y.clone();
       if (fault == null) {
-        GapClosing closing =
-            new GapClosing(
-                linework, halves, faces, labels, resolution.snapM(), resolution.closeM());
+        GapClosing closing = new GapClosing(linework, halves, faces, labels, snapM, closeM);
         if (turn == MOST_TURNS || !closing.close(x, y, closed)) {
           return;
         }
@@ -110,7 +110,7 @@ final class PartitionBuilder {
   }
 
   private void nodeAgain(double[] x, double[] y) {
-    PointIndex points = new PointIndex(resolution.snapM());
+    PointIndex points = new PointIndex(snapM);
     int[] number = new int[x.length];
     double joined = 0;
     for (int v = 0; v < x.length; v++) {
@@ -151,14 +151,13 @@ final class PartitionBuilder {
     }
     double[] drawn = new double[labels.length];
     double[] allowance = new double[labels.length];
+    int ring = 0;
     for (int a = 0; a < labels.length; a++) {
       Shape shape = outlines.shape(a);
-      boolean plain = laid.get(a).rings().size() == 1;
+      boolean plain = laid.get(a).rings().size() == 1 && crossings.isPlain(ring);
       drawn[a] = plain ? Math.abs(shape.ringArea(0)) : Double.NaN;
       allowance[a] = PartitionCheck.allowance(shape.perimeterM(), displacementM);
-    }
-    for (SelfCrossings.Crossing crossing : crossings.found()) {
-      drawn[crossing.area()] = Double.NaN;
+      ring += laid.get(a).rings().size();
     }
     PartitionCheck.areas(drawn, covered, allowance);
     return covered;

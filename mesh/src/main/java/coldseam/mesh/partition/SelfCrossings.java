@@ -13,6 +13,8 @@ final class SelfCrossings {
   record Crossing(int area, double x, double y, double widthM) {}
 
   private final Linework linework;
+  private final double snapM;
+  private final boolean[] plain;
   private final List<Crossing> found = new ArrayList<>();
 
   /**
@@ -21,9 +23,12 @@ final class SelfCrossings {
    * @param outlines the outlines that were noded
    * @param noding the noding that split them
    * @param linework what it made
+   * @param snapM the joining length, m; a part cut off that is no wider is none
    */
-  SelfCrossings(Outlines outlines, Noding noding, Linework linework) {
+  SelfCrossings(Outlines outlines, Noding noding, Linework linework, double snapM) {
     this.linework = linework;
+    this.snapM = snapM;
+    this.plain = new boolean[outlines.ringCount()];
     int segment = 0;
     int[] lastVisit = new int[linework.vertexCount];
     Arrays.fill(lastVisit, -1);
@@ -38,7 +43,7 @@ final class SelfCrossings {
       for (int i = 0; i < count; i++) {
         path[i] = noding.pieceStart(first + i);
       }
-      look(outlines.areaOfRing(ring), path, lastVisit);
+      plain[ring] = look(outlines.areaOfRing(ring), path, lastVisit);
     }
   }
 
@@ -46,31 +51,68 @@ final class SelfCrossings {
     return found;
   }
 
-  private void look(int area, int[] path, int[] lastVisit) {
+  /** Whether a ring passes no vertex twice. */
+  boolean isPlain(int ring) {
+    return plain[ring];
+  }
+
+  private boolean look(int area, int[] path, int[] lastVisit) {
+    boolean once = true;
     for (int i = 0; i < path.length; i++) {
       int v = path[i];
-      if (lastVisit[v] >= 0 && crosses(path, lastVisit[v], i)) {
+      if (lastVisit[v] >= 0) {
+        once = false;
         double width = Math.min(width(path, lastVisit[v], i), width(path, i, lastVisit[v]));
-        found.add(new Crossing(area, linework.x[v], linework.y[v], width));
+        if (width > snapM && crosses(path, lastVisit[v], i)) {
+          found.add(new Crossing(area, linework.x[v], linework.y[v], width));
+        }
       }
       lastVisit[v] = i;
     }
     for (int v : path) {
       lastVisit[v] = -1;
     }
+    return once;
   }
 
+  /**
+   * Whether the passage at j comes to the passage at i from one of its sides and leaves it on the
+   * other, here or after running along it, in either direction.
+   */
   private boolean crosses(int[] path, int i, int j) {
-    int n = path.length;
-    int v = path[i];
-    int in = path[(i + n - 1) % n];
-    int out = path[(i + 1) % n];
-    int otherIn = path[(j + n - 1) % n];
-    int otherOut = path[(j + 1) % n];
-    if (otherIn == in || otherIn == out || otherOut == in || otherOut == out) {
+    int before = at(path, j - 1);
+    if (before == at(path, i - 1) || before == at(path, i + 1)) {
       return false;
     }
-    return isBetween(v, out, in, otherIn) != isBetween(v, out, in, otherOut);
+    boolean from = isLeft(path, i, before);
+    int k = i;
+    int after = at(path, j + 1);
+    int step = 0;
+    if (after == at(path, i + 1)) {
+      step = 1;
+    } else if (after == at(path, i - 1)) {
+      step = -1;
+    }
+    for (int n = 1; step != 0 && n < path.length; n++) {
+      k += step;
+      after = at(path, j + n + 1);
+      if (after != at(path, k + step)) {
+        break;
+      }
+    }
+    if (after == at(path, k - 1) || after == at(path, k + 1)) {
+      return false;
+    }
+    return isLeft(path, k, after) != from;
+  }
+
+  private static int at(int[] path, int i) {
+    return path[Math.floorMod(i, path.length)];
+  }
+
+  /** Whether a vertex next to the path at i lies on its left. */
+  private boolean isLeft(int[] path, int i, int vertex) {
+    return isBetween(at(path, i), at(path, i + 1), at(path, i - 1), vertex);
   }
 
   /** Whether the direction v–p lies counter-clockwise between v–a and v–b. */
