@@ -61,7 +61,7 @@ final class Boundaries {
   }
 
   double length(int edge) {
-    return Math.hypot(x[end[edge]] - x[start[edge]], y[end[edge]] - y[start[edge]]);
+    return Segments.length(x[end[edge]] - x[start[edge]], y[end[edge]] - y[start[edge]]);
   }
 
   int addVertex(double px, double py) {

@@ -106,7 +106,7 @@ final class GapClosing {
       }
       moved[v] = true;
       any = true;
-      double distance = Math.hypot(x[v] - linework.x[v], y[v] - linework.y[v]);
+      double distance = Segments.length(x[v] - linework.x[v], y[v] - linework.y[v]);
       largestMoveM = Math.max(largestMoveM, distance);
       if (facing != null) {
         int[] sides = {facing.label, facing.otherLabel};
@@ -340,11 +340,11 @@ final class GapClosing {
     int e = h >> 1;
     double ex = linework.x[linework.end[e]] - linework.x[linework.start[e]];
     double ey = linework.y[linework.end[e]] - linework.y[linework.start[e]];
-    return Math.abs(ex * dx + ey * dy) / (Math.hypot(ex, ey) * Math.hypot(dx, dy));
+    return Math.abs(ex * dx + ey * dy) / (Segments.length(ex, ey) * Segments.length(dx, dy));
   }
 
   private double distance(int v, int w) {
-    return Math.hypot(linework.x[v] - linework.x[w], linework.y[v] - linework.y[w]);
+    return Segments.length(linework.x[v] - linework.x[w], linework.y[v] - linework.y[w]);
   }
 
   private int label(int h) {

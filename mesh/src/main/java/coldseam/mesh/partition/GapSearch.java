@@ -105,7 +105,7 @@ final class GapSearch {
   private double length(int h) {
     int a = halves.from(h);
     int b = halves.to(h);
-    return Math.hypot(edges.x[b] - edges.x[a], edges.y[b] - edges.y[a]);
+    return Segments.length(edges.x[b] - edges.x[a], edges.y[b] - edges.y[a]);
   }
 
   private boolean mayFace(int h, int g) {

@@ -46,7 +46,7 @@ final class LineLaying {
     double along = 0;
     int last = px.length - 2;
     for (int s = 0; s <= last; s++) {
-      double length = Math.hypot(px[s + 1] - px[s], py[s + 1] - py[s]);
+      double length = Segments.length(px[s + 1] - px[s], py[s + 1] - py[s]);
       if (length > 0) {
         laySegment(line, px, py, s, along, covered);
       }
@@ -57,7 +57,7 @@ final class LineLaying {
 
   private void laySegment(
       int line, double[] px, double[] py, int s, double along, List<Part> covered) {
-    double length = Math.hypot(px[s + 1] - px[s], py[s + 1] - py[s]);
+    double length = Segments.length(px[s + 1] - px[s], py[s + 1] - py[s]);
     double ux = (px[s + 1] - px[s]) / length;
     double uy = (py[s + 1] - py[s]) / length;
     Boundaries b = boundaries;
@@ -95,9 +95,18 @@ final class LineLaying {
       if (loopLabels[b.leftLoop[e]] != loopLabels[b.rightLoop[e]]) {
         double t0 = Math.max(0, Math.min(ta, tb));
         double t1 = Math.min(length, Math.max(ta, tb));
-        covered.add(new Part(along + t0, along + t1));
+        insert(new Part(along + t0, along + t1), covered);
       }
     }
+  }
+
+  /** Inserts a part into parts ordered by where they begin. */
+  private static void insert(Part part, List<Part> parts) {
+    int i = parts.size();
+    while (i > 0 && parts.get(i - 1).from > part.from) {
+      i--;
+    }
+    parts.add(i, part);
   }
 
   /** A fraction of an edge: where the line ends on it, or else one end of the edge. */
@@ -109,7 +118,6 @@ final class LineLaying {
   }
 
   private void gatherOff(int line, double[] px, double[] py, double length, List<Part> covered) {
-    covered.sort((a, b) -> Double.compare(a.from, b.from));
     double reached = 0;
     for (Part part : covered) {
       addOff(line, px, py, reached, part.from);
@@ -125,11 +133,11 @@ final class LineLaying {
     }
     double middle = (from + to) / 2;
     int s = 0;
-    double length = Math.hypot(px[1] - px[0], py[1] - py[0]);
+    double length = Segments.length(px[1] - px[0], py[1] - py[0]);
     while (middle > length && s < px.length - 2) {
       middle -= length;
       s++;
-      length = Math.hypot(px[s + 1] - px[s], py[s + 1] - py[s]);
+      length = Segments.length(px[s + 1] - px[s], py[s + 1] - py[s]);
     }
     double t = middle / length;
     double x = px[s] + t * (px[s + 1] - px[s]);
@@ -175,7 +183,7 @@ final class LineLaying {
     int a = boundaries.start[e];
     int b = boundaries.end[e];
     double length =
-        Math.hypot(boundaries.x[b] - boundaries.x[a], boundaries.y[b] - boundaries.y[a]);
+        Segments.length(boundaries.x[b] - boundaries.x[a], boundaries.y[b] - boundaries.y[a]);
     double[] stops = new double[2 * onEdge.size() + 2];
     int n = 0;
     stops[n++] = 0;

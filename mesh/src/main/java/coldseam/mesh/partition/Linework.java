@@ -57,6 +57,6 @@ final class Linework {
   }
 
   double length(int edge) {
-    return Math.hypot(x[end[edge]] - x[start[edge]], y[end[edge]] - y[start[edge]]);
+    return Segments.length(x[end[edge]] - x[start[edge]], y[end[edge]] - y[start[edge]]);
   }
 }

@@ -4,9 +4,9 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import org.locationtech.jts.geom.Coordinate;
+import org.locationtech.jts.noding.MCIndexNoder;
 import org.locationtech.jts.noding.NodedSegmentString;
 import org.locationtech.jts.noding.SegmentString;
-import org.locationtech.jts.noding.snap.SnappingNoder;
 
 /**
  * Splits segments wherever they cross or touch, and wherever a vertex comes within the joining
@@ -55,23 +55,21 @@ final class Noding {
    * @return the noded linework; its vertices are numbered anew
    */
   Linework node(double[] x, double[] y, int[] start, int[] end, int[][] areas) {
-    Coordinate[] vertices = new Coordinate[x.length];
-    for (int v = 0; v < x.length; v++) {
-      vertices[v] = new Coordinate(x[v], y[v]);
-    }
+    Crossings crossings = new Crossings(snapM, x, y);
     List<SegmentString> strings = new ArrayList<>(start.length);
     for (int s = 0; s < start.length; s++) {
-      Coordinate[] ends = {vertices[start[s]], vertices[end[s]]};
+      Coordinate[] ends = {
+        crossings.coordinate(x[start[s]], y[start[s]]), crossings.coordinate(x[end[s]], y[end[s]])
+      };
       strings.add(new NodedSegmentString(ends, s));
     }
-    SnappingNoder noder = new SnappingNoder(snapM);
+    MCIndexNoder noder = new MCIndexNoder(crossings, 2 * snapM);
     noder.computeNodes(strings);
-    return collect(noder, vertices, start, end, areas);
+    return collect(noder, crossings.points(), start, end, areas);
   }
 
   private Linework collect(
-      SnappingNoder noder, Coordinate[] vertices, int[] start, int[] end, int[][] areas) {
-    PointIndex points = new PointIndex(snapM);
+      MCIndexNoder noder, PointIndex points, int[] start, int[] end, int[][] areas) {
     PairIndex pairs = new PairIndex(2 * start.length);
     int capacity = 2 * start.length + 16;
     int[] edgeStart = new int[capacity];
@@ -95,7 +93,7 @@ final class Noding {
         if (a == b) {
           continue;
         }
-        bend(points, b, vertices[start[s]], vertices[end[s]]);
+        bend(points, b, start[s], end[s]);
         if (pieces == pieceStart.length) {
           pieceStart = Arrays.copyOf(pieceStart, 2 * pieces);
         }
@@ -123,8 +121,10 @@ final class Noding {
     return withoutCancelled(points, pairs.count(), edgeStart, edgeEnd, edgeAreas);
   }
 
-  private void bend(PointIndex points, int v, Coordinate a, Coordinate b) {
-    double bend = Segments.distance(points.x(v), points.y(v), a.x, a.y, b.x, b.y);
+  private void bend(PointIndex points, int v, int a, int b) {
+    double bend =
+        Segments.distance(
+            points.x(v), points.y(v), points.x(a), points.y(a), points.x(b), points.y(b));
     if (bend > largestBendM) {
       largestBendM = bend;
     }

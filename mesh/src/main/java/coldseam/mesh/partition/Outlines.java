@@ -113,7 +113,7 @@ final class Outlines {
         x[i] = ring.get(i).x() - origin.x();
         y[i] = ring.get(i).y() - origin.y();
         vertex[i] = points.add(x[i], y[i]);
-        double moved = Math.hypot(points.x(vertex[i]) - x[i], points.y(vertex[i]) - y[i]);
+        double moved = Segments.length(points.x(vertex[i]) - x[i], points.y(vertex[i]) - y[i]);
         largestJoinM = Math.max(largestJoinM, moved);
       }
       for (int i = 0; i < x.length; i++) {

@@ -146,7 +146,7 @@ final class SelfCrossings {
       double bx = linework.x[b] - ox;
       double by = linework.y[b] - oy;
       twice += ax * by - ay * bx;
-      perimeter += Math.hypot(bx - ax, by - ay);
+      perimeter += Segments.length(bx - ax, by - ay);
     }
     return perimeter == 0 ? 0 : Math.abs(twice) / perimeter;
   }

@@ -36,7 +36,7 @@ record Shape(List<double[]> x, List<double[]> y) {
       double[] ry = y.get(r);
       for (int i = 0; i < rx.length; i++) {
         int j = (i + 1) % rx.length;
-        sum += Math.hypot(rx[j] - rx[i], ry[j] - ry[i]);
+        sum += Segments.length(rx[j] - rx[i], ry[j] - ry[i]);
       }
     }
     return sum;
