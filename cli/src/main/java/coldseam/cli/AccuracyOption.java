@@ -1,0 +1,88 @@
+package coldseam.cli;
+
+import coldseam.solver.detail.Accuracy;
+import java.util.List;
+
+/** Reads the value of {@code --accuracy}: {@code L2D=0.02%,psi=0.0002,U=0.1%}, one or more. */
+final class AccuracyOption {
+  private static final List<String> NAMES = List.of("L2D", "psi", "U");
+
+  private AccuracyOption() {}
+
+  /**
+   * Changes an accuracy.
+   *
+   * @param base what holds where nothing is typed
+   * @param typed the value of the option
+   * @return the accuracy asked for
+   * @throws UsageException if it cannot be read
+   */
+  static Accuracy read(Accuracy base, String typed) throws UsageException {
+    Accuracy accuracy = base;
+    for (String part : typed.split(",", -1)) {
+      int equals = part.indexOf('=');
+      String name = equals < 0 ? part.strip() : part.substring(0, equals).strip();
+      if (!NAMES.contains(name)) {
+        throw wrong(
+            Nearest.of(name, NAMES)
+                .map(near -> "\"" + name + "\" has no accuracy; did you mean " + near + "=…?")
+                .orElse("\"" + part + "\" is no accuracy; e.g. --accuracy L2D=0.02%,psi=0.0002"));
+      }
+      if (equals < 0) {
+        throw wrong(name + " needs a half-width, e.g. --accuracy " + name + "=0.1%");
+      }
+      accuracy = with(accuracy, name, part.substring(equals + 1).strip());
+    }
+    return accuracy;
+  }
+
+  private static Accuracy with(Accuracy a, String name, String typed) throws UsageException {
+    boolean share = typed.endsWith("%");
+    double number = number(name, share ? typed.substring(0, typed.length() - 1).strip() : typed);
+    double value = share ? number / 100 : number;
+    switch (name) {
+      case "L2D" -> {
+        return new Accuracy(
+            share ? value : Double.MAX_VALUE,
+            share ? Double.MAX_VALUE : value,
+            a.psiWPerMK(),
+            a.transmittanceRelative(),
+            a.mostUnknowns());
+      }
+      case "psi" -> {
+        if (share) {
+          throw wrong("the accuracy of ψ is in W/(m·K), not a share of it, e.g. psi=0.0002");
+        }
+        return new Accuracy(
+            a.couplingRelative(),
+            a.couplingWPerMK(),
+            value,
+            a.transmittanceRelative(),
+            a.mostUnknowns());
+      }
+      default -> {
+        if (!share) {
+          throw wrong("the accuracy of U is a share of it, e.g. U=0.1%");
+        }
+        return new Accuracy(
+            a.couplingRelative(), a.couplingWPerMK(), a.psiWPerMK(), value, a.mostUnknowns());
+      }
+    }
+  }
+
+  private static double number(String name, String typed) throws UsageException {
+    try {
+      double value = Double.parseDouble(typed);
+      if (value > 0 && Double.isFinite(value)) {
+        return value;
+      }
+    } catch (NumberFormatException e) {
+      throw wrong("\"" + typed + "\" is no number; e.g. --accuracy " + name + "=0.1%");
+    }
+    throw wrong("the accuracy of " + name + " is more than 0, not " + typed);
+  }
+
+  private static UsageException wrong(String message) {
+    return new UsageException("solve", message);
+  }
+}

@@ -1,0 +1,163 @@
+package coldseam.cli;
+
+import coldseam.cli.text.Table;
+import java.io.FileDescriptor;
+import java.io.FileOutputStream;
+import java.io.PrintStream;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+
+/** The program. Only here does the process end. */
+public final class Main {
+  /** The version, as in the build. */
+  static final String VERSION = "0.1.0-SNAPSHOT";
+
+  private static final List<String> NAMES = List.of("solve", "check", "materials", "prove");
+
+  private Main() {}
+
+  /**
+   * Runs the program and ends the process.
+   *
+   * <p>Three system properties tell what only the launcher knows: {@code coldseam.home}, the folder
+   * with {@code cases}; {@code coldseam.out} and {@code coldseam.err}, {@code terminal} if somebody
+   * looks at that stream.
+   *
+   * @param args what was typed
+   */
+  public static void main(String[] args) {
+    PrintStream out = stream(FileDescriptor.out);
+    PrintStream err = stream(FileDescriptor.err);
+    String home = System.getProperty("coldseam.home", "");
+    int code =
+        run(
+            args,
+            new Surroundings(
+                out,
+                err,
+                Path.of("").toAbsolutePath(),
+                System.getenv(),
+                "terminal".equals(System.getProperty("coldseam.out")),
+                "terminal".equals(System.getProperty("coldseam.err")),
+                home.isEmpty() ? Optional.empty() : Optional.of(Path.of(home))));
+    out.flush();
+    err.flush();
+    System.exit(code);
+  }
+
+  private static PrintStream stream(FileDescriptor descriptor) {
+    return new PrintStream(new FileOutputStream(descriptor), false, StandardCharsets.UTF_8);
+  }
+
+  /**
+   * Runs the program without ending the process.
+   *
+   * @param args what was typed
+   * @param out for results
+   * @param err for messages
+   * @param cwd the folder that relative paths start from
+   * @param environment environment variables
+   * @param home the folder with {@code cases}
+   * @return the exit code
+   */
+  public static int run(
+      String[] args,
+      PrintStream out,
+      PrintStream err,
+      Path cwd,
+      Map<String, String> environment,
+      Path home) {
+    return run(args, new Surroundings(out, err, cwd, environment, false, false, Optional.of(home)));
+  }
+
+  static int run(String[] args, Surroundings here) {
+    List<String> words = List.of(args);
+    try {
+      return dispatch(words, here);
+    } catch (Throwable failure) {
+      return Failure.report(failure, words, here);
+    }
+  }
+
+  private static int dispatch(List<String> words, Surroundings here) throws Exception {
+    if (words.isEmpty()) {
+      here.err().print(overview());
+      return ExitCode.BAD_INPUT;
+    }
+    String name = words.get(0);
+    List<String> rest = words.subList(1, words.size());
+    switch (name) {
+      case "--version" -> {
+        here.out().println("coldseam " + VERSION);
+        return ExitCode.DONE;
+      }
+      case "--help", "-h" -> {
+        here.out().print(overview());
+        return ExitCode.DONE;
+      }
+      case "help" -> {
+        here.out().print(rest.isEmpty() ? overview() : command(rest.get(0)).syntax().help());
+        return ExitCode.DONE;
+      }
+      default -> {
+        Command command = command(name);
+        Syntax.Typed typed = command.syntax().read(rest);
+        if (typed.has("--help")) {
+          here.out().print(command.syntax().help());
+          return ExitCode.DONE;
+        }
+        return command.run(typed, here);
+      }
+    }
+  }
+
+  private static Command command(String name) throws UsageException {
+    return switch (name) {
+      case "solve" -> new SolveCommand();
+      case "check" -> new CheckCommand();
+      case "materials" -> new MaterialsCommand();
+      case "prove" -> new ProveCommand();
+      default -> throw unknown(name);
+    };
+  }
+
+  private static UsageException unknown(String name) {
+    String right;
+    if (name.endsWith(".yaml") || name.endsWith(".yml")) {
+      right = "did you mean: cli/coldseam solve " + name;
+    } else if (name.startsWith("-")) {
+      right = "options stand after the command, e.g. cli/coldseam solve CASE " + name;
+    } else {
+      right =
+          Nearest.of(name, NAMES)
+              .map(near -> "did you mean " + near + "?")
+              .orElse("there are " + String.join(", ", NAMES));
+    }
+    return new UsageException("", name + " is no command; " + right);
+  }
+
+  private static String overview() throws UsageException {
+    Table commands = new Table("ll", 2, 84);
+    List<String> examples = new ArrayList<>();
+    for (String name : NAMES) {
+      Syntax syntax = command(name).syntax();
+      commands.row((name + " " + syntax.operands()).strip(), syntax.summary());
+      examples.add("  " + syntax.examples().get(0).line() + "\n");
+    }
+    return "coldseam "
+        + VERSION
+        + ": heat flow, ψ, U and surface temperatures of building junctions in two dimensions\n\n"
+        + "  cli/coldseam COMMAND [OPTION…] …\n\n"
+        + "Commands\n"
+        + commands.text()
+        + "\nExamples\n"
+        + String.join("", examples)
+        + "\nEvery command has --help, --json for machines and --quiet; --version is the program's."
+        + "\nExit codes: 0 done; 1 done, but a stated requirement is not met; 2 bad input or usage;"
+        + "\n3 accuracy not reached; 70 a defect of the program.\n";
+  }
+}

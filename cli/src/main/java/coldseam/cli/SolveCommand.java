@@ -1,0 +1,270 @@
+package coldseam.cli;
+
+import coldseam.cases.Case;
+import coldseam.cases.CaseException;
+import coldseam.cli.plot.NoFontException;
+import coldseam.cli.plot.Plots;
+import coldseam.cli.sheet.Sheet;
+import coldseam.cli.sheet.Subject;
+import coldseam.solver.Solver;
+import coldseam.solver.conduction.Progress;
+import coldseam.solver.detail.Accuracy;
+import coldseam.solver.result.Result;
+import java.io.IOException;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+
+/** Solves cases: card, data, plots. */
+final class SolveCommand implements Command {
+  private static final String NAME = "solve";
+  private static final String VARIANT = "--variant";
+  private static final String VARIANTS = "--variants";
+  private static final String OUT = "--out";
+  private static final String JSON = "--json";
+  private static final String PNG = "--png";
+  private static final String NO_PLOTS = "--no-plots";
+  private static final String ACCURACY = "--accuracy";
+  private static final String QUIET = "--quiet";
+
+  private static final List<Plots.Kind> PLOTS =
+      List.of(Plots.Kind.SECTION, Plots.Kind.TEMPERATURE, Plots.Kind.HEAT_FLOW);
+
+  @Override
+  public Syntax syntax() {
+    return new Syntax(
+        NAME,
+        "solve cases: numbers, data and plots",
+        "CASE…",
+        1,
+        "Solves each case and prints its card. Data and plots go to a folder beside the case file,"
+            + " balcony.coldseam for balcony.yaml: result.json, result.csv, section.svg,"
+            + " temperature.svg and heat-flow.svg; a variant has a folder of its own in it. What an"
+            + " earlier solve wrote there is replaced, nothing else.",
+        List.of(
+            new Syntax.Option(VARIANT, "NAME", "solve this variant instead of the base case"),
+            new Syntax.Option(VARIANTS, "", "solve the base case and every variant"),
+            new Syntax.Option(
+                OUT,
+                "FOLDER",
+                "where data and plots go; with several cases, a folder for each in" + " it"),
+            new Syntax.Option(
+                JSON,
+                "",
+                "print the result as data, one object on one line for each solve;"
+                    + " without --out no file is written"),
+            new Syntax.Option(PNG, "", "write each plot as PNG too"),
+            new Syntax.Option(NO_PLOTS, "", "write data only"),
+            new Syntax.Option(
+                ACCURACY,
+                "LIST",
+                "half-widths instead of those of the case, e.g." + " L2D=0.02%,psi=0.0002,U=0.1%"),
+            new Syntax.Option(QUIET, "", "print no card; files are written all the same")),
+        List.of(
+            new Syntax.Example(
+                "cli/coldseam solve cases/demo/balcony.yaml",
+                "prints the card, writes data and plots to cases/demo/balcony.coldseam/"),
+            new Syntax.Example(
+                "cli/coldseam solve cases/demo/balcony.yaml --variants --json",
+                "prints two lines of JSON, writes nothing"),
+            new Syntax.Example(
+                "cli/coldseam solve cases/demo/balcony.yaml --variant \"thermal break\" --out /tmp/b"
+                    + " --png",
+                "solves one variant and writes PNG beside SVG to /tmp/b")));
+  }
+
+  /** One case or variant to solve. */
+  private record Job(
+      Case from, Subject subject, Accuracy accuracy, Optional<OutputFolder> folder) {}
+
+  @Override
+  public int run(Syntax.Typed typed, Surroundings here)
+      throws UsageException, CaseException, IOException {
+    contradictions(typed);
+    List<Job> jobs = jobs(typed, here);
+    int code = ExitCode.DONE;
+    boolean first = true;
+    for (Job job : jobs) {
+      Result result = solve(job, typed, here);
+      code = ExitCode.worse(code, conclude(job, result, typed, here, first));
+      first = false;
+    }
+    return code;
+  }
+
+  private static void contradictions(Syntax.Typed typed) throws UsageException {
+    if (typed.has(VARIANT) && typed.has(VARIANTS)) {
+      throw new UsageException(NAME, "--variant names one, --variants means all; give one of them");
+    }
+    if (typed.has(PNG) && typed.has(NO_PLOTS)) {
+      throw new UsageException(NAME, "--png and --no-plots exclude each other");
+    }
+    if (typed.has(PNG) && typed.has(JSON) && !typed.has(OUT)) {
+      throw new UsageException(NAME, "--json writes no files unless --out says where: add --out");
+    }
+  }
+
+  private static List<Job> jobs(Syntax.Typed typed, Surroundings here)
+      throws UsageException, CaseException, IOException {
+    List<Job> jobs = new ArrayList<>();
+    Map<Path, String> taken = new LinkedHashMap<>();
+    for (Case from : CaseList.read(typed.operands(), NAME, here)) {
+      List<Optional<String>> variants = new ArrayList<>();
+      if (typed.has(VARIANT)) {
+        variants.add(CaseList.variant(from, typed.value(VARIANT), NAME));
+      } else {
+        variants.add(Optional.empty());
+        if (typed.has(VARIANTS)) {
+          from.variants().forEach(name -> variants.add(Optional.of(name)));
+        }
+      }
+      Accuracy accuracy = from.accuracy();
+      if (typed.has(ACCURACY)) {
+        accuracy = AccuracyOption.read(accuracy, typed.value(ACCURACY));
+      }
+      String shown = here.shown(from.file());
+      for (Optional<String> variant : variants) {
+        Optional<OutputFolder> folder = folder(from, variant, typed, here, taken);
+        if (folder.isPresent()) {
+          folder.get().check(names(typed));
+        }
+        jobs.add(
+            new Job(
+                from, Subject.of(from, shown, variant, accuracy, Main.VERSION), accuracy, folder));
+      }
+    }
+    return jobs;
+  }
+
+  private static Optional<OutputFolder> folder(
+      Case from,
+      Optional<String> variant,
+      Syntax.Typed typed,
+      Surroundings here,
+      Map<Path, String> taken)
+      throws UsageException {
+    if (typed.has(JSON) && !typed.has(OUT)) {
+      return Optional.empty();
+    }
+    Path file = here.cwd().resolve(from.file());
+    String stem = file.getFileName().toString().replaceFirst("\\.ya?ml$", "");
+    Path folder;
+    if (!typed.has(OUT)) {
+      folder = file.resolveSibling(stem + ".coldseam");
+    } else {
+      folder = here.cwd().resolve(CaseList.path(typed.value(OUT), NAME));
+      if (typed.operands().size() > 1) {
+        folder = folder.resolve(stem);
+      }
+    }
+    if (variant.isPresent() && !(typed.has(OUT) && typed.has(VARIANT))) {
+      folder = folder.resolve(fileName(variant.get()));
+    }
+    folder = folder.normalize();
+    String other = taken.put(folder, file.toString());
+    if (other != null) {
+      throw new UsageException(
+          NAME, "two solves would be written to " + here.shown(folder) + "; solve them one by one");
+    }
+    return Optional.of(new OutputFolder(folder, here.shown(folder)));
+  }
+
+  /** A variant's name as the name of a folder. */
+  static String fileName(String variant) {
+    StringBuilder name = new StringBuilder();
+    variant
+        .codePoints()
+        .forEach(
+            c ->
+                name.appendCodePoint(
+                    Character.isLetterOrDigit(c) ? c : "._+".indexOf(c) >= 0 ? c : '-'));
+    return name.charAt(0) == '.' ? "-" + name : name.toString();
+  }
+
+  private static Result solve(Job job, Syntax.Typed typed, Surroundings here) throws CaseException {
+    Optional<String> variant = job.subject().variant();
+    if (!here.errIsTerminal() || typed.has(QUIET)) {
+      return CaseList.work(
+          job.from(), variant, detail -> Solver.solve(detail, job.accuracy(), Progress.SILENT));
+    }
+    String name = job.subject().file() + variant.map(v -> ", " + v).orElse("");
+    try (ProgressLine progress = new ProgressLine(here.err(), name)) {
+      return CaseList.work(
+          job.from(), variant, detail -> Solver.solve(detail, job.accuracy(), progress));
+    }
+  }
+
+  private static int conclude(
+      Job job, Result result, Syntax.Typed typed, Surroundings here, boolean first)
+      throws UsageException, IOException {
+    if (job.folder().isPresent()) {
+      job.folder().get().write(files(job, result, typed));
+    }
+    if (typed.has(JSON)) {
+      here.out().println(Sheet.json(job.subject(), result, false));
+    } else if (!typed.has(QUIET)) {
+      here.out().print((first ? "" : "\n\n") + Sheet.card(job.subject(), result, here.outInk()));
+    }
+    if (job.folder().isPresent() && !typed.has(QUIET)) {
+      String written = "Written to " + job.folder().get().shown() + "/: ";
+      (typed.has(JSON) ? here.err() : here.out())
+          .println(written + String.join(", ", names(typed)));
+    }
+    if (Sheet.accurateEnough(job.subject(), result)) {
+      return ExitCode.DONE;
+    }
+    here.err()
+        .println(
+            here.errInk().alert(job.subject().file() + ": the accuracy asked for was not reached"));
+    return ExitCode.ACCURACY;
+  }
+
+  /** Names of the files that one solve writes. */
+  private static List<String> names(Syntax.Typed typed) {
+    List<String> names = new ArrayList<>(List.of("result.json", "result.csv"));
+    if (!typed.has(NO_PLOTS)) {
+      for (Plots.Kind kind : PLOTS) {
+        names.add(kind.stem() + ".svg");
+      }
+    }
+    if (typed.has(PNG)) {
+      for (Plots.Kind kind : PLOTS) {
+        names.add(kind.stem() + ".png");
+      }
+    }
+    return names;
+  }
+
+  private static Map<String, byte[]> files(Job job, Result result, Syntax.Typed typed)
+      throws UsageException {
+    Map<String, byte[]> files = new LinkedHashMap<>();
+    files.put("result.json", bytes(Sheet.json(job.subject(), result, true) + "\n"));
+    files.put("result.csv", bytes(Sheet.csv(job.subject(), result)));
+    Plots plots =
+        Plots.of(
+            result,
+            new Plots.Caption(
+                job.subject().variant(), job.from().unit(), job.from().metresPerUnit()));
+    try {
+      for (Plots.Kind kind : PLOTS) {
+        if (!typed.has(NO_PLOTS)) {
+          files.put(kind.stem() + ".svg", bytes(plots.svg(kind)));
+        }
+        if (typed.has(PNG)) {
+          files.put(kind.stem() + ".png", plots.png(kind));
+        }
+      }
+    } catch (NoFontException e) {
+      throw new UsageException(NAME, e.getMessage());
+    }
+    return files;
+  }
+
+  private static byte[] bytes(String text) {
+    return text.getBytes(StandardCharsets.UTF_8);
+  }
+}

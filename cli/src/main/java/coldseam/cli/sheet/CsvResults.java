@@ -1,0 +1,231 @@
+package coldseam.cli.sheet;
+
+import coldseam.solver.conduction.Certificate;
+import coldseam.solver.conduction.Quantity;
+import coldseam.solver.result.Result;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+
+/**
+ * A result as comma-separated values: one row a quantity, each figure in the column of its unit.
+ * The columns are named as the members of the JSON object. An infinite value is written {@code
+ * inf}, one that does not exist is left empty.
+ */
+final class CsvResults {
+  private static final List<String> COLUMNS =
+      List.of(
+          "file",
+          "variant",
+          "quantity",
+          "name",
+          "between",
+          "dimensions",
+          "filmSet",
+          "certified",
+          "value_W_per_mK",
+          "lower_W_per_mK",
+          "upper_W_per_mK",
+          "estimatedHalfWidth_W_per_mK",
+          "value_W_per_m2K",
+          "lower_W_per_m2K",
+          "upper_W_per_m2K",
+          "estimatedHalfWidth_W_per_m2K",
+          "value_m2K_per_W",
+          "lower_m2K_per_W",
+          "upper_m2K_per_W",
+          "estimatedHalfWidth_m2K_per_W",
+          "U_W_per_m2K",
+          "length_m",
+          "heatFlow_W_per_m",
+          "temperature_C",
+          "estimatedError_K",
+          "x_mm",
+          "y_mm",
+          "distance_mm",
+          "Rs_m2K_per_W",
+          "fRsi",
+          "g");
+
+  private final Subject subject;
+  private final Result result;
+  private final StringBuilder text = new StringBuilder();
+
+  CsvResults(Subject subject, Result result) {
+    this.subject = subject;
+    this.result = result;
+  }
+
+  String text() {
+    text.append(String.join(",", COLUMNS)).append('\n');
+    couplings();
+    psi();
+    transmittances();
+    spaces();
+    for (Result.StretchResult stretch : result.stretches()) {
+      row("stretch", stretch.name())
+          .word("between", stretch.space())
+          .number("heatFlow_W_per_m", stretch.heatFlowWPerM())
+          .number("length_m", stretch.lengthM())
+          .end();
+    }
+    for (Result.PointResult point : result.points()) {
+      row("point", point.name())
+          .word("filmSet", Words.name(point.filmSet()))
+          .word("certified", "false")
+          .number("temperature_C", point.temperatureC())
+          .number("x_mm", JsonResults.mm(point.at().x()))
+          .number("y_mm", JsonResults.mm(point.at().y()))
+          .end();
+    }
+    for (Result.ProfileResult profile : result.profiles()) {
+      for (Result.Sample sample : profile.samples()) {
+        row("profile", profile.name())
+            .word("filmSet", Words.name(profile.filmSet()))
+            .word("certified", "false")
+            .number("temperature_C", sample.temperatureC())
+            .number("x_mm", JsonResults.mm(sample.at().x()))
+            .number("y_mm", JsonResults.mm(sample.at().y()))
+            .number("distance_mm", JsonResults.mm(sample.distanceM()))
+            .end();
+      }
+    }
+    for (Result.Weight weight : result.weights()) {
+      row("weight", weight.point())
+          .word("between", weight.space())
+          .word("filmSet", Words.name(weight.filmSet()))
+          .number("g", weight.g())
+          .end();
+    }
+    row("balance", "").number("heatFlow_W_per_m", result.balance().sumWPerM()).end();
+    return text.toString();
+  }
+
+  private void couplings() {
+    for (Result.Coupling coupling : result.couplings()) {
+      row("coupling", "")
+          .word("between", coupling.from() + " – " + coupling.to())
+          .quantity(coupling.valueWPerMK(), "W_per_mK")
+          .end();
+    }
+  }
+
+  private void psi() {
+    for (Result.LinearTransmittance psi : result.psi()) {
+      row("psi", psi.name())
+          .word("between", Words.between(psi.warm(), psi.cold()))
+          .word("dimensions", Words.name(psi.dimensions()))
+          .quantity(psi.valueWPerMK(), "W_per_mK")
+          .end();
+      for (Result.Subtracted term : psi.subtracted()) {
+        Row row =
+            row("subtracted", term.name())
+                .word("between", psi.name())
+                .number("value_W_per_mK", term.valueWPerMK().mid())
+                .number("lower_W_per_mK", term.valueWPerMK().lower())
+                .number("upper_W_per_mK", term.valueWPerMK().upper());
+        term.uWPerM2K().ifPresent(u -> row.number("U_W_per_m2K", u.mid()));
+        term.lengthM().ifPresent(l -> row.number("length_m", l));
+        row.end();
+      }
+    }
+  }
+
+  private void transmittances() {
+    for (Result.EffectiveTransmittance u : result.transmittances()) {
+      row("U", u.of())
+          .word("between", Words.between(u.warm(), u.cold()))
+          .quantity(u.valueWPerM2K(), "W_per_m2K")
+          .number("length_m", u.widthM())
+          .end();
+      row("R", u.of())
+          .word("between", Words.between(u.warm(), u.cold()))
+          .quantity(u.resistanceM2KPerW(), "m2K_per_W")
+          .end();
+    }
+  }
+
+  private void spaces() {
+    for (Result.SpaceResult space : result.spaces()) {
+      row("space", space.name())
+          .number("temperature_C", space.temperatureC())
+          .number("heatFlow_W_per_m", space.heatFlowWPerM())
+          .end();
+      surfacePoint("coldest", space.name(), space.coldest());
+      surfacePoint("warmest", space.name(), space.warmest());
+    }
+  }
+
+  private void surfacePoint(String which, String space, Optional<Result.SurfacePoint> found) {
+    if (found.isPresent()) {
+      Result.SurfacePoint point = found.get();
+      Row row =
+          row(which, space)
+              .word("filmSet", Words.name(point.filmSet()))
+              .word("certified", "false")
+              .number("temperature_C", point.temperatureC())
+              .number("estimatedError_K", point.estimatedErrorK())
+              .number("x_mm", JsonResults.mm(point.at().x()))
+              .number("y_mm", JsonResults.mm(point.at().y()))
+              .number("Rs_m2K_per_W", point.filmM2KPerW());
+      point.fRsi().ifPresent(f -> row.number("fRsi", f));
+      row.end();
+    }
+  }
+
+  private Row row(String quantity, String name) {
+    return new Row()
+        .word("file", subject.file())
+        .word("variant", subject.variant().orElse(""))
+        .word("quantity", quantity)
+        .word("name", name);
+  }
+
+  /** One row in the making. */
+  private final class Row {
+    private final Map<String, String> cells = new LinkedHashMap<>();
+
+    Row word(String column, String value) {
+      if (!COLUMNS.contains(column)) {
+        throw new IllegalArgumentException("there is no column " + column);
+      }
+      cells.put(column, quoted(value));
+      return this;
+    }
+
+    Row number(String column, double value) {
+      if (Double.isInfinite(value)) {
+        return word(column, value > 0 ? "inf" : "-inf");
+      }
+      return word(column, Double.isNaN(value) ? "" : Double.toString(value));
+    }
+
+    Row quantity(Quantity quantity, String unit) {
+      word("certified", Boolean.toString(quantity.certified()));
+      number("value_" + unit, quantity.value());
+      if (quantity.certificate() instanceof Certificate.Certified proved) {
+        return number("lower_" + unit, proved.lower()).number("upper_" + unit, proved.upper());
+      }
+      return number("estimatedHalfWidth_" + unit, quantity.halfWidth());
+    }
+
+    void end() {
+      String comma = "";
+      for (String column : COLUMNS) {
+        text.append(comma).append(cells.getOrDefault(column, ""));
+        comma = ",";
+      }
+      text.append('\n');
+    }
+  }
+
+  private static String quoted(String value) {
+    boolean plain =
+        value.indexOf(',') < 0
+            && value.indexOf('"') < 0
+            && value.indexOf('\n') < 0
+            && value.indexOf('\r') < 0;
+    return plain ? value : '"' + value.replace("\"", "\"\"") + '"';
+  }
+}

@@ -1,0 +1,182 @@
+package coldseam.cli.sheet;
+
+import coldseam.cli.text.Digits;
+import coldseam.cli.text.Ink;
+import coldseam.cli.text.Table;
+import coldseam.solver.Solver;
+import coldseam.solver.detail.Detail;
+import coldseam.solver.detail.DimensionSystem;
+import coldseam.solver.detail.Fill;
+import coldseam.solver.detail.Hollow;
+import coldseam.solver.detail.Material;
+import coldseam.solver.detail.Space;
+import coldseam.solver.detail.Wanted;
+import coldseam.solver.result.Result;
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+
+/** What is understood of a case, for the terminal: nothing is solved. */
+final class InspectionCard {
+  private final Subject subject;
+  private final Solver.Inspection inspection;
+  private final Detail detail;
+  private final Ink ink;
+  private final Units units;
+  private final StringBuilder text = new StringBuilder();
+
+  InspectionCard(Subject subject, Solver.Inspection inspection, Detail detail, Ink ink) {
+    this.subject = subject;
+    this.inspection = inspection;
+    this.detail = detail;
+    this.ink = ink;
+    this.units = Units.of(subject);
+  }
+
+  String text() {
+    TextCard.title(text, subject, ink);
+    fills();
+    spaces();
+    outline();
+    flanks();
+    wanted();
+    TextCard.assumptions(text, inspection.assumptions(), ink);
+    TextCard.warnings(text, inspection.warnings(), ink);
+    return text.toString();
+  }
+
+  private void fills() {
+    TextCard.heading(text, ink, "Materials", "λ in W/(m·K); area of the section");
+    Table table = new Table("lrrl", 2, TextCard.PAGE);
+    List<Fill> fills = detail.fills();
+    for (int label = 0; label < fills.size(); label++) {
+      double area = inspection.partition().labelArea(label);
+      if (fills.get(label) instanceof Material material) {
+        table.row(
+            material.name(),
+            conductivity(material),
+            Digits.fixed(area, 4) + " m²",
+            ink.faint(material.source()));
+      } else if (fills.get(label) instanceof Hollow hollow) {
+        table.row(hollow.name(), "none", Digits.fixed(area, 4) + " m²", ink.faint("hollow"));
+      }
+    }
+    text.append(table.text());
+  }
+
+  static String conductivity(Material material) {
+    String along = Digits.shortest(material.conductivityWPerMK(), 6);
+    if (material.isotropic()) {
+      return along;
+    }
+    return along
+        + " | "
+        + Digits.shortest(material.crossConductivityWPerMK(), 6)
+        + " at "
+        + Digits.shortest(Math.toDegrees(material.angleRad()), 2)
+        + "°";
+  }
+
+  private void spaces() {
+    TextCard.heading(text, ink, "Spaces", "");
+    Table table = new Table("lrll", 2, TextCard.PAGE);
+    for (Space space : detail.spaces()) {
+      table.row(
+          space.name(),
+          temperature(space),
+          space.exposure().name().toLowerCase(Locale.ROOT),
+          ink.faint(
+              space.relativeHumidity().isPresent()
+                  ? Digits.shortest(space.relativeHumidity().getAsDouble() * 100, 1)
+                      + " % relative humidity"
+                  : ""));
+    }
+    text.append(table.text());
+  }
+
+  private String temperature(Space space) {
+    if (space.floating().isPresent()) {
+      Space.Floating floating = space.floating().get();
+      return floating.conductanceWPerMK() == 0
+          ? "floats"
+          : "floats, "
+              + Digits.shortest(floating.conductanceWPerMK(), 4)
+              + " W/(m·K) to "
+              + floating.to();
+    }
+    String si = Digits.shortest(space.temperatureC(), 2) + " °C";
+    return units.customary()
+        ? si + " = " + Digits.fixed(Units.fahrenheit(space.temperatureC()), 1) + " °F"
+        : si;
+  }
+
+  private void outline() {
+    TextCard.heading(text, ink, "Outline", "lengths in " + units.unit() + "; Rs in m²·K/W");
+    Table table = new Table("lrl", 2, TextCard.PAGE);
+    for (OutlinePart part : OutlinePart.of(inspection, detail)) {
+      table.row(part.name(), units.length(part.lengthM()), ink.faint(part.films()));
+    }
+    for (OutlinePart part : OutlinePart.stretches(inspection, detail)) {
+      table.row("stretch " + part.name(), units.length(part.lengthM()), "");
+    }
+    text.append(table.text());
+  }
+
+  private void flanks() {
+    if (inspection.flanks().isEmpty()) {
+      return;
+    }
+    TextCard.heading(
+        text, ink, "Flanks", "U in W/(m²·K), films included; layers from warm to cold, mm");
+    text.append(TextCard.flankTable(inspection.flanks(), ink).text());
+    Table table = new Table("llrl", 2, TextCard.PAGE);
+    for (Result.FlankResult flank : inspection.flanks()) {
+      for (DimensionSystem system : DimensionSystem.values()) {
+        Map<DimensionSystem, Result.Length> lengths = flank.lengthM();
+        if (lengths.containsKey(system)) {
+          Result.Length length = lengths.get(system);
+          table.row(
+              flank.name(),
+              Words.name(system),
+              Digits.fixed(length.valueM(), 4) + " m",
+              ink.faint(length.derivation()));
+        }
+      }
+    }
+    text.append(table.text());
+  }
+
+  private void wanted() {
+    TextCard.heading(text, ink, "Wanted", "beside couplings, heat flows and coldest surfaces");
+    Table table = new Table("ll", 2, TextCard.PAGE);
+    for (Wanted wanted : detail.wanted()) {
+      if (wanted instanceof Wanted.Psi psi) {
+        table.row(
+            "ψ " + psi.name(),
+            Words.between(psi.warm(), psi.cold())
+                + ", "
+                + Words.name(psi.dimensions())
+                + " dimensions");
+      } else if (wanted instanceof Wanted.Transmittance u) {
+        String width =
+            u.widthM().isPresent()
+                ? ", over " + units.length(u.widthM().getAsDouble()) + " " + units.unit()
+                : "";
+        table.row("U " + u.of(), Words.between(u.warm(), u.cold()) + width);
+      } else if (wanted instanceof Wanted.Temperature point) {
+        table.row(
+            "point " + point.name(),
+            "at " + units.place(point.at()) + ", " + TextCard.films(point.filmSet()));
+      } else if (wanted instanceof Wanted.Profile profile) {
+        table.row(
+            "profile " + profile.name(),
+            profile.points() + " points, " + TextCard.films(profile.filmSet()));
+      } else if (wanted instanceof Wanted.SurfaceProfile profile) {
+        table.row(
+            "profile " + profile.name(),
+            "surface of " + profile.space() + ", " + TextCard.films(profile.filmSet()));
+      }
+    }
+    text.append(table.isEmpty() ? "  nothing else\n" : table.text());
+  }
+}

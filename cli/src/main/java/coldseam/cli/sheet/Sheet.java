@@ -1,0 +1,87 @@
+package coldseam.cli.sheet;
+
+import coldseam.cli.text.Ink;
+import coldseam.solver.Solver;
+import coldseam.solver.detail.Detail;
+import coldseam.solver.result.Result;
+
+/** Writes a result for people and for machines, and what is understood of a case before solving. */
+public final class Sheet {
+  private Sheet() {}
+
+  /**
+   * The card for the terminal, at most 92 columns wide unless a name is very long.
+   *
+   * @param subject what it is about
+   * @param result the result
+   * @param ink colours, or none
+   * @return lines, each ended by a line feed
+   */
+  public static String card(Subject subject, Result result, Ink ink) {
+    return new TextCard(subject, result, ink).text();
+  }
+
+  /**
+   * The result as one JSON object; {@code result.schema.json} beside this program says what stands
+   * in it.
+   *
+   * @param subject what it is about
+   * @param result the result
+   * @param indented many lines instead of one
+   * @return the object, without a line feed at the end
+   */
+  public static String json(Subject subject, Result result, boolean indented) {
+    return new JsonResults(subject, result).text(indented);
+  }
+
+  /**
+   * The result as comma-separated values (RFC 4180, UTF-8): a heading, then one row a quantity, its
+   * value in the column of its unit.
+   *
+   * @param subject what it is about
+   * @param result the result
+   * @return lines, each ended by a line feed
+   */
+  public static String csv(Subject subject, Result result) {
+    return new CsvResults(subject, result).text();
+  }
+
+  /**
+   * What is understood of a case, for the terminal.
+   *
+   * @param subject what it is about
+   * @param inspection what was understood
+   * @param detail the detail it was understood of
+   * @param ink colours, or none
+   * @return lines, each ended by a line feed
+   */
+  public static String understood(
+      Subject subject, Solver.Inspection inspection, Detail detail, Ink ink) {
+    return new InspectionCard(subject, inspection, detail, ink).text();
+  }
+
+  /**
+   * What is understood of a case, as one JSON object.
+   *
+   * @param subject what it is about
+   * @param inspection what was understood
+   * @param detail the detail it was understood of
+   * @return the object on one line, without a line feed at the end
+   */
+  public static String understoodJson(
+      Subject subject, Solver.Inspection inspection, Detail detail) {
+    return new JsonInspection(subject, inspection, detail).text();
+  }
+
+  /**
+   * Whether every number is as near to the exact one as was asked for, by its proved bounds or, for
+   * want of them, by the estimate of its error. What has no finite answer is not asked for.
+   *
+   * @param subject what was asked
+   * @param result the result
+   * @return whether
+   */
+  public static boolean accurateEnough(Subject subject, Result result) {
+    return new Reached(subject.accuracy()).by(result);
+  }
+}

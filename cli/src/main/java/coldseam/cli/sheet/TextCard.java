@@ -1,0 +1,289 @@
+package coldseam.cli.sheet;
+
+import coldseam.cli.text.Digits;
+import coldseam.cli.text.Ink;
+import coldseam.cli.text.Table;
+import coldseam.solver.conduction.Quantity;
+import coldseam.solver.detail.Assumption;
+import coldseam.solver.detail.FilmSet;
+import coldseam.solver.result.Result;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Locale;
+import java.util.Set;
+
+/** The result card on the terminal: numbers first, then what they rest on. */
+final class TextCard {
+  static final int PAGE = 92;
+
+  private final Subject subject;
+  private final Result result;
+  private final Ink ink;
+  private final Units units;
+  private final StringBuilder text = new StringBuilder();
+
+  TextCard(Subject subject, Result result, Ink ink) {
+    this.subject = subject;
+    this.result = result;
+    this.ink = ink;
+    this.units = Units.of(subject);
+  }
+
+  String text() {
+    title(text, subject, ink);
+    numbers();
+    accounts();
+    new FlowSection(result, units, ink).write(text);
+    new SurfaceSection(result, units, ink).write(text);
+    flanks();
+    assumptions(text, result.assumptions(), ink);
+    warnings(text, result.warnings(), ink);
+    foot();
+    return text.toString();
+  }
+
+  static void title(StringBuilder text, Subject subject, Ink ink) {
+    text.append(ink.strong(subject.title())).append('\n');
+    String variant = subject.variant().map(v -> ", variant " + v).orElse("");
+    text.append(ink.faint(subject.file() + variant)).append('\n');
+  }
+
+  static void heading(StringBuilder text, Ink ink, String name, String note) {
+    text.append('\n').append(ink.strong(name));
+    if (!note.isEmpty()) {
+      text.append("  ").append(ink.faint(note));
+    }
+    text.append('\n');
+  }
+
+  private void numbers() {
+    heading(text, ink, "Result", "films for heat loss");
+    Table table = new Table("llrrll", 2, PAGE);
+    for (Result.LinearTransmittance psi : result.psi()) {
+      String of = psi.of().isEmpty() || psi.of().equals(psi.name()) ? "" : " of " + psi.of();
+      number(
+          table,
+          "ψ " + psi.name() + of,
+          Words.between(psi.warm(), psi.cold()),
+          psi.valueWPerMK(),
+          new Scale(4, "W/(m·K)", Units.PSI, Units.PSI_NAME),
+          Words.name(psi.dimensions()) + " dimensions");
+    }
+    for (Result.EffectiveTransmittance u : result.transmittances()) {
+      number(
+          table,
+          "U " + u.of(),
+          Words.between(u.warm(), u.cold()),
+          u.valueWPerM2K(),
+          new Scale(4, "W/(m²·K)", Units.U, Units.U_NAME),
+          "over " + units.length(u.widthM()) + " " + units.unit());
+      number(
+          table,
+          "R " + u.of(),
+          "films included",
+          u.resistanceM2KPerW(),
+          new Scale(3, "m²·K/W", Units.R, Units.R_NAME),
+          "");
+    }
+    for (Result.Coupling coupling : result.couplings()) {
+      number(
+          table,
+          "L2D",
+          coupling.from() + " – " + coupling.to(),
+          coupling.valueWPerMK(),
+          new Scale(4, "W/(m·K)", Units.PSI, Units.PSI_NAME),
+          "");
+    }
+    text.append(table.text());
+    certificate();
+  }
+
+  /**
+   * How a quantity is written.
+   *
+   * @param decimals most decimals in SI
+   * @param si its SI unit
+   * @param factor to US customary units
+   * @param customary their name
+   */
+  private record Scale(int decimals, String si, double factor, String customary) {}
+
+  private void number(
+      Table table, String name, String between, Quantity quantity, Scale scale, String note) {
+    Digits.Figure figure = Digits.of(quantity.value(), quantity.halfWidth(), scale.decimals());
+    table.row(
+        ink.strong(name),
+        between,
+        ink.strong(figure.value()),
+        "± " + figure.halfWidth(),
+        scale.si(),
+        ink.faint(note));
+    if (units.customary()) {
+      Digits.Figure us =
+          Digits.of(
+              quantity.value() * scale.factor(),
+              quantity.halfWidth() * scale.factor(),
+              scale.decimals());
+      table.row("", "", us.value(), "± " + us.halfWidth(), scale.customary());
+    }
+  }
+
+  private void certificate() {
+    if (Words.certified(result)) {
+      text.append("  certified: the exact result of the stated problem lies within ±\n");
+      return;
+    }
+    Set<String> reasons = new LinkedHashSet<>();
+    result.couplings().forEach(c -> reasons.add(Words.reason(c.valueWPerMK())));
+    result.psi().forEach(p -> reasons.add(Words.reason(p.valueWPerMK())));
+    result.transmittances().forEach(u -> reasons.add(Words.reason(u.valueWPerM2K())));
+    reasons.remove("");
+    String why = reasons.isEmpty() ? "" : " (" + String.join("; ", reasons) + ")";
+    String line = "Not certified: ± is an estimate of the numerical error, not a bound" + why;
+    text.append("  ");
+    for (String part : Table.wrapped(line, PAGE - 2, "").split("\n")) {
+      text.append(ink.alert(part)).append("\n  ");
+    }
+    text.setLength(text.length() - 2);
+  }
+
+  private void accounts() {
+    for (Result.LinearTransmittance psi : result.psi()) {
+      heading(
+          text,
+          ink,
+          "ψ " + psi.name() + " = L2D less what is counted elsewhere",
+          "W/(m·K), " + Words.name(psi.dimensions()) + " dimensions");
+      int guarded = Math.max(0, Math.min(4, Digits.decimals(psi.valueWPerMK().halfWidth()) + 1));
+      Table table = new Table("lrl", 2, PAGE);
+      table.row(
+          "L2D " + Words.between(psi.warm(), psi.cold()),
+          Digits.fixed(psi.couplingWPerMK().value(), guarded),
+          ink.faint(parts(psi)));
+      for (Result.Subtracted term : psi.subtracted()) {
+        table.row(
+            "less " + term.name(),
+            Digits.fixed(-term.valueWPerMK().mid(), guarded),
+            ink.faint(derivation(term)));
+      }
+      Digits.Figure value =
+          Digits.of(psi.valueWPerMK().value(), psi.valueWPerMK().halfWidth(), guarded);
+      table.row("ψ", ink.strong(value.value()), ink.faint("± " + value.halfWidth()));
+      text.append(table.text());
+    }
+  }
+
+  private static String parts(Result.LinearTransmittance psi) {
+    if (psi.parts().size() < 2) {
+      return "";
+    }
+    StringBuilder parts = new StringBuilder();
+    for (Result.Coupling part : psi.parts()) {
+      parts
+          .append(parts.length() == 0 ? "" : ", ")
+          .append(part.from())
+          .append(" – ")
+          .append(part.to())
+          .append(' ')
+          .append(Digits.fixed(part.valueWPerMK().value(), 4));
+    }
+    return parts.toString();
+  }
+
+  private static String derivation(Result.Subtracted term) {
+    StringBuilder words = new StringBuilder();
+    if (term.weight() != 1) {
+      words.append("b ").append(Digits.shortest(term.weight(), 4)).append(" × ");
+    }
+    term.uWPerM2K()
+        .ifPresent(
+            u -> {
+              words.append("U ").append(Digits.fixed(u.lower(), 4));
+              if (u.upper() > u.lower()) {
+                words.append(" to ").append(Digits.fixed(u.upper(), 4));
+              }
+            });
+    if (term.lengthM().isPresent()) {
+      words.append(" × ").append(Digits.fixed(term.lengthM().getAsDouble(), 4)).append(" m");
+    }
+    if (!term.derivation().isEmpty()) {
+      words.append(words.length() == 0 ? "" : ": ").append(term.derivation());
+    }
+    return words.toString();
+  }
+
+  private void flanks() {
+    if (result.flanks().isEmpty()) {
+      return;
+    }
+    heading(text, ink, "Flanks", "U in W/(m²·K), films included; layers from warm to cold, mm");
+    text.append(flankTable(result.flanks(), ink).text());
+  }
+
+  static Table flankTable(List<Result.FlankResult> flanks, Ink ink) {
+    Table table = new Table("llrl", 2, PAGE);
+    for (Result.FlankResult flank : flanks) {
+      String u = Digits.fixed(flank.uWPerM2K().lower(), 4);
+      if (flank.uWPerM2K().upper() > flank.uWPerM2K().lower()) {
+        u += " to " + Digits.fixed(flank.uWPerM2K().upper(), 4);
+      }
+      table.row(
+          flank.name(),
+          flank.warm() + " – " + flank.cold(),
+          u,
+          ink.faint(String.join(" | ", flank.layers())));
+    }
+    return table;
+  }
+
+  static void assumptions(StringBuilder text, List<Assumption> assumptions, Ink ink) {
+    if (assumptions.isEmpty()) {
+      return;
+    }
+    heading(text, ink, "Assumed", "");
+    Table table = new Table("lll", 2, PAGE);
+    for (Assumption assumption : assumptions) {
+      table.row(assumption.what(), assumption.value(), ink.faint(assumption.source()));
+    }
+    text.append(table.text());
+  }
+
+  static void warnings(StringBuilder text, List<String> warnings, Ink ink) {
+    if (warnings.isEmpty()) {
+      return;
+    }
+    text.append('\n').append(ink.alert("Warnings")).append('\n');
+    for (String warning : warnings) {
+      text.append("  ! ").append(Table.wrapped(warning, PAGE - 4, "    ")).append('\n');
+    }
+  }
+
+  private void foot() {
+    double seconds = 0;
+    for (double ms : result.timesMs().values()) {
+      seconds += ms / 1000;
+    }
+    String films = result.surface().isPresent() ? " (films for heat loss)" : "";
+    text.append('\n')
+        .append(
+            ink.faint(
+                String.format(Locale.ROOT, "%,d", result.triangles())
+                    + " triangles, "
+                    + String.format(Locale.ROOT, "%,d", result.unknowns())
+                    + " unknowns"
+                    + films
+                    + ", drawing moved by at most "
+                    + Digits.shortest(result.largestDisplacementM() * 1000, 6)
+                    + " mm, "
+                    + Digits.significant(seconds, 2)
+                    + " s"))
+        .append('\n')
+        .append(ink.faint(Table.wrapped(Words.SAFETY, PAGE, "")))
+        .append('\n');
+  }
+
+  /** The films of a set, as a note. */
+  static String films(FilmSet set) {
+    return set == FilmSet.HEAT_LOSS ? "films for heat loss" : "films for surface temperatures";
+  }
+}

@@ -1,0 +1,114 @@
+package coldseam.cli.sheet;
+
+import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.data.Offset.offset;
+
+import coldseam.cli.text.Ink;
+import coldseam.solver.detail.Accuracy;
+import org.junit.jupiter.api.Test;
+
+class TextCardTest {
+  private static String card() {
+    return Sheet.card(Samples.subject(), Samples.estimated(), Ink.NONE);
+  }
+
+  @Test
+  void numbers_stand_first_and_say_that_they_are_not_certified() {
+    assertThat(card())
+        .startsWith(
+            """
+            Slab edge
+            cases/slab.yaml
+
+            Result  films for heat loss
+              ψ external of floor edge  indoors – outdoors  0.6123  ± 0.0005  W/(m·K)   external dimensions
+              U wall                    indoors – outdoors  0.2134  ± 0.0001  W/(m²·K)  over 600 mm
+              R wall                    films included       4.686   ± 0.004  m²·K/W
+              L2D                       indoors – outdoors  1.2346  ± 0.0005  W/(m·K)
+              Not certified: ± is an estimate of the numerical error, not a bound (no bounds are
+              computed)
+            """);
+  }
+
+  @Test
+  void a_psi_accounts_for_what_was_taken_off() {
+    assertThat(card())
+        .contains(
+            """
+            ψ external = L2D less what is counted elsewhere  W/(m·K), external dimensions
+              L2D indoors – outdoors   1.2346
+              less wall above         −0.3000  U 0.2000 × 1.5000 m: layers at the cut-off plane, outer
+                                               face
+              less floor              −0.1600  b 0.5 × U 0.3100 to 0.3300 × 1.0000 m
+              ψ                        0.6123  ± 0.0005
+            """);
+  }
+
+  @Test
+  void flows_are_signed_and_surfaces_say_their_films() {
+    assertThat(card())
+        .contains("  indoors            20.0 °C  +30.86  ± 0.02\n")
+        .contains("  outdoors           −5.0 °C  −30.86  ± 0.02\n")
+        .contains("  through slab edge            −3.25  ± 0.01  400 mm, facing outdoors\n")
+        .contains("Surface temperatures  estimates; Rs in m²·K/W; f_Rsi relative to outdoors\n")
+        .contains(
+            "  indoors  coldest  13.12 ± 0.01 °C  f_Rsi 0.725  surface films,  Rs 0.25  at (0, −200)"
+                + " mm\n")
+        .contains("  A  11.23 °C  heat-loss films  at (123.4, −500) mm\n");
+  }
+
+  @Test
+  void what_it_rests_on_and_who_decides_stand_on_it() {
+    assertThat(card())
+        .contains("Assumed\n  film of indoors, walls  0.13 m²·K/W  ISO 6946, Rsi horizontal\n")
+        .contains("Warnings\n  ! the cut-off plane at the top is 0.8 m from the slab")
+        .contains("1,234 triangles, 5,678 unknowns")
+        .contains("a licensed professional decide")
+        .doesNotContain("\u001b");
+  }
+
+  /** 1 W/(m·K) is 0.577789 Btu/(h·ft·°F), 1 m²·K/W is 5.678263 h·ft²·°F/Btu (NIST SP 811, B.9). */
+  @Test
+  void a_case_in_inches_has_us_figures_beside_si() {
+    assertThat(Units.PSI).isCloseTo(0.577789, offset(5e-7));
+    assertThat(Units.R).isCloseTo(5.678263, offset(5e-7));
+    assertThat(Units.FLOW).isCloseTo(1.040022, offset(5e-6));
+    assertThat(Sheet.card(Samples.inches(), Samples.estimated(), Ink.NONE))
+        .contains("0.3538") // 0.61234 × 0.577789
+        .contains("26.61") // 4.686036 × 5.678263
+        .contains("20.0 °C = 68.0 °F")
+        .contains("at (0, −7.87) in")
+        .contains("variant steel, \"light\"");
+  }
+
+  @Test
+  void bounds_are_called_bounds_only_when_proved() {
+    assertThat(Sheet.card(Samples.subject(), Samples.certified(), Ink.NONE))
+        .contains("certified: the exact result of the stated problem lies within ±")
+        .doesNotContain("Not certified");
+  }
+
+  @Test
+  void an_infinite_coupling_is_no_number() {
+    assertThat(Sheet.card(Samples.subject(), Samples.infinite(), Ink.NONE))
+        .contains("∞       ± ?  W/(m·K)")
+        .containsIgnoringWhitespaces("two fixed temperatures meet in a point");
+  }
+
+  @Test
+  void accuracy_is_reached_or_not_by_what_was_asked() {
+    assertThat(Sheet.accurateEnough(Samples.subject(), Samples.estimated())).isTrue();
+    assertThat(Sheet.accurateEnough(Samples.subject(), Samples.infinite())).isTrue();
+    Accuracy[] asked = {
+      new Accuracy(0.0003, 1, 1, 1, 100), // L2D is known to 0.0004 / 1.23456 = 0.00032 of itself
+      new Accuracy(1, 0.0003, 1, 1, 100),
+      new Accuracy(1, 1, 0.0004, 1, 100), // ψ to 0.00042
+      new Accuracy(1, 1, 1, 0.0004, 100) // U to 0.0001 / 0.2134 = 0.00047
+    };
+    for (Accuracy accuracy : asked) {
+      assertThat(new Reached(accuracy).by(Samples.estimated())).as(accuracy.toString()).isFalse();
+    }
+    assertThat(new Reached(new Accuracy(0.00033, 0.00041, 0.00043, 0.00048, 100)))
+        .matches(reached -> reached.by(Samples.estimated()));
+  }
+}
