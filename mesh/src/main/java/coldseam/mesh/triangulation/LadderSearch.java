@@ -134,9 +134,10 @@ final class LadderSearch {
       if (!isOpen(pair)) {
         continue;
       }
-      Pair before = i == 0 ? pair : chain.get(i - 1);
-      End a = i == 0 ? pair.firstOnH() : before.lastOnH();
-      End d = i == 0 ? pair.firstOnG() : before.lastOnG();
+      // Neighbours share a rung where both agree on it: not where the part widens at once.
+      boolean shared = i > 0 && chain.get(i - 1).joinedLast == pair.joinedFirst;
+      End a = shared ? chain.get(i - 1).lastOnH() : pair.firstOnH();
+      End d = shared ? chain.get(i - 1).lastOnG() : pair.firstOnG();
       found.add(new Cell(a, pair.lastOnH(), pair.lastOnG(), d, width));
     }
   }

@@ -17,6 +17,12 @@ final class Ladders {
   /** A foot is not put nearer than this many widths to a vertex that can serve instead. */
   private static final double SNAP = 1.5;
 
+  /** How far a rung retreats, in widths: what it leaves behind has good angles. */
+  private static final double RETREAT = 2;
+
+  /** No rung is longer than this many widths. */
+  private static final double LONGEST_RUNG = 8;
+
   private final ConstrainedDelaunay plane;
   private final Linework lines;
 
@@ -90,7 +96,7 @@ final class Ladders {
     int c = cells[at + (last ? 0 : 2)];
     int d = cells[at + (last ? 1 : 3)];
     giveUp(at / 4);
-    cut(a, b, c, d, LadderSearch.SHORTEST_CELL * width(a, b, c, d));
+    cut(a, b, c, d, RETREAT * width(a, b, c, d));
   }
 
   private int cell(int t) {
@@ -100,7 +106,8 @@ final class Ladders {
   /** Makes cells of a part whose sides may have vertices between its corners. */
   private void build(int a, int b, int c, int d) {
     double width = width(a, b, c, d);
-    if (length(a, b, c, d) < LadderSearch.SHORTEST_CELL * width) {
+    double shortest = LadderSearch.SHORTEST_CELL * width;
+    if (length(a, b, c, d) < shortest) {
       return;
     }
     int onFirst = a == b ? b : following(a, b);
@@ -120,9 +127,19 @@ final class Ladders {
         build(a, foot, onSecond, d);
         build(foot, b, c, onSecond);
       }
-    } else {
-      form(a, b, c, d);
+    } else if (!form(a, b, c, d) && length(a, b, c, d) >= 2 * shortest) {
+      // Something stands in the way, most often at one end: halves come nearer and nearer to it.
+      int middle = vertexOn(a, b, middle(plane.x, a, b), middle(plane.y, a, b), 0);
+      int foot = middle == ConstrainedDelaunay.NONE ? middle : foot(middle, c, d, SNAP * width);
+      if (foot != ConstrainedDelaunay.NONE) {
+        build(a, middle, foot, d);
+        build(middle, b, c, foot);
+      }
     }
+  }
+
+  private static double middle(double[] coordinates, int p, int q) {
+    return 0.5 * (coordinates[p] + coordinates[q]);
   }
 
   /** Deals with a cell, given up before, after vertex v was put on its side from start to end. */
@@ -272,7 +289,9 @@ final class Ladders {
     boolean convex =
         (b == c || plane.orientation(a, b, c) > 0 && plane.orientation(b, c, d) > 0)
             && (d == a || plane.orientation(c, d, a) > 0 && plane.orientation(d, a, b) > 0);
-    if (!convex || b == c && d == a || !keepRung(b, c) || !keepRung(d, a)) {
+    double longest = LONGEST_RUNG * width(a, b, c, d);
+    boolean square = plane.distance(b, c) <= longest && plane.distance(d, a) <= longest;
+    if (!convex || !square || b == c && d == a || !keepRung(b, c) || !keepRung(d, a)) {
       return false;
     }
     int one = plane.find(a, b) / 3;
