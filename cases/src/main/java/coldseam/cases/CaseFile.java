@@ -1,6 +1,8 @@
 package coldseam.cases;
 
 import java.nio.file.Path;
+import java.util.HashMap;
+import java.util.List;
 
 /** Reads case files. */
 public final class CaseFile {
@@ -15,6 +17,6 @@ public final class CaseFile {
    *     is a folder, is not text or is too large
    */
   public static Case read(Path file) throws CaseException {
-    throw new UnsupportedOperationException();
+    return new CaseReader(file, List.of(CaseReader.normalised(file)), new HashMap<>()).read();
   }
 }

@@ -1,0 +1,168 @@
+package coldseam.cases;
+
+import coldseam.solver.detail.Accuracy;
+import coldseam.solver.detail.Area;
+import coldseam.solver.detail.Detail;
+import coldseam.solver.detail.Geometry;
+import coldseam.solver.detail.Space;
+import coldseam.solver.detail.View;
+import coldseam.solver.detail.Wanted;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+
+/** Reads what a detail is made of, for the base case or for one variant of it. */
+final class DetailReader {
+  private final Fields top;
+  private final Pass pass;
+  private final Problems problems;
+  private final OtherCases others;
+  private final Optional<Variant> variant;
+  private Accuracy accuracy = Accuracy.STANDARD;
+  private List<Expectation> expectations = List.of();
+
+  DetailReader(Fields top, Pass pass, OtherCases others, Optional<Variant> variant) {
+    this.top = top;
+    this.pass = pass;
+    this.problems = pass.problems();
+    this.others = others;
+    this.variant = variant;
+  }
+
+  Accuracy accuracy() {
+    return accuracy;
+  }
+
+  List<Expectation> expectations() {
+    return expectations;
+  }
+
+  /**
+   * Reads everything.
+   *
+   * @param title the title of the case
+   * @param variants names of the variants
+   * @return the detail, or empty if a mistake was reported
+   */
+  Optional<Detail> read(String title, List<String> variants) {
+    View view = view();
+    MaterialReader materials = new MaterialReader(pass);
+    top.get("materials").ifPresent(materials::read);
+    variant.flatMap(Variant::materials).ifPresent(materials::read);
+    SpaceReader spaces = new SpaceReader(pass);
+    Optional<Node> spacesNode =
+        top.require("spaces", "add `spaces:` with `indoors` and `outdoors`, say");
+    spacesNode.ifPresent(node -> spaces.read(node, materials.materials()));
+    Fills fills = new Fills(pass, materials, spaces);
+    variant.ifPresent(v -> v.replaceFills(fills));
+    List<Area> areas = section(fills, spacesNode.isPresent());
+    variant.ifPresent(v -> v.reportNotReplaced(problems, fills));
+    StretchReader stretches = new StretchReader(pass, spaces);
+    top.get("stretches").ifPresent(n -> stretches.read(n, areas, materials.materials()));
+    FlankReader flanks = new FlankReader(pass);
+    top.get("flanks").ifPresent(n -> flanks.read(n, areas));
+    List<Wanted> wanted = new ArrayList<>();
+    ResultsReader results = new ResultsReader(pass, spaces);
+    PsiReader psi = new PsiReader(pass, spaces, flanks, others);
+    top.get("psi").ifPresent(n -> wanted.addAll(psi.read(n)));
+    top.get("U").ifPresent(n -> wanted.addAll(results.transmittances(n)));
+    top.get("points").ifPresent(n -> wanted.addAll(results.points(n)));
+    top.get("profiles").ifPresent(n -> wanted.addAll(results.profiles(n)));
+    top.get("accuracy").ifPresent(n -> accuracy = new AccuracyReader(pass).read(n));
+    top.get("expect").ifPresent(n -> expect(n, spaces, stretches, results, variants));
+    if (!problems.none()) {
+      return Optional.empty();
+    }
+    return Optional.of(
+        new Detail(
+            title,
+            Geometry.PLANE,
+            view,
+            areas,
+            spaces.good(),
+            stretches.stretches(),
+            flanks.flanks(),
+            wanted,
+            pass.assumptions()));
+  }
+
+  private List<Area> section(Fills fills, boolean haveSpaces) {
+    Optional<Node> node = top.require("section", "add `section:` with the shapes in order");
+    if (node.isEmpty()) {
+      return List.of();
+    }
+    pass.place("section", "", node.get());
+    List<Area> areas = new SectionReader(pass, fills).read(node.get());
+    if (problems.none() && haveSpaces) {
+      boolean conducts = false;
+      for (Area area : areas) {
+        conducts |= Sides.conducts(area.fill());
+      }
+      if (!conducts) {
+        problems.add(
+            top.keyNode("section"),
+            "nothing in the section conducts heat",
+            "lay one material at least");
+      }
+    }
+    return areas;
+  }
+
+  private View view() {
+    Optional<String> word = top.word("view", List.of("vertical", "plan"));
+    boolean plan = word.orElse("vertical").equals("plan");
+    if (!top.has("view")) {
+      pass.assume("view", "vertical section", "by convention of this tool");
+    }
+    top.word("geometry", List.of("plane"));
+    Optional<Node> up = top.get("up");
+    if (up.isEmpty()) {
+      return plan ? View.PLAN : View.UPRIGHT;
+    }
+    if (plan) {
+      problems.add(top.keyNode("up"), "a plan has no `up`", "leave `up` away, or `view: plan`");
+      return View.PLAN;
+    }
+    Optional<double[]> vector = pass.quantities().pair(up.get(), "`up`", Place.DIRECTION);
+    if (vector.isEmpty()) {
+      return View.UPRIGHT;
+    }
+    double x = vector.get()[0];
+    double y = vector.get()[1];
+    if (!(Math.hypot(x, y) > 1e-9)) {
+      problems.add(up.get(), "`up` points nowhere", "write `[0, 1]` if up is up on the sheet");
+      return View.UPRIGHT;
+    }
+    return View.up(x, y);
+  }
+
+  private void expect(
+      Node node,
+      SpaceReader spaces,
+      StretchReader stretches,
+      ResultsReader results,
+      List<String> variants) {
+    List<String> floating = new ArrayList<>();
+    for (Space space : spaces.good()) {
+      if (space.floating().isPresent()) {
+        floating.add(space.name());
+      }
+    }
+    List<String> psi = new ArrayList<>();
+    if (top.get("psi").orElse(null) instanceof Node.Mapping mapping) {
+      for (Node.Entry entry : mapping.entries()) {
+        psi.add(entry.key().text());
+      }
+    }
+    ExpectationReader.Names names =
+        new ExpectationReader.Names(
+            spaces.spaces().keySet(),
+            floating,
+            stretches.names(),
+            psi,
+            results.transmittances(),
+            results.points(),
+            variants);
+    expectations = new ExpectationReader(pass, names).read(node);
+  }
+}

@@ -1,0 +1,151 @@
+package coldseam.cases;
+
+import java.util.ArrayList;
+import java.util.Collection;
+import java.util.HashMap;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+
+/** The named values of a case, worked out when first asked for. */
+final class NamedValues {
+  /** Longer chains of values and brackets are refused. */
+  static final int LONGEST_CHAIN = 100;
+
+  private final Problems problems;
+  private final LengthUnit unit;
+  private final Map<String, Node> written = new LinkedHashMap<>();
+  private final Map<String, Value> known = new HashMap<>();
+  private final List<String> open = new ArrayList<>();
+  private int depth;
+
+  NamedValues(Problems problems, LengthUnit unit) {
+    this.problems = problems;
+    this.unit = unit;
+  }
+
+  /** Adds a value, or replaces one of that name. */
+  void put(String name, Node value) {
+    written.put(name, value);
+  }
+
+  boolean has(String name) {
+    return written.containsKey(name);
+  }
+
+  Collection<String> names() {
+    return written.keySet();
+  }
+
+  /** Works out every value, so that every mistake in one is reported. */
+  void workOutAll() {
+    for (String name : written.keySet()) {
+      of(name);
+    }
+  }
+
+  /**
+   * The value of a name that {@link #has} knows.
+   *
+   * @param name the name
+   * @return the value, {@link Value#UNKNOWN} if it has a mistake
+   */
+  Value of(String name) {
+    Value value = known.get(name);
+    if (value == null) {
+      value = workedOut(name);
+      known.put(name, value);
+    }
+    return value;
+  }
+
+  private Value workedOut(String name) {
+    Node node = written.get(name);
+    int first = open.indexOf(name);
+    if (first >= 0) {
+      StringBuilder circle = new StringBuilder();
+      for (String link : open.subList(first, open.size())) {
+        circle.append('`').append(link).append("` needs ");
+      }
+      problems.add(
+          written.get(open.get(first)),
+          "values refer to each other in a circle: " + circle + "`" + name + "`",
+          "give one of them a number");
+      return Value.UNKNOWN;
+    }
+    if (depth >= LONGEST_CHAIN) {
+      problems.add(node, "values refer to each other over too many steps", "write them shorter");
+      return Value.UNKNOWN;
+    }
+    open.add(name);
+    depth++;
+    Value value = evaluated(node, "value `" + name + "`");
+    depth--;
+    open.remove(open.size() - 1);
+    return value;
+  }
+
+  /**
+   * Evaluates a number or an expression.
+   *
+   * @param node where it stands
+   * @param what how messages call it
+   * @return the value, {@link Value#UNKNOWN} if it has a mistake, which has been reported
+   */
+  Value evaluated(Node node, String what) {
+    if (!(node instanceof Node.Scalar scalar)) {
+      problems.add(node, what + " is a number, not " + Node.describe(node), "write one number");
+      return Value.UNKNOWN;
+    }
+    String text = scalar.text().strip();
+    if (PlainNumber.is(text)) {
+      double number = Double.parseDouble(text);
+      return finite(scalar, what, Value.bare(number));
+    }
+    if (text.isEmpty()) {
+      problems.add(node, what + " is a number, not nothing", "write one number");
+      return Value.UNKNOWN;
+    }
+    int depthBefore = depth;
+    try {
+      return finite(scalar, what, new Expression(text, this, unit).value());
+    } catch (Mistake mistake) {
+      int column = scalar.column();
+      if (scalar.style() != Node.Style.BLOCK) {
+        int quote = scalar.style() == Node.Style.QUOTED ? 1 : 0;
+        int blanks = scalar.text().indexOf(text);
+        column += mistake.index() + quote + blanks;
+      }
+      problems.add(scalar.line(), column, what + ": " + mistake.getMessage(), mistake.right());
+      return Value.UNKNOWN;
+    } finally {
+      depth = depthBefore;
+    }
+  }
+
+  /**
+   * Goes one step deeper into brackets or values.
+   *
+   * @param index where in the expression
+   * @throws Mistake if that is too deep
+   */
+  void deeper(int index) throws Mistake {
+    depth++;
+    if (depth > LONGEST_CHAIN) {
+      throw new Mistake("this is nested too deeply", "write it in several values", index);
+    }
+  }
+
+  void shallower() {
+    depth--;
+  }
+
+  private Value finite(Node.Scalar scalar, String what, Value value) {
+    if (value.unknown() || !Double.isInfinite(value.number())) {
+      return value;
+    }
+    problems.add(
+        scalar, what + " is too large to be counted: " + Node.describe(scalar), "write a number");
+    return Value.UNKNOWN;
+  }
+}
