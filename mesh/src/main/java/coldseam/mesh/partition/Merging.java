@@ -89,11 +89,14 @@ final class Merging {
   }
 
   private boolean isRemovable(int v) {
-    if (offset[v + 1] - offset[v] != 2 || all.pinned[v]) {
+    if (offset[v + 1] - offset[v] != 2) {
       return false;
     }
     int one = around[offset[v]];
     int two = around[offset[v] + 1];
+    if (all.pinned[v] && all.lines[one >> 1].length > 0) {
+      return false;
+    }
     return Arrays.equals(all.lines[one >> 1], all.lines[two >> 1])
         && bendAt(v, to(one), to(two)) <= snapM;
   }
