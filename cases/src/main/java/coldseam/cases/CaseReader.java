@@ -158,7 +158,7 @@ final class CaseReader {
     }
     List<Node.Entry> values = new ArrayList<>();
     for (Node.Entry entry : Fields.named(problems, "`values`", top.get("values").get())) {
-      if (isIdentifier(entry.key().text())) {
+      if (NamedValues.canBeNamed(entry.key().text())) {
         values.add(entry);
       } else {
         problems.add(
@@ -166,24 +166,10 @@ final class CaseReader {
             "`" + Node.shortened(entry.key().text()) + "` cannot be calculated with",
             Expression.FUNCTIONS.contains(entry.key().text())
                 ? "choose a name that means nothing yet"
-                : "name values by letters, digits and `_`, beginning with a letter");
+                : "name values by words of letters and digits, beginning with a letter");
       }
     }
     return values;
-  }
-
-  private static boolean isIdentifier(String name) {
-    if (Expression.FUNCTIONS.contains(name) || name.isEmpty()) {
-      return false;
-    }
-    for (int i = 0; i < name.length(); i++) {
-      char c = name.charAt(i);
-      boolean letter = Character.isLetter(c) || c == '_';
-      if (!letter && (i == 0 || !Character.isLetterOrDigit(c))) {
-        return false;
-      }
-    }
-    return true;
   }
 
   private List<Variant> variants(Fields top, List<Node.Entry> values) {

@@ -137,14 +137,13 @@ final class Expression {
 
   private Value named() throws Mistake {
     int from = at;
-    while (at < text.length()
-        && (Character.isLetterOrDigit(text.charAt(at)) || text.charAt(at) == '_')) {
-      at++;
+    String known = values.longestAt(text, from);
+    if (!known.isEmpty()) {
+      at = from + known.length();
+      return values.of(known);
     }
+    at = NamedValues.wordEnd(text, from);
     String name = text.substring(from, at);
-    if (values.has(name)) {
-      return values.of(name);
-    }
     if (name.equals("pi")) {
       return Value.bare(Math.PI);
     }
@@ -243,13 +242,21 @@ final class Expression {
         at);
   }
 
-  private Mistake unknown(String name, int from) {
+  private Mistake unknown(String first, int from) {
+    String name = first;
     String lower = name.toLowerCase(java.util.Locale.ROOT);
     if (lower.equals("nan") || lower.equals("inf") || lower.equals("infinity")) {
       return notFinite(name, from);
     }
     List<String> valid = new ArrayList<>(values.names());
     valid.addAll(FUNCTIONS);
+    int end = from + name.length();
+    while (end + 1 < text.length()
+        && text.charAt(end) == ' '
+        && NamedValues.wordEnd(text, end + 1) > end + 1) {
+      end = NamedValues.wordEnd(text, end + 1);
+    }
+    name = text.substring(from, end);
     String right = Problems.suggestion(name, valid);
     if (!right.startsWith("did")) {
       right = "define it under `values`, or write a number";

@@ -34,7 +34,7 @@ final class Literal {
       return;
     }
     int blanks = skipBlanks(at);
-    unit = Unit.longestAt(text, blanks, names::has);
+    unit = Unit.longestAt(text, blanks, names::startsAt);
     if (unit != null) {
       at = unit.end();
       if (wordBetween(blanks, at).startsWith("f")) {
@@ -47,7 +47,7 @@ final class Literal {
     this.text = text;
     this.number = number;
     this.at = end;
-    this.unit = Unit.longestAt("h ft2 F/Btu", 0, word -> false);
+    this.unit = Unit.longestAt("h ft2 F/Btu", 0, (all, index) -> false);
   }
 
   /**

@@ -12,6 +12,9 @@ final class NamedValues {
   /** Longer chains of values and brackets are refused. */
   static final int LONGEST_CHAIN = 100;
 
+  /** Names of more words are refused. */
+  private static final int MOST_WORDS = 8;
+
   private final Problems problems;
   private final LengthUnit unit;
   private final Map<String, Node> written = new LinkedHashMap<>();
@@ -31,6 +34,71 @@ final class NamedValues {
 
   boolean has(String name) {
     return written.containsKey(name);
+  }
+
+  /**
+   * The longest name of a value that stands at a place; names may be of several words.
+   *
+   * @param text an expression
+   * @param at where a word begins
+   * @return the name, or an empty text if none stands there
+   */
+  String longestAt(String text, int at) {
+    String longest = "";
+    int end = at;
+    for (int words = 0; words < MOST_WORDS; words++) {
+      end = wordEnd(text, end);
+      String name = text.substring(at, end);
+      if (has(name)) {
+        longest = name;
+      }
+      if (end + 1 >= text.length()
+          || text.charAt(end) != ' '
+          || wordEnd(text, end + 1) == end + 1) {
+        return longest;
+      }
+      end++;
+    }
+    return longest;
+  }
+
+  /** Whether the name of a value stands at a place. */
+  boolean startsAt(String text, int at) {
+    return !longestAt(text, at).isEmpty();
+  }
+
+  /** Index behind the word that begins at an index. */
+  static int wordEnd(String text, int from) {
+    int end = from;
+    while (end < text.length()
+        && (Character.isLetterOrDigit(text.charAt(end)) || text.charAt(end) == '_')) {
+      end++;
+    }
+    return end;
+  }
+
+  /** Whether a value can have a name: words of letters and digits with single spaces between. */
+  static boolean canBeNamed(String name) {
+    if (Expression.FUNCTIONS.contains(name)
+        || name.isEmpty()
+        || !(Character.isLetter(name.charAt(0)) || name.charAt(0) == '_')) {
+      return false;
+    }
+    int end = -1;
+    for (int words = 0; words < MOST_WORDS; words++) {
+      int from = end + 1;
+      end = wordEnd(name, from);
+      if (end == from) {
+        return false;
+      }
+      if (end == name.length()) {
+        return true;
+      }
+      if (name.charAt(end) != ' ') {
+        return false;
+      }
+    }
+    return false;
   }
 
   Collection<String> names() {

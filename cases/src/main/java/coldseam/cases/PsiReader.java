@@ -87,7 +87,8 @@ final class PsiReader {
       if (!fields.reported("dimensions")) {
         problems.add(
             key,
-            fields.what() + " does not say in which dimensions it counts, and means nothing so",
+            fields.what()
+                + " does not say in which dimensions it is, and without them it means nothing",
             "add `dimensions: internal`, `overall-internal` or `external`");
       }
       return Optional.empty();

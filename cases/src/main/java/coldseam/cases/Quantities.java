@@ -68,7 +68,7 @@ final class Quantities {
   /** What was typed, with what it comes to if it is an expression. */
   private String typed(Node node, double number, Place place) {
     String text = node instanceof Node.Scalar scalar ? scalar.text().strip() : "";
-    if (PlainNumber.is(text)) {
+    if (!calculated(text)) {
       return text;
     }
     boolean length = place.dimension().same(Dimension.LENGTH);
@@ -79,6 +79,21 @@ final class Quantities {
         + "` comes to "
         + Figures.of(shown)
         + (in.isEmpty() ? "" : " " + in);
+  }
+
+  /** Whether a text is more than a number with its unit. */
+  private boolean calculated(String text) {
+    for (int i = 0; i < text.length(); i++) {
+      char c = text.charAt(i);
+      boolean sign = c == '-' && i > 0 && text.charAt(i - 1) != 'R';
+      if (c == '+' || c == '*' || c == '^' || c == '(' || sign) {
+        return true;
+      }
+      if (Character.isLetter(c) && values.startsAt(text, i)) {
+        return true;
+      }
+    }
+    return false;
   }
 
   /**

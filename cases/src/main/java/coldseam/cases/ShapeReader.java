@@ -49,7 +49,7 @@ final class ShapeReader {
       problems.add(
           node,
           "a box is four numbers, not " + Quantities.counted(node),
-          "write `[x1, y1, x2, y2]`, two opposite corners");
+          "write `[x1, y1, x2, y2]`, two opposite corners, with decimal points, not commas");
       return Optional.empty();
     }
     String[] names = {"`x1` of the box", "`y1` of the box", "`x2` of the box", "`y2` of the box"};

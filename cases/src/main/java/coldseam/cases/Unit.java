@@ -19,9 +19,9 @@ record Unit(double factor, double offset, Dimension dimension, int end) {
   private static final double BTU_J = 1055.05585262;
   private static final double HOUR_S = 3600;
 
-  /** Which words mean something else than a unit. */
+  /** Tells where something else than a unit stands. */
   interface Names {
-    boolean named(String word);
+    boolean named(String text, int at);
   }
 
   /**
@@ -57,7 +57,7 @@ record Unit(double factor, double offset, Dimension dimension, int end) {
       boolean explicit = false;
       while (true) {
         Unit atom = atomAt(at);
-        if (atom == null || (explicit && names.named(wordAt(at)))) {
+        if (atom == null || (explicit && names.named(text, at))) {
           return best;
         }
         at = multiply(atom, sign);
@@ -124,15 +124,6 @@ record Unit(double factor, double offset, Dimension dimension, int end) {
         i++;
       }
       return i;
-    }
-
-    private String wordAt(int at) {
-      int end = at;
-      while (end < text.length()
-          && (Character.isLetterOrDigit(text.charAt(end)) || text.charAt(end) == '_')) {
-        end++;
-      }
-      return text.substring(at, end);
     }
 
     /** The atom at a place without its power, or null. */
