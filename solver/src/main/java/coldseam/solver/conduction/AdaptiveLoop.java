@@ -1,11 +1,11 @@
 package coldseam.solver.conduction;
 
 import coldseam.mesh.partition.Partition;
+import coldseam.mesh.refinement.NewestVertexBisection;
 import coldseam.mesh.triangulation.Mesh;
 import coldseam.solver.detail.Accuracy;
 import coldseam.solver.detail.Conditions;
 import java.util.Arrays;
-import java.util.BitSet;
 import java.util.concurrent.CancellationException;
 
 /** Solve, estimate, mark, refine, until what is asked is met. */
@@ -27,6 +27,15 @@ final class AdaptiveLoop {
 
   /** What splitting leaves of a triangle's indicator, cautiously. */
   private static final double LEFT_BY_SPLITTING = 0.2;
+
+  /** The error aimed at by a pass over what it may be. */
+  private static final double AIM = 0.7;
+
+  /** The coarsest mesh is refined until it has so many triangles. */
+  private static final int FEWEST_TRIANGLES = 64;
+
+  /** Temperatures in triangles smaller than this part of the section are left alone. */
+  private static final double SMALLEST = 1e-6;
 
   /** The loop ends after this many passes whatever is reached. */
   private static final int MOST_PASSES = 60;
@@ -62,15 +71,20 @@ final class AdaptiveLoop {
 
   FieldSolution run(Mesh start) {
     Mesh mesh = start;
+    while (mesh.triangleCount() < FEWEST_TRIANGLES) {
+      mesh = NewestVertexBisection.refineAll(mesh).mesh();
+    }
+    Marking marking = new Marking(mesh);
     while (true) {
       solve(mesh);
-      BitSet besides = new BitSet(mesh.triangleCount());
-      double reached = Math.max(energyRatio(), Math.max(jumpRatio(), surfaceRatio(besides)));
+      double[] excess = new double[mesh.triangleCount()];
+      double energy = Math.max(energyRatio(), jumpRatio());
+      double reached = Math.max(energy, Math.max(temperatureRatio(excess), surfaceRatio(excess)));
       tell(reached);
       if (reached <= 1 || history.passes() >= MOST_PASSES) {
         break;
       }
-      Mesh finer = Marking.refine(mesh, wishes(), part(reached), besides);
+      Mesh finer = marking.refine(wishes(), part(energy), excess);
       if (finer == mesh
           || finer.vertexCount() + finer.sideCount() > goal.accuracy().mostUnknowns()) {
         break;
@@ -184,14 +198,38 @@ final class AdaptiveLoop {
     return wishes;
   }
 
-  /** The part to be split so that the last pass does not overshoot by much. */
-  private double part(double reached) {
-    double enough = (1 - 0.7 / reached) / (1 - LEFT_BY_SPLITTING);
-    return Math.min(BULK, Math.max(0.3, enough));
+  /** The part to be split so that the last pass does not overshoot by much; 0 for none. */
+  private static double part(double ratio) {
+    return Math.min(BULK, Math.max(0, (1 - AIM / ratio) / (1 - LEFT_BY_SPLITTING)));
   }
 
-  /** How unsteady the coldest and warmest points are, and the triangles around them. */
-  private double surfaceRatio(BitSet around) {
+  /**
+   * Local temperature errors over what they may be, in every field of finite energy and every
+   * triangle not too small to matter.
+   */
+  private double temperatureRatio(double[] excess) {
+    double worst = 0;
+    double smallest = SMALLEST * SMALLEST * d.extentSquared;
+    for (int f = 0; f < d.spaces; f++) {
+      double[] amplitude = indicator.amplitude[f];
+      if (amplitude == null || infinite(f)) {
+        continue;
+      }
+      for (int t = 0; t < excess.length; t++) {
+        double over = amplitude[t] / STEADY;
+        if (over > worst && d.mesh.area(t) > smallest) {
+          worst = over;
+        }
+        if (over > 1 && d.mesh.area(t) > smallest) {
+          excess[t] = Math.max(excess[t], over * over);
+        }
+      }
+    }
+    return worst;
+  }
+
+  /** How much the coldest and warmest points still move, over what they may. */
+  private double surfaceRatio(double[] excess) {
     if (!goal.surfaceTemperatures()) {
       return 0;
     }
@@ -200,50 +238,10 @@ final class AdaptiveLoop {
     double high = Arrays.stream(temperatures).max().orElse(0);
     SurfaceExtremes before = extremes;
     extremes = new SurfaceExtremes(d, FieldSolution.nodal(d, fields, temperatures));
-    if (!(high > low)) {
+    if (before == null || !(high > low)) {
       return 0;
     }
-    double may = STEADY * (high - low);
-    double worst = before == null ? 0 : extremes.change(before) / may;
-    for (int i = 0; i < d.spaces; i++) {
-      worst = Math.max(worst, around(extremes.coldestSide[i], temperatures, may, around));
-      worst = Math.max(worst, around(extremes.warmestSide[i], temperatures, may, around));
-    }
-    return worst;
-  }
-
-  private double around(int side, double[] temperatures, double may, BitSet around) {
-    if (side < 0) {
-      return 0;
-    }
-    double worst = 0;
-    int start = d.outline.start[side];
-    int end = d.outline.end[side];
-    for (int t = 0; t < d.mesh.triangleCount(); t++) {
-      boolean near = false;
-      for (int k = 0; k < 3; k++) {
-        near |= d.mesh.vertex(t, k) == start || d.mesh.vertex(t, k) == end;
-      }
-      if (near) {
-        double error = localError(t, temperatures);
-        worst = Math.max(worst, error / may);
-        if (error > may / 4) {
-          around.set(t);
-        }
-      }
-    }
-    return worst;
-  }
-
-  private double localError(int t, double[] temperatures) {
-    double sum = 0;
-    for (int i = 0; i < d.spaces; i++) {
-      if (indicator.amplitude[i] != null) {
-        double reference = temperatures[d.spaces - 1];
-        sum += indicator.amplitude[i][t] * Math.abs(temperatures[i] - reference);
-      }
-    }
-    return sum + (d.hasFlow ? indicator.amplitude[d.spaces][t] : 0);
+    return extremes.change(before) / (STEADY * (high - low));
   }
 
   private void tell(double reached) {
