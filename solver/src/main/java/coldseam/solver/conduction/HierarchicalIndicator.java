@@ -1,34 +1,48 @@
 package coldseam.solver.conduction;
 
-import coldseam.mesh.triangulation.Mesh;
+import coldseam.solver.algebra.SymmetricSystem;
 import coldseam.solver.detail.Conditions;
+import java.util.Arrays;
 
 /**
- * How much energy each triangle still lacks, from a local problem in the quartic polynomials that
- * vanish at its six nodes (Bank and Weiser 1985). Loads are the residual inside, what is missing at
- * films and given flows, and jumps of the flux across sides. A jump is divided between the two
- * triangles in the ratio of their stiffness across the side: flux is better known on the yielding
- * side, whether it yields by its conductivity or by its shape. It steers refinement; it is no
- * bound.
+ * How much energy each triangle still lacks: the error is sought among the polynomials of higher
+ * degree that vanish at the nodes (Zienkiewicz, Gago and Kelly 1983; Bank and Smith 1993). The
+ * cubics, one for each side and one inside each triangle, are solved for together: across a foil or
+ * a jump of conductivity their couplings are too strong for problems of single triangles. The
+ * quartics, one for each side, see what cubics miss by symmetry and are taken one by one. It steers
+ * refinement; it is no bound.
  */
 final class HierarchicalIndicator {
-  /** Local unknowns: a cubic and a quartic for each side, three quartics inside. */
-  private static final int SIZE = 9;
+  /** Local cubics: L_a L_b (L_a − L_b) of the three sides, and L_0 L_1 L_2. */
+  private static final int SIZE = 4;
 
-  /** −∂/∂G_k of the local matrix, from an exact rule; SIZE × SIZE for each side k. */
-  private static final double[][] REFERENCE = reference();
+  /** −∂/∂G_k of the matrix of the cubics, SIZE × SIZE for each side k. */
+  private static final double[][] CUBICS = new double[3][SIZE * SIZE];
+
+  /** −∂/∂G_k of the energy of L_a L_b (L_a − L_b)² for each side. */
+  private static final double[][] QUARTICS = new double[3][3];
+
+  static {
+    integrateReference();
+  }
+
+  /** The largest value of s(1−s)(1−2s). */
+  private static final double CUBIC_PEAK = 0.0962;
+
+  /** The largest value of s(1−s)(1−2s)². */
+  private static final double QUARTIC_PEAK = 0.0625;
 
   private final Discretisation d;
-  private final double[][] fields;
-  private final double[][] sideFluxes;
+  private final int[] unknown;
+  private final double[] sideStiffness;
   private final double[] matrix = new double[SIZE * SIZE];
-  private final double[] load = new double[SIZE];
-  private final double[] error = new double[SIZE];
+  private final double[] local = new double[SIZE];
+  private final double[] derivatives = new double[9];
 
   /** Energy lacking by field and triangle. */
   final double[][] energy;
 
-  /** Largest local error on a side by field and triangle, in units of the field. */
+  /** Largest error seen on the sides of each triangle by field, in units of the field. */
   final double[][] amplitude;
 
   /**
@@ -40,186 +54,197 @@ final class HierarchicalIndicator {
    */
   HierarchicalIndicator(Discretisation d, double[][] fields, boolean[] wanted) {
     this.d = d;
-    this.fields = fields;
-    sideFluxes = new double[fields.length][];
     energy = new double[fields.length][];
     amplitude = new double[fields.length][];
+    unknown = new int[d.mesh.sideCount()];
+    sideStiffness = new double[d.mesh.sideCount()];
+    SymmetricSystem system = assemble(numberSides());
     for (int f = 0; f < fields.length; f++) {
       if (wanted[f]) {
-        energy[f] = new double[d.mesh.triangleCount()];
-        amplitude[f] = new double[d.mesh.triangleCount()];
-        sideFluxes[f] = sideFluxes(fields[f]);
+        estimate(system, fields[f], f);
       }
     }
+  }
+
+  /** Numbers the sides whose middle is free, in the order in which their middles are eliminated. */
+  private int numberSides() {
+    int[] sideAt = new int[d.unknowns];
+    Arrays.fill(sideAt, -1);
+    for (int s = 0; s < unknown.length; s++) {
+      unknown[s] = -1;
+      int place = d.unknown[d.mesh.vertexCount() + s];
+      if (place >= 0) {
+        sideAt[place] = s;
+      }
+    }
+    int count = 0;
+    for (int s : sideAt) {
+      if (s >= 0) {
+        unknown[s] = count++;
+      }
+    }
+    return count;
+  }
+
+  /** The matrix of the side cubics; those inside the triangles are eliminated first. */
+  private SymmetricSystem assemble(int unknowns) {
+    int capacity = 6 * d.mesh.triangleCount() + d.outline.count;
+    int[] rows = new int[capacity];
+    int[] columns = new int[capacity];
+    double[] values = new double[capacity];
+    int count = 0;
     for (int t = 0; t < d.mesh.triangleCount(); t++) {
-      factor(t);
-      for (int f = 0; f < fields.length; f++) {
-        if (wanted[f]) {
-          solve(t, f);
+      localMatrix(t);
+      double inside = matrix[SIZE * SIZE - 1];
+      for (int p = 0; p < 3; p++) {
+        int row = unknown[d.mesh.side(t, p)];
+        for (int q = 0; q <= p && row >= 0; q++) {
+          int column = unknown[d.mesh.side(t, q)];
+          if (column >= 0) {
+            rows[count] = row;
+            columns[count] = column;
+            values[count++] =
+                sign(t, p)
+                    * sign(t, q)
+                    * (matrix[p * SIZE + q] - matrix[p * SIZE + 3] * matrix[q * SIZE + 3] / inside);
+          }
         }
+        sideStiffness[d.mesh.side(t, p)] += quartic(t, p);
       }
     }
-  }
-
-  /** Outward flux times length at both ends of every side: 6t + 2k at corner k+1, then k+2. */
-  private double[] sideFluxes(double[] u) {
-    double[] fluxes = new double[6 * d.mesh.triangleCount()];
-    double[] derivatives = new double[9];
-    for (int t = 0; t < d.mesh.triangleCount(); t++) {
-      QuadraticElement.derivativesAtCorners(d.nodes, t, u, derivatives);
-      for (int k = 0; k < 3; k++) {
-        int a = k == 2 ? 0 : k + 1;
-        int b = k == 0 ? 2 : k - 1;
-        fluxes[6 * t + 2 * k] = QuadraticElement.sideFlux(d.couplings, t, k, a, derivatives);
-        fluxes[6 * t + 2 * k + 1] = QuadraticElement.sideFlux(d.couplings, t, k, b, derivatives);
+    Outline o = d.outline;
+    for (int s = 0; s < o.count; s++) {
+      int side = o.middle[s] - d.mesh.vertexCount();
+      if (o.kind[s] == Conditions.Kind.FILM) {
+        rows[count] = unknown[side];
+        columns[count] = unknown[side];
+        values[count++] = o.lengthM[s] / o.filmM2KPerW[s] / 210;
+        sideStiffness[side] += o.lengthM[s] / o.filmM2KPerW[s] / 630;
       }
     }
-    return fluxes;
+    return unknowns == 0 ? null : SymmetricSystem.factor(unknowns, rows, columns, values, count);
   }
 
-  /** Assembles the local matrix and replaces it by its Cholesky factor. */
-  private void factor(int t) {
+  private void localMatrix(int t) {
     double g0 = -d.couplings[3 * t];
     double g1 = -d.couplings[3 * t + 1];
     double g2 = -d.couplings[3 * t + 2];
     for (int i = 0; i < matrix.length; i++) {
-      matrix[i] = g0 * REFERENCE[0][i] + g1 * REFERENCE[1][i] + g2 * REFERENCE[2][i];
+      matrix[i] = g0 * CUBICS[0][i] + g1 * CUBICS[1][i] + g2 * CUBICS[2][i];
     }
+  }
+
+  private double quartic(int t, int k) {
+    return -d.couplings[3 * t] * QUARTICS[0][k]
+        - d.couplings[3 * t + 1] * QUARTICS[1][k]
+        - d.couplings[3 * t + 2] * QUARTICS[2][k];
+  }
+
+  /** A side's cubic is positive near its lower-numbered end. */
+  private int sign(int t, int k) {
+    return d.mesh.vertex(t, (k + 1) % 3) < d.mesh.vertex(t, (k + 2) % 3) ? 1 : -1;
+  }
+
+  private void estimate(SymmetricSystem system, double[] u, int field) {
+    int triangles = d.mesh.triangleCount();
+    double[] cubicLoad = new double[system == null ? 0 : system.unknowns()];
+    double[] quarticLoad = new double[d.mesh.sideCount()];
+    double[] source = new double[triangles];
+    for (int t = 0; t < triangles; t++) {
+      load(t, u, source, cubicLoad, quarticLoad);
+    }
+    outlineLoad(u, field, cubicLoad, quarticLoad);
+    double[] cubic = system == null ? cubicLoad : system.solve(cubicLoad).x();
+    double[] quartic = new double[quarticLoad.length];
+    for (int s = 0; s < quartic.length; s++) {
+      quartic[s] = unknown[s] < 0 ? 0 : quarticLoad[s] / sideStiffness[s];
+    }
+    energy[field] = new double[triangles];
+    amplitude[field] = new double[triangles];
+    for (int t = 0; t < triangles; t++) {
+      gather(t, field, source[t], cubic, quartic);
+    }
+    Outline o = d.outline;
+    for (int s = 0; s < o.count; s++) {
+      int side = o.middle[s] - d.mesh.vertexCount();
+      if (o.kind[s] == Conditions.Kind.FILM) {
+        double c = cubic[unknown[side]];
+        double q = quartic[side];
+        energy[field][o.triangle[s]] +=
+            o.lengthM[s] / o.filmM2KPerW[s] * (c * c / 210 + q * q / 630);
+      }
+    }
+  }
+
+  /** The residual of a triangle tested with its cubics (those inside eliminated) and quartics. */
+  private void load(int t, double[] u, double[] source, double[] cubicLoad, double[] quarticLoad) {
+    localMatrix(t);
+    QuadraticElement.derivativesAtCorners(d.nodes, t, u, derivatives);
+    source[t] = QuadraticElement.divergence(d.couplings, d.nodes, t, u);
     for (int k = 0; k < 3; k++) {
-      int s = d.outline.of(t, k);
-      if (s < 0) {
+      int side = d.mesh.side(t, k);
+      if (unknown[side] < 0) {
         continue;
       }
-      if (d.outline.kind[s] == Conditions.Kind.FILM) {
-        double conductance = d.outline.lengthM[s] / d.outline.filmM2KPerW[s];
-        matrix[(2 * k) * (SIZE + 1)] += conductance / 210;
-        matrix[(2 * k + 1) * (SIZE + 1)] += conductance / 630;
-      } else if (d.outline.kind[s] == Conditions.Kind.FIXED) {
-        tie(2 * k);
-        tie(2 * k + 1);
-      }
+      double first = QuadraticElement.sideFlux(d.couplings, t, k, (k + 1) % 3, derivatives);
+      double last = QuadraticElement.sideFlux(d.couplings, t, k, (k + 2) % 3, derivatives);
+      double inside = matrix[k * SIZE + 3] / matrix[SIZE * SIZE - 1] * source[t] / 60;
+      cubicLoad[unknown[side]] -= sign(t, k) * ((first - last) / 60 + inside);
+      quarticLoad[side] += source[t] / 90 - (first + last) / 60;
     }
-    for (int j = 0; j < SIZE; j++) {
-      for (int i = j; i < SIZE; i++) {
-        double sum = matrix[i * SIZE + j];
-        for (int m = 0; m < j; m++) {
-          sum -= matrix[i * SIZE + m] * matrix[j * SIZE + m];
-        }
-        matrix[i * SIZE + j] = i == j ? Math.sqrt(sum) : sum / matrix[j * SIZE + j];
+  }
+
+  private void outlineLoad(double[] u, int field, double[] cubicLoad, double[] quarticLoad) {
+    Outline o = d.outline;
+    for (int s = 0; s < o.count; s++) {
+      int side = o.middle[s] - d.mesh.vertexCount();
+      if (o.kind[s] == Conditions.Kind.FILM) {
+        double conductance = o.lengthM[s] / o.filmM2KPerW[s];
+        double ambient = o.space[s] == field ? 1 : 0;
+        double first = ambient - u[o.start[s]];
+        double middle = ambient - u[o.middle[s]];
+        double last = ambient - u[o.end[s]];
+        int sign = o.start[s] < o.end[s] ? 1 : -1;
+        cubicLoad[unknown[side]] += sign * conductance * (first - last) / 60;
+        quarticLoad[side] += conductance * (middle / 30 + ((first + last) / 2 - middle) / 70);
+      } else if (o.kind[s] == Conditions.Kind.FLOW && field == d.spaces) {
+        quarticLoad[side] += o.lengthM[s] * o.flowWPerM2[s] / 30;
       }
     }
   }
 
-  private void tie(int i) {
-    for (int j = 0; j < SIZE; j++) {
-      matrix[i * SIZE + j] = 0;
-      matrix[j * SIZE + i] = 0;
-    }
-    matrix[i * (SIZE + 1)] = 1;
-  }
-
-  private void solve(int t, int f) {
-    double source = QuadraticElement.divergence(d.couplings, d.nodes, t, fields[f]);
-    for (int k = 0; k < 3; k++) {
-      sideLoad(t, k, f);
-      load[2 * k + 1] += source / 90;
-      load[6 + k] = source / 180;
-    }
-    for (int k = 0; k < 3; k++) {
-      int s = d.outline.of(t, k);
-      if (s >= 0 && d.outline.kind[s] == Conditions.Kind.FIXED) {
-        load[2 * k] = 0;
-        load[2 * k + 1] = 0;
-      }
-    }
+  private void gather(int t, int field, double source, double[] cubic, double[] quartic) {
+    localMatrix(t);
+    double inside = source / 60;
     double lacking = 0;
-    for (int i = 0; i < SIZE; i++) {
-      double sum = load[i];
-      for (int m = 0; m < i; m++) {
-        sum -= matrix[i * SIZE + m] * error[m];
-      }
-      error[i] = sum / matrix[i * (SIZE + 1)];
-      lacking += error[i] * error[i];
-    }
-    for (int i = SIZE - 1; i >= 0; i--) {
-      double sum = error[i];
-      for (int m = i + 1; m < SIZE; m++) {
-        sum -= matrix[m * SIZE + i] * error[m];
-      }
-      error[i] = sum / matrix[i * (SIZE + 1)];
-    }
-    energy[f][t] = lacking;
     double most = 0;
     for (int k = 0; k < 3; k++) {
-      // the largest values of s(1-s)(1-2s) and s(1-s)(1-2s)²
-      most = Math.max(most, Math.abs(error[2 * k]) / 10.4 + Math.abs(error[2 * k + 1]) / 16);
+      int side = d.mesh.side(t, k);
+      local[k] = unknown[side] < 0 ? 0 : sign(t, k) * cubic[unknown[side]];
+      inside -= matrix[k * SIZE + 3] * local[k];
+      lacking += quartic(t, k) * quartic[side] * quartic[side];
+      most =
+          Math.max(most, Math.abs(local[k]) * CUBIC_PEAK + Math.abs(quartic[side]) * QUARTIC_PEAK);
     }
-    amplitude[f][t] = most;
-  }
-
-  /** Tests the missing flux of a side, a quadratic, with the side's cubic and quartic. */
-  private void sideLoad(int t, int k, int f) {
-    double[] own = sideFluxes[f];
-    int at = 6 * t + 2 * k;
-    double first = -own[at];
-    double last = -own[at + 1];
-    double middle = (first + last) / 2;
-    int other = d.mesh.neighbour(t, k);
-    if (other != Mesh.NONE) {
-      int back = sideOf(other, t);
-      double share = stiffness(t, k);
-      share /= share + stiffness(other, back);
-      first = share * (first - own[6 * other + 2 * back + 1]);
-      last = share * (last - own[6 * other + 2 * back]);
-      middle = (first + last) / 2;
-    } else {
-      int s = d.outline.of(t, k);
-      if (s >= 0 && d.outline.kind[s] == Conditions.Kind.FILM) {
-        double[] u = fields[f];
-        double conductance = d.outline.lengthM[s] / d.outline.filmM2KPerW[s];
-        double ambient = f == d.outline.space[s] ? 1 : 0;
-        first += conductance * (ambient - u[d.outline.start[s]]);
-        middle += conductance * (ambient - u[d.outline.middle[s]]);
-        last += conductance * (ambient - u[d.outline.end[s]]);
-      } else if (s >= 0 && d.outline.kind[s] == Conditions.Kind.FLOW && f == d.spaces) {
-        double flow = d.outline.lengthM[s] * d.outline.flowWPerM2[s];
-        first += flow;
-        middle += flow;
-        last += flow;
+    local[3] = inside / matrix[SIZE * SIZE - 1];
+    for (int p = 0; p < SIZE; p++) {
+      for (int q = 0; q < SIZE; q++) {
+        lacking += matrix[p * SIZE + q] * local[p] * local[q];
       }
     }
-    load[2 * k] = (first - last) / 60;
-    load[2 * k + 1] = middle / 30 + ((first + last) / 2 - middle) / 70;
+    energy[field][t] = lacking;
+    amplitude[field][t] = most;
   }
 
-  private int sideOf(int t, int neighbour) {
-    int k = 0;
-    while (d.mesh.neighbour(t, k) != neighbour) {
-      k++;
-    }
-    return k;
-  }
-
-  /**
-   * How stiffly a triangle answers to a flux through a side: λ over the smaller of height, side.
-   */
-  private double stiffness(int t, int k) {
-    double g0 = d.couplings[3 * t];
-    double g1 = d.couplings[3 * t + 1];
-    double g2 = d.couplings[3 * t + 2];
-    double across = 2 * (d.couplings[3 * t + k] - g0 - g1 - g2);
-    return Math.max(QuadraticElement.conductivity(d.couplings, t), across);
-  }
-
-  private static double[][] reference() {
+  /** Integrates the products of derivatives along the sides by a rule exact to degree 6. */
+  private static void integrateReference() {
     double[] points = {
       0.06943184420297371, 0.33000947820757187, 0.6699905217924281, 0.9305681557970263
     };
     double[] weights = {
       0.17392742256872693, 0.32607257743127307, 0.32607257743127307, 0.17392742256872693
     };
-    double[][] sums = new double[3][SIZE * SIZE];
-    double[][] derivative = new double[SIZE][3];
+    double[][] derivative = new double[7][3];
     for (int i = 0; i < points.length; i++) {
       for (int j = 0; j < points.length; j++) {
         double l0 = points[i];
@@ -229,35 +254,36 @@ final class HierarchicalIndicator {
         for (int k = 0; k < 3; k++) {
           for (int p = 0; p < SIZE; p++) {
             for (int q = 0; q < SIZE; q++) {
-              sums[k][p * SIZE + q] += weight * along(derivative[p], k) * along(derivative[q], k);
+              CUBICS[k][p * SIZE + q] += weight * along(derivative[p], k) * along(derivative[q], k);
             }
+          }
+          for (int m = 0; m < 3; m++) {
+            double along = along(derivative[SIZE + m], k);
+            QUARTICS[k][m] += weight * along * along;
           }
         }
       }
     }
-    return sums;
   }
 
   private static double along(double[] derivative, int k) {
     return derivative[(k + 2) % 3] - derivative[(k + 1) % 3];
   }
 
-  /** ∂/∂L_i of the local functions. */
+  /** ∂/∂L_i of the side cubics, the cubic inside, the side quartics. */
   private static void barycentricDerivatives(double[] l, double[][] out) {
     for (int k = 0; k < 3; k++) {
       int a = (k + 1) % 3;
       int b = (k + 2) % 3;
       double t = l[a] - l[b];
       double ab = l[a] * l[b];
-      out[2 * k][k] = 0;
-      out[2 * k][a] = l[b] * t + ab;
-      out[2 * k][b] = l[a] * t - ab;
-      out[2 * k + 1][k] = 0;
-      out[2 * k + 1][a] = l[b] * t * t + 2 * ab * t;
-      out[2 * k + 1][b] = l[a] * t * t - 2 * ab * t;
-      out[6 + k][k] = 2 * l[k] * ab;
-      out[6 + k][a] = l[k] * l[k] * l[b];
-      out[6 + k][b] = l[k] * l[k] * l[a];
+      out[k][k] = 0;
+      out[k][a] = l[b] * t + ab;
+      out[k][b] = l[a] * t - ab;
+      out[3][k] = ab;
+      out[SIZE + k][k] = 0;
+      out[SIZE + k][a] = l[b] * t * t + 2 * ab * t;
+      out[SIZE + k][b] = l[a] * t * t - 2 * ab * t;
     }
   }
 }

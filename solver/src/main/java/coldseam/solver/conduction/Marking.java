@@ -12,13 +12,16 @@ import java.util.BitSet;
  */
 final class Marking {
   /** No triangle is split in more than this many rounds at once. */
-  private static final int MOST_ROUNDS = 4;
+  private static final int MOST_ROUNDS = 8;
 
   /** What a part that still touches a singular corner keeps. */
   private static final double KEPT_AT_CORNERS = 0.4;
 
   /** Lacking more than this many times what a smooth field would tells a singular corner. */
   private static final double SINGULAR = 8;
+
+  /** Excess that later rounds aim at. */
+  private static final double ENOUGH = 0.5;
 
   private Mesh mesh;
   private BitSet corners;
@@ -45,7 +48,7 @@ final class Marking {
   Mesh refine(double[] lacking, double part, double[] excess) {
     BitSet singular = new BitSet(lacking.length);
     for (int t = 0; t < lacking.length; t++) {
-      singular.set(t, expected == null || lacking[t] > SINGULAR * expected[t]);
+      singular.set(t, expected != null && lacking[t] > SINGULAR * expected[t]);
     }
     double threshold = threshold(lacking, part);
     double[] sizes = lacking;
@@ -53,7 +56,7 @@ final class Marking {
     for (int round = 0; round < MOST_ROUNDS; round++) {
       BitSet marked = new BitSet(sizes.length);
       for (int t = 0; t < sizes.length; t++) {
-        marked.set(t, sizes[t] >= threshold || others[t] > 1);
+        marked.set(t, sizes[t] >= threshold || others[t] > (round == 0 ? 1 : ENOUGH));
       }
       NewestVertexBisection.Refined next = NewestVertexBisection.refine(mesh, marked);
       if (next.mesh() == mesh) {
