@@ -126,15 +126,15 @@ class JunctionsTest {
     assertThat(space(result, "outdoors").heatFlowWPerM()).isCloseTo(-18.29469, within(4e-3));
     assertThat(space(result, "a").heatFlowWPerM()).isCloseTo(28.18897, within(6e-3));
     assertThat(space(result, "b").heatFlowWPerM()).isCloseTo(-9.89429, within(3e-3));
-    assertThat(point(result, "corner a")).isCloseTo(17.85127, within(4e-3));
-    assertThat(point(result, "corner b")).isCloseTo(15.67579, within(4e-3));
+    assertThat(point(result, "corner a")).isCloseTo(17.85127, within(8e-3));
+    assertThat(point(result, "corner b")).isCloseTo(15.67579, within(8e-3));
     Map<String, Double> g = new java.util.HashMap<>();
     result.weights().stream()
         .filter(w -> w.point().equals("corner a"))
         .forEach(w -> g.put(w.space(), w.g()));
-    assertThat(g.get("outdoors")).isCloseTo(0.0420841, within(2e-4));
-    assertThat(g.get("a")).isCloseTo(0.696506, within(2e-4));
-    assertThat(g.get("b")).isCloseTo(0.261410, within(2e-4));
+    assertThat(g.get("outdoors")).isCloseTo(0.0420841, within(4e-4));
+    assertThat(g.get("a")).isCloseTo(0.696506, within(4e-4));
+    assertThat(g.get("b")).isCloseTo(0.261410, within(4e-4));
     assertThat(g.values().stream().mapToDouble(x -> x).sum()).isCloseTo(1, within(1e-9));
 
     assertThat(psi(result, "internal").couplingWPerMK().value()).isCloseTo(1.0454106, within(3e-4));
@@ -322,7 +322,7 @@ class JunctionsTest {
         .isCloseTo(1.346202, within(0.0002 * 1.346202));
     assertThat(psiValue(result, "internal")).isCloseTo(0.243759, within(5e-4));
     assertThat(psiValue(result, "external")).isCloseTo(0.134188, within(5e-4));
-    assertThat(point(result, "corner") / 20).isCloseTo(0.838506, within(4e-4));
+    assertThat(point(result, "corner") / 20).isCloseTo(0.838506, within(8e-4));
     Result.SurfacePoint coldest = space(result, "indoors").coldest().orElseThrow();
     assertThat(coldest.fRsi().orElseThrow()).isCloseTo(0.788359, within(4e-4));
     assertThat(coldest.at().distance(new Point(0, 0))).isLessThan(1e-9);

@@ -156,23 +156,7 @@ final class DetailCheck {
     List<Space> spaces = detail.spaces();
     int[] group = singles(spaces.size());
     for (int i = 0; i < spaces.size(); i++) {
-      Optional<Space.Floating> floating = spaces.get(i).floating();
-      if (floating.isEmpty() || floating.get().conductanceWPerMK() == 0) {
-        continue;
-      }
-      int to = detail.spaceIndex(floating.get().to());
-      if (to < 0 || to == i) {
-        faults.add(
-            new Fault(
-                "space",
-                spaces.get(i).name(),
-                "its conductance leads to '"
-                    + floating.get().to()
-                    + "', which is not another of the spaces",
-                Optional.empty()));
-      } else {
-        join(group, i, to);
-      }
+      joinByConductance(group, i, faults);
     }
     joinAcrossSection(group, part);
     BitSet anchored = new BitSet();
@@ -192,6 +176,26 @@ final class DetailCheck {
       }
     }
     return faults;
+  }
+
+  private void joinByConductance(int[] group, int space, List<Fault> faults) {
+    Optional<Space.Floating> floating = detail.spaces().get(space).floating();
+    if (floating.isEmpty() || floating.get().conductanceWPerMK() == 0) {
+      return;
+    }
+    int to = detail.spaceIndex(floating.get().to());
+    if (to >= 0 && to != space) {
+      join(group, space, to);
+      return;
+    }
+    faults.add(
+        new Fault(
+            "space",
+            detail.spaces().get(space).name(),
+            "its conductance leads to '"
+                + floating.get().to()
+                + "', which is not another of the spaces",
+            Optional.empty()));
   }
 
   private void joinAcrossSection(int[] group, int[] part) {
