@@ -36,6 +36,32 @@ final class AccuracyOption {
     return accuracy;
   }
 
+  /**
+   * Limits the size of the solve.
+   *
+   * @param base what holds otherwise
+   * @param typed the value of {@code --most-unknowns}
+   * @return the accuracy asked for
+   * @throws UsageException if it cannot be read
+   */
+  static Accuracy limit(Accuracy base, String typed) throws UsageException {
+    int most = 0;
+    try {
+      most = Integer.parseInt(typed);
+    } catch (NumberFormatException e) {
+      throw wrong("\"" + typed + "\" is no whole number; e.g. --most-unknowns 100000");
+    }
+    if (most <= 0) {
+      throw wrong("--most-unknowns is more than 0, not " + typed);
+    }
+    return new Accuracy(
+        base.couplingRelative(),
+        base.couplingWPerMK(),
+        base.psiWPerMK(),
+        base.transmittanceRelative(),
+        most);
+  }
+
   private static Accuracy with(Accuracy a, String name, String typed) throws UsageException {
     boolean share = typed.endsWith("%");
     double number = number(name, share ? typed.substring(0, typed.length() - 1).strip() : typed);

@@ -3,6 +3,7 @@ package coldseam.cli;
 import coldseam.cli.text.Digits;
 import coldseam.solver.conduction.Progress;
 import java.io.PrintStream;
+import java.util.Locale;
 
 /** One line on a terminal that tells how far a solve is, and goes away at its end. */
 final class ProgressLine implements Progress, AutoCloseable {
@@ -29,7 +30,7 @@ final class ProgressLine implements Progress, AutoCloseable {
         ERASE
             + subject
             + ": "
-            + stage
+            + stage.toLowerCase(Locale.ROOT).replace('_', ' ')
             + ", pass "
             + pass
             + ", "

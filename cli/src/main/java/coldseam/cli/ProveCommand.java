@@ -63,7 +63,7 @@ final class ProveCommand implements Command {
     cases = chosen(cases, typed.operands(), here);
     List<Proof> proofs = new ArrayList<>();
     Ink ink = here.outInk();
-    for (Case from : cases) {
+    for (Case from : withExpectations(cases, here)) {
       Proof proof = prove(from, here);
       proofs.add(proof);
       if (!typed.has(JSON)) {
@@ -75,7 +75,7 @@ final class ProveCommand implements Command {
     if (typed.has(JSON)) {
       here.out().println(json(proofs, count - failed, failed));
     } else {
-      String sum = cases.size() + " cases, " + (count - failed) + " passed, " + failed + " failed";
+      String sum = proofs.size() + " cases, " + (count - failed) + " passed, " + failed + " failed";
       here.out().println(failed == 0 ? ink.good(sum) : ink.bad(sum));
     }
     return failed == 0 ? ExitCode.DONE : ExitCode.NOT_MET;
@@ -151,11 +151,27 @@ final class ProveCommand implements Command {
     return chosen;
   }
 
-  private static Proof prove(Case from, Surroundings here) throws CaseException, UsageException {
-    String file = here.shown(from.file());
-    if (from.expectations().isEmpty()) {
-      throw new UsageException(NAME, file + " expects nothing; give it an expect: block");
+  /** A case without expectations proves nothing; it is told, and nothing else is refused. */
+  private static List<Case> withExpectations(List<Case> cases, Surroundings here)
+      throws UsageException {
+    List<Case> expecting = new ArrayList<>();
+    List<String> silent = new ArrayList<>();
+    for (Case from : cases) {
+      if (from.expectations().isEmpty()) {
+        silent.add(here.shown(from.file()) + " expects nothing");
+      } else {
+        expecting.add(from);
+      }
     }
+    if (expecting.isEmpty()) {
+      throw new UsageException(NAME, silent.get(0) + "; give it an expect: block");
+    }
+    silent.forEach(here.err()::println);
+    return expecting;
+  }
+
+  private static Proof prove(Case from, Surroundings here) throws CaseException {
+    String file = here.shown(from.file());
     Map<Optional<String>, Result> results = new LinkedHashMap<>();
     List<Expected> checks = new ArrayList<>();
     for (Expectation expectation : from.expectations()) {

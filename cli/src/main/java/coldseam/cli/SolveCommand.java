@@ -29,6 +29,7 @@ final class SolveCommand implements Command {
   private static final String PNG = "--png";
   private static final String NO_PLOTS = "--no-plots";
   private static final String ACCURACY = "--accuracy";
+  private static final String MOST_UNKNOWNS = "--most-unknowns";
   private static final String QUIET = "--quiet";
 
   private static final List<Plots.Kind> PLOTS =
@@ -63,6 +64,10 @@ final class SolveCommand implements Command {
                 ACCURACY,
                 "LIST",
                 "half-widths instead of those of the case, e.g." + " L2D=0.02%,psi=0.0002,U=0.1%"),
+            new Syntax.Option(
+                MOST_UNKNOWNS,
+                "N",
+                "stop refining at this size; ends with 3 if the accuracy is not reached by then"),
             new Syntax.Option(QUIET, "", "print no card; files are written all the same")),
         List.of(
             new Syntax.Example(
@@ -125,6 +130,9 @@ final class SolveCommand implements Command {
       Accuracy accuracy = from.accuracy();
       if (typed.has(ACCURACY)) {
         accuracy = AccuracyOption.read(accuracy, typed.value(ACCURACY));
+      }
+      if (typed.has(MOST_UNKNOWNS)) {
+        accuracy = AccuracyOption.limit(accuracy, typed.value(MOST_UNKNOWNS));
       }
       String shown = here.shown(from.file());
       for (Optional<String> variant : variants) {

@@ -5,16 +5,13 @@ import coldseam.cli.text.Ink;
 import coldseam.cli.text.Table;
 import coldseam.solver.Solver;
 import coldseam.solver.detail.Detail;
-import coldseam.solver.detail.DimensionSystem;
 import coldseam.solver.detail.Fill;
 import coldseam.solver.detail.Hollow;
 import coldseam.solver.detail.Material;
 import coldseam.solver.detail.Space;
 import coldseam.solver.detail.Wanted;
-import coldseam.solver.result.Result;
 import java.util.List;
 import java.util.Locale;
-import java.util.Map;
 
 /** What is understood of a case, for the terminal: nothing is solved. */
 final class InspectionCard {
@@ -38,7 +35,7 @@ final class InspectionCard {
     fills();
     spaces();
     outline();
-    flanks();
+    TextCard.flanks(text, inspection.flanks(), ink);
     wanted();
     TextCard.assumptions(text, inspection.assumptions(), ink);
     TextCard.warnings(text, inspection.warnings(), ink);
@@ -111,37 +108,13 @@ final class InspectionCard {
   }
 
   private void outline() {
-    TextCard.heading(text, ink, "Outline", "lengths in " + units.unit() + "; Rs in m²·K/W");
+    TextCard.heading(text, ink, "Outline", "lengths in " + units.unitInWords() + "; Rs in m²·K/W");
     Table table = new Table("lrl", 2, TextCard.PAGE);
     for (OutlinePart part : OutlinePart.of(inspection, detail)) {
       table.row(part.name(), units.length(part.lengthM()), ink.faint(part.films()));
     }
     for (OutlinePart part : OutlinePart.stretches(inspection, detail)) {
       table.row("stretch " + part.name(), units.length(part.lengthM()), "");
-    }
-    text.append(table.text());
-  }
-
-  private void flanks() {
-    if (inspection.flanks().isEmpty()) {
-      return;
-    }
-    TextCard.heading(
-        text, ink, "Flanks", "U in W/(m²·K), films included; layers from warm to cold, mm");
-    text.append(TextCard.flankTable(inspection.flanks(), ink).text());
-    Table table = new Table("llrl", 2, TextCard.PAGE);
-    for (Result.FlankResult flank : inspection.flanks()) {
-      for (DimensionSystem system : DimensionSystem.values()) {
-        Map<DimensionSystem, Result.Length> lengths = flank.lengthM();
-        if (lengths.containsKey(system)) {
-          Result.Length length = lengths.get(system);
-          table.row(
-              flank.name(),
-              Words.name(system),
-              Digits.fixed(length.valueM(), 4) + " m",
-              ink.faint(length.derivation()));
-        }
-      }
     }
     text.append(table.text());
   }
@@ -166,7 +139,12 @@ final class InspectionCard {
       } else if (wanted instanceof Wanted.Temperature point) {
         table.row(
             "point " + point.name(),
-            "at " + units.place(point.at()) + ", " + TextCard.films(point.filmSet()));
+            "at "
+                + units.place(point.at())
+                + " "
+                + units.unit()
+                + ", "
+                + TextCard.films(point.filmSet()));
       } else if (wanted instanceof Wanted.Profile profile) {
         table.row(
             "profile " + profile.name(),

@@ -19,7 +19,7 @@ import java.util.Map;
  */
 record OutlinePart(String name, double lengthM, String films) {
 
-  /** The outline by what holds on it, in the order met. */
+  /** The outline by what holds on it: by name in the order first met. */
   static List<OutlinePart> of(Solver.Inspection inspection, Detail detail) {
     Partition partition = inspection.partition();
     Conditions heatLoss = inspection.heatLoss();
@@ -60,7 +60,11 @@ record OutlinePart(String name, double lengthM, String films) {
       double sum = known == null ? length : known.lengthM + length;
       parts.put(key, new OutlinePart(name, sum, films));
     }
-    return new ArrayList<>(parts.values());
+    Map<String, List<OutlinePart>> byName = new LinkedHashMap<>();
+    for (OutlinePart part : parts.values()) {
+      byName.computeIfAbsent(part.name, n -> new ArrayList<>()).add(part);
+    }
+    return byName.values().stream().flatMap(List::stream).toList();
   }
 
   /** The named stretches with their lengths. */

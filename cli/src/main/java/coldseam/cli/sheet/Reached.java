@@ -15,7 +15,7 @@ record Reached(Accuracy asked) {
 
   boolean by(Result result) {
     for (Result.LinearTransmittance psi : result.psi()) {
-      if (exceeds(psi.valueWPerMK(), asked.psiWPerMK())) {
+      if (exceeds(psi.valueWPerMK(), asked.psiWPerMK() + stated(psi))) {
         return false;
       }
     }
@@ -31,6 +31,17 @@ record Reached(Accuracy asked) {
       }
     }
     return true;
+  }
+
+  /** What is uncertain of a ψ before anything is solved: U given or known only as a range. */
+  private static double stated(Result.LinearTransmittance psi) {
+    double sum = 0;
+    for (Result.Subtracted term : psi.subtracted()) {
+      if (term.uWPerM2K().isPresent()) {
+        sum += (term.valueWPerMK().upper() - term.valueWPerMK().lower()) / 2;
+      }
+    }
+    return sum;
   }
 
   /**

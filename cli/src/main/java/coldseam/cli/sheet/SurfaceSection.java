@@ -33,7 +33,11 @@ record SurfaceSection(Result result, Units units, Ink ink) {
     result.spaces().forEach(space -> space.referenceSpace().ifPresent(references::add));
     String factor =
         references.isEmpty() ? "" : "; f_Rsi relative to " + String.join(", ", references);
-    TextCard.heading(text, ink, "Surface temperatures", "estimates; Rs in m²·K/W" + factor);
+    TextCard.heading(
+        text,
+        ink,
+        "Surface temperatures",
+        "estimates; Rs in m²·K/W, places in " + units.unitInWords() + factor);
     text.append(table.text());
   }
 
@@ -52,8 +56,8 @@ record SurfaceSection(Result result, Units units, Ink ink) {
         which,
         ink.strong(temperature(point)),
         factor,
-        Words.name(point.filmSet()) + " films,",
-        "Rs " + Digits.shortest(point.filmM2KPerW(), 4),
+        "Rs " + Digits.shortest(point.filmM2KPerW(), 4) + ",",
+        Words.name(point.filmSet()) + " films",
         ink.faint("at " + units.place(point.at())));
   }
 
@@ -83,7 +87,7 @@ record SurfaceSection(Result result, Units units, Ink ink) {
     if (result.points().isEmpty()) {
       return;
     }
-    TextCard.heading(text, ink, "Points", "estimates");
+    TextCard.heading(text, ink, "Points", "estimates; places in " + units.unitInWords());
     Table table = new Table("lrll", 2, TextCard.PAGE);
     for (Result.PointResult point : result.points()) {
       table.row(

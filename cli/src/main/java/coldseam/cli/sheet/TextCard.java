@@ -5,16 +5,23 @@ import coldseam.cli.text.Ink;
 import coldseam.cli.text.Table;
 import coldseam.solver.conduction.Quantity;
 import coldseam.solver.detail.Assumption;
+import coldseam.solver.detail.DimensionSystem;
 import coldseam.solver.detail.FilmSet;
 import coldseam.solver.result.Result;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Locale;
+import java.util.Map;
 import java.util.Set;
 
 /** The result card on the terminal: numbers first, then what they rest on. */
 final class TextCard {
-  static final int PAGE = 92;
+  static final int PAGE = 96;
+
+  /** What a ψ is of unless the case says so: not worth a word. */
+  private static final String PLAIN = "junction";
 
   private final Subject subject;
   private final Result result;
@@ -35,7 +42,7 @@ final class TextCard {
     accounts();
     new FlowSection(result, units, ink).write(text);
     new SurfaceSection(result, units, ink).write(text);
-    flanks();
+    flanks(text, result.flanks(), ink);
     assumptions(text, result.assumptions(), ink);
     warnings(text, result.warnings(), ink);
     foot();
@@ -60,7 +67,8 @@ final class TextCard {
     heading(text, ink, "Result", "films for heat loss");
     Table table = new Table("llrrll", 2, PAGE);
     for (Result.LinearTransmittance psi : result.psi()) {
-      String of = psi.of().isEmpty() || psi.of().equals(psi.name()) ? "" : " of " + psi.of();
+      boolean plain = psi.of().isEmpty() || psi.of().equals(psi.name()) || psi.of().equals(PLAIN);
+      String of = plain ? "" : " of " + psi.of();
       number(
           table,
           "ψ " + psi.name() + of,
@@ -206,22 +214,18 @@ final class TextCard {
     if (term.lengthM().isPresent()) {
       words.append(" × ").append(Digits.fixed(term.lengthM().getAsDouble(), 4)).append(" m");
     }
-    if (!term.derivation().isEmpty()) {
+    if (term.uWPerM2K().isEmpty() && !term.derivation().isEmpty()) {
       words.append(words.length() == 0 ? "" : ": ").append(term.derivation());
     }
     return words.toString();
   }
 
-  private void flanks() {
-    if (result.flanks().isEmpty()) {
+  static void flanks(StringBuilder text, List<Result.FlankResult> flanks, Ink ink) {
+    if (flanks.isEmpty()) {
       return;
     }
-    heading(text, ink, "Flanks", "U in W/(m²·K), films included; layers from warm to cold, mm");
-    text.append(flankTable(result.flanks(), ink).text());
-  }
-
-  static Table flankTable(List<Result.FlankResult> flanks, Ink ink) {
-    Table table = new Table("llrl", 2, PAGE);
+    heading(text, ink, "Flanks", "U in W/(m²·K), films included; layers from warm to cold");
+    Table table = new Table("lrl", 2, PAGE);
     for (Result.FlankResult flank : flanks) {
       String u = Digits.fixed(flank.uWPerM2K().lower(), 4);
       if (flank.uWPerM2K().upper() > flank.uWPerM2K().lower()) {
@@ -229,11 +233,24 @@ final class TextCard {
       }
       table.row(
           flank.name(),
-          flank.warm() + " – " + flank.cold(),
-          u,
-          ink.faint(String.join(" | ", flank.layers())));
+          "U " + u,
+          flank.warm() + " – " + flank.cold() + ": " + String.join(" | ", flank.layers()));
+      StringBuilder lengths = new StringBuilder();
+      for (DimensionSystem system : DimensionSystem.values()) {
+        if (flank.lengthM().containsKey(system)) {
+          lengths
+              .append(lengths.length() == 0 ? "" : ", ")
+              .append(Words.name(system))
+              .append(' ')
+              .append(Digits.fixed(flank.lengthM().get(system).valueM(), 4))
+              .append(" m");
+        }
+      }
+      if (lengths.length() > 0) {
+        table.row("", "", lengths.toString());
+      }
     }
-    return table;
+    text.append(table.text());
   }
 
   static void assumptions(StringBuilder text, List<Assumption> assumptions, Ink ink) {
@@ -241,11 +258,17 @@ final class TextCard {
       return;
     }
     heading(text, ink, "Assumed", "");
-    Table table = new Table("lll", 2, PAGE);
+    Map<String, List<Assumption>> bySource = new LinkedHashMap<>();
     for (Assumption assumption : assumptions) {
-      table.row(assumption.what(), assumption.value(), ink.faint(assumption.source()));
+      bySource.computeIfAbsent(assumption.source(), s -> new ArrayList<>()).add(assumption);
     }
-    text.append(table.text());
+    for (Map.Entry<String, List<Assumption>> source : bySource.entrySet()) {
+      text.append("  ").append(ink.faint(source.getKey())).append('\n');
+      for (Assumption assumption : source.getValue()) {
+        String line = assumption.what() + ": " + assumption.value();
+        text.append("    ").append(Table.wrapped(line, PAGE - 4, "      ")).append('\n');
+      }
+    }
   }
 
   static void warnings(StringBuilder text, List<String> warnings, Ink ink) {

@@ -56,9 +56,14 @@ record Units(String unit, double metresPerUnit) {
     return kelvins / KELVINS_PER_FAHRENHEIT;
   }
 
-  /** A place in the drawing: {@code (0, 1200) mm}. */
+  /** The unit of the drawing where it stands alone. */
+  String unitInWords() {
+    return unit.equals("in") ? "inches" : unit;
+  }
+
+  /** A place in the drawing, in its unit: {@code (0, 1200)}. */
   String place(Point at) {
-    return "(" + length(at.x()) + ", " + length(at.y()) + ") " + unit;
+    return "(" + length(at.x()) + ", " + length(at.y()) + ")";
   }
 
   /** A length in the unit of the drawing, without the unit, to a tenth of a millimetre or finer. */

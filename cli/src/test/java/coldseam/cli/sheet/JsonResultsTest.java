@@ -65,7 +65,7 @@ class JsonResultsTest {
         .isEqualTo(0.0004);
     JsonNode subtracted = json.get("psi").get(0).get("subtracted").get(1);
     assertThat(subtracted.get("value_W_per_mK").doubleValue()).isEqualTo(0.16);
-    assertThat(subtracted.get("upper_W_per_mK").doubleValue()).isEqualTo(0.165);
+    assertThat(subtracted.get("upper_W_per_mK").doubleValue()).isEqualTo(0.16005);
     assertThat(json.get("U").get("value_W_per_m2K").doubleValue()).isEqualTo(0.2134);
     assertThat(json.get("points").get(0).get("at_mm").toString()).isEqualTo("[123.4,-500]");
   }

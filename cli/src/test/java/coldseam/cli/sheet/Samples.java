@@ -107,10 +107,10 @@ final class Samples {
                         "layers at the cut-off plane, outer face"),
                     new Result.Subtracted(
                         "floor",
-                        Optional.of(new Bracket(0.31, 0.33)),
+                        Optional.of(new Bracket(0.3199, 0.3201)),
                         OptionalDouble.of(1),
                         0.5,
-                        new Bracket(0.155, 0.165),
+                        new Bracket(0.15995, 0.16005),
                         "")),
                 List.of())),
         List.of(
