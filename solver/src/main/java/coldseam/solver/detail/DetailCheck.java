@@ -37,7 +37,9 @@ final class DetailCheck {
     }
     faults.addAll(spacesFacingNothing());
     faults.addAll(stretchesOffOutline());
-    faults.addAll(isolatedParts());
+    int[] part = edgeConnectedParts();
+    faults.addAll(isolatedParts(part));
+    faults.addAll(driftingSpaces(part));
     return faults;
   }
 
@@ -113,8 +115,7 @@ final class DetailCheck {
     return sum;
   }
 
-  private List<Fault> isolatedParts() {
-    int[] part = edgeConnectedParts();
+  private List<Fault> isolatedParts(int[] part) {
     BitSet held = new BitSet();
     Map<Integer, Set<String>> names = new TreeMap<>();
     for (int face = 0; face < partition.faceCount(); face++) {
@@ -126,9 +127,7 @@ final class DetailCheck {
     }
     for (int edge = 0; edge < partition.edgeCount(); edge++) {
       if (reading.kinds()[edge] == Kind.FILM || reading.kinds()[edge] == Kind.FIXED) {
-        int face =
-            reading.conductsLeft(edge) ? partition.leftFace(edge) : partition.rightFace(edge);
-        held.set(root(part, face));
+        held.set(root(part, conductingFace(edge)));
       }
     }
     List<Fault> faults = new ArrayList<>();
@@ -151,16 +150,90 @@ final class DetailCheck {
     return faults;
   }
 
-  private int[] edgeConnectedParts() {
-    int[] part = new int[partition.faceCount()];
-    for (int face = 0; face < part.length; face++) {
-      part[face] = face;
+  /** Floating spaces that no part of the section and no conductance connects with a stated one. */
+  private List<Fault> driftingSpaces(int[] part) {
+    List<Fault> faults = new ArrayList<>();
+    List<Space> spaces = detail.spaces();
+    int[] group = singles(spaces.size());
+    for (int i = 0; i < spaces.size(); i++) {
+      joinByConductance(group, i, faults);
     }
+    joinAcrossSection(group, part);
+    BitSet anchored = new BitSet();
+    for (int i = 0; i < spaces.size(); i++) {
+      if (spaces.get(i).floating().isEmpty()) {
+        anchored.set(root(group, i));
+      }
+    }
+    for (int i = 0; i < spaces.size(); i++) {
+      if (!anchored.get(root(group, i))) {
+        faults.add(
+            new Fault(
+                "space",
+                spaces.get(i).name(),
+                "floats, but nothing connects it with a space of stated temperature",
+                Optional.empty()));
+      }
+    }
+    return faults;
+  }
+
+  private void joinByConductance(int[] group, int space, List<Fault> faults) {
+    Optional<Space.Floating> floating = detail.spaces().get(space).floating();
+    if (floating.isEmpty() || floating.get().conductanceWPerMK() == 0) {
+      return;
+    }
+    int to = detail.spaceIndex(floating.get().to());
+    if (to >= 0 && to != space) {
+      join(group, space, to);
+      return;
+    }
+    faults.add(
+        new Fault(
+            "space",
+            detail.spaces().get(space).name(),
+            "its conductance leads to '"
+                + floating.get().to()
+                + "', which is not another of the spaces",
+            Optional.empty()));
+  }
+
+  private void joinAcrossSection(int[] group, int[] part) {
+    Map<Integer, Integer> firstSpace = new TreeMap<>();
+    for (int edge = 0; edge < partition.edgeCount(); edge++) {
+      int space = reading.spaces()[edge];
+      if (space >= 0) {
+        Integer first = firstSpace.putIfAbsent(root(part, conductingFace(edge)), space);
+        if (first != null) {
+          join(group, first, space);
+        }
+      }
+    }
+  }
+
+  private int conductingFace(int edge) {
+    return reading.conductsLeft(edge) ? partition.leftFace(edge) : partition.rightFace(edge);
+  }
+
+  private static int[] singles(int size) {
+    int[] set = new int[size];
+    for (int i = 0; i < size; i++) {
+      set[i] = i;
+    }
+    return set;
+  }
+
+  private static void join(int[] set, int one, int other) {
+    int a = root(set, one);
+    int b = root(set, other);
+    set[Math.max(a, b)] = Math.min(a, b);
+  }
+
+  private int[] edgeConnectedParts() {
+    int[] part = singles(partition.faceCount());
     for (int edge = 0; edge < partition.edgeCount(); edge++) {
       if (reading.inside(edge)) {
-        int a = root(part, partition.leftFace(edge));
-        int b = root(part, partition.rightFace(edge));
-        part[Math.max(a, b)] = Math.min(a, b);
+        join(part, partition.leftFace(edge), partition.rightFace(edge));
       }
     }
     return part;

@@ -125,26 +125,31 @@ final class EffectiveTransmittances {
         continue;
       }
       Direction run = outline.direction(planes.get(i).first(), planes.get(i).last());
-      int warmVertex = -1;
-      int coldVertex = -1;
+      List<Integer> warmEnds = new ArrayList<>();
+      List<Integer> coldEnds = new ArrayList<>();
       for (int j = i; j < planes.size(); j++) {
-        if (used[j] || !inLine(run, planes.get(i), planes.get(j))) {
-          continue;
+        if (!used[j] && inLine(run, planes.get(i), planes.get(j))) {
+          used[j] = true;
+          addEnds(planes.get(j), warm, warmEnds);
+          addEnds(planes.get(j), cold, coldEnds);
         }
-        used[j] = true;
-        CutOffPlane plane = planes.get(j);
-        int before = space(outline.previous(plane.edges().get(0)));
-        int after = space(outline.next(plane.edges().get(plane.edges().size() - 1)));
-        warmVertex = Couplings.contains(warm, before) ? plane.first() : warmVertex;
-        warmVertex = Couplings.contains(warm, after) ? plane.last() : warmVertex;
-        coldVertex = Couplings.contains(cold, before) ? plane.first() : coldVertex;
-        coldVertex = Couplings.contains(cold, after) ? plane.last() : coldVertex;
       }
-      if (warmVertex >= 0 && coldVertex >= 0) {
-        sides.add(new Side(run, warmVertex, coldVertex));
+      for (int k = 0; k < Math.min(warmEnds.size(), coldEnds.size()); k++) {
+        sides.add(new Side(run, warmEnds.get(k), coldEnds.get(k)));
       }
     }
     return sides;
+  }
+
+  /** Adds the ends of a plane at which the outline goes on facing one of the spaces. */
+  private void addEnds(CutOffPlane plane, int[] spaces, List<Integer> ends) {
+    if (Couplings.contains(spaces, space(outline.previous(plane.edges().get(0))))) {
+      ends.add(plane.first());
+    }
+    int lastEdge = plane.edges().get(plane.edges().size() - 1);
+    if (Couplings.contains(spaces, space(outline.next(lastEdge)))) {
+      ends.add(plane.last());
+    }
   }
 
   private int space(int edge) {

@@ -189,6 +189,8 @@ final class FlankLengths {
   }
 
   private Outcome shared(PlacedFlank flank, Face face, PlacedFlank other) {
+    double whole = face.walk().lengthM();
+    String through = face.side() + " face, which runs through to '" + other.name() + "'";
     if (!equalU(flank, other)) {
       return Outcome.none(
           "its "
@@ -196,42 +198,29 @@ final class FlankLengths {
               + " face runs through to '"
               + other.name()
               + "', whose U differs, so that the "
-              + Wording.length(face.walk().lengthM())
+              + Wording.length(whole)
               + " cannot be shared");
     }
-    double whole = face.walk().lengthM();
     Faces own = faces.get(flank.name());
+    Face opposite = face.inner() ? own.outer() : own.inner();
     Optional<Partner> facing =
-        inLine(flank, face.inner() ? own.outer() : own.inner())
-            .filter(partner -> partner.flank().name().equals(other.name()));
+        inLine(flank, opposite).filter(p -> p.flank().name().equals(other.name()));
     if (facing.isPresent() && facing.get().gapM() > tolerance(face)) {
-      FaceWalk across = (face.inner() ? own.outer() : own.inner()).walk();
       double part =
-          outline.along(face.walk().direction(), face.walk().from(), across.to())
+          outline.along(face.walk().direction(), face.walk().from(), opposite.walk().to())
               + facing.get().gapM() / 2;
       return Outcome.of(
           length(
               face,
               part,
               "along the "
-                  + face.side()
-                  + " face, which runs through to '"
-                  + other.name()
-                  + "', as far as the middle of the "
+                  + through
+                  + ", as far as the middle of the "
                   + Wording.length(facing.get().gapM())
                   + " between the faces opposite"));
     }
     return Outcome.of(
-        length(
-            face,
-            whole / 2,
-            "half of the "
-                + face.side()
-                + " face, which runs through to '"
-                + other.name()
-                + "' ("
-                + Wording.length(whole)
-                + ")"));
+        length(face, whole / 2, "half of the " + through + " (" + Wording.length(whole) + ")"));
   }
 
   private Result.Length length(Face face, double valueM, String derivation) {

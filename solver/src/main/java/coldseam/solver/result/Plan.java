@@ -57,19 +57,20 @@ public final class Plan {
     FlankFinder finder = new FlankFinder(detail, outline);
     flanks = finder.flanks();
     lengths = new FlankLengths(outline, flanks);
-    psi = new LinearTransmittances(detail, outline, flanks, lengths);
+    PsiPlanner planner = new PsiPlanner(detail, outline, flanks, lengths);
+    psi = new LinearTransmittances(planner.plans());
     transmittances = new EffectiveTransmittances(detail, outline);
     SectionChecks section = new SectionChecks(detail, outline);
     cutOffs = new CutOffChecks(outline);
     module = transmittances.any() && !psi.any();
     List<Fault> faults = new ArrayList<>(finder.faults());
-    faults.addAll(psi.faults());
+    faults.addAll(planner.faults());
     faults.addAll(transmittances.faults());
     faults.addAll(section.faults());
     if (!faults.isEmpty()) {
       throw new DetailException(faults);
     }
-    assumptions = collectAssumptions();
+    assumptions = collectAssumptions(planner.assumptions());
     warnings = new ArrayList<>(section.warnings());
     if (!module) {
       warnings.addAll(cutOffs.distances());
@@ -275,7 +276,7 @@ public final class Plan {
         timesMs.get());
   }
 
-  private List<Assumption> collectAssumptions() {
+  private List<Assumption> collectAssumptions(List<Assumption> ofPsi) {
     Set<Assumption> all = new LinkedHashSet<>(detail.assumptions());
     all.addAll(heatLoss.assumptions());
     if (surfaceNeeded()) {
@@ -292,7 +293,7 @@ public final class Plan {
                 "ISO 6946, layers met at the cut-off plane with the films there"));
       }
     }
-    all.addAll(psi.assumptions());
+    all.addAll(ofPsi);
     all.addAll(transmittances.assumptions());
     if (module && cutOffs.any()) {
       all.add(

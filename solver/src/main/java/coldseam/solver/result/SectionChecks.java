@@ -13,7 +13,6 @@ import coldseam.solver.detail.Wording;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
-import java.util.stream.Collectors;
 
 /** What looks doubtful in the drawing, and places asked about that lie outside the section. */
 final class SectionChecks {
@@ -66,10 +65,15 @@ final class SectionChecks {
 
   private String fills(List<Integer> labels) {
     List<Fill> fills = detail.fills();
-    return labels.stream()
-        .filter(label -> label >= 0 && label < fills.size())
-        .map(label -> "'" + fills.get(label).name() + "'")
-        .collect(Collectors.joining(" and "));
+    List<String> names =
+        labels.stream()
+            .filter(label -> label >= 0 && label < fills.size())
+            .map(label -> "'" + fills.get(label).name() + "'")
+            .toList();
+    int last = names.size() - 1;
+    return last < 1
+        ? String.join("", names)
+        : String.join(", ", names.subList(0, last)) + " and " + names.get(last);
   }
 
   private List<String> stretchesPartlyOff() {

@@ -86,7 +86,7 @@ final class SurfaceTemperatures {
         continue;
       }
       for (double s : new double[] {0, 0.5, 1, side.turningPoint(fields.field())}) {
-        double value = sign * side.at(fields.field(), s);
+        double value = sign * temperature(side, s);
         if (value < least - TIE * span) {
           least = value;
           best = new SurfaceTrace.Place(side, s);
@@ -95,7 +95,14 @@ final class SurfaceTemperatures {
     }
     return best == null
         ? Optional.empty()
-        : Optional.of(new Extreme(best, best.side().at(fields.field(), best.s())));
+        : Optional.of(new Extreme(best, temperature(best.side(), best.s())));
+  }
+
+  /** On a surface of fixed temperature the field may jump at its ends; the surface does not. */
+  private double temperature(SurfaceTrace.Side side, double s) {
+    return conditions.kind(side.edge()) == Kind.FIXED
+        ? temperaturesC[conditions.space(side.edge())]
+        : side.at(fields.field(), s);
   }
 
   private Result.SurfacePoint point(Extreme extreme) {
