@@ -132,16 +132,12 @@ final class GapClosing {
 
   private void find() {
     boolean[] used = new boolean[linework.vertexCount];
-    int[] vertices = new int[linework.vertexCount];
-    for (int v = 0; v < vertices.length; v++) {
-      vertices[v] = v;
-    }
     for (int e = 0; e < linework.edgeCount; e++) {
       kept[e] = label(2 * e) != label(2 * e + 1);
       used[linework.start[e]] |= kept[e];
       used[linework.end[e]] |= kept[e];
     }
-    VertexGrid grid = new VertexGrid(linework.x, linework.y, vertices);
+    VertexGrid grid = new VertexGrid(linework.x, linework.y);
     for (int e = 0; e < linework.edgeCount; e++) {
       int a = linework.start[e];
       int b = linework.end[e];

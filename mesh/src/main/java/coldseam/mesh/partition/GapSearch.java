@@ -72,11 +72,7 @@ final class GapSearch {
 
   /** The strips, in the order of their first edge. */
   List<Gap> find() {
-    int[] vertices = new int[edges.vertexCount];
-    for (int v = 0; v < vertices.length; v++) {
-      vertices[v] = v;
-    }
-    VertexGrid grid = new VertexGrid(edges.x, edges.y, vertices);
+    VertexGrid grid = new VertexGrid(edges.x, edges.y);
     PairIndex seen = new PairIndex(64);
     for (int h = 0; h < sides.searched.length; h++) {
       if (!sides.searched[h]) {

@@ -3,58 +3,95 @@ package coldseam.mesh.partition;
 import java.util.Arrays;
 
 /**
- * Points in a grid of as many cells, so that those near a segment are found by walking along it,
- * whatever its direction.
+ * Points sorted into columns of about as many points each, and each column into rows likewise, so
+ * that those near a segment are found by walking along it, whatever its direction and however
+ * crowded a corner of the drawing is.
  */
 final class VertexGrid {
+  /** Points a cell holds on average. */
+  private static final int IN_CELL = 3;
+
   private final double[] x;
   private final double[] y;
-  private final int columns;
-  private final double left;
-  private final double bottom;
-  private final double cellWidth;
-  private final double cellHeight;
-  private final int[] offset;
-  private final int[] inCell;
+
+  /** Where one column ends and the next begins. */
+  private final double[] columnEdges;
+
+  /** For each column where one row ends and the next begins. */
+  private final double[][] rowEdges;
+
+  /** The points of each row of each column. */
+  private final int[][][] cells;
+
   private int[] hits = new int[16];
 
   /**
-   * Fills the grid.
+   * Sorts all vertices.
    *
-   * @param x x of all vertices, m
-   * @param y y of all vertices, m
-   * @param vertices the vertices to be found
+   * @param x x of the vertices, m
+   * @param y y of the vertices, m
    */
-  VertexGrid(double[] x, double[] y, int[] vertices) {
+  VertexGrid(double[] x, double[] y) {
     this.x = x;
     this.y = y;
-    columns = Math.max(1, (int) Math.sqrt(vertices.length));
-    double minX = Double.POSITIVE_INFINITY;
-    double minY = Double.POSITIVE_INFINITY;
-    double maxX = Double.NEGATIVE_INFINITY;
-    double maxY = Double.NEGATIVE_INFINITY;
+    int columns = 1 + (int) Math.sqrt(x.length / (double) IN_CELL);
+    columnEdges = edges(x.clone(), columns);
+    int[] all = new int[x.length];
+    for (int v = 0; v < all.length; v++) {
+      all[v] = v;
+    }
+    int[][] inColumn = distribute(all, x, columnEdges);
+    rowEdges = new double[columns][];
+    cells = new int[columns][][];
+    for (int i = 0; i < columns; i++) {
+      double[] heights = new double[inColumn[i].length];
+      for (int k = 0; k < heights.length; k++) {
+        heights[k] = y[inColumn[i][k]];
+      }
+      rowEdges[i] = edges(heights, 1 + heights.length / IN_CELL);
+      cells[i] = distribute(inColumn[i], y, rowEdges[i]);
+    }
+  }
+
+  /** Sorts values and returns those that cut them into parts of about equal count. */
+  private static double[] edges(double[] values, int parts) {
+    Arrays.sort(values);
+    double[] edges = new double[parts - 1];
+    for (int i = 1; i < parts; i++) {
+      edges[i - 1] = values[(int) ((long) values.length * i / parts)];
+    }
+    return edges;
+  }
+
+  private static int[][] distribute(int[] vertices, double[] position, double[] edges) {
+    int[] count = new int[edges.length + 1];
     for (int v : vertices) {
-      minX = Math.min(minX, x[v]);
-      maxX = Math.max(maxX, x[v]);
-      minY = Math.min(minY, y[v]);
-      maxY = Math.max(maxY, y[v]);
+      count[part(position[v], edges)]++;
     }
-    left = minX;
-    bottom = minY;
-    cellWidth = Math.max((maxX - minX) / columns, Double.MIN_NORMAL);
-    cellHeight = Math.max((maxY - minY) / columns, Double.MIN_NORMAL);
-    offset = new int[columns * columns + 1];
-    inCell = new int[vertices.length];
+    int[][] parts = new int[count.length][];
+    for (int i = 0; i < parts.length; i++) {
+      parts[i] = new int[count[i]];
+    }
     for (int v : vertices) {
-      offset[cell(column(x[v]), row(y[v])) + 1]++;
+      int i = part(position[v], edges);
+      parts[i][--count[i]] = v;
     }
-    for (int c = 0; c < columns * columns; c++) {
-      offset[c + 1] += offset[c];
+    return parts;
+  }
+
+  /** How many edges lie at or below a position. */
+  private static int part(double position, double[] edges) {
+    int low = 0;
+    int high = edges.length;
+    while (low < high) {
+      int middle = (low + high) >>> 1;
+      if (edges[middle] <= position) {
+        low = middle + 1;
+      } else {
+        high = middle;
+      }
     }
-    int[] fill = Arrays.copyOf(offset, columns * columns);
-    for (int v : vertices) {
-      inCell[fill[cell(column(x[v]), row(y[v]))]++] = v;
-    }
+    return low;
   }
 
   /** A vertex found by the last {@link #near}. */
@@ -65,56 +102,41 @@ final class VertexGrid {
   /** Finds all vertices within a margin of a segment and returns how many; see {@link #hit}. */
   int near(double ax, double ay, double bx, double by, double margin) {
     int found = 0;
-    int first = column(Math.min(ax, bx) - margin);
-    int last = column(Math.max(ax, bx) + margin);
-    double slope = (by - ay) / (bx - ax);
-    for (int i = first; i <= last; i++) {
+    double left = Math.min(ax, bx);
+    double right = Math.max(ax, bx);
+    double slope = right > left ? (by - ay) / (bx - ax) : 0;
+    int last = part(right + margin, columnEdges);
+    for (int i = part(left - margin, columnEdges); i <= last; i++) {
       double low = Math.min(ay, by);
       double high = Math.max(ay, by);
-      if (first != last && !Double.isNaN(slope) && !Double.isInfinite(slope)) {
-        // The outermost columns hold everything beyond them as well.
-        double from = i == first ? Math.min(ax, bx) : left + i * cellWidth - 2 * margin;
-        double to = i == last ? Math.max(ax, bx) : left + (i + 1) * cellWidth + 2 * margin;
+      if (slope != 0) {
+        // The part of the segment whose margin reaches into this column.
+        double from = i == 0 ? left : Math.max(left, columnEdges[i - 1] - margin);
+        double to = i == columnEdges.length ? right : Math.min(right, columnEdges[i] + margin);
         double yFrom = ay + (from - ax) * slope;
         double yTo = ay + (to - ax) * slope;
-        low = Math.max(low, Math.min(yFrom, yTo));
-        high = Math.min(high, Math.max(yFrom, yTo));
+        low = Math.max(low, Math.min(yFrom, yTo) - margin);
+        high = Math.min(high, Math.max(yFrom, yTo) + margin);
       }
-      int top = row(high + 2 * margin);
-      for (int j = row(low - 2 * margin); j <= top; j++) {
-        found = collect(cell(i, j), ax, ay, bx, by, margin, found);
+      int top = part(high + margin, rowEdges[i]);
+      for (int j = part(low - margin, rowEdges[i]); j <= top; j++) {
+        found = collect(cells[i][j], ax, ay, bx, by, margin, found);
       }
     }
     return found;
   }
 
   private int collect(
-      int cell, double ax, double ay, double bx, double by, double margin, int found) {
-    for (int k = offset[cell]; k < offset[cell + 1]; k++) {
-      int v = inCell[k];
+      int[] cell, double ax, double ay, double bx, double by, double margin, int found) {
+    int n = found;
+    for (int v : cell) {
       if (Segments.distance(x[v], y[v], ax, ay, bx, by) <= margin) {
-        if (found == hits.length) {
-          hits = Arrays.copyOf(hits, 2 * found);
+        if (n == hits.length) {
+          hits = Arrays.copyOf(hits, 2 * n);
         }
-        hits[found++] = v;
+        hits[n++] = v;
       }
     }
-    return found;
-  }
-
-  private int column(double px) {
-    return clamp((px - left) / cellWidth);
-  }
-
-  private int row(double py) {
-    return clamp((py - bottom) / cellHeight);
-  }
-
-  private int clamp(double position) {
-    return (int) Math.max(0, Math.min(columns - 1, position));
-  }
-
-  private int cell(int column, int row) {
-    return column * columns + row;
+    return n;
   }
 }
