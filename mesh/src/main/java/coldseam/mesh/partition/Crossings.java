@@ -35,8 +35,13 @@ final class Crossings implements SegmentIntersector {
     return points;
   }
 
+  /** A known point. */
+  Coordinate coordinate(int point) {
+    return coordinates.get(point);
+  }
+
   /** The known point near a place, or a new one there. */
-  Coordinate coordinate(double x, double y) {
+  private Coordinate coordinate(double x, double y) {
     int v = points.add(x, y);
     if (v == coordinates.size()) {
       coordinates.add(new Coordinate(x, y));

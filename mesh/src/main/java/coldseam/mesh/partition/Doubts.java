@@ -6,9 +6,6 @@ import java.util.List;
 
 /** Lists what looks doubtful in a drawing, in the order of {@link Defect.Kind}. */
 final class Doubts {
-  /** A face is a leftover when at least this part of its outline belongs to other areas. */
-  private static final double LEFTOVER = 0.25;
-
   private static final int NONE = Partition.NONE;
 
   private final Point origin;
@@ -103,7 +100,7 @@ final class Doubts {
       sides.isOwn()[h] = forward ? edges.leftOwn[h >> 1] : edges.rightOwn[h >> 1];
       sides.thickness()[h] = area == NONE ? 0 : thickness[area];
     }
-    double leftoverM = GapSearch.LEFTOVER_CLOSING_LENGTHS * closeM;
+    double leftoverM = Limits.SLIVER_CLOSING_LENGTHS * closeM;
     boolean[] sliver = addSlivers(edges, halves, rings, sides, leftoverM);
     boolean[] thinHole = addHoles(edges, halves, rings, sides);
     for (int h = 0; h < n; h++) {
@@ -146,10 +143,10 @@ final class Doubts {
       }
       double width = 2 * rings.area(face) / outline;
       sliver[f] =
-          width <= GapSearch.THIN * outline / 2
+          width <= Limits.THIN * outline / 2
               && width <= leftoverM
-              && width <= GapSearch.MUCH_THINNER * thinnest
-              && leftover >= LEFTOVER * outline;
+              && width <= Limits.MUCH_THINNER * thinnest
+              && leftover >= Limits.LEFTOVER * outline;
       if (sliver[f]) {
         addFace(Defect.Kind.SLIVER, face, width, edges, halves, sides);
       }
@@ -164,7 +161,7 @@ final class Doubts {
       FaceRings.Face hole = rings.holes().get(i);
       double half = Shape.of(hole.rings(), edges.x, edges.y).perimeterM() / 2;
       double width = rings.area(hole) / half;
-      thin[i] = width <= GapSearch.THIN * half;
+      thin[i] = width <= Limits.THIN * half;
       Defect.Kind kind = thin[i] ? Defect.Kind.GAP : Defect.Kind.UNCOVERED;
       addFace(kind, hole, width, edges, halves, sides);
     }

@@ -10,9 +10,6 @@ import java.util.Arrays;
  * onto it: a crossing made by noding may lie on a third edge.
  */
 final class GapClosing {
-  /** Cosine of the angle up to which an edge counts as lying across a gap: 45°. */
-  private static final double ACROSS = Math.sqrt(0.5);
-
   private static final int NONE = Partition.NONE;
 
   private final Linework linework;
@@ -248,8 +245,8 @@ final class GapClosing {
     double dx = linework.x[halves.to(link)] - linework.x[halves.from(link)];
     double dy = linework.y[halves.to(link)] - linework.y[halves.from(link)];
     boolean open =
-        cosine(near, dx, dy) < ACROSS
-            && cosine(far, dx, dy) < ACROSS
+        cosine(near, dx, dy) < Limits.ALONG
+            && cosine(far, dx, dy) < Limits.ALONG
             && turnsLeft(near, dx, dy)
             && turnsLeft(far, dx, dy);
     if (!open || isDrawn(near ^ 1, far)) {

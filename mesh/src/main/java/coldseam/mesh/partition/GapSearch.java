@@ -11,24 +11,6 @@ import java.util.List;
  * sides, is neither.
  */
 final class GapSearch {
-  /**
-   * Widens every limit a little: lengths in drawings are round numbers, and a strip right at a
-   * limit is to fall on the same side of it however the drawing is turned.
-   */
-  static final double TIE = 1 + 1e-5;
-
-  /** Wider than this part of its length a strip is not thin. */
-  static final double THIN = TIE / 50;
-
-  /** Wider than this part of the thicker area on its sides a strip is not a slip of the hand. */
-  static final double MUCH_THINNER = TIE / 10;
-
-  /** A strip of an earlier area is called a leftover up to this many closing lengths. */
-  static final double LEFTOVER_CLOSING_LENGTHS = 1000;
-
-  /** Sine of the largest angle between two edges that are nearly parallel. */
-  private static final double NEARLY_PARALLEL = 0.1;
-
   private static final int NONE = Partition.NONE;
 
   private final Boundaries edges;
@@ -67,7 +49,7 @@ final class GapSearch {
     this.halves = halves;
     this.sides = sides;
     this.closeM = closeM;
-    this.leftoverM = LEFTOVER_CLOSING_LENGTHS * closeM;
+    this.leftoverM = Limits.SLIVER_CLOSING_LENGTHS * closeM;
   }
 
   /** The strips, in the order of their first edge. */
@@ -81,7 +63,7 @@ final class GapSearch {
       int a = halves.from(h);
       int b = halves.to(h);
       // A strip's width at a vertex is at most twice its mean width.
-      double margin = 2 * THIN * length(h);
+      double margin = 2 * Limits.THIN * length(h);
       if (sides.label[h] != NONE) {
         margin = Math.min(margin, 2 * leftoverM);
       }
@@ -112,10 +94,10 @@ final class GapSearch {
   /** The widest strip between two half-edges that is much thinner than the areas concerned, m. */
   private double widest(int h, int g) {
     if (sides.label[h] == NONE) {
-      return MUCH_THINNER * Math.max(sides.thickness[h ^ 1], sides.thickness[g ^ 1]);
+      return Limits.MUCH_THINNER * Math.max(sides.thickness[h ^ 1], sides.thickness[g ^ 1]);
     }
     double thinner = Math.min(sides.thickness[h], sides.thickness[g]);
-    return Math.min(leftoverM, MUCH_THINNER * thinner);
+    return Math.min(leftoverM, Limits.MUCH_THINNER * thinner);
   }
 
   private void consider(int h, int g, PairIndex seen) {
@@ -139,7 +121,7 @@ final class GapSearch {
     double wc = ux * cy - uy * cx;
     double wd = ux * dy - uy * dx;
     // With the strip on the left of both, the two half-edges run in opposite directions.
-    if (td >= tc || Math.abs(wd - wc) > NEARLY_PARALLEL * (tc - td)) {
+    if (td >= tc || Math.abs(wd - wc) > Limits.NEARLY_PARALLEL * (tc - td)) {
       return;
     }
     double from = Math.max(0, td);
@@ -198,7 +180,7 @@ final class GapSearch {
       }
     }
     double width = area / length;
-    if (width <= THIN * length && isClear(longest)) {
+    if (width <= Limits.THIN * length && isClear(longest)) {
       gaps.add(new Gap(sides.label[longest.half], longest.x, longest.y, width, along));
     }
   }

@@ -1,6 +1,7 @@
 package coldseam.mesh.partition;
 
 import coldseam.mesh.plane.Point;
+import java.util.ArrayList;
 import java.util.List;
 
 /**
@@ -23,11 +24,13 @@ public record LabelledArea(int label, List<List<Point>> rings) {
     if (rings.isEmpty()) {
       throw new IllegalArgumentException("an area needs a ring");
     }
-    rings = rings.stream().map(List::copyOf).toList();
+    List<List<Point>> copies = new ArrayList<>(rings.size());
     for (List<Point> ring : rings) {
+      copies.add(List.copyOf(ring));
       if (ring.size() < 3) {
         throw new IllegalArgumentException("a ring needs three points or more");
       }
     }
+    rings = List.copyOf(copies);
   }
 }

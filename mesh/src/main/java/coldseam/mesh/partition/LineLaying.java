@@ -10,9 +10,6 @@ import java.util.List;
  * What of a line lies on no edge between different labels is gathered as {@link Off}.
  */
 final class LineLaying {
-  /** How much an edge may lean away from a line laid on it: offset over length. */
-  private static final double LEAN = 0.1;
-
   private final Boundaries boundaries;
   private final int[] loopLabels;
   private final double toleranceM;
@@ -22,6 +19,28 @@ final class LineLaying {
   /** The part of an edge, between two fractions of it, that a line covers. */
   private record Cover(
       int edge, double from, double to, int line, boolean endFrom, boolean endTo) {}
+
+  /**
+   * A straight side of a line: from (x, y) in the direction (ux, uy), and where it starts on it.
+   */
+  private record Side(
+      int line,
+      double x,
+      double y,
+      double ux,
+      double uy,
+      double length,
+      double start,
+      boolean first,
+      boolean last) {
+    double along(double px, double py) {
+      return (px - x) * ux + (py - y) * uy;
+    }
+
+    double off(double px, double py) {
+      return (px - x) * uy - (py - y) * ux;
+    }
+  }
 
   /** A part of a line, from and to a distance along it. */
   private record Part(double from, double to) {}
@@ -46,57 +65,51 @@ final class LineLaying {
     double along = 0;
     int last = px.length - 2;
     for (int s = 0; s <= last; s++) {
-      double length = Segments.length(px[s + 1] - px[s], py[s + 1] - py[s]);
+      double dx = px[s + 1] - px[s];
+      double dy = py[s + 1] - py[s];
+      double length = Segments.length(dx, dy);
       if (length > 0) {
-        laySegment(line, px, py, s, along, covered);
+        Side side =
+            new Side(
+                line, px[s], py[s], dx / length, dy / length, length, along, s == 0, s == last);
+        for (int e = 0; e < boundaries.edgeCount; e++) {
+          layOn(e, side, covered);
+        }
       }
       along += length;
     }
     gatherOff(line, px, py, along, covered);
   }
 
-  private void laySegment(
-      int line, double[] px, double[] py, int s, double along, List<Part> covered) {
-    double length = Segments.length(px[s + 1] - px[s], py[s + 1] - py[s]);
-    double ux = (px[s + 1] - px[s]) / length;
-    double uy = (py[s + 1] - py[s]) / length;
+  private void layOn(int e, Side side, List<Part> covered) {
     Boundaries b = boundaries;
-    for (int e = 0; e < b.edgeCount; e++) {
-      double ax = b.x[b.start[e]] - px[s];
-      double ay = b.y[b.start[e]] - py[s];
-      double bx = b.x[b.end[e]] - px[s];
-      double by = b.y[b.end[e]] - py[s];
-      double ta = ax * ux + ay * uy;
-      double tb = bx * ux + by * uy;
-      double da = ax * uy - ay * ux;
-      double db = bx * uy - by * ux;
-      if (Math.max(ta, tb) <= toleranceM
-          || Math.min(ta, tb) >= length - toleranceM
-          || Math.abs(db - da) > LEAN * Math.abs(tb - ta)) {
-        continue;
-      }
-      double from = fraction(Math.min(ta, tb) < -toleranceM, (0 - ta) / (tb - ta), ta > tb);
-      double to =
-          fraction(Math.max(ta, tb) > length + toleranceM, (length - ta) / (tb - ta), ta < tb);
-      double offset = Math.max(Math.abs(da + from * (db - da)), Math.abs(da + to * (db - da)));
-      double covering = Math.abs((to - from) * (tb - ta));
-      if (offset > toleranceM || covering <= toleranceM) {
-        continue;
-      }
-      boolean first = s == 0;
-      boolean last = s == px.length - 2;
-      boolean fromIsEnd = first && Math.min(ta, tb) <= toleranceM;
-      boolean toIsEnd = last && Math.max(ta, tb) >= length - toleranceM;
-      if (from <= to) {
-        covers.add(new Cover(e, from, to, line, fromIsEnd, toIsEnd));
-      } else {
-        covers.add(new Cover(e, to, from, line, toIsEnd, fromIsEnd));
-      }
-      if (loopLabels[b.leftLoop[e]] != loopLabels[b.rightLoop[e]]) {
-        double t0 = Math.max(0, Math.min(ta, tb));
-        double t1 = Math.min(length, Math.max(ta, tb));
-        insert(new Part(along + t0, along + t1), covered);
-      }
+    double ta = side.along(b.x[b.start[e]], b.y[b.start[e]]);
+    double tb = side.along(b.x[b.end[e]], b.y[b.end[e]]);
+    double low = Math.min(ta, tb);
+    double high = Math.max(ta, tb);
+    double da = side.off(b.x[b.start[e]], b.y[b.start[e]]);
+    double db = side.off(b.x[b.end[e]], b.y[b.end[e]]);
+    if (high <= toleranceM
+        || low >= side.length - toleranceM
+        || Math.abs(db - da) > Limits.LEAN * (high - low)) {
+      return;
+    }
+    double from = fraction(low < -toleranceM, (0 - ta) / (tb - ta), ta > tb);
+    double to = fraction(high > side.length + toleranceM, (side.length - ta) / (tb - ta), ta < tb);
+    double offset = Math.max(Math.abs(da + from * (db - da)), Math.abs(da + to * (db - da)));
+    if (offset > toleranceM || Math.abs(to - from) * (high - low) <= toleranceM) {
+      return;
+    }
+    boolean fromIsEnd = side.first && low <= toleranceM;
+    boolean toIsEnd = side.last && high >= side.length - toleranceM;
+    covers.add(
+        from <= to
+            ? new Cover(e, from, to, side.line, fromIsEnd, toIsEnd)
+            : new Cover(e, to, from, side.line, toIsEnd, fromIsEnd));
+    if (loopLabels[b.leftLoop[e]] != loopLabels[b.rightLoop[e]]) {
+      double t0 = side.start + Math.max(0, low);
+      double t1 = side.start + Math.min(side.length, high);
+      insert(new Part(t0, t1), covered);
     }
   }
 

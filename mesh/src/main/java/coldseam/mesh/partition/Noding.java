@@ -52,15 +52,13 @@ final class Noding {
    * @param start start vertex of each segment
    * @param end end vertex of each segment, different from its start
    * @param areas areas that change across each segment
-   * @return the noded linework; its vertices are numbered anew
+   * @return the noded linework; the vertices given keep their numbers, crossings follow
    */
   Linework node(double[] x, double[] y, int[] start, int[] end, int[][] areas) {
     Crossings crossings = new Crossings(snapM, x, y);
     List<SegmentString> strings = new ArrayList<>(start.length);
     for (int s = 0; s < start.length; s++) {
-      Coordinate[] ends = {
-        crossings.coordinate(x[start[s]], y[start[s]]), crossings.coordinate(x[end[s]], y[end[s]])
-      };
+      Coordinate[] ends = {crossings.coordinate(start[s]), crossings.coordinate(end[s])};
       strings.add(new NodedSegmentString(ends, s));
     }
     MCIndexNoder noder = new MCIndexNoder(crossings, 2 * snapM);
@@ -70,13 +68,9 @@ final class Noding {
 
   private Linework collect(
       MCIndexNoder noder, PointIndex points, int[] start, int[] end, int[][] areas) {
-    PairIndex pairs = new PairIndex(2 * start.length);
-    int capacity = 2 * start.length + 16;
-    int[] edgeStart = new int[capacity];
-    int[] edgeEnd = new int[capacity];
-    int[][] edgeAreas = new int[capacity][];
+    Edges edges = new Edges(2 * start.length + 16);
     pieceOffset = new int[start.length + 1];
-    pieceStart = new int[capacity];
+    pieceStart = new int[2 * start.length + 16];
     largestBendM = 0;
     int pieces = 0;
     int segment = -1;
@@ -86,39 +80,25 @@ final class Noding {
       while (segment < s) {
         pieceOffset[++segment] = pieces;
       }
-      int a = points.add(string.getCoordinate(0).x, string.getCoordinate(0).y);
-      for (int i = 1; i < string.size(); i++) {
-        Coordinate c = string.getCoordinate(i);
-        int b = points.add(c.x, c.y);
-        if (a == b) {
-          continue;
-        }
+      int a = number(points, string.getCoordinate(0));
+      int b = number(points, string.getCoordinate(string.size() - 1));
+      if (a != b) {
         bend(points, b, start[s], end[s]);
         if (pieces == pieceStart.length) {
           pieceStart = Arrays.copyOf(pieceStart, 2 * pieces);
         }
         pieceStart[pieces++] = a;
-        int known = pairs.count();
-        int edge = pairs.add(a, b);
-        if (edge == known) {
-          if (edge == edgeStart.length) {
-            edgeStart = Arrays.copyOf(edgeStart, 2 * edge);
-            edgeEnd = Arrays.copyOf(edgeEnd, 2 * edge);
-            edgeAreas = Arrays.copyOf(edgeAreas, 2 * edge);
-          }
-          edgeStart[edge] = a;
-          edgeEnd[edge] = b;
-          edgeAreas[edge] = areas[s];
-        } else {
-          edgeAreas[edge] = Linework.symmetricDifference(edgeAreas[edge], areas[s]);
-        }
-        a = b;
+        edges.add(a, b, areas[s]);
       }
     }
     while (segment < start.length) {
       pieceOffset[++segment] = pieces;
     }
-    return withoutCancelled(points, pairs.count(), edgeStart, edgeEnd, edgeAreas);
+    return edges.withoutCancelled(points);
+  }
+
+  private static int number(PointIndex points, Coordinate c) {
+    return points.add(c.x, c.y);
   }
 
   private void bend(PointIndex points, int v, int a, int b) {
@@ -130,21 +110,52 @@ final class Noding {
     }
   }
 
-  private static Linework withoutCancelled(
-      PointIndex points, int count, int[] start, int[] end, int[][] areas) {
-    int kept = 0;
-    for (int e = 0; e < count; e++) {
-      if (areas[e].length > 0) {
-        start[kept] = start[e];
-        end[kept] = end[e];
-        areas[kept++] = areas[e];
-      }
+  /** Unique edges, each with the areas met on it an odd number of times so far. */
+  private static final class Edges {
+    private final PairIndex pairs;
+    private int[] start;
+    private int[] end;
+    private int[][] areas;
+
+    Edges(int expected) {
+      pairs = new PairIndex(expected);
+      start = new int[expected];
+      end = new int[expected];
+      areas = new int[expected][];
     }
-    return new Linework(
-        points.xs(),
-        points.ys(),
-        Arrays.copyOf(start, kept),
-        Arrays.copyOf(end, kept),
-        Arrays.copyOf(areas, kept));
+
+    void add(int a, int b, int[] changing) {
+      int known = pairs.count();
+      int edge = pairs.add(a, b);
+      if (edge < known) {
+        areas[edge] = Linework.symmetricDifference(areas[edge], changing);
+        return;
+      }
+      if (edge == start.length) {
+        start = Arrays.copyOf(start, 2 * edge);
+        end = Arrays.copyOf(end, 2 * edge);
+        areas = Arrays.copyOf(areas, 2 * edge);
+      }
+      start[edge] = a;
+      end[edge] = b;
+      areas[edge] = changing;
+    }
+
+    Linework withoutCancelled(PointIndex points) {
+      int kept = 0;
+      for (int e = 0; e < pairs.count(); e++) {
+        if (areas[e].length > 0) {
+          start[kept] = start[e];
+          end[kept] = end[e];
+          areas[kept++] = areas[e];
+        }
+      }
+      return new Linework(
+          points.xs(),
+          points.ys(),
+          Arrays.copyOf(start, kept),
+          Arrays.copyOf(end, kept),
+          Arrays.copyOf(areas, kept));
+    }
   }
 }

@@ -7,8 +7,13 @@ import java.util.List;
 
 /**
  * A clean planar partition made of labelled areas, laid in order, and labelled lines. Faces are the
- * connected regions of one label; edges are straight, meet only at vertices and separate two faces
- * (or one face from uncovered ground, or lie inside one face where a line was laid).
+ * connected regions of one label; edges are straight, meet only at vertices and separate two faces,
+ * or one face from uncovered ground. Two faces of one label are neighbours only where a line
+ * divides them along a drawn edge.
+ *
+ * <p>Nothing is rounded to a grid. Points within the joining length become one; gaps up to the
+ * closing length are closed one by one and listed. Vertices on a straight edge where nothing else
+ * ends are left out.
  *
  * <p>Coordinates are local: {@link #origin()} plus a local coordinate is the place in the drawing.
  */
@@ -63,6 +68,8 @@ public final class Partition {
    * @param resolution which points are the same
    * @return the partition with everything doubtful listed in {@link #defects()}
    * @throws IllegalArgumentException if there is no area, or nothing of the areas is left
+   * @throws IllegalStateException if the result breaks one of its own promises: a defect of this
+   *     program
    */
   public static Partition of(
       List<LabelledArea> areas, List<LabelledLine> lines, Resolution resolution) {
@@ -171,7 +178,7 @@ public final class Partition {
     return sum;
   }
 
-  /** Everything doubtful that was found, in a stable order. */
+  /** Everything doubtful that was found: kind by kind, each in the order of the drawing. */
   public List<Defect> defects() {
     return defects;
   }

@@ -1,6 +1,5 @@
 package coldseam.mesh.partition;
 
-import coldseam.mesh.plane.Point;
 import coldseam.mesh.plane.Resolution;
 import java.util.Arrays;
 import java.util.List;
@@ -10,9 +9,6 @@ import java.util.List;
  * are any, lay the lines, merge faces of one label, list what is doubtful.
  */
 final class PartitionBuilder {
-  /** Gaps that meet are closed in turn; a drawing that needs more turns than this is left as is. */
-  private static final int MOST_TURNS = 12;
-
   private static final int NONE = Partition.NONE;
 
   private final List<LabelledArea> laid;
@@ -26,6 +22,8 @@ final class PartitionBuilder {
   private Linework linework;
   private HalfEdges halves;
   private FaceBuilder faces;
+
+  /** How far any point was moved by all steps so far together, at most, m. */
   private double displacementM;
 
   PartitionBuilder(List<LabelledArea> laid, Resolution resolution) {
@@ -34,7 +32,7 @@ final class PartitionBuilder {
     }
     this.laid = laid;
     snapM = resolution.snapM();
-    closeM = GapSearch.TIE * resolution.closeM();
+    closeM = Limits.TIE * resolution.closeM();
     labels = new int[laid.size()];
     for (int a = 0; a < labels.length; a++) {
       labels[a] = laid.get(a).label();
@@ -42,15 +40,6 @@ final class PartitionBuilder {
     outlines = new Outlines(laid, snapM);
     noding = new Noding(snapM);
     closed = new ClosedGaps(closeM);
-  }
-
-  Point origin() {
-    return outlines.origin();
-  }
-
-  /** How far any point was moved by all steps together, at most, m. */
-  double displacementM() {
-    return displacementM;
   }
 
   Partition build(List<LabelledLine> lines) {
@@ -69,19 +58,23 @@ final class PartitionBuilder {
     doubts.addClosed(closed.gaps());
     doubts.addLost(halves, faces);
 
-    Boundaries all = Boundaries.of(linework, halves, faces);
-    LineLaying laying = new LineLaying(all, loopLabels, closeM + displacementM);
+    LineLaying laying =
+        new LineLaying(Boundaries.of(linework, halves, faces), loopLabels, closeM + displacementM);
     for (LabelledLine line : lines) {
       layLine(laying, line);
     }
     doubts.addOff(laying.off());
+    return merged(laying.laid(), topOfLoop, loopLabels, doubts);
+  }
 
-    Merging merging = new Merging(laying.laid(), loopLabels, snapM);
+  private Partition merged(Boundaries all, int[] topOfLoop, int[] loopLabels, Doubts doubts) {
+    Merging merging = new Merging(all, loopLabels, snapM);
     Boundaries edges = merging.merged();
     displacementM += merging.largestShiftM();
     HalfEdges merged = new HalfEdges(edges.x, edges.y, edges.start, edges.end);
     FaceRings rings = new FaceRings(edges, merged, loopLabels);
     PartitionCheck.faces(edges, merged, rings, loopLabels);
+    PartitionCheck.merging(halves.loopArea, loopLabels, edges, rings, merging.largestShiftM());
     doubts.addFaces(edges, merged, rings, topOfLoop, closeM);
     return new Partition(outlines.origin(), edges, rings, doubts.all(), displacementM);
   }
@@ -98,11 +91,11 @@ final class PartitionBuilder {
       double[] y = linework.y.clone();
       if (fault == null) {
         GapClosing closing = new GapClosing(linework, halves, faces, labels, snapM, closeM);
-        if (turn == MOST_TURNS || !closing.close(x, y, closed)) {
+        if (turn == Limits.MOST_TURNS || !closing.close(x, y, closed)) {
           return;
         }
         displacementM += closing.largestMoveM();
-      } else if (turn == MOST_TURNS) {
+      } else if (turn == Limits.MOST_TURNS) {
         throw new IllegalStateException(fault);
       }
       nodeAgain(x, y);
@@ -115,7 +108,7 @@ final class PartitionBuilder {
     double joined = 0;
     for (int v = 0; v < x.length; v++) {
       number[v] = points.add(x[v], y[v]);
-      double moved = Math.hypot(points.x(number[v]) - x[v], points.y(number[v]) - y[v]);
+      double moved = Segments.length(points.x(number[v]) - x[v], points.y(number[v]) - y[v]);
       joined = Math.max(joined, moved);
     }
     int n = 0;
@@ -168,8 +161,8 @@ final class PartitionBuilder {
     double[] x = new double[n];
     double[] y = new double[n];
     for (int i = 0; i < n; i++) {
-      x[i] = line.points().get(i).x() - origin().x();
-      y[i] = line.points().get(i).y() - origin().y();
+      x[i] = line.points().get(i).x() - outlines.origin().x();
+      y[i] = line.points().get(i).y() - outlines.origin().y();
     }
     laying.lay(line.label(), x, y);
   }

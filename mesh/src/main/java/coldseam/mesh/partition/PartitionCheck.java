@@ -1,16 +1,15 @@
 package coldseam.mesh.partition;
 
 import java.util.Arrays;
+import java.util.HashMap;
 import java.util.List;
+import java.util.Map;
 
 /**
  * What must hold for every partition. The checks cost little and run every time; a failure is a
  * defect of this program, never of the drawing.
  */
 final class PartitionCheck {
-  /** Rounding of areas, relative to the square of the extent. */
-  private static final double ROUNDING = 1e-12;
-
   private PartitionCheck() {}
 
   /**
@@ -63,7 +62,7 @@ final class PartitionCheck {
 
   /** Difference of area to be expected when an outline moves by no more than the displacement. */
   static double allowance(double perimeterM, double displacementM) {
-    return 2 * perimeterM * displacementM + ROUNDING * perimeterM * perimeterM;
+    return 2 * perimeterM * displacementM + Limits.ROUNDING * perimeterM * perimeterM;
   }
 
   /**
@@ -90,6 +89,43 @@ final class PartitionCheck {
         throw fault("a face without area", edges, face.rings().get(0)[0]);
       }
     }
+  }
+
+  /**
+   * Checks that merging changed no label's area: the loops first labelled and the merged faces add
+   * up to the same.
+   *
+   * @param loopArea area of each loop first labelled, m²
+   * @param loopLabels its label
+   * @param edges merged edges
+   * @param rings merged faces
+   * @param shiftM how far merging moved an edge, at most, m
+   */
+  static void merging(
+      double[] loopArea, int[] loopLabels, Boundaries edges, FaceRings rings, double shiftM) {
+    Map<Integer, Double> difference = new HashMap<>();
+    for (int l = 0; l < loopArea.length; l++) {
+      if (loopLabels[l] != Partition.NONE) {
+        add(difference, loopLabels[l], loopArea[l]);
+      }
+    }
+    for (FaceRings.Face face : rings.faces()) {
+      add(difference, face.label(), -rings.area(face));
+    }
+    double outline = 0;
+    for (int e = 0; e < edges.edgeCount; e++) {
+      outline += 2 * edges.length(e);
+    }
+    for (Map.Entry<Integer, Double> entry : difference.entrySet()) {
+      if (Math.abs(entry.getValue()) > allowance(outline, shiftM)) {
+        throw new IllegalStateException(
+            "merging changed the area of label " + entry.getKey() + " by " + entry.getValue());
+      }
+    }
+  }
+
+  private static void add(Map<Integer, Double> sums, int label, double value) {
+    sums.put(label, sums.getOrDefault(label, 0.0) + value);
   }
 
   private static IllegalStateException fault(String what, Boundaries edges, int v) {
