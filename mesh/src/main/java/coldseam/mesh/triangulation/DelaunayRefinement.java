@@ -166,8 +166,8 @@ final class DelaunayRefinement {
     int h = ConstrainedDelaunay.next(shortest);
     int g = ConstrainedDelaunay.previous(shortest);
     if (plane.edgeOf[plane.apex(shortest)] == ConstrainedDelaunay.GIVEN
-        && plane.kept[h] != ConstrainedDelaunay.NONE
-        && plane.kept[g] != ConstrainedDelaunay.NONE) {
+        && plane.kept[h] >= 0
+        && plane.kept[g] >= 0) {
       return true;
     }
     int p = plane.start(shortest);
@@ -228,8 +228,8 @@ final class DelaunayRefinement {
     double uy = plane.y[c] - plane.y[a];
     double twiceArea = dx * uy - dy * ux;
     double rise = 0.5 * (ux * (ux - dx) + uy * (uy - dy)) / twiceArea;
-    if (isThin(t, shortest)) {
-      rise = Math.min(rise, TALLEST);
+    if (isThin(t, shortest) && !(rise < TALLEST)) {
+      rise = TALLEST;
     }
     double px = 0.5 * (plane.x[a] + plane.x[b]) - rise * dy;
     double py = 0.5 * (plane.y[a] + plane.y[b]) + rise * dx;

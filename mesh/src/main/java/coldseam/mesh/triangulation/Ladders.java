@@ -23,6 +23,9 @@ final class Ladders {
   /** No rung is longer than this many widths. */
   private static final double LONGEST_RUNG = 8;
 
+  /** The triangle beyond a rung is at least this part of the rung's length high. */
+  private static final double LEAST_ROOM = 0.1;
+
   private final ConstrainedDelaunay plane;
   private final Linework lines;
 
@@ -300,7 +303,7 @@ final class Ladders {
         b == c || d == a
             ? one == other
             : one != other && (hasCorner(one, c) || hasCorner(one, d)) && adjacent(one, other);
-    if (!whole) {
+    if (!whole || !hasRoom(c, b) || !hasRoom(a, d)) {
       release(b, c);
       release(d, a);
       return false;
@@ -317,6 +320,20 @@ final class Ladders {
     mark(other, cellCount);
     cellCount++;
     return true;
+  }
+
+  /** Whether the triangle beyond a rung, to the left from p to q, is not much thinner than that. */
+  private boolean hasRoom(int p, int q) {
+    int h = p == q ? ConstrainedDelaunay.NONE : plane.find(p, q);
+    if (h == ConstrainedDelaunay.NONE || plane.kept[h] != RUNG) {
+      return true;
+    }
+    int apex = plane.apex(h);
+    double twiceArea =
+        (plane.x[q] - plane.x[p]) * (plane.y[apex] - plane.y[p])
+            - (plane.y[q] - plane.y[p]) * (plane.x[apex] - plane.x[p]);
+    double length = plane.length(h);
+    return twiceArea >= LEAST_ROOM * length * length;
   }
 
   private boolean hasCorner(int t, int v) {
