@@ -16,11 +16,8 @@ final class AdaptiveLoop {
   /** Part of an absolute accuracy that the guessed error may take. */
   private static final double PART_OF_ABSOLUTE = 0.3;
 
-  /** How far surface temperatures may move, in parts of the temperature difference (0.01 in 25). */
+  /** Temperature error that may be left, in parts of the temperature difference: 0.01 K in 25. */
   private static final double STEADY = 4e-4;
-
-  /** Temperature error aimed at where heat flows are infinite, in parts of the difference. */
-  private static final double TEMPERATURE = 1e-4;
 
   /** The part of the indicators' sum that a pass splits at most. */
   private static final double BULK = 0.9;
@@ -181,7 +178,7 @@ final class AdaptiveLoop {
   private double jumpWish(int field, int t) {
     double size = d.mesh.area(t) / d.extentSquared;
     double error = indicator.energy[field][t] / QuadraticElement.conductivity(d.couplings, t);
-    return size * error / (TEMPERATURE * TEMPERATURE);
+    return size * error / (STEADY * STEADY);
   }
 
   private double[] wishes() {
@@ -206,26 +203,35 @@ final class AdaptiveLoop {
   /**
    * Local temperature errors over what they may be, in every field of finite energy and every
    * triangle not too small to matter.
+   *
+   * @param excess takes the square of the error over what it may be, by triangle
    */
   private double temperatureRatio(double[] excess) {
     double worst = 0;
     double smallest = SMALLEST * SMALLEST * d.extentSquared;
-    for (int f = 0; f < d.spaces; f++) {
+    for (int f = 0; f <= d.spaces; f++) {
       double[] amplitude = indicator.amplitude[f];
-      if (amplitude == null || infinite(f)) {
+      if (amplitude == null || f < d.spaces && infinite(f)) {
         continue;
       }
+      double may = STEADY * (f < d.spaces ? 1 : largest(fields[f]));
       for (int t = 0; t < excess.length; t++) {
-        double over = amplitude[t] / STEADY;
-        if (over > worst && d.mesh.area(t) > smallest) {
-          worst = over;
-        }
-        if (over > 1 && d.mesh.area(t) > smallest) {
+        double over = amplitude[t] / may;
+        if (over > Math.min(1, worst) && d.mesh.area(t) > smallest) {
+          worst = Math.max(worst, over);
           excess[t] = Math.max(excess[t], over * over);
         }
       }
     }
     return worst;
+  }
+
+  private static double largest(double[] values) {
+    double largest = 0;
+    for (double v : values) {
+      largest = Math.max(largest, Math.abs(v));
+    }
+    return largest;
   }
 
   /** How much the coldest and warmest points still move, over what they may. */
