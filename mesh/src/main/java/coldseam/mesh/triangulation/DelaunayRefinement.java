@@ -16,13 +16,8 @@ final class DelaunayRefinement {
   /** The least angle, degrees; Ruppert's process ends for anything under 20.7. */
   static final double LEAST_ANGLE_DEGREES = 20;
 
-  private static final double SHARP_DEGREES = 60;
-
   /** No side is made shorter than this part of the extent of the drawing. */
   private static final double SHORTEST = 1e-9;
-
-  /** Two lengths on one circle around a vertex agree to this part of themselves. */
-  private static final double SAME_CIRCLE = 1e-6;
 
   private static final double COS_SQUARED = square(Math.cos(Math.toRadians(LEAST_ANGLE_DEGREES)));
 
@@ -30,14 +25,13 @@ final class DelaunayRefinement {
   private static final double TALLEST = 0.475 / Math.tan(Math.toRadians(LEAST_ANGLE_DEGREES / 2));
 
   private final ConstrainedDelaunay plane;
-  private final Linework lines;
   private final Ladders ladders;
   private final boolean[] meshed;
   private final SizeField size;
   private final double extent;
+  private final SharpCorners sharp;
   private final WorkQueue queue = new WorkQueue();
 
-  private boolean[] sharp;
   private int[] stamp;
   private int stamps;
   private int[] cavity = new int[64];
@@ -58,21 +52,16 @@ final class DelaunayRefinement {
       boolean[] meshed,
       SizeField size) {
     this.plane = plane;
-    this.lines = lines;
     this.ladders = ladders;
     this.meshed = meshed;
     this.size = size;
     extent = lines.extent();
     stamp = new int[plane.face.length];
-    sharp = new boolean[plane.vertexCount];
-    for (int h = 0; h < 3 * plane.triangleCount; h++) {
-      if (plane.kept[h] != ConstrainedDelaunay.NONE
-          && isMeshed(h / 3)
-          && !ladders.isLadder(h / 3)
-          && isSharp(h)) {
-        sharp[plane.start(h)] = true;
-      }
+    boolean[] refined = new boolean[plane.triangleCount];
+    for (int t = 0; t < refined.length; t++) {
+      refined[t] = isMeshed(t) && !ladders.isLadder(t);
     }
+    sharp = new SharpCorners(plane, lines, refined);
   }
 
   /** Refines until nothing bad is left that can be bettered. */
@@ -103,31 +92,6 @@ final class DelaunayRefinement {
     return face >= 0 && meshed[face];
   }
 
-  /** Whether the next kept edge counter-clockwise around the start of h is less than 60° away. */
-  private boolean isSharp(int h) {
-    int c = ConstrainedDelaunay.next(h);
-    double angle = 0;
-    while (angle < SHARP_DEGREES) {
-      angle += Math.toDegrees(angleAt(c));
-      if (plane.kept[ConstrainedDelaunay.next(c)] != ConstrainedDelaunay.NONE) {
-        return angle < SHARP_DEGREES;
-      }
-      c = plane.counterClockwise(c);
-    }
-    return false;
-  }
-
-  private double angleAt(int c) {
-    int v = plane.corner[c];
-    int a = plane.start(c);
-    int b = plane.end(c);
-    double ax = plane.x[a] - plane.x[v];
-    double ay = plane.y[a] - plane.y[v];
-    double bx = plane.x[b] - plane.x[v];
-    double by = plane.y[b] - plane.y[v];
-    return Math.atan2(ax * by - ay * bx, ax * bx + ay * by);
-  }
-
   /** Queues a triangle if it is bad and may be bettered. */
   private void consider(int t) {
     if (!isMeshed(t)) {
@@ -135,7 +99,7 @@ final class DelaunayRefinement {
     }
     int shortest = shortestSide(t);
     double length = plane.length(shortest);
-    boolean thin = !ladders.isLadder(t) && isThin(t, shortest) && !isExcused(shortest);
+    boolean thin = !ladders.isLadder(t) && isThin(t, shortest) && !sharp.excuses(shortest);
     if (thin || isTooLarge(t)) {
       queue.add(length, t, plane.corner[3 * t], plane.corner[3 * t + 1], plane.corner[3 * t + 2]);
     }
@@ -159,42 +123,6 @@ final class DelaunayRefinement {
     double by = plane.y[b] - plane.y[v];
     double dot = ax * bx + ay * by;
     return dot * dot > COS_SQUARED * (ax * ax + ay * ay) * (bx * bx + by * by);
-  }
-
-  /** Whether the small angle is the drawing's own, or lies between two points of one circle. */
-  private boolean isExcused(int shortest) {
-    int h = ConstrainedDelaunay.next(shortest);
-    int g = ConstrainedDelaunay.previous(shortest);
-    if (plane.edgeOf[plane.apex(shortest)] == ConstrainedDelaunay.GIVEN
-        && plane.kept[h] >= 0
-        && plane.kept[g] >= 0) {
-      return true;
-    }
-    int p = plane.start(shortest);
-    int q = plane.end(shortest);
-    int e = plane.edgeOf[p];
-    int f = plane.edgeOf[q];
-    if (e < 0 || f < 0 || e == f) {
-      return false;
-    }
-    int z = commonVertex(e, f);
-    if (z == ConstrainedDelaunay.NONE) {
-      return false;
-    }
-    double toP = plane.distance(z, p);
-    double toQ = plane.distance(z, q);
-    return Math.abs(toP - toQ) < SAME_CIRCLE * toP && plane.distance(p, q) < toP;
-  }
-
-  private int commonVertex(int e, int f) {
-    int a = lines.start[e];
-    int b = lines.end[e];
-    if (a == lines.start[f] || a == lines.end[f]) {
-      return a + ConstrainedDelaunay.FIRST;
-    }
-    return b == lines.start[f] || b == lines.end[f]
-        ? b + ConstrainedDelaunay.FIRST
-        : ConstrainedDelaunay.NONE;
   }
 
   private boolean isTooLarge(int t) {
@@ -235,7 +163,7 @@ final class DelaunayRefinement {
     double py = 0.5 * (plane.y[a] + plane.y[b]) + rise * dx;
     int place = walk(t, px, py);
     int encroached = place < 0 ? ~place : encroachedBy(place, px, py);
-    if (encroached != ConstrainedDelaunay.NONE) {
+    if (encroached != Triangulation.NONE) {
       return split(encroached);
     }
     return place(place, px, py);
@@ -243,10 +171,9 @@ final class DelaunayRefinement {
 
   /** The side of a triangle in a ladder that lies on a partition edge. */
   private int partitionSide(int t) {
-    int longest = ConstrainedDelaunay.NONE;
+    int longest = Triangulation.NONE;
     for (int h = 3 * t; h < 3 * t + 3; h++) {
-      boolean longer =
-          longest == ConstrainedDelaunay.NONE || plane.length(h) > plane.length(longest);
+      boolean longer = longest == Triangulation.NONE || plane.length(h) > plane.length(longest);
       if (plane.kept[h] >= 0 && longer) {
         longest = h;
       }
@@ -271,15 +198,15 @@ final class DelaunayRefinement {
       }
     }
     while (plane.orientation(plane.start(h), plane.end(h), px, py) < 0) {
-      if (plane.kept[h] != ConstrainedDelaunay.NONE) {
+      if (plane.kept[h] != Triangulation.NONE) {
         return ~h;
       }
       int entered = plane.twin[h];
       t = entered / 3;
       h =
           hand(sx, sy, px, py, plane.apex(entered)) > 0
-              ? ConstrainedDelaunay.next(entered)
-              : ConstrainedDelaunay.previous(entered);
+              ? Triangulation.next(entered)
+              : Triangulation.previous(entered);
     }
     return t;
   }
@@ -299,7 +226,7 @@ final class DelaunayRefinement {
     stamp[t] = stamps;
     for (int i = 0; i < count; i++) {
       for (int h = 3 * cavity[i]; h < 3 * cavity[i] + 3; h++) {
-        if (plane.kept[h] != ConstrainedDelaunay.NONE) {
+        if (plane.kept[h] != Triangulation.NONE) {
           if (seesUnderRightAngle(h, px, py)) {
             return h;
           }
@@ -315,7 +242,7 @@ final class DelaunayRefinement {
         }
       }
     }
-    return ConstrainedDelaunay.NONE;
+    return Triangulation.NONE;
   }
 
   private boolean seesUnderRightAngle(int h, double px, double py) {
@@ -325,7 +252,7 @@ final class DelaunayRefinement {
   }
 
   private boolean place(int t, double px, double py) {
-    int on = ConstrainedDelaunay.NONE;
+    int on = Triangulation.NONE;
     for (int h = 3 * t; h < 3 * t + 3; h++) {
       if (plane.orientation(plane.start(h), plane.end(h), px, py) == 0) {
         on = h;
@@ -335,7 +262,7 @@ final class DelaunayRefinement {
         return false;
       }
     }
-    if (on == ConstrainedDelaunay.NONE) {
+    if (on == Triangulation.NONE) {
       plane.insertInside(t, px, py);
     } else {
       plane.insertOn(on, px, py);
@@ -349,25 +276,15 @@ final class DelaunayRefinement {
       ladders.retreat(h);
       return true;
     }
-    int a = plane.start(h);
-    int b = plane.end(h);
-    double length = plane.length(h);
-    if (length < 2 * SHORTEST * extent) {
+    if (plane.length(h) < 2 * SHORTEST * extent) {
       return false;
     }
-    double part = 0.5;
-    boolean sharpA = plane.edgeOf[a] == ConstrainedDelaunay.GIVEN && sharp[a];
-    boolean sharpB = plane.edgeOf[b] == ConstrainedDelaunay.GIVEN && sharp[b];
-    if (sharpA != sharpB) {
-      double radius = extent;
-      while (length < 1.5 * radius) {
-        radius *= 0.5;
-      }
-      part = sharpA ? radius / length : 1 - radius / length;
-    }
+    int a = plane.start(h);
+    int b = plane.end(h);
+    double part = sharp.partToSplitAt(h);
     double px = plane.x[a] + part * (plane.x[b] - plane.x[a]);
     double py = plane.y[a] + part * (plane.y[b] - plane.y[a]);
-    return ladders.split(h, px, py) != ConstrainedDelaunay.NONE;
+    return ladders.split(h, px, py) != Triangulation.NONE;
   }
 
   private static double square(double value) {

@@ -17,7 +17,7 @@ final class MeshAssembly {
     this.plane = plane;
     this.wanted = wanted;
     vertexAt = new int[3 * plane.triangleCount];
-    Arrays.fill(vertexAt, ConstrainedDelaunay.NONE);
+    Arrays.fill(vertexAt, Triangulation.NONE);
   }
 
   static Mesh assemble(ConstrainedDelaunay plane, Linework lines, boolean[] meshed) {
@@ -45,7 +45,7 @@ final class MeshAssembly {
       for (int k = 0; k < 3; k++) {
         corners[3 * made + k] = vertex(h);
         edges[3 * made + k] = plane.kept[h] >= 0 ? plane.kept[h] : Mesh.NONE;
-        h = ConstrainedDelaunay.next(h);
+        h = Triangulation.next(h);
       }
       labels[made++] = lines.faceLabel[plane.face[t]];
     }
@@ -67,7 +67,7 @@ final class MeshAssembly {
 
   /** The vertex for a corner: a new one for each fan, given to all corners of the fan at once. */
   private int vertex(int corner) {
-    if (vertexAt[corner] != ConstrainedDelaunay.NONE) {
+    if (vertexAt[corner] != Triangulation.NONE) {
       return vertexAt[corner];
     }
     if (vertexCount == source.length) {
@@ -75,16 +75,12 @@ final class MeshAssembly {
     }
     source[vertexCount] = plane.corner[corner];
     int c = corner;
-    while (c != ConstrainedDelaunay.NONE
-        && wanted[c / 3]
-        && vertexAt[c] == ConstrainedDelaunay.NONE) {
+    while (c != Triangulation.NONE && wanted[c / 3] && vertexAt[c] == Triangulation.NONE) {
       vertexAt[c] = vertexCount;
       c = plane.counterClockwise(c);
     }
     c = plane.clockwise(corner);
-    while (c != ConstrainedDelaunay.NONE
-        && wanted[c / 3]
-        && vertexAt[c] == ConstrainedDelaunay.NONE) {
+    while (c != Triangulation.NONE && wanted[c / 3] && vertexAt[c] == Triangulation.NONE) {
       vertexAt[c] = vertexCount;
       c = plane.clockwise(c);
     }

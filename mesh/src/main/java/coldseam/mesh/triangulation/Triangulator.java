@@ -37,7 +37,7 @@ public final class Triangulator {
     }
     Linework ordered = lines.alongCurve();
     ConstrainedDelaunay plane = new ConstrainedDelaunay(ordered);
-    plane.fillFaces(ordered);
+    Faces.fill(plane, ordered);
     Ladders ladders = new Ladders(plane, ordered);
     ladders.build(LadderSearch.search(plane, wanted));
     new DelaunayRefinement(plane, ordered, ladders, wanted, size).run();

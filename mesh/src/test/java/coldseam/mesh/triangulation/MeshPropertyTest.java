@@ -53,8 +53,7 @@ class MeshPropertyTest {
     for (int seed = 0; seed < 60; seed++) {
       ConstrainedDelaunay plane = new Refined(RandomDrawing.of(seed).partition()).plane;
       for (int h = 0; h < 3 * plane.triangleCount; h++) {
-        if (plane.kept[h] == ConstrainedDelaunay.NONE
-            && plane.twin[h] != ConstrainedDelaunay.NONE) {
+        if (plane.kept[h] == Triangulation.NONE && plane.twin[h] != Triangulation.NONE) {
           int far = plane.apex(plane.twin[h]);
           assertThat(plane.circleContains(h / 3, plane.x[far], plane.y[far]))
               .as("seed %d side %d", seed, h)
@@ -187,7 +186,7 @@ class MeshPropertyTest {
       lines = Linework.of(partition).alongCurve();
       meshed = meshed(lines);
       plane = new ConstrainedDelaunay(lines);
-      plane.fillFaces(lines);
+      Faces.fill(plane, lines);
       ladders = new Ladders(plane, lines);
       ladders.build(LadderSearch.search(plane, meshed));
       new DelaunayRefinement(plane, lines, ladders, meshed, SizeField.NONE).run();
@@ -204,7 +203,7 @@ class MeshPropertyTest {
     boolean isByASharpCorner(int t) {
       for (int i = 0; i < 3; i++) {
         int v = plane.corner[3 * t + i];
-        if (plane.edgeOf[v] == ConstrainedDelaunay.GIVEN && hasSharpCorner(v)) {
+        if (plane.edgeOf[v] == Triangulation.GIVEN && hasSharpCorner(v)) {
           return true;
         }
         int p = plane.corner[3 * t + (i + 1) % 3];
