@@ -318,6 +318,15 @@ class FlanksTest {
     assertThat(drawn.inspect().warnings())
         .anyMatch(
             w -> w.contains("1.2987") && w.contains("ψ 'slab' by " + shift) && w.contains("upper"));
+    DrawnDetail higher =
+        wall(-1500, 1500)
+            .flank("upper", new Point(0.15, 1.5), Optional.of(Bracket.of(1.4)), Map.of());
+    assertThat(higher.inspect().warnings())
+        .anyMatch(w -> w.contains("1.4 differs from the 1.2987"));
+    DrawnDetail alike =
+        wall(-1500, 1500)
+            .flank("upper", new Point(0.15, 1.5), Optional.of(Bracket.of(1.299)), Map.of());
+    assertThat(alike.inspect().warnings()).isEmpty();
   }
 
   @Test
@@ -401,5 +410,39 @@ class FlanksTest {
     assertThat(hidden.inspect().warnings())
         .singleElement()
         .matches(w -> w.contains("changes 750 mm from it"));
+  }
+
+  @Test
+  void a_plane_that_ends_where_two_parts_meet_in_a_point_belongs_to_its_own_part() {
+    DrawnDetail drawn =
+        new DrawnDetail()
+            .know(INDOORS)
+            .know(OUTDOORS)
+            .box(BRICK, 0, 0, 300, 1000)
+            .box(CONCRETE, 300, 1000, 600, 2000)
+            .facing("lower inside", "indoors", 0, 0, 0, 1000)
+            .facing("lower outside", "outdoors", 300, 0, 300, 1000)
+            .facing("upper inside", "indoors", 300, 1000, 300, 2000)
+            .facing("upper outside", "outdoors", 600, 1000, 600, 2000);
+    double brick = 1 / (0.13 + 0.3 / 0.5 + 0.04);
+    double concrete = 1 / (0.13 + 0.3 / 2 + 0.04);
+    assertThat(drawn.inspect().flanks())
+        .extracting(f -> f.uWPerM2K().mid())
+        .usingElementComparator((a, b) -> Math.abs(a - b) < 1e-9 ? 0 : Double.compare(a, b))
+        .containsExactlyInAnyOrder(brick, brick, concrete, concrete);
+  }
+
+  @Test
+  void a_plane_is_one_only_as_far_as_it_is_straight_and_marked_alike() {
+    DrawnDetail drawn = wall(-1500, 1500).symmetry("half of it", 0, 1500, 100, 1500);
+    assertThat(drawn.inspect().heatLoss().cutOffPlanes())
+        .extracting(plane -> plane.symmetry() + " " + Math.round(plane.lengthM() * 1000))
+        .containsExactlyInAnyOrder("true 100", "false 200", "false 300");
+    DrawnDetail broken =
+        new DrawnDetail()
+            .box(INDOORS, -1500, -2000, 0, 2000)
+            .box(OUTDOORS, 300, -2000, 2000, 2000)
+            .polygon(BRICK, 0, -1500, 300, -1500, 300, 1500, 150, 1501, 0, 1500);
+    assertThat(broken.inspect().heatLoss().cutOffPlanes()).hasSize(3);
   }
 }

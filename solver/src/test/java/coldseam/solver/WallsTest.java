@@ -377,4 +377,41 @@ class WallsTest {
                     && w.contains("'left' and 'right'")
                     && w.contains("(200, 100) mm"));
   }
+
+  /**
+   * Exact: indoors, wall, a first floating space, a conductance, a second floating space, wall,
+   * outdoors; one after the other, so that temperatures divide like resistances.
+   */
+  @Test
+  void two_floating_spaces_in_a_row_divide_the_difference_like_resistances() {
+    Space first = DrawnDetail.floating(room("first", 0), 0.7, "second");
+    Space second = DrawnDetail.floating(room("second", 0), 0, "");
+    Result result =
+        new DrawnDetail()
+            .box(room("indoors", 20), 0, -200, 400, 0)
+            .box(material("brick", 0.5), 0, 0, 400, 200)
+            .box(first, 0, 200, 400, 400)
+            .box(second, 0, 600, 400, 800)
+            .box(material("timber", 0.13), 0, 800, 400, 900)
+            .box(outdoors(0), 0, 900, 400, 1100)
+            .want(new Wanted.Transmittance("all", IN, OUT, OptionalDouble.of(0.4)))
+            .solve(1e-3);
+    double r1 = (0.13 + 0.2 / 0.5 + 0.13) / 0.4;
+    double r2 = 1 / 0.7;
+    double r3 = (0.13 + 0.1 / 0.13 + 0.04) / 0.4;
+    double flow = 20 / (r1 + r2 + r3);
+    assertThat(temperature(result, "first")).isCloseTo(20 - flow * r1, within(1e-7));
+    assertThat(temperature(result, "second")).isCloseTo(flow * r3, within(1e-7));
+    assertThat(result.transmittances().get(0).valueWPerM2K().value())
+        .isCloseTo(flow / 20 / 0.4, within(1e-9));
+    assertThat(Math.abs(result.balance().relative())).isLessThan(1e-9);
+  }
+
+  private static double temperature(Result result, String name) {
+    return result.spaces().stream()
+        .filter(s -> s.name().equals(name))
+        .mapToDouble(Result.SpaceResult::temperatureC)
+        .findFirst()
+        .orElseThrow();
+  }
 }
