@@ -228,6 +228,12 @@ final class Fields {
    * @return whether it is there and `true`
    */
   boolean flag(String key) {
+    boolean quoted =
+        get(key).orElse(null) instanceof Node.Scalar scalar && scalar.style() != Node.Style.PLAIN;
+    if (quoted) {
+      problems.add(get(key).get(), "`" + key + "` is `true` or `false`, not a text", "no quotes");
+      return false;
+    }
     return word(key, List.of("true", "false")).orElse("false").equals("true");
   }
 

@@ -10,6 +10,11 @@ final class Outlines {
 
   private Outlines() {}
 
+  /** Whether two points have equal coordinates. */
+  static boolean same(Point a, Point b) {
+    return a.x() == b.x() && a.y() == b.y();
+  }
+
   /** Area by the shoelace formula, m², positive counter-clockwise; relative to the first corner. */
   static double area(List<Point> ring) {
     Point o = ring.get(0);

@@ -162,7 +162,7 @@ final class Quantities {
       boolean repeated =
           point.isPresent()
               && !points.isEmpty()
-              && points.get(points.size() - 1).equals(point.get());
+              && Outlines.same(points.get(points.size() - 1), point.get());
       if (point.isPresent() && !repeated) {
         points.add(point.get());
       }

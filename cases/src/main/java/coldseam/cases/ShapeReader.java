@@ -90,7 +90,7 @@ final class ShapeReader {
       return Optional.empty();
     }
     List<Point> ring = corners.get();
-    if (ring.get(0).equals(ring.get(ring.size() - 1))) {
+    if (Outlines.same(ring.get(0), ring.get(ring.size() - 1))) {
       ring = ring.subList(0, ring.size() - 1);
     }
     return sound(node, "polygon", "list the corners in order around it", List.of(ring));

@@ -36,6 +36,9 @@ final class SpaceReader {
    */
   void read(Node node, Map<String, ?> materials) {
     List<Node.Entry> entries = Fields.named(problems, "`spaces`", node);
+    if (entries.isEmpty() && problems.none()) {
+      problems.add(node, "there is no space", "add `indoors` and `outdoors`, say");
+    }
     Map<String, Fields> opened = new LinkedHashMap<>();
     Map<String, Double> temperatures = new LinkedHashMap<>();
     for (Node.Entry entry : entries) {
@@ -218,7 +221,7 @@ final class SpaceReader {
       return Optional.empty();
     }
     if (node.get() instanceof Node.Scalar scalar) {
-      if (scalar.text().equals("true")) {
+      if (scalar.style() == Node.Style.PLAIN && scalar.text().equals("true")) {
         return Optional.of(new Space.Floating(0, ""));
       }
       problems.add(

@@ -24,7 +24,7 @@ final class Strip {
    * @param rightM how far it reaches to the right, m
    */
   Strip(List<Point> line, double leftM, double rightM) {
-    this.closed = line.size() > 3 && line.get(0).equals(line.get(line.size() - 1));
+    this.closed = line.size() > 3 && Outlines.same(line.get(0), line.get(line.size() - 1));
     this.line = closed ? line.subList(0, line.size() - 1) : line;
     this.leftM = leftM;
     this.rightM = rightM;
