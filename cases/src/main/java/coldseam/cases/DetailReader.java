@@ -91,7 +91,7 @@ final class DetailReader {
     if (node.isEmpty()) {
       return List.of();
     }
-    pass.place("section", "", node.get());
+    pass.place("section", "", top.keyNode("section"));
     List<Area> areas = new SectionReader(pass, fills).read(node.get());
     if (problems.none() && haveSpaces) {
       boolean conducts = false;

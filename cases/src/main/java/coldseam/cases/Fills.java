@@ -129,7 +129,7 @@ final class Fills {
       List<String> near = Library.nearest(name);
       right =
           near.isEmpty()
-              ? "define it under `materials`; " + right
+              ? "define it under `materials`, or see `cli/coldseam materials`"
               : "did you mean " + Fields.orList(near) + " of the library?";
     }
     pass.problems()

@@ -12,13 +12,13 @@ enum Place {
   /** A length that counts in a sum. */
   EXTENT(Dimension.LENGTH, "m", 0, 1e6, "a length, 0 or more, e.g. `1.2 m`"),
   /** λ. */
-  CONDUCTIVITY(Dimension.CONDUCTIVITY, "W/(m K)", 0, 1e5, "0 or more W/(m K), e.g. `0.035`"),
+  CONDUCTIVITY(Dimension.CONDUCTIVITY, "W/(m K)", 0, 1e5, "0 to 100000 W/(m K), e.g. `0.035`"),
   /** Rs. */
-  FILM(Dimension.RESISTANCE, "m2 K/W", 0, 1e6, "a film resistance, 0 or more m2 K/W, e.g. `0.13`"),
+  FILM(Dimension.RESISTANCE, "m2 K/W", 0, 1e6, "0 to 1000000 m2 K/W, e.g. `0.13`"),
   /** R of a layer. */
   RESISTANCE(Dimension.RESISTANCE, "m2 K/W", 1e-6, 1e6, "more than 0 m2 K/W, e.g. `R-13`"),
   /** U. */
-  TRANSMITTANCE(Dimension.TRANSMITTANCE, "W/(m2 K)", 0, 1e5, "0 or more W/(m2 K), e.g. `1.4`"),
+  TRANSMITTANCE(Dimension.TRANSMITTANCE, "W/(m2 K)", 0, 1e5, "0 to 100000 W/(m2 K), e.g. `1.4`"),
   /** Conductance of a floating space, per metre of detail. */
   CONDUCTANCE(
       Dimension.CONDUCTIVITY, "W/(m K)", 0, 1e6, "0 or more W/K per metre of detail, e.g. `1.5`"),

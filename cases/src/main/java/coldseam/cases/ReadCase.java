@@ -1,10 +1,10 @@
 package coldseam.cases;
 
-import coldseam.mesh.plane.Point;
 import coldseam.solver.detail.Accuracy;
 import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.Fault;
 import java.nio.file.Path;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -94,35 +94,35 @@ final class ReadCase implements Case {
   @Override
   public Problem locate(Fault fault) {
     Node node = find(fault.part(), fault.name());
-    String wrong = fault.message();
-    if (fault.where().isPresent()) {
-      Point at = fault.where().get();
-      wrong +=
-          " (at ["
-              + Figures.of(at.x() / unit.metres())
-              + ", "
-              + Figures.of(at.y() / unit.metres())
-              + "] "
-              + unit.name()
-              + ")";
+    String message = fault.message();
+    if (!fault.name().isEmpty() && !fault.part().equals("section")) {
+      String part = fault.part().equals("psi") ? "ψ" : fault.part();
+      message = part + " `" + fault.name() + "`: " + message;
     }
-    int line = node == null ? 0 : node.line();
-    int column = node == null ? 0 : node.column();
-    return new Problem(file.toString(), line, column, wrong, Optional.empty());
+    int cut = message.indexOf("; ");
+    Optional<String> right = cut < 0 ? Optional.empty() : Optional.of(message.substring(cut + 2));
+    return new Problem(
+        file.toString(),
+        node == null ? 0 : node.line(),
+        node == null ? 0 : node.column(),
+        cut < 0 ? message : message.substring(0, cut),
+        right);
   }
 
   /** Where a thing is written, in the base case or else in the first variant that has it. */
   private Node find(String part, String name) {
-    for (Map<String, Node> ofPass : places.values()) {
-      Node node = ofPass.get(Pass.key(part, name));
-      if (node != null) {
-        return node;
-      }
+    List<String> names = new ArrayList<>(List.of(name));
+    int several = name.indexOf(", ");
+    if (several > 0) {
+      names.add(name.substring(0, several));
     }
-    for (Map<String, Node> ofPass : places.values()) {
-      Node node = ofPass.get(Pass.key(part, ""));
-      if (node != null) {
-        return node;
+    names.add("");
+    for (String wanted : names) {
+      for (Map<String, Node> ofPass : places.values()) {
+        Node node = ofPass.get(Pass.key(part, wanted));
+        if (node != null) {
+          return node;
+        }
       }
     }
     return null;

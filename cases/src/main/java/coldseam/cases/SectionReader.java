@@ -157,6 +157,7 @@ final class SectionReader {
     }
     Optional<List<List<Point>>> rings = shapes.rings(key, value.get(), called);
     pass.place("section", called, node);
+    fill.ifPresent(f -> pass.place("section", f.name(), node));
     if (fill.isEmpty() || rings.isEmpty()) {
       return List.of();
     }
@@ -182,6 +183,7 @@ final class SectionReader {
       String called =
           called(path + ".layer[" + layer.number() + "]", name, Optional.of(layer.fill()));
       pass.place("section", called, layer.node());
+      pass.place("section", layer.fill().name(), layer.node());
       areas.add(new Area(called, layer.fill(), List.of(layer.ring()), glazing));
     }
     return areas;

@@ -32,7 +32,9 @@ final class Variant {
           problems.add(
               entry.key(),
               "the case has no value `" + Node.shortened(entry.key().text()) + "` to replace",
-              Problems.suggestion(entry.key().text(), baseValues));
+              baseValues.isEmpty()
+                  ? "give the case `values` that variants can replace"
+                  : Problems.suggestion(entry.key().text(), baseValues));
         }
         values.add(entry);
       }
