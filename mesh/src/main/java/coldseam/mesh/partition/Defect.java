@@ -28,9 +28,9 @@ public record Defect(Kind kind, Point where, double sizeM, List<Integer> labels)
     GAP,
     /**
      * What shows of an earlier area between later ones, or along its own edge beside a later one:
-     * thin, no wider than 1,000 closing lengths (1 mm) and a tenth of the area itself; probably not
-     * meant. A strip with its own outline on both long sides is a drawn sheet and never a sliver,
-     * however thin. Size: its mean width.
+     * thin, narrower than 99 closing lengths (just under 0.1 mm) and no wider than a tenth of the
+     * area itself; probably not meant. A strip with its own outline on both long sides is a drawn
+     * sheet and never a sliver, however thin. Size: its mean width.
      */
     SLIVER,
     /**

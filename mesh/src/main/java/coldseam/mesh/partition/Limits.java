@@ -14,8 +14,11 @@ final class Limits {
   /** Width of a strip over the thickness of the areas concerned up to which it looks unmeant. */
   static final double MUCH_THINNER = TIE / 10;
 
-  /** A strip left of an earlier area is a sliver up to this many closing lengths: 1 mm. */
-  static final double SLIVER_CLOSING_LENGTHS = 1000 * TIE;
+  /**
+   * A strip left of an earlier area is a sliver up to this many closing lengths: below 0.1 mm. A
+   * wider one may be drawn on purpose, as the wall of a tube is by a box laid in a box.
+   */
+  static final double SLIVER_CLOSING_LENGTHS = 99;
 
   /** A face is left over when at least this part of its outline belongs to other areas. */
   static final double LEFTOVER = 0.25 / TIE;
