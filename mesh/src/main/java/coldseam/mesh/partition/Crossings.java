@@ -58,10 +58,9 @@ final class Crossings implements SegmentIntersector {
     Coordinate b = one.getCoordinate(1);
     Coordinate c = two.getCoordinate(0);
     Coordinate d = two.getCoordinate(1);
-    int together = node(two, a) + node(two, b) + node(one, c) + node(one, d);
-    // An end that both share has been counted twice.
-    together -= (a == c || a == d ? 1 : 0) + (b == c || b == d ? 1 : 0);
-    if (together >= 2) {
+    boolean touch = node(two, a) | node(two, b) | node(one, c) | node(one, d);
+    if (touch) {
+      // Bent to pass through the vertex, the two meet there and nowhere else but at such vertices.
       return;
     }
     intersector.computeIntersection(a, b, c, d);
@@ -73,19 +72,18 @@ final class Crossings implements SegmentIntersector {
     }
   }
 
-  /** Puts a node on a segment at a vertex near it; 1 if the vertex is near, 0 if not. */
-  private int node(SegmentString segment, Coordinate vertex) {
+  /** Whether a vertex is near a segment; puts a node there if so. */
+  private boolean node(SegmentString segment, Coordinate vertex) {
     Coordinate a = segment.getCoordinate(0);
     Coordinate b = segment.getCoordinate(1);
-    if (vertex == a || vertex == b) {
-      return 1;
+    boolean near =
+        vertex == a
+            || vertex == b
+            || Segments.distance(vertex.x, vertex.y, a.x, a.y, b.x, b.y) <= snapM;
+    if (near) {
+      add(segment, vertex);
     }
-    double distance = Segments.distance(vertex.x, vertex.y, a.x, a.y, b.x, b.y);
-    if (distance > snapM) {
-      return 0;
-    }
-    add(segment, vertex);
-    return 1;
+    return near;
   }
 
   private static void add(SegmentString segment, Coordinate point) {

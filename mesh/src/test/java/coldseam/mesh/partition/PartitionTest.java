@@ -42,10 +42,21 @@ class PartitionTest {
   @Test
   void one_area_may_be_laid_under_and_over_others_of_its_label() {
     Partition partition =
-        of(List.of(box(1, 0, 0, 3, 3), box(2, 0.5, 0.5, 2.5, 2.5), box(1, 1, 1, 2, 2)));
-    assertThat(partition.faceCount()).isEqualTo(3);
-    assertThat(partition.labelArea(1)).isCloseTo(9 - 4 + 1, EXACT);
-    assertThat(partition.labelArea(2)).isCloseTo(3, EXACT);
+        of(
+            List.of(
+                box(1, 0, 0, 5, 5),
+                box(2, 0.5, 0.5, 4.5, 4.5),
+                box(1, 1, 1, 4, 4),
+                box(2, 1.5, 1.5, 3.5, 3.5),
+                box(1, 2, 2, 3, 3)));
+    assertThat(partition.faceCount()).isEqualTo(5);
+    assertThat(partition.labelArea(1)).isCloseTo(25 - 16 + 9 - 4 + 1, EXACT);
+    assertThat(partition.labelArea(2)).isCloseTo(16 - 9 + 4 - 1, EXACT);
+    double[] faces = new double[5];
+    for (int f = 0; f < faces.length; f++) {
+      faces[f] = partition.faceArea(f);
+    }
+    assertThat(faces).containsExactlyInAnyOrder(9, 7, 5, 3, 1);
   }
 
   @Test
@@ -261,6 +272,36 @@ class PartitionTest {
   void a_layer_left_of_a_box_covered_by_another_is_no_sliver() {
     Partition partition = of(List.of(box(0, 0, 0, 0.4, 2.5), box(1, 0.015, 0, 0.4, 2.5)));
     assertThat(partition.defects()).isEmpty();
+  }
+
+  @Test
+  void a_sheet_drawn_thinner_than_any_sliver_is_none() {
+    double thickness = 2e-5;
+    LabelledArea block = polygon(0, 0, 0, 1, 0, 1, 1, 0.5, 1, 0.5, 0.2, 0, 0.2);
+    LabelledArea strip = box(1, -1, 0.5, 0.4, 0.5 + thickness);
+    LabelledArea fin =
+        polygon(2, -1, 0.6, -0.5, 0.6, -0.5, 0.7, 0.45, 0.7, 0.45, 0.7 + thickness, -1, 0.7001);
+    LabelledArea ground = box(3, -2, -2, 2, 2);
+    Partition partition = of(List.of(ground, block, strip, fin));
+    assertThat(partition.defects()).isEmpty();
+    assertThat(partition.labelArea(1)).isCloseTo(1.4 * thickness, within(1e-14));
+  }
+
+  @Test
+  void an_arc_of_many_short_chords_stays_within_the_joining_length() {
+    double radius = 0.01;
+    double[] xy = new double[2 * 6000];
+    for (int i = 0; i < xy.length / 2; i++) {
+      double angle = 2 * Math.PI * i / (xy.length / 2);
+      xy[2 * i] = radius * Math.cos(angle);
+      xy[2 * i + 1] = radius * Math.sin(angle);
+    }
+    Partition partition = Partition.of(List.of(polygon(0, xy)), List.of(), Resolution.STANDARD);
+    double circumference = 2 * Math.PI * radius;
+    assertThat(partition.labelArea(0))
+        .isCloseTo(Math.PI * radius * radius, within(1e-8 * circumference));
+    assertThat(partition.vertexCount()).isBetween(1000, 5000);
+    assertThat(partition.largestDisplacementM()).isLessThanOrEqualTo(1e-8);
   }
 
   @Test
