@@ -15,10 +15,10 @@ import coldseam.solver.detail.Fault;
 import coldseam.solver.detail.FilmSet;
 import coldseam.solver.detail.Geometry;
 import coldseam.solver.detail.Subtraction;
+import coldseam.solver.detail.Wanted;
 import coldseam.solver.result.Plan;
 import coldseam.solver.result.Result;
 import java.util.Collections;
-import java.util.IdentityHashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -58,9 +58,6 @@ public final class Solver {
    */
   public static Inspection inspect(Detail detail) {
     Resolved resolved = Resolved.of(detail);
-    for (Subtraction.OfDetail other : resolved.plan().otherDetails()) {
-      nested(other, () -> Resolved.of(other.detail()));
-    }
     return new Inspection(
         resolved.partition(),
         resolved.heatLoss(),
@@ -90,7 +87,7 @@ public final class Solver {
     boolean shared = surfaceNeeded && plan.sameFilms();
     Solution heatLoss =
         resolved.solve(resolved.heatLoss(), accuracy, shared, plan.statedTemperatures(), progress);
-    Map<Subtraction.OfDetail, Quantity> others = solveOthers(plan, accuracy, progress);
+    Map<Subtraction.OfDetail, Quantity> others = solveOthers(resolved, accuracy, progress);
     start = lap(times, "heat loss", start);
 
     Optional<Solution> surface = Optional.empty();
@@ -118,26 +115,19 @@ public final class Solver {
   }
 
   private static Map<Subtraction.OfDetail, Quantity> solveOthers(
-      Plan plan, Accuracy accuracy, Progress progress) {
-    Map<Subtraction.OfDetail, Quantity> others = new IdentityHashMap<>();
-    for (Subtraction.OfDetail other : plan.otherDetails()) {
-      others.put(
-          other,
-          nested(
-              other,
-              () -> {
-                Resolved resolved = Resolved.of(other.detail());
-                Solution solution =
-                    resolved.solve(
-                        resolved.heatLoss(),
-                        accuracy,
-                        false,
-                        resolved.plan().statedTemperatures(),
-                        progress);
-                return resolved.plan().coupling(solution, other.warm(), other.cold());
-              }));
-    }
-    return others;
+      Resolved resolved, Accuracy accuracy, Progress progress) {
+    Map<Subtraction.OfDetail, Quantity> couplings = new LinkedHashMap<>();
+    resolved
+        .others()
+        .forEach(
+            (of, other) -> {
+              double[] temperatures = other.plan().statedTemperatures();
+              Solution solution =
+                  other.solve(other.heatLoss(), accuracy, false, temperatures, progress);
+              couplings.put(
+                  of, nested(of, () -> other.plan().coupling(solution, of.warm(), of.cold())));
+            });
+    return couplings;
   }
 
   /** Names the subtracted detail in whatever is at fault in it. */
@@ -168,9 +158,13 @@ public final class Solver {
     return now;
   }
 
-  /** A detail with its partition, conditions and plan. */
+  /** A detail with its partition, conditions and plan, and the details it subtracts. */
   private record Resolved(
-      Detail detail, Partition partition, Conditions heatLoss, Conditions surface, Plan plan) {
+      Partition partition,
+      Conditions heatLoss,
+      Conditions surface,
+      Plan plan,
+      Map<Subtraction.OfDetail, Resolved> others) {
     static Resolved of(Detail detail) {
       if (detail.geometry() != Geometry.PLANE) {
         throw new DetailException(
@@ -180,8 +174,25 @@ public final class Solver {
       Partition partition = partition(detail);
       Conditions heatLoss = Conditions.of(detail, partition, FilmSet.HEAT_LOSS);
       Conditions surface = Conditions.of(detail, partition, FilmSet.SURFACE);
-      return new Resolved(
-          detail, partition, heatLoss, surface, Plan.of(detail, partition, heatLoss, surface));
+      Map<Subtraction.OfDetail, Resolved> others = others(detail);
+      Map<Subtraction.OfDetail, Plan> plans = new LinkedHashMap<>();
+      others.forEach((of, other) -> plans.put(of, other.plan()));
+      Plan plan = Plan.of(detail, partition, heatLoss, surface, plans);
+      return new Resolved(partition, heatLoss, surface, plan, others);
+    }
+
+    private static Map<Subtraction.OfDetail, Resolved> others(Detail detail) {
+      Map<Subtraction.OfDetail, Resolved> others = new LinkedHashMap<>();
+      for (Wanted wanted : detail.wanted()) {
+        if (wanted instanceof Wanted.Psi psi) {
+          for (Subtraction subtraction : psi.subtractions()) {
+            if (subtraction instanceof Subtraction.OfDetail of) {
+              others.put(of, nested(of, () -> Resolved.of(of.detail())));
+            }
+          }
+        }
+      }
+      return others;
     }
 
     private static Partition partition(Detail detail) {

@@ -7,10 +7,12 @@ import static coldseam.solver.detail.DimensionSystem.EXTERNAL;
 import static coldseam.solver.detail.DimensionSystem.INTERNAL;
 import static coldseam.solver.detail.DimensionSystem.OVERALL_INTERNAL;
 import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.catchThrowableOfType;
 import static org.assertj.core.api.Assertions.within;
 
 import coldseam.mesh.plane.Point;
 import coldseam.solver.conduction.Quantity;
+import coldseam.solver.detail.DetailException;
 import coldseam.solver.detail.FilmSet;
 import coldseam.solver.detail.Material;
 import coldseam.solver.detail.Space;
@@ -284,6 +286,43 @@ class JunctionsTest {
     assertThat(psi(result, "half").subtracted())
         .singleElement()
         .satisfies(term -> assertThat(term.uWPerM2K()).isEmpty());
+    assertThat(result.assumptions())
+        .anyMatch(a -> a.what().equals("in 'plain wall': film at indoors, heat loss"));
+  }
+
+  @Test
+  void a_fault_in_a_detail_that_is_taken_off_names_it() {
+    DrawnDetail broken =
+        new DrawnDetail().box(material("brick", 0.5), 0, 0, 100, 100).know(room("attic", 5));
+    assertThat(
+            catchThrowableOfType(
+                    DetailException.class,
+                    () ->
+                        halfSlab()
+                            .psi("half", IN, OUT, Map.of(), INTERNAL, off("lost", broken, IN))
+                            .inspect())
+                .faults())
+        .anyMatch(f -> f.name().equals("lost") && f.message().contains("space 'attic'"));
+    assertThat(
+            catchThrowableOfType(
+                    DetailException.class,
+                    () ->
+                        halfSlab()
+                            .psi(
+                                "half",
+                                IN,
+                                OUT,
+                                Map.of(),
+                                INTERNAL,
+                                off("strange", halfSlab(), List.of("attic")))
+                            .inspect())
+                .faults())
+        .singleElement()
+        .matches(f -> f.name().equals("strange") && f.message().contains("'attic'"));
+  }
+
+  private static Subtraction off(String name, DrawnDetail drawn, List<String> warm) {
+    return new Subtraction.OfDetail(name, drawn.detail(), warm, OUT);
   }
 
   /**

@@ -3,7 +3,10 @@ package coldseam.solver.detail;
 import coldseam.mesh.partition.Partition;
 import coldseam.mesh.plane.Point;
 import coldseam.mesh.plane.Resolution;
+import java.util.ArrayList;
+import java.util.HashMap;
 import java.util.List;
+import java.util.Map;
 
 /**
  * Whether the conducting side of an edge belongs to an area laid as glazing or frame. Areas of one
@@ -13,33 +16,35 @@ final class GlazingLookup {
   /** How far inside an edge its area is looked up, in closing lengths of the resolution. */
   private static final double STEP_INSIDE = 10;
 
-  private final Detail detail;
   private final Partition partition;
   private final List<Fill> fills;
-  private final boolean any;
+  private final Map<Fill, List<Area>> laid = new HashMap<>();
 
   GlazingLookup(Detail detail, Partition partition) {
-    this.detail = detail;
     this.partition = partition;
     fills = detail.fills();
-    any = detail.areas().stream().anyMatch(Area::glazing);
+    if (detail.areas().stream().anyMatch(Area::glazing)) {
+      for (Area area : detail.areas()) {
+        laid.computeIfAbsent(area.fill(), fill -> new ArrayList<>()).add(area);
+      }
+    }
   }
 
   boolean onEdge(int edge, boolean conductsLeft) {
-    if (!any) {
+    if (laid.isEmpty()) {
       return false;
     }
     Fill fill = fills.get(conductsLeft ? partition.leftLabel(edge) : partition.rightLabel(edge));
-    List<Area> laid = detail.areas().stream().filter(area -> area.fill().equals(fill)).toList();
-    if (laid.stream().allMatch(Area::glazing)) {
+    List<Area> ofFill = laid.get(fill);
+    if (ofFill.stream().allMatch(Area::glazing)) {
       return true;
     }
-    if (laid.stream().noneMatch(Area::glazing)) {
+    if (ofFill.stream().noneMatch(Area::glazing)) {
       return false;
     }
     Point probe = justInside(edge, conductsLeft);
     boolean glazing = false;
-    for (Area area : laid) {
+    for (Area area : ofFill) {
       if (covers(area, probe)) {
         glazing = area.glazing();
       }

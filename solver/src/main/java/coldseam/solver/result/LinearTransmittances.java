@@ -21,13 +21,6 @@ final class LinearTransmittances {
     return !plans.isEmpty();
   }
 
-  /** The other details whose L2D is taken off. */
-  List<Subtraction.OfDetail> otherDetails() {
-    List<Subtraction.OfDetail> others = new ArrayList<>();
-    plans.forEach(plan -> plan.terms().forEach(term -> term.other().ifPresent(others::add)));
-    return others;
-  }
-
   /** By how much each ψ shifts because a flank's U is typed and not that of the drawn layers. */
   List<String> shifts(PlacedFlank flank) {
     List<String> shifts = new ArrayList<>();

@@ -48,7 +48,12 @@ public final class Plan {
   private final List<Assumption> assumptions;
   private final List<String> warnings;
 
-  private Plan(Detail detail, Partition partition, Conditions heatLoss, Conditions surface) {
+  private Plan(
+      Detail detail,
+      Partition partition,
+      Conditions heatLoss,
+      Conditions surface,
+      Map<Subtraction.OfDetail, Plan> others) {
     this.detail = detail;
     this.partition = partition;
     this.heatLoss = heatLoss;
@@ -67,15 +72,19 @@ public final class Plan {
     faults.addAll(planner.faults());
     faults.addAll(transmittances.faults());
     faults.addAll(section.faults());
+    others.forEach((of, other) -> faults.addAll(other.sides(of.name(), of.warm(), of.cold())));
     if (!faults.isEmpty()) {
       throw new DetailException(faults);
     }
-    assumptions = collectAssumptions(planner.assumptions());
+    assumptions = collectAssumptions(planner.assumptions(), others);
     warnings = new ArrayList<>(section.warnings());
     if (!module) {
       warnings.addAll(cutOffs.distances());
     }
     flanks.forEach(this::warnOfFlank);
+    others.forEach(
+        (of, other) ->
+            other.warnings.forEach(warning -> warnings.add("in '" + of.name() + "': " + warning)));
   }
 
   /**
@@ -85,13 +94,18 @@ public final class Plan {
    * @param partition its partition
    * @param heatLoss conditions with the films for heat loss
    * @param surface conditions with the films for surface temperatures
+   * @param others the plan of every detail that a ψ subtracts
    * @return the plan
    * @throws DetailException if a flank has no U, a length or width that is needed cannot be
    *     derived, or a wanted result names what is not there; all such faults together
    */
   public static Plan of(
-      Detail detail, Partition partition, Conditions heatLoss, Conditions surface) {
-    return new Plan(detail, partition, heatLoss, surface);
+      Detail detail,
+      Partition partition,
+      Conditions heatLoss,
+      Conditions surface,
+      Map<Subtraction.OfDetail, Plan> others) {
+    return new Plan(detail, partition, heatLoss, surface, others);
   }
 
   /** Every flank that has a U, named or found, in the order named, then found. */
@@ -139,11 +153,6 @@ public final class Plan {
   /** Whether a U is wanted. */
   public boolean transmittanceWanted() {
     return transmittances.any();
-  }
-
-  /** The other details whose L2D is taken off. */
-  public List<Subtraction.OfDetail> otherDetails() {
-    return psi.otherDetails();
   }
 
   /**
@@ -208,21 +217,22 @@ public final class Plan {
    * @param warm names on one side
    * @param cold names on the other
    * @return W/(m·K)
-   * @throws DetailException if a name is not one of the spaces
    */
   public Quantity coupling(Solution heatLossSolution, List<String> warm, List<String> cold) {
-    SpaceGroups groups = new SpaceGroups(detail, "section", detail.title());
-    int[] one = groups.indices(warm);
-    int[] other = groups.indices(cold);
-    groups.checkApart(one, other);
-    if (!groups.faults().isEmpty()) {
-      throw new DetailException(groups.faults());
-    }
+    int[] one = warm.stream().mapToInt(detail::spaceIndex).toArray();
+    int[] other = cold.stream().mapToInt(detail::spaceIndex).toArray();
     int[] floating =
         Arrays.stream(Couplings.floating(detail))
             .filter(f -> !Couplings.contains(one, f) && !Couplings.contains(other, f))
             .toArray();
     return new Couplings(detail, heatLossSolution).between(one, other, floating);
+  }
+
+  /** Faults in the sides between which another detail's L2D is asked of this one. */
+  private List<Fault> sides(String name, List<String> warm, List<String> cold) {
+    SpaceGroups groups = new SpaceGroups(detail, "psi", name);
+    groups.checkApart(groups.indices(warm), groups.indices(cold));
+    return groups.faults();
   }
 
   /**
@@ -231,7 +241,7 @@ public final class Plan {
    * @param heatLossSolution the solution with the films for heat loss
    * @param surfaceSolution the one for surface temperatures; the same one if {@link #sameFilms()};
    *     empty if not {@link #surfaceNeeded()}
-   * @param others L2D of each of {@link #otherDetails()}
+   * @param others L2D of each detail that a ψ subtracts
    * @param timesMs milliseconds by stage, in the order run; asked for last
    * @return the result
    */
@@ -276,7 +286,8 @@ public final class Plan {
         timesMs.get());
   }
 
-  private List<Assumption> collectAssumptions(List<Assumption> ofPsi) {
+  private List<Assumption> collectAssumptions(
+      List<Assumption> ofPsi, Map<Subtraction.OfDetail, Plan> others) {
     Set<Assumption> all = new LinkedHashSet<>(detail.assumptions());
     all.addAll(heatLoss.assumptions());
     if (surfaceNeeded()) {
@@ -294,6 +305,7 @@ public final class Plan {
       }
     }
     all.addAll(ofPsi);
+    others.forEach((of, other) -> other.heatLossAssumptions(of.name()).forEach(all::add));
     all.addAll(transmittances.assumptions());
     if (module && cutOffs.any()) {
       all.add(
@@ -310,6 +322,17 @@ public final class Plan {
               "by convention of this tool"));
     }
     return new ArrayList<>(all);
+  }
+
+  /** What was assumed for the L2D that another detail subtracts. */
+  private List<Assumption> heatLossAssumptions(String name) {
+    List<Assumption> of = new ArrayList<>(detail.assumptions());
+    of.addAll(heatLoss.assumptions());
+    return of.stream()
+        .map(
+            line ->
+                new Assumption("in '" + name + "': " + line.what(), line.value(), line.source()))
+        .toList();
   }
 
   private void warnOfFlank(PlacedFlank flank) {
