@@ -3,9 +3,9 @@ package coldseam.solver.detail;
 import coldseam.mesh.partition.LabelledArea;
 import coldseam.mesh.partition.LabelledLine;
 import java.util.ArrayList;
-import java.util.LinkedHashSet;
+import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Set;
+import java.util.Map;
 
 /**
  * One junction as it is to be solved. Immutable.
@@ -40,21 +40,34 @@ public record Detail(
     assumptions = List.copyOf(assumptions);
   }
 
-  /** The distinct fills of the areas in the order first laid; a fill's index is its label. */
+  /**
+   * The distinct fills of the areas in the order first laid; a fill's index is its label.
+   *
+   * @throws IllegalArgumentException if two different fills have one name
+   */
   public List<Fill> fills() {
-    Set<Fill> distinct = new LinkedHashSet<>();
+    return List.copyOf(fillsByName().values());
+  }
+
+  /** By name, since comparing whole records costs a short run more than all else here. */
+  private Map<String, Fill> fillsByName() {
+    Map<String, Fill> distinct = new LinkedHashMap<>();
     for (Area area : areas) {
-      distinct.add(area.fill());
+      Fill fill = area.fill();
+      Fill known = distinct.putIfAbsent(fill.name(), fill);
+      if (known != null && known != fill && !known.equals(fill)) {
+        throw new IllegalArgumentException("two fills are called " + fill.name());
+      }
     }
-    return List.copyOf(distinct);
+    return distinct;
   }
 
   /** The areas with the index of their fill as label, ready to be made into a partition. */
   public List<LabelledArea> labelledAreas() {
-    List<Fill> fills = fills();
+    List<String> names = List.copyOf(fillsByName().keySet());
     List<LabelledArea> labelled = new ArrayList<>(areas.size());
     for (Area area : areas) {
-      labelled.add(new LabelledArea(fills.indexOf(area.fill()), area.rings()));
+      labelled.add(new LabelledArea(names.indexOf(area.fill().name()), area.rings()));
     }
     return labelled;
   }
