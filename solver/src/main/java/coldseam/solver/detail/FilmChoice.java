@@ -33,7 +33,8 @@ final class FilmChoice {
     }
   }
 
-  private record Group(int space, String source) {}
+  /** Films from one source at one space: what was chosen, with the length it holds on, m. */
+  private record Group(int space, String source, Map<String, Double> lengthByWords) {}
 
   private final OutlineReading reading;
   private final Detail detail;
@@ -59,7 +60,7 @@ final class FilmChoice {
 
   /** Sets the resistance of every film edge and says what was chosen. */
   List<Assumption> choose() {
-    Map<Group, Map<String, Double>> used = new LinkedHashMap<>();
+    Map<String, Group> used = new LinkedHashMap<>();
     Map<Integer, Map<Double, Double>> undecided = new TreeMap<>();
     for (int edge = 0; edge < partition.edgeCount(); edge++) {
       FilmRule rule = reading.rule(edge);
@@ -79,23 +80,26 @@ final class FilmChoice {
               .merge(film, partition.edgeLength(edge), Double::sum);
         }
       }
-      used.computeIfAbsent(new Group(space, rule.source()), g -> new TreeMap<>())
+      used.computeIfAbsent(
+              space + " " + rule.source(), key -> new Group(space, rule.source(), new TreeMap<>()))
+          .lengthByWords()
           .merge(words, partition.edgeLength(edge), Double::sum);
     }
     return assumptions(used, undecided);
   }
 
   private List<Assumption> assumptions(
-      Map<Group, Map<String, Double>> used, Map<Integer, Map<Double, Double>> undecided) {
+      Map<String, Group> used, Map<Integer, Map<Double, Double>> undecided) {
     List<Assumption> lines = new ArrayList<>();
     String set = reading.filmSet() == FilmSet.HEAT_LOSS ? "heat loss" : "surface temperature";
-    used.forEach(
-        (group, words) ->
-            lines.add(
-                new Assumption(
-                    "film at " + detail.spaces().get(group.space()).name() + ", " + set,
-                    String.join("; ", words.keySet()),
-                    group.source())));
+    used.values()
+        .forEach(
+            group ->
+                lines.add(
+                    new Assumption(
+                        "film at " + detail.spaces().get(group.space()).name() + ", " + set,
+                        String.join("; ", group.lengthByWords().keySet()),
+                        group.source())));
     undecided.forEach(
         (space, films) ->
             films.forEach(

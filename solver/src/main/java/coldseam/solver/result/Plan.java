@@ -18,11 +18,10 @@ import coldseam.solver.detail.Wording;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.BitSet;
-import java.util.LinkedHashSet;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.Set;
 import java.util.function.Function;
 import java.util.function.Supplier;
 
@@ -288,7 +287,7 @@ public final class Plan {
 
   private List<Assumption> collectAssumptions(
       List<Assumption> ofPsi, Map<Subtraction.OfDetail, Plan> others) {
-    Set<Assumption> all = new LinkedHashSet<>(detail.assumptions());
+    List<Assumption> all = new ArrayList<>(detail.assumptions());
     all.addAll(heatLoss.assumptions());
     if (surfaceNeeded()) {
       all.addAll(surface.assumptions());
@@ -321,7 +320,16 @@ public final class Plan {
               "from the balance with the films for heat loss, used for surface temperatures too",
               "by convention of this tool"));
     }
-    return new ArrayList<>(all);
+    return withoutRepeats(all);
+  }
+
+  /** Each line once, where it stands first. */
+  private static List<Assumption> withoutRepeats(List<Assumption> all) {
+    Map<String, Assumption> once = new LinkedHashMap<>();
+    for (Assumption line : all) {
+      once.putIfAbsent(String.join("\n", line.what(), line.value(), line.source()), line);
+    }
+    return new ArrayList<>(once.values());
   }
 
   /** What was assumed for the L2D that another detail subtracts. */

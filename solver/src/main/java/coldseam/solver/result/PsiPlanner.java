@@ -258,9 +258,7 @@ final class PsiPlanner {
             words(system) + " length of flank '" + flank.name() + "'",
             Wording.length(length.valueM()) + ", " + length.derivation(),
             "ISO 13789, " + words(system) + " dimensions");
-    if (!assumptions.contains(line)) {
-      assumptions.add(line);
-    }
+    assumptions.add(line);
   }
 
   private static String words(DimensionSystem system) {
