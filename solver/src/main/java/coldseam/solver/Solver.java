@@ -86,7 +86,7 @@ public final class Solver {
     boolean surfaceNeeded = plan.surfaceNeeded();
     boolean shared = surfaceNeeded && plan.sameFilms();
     Solution heatLoss =
-        resolved.solve(resolved.heatLoss(), accuracy, shared, plan.statedTemperatures(), progress);
+        resolved.solveHeatLoss(accuracy, shared || plan.heatLossTemperaturesWanted(), progress);
     Map<Subtraction.OfDetail, Quantity> others = solveOthers(resolved, accuracy, progress);
     start = lap(times, "heat loss", start);
 
@@ -122,8 +122,10 @@ public final class Solver {
         .forEach(
             (of, other) -> {
               double[] temperatures = other.plan().statedTemperatures();
+              Conduction.Goal goal =
+                  new Conduction.Goal(accuracy, true, false, false, temperatures);
               Solution solution =
-                  other.solve(other.heatLoss(), accuracy, false, temperatures, progress);
+                  Conduction.solve(other.partition(), other.heatLoss(), goal, progress);
               couplings.put(
                   of, nested(of, () -> other.plan().coupling(solution, of.warm(), of.cold())));
             });
@@ -204,20 +206,15 @@ public final class Solver {
       }
     }
 
-    Solution solve(
-        Conditions conditions,
-        Accuracy accuracy,
-        boolean surfaceTemperatures,
-        double[] temperaturesC,
-        Progress progress) {
+    Solution solveHeatLoss(Accuracy accuracy, boolean temperatures, Progress progress) {
       Conduction.Goal goal =
           new Conduction.Goal(
               accuracy,
               plan.psiWanted(),
               plan.transmittanceWanted(),
-              surfaceTemperatures,
-              temperaturesC);
-      return Conduction.solve(partition, conditions, goal, progress);
+              temperatures,
+              plan.statedTemperatures());
+      return Conduction.solve(partition, heatLoss, goal, progress);
     }
   }
 }

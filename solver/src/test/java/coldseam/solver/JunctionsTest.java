@@ -367,6 +367,55 @@ class JunctionsTest {
     assertThat(coldest.at().distance(new Point(0, 0))).isLessThan(1e-9);
   }
 
+  /** Invariance: a junction turned, mirrored and moved far away is the same junction. */
+  @Test
+  void a_turned_and_mirrored_junction_gives_the_same_numbers() {
+    Result upright = balcony(new DrawnDetail().view(View.UPRIGHT)).solve(2e-4);
+    double angle = Math.toRadians(17);
+    double cos = Math.cos(angle);
+    double sin = Math.sin(angle);
+    Result turned =
+        balcony(
+                new DrawnDetail()
+                    .view(View.up(-sin, cos))
+                    .moved(
+                        p ->
+                            new Point(1e4 - p.x() * cos - p.y() * sin, -p.x() * sin + p.y() * cos)))
+            .solve(2e-4);
+    for (String name : List.of("internal", "overall", "external")) {
+      assertThat(psiValue(turned, name)).isCloseTo(psiValue(upright, name), within(4e-4));
+    }
+    assertThat(coupling(turned, "indoors", "outdoors"))
+        .isCloseTo(coupling(upright, "indoors", "outdoors"), within(4e-4));
+    assertThat(space(turned, "indoors").coldest().orElseThrow().temperatureC())
+        .isCloseTo(space(upright, "indoors").coldest().orElseThrow().temperatureC(), within(0.02));
+    assertThat(turned.flanks())
+        .extracting(f -> f.name() + " " + String.join(", ", f.layers()))
+        .containsExactlyInAnyOrderElementsOf(
+            upright.flanks().stream()
+                .map(f -> f.name() + " " + String.join(", ", f.layers()))
+                .toList());
+    assertThat(turned.warnings()).isEmpty();
+    assertThat(upright.warnings()).isEmpty();
+    assertThat(
+            psi(upright, "internal").subtracted().stream()
+                .mapToDouble(t -> t.lengthM().orElse(0))
+                .sum())
+        .isCloseTo(2.9, within(1e-9));
+  }
+
+  private static DrawnDetail balcony(DrawnDetail drawn) {
+    return drawn
+        .box(INDOORS, -1500, -1700, 0, 1400)
+        .box(OUTDOORS, 300, -1700, 2000, 1400)
+        .box(material("brick", 0.5), 0, -1700, 180, 1400)
+        .box(material("insulation", 0.035), 180, -1700, 300, 1400)
+        .box(material("concrete", 2.3), -1500, -200, 1500, 0)
+        .psi("internal", IN, OUT, INTERNAL)
+        .psi("overall", IN, OUT, OVERALL_INTERNAL)
+        .psi("external", IN, OUT, EXTERNAL);
+  }
+
   /** Away from a re-entrant corner the flow near a close plane is not one-dimensional. */
   @Test
   void a_cut_off_plane_in_disturbed_flow_is_told_with_the_departure() {

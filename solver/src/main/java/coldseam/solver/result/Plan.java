@@ -162,13 +162,18 @@ public final class Plan {
     BitSet faced = Couplings.faced(partition.edgeCount(), heatLoss);
     boolean inside =
         faced.stream().anyMatch(i -> detail.spaces().get(i).exposure() == Exposure.INSIDE);
-    return inside || detail.wanted().stream().anyMatch(Plan::asksForSurfaceFilms);
+    return inside || detail.wanted().stream().anyMatch(wanted -> asksFor(wanted, FilmSet.SURFACE));
   }
 
-  private static boolean asksForSurfaceFilms(Wanted wanted) {
-    return (wanted instanceof Wanted.Temperature point && point.filmSet() == FilmSet.SURFACE)
-        || (wanted instanceof Wanted.Profile line && line.filmSet() == FilmSet.SURFACE)
-        || (wanted instanceof Wanted.SurfaceProfile face && face.filmSet() == FilmSet.SURFACE);
+  /** Whether a point or profile asks for the films for heat loss. */
+  public boolean heatLossTemperaturesWanted() {
+    return detail.wanted().stream().anyMatch(wanted -> asksFor(wanted, FilmSet.HEAT_LOSS));
+  }
+
+  private static boolean asksFor(Wanted wanted, FilmSet set) {
+    return (wanted instanceof Wanted.Temperature point && point.filmSet() == set)
+        || (wanted instanceof Wanted.Profile line && line.filmSet() == set)
+        || (wanted instanceof Wanted.SurfaceProfile face && face.filmSet() == set);
   }
 
   /** Whether both film sets say the same on every edge, so that one solution serves for both. */
