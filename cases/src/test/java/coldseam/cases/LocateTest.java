@@ -32,7 +32,7 @@ class LocateTest {
     assertThat(located(Written.WALL.replace("  outdoors: {", loft)))
         .singleElement()
         .asString()
-        .startsWith("7:3: space `loft`: touches no material");
+        .startsWith("7:3: space `loft`: touches no material; lay it where it meets the section");
   }
 
   @Test

@@ -72,7 +72,7 @@ final class DetailCheck {
             new Fault(
                 "space",
                 detail.spaces().get(i).name(),
-                "touches no material: lay it where it meets the section, or let a stretch of the"
+                "touches no material; lay it where it meets the section, or let a stretch of the"
                     + " outline face it",
                 Optional.empty()));
       }
