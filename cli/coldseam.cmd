@@ -8,7 +8,7 @@ for %%I in ("%HERE%..") do set "HOME_DIR=%%~fI"
 set "JAR=%HOME_DIR%\cli\target\lib\coldseam.jar"
 set "LAUNCH=%HOME_DIR%\cli\target\launch"
 set "ARCHIVE=%LAUNCH%\classes.jsa"
-set "OPTIONS=-XX:+UseG1GC -XX:TieredStopAtLevel=1 -XX:Tier3InvocationThreshold=40 -XX:Tier3MinInvocationThreshold=20 -XX:Tier3CompileThreshold=300 -XX:Tier3BackEdgeThreshold=2000 -XX:-UsePerfData -Xss4m -Djava.awt.headless=true"
+set "OPTIONS=-XX:+UseG1GC -XX:TieredStopAtLevel=1 -XX:Tier3BackEdgeThreshold=2000 -XX:-UsePerfData -Xss4m -Djava.awt.headless=true"
 
 set "JAVA_EXE=java"
 if defined JAVA_HOME set "JAVA_EXE=%JAVA_HOME%\bin\java.exe"
