@@ -35,7 +35,8 @@ class CommandsTest {
     JsonNode base = JACKSON.readTree(lines.get(0));
     assertThat(base.get("file").textValue()).isEqualTo("wall.yaml");
     assertThat(base.get("variant").isNull()).isTrue();
-    assertThat(base.get("U").get("value_W_per_m2K").doubleValue()).isCloseTo(1 / 0.57, within(1e-9));
+    assertThat(base.get("U").get("value_W_per_m2K").doubleValue())
+        .isCloseTo(1 / 0.57, within(1e-9));
     assertThat(base.get("U").get("R").get("value_m2K_per_W").doubleValue())
         .isCloseTo(0.57, within(1e-9));
     JsonNode indoors = base.get("spaces").get(0);
