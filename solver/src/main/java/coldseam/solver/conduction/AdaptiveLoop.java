@@ -17,7 +17,7 @@ final class AdaptiveLoop {
   private static final double PART_OF_ABSOLUTE = 0.3;
 
   /** Temperature error that may be left, in parts of the temperature difference: 0.01 K in 25. */
-  private static final double STEADY = 4e-4;
+  private static final double TEMPERATURE = 4e-4;
 
   /** The part of the indicators' sum that a pass splits at most. */
   private static final double BULK = 0.9;
@@ -178,7 +178,7 @@ final class AdaptiveLoop {
   private double jumpWish(int field, int t) {
     double size = d.mesh.area(t) / d.extentSquared;
     double error = indicator.energy[field][t] / QuadraticElement.conductivity(d.couplings, t);
-    return size * error / (STEADY * STEADY);
+    return size * error / (TEMPERATURE * TEMPERATURE);
   }
 
   private double[] wishes() {
@@ -214,7 +214,7 @@ final class AdaptiveLoop {
       if (amplitude == null || f < d.spaces && infinite(f)) {
         continue;
       }
-      double may = STEADY * (f < d.spaces ? 1 : largest(fields[f]));
+      double may = TEMPERATURE * (f < d.spaces ? 1 : largest(fields[f]));
       for (int t = 0; t < excess.length; t++) {
         double over = amplitude[t] / may;
         if (over > Math.min(1, worst) && d.mesh.area(t) > smallest) {
@@ -247,7 +247,7 @@ final class AdaptiveLoop {
     if (before == null || !(high > low)) {
       return 0;
     }
-    return extremes.change(before) / (STEADY * (high - low));
+    return extremes.change(before) / (TEMPERATURE * (high - low));
   }
 
   private void tell(double reached) {
