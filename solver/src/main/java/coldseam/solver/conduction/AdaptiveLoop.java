@@ -6,6 +6,7 @@ import coldseam.mesh.triangulation.Mesh;
 import coldseam.solver.detail.Accuracy;
 import coldseam.solver.detail.Conditions;
 import java.util.Arrays;
+import java.util.BitSet;
 import java.util.concurrent.CancellationException;
 
 /** Solve, estimate, mark, refine, until what is asked is met. */
@@ -69,7 +70,9 @@ final class AdaptiveLoop {
   FieldSolution run(Mesh start) {
     Mesh mesh = start;
     while (mesh.triangleCount() < FEWEST_TRIANGLES) {
-      mesh = NewestVertexBisection.refineAll(mesh).mesh();
+      BitSet all = new BitSet(mesh.triangleCount());
+      all.set(0, mesh.triangleCount());
+      mesh = NewestVertexBisection.refine(mesh, all).mesh();
     }
     Marking marking = new Marking(mesh);
     while (true) {
