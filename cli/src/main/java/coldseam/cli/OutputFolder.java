@@ -106,15 +106,14 @@ final class OutputFolder {
     Path stage = null;
     try {
       makeParents(folder.getParent(), made);
-      stage = Files.createTempDirectory(folder.getParent(), "." + folder.getFileName() + "-");
+      stage = Files.createDirectory(folder.resolveSibling(stageName()));
       for (Map.Entry<String, byte[]> file : files.entrySet()) {
         writer.write(stage.resolve(file.getKey()), file.getValue());
       }
       if (Files.notExists(folder)) {
-        Path readable = stage.resolve("whole");
-        moveIn(stage, readable, files.keySet());
-        writer.write(readable.resolve(LIST), list(files.keySet()));
-        Files.move(readable, folder, StandardCopyOption.ATOMIC_MOVE);
+        writer.write(stage.resolve(LIST), list(files.keySet()));
+        Files.move(stage, folder, StandardCopyOption.ATOMIC_MOVE);
+        stage = null;
       } else {
         replace(stage, files.keySet());
       }
@@ -129,12 +128,14 @@ final class OutputFolder {
     }
   }
 
-  /** Moves files from a folder that only the user may read to a new one with usual permissions. */
-  private static void moveIn(Path from, Path to, Set<String> names) throws IOException {
-    Files.createDirectory(to);
-    for (String name : names) {
-      Files.move(from.resolve(name), to.resolve(name), StandardCopyOption.ATOMIC_MOVE);
-    }
+  /** A name that no other solve uses at the same time: of this process and this moment. */
+  private String stageName() {
+    return "."
+        + folder.getFileName()
+        + "-"
+        + ProcessHandle.current().pid()
+        + "-"
+        + Long.toString(System.nanoTime() & Long.MAX_VALUE, Character.MAX_RADIX);
   }
 
   private void replace(Path stage, Set<String> names) throws IOException {

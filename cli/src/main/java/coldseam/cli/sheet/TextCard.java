@@ -12,7 +12,6 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
-import java.util.Locale;
 import java.util.Map;
 import java.util.Set;
 
@@ -290,9 +289,9 @@ final class TextCard {
     text.append('\n')
         .append(
             ink.faint(
-                String.format(Locale.ROOT, "%,d", result.triangles())
+                Digits.grouped(result.triangles())
                     + " triangles, "
-                    + String.format(Locale.ROOT, "%,d", result.unknowns())
+                    + Digits.grouped(result.unknowns())
                     + " unknowns"
                     + films
                     + ", drawing moved by at most "

@@ -114,6 +114,20 @@ public final class Digits {
   }
 
   /**
+   * Writes a whole number with a comma between thousands.
+   *
+   * @param count the number, 0 or more
+   * @return the text
+   */
+  public static String grouped(int count) {
+    StringBuilder text = new StringBuilder(Integer.toString(count));
+    for (int at = text.length() - 3; at > 0; at -= 3) {
+      text.insert(at, ',');
+    }
+    return text.toString();
+  }
+
+  /**
    * Writes a very small number as a power of ten: {@code 3e-14}.
    *
    * @param value the number, 0 or more

@@ -83,6 +83,12 @@ class DigitsTest {
   }
 
   @ParameterizedTest
+  @CsvSource({"0, '0'", "999, '999'", "1000, '1,000'", "1234567, '1,234,567'"})
+  void whole_numbers_are_grouped(int count, String text) {
+    assertThat(Digits.grouped(count)).isEqualTo(text);
+  }
+
+  @ParameterizedTest
   @CsvSource({"3.25, +3.25", "−3.25, −3.25", "0.00, 0.00", "∞, +∞"})
   void signs(String number, String text) {
     assertThat(Digits.signed(number)).isEqualTo(text);
