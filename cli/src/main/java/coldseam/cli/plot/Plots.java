@@ -50,10 +50,12 @@ public final class Plots {
 
   private final Result result;
   private final Caption caption;
+  private final DrawnSection section;
 
   private Plots(Result result, Caption caption) {
     this.result = result;
     this.caption = caption;
+    section = DrawnSection.of(result);
   }
 
   /**
@@ -74,7 +76,11 @@ public final class Plots {
    * @return an XML document
    */
   public String svg(Kind kind) {
-    throw new UnsupportedOperationException(kind + " of " + result.detail().title() + caption);
+    View view = view(kind);
+    Page page = view.page();
+    SvgCanvas canvas = SvgCanvas.blank();
+    view.draw(canvas, page);
+    return canvas.document(page.width(), page.height(), view.title(), view.told());
   }
 
   /**
@@ -85,6 +91,19 @@ public final class Plots {
    * @throws NoFontException if the machine has no font to write its text with
    */
   public byte[] png(Kind kind) throws NoFontException {
-    throw new UnsupportedOperationException(kind + " of " + result.detail().title() + caption);
+    View view = view(kind);
+    Page page = view.page();
+    PngCanvas canvas = PngCanvas.blank(page.width(), page.height());
+    view.draw(canvas, page);
+    return canvas.bytes();
+  }
+
+  private View view(Kind kind) {
+    return switch (kind) {
+      case SECTION -> new SectionView(result, caption, section);
+      case TEMPERATURE -> new TemperatureView(result, caption, section);
+      case HEAT_FLOW -> new HeatFlowView(result, caption, section);
+      case MESH -> new MeshView(result, caption, section);
+    };
   }
 }

@@ -1,0 +1,270 @@
+package coldseam.cli.plot;
+
+import java.util.Arrays;
+import java.util.List;
+import java.util.Optional;
+import java.util.function.IntPredicate;
+
+/**
+ * A coarse map of a frame: which face of the section lies under each square, and which squares are
+ * taken by something written. Labels are placed on it, so that none covers another.
+ */
+final class Ground {
+  /** Nothing of the drawing lies here. */
+  static final int OPEN = -1;
+
+  /** A line of the drawing passes here. */
+  static final int EDGE = -2;
+
+  private static final double SQUARE = 4;
+
+  private final Box frame;
+  private final int columns;
+  private final int rows;
+  private final int[] owners;
+  private final boolean[] taken;
+
+  Ground(Box frame) {
+    this.frame = frame;
+    columns = (int) Math.floor(frame.width() / SQUARE);
+    rows = (int) Math.floor(frame.height() / SQUARE);
+    owners = new int[columns * rows];
+    taken = new boolean[columns * rows];
+    Arrays.fill(owners, OPEN);
+  }
+
+  /**
+   * Marks the squares that lie wholly inside rings.
+   *
+   * @param rings on the sheet, by the even-odd rule
+   * @param owner their new owner, 0 or more
+   */
+  void paint(List<Polyline> rings, int owner) {
+    double[] crossings = new double[16];
+    for (int row = 0; row < rows; row++) {
+      double y = frame.y0() + (row + 0.5) * SQUARE;
+      int n = 0;
+      for (Polyline ring : rings) {
+        for (int i = 0; i < ring.size(); i++) {
+          int j = ring.after(i);
+          if (ring.y(i) > y != ring.y(j) > y) {
+            if (n == crossings.length) {
+              crossings = Arrays.copyOf(crossings, 2 * n);
+            }
+            double t = (y - ring.y(i)) / (ring.y(j) - ring.y(i));
+            crossings[n++] = ring.x(i) + t * (ring.x(j) - ring.x(i));
+          }
+        }
+      }
+      Arrays.sort(crossings, 0, n);
+      for (int k = 0; k + 1 < n; k += 2) {
+        int from = Math.max(0, (int) Math.ceil((crossings[k] - frame.x0()) / SQUARE - 0.5));
+        int to =
+            Math.min(columns, (int) Math.ceil((crossings[k + 1] - frame.x0()) / SQUARE - 0.5));
+        for (int column = from; column < to; column++) {
+          owners[row * columns + column] = owner;
+        }
+      }
+    }
+    rings.forEach(this::edge);
+  }
+
+  private void edge(Polyline line) {
+    walk(line, square -> owners[square] = EDGE);
+  }
+
+  /** Takes the squares that a line passes through. */
+  void take(Polyline line) {
+    walk(line, square -> taken[square] = true);
+  }
+
+  private interface Visit {
+    void square(int index);
+  }
+
+  private void walk(Polyline line, Visit visit) {
+    for (Polyline part : Clip.line(line, frame)) {
+      for (int i = 0; i < part.pieces(); i++) {
+        int j = part.after(i);
+        double dx = part.x(j) - part.x(i);
+        double dy = part.y(j) - part.y(i);
+        int steps = 1 + (int) (2 * Math.hypot(dx, dy) / SQUARE);
+        for (int s = 0; s <= steps; s++) {
+          int square = square(part.x(i) + dx * s / steps, part.y(i) + dy * s / steps);
+          if (square >= 0) {
+            visit.square(square);
+          }
+        }
+      }
+    }
+  }
+
+  private int square(double x, double y) {
+    int column = (int) Math.floor((x - frame.x0()) / SQUARE);
+    int row = (int) Math.floor((y - frame.y0()) / SQUARE);
+    return column < 0 || row < 0 || column >= columns || row >= rows ? -1 : row * columns + column;
+  }
+
+  /** The owner of the square at a point: a face, OPEN or EDGE; EDGE outside the frame. */
+  int owner(double x, double y) {
+    int square = square(x, y);
+    return square < 0 ? EDGE : owners[square];
+  }
+
+  /** Takes every square that a box touches. */
+  void take(Box box) {
+    int c0 = Math.max(0, (int) Math.floor((box.x0() - frame.x0()) / SQUARE));
+    int c1 = Math.min(columns - 1, (int) Math.floor((box.x1() - frame.x0()) / SQUARE));
+    int r0 = Math.max(0, (int) Math.floor((box.y0() - frame.y0()) / SQUARE));
+    int r1 = Math.min(rows - 1, (int) Math.floor((box.y1() - frame.y0()) / SQUARE));
+    for (int row = r0; row <= r1; row++) {
+      for (int column = c0; column <= c1; column++) {
+        taken[row * columns + column] = true;
+      }
+    }
+  }
+
+  /** Whether a box lies in the frame, on squares that are not taken and have accepted owners. */
+  boolean free(Box box, IntPredicate accepted) {
+    int c0 = (int) Math.floor((box.x0() - frame.x0()) / SQUARE);
+    int c1 = (int) Math.floor((box.x1() - frame.x0()) / SQUARE);
+    int r0 = (int) Math.floor((box.y0() - frame.y0()) / SQUARE);
+    int r1 = (int) Math.floor((box.y1() - frame.y0()) / SQUARE);
+    if (c0 < 0 || r0 < 0 || c1 >= columns || r1 >= rows) {
+      return false;
+    }
+    for (int row = r0; row <= r1; row++) {
+      for (int column = c0; column <= c1; column++) {
+        int square = row * columns + column;
+        if (taken[square] || !accepted.test(owners[square])) {
+          return false;
+        }
+      }
+    }
+    return true;
+  }
+
+  /**
+   * The share of the squares along a line that are taken or have an owner not accepted, and 1 if it
+   * leaves the frame.
+   */
+  double blocked(Polyline line, IntPredicate accepted) {
+    int[] counts = new int[2];
+    for (int i = 0; i < line.size(); i++) {
+      if (!frame.contains(line.x(i), line.y(i))) {
+        return 1;
+      }
+    }
+    walk(
+        line,
+        square -> {
+          counts[0]++;
+          if (taken[square] || !accepted.test(owners[square])) {
+            counts[1]++;
+          }
+        });
+    return counts[0] == 0 ? 1 : (double) counts[1] / counts[0];
+  }
+
+  /**
+   * Room for a box inside the faces accepted, as near as can be to the middle of what is left of
+   * them, with as much air around it as can be had.
+   */
+  Optional<Box> within(IntPredicate accepted, double width, double height) {
+    int[] sums = new int[(columns + 1) * (rows + 1)];
+    double sumX = 0;
+    double sumY = 0;
+    int count = 0;
+    for (int row = 0; row < rows; row++) {
+      int inRow = 0;
+      for (int column = 0; column < columns; column++) {
+        int square = row * columns + column;
+        if (!taken[square] && accepted.test(owners[square])) {
+          inRow++;
+          sumX += column;
+          sumY += row;
+          count++;
+        }
+        sums[(row + 1) * (columns + 1) + column + 1] =
+            sums[row * (columns + 1) + column + 1] + inRow;
+      }
+    }
+    if (count * SQUARE * SQUARE < width * height) {
+      return Optional.empty();
+    }
+    for (double air : new double[] {12, 6, 2, 0}) {
+      int w = (int) Math.ceil((width + 2 * air) / SQUARE);
+      int h = (int) Math.ceil((height + 2 * air) / SQUARE);
+      Optional<Box> found = nearest(sums, w, h, sumX / count, sumY / count);
+      if (found.isPresent()) {
+        return Optional.of(Box.around(found.get().midX(), found.get().midY(), width, height));
+      }
+    }
+    return Optional.empty();
+  }
+
+  private Optional<Box> nearest(int[] sums, int w, int h, double middleX, double middleY) {
+    int stride = columns + 1;
+    double best = Double.POSITIVE_INFINITY;
+    Box found = null;
+    for (int row = 0; row + h <= rows; row++) {
+      for (int column = 0; column + w <= columns; column++) {
+        int inside =
+            sums[(row + h) * stride + column + w]
+                - sums[row * stride + column + w]
+                - sums[(row + h) * stride + column]
+                + sums[row * stride + column];
+        if (inside == w * h) {
+          double d = Math.hypot(column + w / 2.0 - middleX, row + h / 2.0 - middleY);
+          if (d < best) {
+            best = d;
+            found =
+                new Box(
+                    frame.x0() + column * SQUARE,
+                    frame.y0() + row * SQUARE,
+                    frame.x0() + (column + w) * SQUARE,
+                    frame.y0() + (row + h) * SQUARE);
+          }
+        }
+      }
+    }
+    return Optional.ofNullable(found);
+  }
+
+  /**
+   * Room for a box near a point.
+   *
+   * @param x of the point
+   * @param y of the point
+   * @param width of the box
+   * @param height of the box
+   * @param least how far its middle stays away, at least
+   * @param most how far its middle may go away
+   * @param accepted the owners it may lie on
+   */
+  Optional<Box> near(
+      double x,
+      double y,
+      double width,
+      double height,
+      double least,
+      double most,
+      IntPredicate accepted) {
+    for (double r = least; r <= most; r += 8) {
+      for (int k = 0; k < 16; k++) {
+        double angle = Math.PI / 8 * ((k + 1) / 2 * (k % 2 == 0 ? 1 : -1)) - Math.PI / 4;
+        double along = r + width / 2 * Math.abs(Math.cos(angle));
+        Box box =
+            Box.around(
+                x + along * Math.cos(angle),
+                y + (r + height / 2 * Math.abs(Math.sin(angle))) * Math.sin(angle),
+                width,
+                height);
+        if (free(box, accepted)) {
+          return Optional.of(box);
+        }
+      }
+    }
+    return Optional.empty();
+  }
+}

@@ -1,0 +1,76 @@
+package coldseam.cli.plot;
+
+import java.awt.Color;
+
+/**
+ * The colours. Both scales run through ever lighter or ever darker colours, so that they keep their
+ * order in grey and for readers who tell hues apart badly; nothing is told by colour alone.
+ */
+final class Palette {
+  static final Color PAPER = Color.WHITE;
+  static final Color INK = new Color(0x22262B);
+  static final Color SECOND_INK = new Color(0x5A626A);
+  static final Color RULE = new Color(0xB9BEC4);
+
+  /** Inside surfaces, and everything said of them. */
+  static final Color INSIDE = new Color(0x94501C);
+
+  /** Outside surfaces. */
+  static final Color OUTSIDE = new Color(0x2A5A8A);
+
+  /** Reference lengths of ψ. */
+  static final Color REFERENCE = new Color(0x6B2F77);
+
+  private static final int[] TEMPERATURE = {
+    0x1A2850, 0x34547F, 0x6883A0, 0xA89E97, 0xDDB484, 0xF6D9A0, 0xFDF4D6
+  };
+  private static final int[] FLOW = {
+    0xF7F5EC, 0xE2D7C3, 0xCBAE9B, 0xB08078, 0x8A5468, 0x5B2F58, 0x2E1638
+  };
+
+  private Palette() {}
+
+  /**
+   * The temperature scale, from dark cold to light warm.
+   *
+   * @param part 0 for the coldest, 1 for the warmest
+   */
+  static Color temperature(double part) {
+    return along(TEMPERATURE, part);
+  }
+
+  /**
+   * The scale of heat-flow density, from light and little to dark and much.
+   *
+   * @param part 0 for the least, 1 for the most
+   */
+  static Color flow(double part) {
+    return along(FLOW, part);
+  }
+
+  private static Color along(int[] stops, double part) {
+    double place = Math.max(0, Math.min(1, part)) * (stops.length - 1);
+    int below = Math.min((int) place, stops.length - 2);
+    return mix(new Color(stops[below]), new Color(stops[below + 1]), place - below);
+  }
+
+  /** A colour between two, 0 for the first and 1 for the second. */
+  static Color mix(Color a, Color b, double part) {
+    return new Color(
+        (int) Math.round(a.getRed() + part * (b.getRed() - a.getRed())),
+        (int) Math.round(a.getGreen() + part * (b.getGreen() - a.getGreen())),
+        (int) Math.round(a.getBlue() + part * (b.getBlue() - a.getBlue())));
+  }
+
+  /** Relative luminance, 0 black to 1 white (WCAG 2.1). */
+  static double luminance(Color colour) {
+    return 0.2126 * linear(colour.getRed())
+        + 0.7152 * linear(colour.getGreen())
+        + 0.0722 * linear(colour.getBlue());
+  }
+
+  private static double linear(int channel) {
+    double c = channel / 255.0;
+    return c <= 0.04045 ? c / 12.92 : Math.pow((c + 0.055) / 1.055, 2.4);
+  }
+}

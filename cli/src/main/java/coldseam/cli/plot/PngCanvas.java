@@ -1,0 +1,88 @@
+package coldseam.cli.plot;
+
+import java.awt.Font;
+import java.awt.Graphics2D;
+import java.awt.RenderingHints;
+import java.awt.image.BufferedImage;
+import java.io.ByteArrayOutputStream;
+import java.io.IOException;
+import java.io.UncheckedIOException;
+import javax.imageio.ImageIO;
+
+/** Draws pixels, two a point. */
+final class PngCanvas extends Canvas {
+  private static final double PIXELS_PER_POINT = 2;
+
+  private final Graphics2D graphics;
+  private final BufferedImage image;
+
+  private PngCanvas(Graphics2D graphics, BufferedImage image) {
+    super(graphics);
+    this.graphics = graphics;
+    this.image = image;
+  }
+
+  static PngCanvas blank(double width, double height) throws NoFontException {
+    BufferedImage image =
+        new BufferedImage(
+            (int) Math.ceil(width * PIXELS_PER_POINT),
+            (int) Math.ceil(height * PIXELS_PER_POINT),
+            BufferedImage.TYPE_INT_RGB);
+    Graphics2D graphics = image.createGraphics();
+    graphics.scale(PIXELS_PER_POINT, PIXELS_PER_POINT);
+    graphics.setRenderingHint(
+        RenderingHints.KEY_ANTIALIASING, RenderingHints.VALUE_ANTIALIAS_ON);
+    graphics.setRenderingHint(
+        RenderingHints.KEY_TEXT_ANTIALIASING, RenderingHints.VALUE_TEXT_ANTIALIAS_ON);
+    graphics.setRenderingHint(
+        RenderingHints.KEY_FRACTIONALMETRICS, RenderingHints.VALUE_FRACTIONALMETRICS_ON);
+    graphics.setRenderingHint(
+        RenderingHints.KEY_STROKE_CONTROL, RenderingHints.VALUE_STROKE_PURE);
+    probe(graphics);
+    return new PngCanvas(graphics, image);
+  }
+
+  /** Asks for the width of a letter, as a machine without fonts cannot tell it. */
+  private static void probe(Graphics2D graphics) throws NoFontException {
+    try {
+      Font font = Lettering.LABEL.font();
+      if (graphics.getFontMetrics(font).stringWidth("m") <= 0) {
+        throw new NoFontException(null);
+      }
+    } catch (RuntimeException | LinkageError | InternalError e) {
+      throw new NoFontException(e);
+    }
+  }
+
+  @Override
+  void layer(String id) {
+    // Pixels have no layers.
+  }
+
+  @Override
+  double beforeAnchor(String text, Lettering lettering, Anchor anchor) {
+    if (anchor == Anchor.START) {
+      return 0;
+    }
+    double width =
+        lettering.font().getStringBounds(text, graphics.getFontRenderContext()).getWidth();
+    return anchor == Anchor.MIDDLE ? width / 2 : width;
+  }
+
+  @Override
+  void written(Anchor anchor) {
+    // Nothing is left to do.
+  }
+
+  byte[] bytes() {
+    ByteArrayOutputStream out = new ByteArrayOutputStream();
+    try {
+      if (!ImageIO.write(image, "png", out)) {
+        throw new IllegalStateException("this Java cannot write PNG files");
+      }
+    } catch (IOException e) {
+      throw new UncheckedIOException(e);
+    }
+    return out.toByteArray();
+  }
+}

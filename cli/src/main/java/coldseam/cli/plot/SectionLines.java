@@ -1,0 +1,120 @@
+package coldseam.cli.plot;
+
+import coldseam.solver.detail.Conditions;
+import java.awt.Color;
+import java.awt.geom.Path2D;
+import java.util.ArrayList;
+import java.util.List;
+
+/** The lines of the section that every plot has: outline, joints, thin sheets, cut-off planes. */
+final class SectionLines {
+  /** Faces thinner than this on the sheet are drawn as lines, points. */
+  private static final double SHEET = 1.6;
+
+  private static final double SYMMETRY_TICK = 5;
+  private static final double BEYOND = 7;
+
+  private final DrawnSection section;
+  private final Panel panel;
+
+  SectionLines(DrawnSection section, Panel panel) {
+    this.section = section;
+    this.panel = panel;
+  }
+
+  /** Joints between materials, and sheets too thin to show otherwise. */
+  void joints(Canvas canvas, Color colour, Pen pen) {
+    canvas.layer(name("joints"));
+    List<Polyline> lines = new ArrayList<>();
+    for (Polyline joint : section.joints()) {
+      lines.addAll(Clip.line(joint.on(panel), panel.frame()));
+    }
+    canvas.stroke(Polyline.path(lines), colour, pen);
+    List<Polyline> sheets = new ArrayList<>();
+    for (DrawnSection.Face face : section.faces()) {
+      if (section.solid(face.label()) && face.widthM() * panel.pointsPerM() < SHEET) {
+        for (Polyline ring : face.rings()) {
+          sheets.addAll(Clip.line(ring.on(panel), panel.frame()));
+        }
+      }
+    }
+    if (!sheets.isEmpty()) {
+      canvas.stroke(Polyline.path(sheets), Palette.INK, Pen.MEDIUM);
+    }
+  }
+
+  /** The outline: surfaces heavy, cut-off planes dash-dotted, two ticks on planes of symmetry. */
+  void outline(Canvas canvas) {
+    canvas.layer(name("outline"));
+    List<Polyline> surfaces = new ArrayList<>();
+    List<Polyline> hollows = new ArrayList<>();
+    for (DrawnSection.Surface surface : section.surfaces()) {
+      boolean hollow = surface.kind() == Conditions.Kind.HOLLOW;
+      (hollow ? hollows : surfaces).addAll(Clip.line(surface.line().on(panel), panel.frame()));
+    }
+    canvas.stroke(Polyline.path(surfaces), Palette.INK, Pen.HEAVY);
+    if (!hollows.isEmpty()) {
+      canvas.stroke(Polyline.path(hollows), Palette.INK, Pen.MEDIUM);
+    }
+    Path2D planes = new Path2D.Double();
+    Path2D ticks = new Path2D.Double();
+    for (DrawnSection.CutOff cutOff : section.cutOffs()) {
+      plane(cutOff, planes, ticks);
+    }
+    canvas.layer(name("cut-off-planes"));
+    canvas.stroke(planes, Palette.INK, Pen.CUT_OFF);
+    canvas.stroke(ticks, Palette.INK, Pen.MEDIUM);
+  }
+
+  private void plane(DrawnSection.CutOff cutOff, Path2D planes, Path2D ticks) {
+    Polyline line = cutOff.line().on(panel);
+    double dx = line.x(1) - line.x(0);
+    double dy = line.y(1) - line.y(0);
+    double length = Math.hypot(dx, dy);
+    if (length == 0) {
+      return;
+    }
+    double ux = dx / length;
+    double uy = dy / length;
+    Polyline longer =
+        Polyline.of(
+            line.x(0) - BEYOND * ux,
+            line.y(0) - BEYOND * uy,
+            line.x(1) + BEYOND * ux,
+            line.y(1) + BEYOND * uy);
+    Clip.line(longer, panel.frame()).forEach(part -> part.appendTo(planes));
+    if (cutOff.symmetry()) {
+      for (int end = 0; end < 2; end++) {
+        for (double back : new double[] {1.5, 4.5}) {
+          double sign = end == 0 ? -1 : 1;
+          double x = line.x(end) + sign * back * ux;
+          double y = line.y(end) + sign * back * uy;
+          Polyline tick =
+              Polyline.of(
+                  x - SYMMETRY_TICK * uy,
+                  y + SYMMETRY_TICK * ux,
+                  x + SYMMETRY_TICK * uy,
+                  y - SYMMETRY_TICK * ux);
+          Clip.line(tick, panel.frame()).forEach(part -> part.appendTo(ticks));
+        }
+      }
+    }
+  }
+
+  private String name(String what) {
+    return panel.name() + "-" + what;
+  }
+
+  /** A map of the frame with the faces of the section on it. */
+  static Ground ground(DrawnSection section, Panel panel) {
+    Ground ground = new Ground(panel.frame());
+    for (DrawnSection.Face face : section.faces()) {
+      List<Polyline> rings = new ArrayList<>();
+      for (Polyline ring : face.rings()) {
+        Clip.ring(ring.on(panel), panel.frame().grown(8)).ifPresent(rings::add);
+      }
+      ground.paint(rings, face.label());
+    }
+    return ground;
+  }
+}

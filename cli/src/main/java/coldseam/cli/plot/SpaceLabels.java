@@ -1,0 +1,114 @@
+package coldseam.cli.plot;
+
+import coldseam.solver.detail.Conditions;
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.List;
+import java.util.Optional;
+import java.util.function.IntFunction;
+import java.util.function.IntPredicate;
+
+/** Writes the name of each space, and what else is said of it, where the space is. */
+final class SpaceLabels {
+  private final Canvas canvas;
+  private final DrawnSection section;
+  private final Panel panel;
+  private final Ground ground;
+
+  SpaceLabels(Canvas canvas, DrawnSection section, Panel panel, Ground ground) {
+    this.canvas = canvas;
+    this.section = section;
+    this.panel = panel;
+    this.ground = ground;
+  }
+
+  /**
+   * Writes them.
+   *
+   * @param said the lines of a space, its name first
+   */
+  void write(IntFunction<List<String>> said) {
+    canvas.layer(panel.name() + "-spaces");
+    for (int space = 0; space < section.detail().spaces().size(); space++) {
+      List<Polyline> seen = surfaces(section, panel, space);
+      if (seen.isEmpty()) {
+        continue;
+      }
+      List<String> lines = said.apply(space);
+      Box size = Plates.size(lines, Lettering.STRONG);
+      place(space, seen, size.width(), size.height())
+          .ifPresent(
+              box -> {
+                ground.take(box);
+                Plates.unplated(canvas, lines, box, Lettering.STRONG, Lettering.LABEL);
+              });
+    }
+  }
+
+  /** The surfaces of a space that are seen in a panel, on the sheet, the longest first. */
+  static List<Polyline> surfaces(DrawnSection section, Panel panel, int space) {
+    List<Polyline> seen = new ArrayList<>();
+    for (DrawnSection.Surface surface : section.surfaces()) {
+      boolean faces =
+          surface.kind() == Conditions.Kind.FILM || surface.kind() == Conditions.Kind.FIXED;
+      if (faces && surface.space() == space) {
+        seen.addAll(Clip.line(surface.line().on(panel), panel.frame()));
+      }
+    }
+    seen.sort(Comparator.comparingDouble(Polyline::length).reversed());
+    return seen;
+  }
+
+  private Optional<Box> place(int space, List<Polyline> seen, double width, double height) {
+    int label = section.labelOfSpace(space);
+    if (label >= 0) {
+      Optional<Box> inside = ground.within(owner -> owner == label, width, height);
+      if (inside.isPresent()) {
+        return inside;
+      }
+    }
+    for (Polyline surface : seen) {
+      Optional<Box> beside =
+          beside(surface, width, height, owner -> owner == Ground.OPEN || owner == label);
+      if (beside.isPresent()) {
+        return beside;
+      }
+    }
+    return Optional.empty();
+  }
+
+  /** Room on the open side of a surface, as near its middle as can be. */
+  Optional<Box> beside(Polyline surface, double width, double height, IntPredicate accepted) {
+    double length = surface.length();
+    for (double away = 10; away < 90; away += 6) {
+      for (double part : new double[] {0.5, 0.35, 0.65, 0.2, 0.8, 0.08, 0.92}) {
+        double[] at = at(surface, part * length);
+        double reach = away + Math.abs(at[2]) * width / 2 + Math.abs(at[3]) * height / 2;
+        Box box = Box.around(at[0] + at[2] * reach, at[1] + at[3] * reach, width, height);
+        if (ground.free(box, accepted)) {
+          return Optional.of(box);
+        }
+      }
+    }
+    return Optional.empty();
+  }
+
+  /** The point a distance along a line on the sheet, and the unit vector to its right there. */
+  static double[] at(Polyline line, double distance) {
+    double left = distance;
+    for (int i = 0; i < line.pieces(); i++) {
+      int j = line.after(i);
+      double dx = line.x(j) - line.x(i);
+      double dy = line.y(j) - line.y(i);
+      double length = Math.hypot(dx, dy);
+      if (length > 0 && (left <= length || i == line.pieces() - 1)) {
+        double t = Math.min(1, left / length);
+        return new double[] {
+          line.x(i) + t * dx, line.y(i) + t * dy, -dy / length, dx / length
+        };
+      }
+      left -= length;
+    }
+    return new double[] {line.x(0), line.y(0), 0, 0};
+  }
+}

@@ -1,0 +1,130 @@
+package coldseam.cli.plot;
+
+import java.awt.Dimension;
+import java.util.ArrayList;
+import java.util.List;
+import javax.xml.parsers.DocumentBuilderFactory;
+import javax.xml.parsers.ParserConfigurationException;
+import org.apache.batik.svggen.SVGGeneratorContext;
+import org.apache.batik.svggen.SVGGraphics2D;
+import org.w3c.dom.Document;
+import org.w3c.dom.Element;
+import org.w3c.dom.Node;
+import org.w3c.dom.NodeList;
+
+/** Writes SVG: text stays text, anchored where it was put, so that any sans-serif face fits. */
+final class SvgCanvas extends Canvas {
+  static final String SVG = "http://www.w3.org/2000/svg";
+
+  private static final int DECIMALS = 2;
+
+  private final SVGGraphics2D graphics;
+  private final Document document;
+  private final List<Element> layers = new ArrayList<>();
+  private final List<Anchor> anchors = new ArrayList<>();
+  private String layer = "ground";
+
+  private SvgCanvas(SVGGraphics2D graphics, Document document) {
+    super(graphics);
+    this.graphics = graphics;
+    this.document = document;
+  }
+
+  static SvgCanvas blank() {
+    Document document;
+    try {
+      document =
+          DocumentBuilderFactory.newInstance()
+              .newDocumentBuilder()
+              .getDOMImplementation()
+              .createDocument(SVG, "svg", null);
+    } catch (ParserConfigurationException e) {
+      throw new IllegalStateException("this Java has no XML document builder", e);
+    }
+    SVGGeneratorContext context = SVGGeneratorContext.createDefault(document);
+    context.setPrecision(DECIMALS);
+    context.setComment(null);
+    return new SvgCanvas(new SVGGraphics2D(context, false), document);
+  }
+
+  @Override
+  void layer(String id) {
+    closeLayer();
+    layer = id;
+  }
+
+  @Override
+  double beforeAnchor(String text, Lettering lettering, Anchor anchor) {
+    return 0;
+  }
+
+  @Override
+  void written(Anchor anchor) {
+    anchors.add(anchor);
+  }
+
+  private void closeLayer() {
+    Element group = graphics.getTopLevelGroup(false);
+    if (group.hasChildNodes()) {
+      group.setAttribute("id", layer);
+      layers.add(group);
+    }
+  }
+
+  /**
+   * Ends the drawing.
+   *
+   * @param width of the sheet, points
+   * @param height of the sheet, points
+   * @param title what a reader who cannot see the plot is told first
+   * @param description what it shows, in a few sentences
+   * @return the whole document as text
+   */
+  String document(double width, double height, String title, String description) {
+    closeLayer();
+    graphics.setSVGCanvasSize(new Dimension((int) width, (int) height));
+    Element root = graphics.getRoot();
+    while (root.hasChildNodes()) {
+      root.removeChild(root.getFirstChild());
+    }
+    root.setAttribute("viewBox", "0 0 " + (int) width + " " + (int) height);
+    root.setAttribute("role", "img");
+    root.setAttribute("aria-labelledby", "title desc");
+    root.appendChild(told("title", title));
+    root.appendChild(told("desc", description));
+    layers.forEach(root::appendChild);
+    anchor(root);
+    return SvgText.of(root);
+  }
+
+  private Element told(String name, String text) {
+    Element element = document.createElementNS(SVG, name);
+    element.setAttribute("id", name);
+    element.appendChild(document.createTextNode(text));
+    return element;
+  }
+
+  private void anchor(Element root) {
+    NodeList texts = root.getElementsByTagNameNS(SVG, "text");
+    if (texts.getLength() != anchors.size()) {
+      throw new IllegalStateException("a text of the plot was lost on its way into the SVG");
+    }
+    int i = 0;
+    for (Element text : inOrder(texts)) {
+      Anchor anchor = anchors.get(i++);
+      text.removeAttribute("xml:space");
+      if (anchor != Anchor.START) {
+        text.setAttribute("text-anchor", anchor == Anchor.MIDDLE ? "middle" : "end");
+      }
+    }
+  }
+
+  private static List<Element> inOrder(NodeList nodes) {
+    List<Element> elements = new ArrayList<>(nodes.getLength());
+    for (int i = 0; i < nodes.getLength(); i++) {
+      Node node = nodes.item(i);
+      elements.add((Element) node);
+    }
+    return elements;
+  }
+}
