@@ -11,7 +11,9 @@ import java.util.Optional;
 final class Clip {
   private Clip() {}
 
-  /** The part of a ring inside; pieces that fall apart stay joined along the box, as fills allow. */
+  /**
+   * The part of a ring inside; pieces that fall apart stay joined along the box, as fills allow.
+   */
   static Optional<Polyline> ring(Polyline ring, Box box) {
     if (box.contains(ring.bounds())) {
       return Optional.of(ring);
@@ -40,8 +42,7 @@ final class Clip {
       }
       if (here >= 0 != there >= 0) {
         double t = here / (here - there);
-        out.add(
-            ring.x(i) + t * (ring.x(j) - ring.x(i)), ring.y(i) + t * (ring.y(j) - ring.y(i)));
+        out.add(ring.x(i) + t * (ring.x(j) - ring.x(i)), ring.y(i) + t * (ring.y(j) - ring.y(i)));
       }
     }
     return out.closed();

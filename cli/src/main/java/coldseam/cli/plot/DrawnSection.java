@@ -118,8 +118,7 @@ final class DrawnSection {
             partition,
             e -> solidOnLeft(e),
             (a, b) -> sameSurface(a, b) && sameSurfaceFilm(other, a, b));
-    for (EdgeChains.Chain chain :
-        chains.of(e -> isSurface(conditions.kind(e)))) {
+    for (EdgeChains.Chain chain : chains.of(e -> isSurface(conditions.kind(e)))) {
       int edge = chain.firstEdge();
       surfaces.add(
           new Surface(
@@ -156,8 +155,7 @@ final class DrawnSection {
             partition,
             e -> solidOnLeft(e),
             (a, b) -> conditions.symmetry(a) == conditions.symmetry(b) && parallel(a, b));
-    for (EdgeChains.Chain chain :
-        chains.of(e -> conditions.kind(e) == Conditions.Kind.CUT_OFF)) {
+    for (EdgeChains.Chain chain : chains.of(e -> conditions.kind(e) == Conditions.Kind.CUT_OFF)) {
       List<Layer> layers = new ArrayList<>();
       double at = 0;
       for (int edge : chain.edges()) {
@@ -231,6 +229,23 @@ final class DrawnSection {
     return faces;
   }
 
+  /**
+   * The faces of a fill, the largest first.
+   *
+   * @param label index of the fill
+   * @return indices in {@link #faces()}
+   */
+  List<Integer> largestFirst(int label) {
+    List<Integer> found = new ArrayList<>();
+    for (int face = 0; face < faces.size(); face++) {
+      if (faces.get(face).label() == label) {
+        found.add(face);
+      }
+    }
+    found.sort((a, b) -> Double.compare(partition.faceArea(b), partition.faceArea(a)));
+    return found;
+  }
+
   List<Surface> surfaces() {
     return surfaces;
   }
@@ -248,8 +263,7 @@ final class DrawnSection {
   List<Polyline> stretch(int index) {
     EdgeChains chains = new EdgeChains(partition, this::solidOnLeft, (a, b) -> true);
     List<Polyline> lines = new ArrayList<>();
-    for (EdgeChains.Chain chain :
-        chains.of(e -> conditions.stretches(e).contains(index))) {
+    for (EdgeChains.Chain chain : chains.of(e -> conditions.stretches(e).contains(index))) {
       lines.add(Simplification.of(chain.line(), STRAIGHT * extentM()));
     }
     return lines;
@@ -288,13 +302,16 @@ final class DrawnSection {
     return partition;
   }
 
-  /** Vertices that are ends of edges of the solid and lie on no cut-off plane. */
+  /**
+   * Vertices that are ends of edges of the solid and lie on no cut-off plane, planes of symmetry
+   * excepted.
+   */
   List<double[]> innerCorners() {
     boolean[] inner = new boolean[partition.vertexCount()];
     boolean[] cut = new boolean[partition.vertexCount()];
     for (int e = 0; e < partition.edgeCount(); e++) {
       boolean drawn = solid(partition.leftLabel(e)) || solid(partition.rightLabel(e));
-      boolean onCut = conditions.kind(e) == Conditions.Kind.CUT_OFF;
+      boolean onCut = conditions.kind(e) == Conditions.Kind.CUT_OFF && !conditions.symmetry(e);
       for (int v : new int[] {partition.edgeStart(e), partition.edgeEnd(e)}) {
         inner[v] |= drawn;
         cut[v] |= onCut;

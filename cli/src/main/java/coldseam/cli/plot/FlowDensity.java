@@ -7,10 +7,11 @@ import coldseam.solver.detail.Material;
 import java.util.Arrays;
 
 /**
- * The heat-flow density q = −Λ grad θ, W/m², averaged at each vertex over the triangles of one
- * material around it, so that it is continuous inside a material and jumps between two.
+ * The heat-flow density q = −Λ grad θ, W/m²: averaged at each vertex and side middle over the
+ * triangles of one material around it and quadratic between, so that it is continuous inside a
+ * material and jumps between two. As a {@link Nodal} it gives log₁₀ of the density's size.
  */
-final class FlowDensity {
+final class FlowDensity implements Nodal {
   private static final int NONE = -1;
 
   /** Densities below this part of the greatest are drawn as this part. */
@@ -19,64 +20,86 @@ final class FlowDensity {
   private final TemperatureField field;
   private final Mesh mesh;
   private final Conditions conditions;
-  private final int[] vertexOf;
+  private final int[] nodeOf;
+  private final int corners;
   private final double[] qx;
   private final double[] qy;
-  private final int size;
+  private final double floor;
 
   FlowDensity(TemperatureField field, Conditions conditions) {
     this.field = field;
     this.mesh = field.mesh();
     this.conditions = conditions;
-    int[] first = new int[mesh.vertexCount()];
+    nodeOf = new int[6 * mesh.triangleCount()];
+    corners = number(0, 0, mesh.vertexCount());
+    int nodes = number(3, corners, mesh.sideCount());
+    qx = new double[nodes];
+    qy = new double[nodes];
+    average();
+    double most = 0;
+    for (int i = 0; i < nodes; i++) {
+      most = Math.max(most, Math.hypot(qx[i], qy[i]));
+    }
+    floor = most > 0 ? FLOOR * most : 1;
+  }
+
+  /**
+   * Numbers the corners (from 0) or side middles (from 3) of the triangles, one number for each
+   * place and material.
+   *
+   * @return the count of numbers so far
+   */
+  private int number(int from, int start, int places) {
+    int[] first = new int[places];
     Arrays.fill(first, NONE);
     int[] next = new int[3 * mesh.triangleCount()];
     int[] labels = new int[next.length];
-    vertexOf = new int[next.length];
     int count = 0;
     for (int t = 0; t < mesh.triangleCount(); t++) {
       for (int k = 0; k < 3; k++) {
-        int v = mesh.vertex(t, k);
-        int entry = first[v];
+        int place = from == 0 ? mesh.vertex(t, k) : mesh.side(t, k);
+        int entry = first[place];
         while (entry != NONE && labels[entry] != mesh.label(t)) {
           entry = next[entry];
         }
         if (entry == NONE) {
           entry = count++;
           labels[entry] = mesh.label(t);
-          next[entry] = first[v];
-          first[v] = entry;
+          next[entry] = first[place];
+          first[place] = entry;
         }
-        vertexOf[3 * t + k] = entry;
+        nodeOf[6 * t + from + k] = start + entry;
       }
     }
-    size = count;
-    qx = new double[size];
-    qy = new double[size];
-    average();
+    return start + count;
   }
 
   private void average() {
-    double[] weights = new double[size];
+    double[] weights = new double[qx.length];
+    double[] l = new double[3];
     for (int t = 0; t < mesh.triangleCount(); t++) {
-      double area = mesh.area(t);
-      for (int k = 0; k < 3; k++) {
-        double[] q = at(t, k == 0 ? 1 : 0, k == 1 ? 1 : 0, k == 2 ? 1 : 0);
-        int entry = vertexOf[3 * t + k];
-        qx[entry] += area * q[0];
-        qy[entry] += area * q[1];
-        weights[entry] += area;
+      // Small triangles are where the field bends: they know it best.
+      double weight = 1 / Math.sqrt(mesh.area(t));
+      for (int node = 0; node < 6; node++) {
+        for (int k = 0; k < 3; k++) {
+          l[k] = node < 3 ? (k == node ? 1 : 0) : (k == node - 3 ? 0 : 0.5);
+        }
+        double[] q = triangleDensity(t, l);
+        int entry = nodeOf[6 * t + node];
+        qx[entry] += weight * q[0];
+        qy[entry] += weight * q[1];
+        weights[entry] += weight;
       }
     }
-    for (int i = 0; i < size; i++) {
+    for (int i = 0; i < qx.length; i++) {
       qx[i] /= weights[i];
       qy[i] /= weights[i];
     }
   }
 
-  private double[] at(int t, double l0, double l1, double l2) {
+  private double[] triangleDensity(int t, double[] l) {
     Material material = conditions.material(mesh.label(t));
-    double[] gradient = field.gradient(t, l0, l1, l2);
+    double[] gradient = field.gradient(t, l[0], l[1], l[2]);
     double cos = Math.cos(material.angleRad());
     double sin = Math.sin(material.angleRad());
     double along = -material.conductivityWPerMK() * (gradient[0] * cos + gradient[1] * sin);
@@ -84,78 +107,78 @@ final class FlowDensity {
     return new double[] {along * cos - across * sin, along * sin + across * cos};
   }
 
-  /** The averaged density at a place in the section; null outside. */
+  /** The density at a place in the section, W/m²; empty array outside. */
   double[] at(double x, double y) {
     int t = mesh.locate(x, y);
-    if (t < 0) {
-      return null;
-    }
-    double[] l = Barycentric.of(mesh, t, x, y);
+    return t < 0 ? new double[0] : vector(t, Barycentric.of(mesh, t, x, y));
+  }
+
+  private double[] vector(int t, double[] l) {
     double[] q = new double[2];
-    for (int k = 0; k < 3; k++) {
-      q[0] += l[k] * qx[vertexOf[3 * t + k]];
-      q[1] += l[k] * qy[vertexOf[3 * t + k]];
+    for (int node = 0; node < 6; node++) {
+      double shape =
+          node < 3 ? l[node] * (2 * l[node] - 1) : 4 * l[(node - 2) % 3] * l[(node - 1) % 3];
+      int entry = nodeOf[6 * t + node];
+      q[0] += shape * qx[entry];
+      q[1] += shape * qy[entry];
     }
     return q;
   }
 
-  /** Densities as decimal logarithms, on the triangles that meet a window. */
-  LinearPatch logarithms(Box window) {
-    double most = 0;
-    for (int i = 0; i < size; i++) {
-      most = Math.max(most, Math.hypot(qx[i], qy[i]));
-    }
-    double floor = most > 0 ? FLOOR * most : 1;
-    int[] numbers = new int[size];
-    Arrays.fill(numbers, NONE);
-    LinearPatch patch = new LinearPatch(size, mesh.triangleCount());
-    for (int t = 0; t < mesh.triangleCount(); t++) {
-      Box box = Box.EMPTY;
-      for (int k = 0; k < 3; k++) {
-        box = box.with(mesh.x(mesh.vertex(t, k)), mesh.y(mesh.vertex(t, k)));
-      }
-      if (!box.meets(window)) {
-        continue;
-      }
-      for (int k = 0; k < 3; k++) {
-        int entry = vertexOf[3 * t + k];
-        if (numbers[entry] == NONE) {
-          int v = mesh.vertex(t, k);
-          double value = Math.log10(Math.max(floor, Math.hypot(qx[entry], qy[entry])));
-          numbers[entry] = patch.addVertex(mesh.x(v), mesh.y(v), value);
-        }
-      }
-      patch.addTriangle(
-          numbers[vertexOf[3 * t]], numbers[vertexOf[3 * t + 1]], numbers[vertexOf[3 * t + 2]]);
-    }
-    return patch;
+  @Override
+  public Mesh mesh() {
+    return mesh;
+  }
+
+  @Override
+  public int cornerValues() {
+    return corners;
+  }
+
+  @Override
+  public int cornerValue(int triangle, int k) {
+    return nodeOf[6 * triangle + k];
+  }
+
+  @Override
+  public double atCorner(int triangle, int k) {
+    int entry = nodeOf[6 * triangle + k];
+    return logarithm(qx[entry], qy[entry]);
+  }
+
+  @Override
+  public double in(int triangle, double[] barycentric) {
+    double[] q = vector(triangle, barycentric);
+    return logarithm(q[0], q[1]);
+  }
+
+  private double logarithm(double x, double y) {
+    return Math.log10(Math.max(floor, Math.hypot(x, y)));
   }
 
   /**
    * The density that is reached on all but a share of the area.
    *
-   * @param patch densities as decimal logarithms
    * @param share of the area with less
    * @return W/m²
    */
-  static double quantile(LinearPatch patch, double share) {
-    int n = patch.triangles();
+  double quantile(double share) {
+    int n = mesh.triangleCount();
     double[] means = new double[n];
     double total = 0;
-    for (int t = 0; t < n; t++) {
-      means[t] = patch.meanOf(t);
-      total += patch.area(t);
-    }
     Integer[] sorted = new Integer[n];
-    Arrays.setAll(sorted, t -> t);
+    for (int t = 0; t < n; t++) {
+      means[t] = (atCorner(t, 0) + atCorner(t, 1) + atCorner(t, 2)) / 3;
+      total += mesh.area(t);
+      sorted[t] = t;
+    }
     Arrays.sort(sorted, (a, b) -> Double.compare(means[a], means[b]));
     double sum = 0;
-    for (int t : sorted) {
-      sum += patch.area(t);
-      if (sum >= share * total) {
-        return Math.pow(10, means[t]);
-      }
+    double found = n == 0 ? 0 : means[sorted[n - 1]];
+    for (int i = 0; i < n && sum < share * total; i++) {
+      sum += mesh.area(sorted[i]);
+      found = means[sorted[i]];
     }
-    return Math.pow(10, patch.most());
+    return Math.pow(10, found);
   }
 }

@@ -10,7 +10,7 @@ import java.util.function.IntPredicate;
  * taken by something written. Labels are placed on it, so that none covers another.
  */
 final class Ground {
-  /** Nothing of the drawing lies here. */
+  /** Nothing is laid here. */
   static final int OPEN = -1;
 
   /** A line of the drawing passes here. */
@@ -18,18 +18,32 @@ final class Ground {
 
   private static final double SQUARE = 4;
 
+  /** Kept clear of labels, but a leader may cross. */
+  private static final byte KEPT = 1;
+
+  /** Something is written or drawn here. */
+  private static final byte WRITTEN = 2;
+
+  private static final int DIRECTIONS = 16;
+
+  /** Cosine of the steepest direction in which a box begins with a corner, not with a side. */
+  private static final double LEVEL = 0.35;
+
+  /** Squares of owners not accepted that a leader may cross: it ends inside a face. */
+  private static final int MOST_STRANGE = 4;
+
   private final Box frame;
   private final int columns;
   private final int rows;
   private final int[] owners;
-  private final boolean[] taken;
+  private final byte[] taken;
 
   Ground(Box frame) {
     this.frame = frame;
     columns = (int) Math.floor(frame.width() / SQUARE);
     rows = (int) Math.floor(frame.height() / SQUARE);
     owners = new int[columns * rows];
-    taken = new boolean[columns * rows];
+    taken = new byte[columns * rows];
     Arrays.fill(owners, OPEN);
   }
 
@@ -38,8 +52,9 @@ final class Ground {
    *
    * @param rings on the sheet, by the even-odd rule
    * @param owner their new owner, 0 or more
+   * @param edged whether their lines are drawn, so that they are EDGE
    */
-  void paint(List<Polyline> rings, int owner) {
+  void paint(List<Polyline> rings, int owner, boolean edged) {
     double[] crossings = new double[16];
     for (int row = 0; row < rows; row++) {
       double y = frame.y0() + (row + 0.5) * SQUARE;
@@ -59,14 +74,15 @@ final class Ground {
       Arrays.sort(crossings, 0, n);
       for (int k = 0; k + 1 < n; k += 2) {
         int from = Math.max(0, (int) Math.ceil((crossings[k] - frame.x0()) / SQUARE - 0.5));
-        int to =
-            Math.min(columns, (int) Math.ceil((crossings[k + 1] - frame.x0()) / SQUARE - 0.5));
+        int to = Math.min(columns, (int) Math.ceil((crossings[k + 1] - frame.x0()) / SQUARE - 0.5));
         for (int column = from; column < to; column++) {
           owners[row * columns + column] = owner;
         }
       }
     }
-    rings.forEach(this::edge);
+    if (edged) {
+      rings.forEach(this::edge);
+    }
   }
 
   private void edge(Polyline line) {
@@ -75,7 +91,7 @@ final class Ground {
 
   /** Takes the squares that a line passes through. */
   void take(Polyline line) {
-    walk(line, square -> taken[square] = true);
+    walk(line, square -> taken[square] = WRITTEN);
   }
 
   private interface Visit {
@@ -113,13 +129,23 @@ final class Ground {
 
   /** Takes every square that a box touches. */
   void take(Box box) {
+    mark(box, WRITTEN);
+  }
+
+  /** Keeps labels, but not leaders, off every square that a box touches. */
+  void keepClear(Box box) {
+    mark(box, KEPT);
+  }
+
+  private void mark(Box box, byte as) {
     int c0 = Math.max(0, (int) Math.floor((box.x0() - frame.x0()) / SQUARE));
     int c1 = Math.min(columns - 1, (int) Math.floor((box.x1() - frame.x0()) / SQUARE));
     int r0 = Math.max(0, (int) Math.floor((box.y0() - frame.y0()) / SQUARE));
     int r1 = Math.min(rows - 1, (int) Math.floor((box.y1() - frame.y0()) / SQUARE));
     for (int row = r0; row <= r1; row++) {
       for (int column = c0; column <= c1; column++) {
-        taken[row * columns + column] = true;
+        int square = row * columns + column;
+        taken[square] = (byte) Math.max(taken[square], as);
       }
     }
   }
@@ -136,12 +162,24 @@ final class Ground {
     for (int row = r0; row <= r1; row++) {
       for (int column = c0; column <= c1; column++) {
         int square = row * columns + column;
-        if (taken[square] || !accepted.test(owners[square])) {
+        if (taken[square] != 0 || !accepted.test(owners[square])) {
           return false;
         }
       }
     }
     return true;
+  }
+
+  /** The share of the squares along a line whose owner is not accepted. */
+  double strange(Polyline line, IntPredicate accepted) {
+    int[] counts = new int[2];
+    walk(
+        line,
+        square -> {
+          counts[0]++;
+          counts[1] += accepted.test(owners[square]) ? 0 : 1;
+        });
+    return counts[0] == 0 ? 1 : (double) counts[1] / counts[0];
   }
 
   /**
@@ -159,7 +197,7 @@ final class Ground {
         line,
         square -> {
           counts[0]++;
-          if (taken[square] || !accepted.test(owners[square])) {
+          if (taken[square] != 0 || !accepted.test(owners[square])) {
             counts[1]++;
           }
         });
@@ -179,7 +217,7 @@ final class Ground {
       int inRow = 0;
       for (int column = 0; column < columns; column++) {
         int square = row * columns + column;
-        if (!taken[square] && accepted.test(owners[square])) {
+        if (taken[square] == 0 && accepted.test(owners[square])) {
           inRow++;
           sumX += column;
           sumY += row;
@@ -232,14 +270,34 @@ final class Ground {
   }
 
   /**
-   * Room for a box near a point.
+   * Whether a leader from the middle of a box to a point crosses nothing written, and not much but
+   * accepted owners.
+   */
+  private boolean clear(Box box, double x, double y, IntPredicate accepted) {
+    int[] last = {-1};
+    int[] strange = new int[1];
+    boolean[] crossed = new boolean[1];
+    walk(
+        Polyline.of(box.midX(), box.midY(), x, y),
+        square -> {
+          crossed[0] |= taken[square] == WRITTEN;
+          if (square != last[0] && !accepted.test(owners[square])) {
+            strange[0]++;
+          }
+          last[0] = square;
+        });
+    return !crossed[0] && strange[0] <= MOST_STRANGE;
+  }
+
+  /**
+   * Room for a box near a point, such that a leader to the point crosses nothing written.
    *
    * @param x of the point
    * @param y of the point
    * @param width of the box
    * @param height of the box
-   * @param least how far its middle stays away, at least
-   * @param most how far its middle may go away
+   * @param least how far the box stays away, at least
+   * @param most how far it may go away
    * @param accepted the owners it may lie on
    */
   Optional<Box> near(
@@ -250,17 +308,16 @@ final class Ground {
       double least,
       double most,
       IntPredicate accepted) {
-    for (double r = least; r <= most; r += 8) {
-      for (int k = 0; k < 16; k++) {
-        double angle = Math.PI / 8 * ((k + 1) / 2 * (k % 2 == 0 ? 1 : -1)) - Math.PI / 4;
-        double along = r + width / 2 * Math.abs(Math.cos(angle));
-        Box box =
-            Box.around(
-                x + along * Math.cos(angle),
-                y + (r + height / 2 * Math.abs(Math.sin(angle))) * Math.sin(angle),
-                width,
-                height);
-        if (free(box, accepted)) {
+    for (double away = least; away <= most; away += 6) {
+      for (int k = 0; k < DIRECTIONS; k++) {
+        double angle =
+            2 * Math.PI / DIRECTIONS * ((k + 1) / 2 * (k % 2 == 0 ? 1 : -1)) - Math.PI / 4;
+        double cos = Math.cos(angle);
+        double sin = Math.sin(angle);
+        double middleX = x + away * cos + width / 2 * Math.max(-1, Math.min(1, cos / LEVEL));
+        double middleY = y + away * sin + height / 2 * Math.max(-1, Math.min(1, sin / LEVEL));
+        Box box = Box.around(middleX, middleY, width, height);
+        if (free(box, accepted) && clear(box, x, y, accepted)) {
           return Optional.of(box);
         }
       }

@@ -37,16 +37,16 @@ enum Hatch {
    * Adds the hatch of one face.
    *
    * @param rings of the face on the sheet, by the even-odd rule
+   * @param whole the outer ring of the face where no frame cuts it off
    * @param look turn and pitch
    * @param path what it is added to
    */
-  void append(List<Polyline> rings, MaterialLook look, Path2D path) {
+  void append(List<Polyline> rings, Polyline whole, MaterialLook look, Path2D path) {
     if (this == NONE || rings.isEmpty()) {
       return;
     }
-    double longest = longestSide(rings.get(0));
     boolean alongSide = this == GRAIN || this == ZIGZAG;
-    Field field = new Field(rings, alongSide ? longest : -look.turn(), path);
+    Field field = new Field(rings, alongSide ? longestSide(whole) : -look.turn(), path);
     if (Math.min(field.box.width(), field.box.height()) < NARROWEST) {
       return;
     }
@@ -74,7 +74,7 @@ enum Hatch {
     double height = field.box.height();
     int rows = (int) Math.ceil(height / WIDEST_ZIGZAG);
     double row = height / rows;
-    double half = Math.max(2.5, Math.min(pitch * 0.55, row * 0.5));
+    double half = Math.max(2.5, Math.min(pitch, row * 0.36));
     for (int r = 0; r < rows; r++) {
       double low = field.box.y0() + r * row;
       int n = (int) Math.ceil(field.box.width() / half);
@@ -234,9 +234,7 @@ enum Hatch {
         for (int i = 0; i < xs[r].length; i++) {
           int j = i + 1 == xs[r].length ? 0 : i + 1;
           if (ys[r][i] > y != ys[r][j] > y
-              && x
-                  < xs[r][i]
-                      + (y - ys[r][i]) / (ys[r][j] - ys[r][i]) * (xs[r][j] - xs[r][i])) {
+              && x < xs[r][i] + (y - ys[r][i]) / (ys[r][j] - ys[r][i]) * (xs[r][j] - xs[r][i])) {
             odd = !odd;
           }
         }

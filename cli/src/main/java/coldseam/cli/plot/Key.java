@@ -11,6 +11,9 @@ final class Key {
   private static final double ROW_GAP = 3;
   private static final double HEADING_GAP = 11;
 
+  /** Blocks of so many rows or fewer are not divided. */
+  private static final int SHORT_BLOCK = 7;
+
   /** Draws the sample of a row into a box. */
   @FunctionalInterface
   interface Sample {
@@ -78,34 +81,51 @@ final class Key {
       if (sum > height) {
         break;
       }
-      if (!rows.get(i).heading()) {
+      if (divisible(from, i + 1)) {
         fit = i + 1;
       }
     }
     return fit;
   }
 
+  /**
+   * Whether a column may end before a row: short blocks stay whole, long ones lose no single row.
+   */
+  private boolean divisible(int from, int end) {
+    if (end == rows.size() || rows.get(end).heading()) {
+      return true;
+    }
+    int first = end;
+    while (first > 0 && !rows.get(first).heading()) {
+      first--;
+    }
+    int last = end;
+    while (last < rows.size() && !rows.get(last).heading()) {
+      last++;
+    }
+    boolean whole = last - first - 1 <= SHORT_BLOCK && first >= from;
+    return !whole && end - Math.max(first, from) > 2 && last - end > 1;
+  }
+
   /** The least height at which what does not fit into a first column fills some more. */
   double restHeight(double firstWidth, double firstHeight, double width, int columns) {
     int from = fitting(0, firstWidth, firstHeight);
-    if (from == rows.size()) {
-      return 0;
-    }
     double height = 0;
-    for (Row row : rows) {
-      height = Math.max(height, height(row, width));
+    for (int i = from; i < rows.size(); i++) {
+      height = Math.max(height, height(rows.get(i), width));
     }
-    height *= 2;
-    while (true) {
-      int at = from;
-      for (int c = 0; c < columns && at < rows.size(); c++) {
-        at = fitting(at, width, height);
-      }
-      if (at == rows.size()) {
-        return height;
-      }
-      height += 6;
+    while (!fits(from, width, height, columns)) {
+      height += 4;
     }
+    return height;
+  }
+
+  private boolean fits(int from, double width, double height, int columns) {
+    int at = from;
+    for (int c = 0; c < columns && at < rows.size(); c++) {
+      at = fitting(at, width, height);
+    }
+    return at == rows.size();
   }
 
   void draw(Canvas canvas, List<Column> columns) {
@@ -130,8 +150,7 @@ final class Key {
   }
 
   private static double wordsWidth(Row row, double width) {
-    double value =
-        row.value().isEmpty() ? 0 : TextWidths.of(row.value(), Lettering.SMALL) + 8;
+    double value = row.value().isEmpty() ? 0 : TextWidths.of(row.value(), Lettering.SMALL) + 8;
     return width - (row.sample() == null ? 0 : SAMPLE) - value;
   }
 

@@ -6,7 +6,9 @@ import java.util.List;
 /** Round numbers on a scale. */
 final class Levels {
   private static final double[] STEPS = {1, 2, 5};
+  private static final double[] FINE_STEPS = {1, 1.5, 2, 3, 5, 7};
   private static final int MOST_BANDS = 16;
+  private static final int FEWEST = 5;
 
   private Levels() {}
 
@@ -44,11 +46,19 @@ final class Levels {
     return levels;
   }
 
-  /** 1, 2 and 5 times powers of ten strictly between two values, both more than 0. */
+  /**
+   * Round levels that grow by like factors strictly between two values, both more than 0: 1, 2 and
+   * 5 times powers of ten, or six figures a power where those are too few.
+   */
   static List<Double> series(double least, double most) {
+    List<Double> coarse = series(least, most, STEPS);
+    return coarse.size() >= FEWEST ? coarse : series(least, most, FINE_STEPS);
+  }
+
+  private static List<Double> series(double least, double most, double[] steps) {
     List<Double> levels = new ArrayList<>();
     for (int power = (int) Math.floor(Math.log10(least)); Math.pow(10, power) < most; power++) {
-      for (double step : STEPS) {
+      for (double step : steps) {
         double level = step * Math.pow(10, power);
         if (level > least * (1 + 1e-9) && level < most * (1 - 1e-9)) {
           levels.add(level);

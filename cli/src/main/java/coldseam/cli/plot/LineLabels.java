@@ -11,6 +11,9 @@ final class LineLabels {
   /** How far the line may leave its chord under a label, points. */
   private static final double BEND = 2.2;
 
+  /** Labels of so many characters or fewer are set level where there is room. */
+  private static final int SHORT = 4;
+
   private LineLabels() {}
 
   /** The distance from a contour to its neighbour at a point, points. */
@@ -40,7 +43,7 @@ final class LineLabels {
       Spacing spacing,
       double leastSpacing) {
     double width = TextWidths.of(text, lettering) + 6;
-    double best = leastSpacing;
+    double best = leastSpacing - 4;
     double[] found = null;
     for (Polyline line : lines) {
       double length = line.length();
@@ -54,10 +57,12 @@ final class LineLabels {
         }
         double room = Math.min(24, spacing.at(mid[0], mid[1]));
         double score = room - 4 * Math.abs(at / length - 0.5);
-        if (room >= leastSpacing && score > best - 4 && (found == null || score > best)
-            && free(ground, from, to, lettering)) {
+        if (room >= leastSpacing && score > best && free(ground, from, to, lettering)) {
           best = score;
-          found = new double[] {mid[0], mid[1], Math.atan2(to[1] - from[1], to[0] - from[0])};
+          boolean level =
+              text.length() <= SHORT && room >= width + 2 && flat(ground, mid, width, lettering);
+          double turn = level ? 0 : Math.atan2(to[1] - from[1], to[0] - from[0]);
+          found = new double[] {mid[0], mid[1], turn};
         }
       }
     }
@@ -66,6 +71,14 @@ final class LineLabels {
     }
     plate(canvas, ground, found, width, text, lettering);
     return true;
+  }
+
+  private static boolean flat(Ground ground, double[] at, double width, Lettering lettering) {
+    return free(
+        ground,
+        new double[] {at[0] - width / 2, at[1]},
+        new double[] {at[0] + width / 2, at[1]},
+        lettering);
   }
 
   private static double off(double[] p, double[] a, double[] b) {
@@ -81,8 +94,7 @@ final class LineLabels {
     for (double side : new double[] {-0.5, 0, 0.5}) {
       double lift = side * lettering.size();
       Polyline line =
-          Polyline.of(
-              a[0] + lift * nx, a[1] + lift * ny, b[0] + lift * nx, b[1] + lift * ny);
+          Polyline.of(a[0] + lift * nx, a[1] + lift * ny, b[0] + lift * nx, b[1] + lift * ny);
       if (ground.blocked(line, owner -> true) > 0) {
         return false;
       }
@@ -112,8 +124,7 @@ final class LineLabels {
     plate.closePath();
     canvas.fill(plate, Palette.PAPER);
     double drop = lettering.size() * TextWidths.CAPITAL / 2;
-    canvas.text(
-        text, at[0] - drop * sin, at[1] + drop * cos, lettering, Anchor.MIDDLE, angle);
+    canvas.text(text, at[0] - drop * sin, at[1] + drop * cos, lettering, Anchor.MIDDLE, angle);
     for (double lift : new double[] {-half, 0, half}) {
       ground.take(
           Polyline.of(

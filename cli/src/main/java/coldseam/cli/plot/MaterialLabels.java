@@ -1,6 +1,7 @@
 package coldseam.cli.plot;
 
 import coldseam.cli.plot.Canvas.Anchor;
+import java.awt.Color;
 import java.awt.geom.Path2D;
 import java.awt.geom.Rectangle2D;
 import java.util.ArrayList;
@@ -9,10 +10,13 @@ import java.util.Optional;
 import java.util.function.IntPredicate;
 
 /**
- * Fills the faces with tone and hatch, and names each material: in its face if there is room, else
+ * Fills the faces with tone and hatch, and names each material: in its largest face with room, else
  * by its number of the key, in the face or beside it with a leader.
  */
 final class MaterialLabels {
+  private static final double[] ALONG = {0.5, 0.35, 0.65, 0.2, 0.8, 0.08, 0.92};
+  private static final double DARK = 0.25;
+
   private final DrawnSection section;
   private final Panel panel;
   private final List<MaterialLook> looks;
@@ -41,9 +45,11 @@ final class MaterialLabels {
       List<Polyline> all = new ArrayList<>();
       Path2D hatch = new Path2D.Double();
       MaterialLook look = looks.get(label);
-      for (List<Polyline> rings : faces(label)) {
+      for (int face : section.largestFirst(label)) {
+        List<Polyline> rings = seen(face);
         all.addAll(rings);
-        look.hatch().append(rings, look, hatch);
+        Polyline whole = section.faces().get(face).rings().get(0).on(panel);
+        look.hatch().append(rings, whole, look, hatch);
       }
       if (!all.isEmpty()) {
         canvas.fill(Polyline.path(all), look.tone());
@@ -54,21 +60,13 @@ final class MaterialLabels {
     }
   }
 
-  /** The rings of each face of a fill that is seen, on the sheet. */
-  private List<List<Polyline>> faces(int label) {
-    List<List<Polyline>> seen = new ArrayList<>();
-    for (DrawnSection.Face face : section.faces()) {
-      if (face.label() == label) {
-        List<Polyline> rings = new ArrayList<>();
-        for (Polyline ring : face.rings()) {
-          Clip.ring(ring.on(panel), panel.frame()).ifPresent(rings::add);
-        }
-        if (!rings.isEmpty()) {
-          seen.add(rings);
-        }
-      }
+  /** The rings of a face as far as they are seen, on the sheet. */
+  private List<Polyline> seen(int face) {
+    List<Polyline> rings = new ArrayList<>();
+    for (Polyline ring : section.faces().get(face).rings()) {
+      Clip.ring(ring.on(panel), panel.frame()).ifPresent(rings::add);
     }
-    return seen;
+    return rings;
   }
 
   /**
@@ -76,10 +74,9 @@ final class MaterialLabels {
    *
    * @param canvas what it is drawn on
    * @param ground what is taken
-   * @param open owners of squares that a number may lie on
    * @param elsewhere a part of the frame whose small faces are named in the zoom
    */
-  void names(Canvas canvas, Ground ground, IntPredicate open, Optional<Box> elsewhere) {
+  void names(Canvas canvas, Ground ground, Optional<Box> elsewhere) {
     canvas.layer(panel.name() + "-material-names");
     List<Integer> without = new ArrayList<>();
     for (int label = 0; label < looks.size(); label++) {
@@ -88,7 +85,9 @@ final class MaterialLabels {
       }
     }
     for (int label : without) {
-      ring(canvas, ground, label, open, elsewhere);
+      if (!ringInside(canvas, ground, label)) {
+        ringBeside(canvas, ground, label, elsewhere);
+      }
     }
   }
 
@@ -96,86 +95,101 @@ final class MaterialLabels {
     String name = section.fills().get(label).name();
     double width = TextWidths.of(name, Lettering.LABEL) + 4;
     double height = Lettering.LABEL.size() * 1.05;
-    IntPredicate own = owner -> owner == label;
-    Optional<Box> flat = ground.within(own, width, height);
-    Optional<Box> place = flat.isPresent() ? flat : ground.within(own, height, width);
-    place.ifPresent(
-        box -> {
-          ground.take(box);
-          canvas.fill(
-              new Rectangle2D.Double(box.x0(), box.y0(), box.width(), box.height()),
-              looks.get(label).tone());
-          double drop = Lettering.LABEL.size() * TextWidths.CAPITAL / 2;
-          double turn = flat.isPresent() ? 0 : -Math.PI / 2;
-          canvas.text(
-              name,
-              box.midX() - Math.sin(turn) * drop,
-              box.midY() + Math.cos(turn) * drop,
-              Lettering.LABEL.in(ink(label)),
-              Anchor.MIDDLE,
-              turn);
-        });
-    return place.isPresent();
-  }
-
-  /** Paper on dark tones, ink on light ones. */
-  private java.awt.Color ink(int label) {
-    return Palette.luminance(looks.get(label).tone()) < 0.25 ? Palette.PAPER : Palette.INK;
-  }
-
-  private void ring(
-      Canvas canvas, Ground ground, int label, IntPredicate open, Optional<Box> elsewhere) {
-    String number = String.valueOf(number(section, label));
-    Optional<Box> inside = ground.within(o -> o == label, Plates.RING + 1, Plates.RING + 1);
-    if (inside.isPresent()) {
-      ground.take(inside.get());
-      Plates.ring(canvas, number, inside.get().midX(), inside.get().midY());
-      return;
-    }
-    Optional<double[]> target = target(label, elsewhere);
-    if (target.isEmpty()) {
-      return;
-    }
-    double x = target.get()[0];
-    double y = target.get()[1];
-    double size = Plates.RING + 2;
-    Optional<Box> place = ground.near(x, y, size, size, 16, 70, open);
-    if (place.isEmpty()) {
-      place = ground.near(x, y, size, size, 12, 200, owner -> true);
-    }
-    place.ifPresent(
-        box -> {
-          ground.take(box);
-          ground.take(Polyline.of(box.midX(), box.midY(), x, y));
-          Plates.leader(canvas, box, x, y);
-          Plates.ring(canvas, number, box.midX(), box.midY());
-        });
-  }
-
-  /** A point in a face of a fill: inside the middle of its longest side seen. */
-  private Optional<double[]> target(int label, Optional<Box> elsewhere) {
-    double longest = 0;
-    double[] found = null;
-    for (List<Polyline> rings : faces(label)) {
-      Polyline ring = rings.get(0);
-      if (elsewhere.isPresent() && elsewhere.get().contains(ring.bounds())) {
-        continue;
+    for (int face : section.largestFirst(label)) {
+      IntPredicate own = owner -> owner == face;
+      Optional<Box> flat = ground.within(own, width, height);
+      Optional<Box> place = flat.isPresent() ? flat : ground.within(own, height, width);
+      if (place.isPresent()) {
+        ground.take(place.get());
+        write(canvas, name, place.get(), flat.isPresent() ? 0 : -Math.PI / 2, looks.get(label));
+        return true;
       }
-      for (int i = 0; i < ring.size(); i++) {
-        double dx = ring.x(ring.after(i)) - ring.x(i);
-        double dy = ring.y(ring.after(i)) - ring.y(i);
-        double length = Math.hypot(dx, dy);
-        if (length > longest) {
-          longest = length;
-          double width = 2 * Math.abs(ring.area()) / ring.length();
-          double inward = Math.min(5, width / 2) * Math.signum(ring.area()) / length;
-          found =
-              new double[] {
-                ring.x(i) + 0.5 * dx - inward * dy, ring.y(i) + 0.5 * dy + inward * dx
-              };
+    }
+    return false;
+  }
+
+  private static void write(Canvas canvas, String name, Box box, double turn, MaterialLook look) {
+    canvas.fill(new Rectangle2D.Double(box.x0(), box.y0(), box.width(), box.height()), look.tone());
+    double drop = Lettering.LABEL.size() * TextWidths.CAPITAL / 2;
+    Color ink = Palette.luminance(look.tone()) < DARK ? Palette.PAPER : Palette.INK;
+    canvas.text(
+        name,
+        box.midX() - Math.sin(turn) * drop,
+        box.midY() + Math.cos(turn) * drop,
+        Lettering.LABEL.in(ink),
+        Anchor.MIDDLE,
+        turn);
+  }
+
+  private boolean ringInside(Canvas canvas, Ground ground, int label) {
+    for (int face : section.largestFirst(label)) {
+      Optional<Box> inside =
+          ground.within(owner -> owner == face, Plates.RING + 1, Plates.RING + 1);
+      if (inside.isPresent()) {
+        ground.take(inside.get());
+        ring(canvas, label, inside.get());
+        return true;
+      }
+    }
+    return false;
+  }
+
+  private void ring(Canvas canvas, int label, Box box) {
+    Plates.ring(canvas, String.valueOf(number(section, label)), box.midX(), box.midY());
+  }
+
+  private void ringBeside(Canvas canvas, Ground ground, int label, Optional<Box> elsewhere) {
+    List<double[]> targets = new ArrayList<>();
+    for (int face : section.largestFirst(label)) {
+      List<Polyline> rings = seen(face);
+      if (!rings.isEmpty()
+          && (elsewhere.isEmpty() || !elsewhere.get().contains(rings.get(0).bounds()))) {
+        targets(rings.get(0), targets);
+        break;
+      }
+    }
+    double size = Plates.RING + 2;
+    IntPredicate open = SectionLines.open(section);
+    for (IntPredicate accepted : List.of(open, (IntPredicate) owner -> true)) {
+      for (double[] target : targets) {
+        Optional<Box> place = ground.near(target[0], target[1], size, size, 10, 90, accepted);
+        if (place.isPresent()) {
+          Box box = place.get();
+          ground.take(box);
+          ground.take(Polyline.of(box.midX(), box.midY(), target[0], target[1]));
+          Plates.leader(canvas, box, target[0], target[1]);
+          ring(canvas, label, box);
+          return;
         }
       }
     }
-    return Optional.ofNullable(found);
+  }
+
+  /** Points just inside the longest side of a face, the middle first. */
+  private static void targets(Polyline ring, List<double[]> targets) {
+    int longest = 0;
+    double most = 0;
+    for (int i = 0; i < ring.size(); i++) {
+      int j = ring.after(i);
+      double length = Math.hypot(ring.x(j) - ring.x(i), ring.y(j) - ring.y(i));
+      if (length > most) {
+        most = length;
+        longest = i;
+      }
+    }
+    if (most == 0) {
+      return;
+    }
+    int j = ring.after(longest);
+    double dx = ring.x(j) - ring.x(longest);
+    double dy = ring.y(j) - ring.y(longest);
+    double width = 2 * Math.abs(ring.area()) / ring.length();
+    double inward = Math.min(5, width / 2) * Math.signum(ring.area()) / most;
+    for (double part : ALONG) {
+      targets.add(
+          new double[] {
+            ring.x(longest) + part * dx - inward * dy, ring.y(longest) + part * dy + inward * dx
+          });
+    }
   }
 }

@@ -95,8 +95,7 @@ record MaterialLook(Hatch hatch, Color tone, Color line, double turn, double pit
       return Kind.AIR;
     }
     Material material = (Material) fill;
-    double lambda =
-        Math.max(material.conductivityWPerMK(), material.crossConductivityWPerMK());
+    double lambda = Math.max(material.conductivityWPerMK(), material.crossConductivityWPerMK());
     String name = material.name().toLowerCase(Locale.ROOT);
     if (lambda >= METAL_FROM) {
       return Kind.METAL;

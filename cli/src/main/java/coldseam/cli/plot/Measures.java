@@ -16,6 +16,14 @@ final class Measures {
   private static final double BEYOND = 3.5;
   private static final double LIFT = 3;
 
+  /** Just beside a surface, points. */
+  private static final double CLOSE = 5;
+
+  private static final double[] LIFTS = {5, 9};
+
+  /** Steeper than this, text is read from the right. */
+  private static final double STEEP = Math.toRadians(75);
+
   private final Canvas canvas;
   private final Ground ground;
   private final IntPredicate open;
@@ -95,25 +103,30 @@ final class Measures {
     canvas.stroke(extensions, Palette.mix(ink, Palette.PAPER, 0.45), Pen.HAIR);
     canvas.stroke(path, ink, Pen.FINE);
     canvas.stroke(ticks, ink, Pen.MEDIUM);
-    ground.take(
-        new Polyline.Builder()
-            .add(ox - 2 * ux, oy - 2 * uy)
-            .add(ox + (length + 2) * ux, oy + (length + 2) * uy)
-            .open());
-    for (int i = 0; i < texts.size(); i++) {
-      double from = marks.get(i);
-      double to = marks.get(i + 1);
-      double mid = (from + to) / 2;
-      write(texts.get(i), ox + mid * ux, oy + mid * uy, ux, uy, to - from, lettering);
+    for (boolean fitting : new boolean[] {true, false}) {
+      for (int i = 0; i < texts.size(); i++) {
+        double from = marks.get(i);
+        double to = marks.get(i + 1);
+        if (TextWidths.of(texts.get(i), lettering) + 2 <= to - from == fitting) {
+          Polyline piece = Polyline.of(ox + from * ux, oy + from * uy, ox + to * ux, oy + to * uy);
+          boolean lone = texts.size() == 1;
+          if (!along(piece, texts.get(i), lettering, fitting, lone)) {
+            beside(piece, texts.get(i), lettering);
+          }
+        }
+      }
     }
+    ground.take(
+        Polyline.of(ox - 2 * ux, oy - 2 * uy, ox + (length + 2) * ux, oy + (length + 2) * uy));
   }
 
   /** The signed distance to the right, on the sheet, where the line meets least. */
   private double place(Polyline line, int right, double nearest, double ux, double uy) {
+    int[] sides = right == 0 ? openSides(line, ux, uy) : new int[] {right};
     double best = Double.POSITIVE_INFINITY;
-    double found = nearest * (right == 0 ? 1 : right);
+    double found = nearest * sides[0];
     for (int tier = 0; tier < TIERS; tier++) {
-      for (int side : right == 0 ? new int[] {1, -1} : new int[] {right}) {
+      for (int side : sides) {
         double offset = side * (nearest + tier * TIER);
         double blocked = 0;
         for (double lift : new double[] {-5, 0, 5, 10}) {
@@ -137,6 +150,26 @@ final class Measures {
     return found;
   }
 
+  /** The side of a surface that is open, or both sides of a line that runs elsewhere. */
+  private int[] openSides(Polyline line, double ux, double uy) {
+    double[] blocked = new double[2];
+    for (int side = 0; side < 2; side++) {
+      double off = side == 0 ? CLOSE : -CLOSE;
+      blocked[side] =
+          ground.strange(
+              Polyline.of(
+                  line.x(0) - off * uy,
+                  line.y(0) + off * ux,
+                  line.x(1) - off * uy,
+                  line.y(1) + off * ux),
+              open);
+    }
+    if (Math.abs(blocked[0] - blocked[1]) < 0.5) {
+      return new int[] {1, -1};
+    }
+    return new int[] {blocked[0] < blocked[1] ? 1 : -1};
+  }
+
   /** Whether the text's side of a line along (ux, uy) is to its right (1) or left (−1). */
   private static double upwards(double ux, double uy) {
     double angle = readable(Math.atan2(uy, ux));
@@ -146,39 +179,78 @@ final class Measures {
   /** The angle, or its opposite, at which text is read from below or from the right. */
   static double readable(double angle) {
     double turned = angle;
-    while (turned > Math.PI / 2 - 1e-6) {
+    while (turned > STEEP) {
       turned -= Math.PI;
     }
-    while (turned < -Math.PI / 2 - 1e-6) {
+    while (turned <= STEEP - Math.PI) {
       turned += Math.PI;
     }
     return turned;
   }
 
-  private void write(
-      String text, double x, double y, double ux, double uy, double room, Lettering lettering) {
+  /**
+   * Writes a text above its piece of the line, in the middle or where nothing is in the way; one
+   * that is longer than its piece only where nothing at all is in the way.
+   */
+  private boolean along(
+      Polyline piece, String text, Lettering lettering, boolean fitting, boolean lone) {
+    if (!fitting && !lone) {
+      return false;
+    }
     double width = TextWidths.of(text, lettering);
+    double length = piece.length();
+    double ux = (piece.x(1) - piece.x(0)) / length;
+    double uy = (piece.y(1) - piece.y(0)) / length;
     double angle = readable(Math.atan2(uy, ux));
     double upX = Math.sin(angle);
     double upY = -Math.cos(angle);
-    if (width + 2 <= room) {
-      canvas.text(text, x + LIFT * upX, y + LIFT * upY, lettering, Anchor.MIDDLE, angle);
-      double cos = Math.cos(angle) * width / 2;
-      double sin = Math.sin(angle) * width / 2;
-      for (double lift : new double[] {4, 8, 11}) {
-        ground.take(
-            Polyline.of(
-                x + lift * upX - cos,
-                y + lift * upY - sin,
-                x + lift * upX + cos,
-                y + lift * upY + sin));
+    double best = Double.POSITIVE_INFINITY;
+    double at = length / 2;
+    double slack = Math.max(0, length - width - 8);
+    for (double part : new double[] {0, 0.15, -0.15, 0.3, -0.3, 0.45, -0.45}) {
+      double middle = length / 2 + part * slack;
+      double score = 0.05 * Math.abs(part);
+      for (double lift : LIFTS) {
+        score +=
+            ground.blocked(
+                Polyline.of(
+                    piece.x(0) + (middle - width / 2) * ux + lift * upX,
+                    piece.y(0) + (middle - width / 2) * uy + lift * upY,
+                    piece.x(0) + (middle + width / 2) * ux + lift * upX,
+                    piece.y(0) + (middle + width / 2) * uy + lift * upY),
+                open);
       }
-      return;
+      if (score < best) {
+        best = score;
+        at = middle;
+      }
     }
+    if (!fitting && best >= 0.05) {
+      return false;
+    }
+    double x = piece.x(0) + at * ux;
+    double y = piece.y(0) + at * uy;
+    canvas.text(text, x + LIFT * upX, y + LIFT * upY, lettering, Anchor.MIDDLE, angle);
+    for (double lift : LIFTS) {
+      ground.take(
+          Polyline.of(
+              x - width / 2 * ux + lift * upX,
+              y - width / 2 * uy + lift * upY,
+              x + width / 2 * ux + lift * upX,
+              y + width / 2 * uy + lift * upY));
+    }
+    return true;
+  }
+
+  /** Writes a text that is longer than its piece of the line beside it, with a leader. */
+  private void beside(Polyline piece, String text, Lettering lettering) {
+    double x = (piece.x(0) + piece.x(1)) / 2;
+    double y = (piece.y(0) + piece.y(1)) / 2;
+    double width = TextWidths.of(text, lettering) + 2;
     double height = lettering.size() * 1.1;
-    Optional<Box> place = ground.near(x, y, width + 2, height, 9, 90, open);
+    Optional<Box> place = ground.near(x, y, width, height, 5, 90, open);
     if (place.isEmpty()) {
-      place = ground.near(x, y, width + 2, height, 9, 140, any -> true);
+      place = ground.near(x, y, width, height, 5, 140, any -> true);
     }
     place.ifPresent(
         box -> {

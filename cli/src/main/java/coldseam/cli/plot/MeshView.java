@@ -18,7 +18,7 @@ final class MeshView extends View {
 
   @Override
   String shown() {
-    return "Mesh · " + words(result().heatLoss().filmSet());
+    return "Mesh · " + films(result().heatLoss().filmSet());
   }
 
   @Override
@@ -32,7 +32,7 @@ final class MeshView extends View {
   }
 
   @Override
-  void paint(Canvas canvas, Panel panel, boolean zoomed, Optional<Panel> zoom) {
+  void paint(Canvas canvas, Panel panel, Optional<Panel> zoom) {
     canvas.layer(panel.name() + "-triangles");
     List<Polyline> sides = new ArrayList<>();
     Box window = panel.window();
@@ -48,7 +48,7 @@ final class MeshView extends View {
     SectionLines lines = new SectionLines(section(), panel);
     lines.joints(canvas, Palette.INK, Pen.FINE);
     lines.outline(canvas);
-    ScaleBar.draw(canvas, panel, new Ground(panel.frame()), caption());
+    frame(canvas, panel, SectionLines.ground(section(), panel), zoom);
   }
 
   @Override

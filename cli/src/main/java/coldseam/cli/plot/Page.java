@@ -22,6 +22,9 @@ final class Page {
   private static final double LOWEST = 190;
   private static final double ZOOM_HEIGHT = 400;
 
+  /** Free strip around the section that a zoom may show, points. */
+  private static final double ZOOM_AIR = 84;
+
   /** Drawings wider than this, over their height, run over the whole sheet. */
   private static final double WIDE = 2.1;
 
@@ -29,9 +32,10 @@ final class Page {
   private static final double NARROW = 0.55;
 
   /** A zoom less than so many times larger is left out. */
-  private static final double LEAST_ZOOM = 2.2;
+  private static final double LEAST_ZOOM = 2.5;
 
   private static final int FOOT_COLUMNS = 3;
+  private static final Lettering FOOT = new Lettering(9.5f, false, Palette.SECOND_INK);
   private static final String SAFETY =
       "Calculated under the stated assumptions. Local codes and a licensed professional decide."
           + " Thermal changes to loadbearing or fire-separating parts need their approval.";
@@ -91,10 +95,12 @@ final class Page {
     double width = wide ? INNER : narrow ? BESIDE * 0.45 : BESIDE;
     panel = fitted(section, content.gutters(), MARGIN, top, width);
     double bottom = panel.frame().y1();
+    boolean keyFits = !wide && content.key().height(KEY_WIDTH) <= bottom - top;
+    double zoomRight = MARGIN + (keyFits && !narrow ? INNER : BESIDE);
     Box zoomFrame =
         narrow
-            ? new Box(panel.frame().x1() + GAP, top, MARGIN + BESIDE, bottom)
-            : new Box(MARGIN, bottom + GAP, MARGIN + BESIDE, bottom + GAP + ZOOM_HEIGHT);
+            ? new Box(panel.frame().x1() + GAP, top, zoomRight, bottom)
+            : new Box(MARGIN, bottom + GAP, zoomRight, bottom + GAP + ZOOM_HEIGHT);
     zoom =
         content
             .zoom()
@@ -104,20 +110,35 @@ final class Page {
       bottom = zoomFrame.y1();
     }
     double keyTop = wide ? panel.frame().y1() + GAP : top;
-    boolean besides = !wide || zoom.isPresent();
-    double keyHeight = besides ? Math.max(0, bottom - keyTop) : 0;
-    columns.add(new Key.Column(MARGIN + BESIDE + GAP, keyTop, KEY_WIDTH, keyHeight));
+    bottom = layKey(keyTop, bottom, !wide || zoom.isPresent());
+    height = Math.ceil(bottom + 16 + footLines().size() * FOOT.lineHeight() + 14);
+  }
+
+  /**
+   * Puts the key beside the frames, and what does not fit there below; or all beside them, if that
+   * makes a shorter sheet.
+   *
+   * @return where the sheet's drawings and key end
+   */
+  private double layKey(double top, double bottom, boolean besides) {
+    Key key = content.key();
+    double beside = besides ? Math.max(0, bottom - top) : 0;
     double footWidth = (INNER - (FOOT_COLUMNS - 1) * GAP) / FOOT_COLUMNS;
-    double rest = content.key().restHeight(KEY_WIDTH, keyHeight, footWidth, FOOT_COLUMNS);
-    if (rest > 0) {
-      bottom += GAP;
-      for (int c = 0; c < FOOT_COLUMNS; c++) {
-        columns.add(
-            new Key.Column(MARGIN + c * (footWidth + GAP), bottom, footWidth, rest));
-      }
-      bottom += rest;
+    double rest = key.restHeight(KEY_WIDTH, beside, footWidth, FOOT_COLUMNS);
+    double whole = key.height(KEY_WIDTH);
+    if (besides && rest > 0 && top + whole <= bottom + GAP + rest) {
+      beside = whole;
+      rest = 0;
     }
-    height = Math.ceil(bottom + 16 + footLines().size() * Lettering.QUIET.lineHeight() + 14);
+    columns.add(new Key.Column(MARGIN + BESIDE + GAP, top, KEY_WIDTH, beside));
+    double end = Math.max(bottom, top + (rest > 0 ? 0 : beside));
+    if (rest > 0) {
+      for (int c = 0; c < FOOT_COLUMNS; c++) {
+        columns.add(new Key.Column(MARGIN + c * (footWidth + GAP), end + GAP, footWidth, rest));
+      }
+      end += GAP + rest;
+    }
+    return end;
   }
 
   static Page of(Content content) {
@@ -136,16 +157,33 @@ final class Page {
     double shiftX = gutters.left() + spare + section.width() * scale / 2 - width / 2;
     double shiftY = gutters.top() + spareDown + section.height() * scale / 2 - height / 2;
     return new Panel(
-        "whole", frame, scale, section.midX() - shiftX / scale, section.midY() + shiftY / scale);
+        Panel.WHOLE,
+        frame,
+        scale,
+        section.midX() - shiftX / scale,
+        section.midY() + shiftY / scale);
   }
 
-  private static Panel filling(Box part, Box frame) {
+  /** A part filling a frame, moved so that nothing is seen that the whole does not show. */
+  private Panel filling(Box part, Box frame) {
     double scale = Math.min(frame.width() / part.width(), frame.height() / part.height());
-    return new Panel("zoom", frame, scale, part.midX(), part.midY());
+    Box whole = content.section().grown(ZOOM_AIR / scale);
+    return new Panel(
+        Panel.ZOOM,
+        frame,
+        scale,
+        kept(part.midX(), frame.width() / scale, whole.x0(), whole.x1()),
+        kept(part.midY(), frame.height() / scale, whole.y0(), whole.y1()));
+  }
+
+  private static double kept(double middle, double size, double least, double most) {
+    return size >= most - least
+        ? (least + most) / 2
+        : Math.max(least + size / 2, Math.min(most - size / 2, middle));
   }
 
   private static List<String> footLines() {
-    return Wrapping.of(SAFETY, INNER - 90, Lettering.QUIET);
+    return Wrapping.of(SAFETY, INNER - 70, FOOT);
   }
 
   double width() {
@@ -187,14 +225,14 @@ final class Page {
     content.key().draw(canvas, columns);
     canvas.layer("foot");
     List<String> lines = footLines();
-    double foot = height - 14 - lines.size() * Lettering.QUIET.lineHeight();
+    double foot = height - 14 - lines.size() * FOOT.lineHeight();
     canvas.stroke(
         new Line2D.Double(MARGIN, foot - 4, WIDTH - MARGIN, foot - 4), Palette.RULE, Pen.HAIR);
-    double base = foot + Lettering.QUIET.size();
-    canvas.text("Coldseam", WIDTH - MARGIN, base, Lettering.QUIET, Anchor.END);
+    double base = foot + FOOT.size();
+    canvas.text("Coldseam", WIDTH - MARGIN, base, FOOT, Anchor.END);
     for (String line : lines) {
-      canvas.text(line, MARGIN, base, Lettering.QUIET);
-      base += Lettering.QUIET.lineHeight();
+      canvas.text(line, MARGIN, base, FOOT);
+      base += FOOT.lineHeight();
     }
   }
 

@@ -4,13 +4,16 @@ package coldseam.cli.plot;
  * A frame on the sheet through which a window of the drawing is seen, both directions at one scale,
  * y of the drawing upwards.
  *
- * @param name what its layers are called after: "whole" or "zoom"
+ * @param name what its layers are called after: {@link #WHOLE} or {@link #ZOOM}
  * @param frame on the sheet, points
  * @param pointsPerM the scale
  * @param centreX local x of the drawing in the middle of the frame, m
  * @param centreY local y there, m
  */
 record Panel(String name, Box frame, double pointsPerM, double centreX, double centreY) {
+  static final String WHOLE = "whole";
+  static final String ZOOM = "zoom";
+
   double x(double localX) {
     return frame.midX() + (localX - centreX) * pointsPerM;
   }
@@ -29,8 +32,7 @@ record Panel(String name, Box frame, double pointsPerM, double centreX, double c
 
   /** What of the drawing is seen, m. */
   Box window() {
-    return new Box(
-        localX(frame.x0()), localY(frame.y1()), localX(frame.x1()), localY(frame.y0()));
+    return new Box(localX(frame.x0()), localY(frame.y1()), localX(frame.x1()), localY(frame.y0()));
   }
 
   /** A box of the drawing on the sheet. */

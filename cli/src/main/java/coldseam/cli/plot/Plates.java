@@ -35,9 +35,7 @@ final class Plates {
       Canvas canvas, List<String> lines, Box box, Lettering first, Lettering rest) {
     double step = first.lineHeight();
     double base =
-        box.midY()
-            - lines.size() * step / 2
-            + (step + first.size() * TextWidths.CAPITAL) / 2;
+        box.midY() - lines.size() * step / 2 + (step + first.size() * TextWidths.CAPITAL) / 2;
     Lettering lettering = first;
     for (String line : lines) {
       canvas.text(line, box.midX(), base, lettering, Anchor.MIDDLE);

@@ -78,7 +78,7 @@ public final class Plots {
   public String svg(Kind kind) {
     View view = view(kind);
     Page page = view.page();
-    SvgCanvas canvas = SvgCanvas.blank();
+    SvgCanvas canvas = SvgCanvas.blank(kind.stem());
     view.draw(canvas, page);
     return canvas.document(page.width(), page.height(), view.title(), view.told());
   }

@@ -1,12 +1,13 @@
 package coldseam.cli.plot;
 
-import java.awt.Font;
 import java.awt.Graphics2D;
 import java.awt.RenderingHints;
 import java.awt.image.BufferedImage;
 import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.io.UncheckedIOException;
+import java.util.concurrent.ExecutionException;
+import java.util.concurrent.FutureTask;
 import javax.imageio.ImageIO;
 
 /** Draws pixels, two a point. */
@@ -30,26 +31,32 @@ final class PngCanvas extends Canvas {
             BufferedImage.TYPE_INT_RGB);
     Graphics2D graphics = image.createGraphics();
     graphics.scale(PIXELS_PER_POINT, PIXELS_PER_POINT);
-    graphics.setRenderingHint(
-        RenderingHints.KEY_ANTIALIASING, RenderingHints.VALUE_ANTIALIAS_ON);
+    graphics.setRenderingHint(RenderingHints.KEY_ANTIALIASING, RenderingHints.VALUE_ANTIALIAS_ON);
     graphics.setRenderingHint(
         RenderingHints.KEY_TEXT_ANTIALIASING, RenderingHints.VALUE_TEXT_ANTIALIAS_ON);
     graphics.setRenderingHint(
         RenderingHints.KEY_FRACTIONALMETRICS, RenderingHints.VALUE_FRACTIONALMETRICS_ON);
-    graphics.setRenderingHint(
-        RenderingHints.KEY_STROKE_CONTROL, RenderingHints.VALUE_STROKE_PURE);
+    graphics.setRenderingHint(RenderingHints.KEY_STROKE_CONTROL, RenderingHints.VALUE_STROKE_PURE);
     probe(graphics);
     return new PngCanvas(graphics, image);
   }
 
-  /** Asks for the width of a letter, as a machine without fonts cannot tell it. */
+  /**
+   * Asks for the width of a letter. A machine without fonts fails at it in ways that differ from
+   * one Java to the next, errors among them; a task turns all of them into one.
+   */
   private static void probe(Graphics2D graphics) throws NoFontException {
+    FutureTask<Integer> width =
+        new FutureTask<>(() -> graphics.getFontMetrics(Lettering.LABEL.font()).stringWidth("m"));
+    width.run();
     try {
-      Font font = Lettering.LABEL.font();
-      if (graphics.getFontMetrics(font).stringWidth("m") <= 0) {
+      if (width.get() <= 0) {
         throw new NoFontException(null);
       }
-    } catch (RuntimeException | LinkageError | InternalError e) {
+    } catch (ExecutionException e) {
+      throw new NoFontException(e.getCause());
+    } catch (InterruptedException e) {
+      Thread.currentThread().interrupt();
       throw new NoFontException(e);
     }
   }

@@ -1,15 +1,71 @@
 package coldseam.cli.plot;
 
+import java.awt.geom.Ellipse2D;
 import java.awt.geom.Path2D;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.function.IntPredicate;
 
-/** Marks and labels of single points. */
+/** Marks and labels of single points: first all marks take their place, then the labels. */
 final class PointMarks {
   private static final double ARM = 4;
   private static final double DIAMOND = 5;
 
-  private PointMarks() {}
+  private final Canvas canvas;
+  private final Panel panel;
+  private final Ground ground;
+  private final Optional<Box> elsewhere;
+  private final List<Named> named = new ArrayList<>();
+
+  /** A named point on the sheet. */
+  private record Named(double x, double y, String text) {}
+
+  /**
+   * Prepares.
+   *
+   * @param canvas what it is drawn on
+   * @param panel the frame
+   * @param ground what is taken
+   * @param elsewhere the part of the frame whose points are named in the zoom
+   */
+  PointMarks(Canvas canvas, Panel panel, Ground ground, Optional<Box> elsewhere) {
+    this.elsewhere = elsewhere;
+    this.canvas = canvas;
+    this.panel = panel;
+    this.ground = ground;
+  }
+
+  /** Adds a named point, if it is seen. */
+  void add(double localX, double localY, String text) {
+    double x = panel.x(localX);
+    double y = panel.y(localY);
+    if (panel.frame().contains(x, y)) {
+      named.add(new Named(x, y, text));
+    }
+  }
+
+  /** Draws all, with the texts that find room; the key has the others. */
+  void draw() {
+    for (Named point : named) {
+      ground.keepClear(Box.around(point.x(), point.y(), 2 * ARM, 2 * ARM));
+    }
+    for (Named point : named) {
+      if (elsewhere.isPresent() && elsewhere.get().contains(point.x(), point.y())) {
+        continue;
+      }
+      Box size = Plates.size(List.of(point.text()), Lettering.SMALL);
+      Optional<Box> place = place(ground, size, point.x(), point.y(), 5, 46, owner -> true);
+      place.ifPresent(
+          box -> {
+            if (!box.grown(12).contains(point.x(), point.y())) {
+              Plates.leader(canvas, box, point.x(), point.y());
+            }
+            Plates.centred(canvas, List.of(point.text()), box, Lettering.SMALL, Lettering.SMALL);
+          });
+    }
+    named.forEach(point -> cross(canvas, point.x(), point.y()));
+  }
 
   /** A named point. */
   static void cross(Canvas canvas, double x, double y) {
@@ -22,7 +78,7 @@ final class PointMarks {
     canvas.stroke(cross, Palette.INK, Pen.MEDIUM);
   }
 
-  /** A coldest or warmest point. */
+  /** A coldest point. */
   static void diamond(Canvas canvas, double x, double y) {
     Path2D diamond = new Path2D.Double();
     diamond.moveTo(x - DIAMOND, y);
@@ -32,41 +88,29 @@ final class PointMarks {
     diamond.closePath();
     canvas.fill(diamond, Palette.PAPER);
     canvas.stroke(diamond, Palette.INK, new Pen(1.5f));
-    Path2D dot = new Path2D.Double();
-    dot.append(new java.awt.geom.Ellipse2D.Double(x - 1.3, y - 1.3, 2.6, 2.6), false);
-    canvas.fill(dot, Palette.INK);
+    canvas.fill(new Ellipse2D.Double(x - 1.3, y - 1.3, 2.6, 2.6), Palette.INK);
   }
 
-  /** The name of a point beside it; left out where there is no room, the key has it. */
-  static void name(Canvas canvas, Ground ground, String name, double x, double y) {
-    Optional<Box> place = label(ground, List.of(name), Lettering.SMALL, x, y, 5, 40);
-    place.ifPresent(
-        box -> {
-          boolean far = Math.hypot(box.midX() - x, box.midY() - y) > 8 + box.width() / 2 + 6;
-          if (far) {
-            Plates.leader(canvas, box, x, y);
-          }
-          Plates.centred(canvas, List.of(name), box, Lettering.SMALL, Lettering.SMALL);
-        });
-  }
-
-  /** Takes room for lines near a point. */
-  static Optional<Box> label(
+  /**
+   * Takes room for a plate near a point: on what is preferred, else off the lines of the section,
+   * else anywhere.
+   */
+  static Optional<Box> place(
       Ground ground,
-      List<String> lines,
-      Lettering lettering,
+      Box size,
       double x,
       double y,
       double least,
-      double most) {
-    Box size = Plates.size(lines, lettering);
-    Optional<Box> place =
-        ground.near(
-            x, y, size.width(), size.height(), least, most, owner -> owner != Ground.EDGE);
-    if (place.isEmpty()) {
-      place = ground.near(x, y, size.width(), size.height(), least, most, owner -> true);
+      double most,
+      IntPredicate preferred) {
+    for (IntPredicate accepted :
+        List.of(preferred, (IntPredicate) owner -> owner != Ground.EDGE, owner -> true)) {
+      Optional<Box> place = ground.near(x, y, size.width(), size.height(), least, most, accepted);
+      if (place.isPresent()) {
+        ground.take(place.get());
+        return place;
+      }
     }
-    place.ifPresent(ground::take);
-    return place;
+    return Optional.empty();
   }
 }

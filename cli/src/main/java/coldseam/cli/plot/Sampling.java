@@ -1,18 +1,17 @@
 package coldseam.cli.plot;
 
 import coldseam.mesh.triangulation.Mesh;
-import coldseam.solver.conduction.TemperatureField;
 import java.util.Arrays;
 
 /**
- * Makes linear triangles of a quadratic temperature field, as few as a picture needs: sides are
- * halved only where the field bends so much that an isotherm would be seen to lie elsewhere.
+ * Makes linear triangles of a quadratic field, as few as a picture needs: sides are halved only
+ * where the field bends so much that a line of equal value would be seen to lie elsewhere.
  */
 final class Sampling {
-  /** How far an isotherm may be drawn from its place, points. */
+  /** How far a line may be drawn from its place, points. */
   private static final double DISPLACEMENT = 0.15;
 
-  /** How wrong the temperature on a drawn isotherm may be, as a share of the step between two. */
+  /** How wrong the value on a drawn line may be, as a share of the step between two. */
   private static final double SHARE_OF_STEP = 0.004;
 
   /** Sides shorter than this are left alone, points. */
@@ -20,14 +19,14 @@ final class Sampling {
 
   private static final int MOST_PASSES = 8;
 
-  private final TemperatureField field;
+  private final Nodal field;
   private final Mesh mesh;
   private final double pointsPerM;
   private final double step;
   private LinearPatch patch;
   private int[] parents;
 
-  private Sampling(TemperatureField field, double pointsPerM, double step) {
+  private Sampling(Nodal field, double pointsPerM, double step) {
     this.field = field;
     this.mesh = field.mesh();
     this.pointsPerM = pointsPerM;
@@ -37,12 +36,12 @@ final class Sampling {
   /**
    * Samples.
    *
-   * @param field the temperatures
+   * @param field the values
    * @param window triangles outside it are left out, m
    * @param pointsPerM scale of the picture
-   * @param step between two isotherms, K
+   * @param step between two lines
    */
-  static LinearPatch of(TemperatureField field, Box window, double pointsPerM, double step) {
+  static LinearPatch of(Nodal field, Box window, double pointsPerM, double step) {
     Sampling sampling = new Sampling(field, pointsPerM, step);
     sampling.start(window);
     for (int pass = 0; pass < MOST_PASSES && sampling.refine(); pass++) {
@@ -52,7 +51,7 @@ final class Sampling {
   }
 
   private void start(Box window) {
-    int[] numbers = new int[mesh.vertexCount()];
+    int[] numbers = new int[field.cornerValues()];
     Arrays.fill(numbers, -1);
     patch = new LinearPatch(mesh.vertexCount() * 2, mesh.triangleCount() * 2);
     parents = new int[mesh.triangleCount()];
@@ -65,14 +64,17 @@ final class Sampling {
         continue;
       }
       for (int k = 0; k < 3; k++) {
-        int v = mesh.vertex(t, k);
-        if (numbers[v] < 0) {
-          numbers[v] = patch.addVertex(mesh.x(v), mesh.y(v), field.atNode(v));
+        int value = field.cornerValue(t, k);
+        if (numbers[value] < 0) {
+          int v = mesh.vertex(t, k);
+          numbers[value] = patch.addVertex(mesh.x(v), mesh.y(v), field.atCorner(t, k));
         }
       }
       parents[patch.triangles()] = t;
       patch.addTriangle(
-          numbers[mesh.vertex(t, 0)], numbers[mesh.vertex(t, 1)], numbers[mesh.vertex(t, 2)]);
+          numbers[field.cornerValue(t, 0)],
+          numbers[field.cornerValue(t, 1)],
+          numbers[field.cornerValue(t, 2)]);
     }
   }
 
@@ -114,9 +116,7 @@ final class Sampling {
     int b = patch.corner(t, (k + 2) % 3);
     double length = Math.hypot(patch.x(a) - patch.x(b), patch.y(a) - patch.y(b)) * pointsPerM;
     double off = Math.abs(middle - (patch.value(a) + patch.value(b)) / 2);
-    return length > SHORT
-        && off > SHARE_OF_STEP * step
-        && off * pointsPerM > DISPLACEMENT * slope;
+    return length > SHORT && off > SHARE_OF_STEP * step && off * pointsPerM > DISPLACEMENT * slope;
   }
 
   private double middle(int t, int k) {
@@ -125,8 +125,7 @@ final class Sampling {
     double x = (patch.x(a) + patch.x(b)) / 2;
     double y = (patch.y(a) + patch.y(b)) / 2;
     int parent = parents[t];
-    double[] l = Barycentric.of(mesh, parent, x, y);
-    return field.in(parent, l[0], l[1], l[2]);
+    return field.in(parent, Barycentric.of(mesh, parent, x, y));
   }
 
   private void split(int[] sideOf, boolean[] split, double[] middles) {
@@ -149,8 +148,7 @@ final class Sampling {
           int a = old.corner(t, (k + 1) % 3);
           int b = old.corner(t, (k + 2) % 3);
           middleVertex[side] =
-              patch.addVertex(
-                  (old.x(a) + old.x(b)) / 2, (old.y(a) + old.y(b)) / 2, middles[side]);
+              patch.addVertex((old.x(a) + old.x(b)) / 2, (old.y(a) + old.y(b)) / 2, middles[side]);
         }
         m[k] = middleVertex[side];
       }

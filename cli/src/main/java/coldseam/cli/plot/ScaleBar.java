@@ -1,10 +1,10 @@
 package coldseam.cli.plot;
 
 import coldseam.cli.plot.Canvas.Anchor;
-import coldseam.cli.plot.Plots.Caption;
 import coldseam.solver.detail.View;
 import java.awt.geom.Path2D;
 import java.awt.geom.Rectangle2D;
+import java.util.function.IntPredicate;
 
 /** The scale bar, and which way is up. */
 final class ScaleBar {
@@ -15,31 +15,29 @@ final class ScaleBar {
 
   private ScaleBar() {}
 
-  /** Draws the bar in the lower left corner of a frame. */
-  static void draw(Canvas canvas, Panel panel, Ground ground, Caption caption) {
+  /** Draws the bar in a lower corner of a frame, on a plate if the section lies there. */
+  static void draw(
+      Canvas canvas, Panel panel, Ground ground, DrawnSection section, Figures figures) {
     canvas.layer(panel.name() + "-scale");
-    double unit = caption.metresPerUnit();
-    double longest = LONGEST / panel.pointsPerM() / unit;
-    double length = Levels.roundDown(longest);
-    double points = length * unit * panel.pointsPerM();
-    double x = panel.frame().x0() + 8;
+    double unit = figures.caption().metresPerUnit();
+    double length = Levels.roundDown(LONGEST / panel.pointsPerM() / unit) * unit;
+    double points = length * panel.pointsPerM();
+    String text = figures.lengthWithUnit(length);
+    double width = points + TextWidths.of(text, Lettering.SMALL) / 2 + 10;
     double y = panel.frame().y1() - 9;
-    Box box = new Box(x - 4, y - 18, x + points + 60, y + 6);
-    if (panel.name().equals("zoom")) {
+    Box left = new Box(panel.frame().x0() + 4, y - 18, panel.frame().x0() + 4 + width, y + 5);
+    Box right = new Box(panel.frame().x1() - 4 - width, y - 18, panel.frame().x1() - 4, y + 5);
+    IntPredicate open = SectionLines.open(section);
+    Box box = ground.free(left, open) || !ground.free(right, open) ? left : right;
+    if (!ground.free(box, open)) {
       Plates.plate(canvas, box);
     }
     ground.take(box);
-    Path2D full = new Path2D.Double();
-    full.append(new Rectangle2D.Double(x, y - BAR, points / 2, BAR), false);
-    canvas.fill(full, Palette.INK);
+    double x = box.x0() + 4;
+    canvas.fill(new Rectangle2D.Double(x, y - BAR, points / 2, BAR), Palette.INK);
     canvas.stroke(new Rectangle2D.Double(x, y - BAR, points, BAR), Palette.INK, Pen.FINE);
     canvas.text("0", x, y - BAR - 3, Lettering.SMALL);
-    canvas.text(
-        Figures.length(length * unit, caption) + " " + caption.unit(),
-        x + points,
-        y - BAR - 3,
-        Lettering.SMALL,
-        Anchor.MIDDLE);
+    canvas.text(text, x + points, y - BAR - 3, Lettering.SMALL, Anchor.MIDDLE);
   }
 
   /** Draws an arrow upwards, or says that the section is horizontal, at the lower right. */

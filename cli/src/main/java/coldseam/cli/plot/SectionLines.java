@@ -5,6 +5,7 @@ import java.awt.Color;
 import java.awt.geom.Path2D;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.function.IntPredicate;
 
 /** The lines of the section that every plot has: outline, joints, thin sheets, cut-off planes. */
 final class SectionLines {
@@ -101,20 +102,40 @@ final class SectionLines {
     }
   }
 
+  /** Takes the ends of the cut-off planes, which reach beyond the section. */
+  void take(Ground ground) {
+    for (DrawnSection.CutOff cutOff : section.cutOffs()) {
+      Polyline line = cutOff.line().on(panel);
+      for (int end = 0; end < 2; end++) {
+        ground.take(Box.around(line.x(end), line.y(end), 2 * BEYOND, 2 * BEYOND));
+      }
+    }
+  }
+
   private String name(String what) {
     return panel.name() + "-" + what;
   }
 
-  /** A map of the frame with the faces of the section on it. */
+  /** A map of the frame, each square owned by the face of the section that it lies in. */
   static Ground ground(DrawnSection section, Panel panel) {
     Ground ground = new Ground(panel.frame());
-    for (DrawnSection.Face face : section.faces()) {
-      List<Polyline> rings = new ArrayList<>();
-      for (Polyline ring : face.rings()) {
-        Clip.ring(ring.on(panel), panel.frame().grown(8)).ifPresent(rings::add);
+    for (boolean solid : new boolean[] {false, true}) {
+      for (int face = 0; face < section.faces().size(); face++) {
+        if (section.solid(section.faces().get(face).label()) == solid) {
+          List<Polyline> rings = new ArrayList<>();
+          for (Polyline ring : section.faces().get(face).rings()) {
+            Clip.ring(ring.on(panel), panel.frame().grown(8)).ifPresent(rings::add);
+          }
+          ground.paint(rings, face, solid);
+        }
       }
-      ground.paint(rings, face.label());
     }
     return ground;
+  }
+
+  /** Accepts the squares of a {@link #ground} where nothing or a space is laid. */
+  static IntPredicate open(DrawnSection section) {
+    return owner ->
+        owner == Ground.OPEN || owner >= 0 && !section.solid(section.faces().get(owner).label());
   }
 }

@@ -32,7 +32,7 @@ final class SectionView extends View {
 
   @Override
   String shown() {
-    return "Section · Rs: heat-loss set | surface set · lengths in " + caption().unit();
+    return "Section · lengths in " + figures().lengthUnit();
   }
 
   @Override
@@ -41,13 +41,13 @@ final class SectionView extends View {
     for (Fill fill : section().fills()) {
       if (fill instanceof Material material) {
         out.append(' ').append(material.name()).append(" (").append(conductivity(material));
-        out.append(" W/(m·K)),");
+        out.append(' ').append(figures().conductivityUnit()).append("),");
       }
     }
     out.setCharAt(out.length() - 1, '.');
     out.append(" Spaces:");
     for (int i = 0; i < section().detail().spaces().size(); i++) {
-      out.append(i == 0 ? " " : ", ").append(section().detail().spaces().get(i).name());
+      out.append(i == 0 ? " " : ", ").append(nameOf(i));
       out.append(' ').append(climate(i));
     }
     return out.append('.').toString();
@@ -59,7 +59,7 @@ final class SectionView extends View {
   }
 
   @Override
-  void paint(Canvas canvas, Panel panel, boolean zoomed, Optional<Panel> zoom) {
+  void paint(Canvas canvas, Panel panel, Optional<Panel> zoom) {
     Ground ground = SectionLines.ground(section(), panel);
     MaterialLabels materials = new MaterialLabels(section(), panel, looks);
     materials.fills(canvas);
@@ -68,27 +68,19 @@ final class SectionView extends View {
     SurfaceMarks marks = new SurfaceMarks(section(), panel);
     marks.fringes(canvas);
     lines.outline(canvas);
-    IntPredicate open = owner -> owner == Ground.OPEN || owner >= 0 && !section().solid(owner);
     marks.keepClear(ground);
-    ScaleBar.draw(canvas, panel, ground, caption());
-    if (zoomed) {
-      ground.take(Zoom.words(panel));
-    } else {
-      ScaleBar.direction(canvas, panel, ground, section().detail().view());
+    frame(canvas, panel, ground, zoom);
+    IntPredicate open = SectionLines.open(section());
+    if (panel.name().equals(Panel.WHOLE)) {
       measures(canvas, panel, ground, open);
     }
     SpaceLabels spaces = new SpaceLabels(canvas, section(), panel, ground);
-    spaces.write(i -> List.of(section().detail().spaces().get(i).name(), climate(i)));
-    materials.names(canvas, ground, open, zoom.map(z -> panel.on(z.window())));
-    marks.values(canvas, ground, spaces, open);
+    spaces.write(i -> List.of(nameOf(i), climate(i)));
+    points(canvas, panel, ground, zoom.map(z -> panel.on(z.window())));
+    materials.names(canvas, ground, zoom.map(z -> panel.on(z.window())));
+    marks.values(canvas, ground, spaces, figures());
     new StretchMarks(section(), panel)
-        .draw(
-            canvas,
-            ground,
-            spaces,
-            open,
-            i -> section().detail().stretches().get(i).name());
-    points(canvas, panel, ground);
+        .draw(canvas, ground, spaces, open, i -> section().detail().stretches().get(i).name());
   }
 
   private void measures(Canvas canvas, Panel panel, Ground ground, IntPredicate open) {
@@ -97,8 +89,7 @@ final class SectionView extends View {
     for (Map.Entry<Reference, String> reference : references().entrySet()) {
       Reference r = reference.getKey();
       Polyline line =
-          Polyline.of(
-              panel.x(r.x0()), panel.y(r.y0()), panel.x(r.x1()), panel.y(r.y1()));
+          Polyline.of(panel.x(r.x0()), panel.y(r.y0()), panel.x(r.x1()), panel.y(r.y1()));
       measures.single(line, 0, 20, reference.getValue(), Lettering.REFERENCE);
     }
     canvas.layer("dimensions");
@@ -116,8 +107,8 @@ final class SectionView extends View {
   }
 
   private void overall(Measures measures, Polyline line, double metres, Set<String> drawn) {
-    if (drawn.add(Figures.length(metres, caption()))) {
-      measures.single(line, -1, 30, Figures.length(metres, caption()), Lettering.MEASURE);
+    if (drawn.add(figures().length(metres))) {
+      measures.single(line, -1, 30, figures().length(metres), Lettering.MEASURE);
     }
   }
 
@@ -126,15 +117,12 @@ final class SectionView extends View {
       Measures measures, DrawnSection.CutOff cutOff, Panel panel, Set<String> drawn) {
     List<Double> marks = new ArrayList<>();
     List<String> texts = new ArrayList<>();
-    List<String> sorted = new ArrayList<>();
     marks.add(0.0);
     for (DrawnSection.Layer layer : cutOff.layers()) {
       marks.add(layer.toM() * panel.pointsPerM());
-      texts.add(Figures.length(layer.toM() - layer.fromM(), caption()));
-      sorted.add(layer.label() + ":" + texts.get(texts.size() - 1));
+      texts.add(figures().length(layer.toM() - layer.fromM()));
     }
-    sorted.sort(null);
-    if (drawn.add(sorted.toString())) {
+    if (drawn.add(sorted(cutOff))) {
       if (texts.size() == 1) {
         drawn.add(texts.get(0));
       }
@@ -158,14 +146,17 @@ final class SectionView extends View {
                   section().localY(length.from().get()),
                   section().localX(length.to().get()),
                   section().localY(length.to().get()));
-          String value = Figures.length(length.valueM(), caption());
+          String value = figures().length(length.valueM());
           String before = texts.get(place);
           texts.put(
               place,
               before == null
                   ? flank.name() + ", " + words(system) + " " + value
                   : before.substring(0, before.lastIndexOf(' '))
-                      + " = " + words(system) + " " + value);
+                      + " = "
+                      + words(system)
+                      + " "
+                      + value);
         }
       }
     }
@@ -191,22 +182,19 @@ final class SectionView extends View {
     };
   }
 
-  private void points(Canvas canvas, Panel panel, Ground ground) {
+  private void points(Canvas canvas, Panel panel, Ground ground, Optional<Box> elsewhere) {
     canvas.layer(panel.name() + "-points");
+    PointMarks marks = new PointMarks(canvas, panel, ground, elsewhere);
     for (Result.PointResult point : result().points()) {
-      double x = panel.x(section().localX(point.at()));
-      double y = panel.y(section().localY(point.at()));
-      if (panel.frame().contains(x, y)) {
-        PointMarks.cross(canvas, x, y);
-        PointMarks.name(canvas, ground, point.name(), x, y);
-      }
+      marks.add(section().localX(point.at()), section().localY(point.at()), point.name());
     }
+    marks.draw();
   }
 
   @Override
   Key key() {
     Key key = new Key();
-    key.heading("Materials, λ in W/(m·K)");
+    key.heading("Materials, λ in " + figures().conductivityUnit());
     for (int label = 0; label < section().fills().size(); label++) {
       if (section().solid(label)) {
         Fill fill = section().fills().get(label);
@@ -214,14 +202,14 @@ final class SectionView extends View {
         String value =
             fill instanceof Material material ? conductivity(material) : "no heat crosses";
         int number = MaterialLabels.number(section(), label);
-        key.sample(
-            (canvas, box) -> swatch(canvas, box, look), number + "  " + fill.name(), value);
+        key.sample((canvas, box) -> swatch(canvas, box, look), number + "  " + fill.name(), value);
       }
     }
     key.heading("Spaces");
     for (int i = 0; i < section().detail().spaces().size(); i++) {
-      key.row(section().detail().spaces().get(i).name(), climate(i));
+      key.row(nameOf(i), climate(i));
     }
+    buildUps(key);
     flanks(key);
     symbols(key);
     return key;
@@ -236,23 +224,64 @@ final class SectionView extends View {
             .add(area.x1(), area.y1())
             .add(area.x0(), area.y1())
             .closed();
-    Rectangle2D shape =
-        new Rectangle2D.Double(area.x0(), area.y0(), area.width(), area.height());
+    Rectangle2D shape = new Rectangle2D.Double(area.x0(), area.y0(), area.width(), area.height());
     canvas.fill(shape, look.tone());
     Path2D hatch = new Path2D.Double();
-    look.hatch().append(List.of(ring), look, hatch);
+    look.hatch().append(List.of(ring), ring, look, hatch);
     if (hatch.getCurrentPoint() != null) {
       canvas.stroke(hatch, look.line(), Pen.HAIR);
     }
     canvas.stroke(shape, Palette.INK, Pen.FINE);
   }
 
-  private static String conductivity(Material material) {
+  private String conductivity(Material material) {
     return material.isotropic()
-        ? Figures.quantity(material.conductivityWPerMK())
-        : Figures.quantity(material.conductivityWPerMK())
+        ? figures().conductivity(material.conductivityWPerMK())
+        : figures().conductivity(material.conductivityWPerMK())
             + " × "
-            + Figures.quantity(material.crossConductivityWPerMK());
+            + figures().conductivity(material.crossConductivityWPerMK());
+  }
+
+  /** Thicknesses at the cut-off planes, which are not all readable where they are drawn. */
+  private void buildUps(Key key) {
+    Set<String> told = new TreeSet<>();
+    for (DrawnSection.CutOff cutOff : section().cutOffs()) {
+      if (cutOff.layers().size() < 2 || !told.add(sorted(cutOff))) {
+        continue;
+      }
+      key.heading("Layers at " + side(cutOff) + "cut-off, " + figures().lengthUnit());
+      for (DrawnSection.Layer layer : cutOff.layers()) {
+        key.row(
+            MaterialLabels.number(section(), layer.label())
+                + "  "
+                + section().fills().get(layer.label()).name(),
+            figures().length(layer.toM() - layer.fromM()));
+      }
+    }
+  }
+
+  /** Which side of the section a plane is, as "left ", or nothing. */
+  private String side(DrawnSection.CutOff cutOff) {
+    Box plane = cutOff.line().bounds();
+    Box all = section().bounds();
+    double near = 1e-6 * section().extentM();
+    if (plane.width() < near) {
+      return plane.x0() - all.x0() < near ? "left " : all.x1() - plane.x1() < near ? "right " : "";
+    }
+    if (plane.height() < near) {
+      return plane.y0() - all.y0() < near ? "lower " : all.y1() - plane.y1() < near ? "upper " : "";
+    }
+    return "";
+  }
+
+  /** The layers of a plane as text, the same from either end. */
+  private String sorted(DrawnSection.CutOff cutOff) {
+    List<String> layers = new ArrayList<>();
+    for (DrawnSection.Layer layer : cutOff.layers()) {
+      layers.add(layer.label() + ":" + figures().length(layer.toM() - layer.fromM()));
+    }
+    layers.sort(null);
+    return layers.toString();
   }
 
   private void flanks(Key key) {
@@ -269,12 +298,11 @@ final class SectionView extends View {
         key.heading("Flanks taken off for ψ");
         headed = true;
       }
-      key.row(
-          flank.name(), "U " + Figures.significant(flank.uWPerM2K().mid(), 3) + " W/(m²·K)");
+      key.row(flank.name(), "U " + figures().transmittance(flank.uWPerM2K().mid()));
       for (DimensionSystem system : systems) {
         Result.Length length = flank.lengthM().get(system);
         if (length != null) {
-          key.row("   " + words(system) + " length", length(length.valueM()));
+          key.row("   " + words(system) + " length", figures().lengthWithUnit(length.valueM()));
         }
       }
     }
@@ -294,10 +322,13 @@ final class SectionView extends View {
       fixed |= surface.kind() == Conditions.Kind.FIXED;
     }
     if (inside) {
-      key.sample((c, box) -> SurfaceMarks.sample(c, box, true), "film inside, Rs in m²·K/W", "");
+      key.sample((c, box) -> SurfaceMarks.sample(c, box, true), "film inside", "");
     }
     if (outside) {
       key.sample((c, box) -> SurfaceMarks.sample(c, box, false), "film outside", "");
+    }
+    if (inside || outside) {
+      key.note("Rs in " + figures().filmUnit() + ": of the heat-loss set | of the surface set");
     }
     if (fixed) {
       key.note("Double line: surface at a fixed temperature");
@@ -311,13 +342,7 @@ final class SectionView extends View {
     }
     if (!references().isEmpty()) {
       key.sample(
-          (c, box) ->
-              c.text(
-                  "123",
-                  box.midX(),
-                  box.midY() + 4,
-                  Lettering.REFERENCE,
-                  Anchor.MIDDLE),
+          (c, box) -> c.text("123", box.midX(), box.midY() + 4, Lettering.REFERENCE, Anchor.MIDDLE),
           "reference length of ψ, with flank and dimension system",
           "");
     }

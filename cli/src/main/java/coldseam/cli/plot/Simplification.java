@@ -82,8 +82,7 @@ final class Simplification {
     }
   }
 
-  private static double distance(
-      double x, double y, double ax, double ay, double bx, double by) {
+  private static double distance(double x, double y, double ax, double ay, double bx, double by) {
     double dx = bx - ax;
     double dy = by - ay;
     double squared = dx * dx + dy * dy;

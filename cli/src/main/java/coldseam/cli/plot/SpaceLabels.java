@@ -10,6 +10,10 @@ import java.util.function.IntPredicate;
 
 /** Writes the name of each space, and what else is said of it, where the space is. */
 final class SpaceLabels {
+  private static final double NARROW = 100;
+  private static final double OFF = 7;
+  private static final double FAR = 220;
+
   private final Canvas canvas;
   private final DrawnSection section;
   private final Panel panel;
@@ -35,13 +39,39 @@ final class SpaceLabels {
         continue;
       }
       List<String> lines = said.apply(space);
-      Box size = Plates.size(lines, Lettering.STRONG);
-      place(space, seen, size.width(), size.height())
-          .ifPresent(
-              box -> {
-                ground.take(box);
-                Plates.unplated(canvas, lines, box, Lettering.STRONG, Lettering.LABEL);
-              });
+      List<String> narrow = new ArrayList<>();
+      lines.forEach(line -> narrow.addAll(Wrapping.of(line, NARROW, Lettering.STRONG)));
+      if (!write(space, seen, lines) && !write(space, seen, narrow)) {
+        writeWithLeader(seen, narrow);
+      }
+    }
+  }
+
+  private boolean write(int space, List<Polyline> seen, List<String> lines) {
+    Box size = Plates.size(lines, Lettering.STRONG);
+    Optional<Box> place = place(space, seen, size.width(), size.height());
+    place.ifPresent(
+        box -> {
+          ground.take(box);
+          Plates.unplated(canvas, lines, box, Lettering.STRONG, Lettering.LABEL);
+        });
+    return place.isPresent();
+  }
+
+  private void writeWithLeader(List<Polyline> seen, List<String> lines) {
+    Box size = Plates.size(lines, Lettering.STRONG);
+    for (Polyline surface : seen) {
+      double[] at = at(surface, surface.length() / 2);
+      double x = at[0] + OFF * at[2];
+      double y = at[1] + OFF * at[3];
+      Optional<Box> place =
+          ground.near(x, y, size.width(), size.height(), 10, FAR, SectionLines.open(section));
+      if (place.isPresent()) {
+        ground.take(place.get());
+        Plates.leader(canvas, place.get(), x, y);
+        Plates.unplated(canvas, lines, place.get(), Lettering.STRONG, Lettering.LABEL);
+        return;
+      }
     }
   }
 
@@ -61,15 +91,14 @@ final class SpaceLabels {
 
   private Optional<Box> place(int space, List<Polyline> seen, double width, double height) {
     int label = section.labelOfSpace(space);
-    if (label >= 0) {
-      Optional<Box> inside = ground.within(owner -> owner == label, width, height);
+    for (int face : section.largestFirst(label)) {
+      Optional<Box> inside = ground.within(owner -> owner == face, width, height);
       if (inside.isPresent()) {
         return inside;
       }
     }
     for (Polyline surface : seen) {
-      Optional<Box> beside =
-          beside(surface, width, height, owner -> owner == Ground.OPEN || owner == label);
+      Optional<Box> beside = beside(surface, width, height, SectionLines.open(section));
       if (beside.isPresent()) {
         return beside;
       }
@@ -103,9 +132,7 @@ final class SpaceLabels {
       double length = Math.hypot(dx, dy);
       if (length > 0 && (left <= length || i == line.pieces() - 1)) {
         double t = Math.min(1, left / length);
-        return new double[] {
-          line.x(i) + t * dx, line.y(i) + t * dy, -dy / length, dx / length
-        };
+        return new double[] {line.x(i) + t * dx, line.y(i) + t * dy, -dy / length, dx / length};
       }
       left -= length;
     }

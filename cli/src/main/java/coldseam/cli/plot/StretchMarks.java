@@ -44,13 +44,11 @@ final class StretchMarks {
           bracket(line, bracket);
           if (!named) {
             double width = TextWidths.of(text, Lettering.SMALL) + 2;
-            Optional<Box> place =
-                labels.beside(line, width, Lettering.SMALL.size() * 1.15, open);
+            Optional<Box> place = labels.beside(line, width, Lettering.SMALL.size() * 1.15, open);
             place.ifPresent(
                 box -> {
                   ground.take(box);
-                  Plates.unplated(
-                      canvas, List.of(text), box, Lettering.QUIET, Lettering.QUIET);
+                  Plates.unplated(canvas, List.of(text), box, Lettering.QUIET, Lettering.QUIET);
                 });
             named = place.isPresent();
           }
@@ -58,6 +56,24 @@ final class StretchMarks {
       }
       canvas.stroke(bracket, Palette.SECOND_INK, Pen.FINE);
     }
+  }
+
+  private static boolean withLeader(
+      Canvas canvas, Ground ground, Polyline line, IntPredicate open, String text) {
+    Box size = Plates.size(List.of(text), Lettering.QUIET);
+    for (double part : new double[] {0.5, 0.2, 0.8}) {
+      double[] at = SpaceLabels.at(line, part * line.length());
+      double x = at[0] + AWAY * at[2];
+      double y = at[1] + AWAY * at[3];
+      Optional<Box> place = ground.near(x, y, size.width(), size.height(), 8, 150, open);
+      if (place.isPresent()) {
+        ground.take(place.get());
+        Plates.leader(canvas, place.get(), x, y);
+        Plates.unplated(canvas, List.of(text), place.get(), Lettering.QUIET, Lettering.QUIET);
+        return true;
+      }
+    }
+    return false;
   }
 
   /** A line beside a stretch, with ends turned towards it. */

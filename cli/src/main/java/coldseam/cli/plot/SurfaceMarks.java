@@ -7,7 +7,6 @@ import java.awt.geom.Path2D;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Set;
-import java.util.function.IntPredicate;
 
 /** Fringes that tell films, fixed temperatures and given flows along the surfaces, with values. */
 final class SurfaceMarks {
@@ -114,21 +113,21 @@ final class SurfaceMarks {
         int n = (int) Math.max(1, Math.round(length / 3));
         for (int i = 0; i < n; i++) {
           double[] at = SpaceLabels.at(line, (i + 0.5) * length / n);
-          ground.take(Box.around(at[0] + 3 * at[2], at[1] + 3 * at[3], 3, 3));
+          ground.keepClear(Box.around(at[0] + 3 * at[2], at[1] + 3 * at[3], 3, 3));
         }
       }
     }
   }
 
   /** Writes the value of each film, fixed temperature or flow once, near its longest surface. */
-  void values(Canvas canvas, Ground ground, SpaceLabels labels, IntPredicate open) {
+  void values(Canvas canvas, Ground ground, SpaceLabels labels, Figures figures) {
     canvas.layer(panel.name() + "-film-values");
     Set<String> said = new HashSet<>();
     section.surfaces().stream()
         .sorted((a, b) -> Double.compare(b.line().length(), a.line().length()))
         .forEach(
             surface -> {
-              String text = value(surface);
+              String text = value(surface, figures);
               if (text.isEmpty()) {
                 return;
               }
@@ -138,18 +137,14 @@ final class SurfaceMarks {
                 }
                 double width = TextWidths.of(text, Lettering.SMALL) + 2;
                 labels
-                    .beside(line, width, Lettering.SMALL.size() * 1.15, open)
+                    .beside(line, width, Lettering.SMALL.size() * 1.15, SectionLines.open(section))
                     .ifPresent(
                         box -> {
                           said.add(surface.space() + text);
                           ground.take(box);
                           Color ink = ink(surface);
                           Plates.unplated(
-                              canvas,
-                              List.of(text),
-                              box,
-                              Lettering.SMALL.in(ink),
-                              Lettering.SMALL);
+                              canvas, List.of(text), box, Lettering.SMALL.in(ink), Lettering.SMALL);
                         });
               }
             });
@@ -163,19 +158,21 @@ final class SurfaceMarks {
   }
 
   /** "Rs 0.13 | 0.25": what holds for heat loss, then for surface temperatures. */
-  static String value(DrawnSection.Surface surface) {
+  private static String value(DrawnSection.Surface surface, Figures figures) {
     if (surface.kind() == Conditions.Kind.FIXED) {
       return "fixed temperature";
     }
     if (surface.kind() == Conditions.Kind.FLOW) {
-      return Figures.quantity(surface.flowWPerM2()) + " W/m²";
+      return Figures.round(figures.scaledDensity(surface.flowWPerM2()))
+          + " "
+          + figures.densityUnit();
     }
     if (surface.kind() != Conditions.Kind.FILM) {
       return "";
     }
-    String heatLoss = Figures.quantity(surface.heatLossRs());
+    String heatLoss = figures.film(surface.heatLossRs());
     return Double.isNaN(surface.surfaceRs()) || surface.surfaceRs() == surface.heatLossRs()
         ? "Rs " + heatLoss
-        : "Rs " + heatLoss + " | " + Figures.quantity(surface.surfaceRs());
+        : "Rs " + heatLoss + " | " + figures.film(surface.surfaceRs());
   }
 }

@@ -24,13 +24,21 @@ final class SvgCanvas extends Canvas {
   private final List<Anchor> anchors = new ArrayList<>();
   private String layer = "ground";
 
-  private SvgCanvas(SVGGraphics2D graphics, Document document) {
+  private final String name;
+
+  private SvgCanvas(SVGGraphics2D graphics, Document document, String name) {
     super(graphics);
+    this.name = name;
     this.graphics = graphics;
     this.document = document;
   }
 
-  static SvgCanvas blank() {
+  /**
+   * An empty drawing.
+   *
+   * @param name begins every id, so that several drawings can stand in one document
+   */
+  static SvgCanvas blank(String name) {
     Document document;
     try {
       document =
@@ -44,7 +52,7 @@ final class SvgCanvas extends Canvas {
     SVGGeneratorContext context = SVGGeneratorContext.createDefault(document);
     context.setPrecision(DECIMALS);
     context.setComment(null);
-    return new SvgCanvas(new SVGGraphics2D(context, false), document);
+    return new SvgCanvas(new SVGGraphics2D(context, false), document, name);
   }
 
   @Override
@@ -66,7 +74,7 @@ final class SvgCanvas extends Canvas {
   private void closeLayer() {
     Element group = graphics.getTopLevelGroup(false);
     if (group.hasChildNodes()) {
-      group.setAttribute("id", layer);
+      group.setAttribute("id", name + "-" + layer);
       layers.add(group);
     }
   }
@@ -89,7 +97,7 @@ final class SvgCanvas extends Canvas {
     }
     root.setAttribute("viewBox", "0 0 " + (int) width + " " + (int) height);
     root.setAttribute("role", "img");
-    root.setAttribute("aria-labelledby", "title desc");
+    root.setAttribute("aria-labelledby", name + "-title " + name + "-desc");
     root.appendChild(told("title", title));
     root.appendChild(told("desc", description));
     layers.forEach(root::appendChild);
@@ -99,7 +107,7 @@ final class SvgCanvas extends Canvas {
 
   private Element told(String name, String text) {
     Element element = document.createElementNS(SVG, name);
-    element.setAttribute("id", name);
+    element.setAttribute("id", this.name + "-" + name);
     element.appendChild(document.createTextNode(text));
     return element;
   }

@@ -1,33 +1,35 @@
 package coldseam.cli.plot;
 
 import coldseam.cli.plot.Plots.Caption;
+import coldseam.cli.text.Digits;
 import coldseam.mesh.triangulation.Mesh;
 import coldseam.solver.conduction.Solution;
 import coldseam.solver.conduction.TemperatureField;
 import coldseam.solver.detail.FilmSet;
 import coldseam.solver.detail.Space;
 import coldseam.solver.result.Result;
-import java.awt.Color;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.function.IntPredicate;
 
 /**
  * Temperatures: filled bands, labelled isotherms at round steps, every fifth heavier, the critical
  * isotherms of the warmest space with a stated humidity heaviest, coldest points with their values.
  */
 final class TemperatureView extends View {
-  /** How far a line may be moved by leaving out points, points. */
-  static final double SIMPLIFIED = 0.12;
-
   private static final int INDEX = 5;
   private static final Pen ISOTHERM = new Pen(0.6f);
   private static final Pen INDEX_ISOTHERM = new Pen(1.2f);
   private static final Pen CASING = new Pen(4.4f);
   private static final Pen MOULD = new Pen(2.4f);
   private static final Pen DEW = new Pen(2.4f, 9, 4);
-  private static final double BAND = 13;
+
+  /** Isotherms nearer to each other than this carry no label, points. */
+  private static final double CROWDED = 6.5;
+
+  private static final int LONG_NAME = 4;
 
   private final Solution solution;
   private final TemperatureField field;
@@ -35,7 +37,15 @@ final class TemperatureView extends View {
   private final List<Double> levels;
   private final List<Critical> critical;
 
-  /** An isotherm that matters: its name, where it is drawn, and what is said of it. */
+  /**
+   * An isotherm that matters.
+   *
+   * @param id of its layer
+   * @param name as written beside it
+   * @param temperatureC where it lies
+   * @param meaning in a few words
+   * @param pen it is drawn with
+   */
   private record Critical(String id, String name, double temperatureC, String meaning, Pen pen) {}
 
   TemperatureView(Result result, Caption caption, DrawnSection section) {
@@ -49,63 +59,59 @@ final class TemperatureView extends View {
       least = Math.min(least, field.atNode(node));
       most = Math.max(most, field.atNode(node));
     }
-    step = Levels.step(most - least);
-    levels = Levels.between(least, most, step);
+    double low = figures().scaled(least);
+    double high = figures().scaled(most);
+    step = Levels.step(high - low);
+    levels = Levels.between(low, high, step);
     critical = critical();
   }
 
   private List<Critical> critical() {
     int warmest = -1;
     double[] temperatures = temperaturesC();
-    List<Space> spaces = section().detail().spaces();
     for (int i = 0; i < temperatures.length; i++) {
-      boolean humid =
-          spaces.get(i).relativeHumidity().isPresent()
-              && spaces.get(i).relativeHumidity().getAsDouble() > 0;
-      if (humid && i != coldestSpace() && (warmest < 0 || temperatures[i] > temperatures[warmest])) {
+      boolean humid = section().detail().spaces().get(i).relativeHumidity().orElse(0) > 0;
+      if (humid
+          && i != coldestSpace()
+          && (warmest < 0 || temperatures[i] > temperatures[warmest])) {
         warmest = i;
       }
     }
     if (warmest < 0) {
       return List.of();
     }
+    Space space = section().detail().spaces().get(warmest);
     double air = temperatures[warmest];
-    double humidity = spaces.get(warmest).relativeHumidity().getAsDouble();
-    String of = spaces.get(warmest).name() + " at " + climate(warmest);
-    double mould = CriticalTemperature.of(air, humidity, CriticalTemperature.MOULD);
-    double dew = CriticalTemperature.of(air, humidity, 1);
+    double humidity = space.relativeHumidity().getAsDouble();
+    String of = space.name() + " (" + climate(warmest) + "), ISO 13788";
     return List.of(
         new Critical(
             "mould-limit",
             "mould limit",
-            mould,
-            "80 % humidity at a surface facing " + of + " (ISO 13788)",
+            CriticalTemperature.of(air, humidity, CriticalTemperature.MOULD),
+            "80 % humidity at the surface, air of " + of,
             MOULD),
         new Critical(
             "dew-point",
             "dew point",
-            dew,
-            "condensation on a surface facing " + of + " (ISO 13788)",
+            CriticalTemperature.of(air, humidity, 1),
+            "condensation, air of " + of,
             DEW));
   }
 
   @Override
   String shown() {
-    return "Temperature · " + words(solution.filmSet());
+    return "Temperature · " + films(solution.filmSet());
   }
 
   @Override
   String told() {
     StringBuilder out = new StringBuilder("Temperatures in the detail, isotherms every ");
-    out.append(Figures.plain(step)).append(" K.");
+    out.append(Figures.round(step)).append(' ').append(figures().kelvins()).append('.');
     for (Result.SpaceResult space : result().spaces()) {
       out.append(' ').append(space.name()).append(' ');
-      out.append(Figures.temperature(space.temperatureC()));
-      space
-          .coldest()
-          .ifPresent(
-              p ->
-                  out.append(", coldest surface ").append(Figures.temperature(p.temperatureC())));
+      out.append(figures().temperature(space.temperatureC(), 1));
+      space.coldest().ifPresent(p -> out.append(", coldest surface ").append(temperature(p)));
       out.append('.');
     }
     return out.toString();
@@ -113,22 +119,27 @@ final class TemperatureView extends View {
 
   @Override
   Page.Gutters gutters() {
-    return new Page.Gutters(46, 46, 50, 54);
+    return new Page.Gutters(50, 50, 56, 76);
   }
 
   @Override
-  void paint(Canvas canvas, Panel panel, boolean zoomed, Optional<Panel> zoom) {
-    Box window = panel.window();
+  void paint(Canvas canvas, Panel panel, Optional<Panel> zoom) {
+    double stepK = figures().differenceK(step);
     Contours contours =
-        Contours.of(Sampling.of(field, window, panel.pointsPerM(), step));
-    bands(canvas, panel, contours);
+        Contours.of(
+            Sampling.of(new NodalTemperature(field), panel.window(), panel.pointsPerM(), stepK));
+    canvas.layer(panel.name() + "-bands");
+    Bands bands = new Bands(contours, panel);
+    bands.fill(canvas, Double.NEGATIVE_INFINITY, Palette.temperature(part(0)));
+    for (int k = 0; k < levels.size(); k++) {
+      bands.fill(canvas, figures().celsius(levels.get(k)), Palette.temperature(part(k + 1)));
+    }
     SectionLines lines = new SectionLines(section(), panel);
     lines.joints(canvas, Palette.mix(Palette.INK, Palette.PAPER, 0.25), Pen.HAIR);
-    Ground ground = SectionLines.ground(section(), panel);
     List<List<Polyline>> isotherms = new ArrayList<>();
     for (double level : levels) {
       canvas.layer(panel.name() + "-isotherm_" + String.format(Locale.ROOT, "%.6g", level));
-      List<Polyline> drawn = shown(contours.lines(level), panel);
+      List<Polyline> drawn = bands.lines(figures().celsius(level));
       isotherms.add(drawn);
       canvas.stroke(Polyline.path(drawn), Palette.INK, index(level) ? INDEX_ISOTHERM : ISOTHERM);
     }
@@ -136,61 +147,27 @@ final class TemperatureView extends View {
     List<List<Polyline>> heavy = new ArrayList<>();
     for (Critical c : critical) {
       canvas.layer(panel.name() + "-" + c.id());
-      List<Polyline> drawn = shown(contours.lines(c.temperatureC()), panel);
+      List<Polyline> drawn = bands.lines(c.temperatureC());
       heavy.add(drawn);
       canvas.stroke(Polyline.path(drawn), Palette.PAPER, CASING);
       canvas.stroke(Polyline.path(drawn), Palette.INK, c.pen());
     }
-    ScaleBar.draw(canvas, panel, ground, caption());
-    if (zoomed) {
-      ground.take(Zoom.words(panel));
-    } else {
-      ScaleBar.direction(canvas, panel, ground, section().detail().view());
-    }
-    coldest(canvas, panel, ground);
-    new SpaceLabels(canvas, section(), panel, ground)
-        .write(i -> List.of(section().detail().spaces().get(i).name(), climate(i)));
-    points(canvas, panel, ground);
-    label(canvas, panel, ground, isotherms, heavy);
+    Ground ground = SectionLines.ground(section(), panel);
+    frame(canvas, panel, ground, zoom);
+    Optional<Box> elsewhere = zoom.map(z -> panel.on(z.window()));
+    coldest(canvas, panel, ground, elsewhere);
+    new SpaceLabels(canvas, section(), panel, ground).write(i -> List.of(nameOf(i), climate(i)));
+    points(canvas, panel, ground, elsewhere);
+    elsewhere.ifPresent(ground::take);
+    label(canvas, panel, ground, isotherms, heavy, zoom);
   }
 
-  private void bands(Canvas canvas, Panel panel, Contours contours) {
-    canvas.layer(panel.name() + "-bands");
-    band(canvas, panel, contours, Double.NEGATIVE_INFINITY, 0);
-    for (int k = 0; k < levels.size(); k++) {
-      band(canvas, panel, contours, levels.get(k), k + 1);
-    }
-  }
-
-  private void band(Canvas canvas, Panel panel, Contours contours, double from, int k) {
-    List<Polyline> rings = new ArrayList<>();
-    double tolerance = SIMPLIFIED / panel.pointsPerM();
-    for (Polyline ring : contours.atOrAbove(from)) {
-      Polyline simple = Simplification.of(ring, tolerance);
-      if (simple.size() > 2) {
-        Clip.ring(simple.on(panel), panel.frame()).ifPresent(rings::add);
-      }
-    }
-    if (!rings.isEmpty()) {
-      canvas.fill(Polyline.path(rings), colour(k));
-    }
-  }
-
-  private Color colour(int band) {
-    return Palette.temperature((band + 0.5) / (levels.size() + 1));
+  private double part(int band) {
+    return (band + 0.5) / (levels.size() + 1);
   }
 
   private boolean index(double level) {
     return Math.round(level / step) % INDEX == 0;
-  }
-
-  static List<Polyline> shown(List<Polyline> lines, Panel panel) {
-    List<Polyline> drawn = new ArrayList<>();
-    for (Polyline line : lines) {
-      Polyline simple = Simplification.of(line, SIMPLIFIED / panel.pointsPerM());
-      drawn.addAll(Clip.line(simple.on(panel), panel.frame()));
-    }
-    return drawn;
   }
 
   private void label(
@@ -198,15 +175,16 @@ final class TemperatureView extends View {
       Panel panel,
       Ground ground,
       List<List<Polyline>> isotherms,
-      List<List<Polyline>> heavy) {
+      List<List<Polyline>> heavy,
+      Optional<Panel> zoom) {
     canvas.layer(panel.name() + "-isotherm-labels");
     for (int i = 0; i < critical.size(); i++) {
       Critical c = critical.get(i);
-      String text = c.name() + " " + Figures.fixed(c.temperatureC(), 1);
+      String text = c.name() + " " + figures().temperature(c.temperatureC(), 1);
       boolean written =
           LineLabels.write(
               canvas, ground, heavy.get(i), text, Lettering.SMALL_STRONG, (x, y) -> 24, 0);
-      if (!written) {
+      if (!written && zoom.isEmpty()) {
         beside(canvas, ground, heavy.get(i), text);
       }
     }
@@ -214,22 +192,21 @@ final class TemperatureView extends View {
     for (boolean first : new boolean[] {true, false}) {
       for (int i = 0; i < levels.size(); i++) {
         if (index(levels.get(i)) == first) {
-          String text = Figures.plain(levels.get(i));
           LineLabels.write(
               canvas,
               ground,
               isotherms.get(i),
-              text,
+              Digits.shortest(levels.get(i), 6),
               first ? Lettering.SMALL_STRONG : Lettering.SMALL,
               spacing,
-              first ? 0 : 6.5);
+              first ? 0 : CROWDED);
         }
       }
     }
   }
 
   /** A label with a leader, for a line too short or too bent to carry it. */
-  private static void beside(Canvas canvas, Ground ground, List<Polyline> lines, String text) {
+  private void beside(Canvas canvas, Ground ground, List<Polyline> lines, String text) {
     Polyline longest = null;
     for (Polyline line : lines) {
       if (longest == null || line.length() > longest.length()) {
@@ -240,12 +217,12 @@ final class TemperatureView extends View {
       return;
     }
     double[] at = SpaceLabels.at(longest, longest.length() / 2);
-    PointMarks.label(ground, List.of(text), Lettering.SMALL_STRONG, at[0], at[1], 14, 120)
+    Box size = Plates.size(List.of(text), Lettering.SMALL_STRONG);
+    PointMarks.place(ground, size, at[0], at[1], 14, 120, SectionLines.open(section()))
         .ifPresent(
             box -> {
               Plates.leader(canvas, box, at[0], at[1]);
-              Plates.centred(
-                  canvas, List.of(text), box, Lettering.SMALL_STRONG, Lettering.SMALL);
+              Plates.centred(canvas, List.of(text), box, Lettering.SMALL_STRONG, Lettering.SMALL);
             });
   }
 
@@ -260,141 +237,165 @@ final class TemperatureView extends View {
     }
     double[] l = Barycentric.of(mesh, t, lx, ly);
     double[] gradient = field.gradient(t, l[0], l[1], l[2]);
-    return step / Math.hypot(gradient[0], gradient[1]) * panel.pointsPerM();
+    return figures().differenceK(step) / Math.hypot(gradient[0], gradient[1]) * panel.pointsPerM();
   }
 
-  /** Whether the coldest point of a space says anything: not for the coldest space itself. */
-  private boolean told(int space) {
+  /**
+   * The coldest point of a space, where it says anything: not of the coldest space, and not of a
+   * surface whose temperature is fixed.
+   */
+  private Optional<Result.SurfacePoint> coldestPoint(int space) {
     double[] temperatures = temperaturesC();
-    return temperatures[space] > temperatures[coldestSpace()]
-        && result().spaces().get(space).coldest().isPresent();
+    return result()
+        .spaces()
+        .get(space)
+        .coldest()
+        .filter(point -> point.filmM2KPerW() > 0)
+        .filter(point -> temperatures[space] > temperatures[coldestSpace()]);
   }
 
-  private void coldest(Canvas canvas, Panel panel, Ground ground) {
+  /** With the decimals that its estimated error leaves, two at most. */
+  private String temperature(Result.SurfacePoint point) {
+    double factor = figures().customary() ? 1.8 : 1;
+    return Digits.of(figures().scaled(point.temperatureC()), point.estimatedErrorK() * factor, 2)
+            .value()
+        + " "
+        + figures().degrees();
+  }
+
+  private void coldest(Canvas canvas, Panel panel, Ground ground, Optional<Box> elsewhere) {
     canvas.layer(panel.name() + "-coldest-points");
     for (int i = 0; i < result().spaces().size(); i++) {
-      if (!told(i)) {
+      Optional<Result.SurfacePoint> found = coldestPoint(i);
+      if (found.isEmpty()) {
         continue;
       }
-      Result.SurfacePoint point = result().spaces().get(i).coldest().get();
+      Result.SurfacePoint point = found.get();
       double x = panel.x(section().localX(point.at()));
       double y = panel.y(section().localY(point.at()));
       if (!panel.frame().grown(-6).contains(x, y)) {
         continue;
       }
-      List<String> lines = new ArrayList<>();
-      lines.add(Figures.temperature(point.temperatureC()));
-      lines.add(factor(point) + "Rs " + Figures.quantity(point.filmM2KPerW()));
-      ground.take(Box.around(x, y, 12, 12));
-      PointMarks.label(ground, lines, Lettering.STRONG, x, y, 16, 120)
-          .ifPresent(
-              box -> {
-                Plates.leader(canvas, box, x, y);
-                Plates.centred(canvas, lines, box, Lettering.STRONG, Lettering.SMALL);
-              });
+      if (elsewhere.isPresent() && elsewhere.get().contains(x, y)) {
+        PointMarks.diamond(canvas, x, y);
+        continue;
+      }
+      ground.keepClear(Box.around(x, y, 12, 12));
+      labelColdest(canvas, ground, point, x, y);
       PointMarks.diamond(canvas, x, y);
     }
   }
 
-  private static String factor(Result.SurfacePoint point) {
-    return point.fRsi().isPresent()
-        ? "fRsi " + Figures.fixed(point.fRsi().getAsDouble(), 3) + ", "
-        : "";
-  }
-
-  private void points(Canvas canvas, Panel panel, Ground ground) {
-    canvas.layer(panel.name() + "-points");
-    for (Result.PointResult point : result().points()) {
-      double x = panel.x(section().localX(point.at()));
-      double y = panel.y(section().localY(point.at()));
-      if (panel.frame().contains(x, y)) {
-        PointMarks.cross(canvas, x, y);
-        PointMarks.name(canvas, ground, point.name(), x, y);
+  private void labelColdest(
+      Canvas canvas, Ground ground, Result.SurfacePoint point, double x, double y) {
+    String film = "Rs " + figures().film(point.filmM2KPerW());
+    String factor = factor(point);
+    List<String> wide = List.of(temperature(point), factor.isEmpty() ? film : factor + ", " + film);
+    List<String> narrow = new ArrayList<>(List.of(temperature(point), factor, film));
+    narrow.removeIf(String::isEmpty);
+    IntPredicate open = SectionLines.open(section());
+    for (IntPredicate accepted :
+        List.of(open, (IntPredicate) owner -> owner != Ground.EDGE, owner -> true)) {
+      for (List<String> lines : List.of(wide, narrow)) {
+        Box size = Plates.size(lines, Lettering.STRONG);
+        Optional<Box> place = ground.near(x, y, size.width(), size.height(), 12, 110, accepted);
+        if (place.isPresent()) {
+          ground.take(place.get());
+          Plates.leader(canvas, place.get(), x, y);
+          Plates.centred(canvas, lines, place.get(), Lettering.STRONG, Lettering.SMALL);
+          return;
+        }
       }
     }
+  }
+
+  private static String factor(Result.SurfacePoint point) {
+    return point.fRsi().isPresent() ? "fRsi " + Digits.fixed(point.fRsi().getAsDouble(), 3) : "";
+  }
+
+  /** Named points: a short name with the temperature, of a long one the temperature alone. */
+  private void points(Canvas canvas, Panel panel, Ground ground, Optional<Box> elsewhere) {
+    canvas.layer(panel.name() + "-points");
+    PointMarks marks = new PointMarks(canvas, panel, ground, elsewhere);
+    for (Result.PointResult point : result().points()) {
+      String value = Digits.fixed(figures().scaled(point.temperatureC()), 1);
+      String text = point.name().length() > LONG_NAME ? value : point.name() + " " + value;
+      marks.add(section().localX(point.at()), section().localY(point.at()), text);
+    }
+    marks.draw();
   }
 
   @Override
   Key key() {
     Key key = new Key();
-    key.heading("Temperature in °C, isotherms every " + Figures.plain(step) + " K");
-    key.tall(this::scale, (levels.size() + 1) * BAND + 4);
-    key.sample((c, box) -> SectionView.line(c, box, INDEX_ISOTHERM), "every fifth isotherm", "");
+    key.heading("Temperature in " + figures().degrees());
+    key.tall(this::scale, (levels.size() + 1) * Bands.STEP + 4);
+    key.sample(
+        (c, box) -> SectionView.line(c, box, ISOTHERM),
+        "isotherms every " + Figures.round(step) + " " + figures().kelvins(),
+        "");
+    key.sample((c, box) -> SectionView.line(c, box, INDEX_ISOTHERM), "every fifth of them", "");
     for (Critical c : critical) {
       key.sample(
           (canvas, box) -> SectionView.line(canvas, box, c.pen()),
           c.name() + ": " + c.meaning(),
-          Figures.temperature(c.temperatureC()));
+          figures().temperature(c.temperatureC(), 1));
     }
     coldestRows(key);
+    key.heading("Spaces");
+    for (int i = 0; i < result().spaces().size(); i++) {
+      key.row(nameOf(i), climate(i));
+    }
     if (!result().points().isEmpty()) {
       key.heading("Named points");
       for (Result.PointResult point : result().points()) {
-        String set = point.filmSet() == solution.filmSet() ? "" : " (" + short_(point.filmSet()) + ")";
-        key.row(point.name() + set, Figures.fixed(point.temperatureC(), 2) + " °C");
+        boolean other = point.filmSet() != solution.filmSet();
+        key.row(
+            point.name() + (other ? " (" + name(point.filmSet()) + ")" : ""),
+            figures().temperature(point.temperatureC(), 2));
       }
-    }
-    key.heading("Spaces");
-    for (int i = 0; i < section().detail().spaces().size(); i++) {
-      key.row(section().detail().spaces().get(i).name(), climate(i));
     }
     return key;
   }
 
-  private static String short_(FilmSet set) {
+  private static String name(FilmSet set) {
     return set == FilmSet.SURFACE ? "surface set" : "heat-loss set";
   }
 
   private void coldestRows(Key key) {
     boolean headed = false;
     for (int i = 0; i < result().spaces().size(); i++) {
-      if (!told(i)) {
+      Optional<Result.SurfacePoint> found = coldestPoint(i);
+      if (found.isEmpty()) {
         continue;
       }
       if (!headed) {
-        key.heading("Coldest surface (an estimate, never certified)");
+        key.heading("Coldest surface, an estimate");
         headed = true;
       }
-      Result.SpaceResult space = result().spaces().get(i);
-      Result.SurfacePoint point = space.coldest().get();
-      String words =
-          space.name()
-              + ": "
-              + factor(point)
-              + "Rs "
-              + Figures.quantity(point.filmM2KPerW())
-              + ", "
-              + short_(point.filmSet());
+      Result.SurfacePoint point = found.get();
       key.sample(
           (c, box) -> PointMarks.diamond(c, box.midX(), box.midY()),
-          words,
-          Figures.temperature(point.temperatureC()));
+          nameOf(i)
+              + ": "
+              + (factor(point).isEmpty() ? "" : factor(point) + ", ")
+              + "Rs "
+              + figures().film(point.filmM2KPerW())
+              + " "
+              + figures().filmUnit()
+              + ", "
+              + name(point.filmSet()),
+          temperature(point));
     }
   }
 
   private void scale(Canvas canvas, Box box) {
-    int bands = levels.size() + 1;
-    double top = box.y0() + 2;
-    for (int k = 0; k < bands; k++) {
-      double y = top + (bands - 1 - k) * BAND;
-      canvas.fill(new java.awt.geom.Rectangle2D.Double(box.x0(), y, 30, BAND), colour(k));
+    List<String> texts = new ArrayList<>();
+    List<Boolean> heavy = new ArrayList<>();
+    for (double level : levels) {
+      texts.add(Digits.shortest(level, 6));
+      heavy.add(index(level));
     }
-    for (int k = 0; k < levels.size(); k++) {
-      double y = top + (bands - 1 - k) * BAND;
-      boolean heavy = index(levels.get(k));
-      canvas.stroke(
-          new java.awt.geom.Line2D.Double(box.x0(), y, box.x0() + 34, y),
-          Palette.INK,
-          heavy ? INDEX_ISOTHERM : ISOTHERM);
-      canvas.text(
-          Figures.plain(levels.get(k)),
-          box.x0() + 40,
-          y + 3.5,
-          heavy ? Lettering.SMALL_STRONG : Lettering.SMALL);
-    }
-    canvas.stroke(
-        new java.awt.geom.Rectangle2D.Double(box.x0(), top, 30, bands * BAND),
-        Palette.INK,
-        Pen.FINE);
+    Bands.scale(canvas, box, texts, heavy, k -> Palette.temperature(part(k)));
   }
 }

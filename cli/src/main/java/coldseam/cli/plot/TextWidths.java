@@ -13,6 +13,7 @@ final class TextWidths {
   static final double DESCENT = 0.22;
 
   private static final int FIRST = ' ';
+  private static final char NO_BREAK_SPACE = '\u00a0';
   private static final double OTHER = 0.70;
   private static final double IDEOGRAPH = 1.05;
   private static final char FIRST_IDEOGRAPH = '\u1100';
@@ -33,7 +34,9 @@ final class TextWidths {
     double sum = 0;
     for (int i = 0; i < text.length(); i++) {
       char c = text.charAt(i);
-      if (c >= FIRST && c - FIRST < ADVANCE.length) {
+      if (c == NO_BREAK_SPACE) {
+        sum += ADVANCE[0] / 100.0;
+      } else if (c >= FIRST && c - FIRST < ADVANCE.length) {
         sum += ADVANCE[c - FIRST] / 100.0;
       } else if (c >= FIRST_IDEOGRAPH && c < '\u2000' || c >= '\u2e80') {
         sum += IDEOGRAPH;

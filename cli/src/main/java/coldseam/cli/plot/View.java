@@ -11,20 +11,22 @@ import java.util.Optional;
 abstract class View {
   private final Result result;
   private final Caption caption;
+  private final Figures figures;
   private final DrawnSection section;
 
   View(Result result, Caption caption, DrawnSection section) {
     this.result = result;
     this.caption = caption;
     this.section = section;
+    figures = new Figures(caption);
   }
 
   final Result result() {
     return result;
   }
 
-  final Caption caption() {
-    return caption;
+  final Figures figures() {
+    return figures;
   }
 
   final DrawnSection section() {
@@ -48,10 +50,9 @@ abstract class View {
    *
    * @param canvas what it is drawn on
    * @param panel the frame
-   * @param zoomed whether it is the frame of a part shown larger
-   * @param zoom that other frame, if it is not
+   * @param zoom the frame of the part shown larger, if this is the frame of the whole
    */
-  abstract void paint(Canvas canvas, Panel panel, boolean zoomed, Optional<Panel> zoom);
+  abstract void paint(Canvas canvas, Panel panel, Optional<Panel> zoom);
 
   final Page page() {
     Box bounds = section.bounds();
@@ -94,12 +95,12 @@ abstract class View {
 
   final void draw(Canvas canvas, Page page) {
     page.drawGround(canvas);
-    paint(canvas, page.panel(), false, page.zoom());
+    paint(canvas, page.panel(), page.zoom());
     page.zoom()
         .ifPresent(
             zoom -> {
               Zoom.mark(canvas, page.panel(), zoom);
-              paint(canvas, zoom, true, Optional.empty());
+              paint(canvas, zoom, Optional.empty());
               Zoom.frame(canvas, page.panel(), zoom);
             });
     page.drawWords(canvas);
@@ -111,11 +112,20 @@ abstract class View {
     Result.SpaceResult found = result.spaces().get(space);
     String temperature =
         found.floating()
-            ? Figures.temperature(found.temperatureC()) + " (floats)"
-            : Figures.plain(found.temperatureC()) + " °C";
+            ? figures.temperature(found.temperatureC(), 1) + " (floats)"
+            : figures.plainTemperature(found.temperatureC());
     return said.relativeHumidity().isPresent()
-        ? temperature + ", " + Figures.percent(said.relativeHumidity().getAsDouble()) + " r.h."
+        ? temperature
+            + ", "
+            + Figures.percent(said.relativeHumidity().getAsDouble())
+            + Figures.JOINED
+            + "r.h."
         : temperature;
+  }
+
+  /** Name of a space. */
+  final String nameOf(int space) {
+    return section.detail().spaces().get(space).name();
   }
 
   final double[] temperaturesC() {
@@ -134,14 +144,26 @@ abstract class View {
     return coldest;
   }
 
-  static String words(FilmSet set) {
+  /** Which films the temperatures of a solution were computed with. */
+  final String films(FilmSet set) {
+    boolean same = result.surface().isPresent() && result.surface().get() == result.heatLoss();
+    if (same) {
+      return "films of the heat-loss and surface sets, which are the same here";
+    }
     return set == FilmSet.SURFACE
-        ? "films for surface temperatures (surface set)"
-        : "films for heat loss (heat-loss set)";
+        ? "surface set of films (for surface temperatures)"
+        : "heat-loss set of films (for heat flow)";
   }
 
-  /** A length with its unit. */
-  final String length(double metres) {
-    return Figures.length(metres, caption) + " " + caption.unit();
+  /** Labels, the scale and the direction that every frame has, and what is kept clear of labels. */
+  final void frame(Canvas canvas, Panel panel, Ground ground, Optional<Panel> zoom) {
+    new SectionLines(section, panel).take(ground);
+    zoom.ifPresent(z -> Zoom.keepClear(ground, panel, z));
+    if (panel.name().equals(Panel.ZOOM)) {
+      ground.take(Zoom.words(panel));
+    } else {
+      ScaleBar.direction(canvas, panel, ground, section.detail().view());
+    }
+    ScaleBar.draw(canvas, panel, ground, section, figures);
   }
 }

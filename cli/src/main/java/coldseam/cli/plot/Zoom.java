@@ -1,7 +1,5 @@
 package coldseam.cli.plot;
 
-import java.awt.geom.Line2D;
-import java.awt.geom.Path2D;
 import java.awt.geom.Rectangle2D;
 import java.util.List;
 import java.util.Locale;
@@ -12,16 +10,18 @@ import java.util.Optional;
  * crowd together, when that is much smaller than the whole.
  */
 final class Zoom {
-  /** Part of the inner corners that the zoom has to show. */
+  /** Part of the inner corners that the zoom has to show, at least. */
   private static final double MOST = 0.6;
 
   /** Largest part of the extent of the drawing that is worth a zoom. */
-  private static final double LARGEST = 0.4;
+  private static final double LARGEST = 0.45;
 
   private static final double[] TRIED = {0.02, 0.04, 0.08, 0.15, 0.25, 0.34};
   private static final int FEWEST_CORNERS = 4;
   private static final int MOST_CORNERS = 1500;
-  private static final double AIR = 0.35;
+  private static final double AIR = 0.3;
+
+  private static final double TAG = 15;
 
   private Zoom() {}
 
@@ -32,6 +32,8 @@ final class Zoom {
       return Optional.empty();
     }
     double extent = section.extentM();
+    Box found = null;
+    double bestScore = 0;
     for (double part : TRIED) {
       Box best = null;
       int most = 0;
@@ -50,11 +52,14 @@ final class Zoom {
           best = tight;
         }
       }
-      if (most >= MOST * n && best != null) {
-        return worthwhile(best, section);
+      // Much in view and much larger: one against the other.
+      double score = (double) most / n * Math.log(1 / part);
+      if (most >= MOST * n && score > bestScore) {
+        bestScore = score;
+        found = best;
       }
     }
-    return Optional.empty();
+    return found == null ? Optional.empty() : worthwhile(found, section);
   }
 
   private static Optional<Box> worthwhile(Box corners, DrawnSection section) {
@@ -72,35 +77,49 @@ final class Zoom {
             Math.max(least, zoom.height())));
   }
 
+  /** Keeps labels off the lines that show in the whole drawing what is zoomed. */
+  static void keepClear(Ground ground, Panel whole, Panel zoom) {
+    Box box = whole.on(zoom.window());
+    ground.take(
+        new Polyline.Builder()
+            .add(box.x0(), box.y0())
+            .add(box.x1(), box.y0())
+            .add(box.x1(), box.y1())
+            .add(box.x0(), box.y1())
+            .closed());
+    ground.take(tag(box, whole));
+  }
+
+  /** The place of the letter: on the frame, or in it where there is no room above. */
+  private static Box tag(Box box, Panel whole) {
+    double y = box.y0() - TAG < whole.frame().y0() ? box.y0() + TAG : box.y0();
+    return new Box(box.x0(), y - TAG, box.x0() + TAG, y);
+  }
+
   /** Shows in the whole drawing what is zoomed. */
   static void mark(Canvas canvas, Panel whole, Panel zoom) {
     canvas.layer("zoom-mark");
     Box box = whole.on(zoom.window());
-    Rectangle2D frame =
-        new Rectangle2D.Double(box.x0(), box.y0(), box.width(), box.height());
+    Rectangle2D frame = new Rectangle2D.Double(box.x0(), box.y0(), box.width(), box.height());
     canvas.stroke(frame, Palette.PAPER, new Pen(2.6f));
     canvas.stroke(frame, Palette.INK, Pen.MEDIUM);
-    Path2D ties = new Path2D.Double();
-    Box below = zoom.frame();
-    boolean beside = below.x0() >= whole.frame().x1();
-    ties.append(
-        new Line2D.Double(
-            beside ? box.x1() : box.x0(),
-            beside ? box.y0() : box.y1(),
-            below.x0(),
-            below.y0()),
-        false);
-    ties.append(
-        new Line2D.Double(
-            box.x1(), box.y1(), beside ? below.x0() : below.x1(), beside ? below.y1() : below.y0()),
-        false);
-    canvas.stroke(ties, Palette.SECOND_INK, new Pen(0.6f, 3, 3));
+    letter(canvas, tag(box, whole));
+  }
+
+  private static void letter(Canvas canvas, Box box) {
+    canvas.fill(new Rectangle2D.Double(box.x0(), box.y0(), box.width(), box.height()), Palette.INK);
+    Plates.unplated(
+        canvas,
+        List.of("A"),
+        box,
+        Lettering.SMALL_STRONG.in(Palette.PAPER),
+        Lettering.SMALL_STRONG);
   }
 
   /** Where the words of a zoom stand. */
   static Box words(Panel zoom) {
     return new Box(
-        zoom.frame().x0(), zoom.frame().y0(), zoom.frame().x0() + 116, zoom.frame().y0() + 22);
+        zoom.frame().x0(), zoom.frame().y0(), zoom.frame().x0() + 132, zoom.frame().y0() + 22);
   }
 
   /** Frames the zoom and says how much larger it is. */
@@ -115,8 +134,9 @@ final class Zoom {
     Plates.write(
         canvas,
         String.format(Locale.ROOT, "%.1f times larger", times),
-        box.x0() + 6,
+        box.x0() + 24,
         box.y0() + 15,
         Lettering.SMALL_STRONG);
+    letter(canvas, new Box(box.x0() + 4, box.y0() + 4, box.x0() + 19, box.y0() + 19));
   }
 }
