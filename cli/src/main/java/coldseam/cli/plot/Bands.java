@@ -29,10 +29,19 @@ final class Bands {
     this.panel = panel;
   }
 
+  /** Fills everything. */
+  void fillAll(Canvas canvas, Color colour) {
+    fill(canvas, contours.all(), colour);
+  }
+
   /** Fills where the values are at or above a level. */
-  void fill(Canvas canvas, double level, Color colour) {
+  void fill(Canvas canvas, int level, Color colour) {
+    fill(canvas, contours.atOrAbove(level), colour);
+  }
+
+  private void fill(Canvas canvas, List<Polyline> region, Color colour) {
     List<Polyline> rings = new ArrayList<>();
-    for (Polyline ring : contours.atOrAbove(level)) {
+    for (Polyline ring : region) {
       Polyline simple = Simplification.of(ring, SIMPLIFIED / panel.pointsPerM());
       if (simple.size() > 2) {
         Clip.ring(simple.on(panel), panel.frame()).ifPresent(rings::add);
@@ -44,7 +53,7 @@ final class Bands {
   }
 
   /** The lines of a level on the sheet. */
-  List<Polyline> lines(double level) {
+  List<Polyline> lines(int level) {
     List<Polyline> drawn = new ArrayList<>();
     for (Polyline line : contours.lines(level)) {
       Polyline simple = Simplification.of(line, SIMPLIFIED / panel.pointsPerM());

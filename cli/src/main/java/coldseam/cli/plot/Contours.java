@@ -13,27 +13,49 @@ final class Contours {
   private static final int NONE = -1;
 
   private final LinearPatch patch;
+  private final double[] levels;
   private final int[] sideOf;
-  private final int sides;
   private final int[] outline;
+  private final int[] crossing;
+  private final int[] crossingFrom;
+  private final double[] crossX;
+  private final double[] crossY;
+  private final int[] next;
+  private final boolean[] entered;
 
-  private Contours(LinearPatch patch, int[] sideOf, int sides, int[] outline) {
+  private Contours(LinearPatch patch, double[] levels, int[] sideOf, int sides, int[] outline) {
     this.patch = patch;
+    this.levels = levels;
     this.sideOf = sideOf;
-    this.sides = sides;
     this.outline = outline;
+    crossX = new double[sides];
+    crossY = new double[sides];
+    next = new int[sides];
+    Arrays.fill(next, NONE);
+    entered = new boolean[sides];
+    crossingFrom = new int[levels.length + 1];
+    crossing = bucket();
   }
 
-  static Contours of(LinearPatch patch) {
+  /**
+   * Prepares contours.
+   *
+   * @param patch the values
+   * @param levels every level that will be asked for, ascending
+   */
+  static Contours of(LinearPatch patch, double[] levels) {
     int n = patch.triangles();
     SideTable table = new SideTable(2 * n);
     int[] sideOf = new int[3 * n];
-    for (int s = 0; s < 3 * n; s++) {
-      int t = s / 3;
-      int k = s % 3;
-      sideOf[s] = table.id(patch.corner(t, (k + 1) % 3), patch.corner(t, (k + 2) % 3));
+    for (int t = 0; t < n; t++) {
+      int a = patch.corner(t, 0);
+      int b = patch.corner(t, 1);
+      int c = patch.corner(t, 2);
+      sideOf[3 * t] = table.id(b, c);
+      sideOf[3 * t + 1] = table.id(c, a);
+      sideOf[3 * t + 2] = table.id(a, b);
     }
-    int[] uses = new int[table.size()];
+    byte[] uses = new byte[table.size()];
     for (int side : sideOf) {
       uses[side]++;
     }
@@ -44,55 +66,86 @@ final class Contours {
         outline[outer++] = s;
       }
     }
-    return new Contours(patch, sideOf, table.size(), Arrays.copyOf(outline, outer));
+    return new Contours(patch, levels, sideOf, table.size(), Arrays.copyOf(outline, outer));
   }
 
-  LinearPatch patch() {
-    return patch;
+  /** Sorts the triangles by the levels that cross them. */
+  private int[] bucket() {
+    int n = patch.triangles();
+    int[] first = new int[n];
+    int[] last = new int[n];
+    for (int t = 0; t < n; t++) {
+      double a = patch.value(patch.corner(t, 0));
+      double b = patch.value(patch.corner(t, 1));
+      double c = patch.value(patch.corner(t, 2));
+      first[t] = above(Math.min(a, Math.min(b, c)));
+      last[t] = above(Math.max(a, Math.max(b, c)));
+      for (int level = first[t]; level < last[t]; level++) {
+        crossingFrom[level + 1]++;
+      }
+    }
+    for (int level = 0; level < levels.length; level++) {
+      crossingFrom[level + 1] += crossingFrom[level];
+    }
+    int[] at = crossingFrom.clone();
+    int[] sorted = new int[crossingFrom[levels.length]];
+    for (int t = 0; t < n; t++) {
+      for (int level = first[t]; level < last[t]; level++) {
+        sorted[at[level]++] = t;
+      }
+    }
+    return sorted;
+  }
+
+  /** Index of the first level above a value. */
+  private int above(double value) {
+    int low = 0;
+    int high = levels.length;
+    while (low < high) {
+      int mid = (low + high) >>> 1;
+      if (levels[mid] > value) {
+        high = mid;
+      } else {
+        low = mid + 1;
+      }
+    }
+    return low;
   }
 
   /**
    * Lines along which the values equal a level, higher values to their left.
    *
-   * @param level the level
+   * @param level index of the level
    * @return open lines that end on the outline, and closed ones
    */
-  List<Polyline> lines(double level) {
-    int[] next = new int[sides];
-    Arrays.fill(next, NONE);
-    double[] x = new double[sides];
-    double[] y = new double[sides];
-    boolean[] entered = new boolean[sides];
+  List<Polyline> lines(int level) {
     int[] from = new int[1];
-    int[] crossed = new int[patch.triangles()];
-    int count = 0;
-    for (int t = 0; t < patch.triangles(); t++) {
-      int to = cross(t, level, from, x, y);
-      if (to != NONE) {
-        next[from[0]] = to;
-        entered[to] = true;
-        crossed[count++] = from[0];
-      }
+    int begin = crossingFrom[level];
+    int end = crossingFrom[level + 1];
+    int[] starts = new int[end - begin];
+    for (int i = begin; i < end; i++) {
+      int to = cross(crossing[i], levels[level], from);
+      next[from[0]] = to;
+      entered[to] = true;
+      starts[i - begin] = from[0];
     }
     List<Polyline> lines = new ArrayList<>();
-    for (int i = 0; i < count; i++) {
-      if (!entered[crossed[i]]) {
-        lines.add(follow(crossed[i], next, x, y));
-      }
-    }
-    for (int i = 0; i < count; i++) {
-      if (next[crossed[i]] != NONE) {
-        lines.add(follow(crossed[i], next, x, y));
+    for (boolean open : new boolean[] {true, false}) {
+      for (int start : starts) {
+        if (next[start] != NONE && !(open && entered[start])) {
+          lines.add(follow(start));
+        }
       }
     }
     return lines;
   }
 
-  private static Polyline follow(int start, int[] next, double[] x, double[] y) {
+  private Polyline follow(int start) {
     Polyline.Builder line = new Polyline.Builder();
     int at = start;
     while (true) {
-      line.add(x[at], y[at]);
+      line.add(crossX[at], crossY[at]);
+      entered[at] = false;
       int then = next[at];
       if (then == NONE) {
         return line.open();
@@ -108,110 +161,112 @@ final class Contours {
   /**
    * The crossing of one triangle, from one side to another with the higher corner to the left.
    *
-   * @return the side left through, or NONE if the level does not cross
+   * @return the side left through
    */
-  private int cross(int t, double level, int[] from, double[] x, double[] y) {
+  private int cross(int t, double level, int[] from) {
     int high = 0;
     for (int k = 0; k < 3; k++) {
       if (patch.value(patch.corner(t, k)) >= level) {
         high |= 1 << k;
       }
     }
-    if (high == 0 || high == 7) {
-      return NONE;
-    }
     boolean single = Integer.bitCount(high) == 1;
     int apex = Integer.numberOfTrailingZeros(single ? high : ~high & 7);
     int first = 3 * t + (apex + 2) % 3;
     int last = 3 * t + (apex + 1) % 3;
-    place(t, (apex + 2) % 3, level, x, y);
-    place(t, (apex + 1) % 3, level, x, y);
+    place(first, patch.corner(t, apex), patch.corner(t, (apex + 1) % 3), level);
+    place(last, patch.corner(t, apex), patch.corner(t, (apex + 2) % 3), level);
     from[0] = sideOf[single ? first : last];
     return sideOf[single ? last : first];
   }
 
   /** Puts the crossing of a side; the same from whichever triangle it is asked. */
-  private void place(int t, int k, double level, double[] x, double[] y) {
-    int p = patch.corner(t, (k + 1) % 3);
-    int q = patch.corner(t, (k + 2) % 3);
+  private void place(int side, int p, int q, double level) {
     int a = Math.min(p, q);
     int b = Math.max(p, q);
     double part = (level - patch.value(a)) / (patch.value(b) - patch.value(a));
-    int side = sideOf[3 * t + k];
-    x[side] = patch.x(a) + part * (patch.x(b) - patch.x(a));
-    y[side] = patch.y(a) + part * (patch.y(b) - patch.y(a));
+    crossX[sideOf[side]] = patch.x(a) + part * (patch.x(b) - patch.x(a));
+    crossY[sideOf[side]] = patch.y(a) + part * (patch.y(b) - patch.y(a));
+  }
+
+  /** The rings of everything, filled by the even-odd rule. */
+  List<Polyline> all() {
+    Rings rings = new Rings(outline.length);
+    for (int s : outline) {
+      rings.add(corner(s, 1), corner(s, 2));
+    }
+    return rings.collect();
   }
 
   /**
    * The region where the values are at or above a level.
    *
-   * @param level the level
+   * @param level index of the level
    * @return its rings, filled by the even-odd rule
    */
-  List<Polyline> atOrAbove(double level) {
-    Rings rings = new Rings(patch.vertices() + sides, 3 * patch.triangles());
-    double[] x = new double[sides];
-    double[] y = new double[sides];
+  List<Polyline> atOrAbove(int level) {
+    double value = levels[level];
+    Rings rings = new Rings(crossingFrom[level + 1] - crossingFrom[level] + outline.length);
     int[] from = new int[1];
-    for (int t = 0; t < patch.triangles(); t++) {
-      int to = cross(t, level, from, x, y);
-      if (to != NONE) {
-        rings.add(patch.vertices() + from[0], patch.vertices() + to);
-      }
+    for (int i = crossingFrom[level]; i < crossingFrom[level + 1]; i++) {
+      int to = cross(crossing[i], value, from);
+      rings.add(patch.vertices() + from[0], patch.vertices() + to);
     }
     for (int s : outline) {
-      int a = patch.corner(s / 3, (s % 3 + 1) % 3);
-      int b = patch.corner(s / 3, (s % 3 + 2) % 3);
-      boolean aHigh = patch.value(a) >= level;
-      boolean bHigh = patch.value(b) >= level;
+      int a = corner(s, 1);
+      int b = corner(s, 2);
+      boolean aHigh = patch.value(a) >= value;
+      boolean bHigh = patch.value(b) >= value;
       if (aHigh || bHigh) {
-        int crossing = patch.vertices() + sideOf[s];
-        rings.add(aHigh ? a : crossing, bHigh ? b : crossing);
+        int node = patch.vertices() + sideOf[s];
+        rings.add(aHigh ? a : node, bHigh ? b : node);
       }
     }
-    return rings.collect(
-        node -> node < patch.vertices() ? patch.x(node) : x[node - patch.vertices()],
-        node -> node < patch.vertices() ? patch.y(node) : y[node - patch.vertices()]);
+    return rings.collect();
   }
 
-  /** Directed pieces between nodes, as many leaving each node as arrive there. */
-  private static final class Rings {
+  private int corner(int s, int ahead) {
+    return patch.corner(s / 3, (s % 3 + ahead) % 3);
+  }
+
+  /**
+   * Directed pieces between nodes, as many leaving each node as arrive there. Nodes are vertices,
+   * then crossings of sides.
+   */
+  private final class Rings {
     private final int[] first;
-    private int[] following;
-    private int[] ends;
-    private int[] starts;
+    private final int[] following;
+    private final int[] ends;
+    private final int[] starts;
     private int size;
 
-    Rings(int nodes, int expected) {
-      first = new int[nodes];
+    Rings(int pieces) {
+      first = new int[patch.vertices() + crossX.length];
       Arrays.fill(first, NONE);
-      following = new int[Math.max(16, expected)];
-      ends = new int[following.length];
-      starts = new int[following.length];
+      following = new int[pieces];
+      ends = new int[pieces];
+      starts = new int[pieces];
     }
 
     void add(int from, int to) {
-      if (size == ends.length) {
-        following = Arrays.copyOf(following, 2 * size);
-        ends = Arrays.copyOf(ends, 2 * size);
-        starts = Arrays.copyOf(starts, 2 * size);
-      }
       starts[size] = from;
       ends[size] = to;
       following[size] = first[from];
       first[from] = size++;
     }
 
-    List<Polyline> collect(
-        java.util.function.IntToDoubleFunction x, java.util.function.IntToDoubleFunction y) {
+    List<Polyline> collect() {
       List<Polyline> rings = new ArrayList<>();
       for (int i = 0; i < size; i++) {
-        int start = starts[i];
-        while (first[start] != NONE) {
+        while (first[starts[i]] != NONE) {
           Polyline.Builder ring = new Polyline.Builder();
-          int at = start;
+          int at = starts[i];
           while (first[at] != NONE) {
-            ring.add(x.applyAsDouble(at), y.applyAsDouble(at));
+            if (at < patch.vertices()) {
+              ring.add(patch.x(at), patch.y(at));
+            } else {
+              ring.add(crossX[at - patch.vertices()], crossY[at - patch.vertices()]);
+            }
             int piece = first[at];
             first[at] = following[piece];
             at = ends[piece];

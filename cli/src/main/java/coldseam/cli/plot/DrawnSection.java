@@ -246,6 +246,11 @@ final class DrawnSection {
     return found;
   }
 
+  /** The box around a face on the sheet. */
+  Box bounds(int face, Panel panel) {
+    return panel.on(faces.get(face).rings().get(0).bounds());
+  }
+
   List<Surface> surfaces() {
     return surfaces;
   }

@@ -24,6 +24,7 @@ final class FlowDensity implements Nodal {
   private final int corners;
   private final double[] qx;
   private final double[] qy;
+  private final double[] logarithms;
   private final double floor;
 
   FlowDensity(TemperatureField field, Conditions conditions) {
@@ -38,9 +39,13 @@ final class FlowDensity implements Nodal {
     average();
     double most = 0;
     for (int i = 0; i < nodes; i++) {
-      most = Math.max(most, Math.hypot(qx[i], qy[i]));
+      most = Math.max(most, Math.sqrt(qx[i] * qx[i] + qy[i] * qy[i]));
     }
     floor = most > 0 ? FLOOR * most : 1;
+    logarithms = new double[nodes];
+    for (int i = 0; i < nodes; i++) {
+      logarithms[i] = logarithm(qx[i], qy[i]);
+    }
   }
 
   /**
@@ -142,8 +147,12 @@ final class FlowDensity implements Nodal {
 
   @Override
   public double atCorner(int triangle, int k) {
-    int entry = nodeOf[6 * triangle + k];
-    return logarithm(qx[entry], qy[entry]);
+    return logarithms[nodeOf[6 * triangle + k]];
+  }
+
+  @Override
+  public double atMiddle(int triangle, int k) {
+    return logarithms[nodeOf[6 * triangle + 3 + k]];
   }
 
   @Override
@@ -153,7 +162,7 @@ final class FlowDensity implements Nodal {
   }
 
   private double logarithm(double x, double y) {
-    return Math.log10(Math.max(floor, Math.hypot(x, y)));
+    return Math.log10(Math.max(floor, Math.sqrt(x * x + y * y)));
   }
 
   /**

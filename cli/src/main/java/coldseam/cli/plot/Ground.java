@@ -205,68 +205,81 @@ final class Ground {
   }
 
   /**
-   * Room for a box inside the faces accepted, as near as can be to the middle of what is left of
-   * them, with as much air around it as can be had.
+   * Room for a box inside a face, as near as can be to the middle of what is left of it, with as
+   * much air around it as can be had.
+   *
+   * @param owner the face
+   * @param within a box around the face
+   * @param width of the box
+   * @param height of the box
    */
-  Optional<Box> within(IntPredicate accepted, double width, double height) {
-    int[] sums = new int[(columns + 1) * (rows + 1)];
+  Optional<Box> within(int owner, Box within, double width, double height) {
+    int c0 = Math.max(0, (int) Math.floor((within.x0() - frame.x0()) / SQUARE));
+    int c1 = Math.min(columns, (int) Math.ceil((within.x1() - frame.x0()) / SQUARE));
+    int r0 = Math.max(0, (int) Math.floor((within.y0() - frame.y0()) / SQUARE));
+    int r1 = Math.min(rows, (int) Math.ceil((within.y1() - frame.y0()) / SQUARE));
+    int across = c1 - c0;
+    int down = r1 - r0;
+    if (across * SQUARE < width || down * SQUARE < height) {
+      return Optional.empty();
+    }
+    int[] sums = new int[(across + 1) * (down + 1)];
     double sumX = 0;
     double sumY = 0;
     int count = 0;
-    for (int row = 0; row < rows; row++) {
+    for (int row = 0; row < down; row++) {
       int inRow = 0;
-      for (int column = 0; column < columns; column++) {
-        int square = row * columns + column;
-        if (taken[square] == 0 && accepted.test(owners[square])) {
+      int square = (row + r0) * columns + c0;
+      int sum = (row + 1) * (across + 1) + 1;
+      for (int column = 0; column < across; column++, square++, sum++) {
+        if (owners[square] == owner && taken[square] == 0) {
           inRow++;
           sumX += column;
           sumY += row;
           count++;
         }
-        sums[(row + 1) * (columns + 1) + column + 1] =
-            sums[row * (columns + 1) + column + 1] + inRow;
+        sums[sum] = sums[sum - across - 1] + inRow;
       }
     }
     if (count * SQUARE * SQUARE < width * height) {
       return Optional.empty();
     }
+    double x = frame.x0() + c0 * SQUARE;
+    double y = frame.y0() + r0 * SQUARE;
     for (double air : new double[] {12, 6, 2, 0}) {
       int w = (int) Math.ceil((width + 2 * air) / SQUARE);
       int h = (int) Math.ceil((height + 2 * air) / SQUARE);
-      Optional<Box> found = nearest(sums, w, h, sumX / count, sumY / count);
-      if (found.isPresent()) {
-        return Optional.of(Box.around(found.get().midX(), found.get().midY(), width, height));
+      int found = nearest(sums, across, w, h, sumX / count, sumY / count);
+      if (found >= 0) {
+        double middleX = x + (found % (across + 1) + w / 2.0) * SQUARE;
+        double middleY = y + (found / (across + 1) + h / 2.0) * SQUARE;
+        return Optional.of(Box.around(middleX, middleY, width, height));
       }
     }
     return Optional.empty();
   }
 
-  private Optional<Box> nearest(int[] sums, int w, int h, double middleX, double middleY) {
-    int stride = columns + 1;
+  /** Index in the sums of the first corner of the w × h squares all inside, or −1. */
+  private static int nearest(int[] sums, int across, int w, int h, double middleX, double middleY) {
+    int stride = across + 1;
+    int rows = sums.length / stride - 1;
     double best = Double.POSITIVE_INFINITY;
-    Box found = null;
+    int found = -1;
     for (int row = 0; row + h <= rows; row++) {
-      for (int column = 0; column + w <= columns; column++) {
-        int inside =
-            sums[(row + h) * stride + column + w]
-                - sums[row * stride + column + w]
-                - sums[(row + h) * stride + column]
-                + sums[row * stride + column];
-        if (inside == w * h) {
-          double d = Math.hypot(column + w / 2.0 - middleX, row + h / 2.0 - middleY);
-          if (d < best) {
-            best = d;
-            found =
-                new Box(
-                    frame.x0() + column * SQUARE,
-                    frame.y0() + row * SQUARE,
-                    frame.x0() + (column + w) * SQUARE,
-                    frame.y0() + (row + h) * SQUARE);
+      double dy = row + h / 2.0 - middleY;
+      int at = row * stride;
+      for (int column = 0; column + w <= across; column++, at++) {
+        int below = at + h * stride;
+        if (sums[below + w] - sums[at + w] - sums[below] + sums[at] == w * h) {
+          double dx = column + w / 2.0 - middleX;
+          if (dx * dx + dy * dy < best) {
+            best = dx * dx + dy * dy;
+            found = at;
           }
         }
       }
     }
-    return Optional.ofNullable(found);
+    return found;
   }
 
   /**

@@ -95,13 +95,16 @@ final class HeatFlowView extends View {
 
   @Override
   void paint(Canvas canvas, Panel panel, Optional<Panel> zoom) {
-    Contours contours = Contours.of(Sampling.of(density, panel.window(), panel.pointsPerM(), STEP));
+    double[] traced = new double[levels.size()];
+    for (int k = 0; k < traced.length; k++) {
+      traced[k] = Math.log10(figures().densityWPerM2(levels.get(k)));
+    }
+    LinearPatch patch = Sampling.of(density, panel.window(), panel.pointsPerM(), STEP);
+    Bands bands = new Bands(Contours.of(patch, traced), panel);
     canvas.layer(panel.name() + "-bands");
-    Bands bands = new Bands(contours, panel);
-    bands.fill(canvas, Double.NEGATIVE_INFINITY, Palette.flow(part(0)));
-    for (int k = 0; k < levels.size(); k++) {
-      double level = Math.log10(figures().densityWPerM2(levels.get(k)));
-      bands.fill(canvas, level, Palette.flow(part(k + 1)));
+    bands.fillAll(canvas, Palette.flow(part(0)));
+    for (int k = 0; k < traced.length; k++) {
+      bands.fill(canvas, k, Palette.flow(part(k + 1)));
     }
     SectionLines lines = new SectionLines(section(), panel);
     lines.joints(canvas, Palette.INK, Pen.HAIR);

@@ -4,17 +4,29 @@ import coldseam.cli.plot.Canvas.Anchor;
 import java.awt.geom.Path2D;
 import java.util.List;
 
-/** Writes the value of a contour along it, where it is straight enough and not crowded. */
+/** Writes the value of a contour on it, where it is straight enough and not crowded. */
 final class LineLabels {
   private static final double STEP = 7;
+  private static final int MOST_TRIED = 40;
 
   /** How far the line may leave its chord under a label, points. */
   private static final double BEND = 2.2;
 
+  /** Shortest chord under a label, over its length along the line. */
+  private static final double STRAIGHT = 0.94;
+
+  /** More room than this is no better, points. */
+  private static final double ENOUGH = 24;
+
+  /** How much room the end of a line has to offer more than its middle, points. */
+  private static final double TO_THE_MIDDLE = 8;
+
   /** Labels of so many characters or fewer are set level where there is room. */
   private static final int SHORT = 4;
 
-  private LineLabels() {}
+  private final Canvas canvas;
+  private final Ground ground;
+  private final Spacing spacing;
 
   /** The distance from a contour to its neighbour at a point, points. */
   @FunctionalInterface
@@ -23,62 +35,86 @@ final class LineLabels {
   }
 
   /**
-   * Tries to write a label on one of the lines of a level.
+   * Where a label goes.
+   *
+   * @param x of its middle
+   * @param y of its middle
+   * @param turn clockwise, radians
+   * @param score the higher the better
+   */
+  private record Place(double x, double y, double turn, double score) {}
+
+  /**
+   * Prepares.
    *
    * @param canvas what it is drawn on
    * @param ground what is taken
+   * @param spacing how crowded the contours are
+   */
+  LineLabels(Canvas canvas, Ground ground, Spacing spacing) {
+    this.canvas = canvas;
+    this.ground = ground;
+    this.spacing = spacing;
+  }
+
+  /**
+   * Tries to write a label on one of the lines of a level.
+   *
    * @param lines the lines of the level, on the sheet
    * @param text the label
    * @param lettering how it is set
-   * @param spacing how crowded it is
    * @param leastSpacing how far the neighbours have to be
    * @return whether it was written
    */
-  static boolean write(
-      Canvas canvas,
-      Ground ground,
-      List<Polyline> lines,
-      String text,
-      Lettering lettering,
-      Spacing spacing,
-      double leastSpacing) {
+  boolean write(List<Polyline> lines, String text, Lettering lettering, double leastSpacing) {
     double width = TextWidths.of(text, lettering) + 6;
-    double best = leastSpacing - 4;
-    double[] found = null;
+    Place best = new Place(0, 0, 0, leastSpacing - TO_THE_MIDDLE);
+    Place none = best;
     for (Polyline line : lines) {
-      double length = line.length();
-      for (double at = width / 2 + 2; at < length - width / 2 - 2; at += STEP) {
-        double[] from = SpaceLabels.at(line, at - width / 2);
-        double[] to = SpaceLabels.at(line, at + width / 2);
-        double[] mid = SpaceLabels.at(line, at);
-        double chord = Math.hypot(to[0] - from[0], to[1] - from[1]);
-        if (chord < 0.94 * width || off(mid, from, to) > BEND) {
-          continue;
+      double slack = line.length() / 2 - width / 2 - 2;
+      double step = Math.max(STEP, line.length() / MOST_TRIED);
+      for (double off = 0; off < slack; off += step) {
+        double part = off / slack;
+        if (ENOUGH - TO_THE_MIDDLE * part <= best.score()) {
+          break;
         }
-        double room = Math.min(24, spacing.at(mid[0], mid[1]));
-        double score = room - 4 * Math.abs(at / length - 0.5);
-        if (room >= leastSpacing && score > best && free(ground, from, to, lettering)) {
-          best = score;
-          boolean level =
-              text.length() <= SHORT && room >= width + 2 && flat(ground, mid, width, lettering);
-          double turn = level ? 0 : Math.atan2(to[1] - from[1], to[0] - from[0]);
-          found = new double[] {mid[0], mid[1], turn};
+        for (double at : new double[] {line.length() / 2 - off, line.length() / 2 + off}) {
+          best = better(best, line, at, part, text, width, lettering, leastSpacing);
         }
       }
     }
-    if (found == null) {
+    if (best == none) {
       return false;
     }
-    plate(canvas, ground, found, width, text, lettering);
+    plate(best, width, text, lettering);
     return true;
   }
 
-  private static boolean flat(Ground ground, double[] at, double width, Lettering lettering) {
-    return free(
-        ground,
-        new double[] {at[0] - width / 2, at[1]},
-        new double[] {at[0] + width / 2, at[1]},
-        lettering);
+  /** The place at a distance along a line, if it will do and is better than another. */
+  private Place better(
+      Place than,
+      Polyline line,
+      double at,
+      double part,
+      String text,
+      double width,
+      Lettering lettering,
+      double leastSpacing) {
+    double[] from = line.at(at - width / 2);
+    double[] to = line.at(at + width / 2);
+    double[] mid = line.at(at);
+    double chord = Math.hypot(to[0] - from[0], to[1] - from[1]);
+    if (chord < STRAIGHT * width || off(mid, from, to) > BEND) {
+      return than;
+    }
+    double room = Math.min(ENOUGH, spacing.at(mid[0], mid[1]));
+    double score = room - TO_THE_MIDDLE * part;
+    double turn = Measures.readable(Math.atan2(to[1] - from[1], to[0] - from[0]));
+    if (room < leastSpacing || score <= than.score() || !free(mid, width, turn, lettering)) {
+      return than;
+    }
+    boolean level = text.length() <= SHORT && room >= width + 2 && free(mid, width, 0, lettering);
+    return new Place(mid[0], mid[1], level ? 0 : turn, score);
   }
 
   private static double off(double[] p, double[] a, double[] b) {
@@ -87,51 +123,46 @@ final class LineLabels {
     return Math.abs((p[0] - a[0]) * dy - (p[1] - a[1]) * dx) / Math.hypot(dx, dy);
   }
 
-  private static boolean free(Ground ground, double[] a, double[] b, Lettering lettering) {
-    double length = Math.hypot(b[0] - a[0], b[1] - a[1]);
-    double nx = -(b[1] - a[1]) / length;
-    double ny = (b[0] - a[0]) / length;
-    for (double side : new double[] {-0.5, 0, 0.5}) {
-      double lift = side * lettering.size();
-      Polyline line =
-          Polyline.of(a[0] + lift * nx, a[1] + lift * ny, b[0] + lift * nx, b[1] + lift * ny);
-      if (ground.blocked(line, owner -> true) > 0) {
+  private boolean free(double[] at, double width, double turn, Lettering lettering) {
+    double half = lettering.size() / 2;
+    for (double lift : new double[] {-half, 0, half}) {
+      if (ground.blocked(row(at[0], at[1], width, turn, lift), owner -> true) > 0) {
         return false;
       }
     }
     return true;
   }
 
-  private static void plate(
-      Canvas canvas, Ground ground, double[] at, double width, String text, Lettering lettering) {
-    double angle = Measures.readable(at[2]);
-    double cos = Math.cos(angle);
-    double sin = Math.sin(angle);
+  /** A line through a turned label, above or below its middle. */
+  private static Polyline row(double x, double y, double width, double turn, double lift) {
+    double dx = Math.cos(turn) * width / 2;
+    double dy = Math.sin(turn) * width / 2;
+    double cx = x - lift * Math.sin(turn);
+    double cy = y + lift * Math.cos(turn);
+    return Polyline.of(cx - dx, cy - dy, cx + dx, cy + dy);
+  }
+
+  private void plate(Place place, double width, String text, Lettering lettering) {
     double half = lettering.size() * 0.56;
-    double[][] corners = {
-      {-width / 2, -half}, {width / 2, -half}, {width / 2, half}, {-width / 2, half}
-    };
+    Polyline top = row(place.x(), place.y(), width, place.turn(), -half);
+    Polyline bottom = row(place.x(), place.y(), width, place.turn(), half);
     Path2D plate = new Path2D.Double();
-    for (int i = 0; i < 4; i++) {
-      double x = at[0] + corners[i][0] * cos - corners[i][1] * sin;
-      double y = at[1] + corners[i][0] * sin + corners[i][1] * cos;
-      if (i == 0) {
-        plate.moveTo(x, y);
-      } else {
-        plate.lineTo(x, y);
-      }
-    }
+    plate.moveTo(top.x(0), top.y(0));
+    plate.lineTo(top.x(1), top.y(1));
+    plate.lineTo(bottom.x(1), bottom.y(1));
+    plate.lineTo(bottom.x(0), bottom.y(0));
     plate.closePath();
     canvas.fill(plate, Palette.PAPER);
     double drop = lettering.size() * TextWidths.CAPITAL / 2;
-    canvas.text(text, at[0] - drop * sin, at[1] + drop * cos, lettering, Anchor.MIDDLE, angle);
+    canvas.text(
+        text,
+        place.x() - drop * Math.sin(place.turn()),
+        place.y() + drop * Math.cos(place.turn()),
+        lettering,
+        Anchor.MIDDLE,
+        place.turn());
     for (double lift : new double[] {-half, 0, half}) {
-      ground.take(
-          Polyline.of(
-              at[0] - width / 2 * cos - lift * sin,
-              at[1] - width / 2 * sin + lift * cos,
-              at[0] + width / 2 * cos - lift * sin,
-              at[1] + width / 2 * sin + lift * cos));
+      ground.take(row(place.x(), place.y(), width, place.turn(), lift));
     }
   }
 }

@@ -68,46 +68,16 @@ final class LinearPatch {
     return corners[3 * triangle + k];
   }
 
-  double least() {
-    double least = Double.POSITIVE_INFINITY;
-    for (int v = 0; v < vertices; v++) {
-      least = Math.min(least, values[v]);
-    }
-    return least;
-  }
-
-  double most() {
-    double most = Double.NEGATIVE_INFINITY;
-    for (int v = 0; v < vertices; v++) {
-      most = Math.max(most, values[v]);
-    }
-    return most;
-  }
-
-  double area(int triangle) {
-    int a = corner(triangle, 0);
-    int b = corner(triangle, 1);
-    int c = corner(triangle, 2);
-    return ((xs[b] - xs[a]) * (ys[c] - ys[a]) - (xs[c] - xs[a]) * (ys[b] - ys[a])) / 2;
-  }
-
-  double meanOf(int triangle) {
-    return (values[corner(triangle, 0)] + values[corner(triangle, 1)] + values[corner(triangle, 2)])
-        / 3;
-  }
-
-  /** Length of the gradient of the values in a triangle. */
-  double slope(int triangle) {
-    int a = corner(triangle, 0);
-    int b = corner(triangle, 1);
-    int c = corner(triangle, 2);
+  /** Length of the gradient of the values in the triangle of three vertices. */
+  double slope(int a, int b, int c) {
     double x1 = xs[b] - xs[a];
     double y1 = ys[b] - ys[a];
     double x2 = xs[c] - xs[a];
     double y2 = ys[c] - ys[a];
     double v1 = values[b] - values[a];
     double v2 = values[c] - values[a];
-    double twice = x1 * y2 - x2 * y1;
-    return Math.hypot(v1 * y2 - v2 * y1, v2 * x1 - v1 * x2) / Math.abs(twice);
+    double gx = v1 * y2 - v2 * y1;
+    double gy = v2 * x1 - v1 * x2;
+    return Math.sqrt(gx * gx + gy * gy) / Math.abs(x1 * y2 - x2 * y1);
   }
 }

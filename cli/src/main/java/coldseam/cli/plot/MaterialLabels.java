@@ -96,9 +96,9 @@ final class MaterialLabels {
     double width = TextWidths.of(name, Lettering.LABEL) + 4;
     double height = Lettering.LABEL.size() * 1.05;
     for (int face : section.largestFirst(label)) {
-      IntPredicate own = owner -> owner == face;
-      Optional<Box> flat = ground.within(own, width, height);
-      Optional<Box> place = flat.isPresent() ? flat : ground.within(own, height, width);
+      Box bounds = section.bounds(face, panel);
+      Optional<Box> flat = ground.within(face, bounds, width, height);
+      Optional<Box> place = flat.isPresent() ? flat : ground.within(face, bounds, height, width);
       if (place.isPresent()) {
         ground.take(place.get());
         write(canvas, name, place.get(), flat.isPresent() ? 0 : -Math.PI / 2, looks.get(label));
@@ -124,7 +124,7 @@ final class MaterialLabels {
   private boolean ringInside(Canvas canvas, Ground ground, int label) {
     for (int face : section.largestFirst(label)) {
       Optional<Box> inside =
-          ground.within(owner -> owner == face, Plates.RING + 1, Plates.RING + 1);
+          ground.within(face, section.bounds(face, panel), Plates.RING + 1, Plates.RING + 1);
       if (inside.isPresent()) {
         ground.take(inside.get());
         ring(canvas, label, inside.get());

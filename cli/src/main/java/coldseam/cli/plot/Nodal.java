@@ -15,6 +15,9 @@ interface Nodal {
   /** The value at a corner of a triangle. */
   double atCorner(int triangle, int k);
 
+  /** The value in the middle of side k of a triangle, which lies opposite corner k. */
+  double atMiddle(int triangle, int k);
+
   /** The value inside a triangle; on a side the same from both triangles that share its corners. */
   double in(int triangle, double[] barycentric);
 }

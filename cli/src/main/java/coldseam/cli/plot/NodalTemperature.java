@@ -30,6 +30,11 @@ record NodalTemperature(TemperatureField field) implements Nodal {
   }
 
   @Override
+  public double atMiddle(int triangle, int k) {
+    return field.atNode(field.mesh().vertexCount() + field.mesh().side(triangle, k));
+  }
+
+  @Override
   public double in(int triangle, double[] l) {
     return field.in(triangle, l[0], l[1], l[2]);
   }

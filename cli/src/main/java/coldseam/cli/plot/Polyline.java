@@ -12,11 +12,18 @@ final class Polyline {
   private final double[] xs;
   private final double[] ys;
   private final boolean closed;
+  private final double[] along;
 
   private Polyline(double[] xs, double[] ys, boolean closed) {
     this.xs = xs;
     this.ys = ys;
     this.closed = closed;
+    along = new double[pieces() + 1];
+    for (int i = 0; i + 1 < along.length; i++) {
+      double dx = xs[after(i)] - xs[i];
+      double dy = ys[after(i)] - ys[i];
+      along[i + 1] = along[i] + Math.sqrt(dx * dx + dy * dy);
+    }
   }
 
   /** Collects the points of a polyline. */
@@ -70,7 +77,7 @@ final class Polyline {
 
   /** How many straight pieces there are. */
   int pieces() {
-    return closed ? xs.length : xs.length - 1;
+    return closed ? xs.length : Math.max(0, xs.length - 1);
   }
 
   /** The point after another, the first again after the last. */
@@ -79,11 +86,31 @@ final class Polyline {
   }
 
   double length() {
-    double sum = 0;
-    for (int i = 0; i < pieces(); i++) {
-      sum += Math.hypot(xs[after(i)] - xs[i], ys[after(i)] - ys[i]);
+    return along[along.length - 1];
+  }
+
+  /**
+   * A place on the line.
+   *
+   * @param distance from its start along it
+   * @return x and y of the place, then x and y of the unit vector to the right of the line there,
+   *     as the sheet is seen (y downwards)
+   */
+  double[] at(double distance) {
+    int found = Arrays.binarySearch(along, distance);
+    int piece = Math.max(0, Math.min(pieces() - 1, found >= 0 ? found : -found - 2));
+    while (piece > 0 && along[piece + 1] == along[piece]) {
+      piece--;
     }
-    return sum;
+    int next = after(piece);
+    double length = along[piece + 1] - along[piece];
+    double dx = xs[next] - xs[piece];
+    double dy = ys[next] - ys[piece];
+    if (length == 0) {
+      return new double[] {xs[piece], ys[piece], 0, 0};
+    }
+    double t = Math.max(0, Math.min(1, (distance - along[piece]) / length));
+    return new double[] {xs[piece] + t * dx, ys[piece] + t * dy, -dy / length, dx / length};
   }
 
   /** Signed area of a closed polyline, positive when it runs from x towards y. */
@@ -97,11 +124,17 @@ final class Polyline {
   }
 
   Box bounds() {
-    Box box = Box.EMPTY;
+    double x0 = Double.POSITIVE_INFINITY;
+    double y0 = x0;
+    double x1 = -x0;
+    double y1 = -x0;
     for (int i = 0; i < xs.length; i++) {
-      box = box.with(xs[i], ys[i]);
+      x0 = xs[i] < x0 ? xs[i] : x0;
+      x1 = xs[i] > x1 ? xs[i] : x1;
+      y0 = ys[i] < y0 ? ys[i] : y0;
+      y1 = ys[i] > y1 ? ys[i] : y1;
     }
-    return box;
+    return new Box(x0, y0, x1, y1);
   }
 
   /** The same line on the sheet. */

@@ -6,6 +6,9 @@ import java.util.Arrays;
 /**
  * Makes linear triangles of a quadratic field, as few as a picture needs: sides are halved only
  * where the field bends so much that a line of equal value would be seen to lie elsewhere.
+ *
+ * <p>Works in passes. A side is looked at once, in the pass after it came to be; triangles without
+ * a new side are done.
  */
 final class Sampling {
   /** How far a line may be drawn from its place, points. */
@@ -15,22 +18,25 @@ final class Sampling {
   private static final double SHARE_OF_STEP = 0.004;
 
   /** Sides shorter than this are left alone, points. */
-  private static final double SHORT = 1.5;
+  private static final double SHORT = 2;
 
   private static final int MOST_PASSES = 8;
 
   private final Nodal field;
   private final Mesh mesh;
   private final double pointsPerM;
-  private final double step;
-  private LinearPatch patch;
+  private final double leastOff;
+  private final LinearPatch patch;
+  private int[] active;
   private int[] parents;
+  private int count;
 
   private Sampling(Nodal field, double pointsPerM, double step) {
     this.field = field;
     this.mesh = field.mesh();
     this.pointsPerM = pointsPerM;
-    this.step = step;
+    leastOff = SHARE_OF_STEP * step;
+    patch = new LinearPatch(mesh.vertexCount() * 2, mesh.triangleCount() * 2);
   }
 
   /**
@@ -44,8 +50,8 @@ final class Sampling {
   static LinearPatch of(Nodal field, Box window, double pointsPerM, double step) {
     Sampling sampling = new Sampling(field, pointsPerM, step);
     sampling.start(window);
-    for (int pass = 0; pass < MOST_PASSES && sampling.refine(); pass++) {
-      continue;
+    for (int pass = 0; sampling.count > 0; pass++) {
+      sampling.refine(pass);
     }
     return sampling.patch;
   }
@@ -53,14 +59,10 @@ final class Sampling {
   private void start(Box window) {
     int[] numbers = new int[field.cornerValues()];
     Arrays.fill(numbers, -1);
-    patch = new LinearPatch(mesh.vertexCount() * 2, mesh.triangleCount() * 2);
+    active = new int[3 * mesh.triangleCount()];
     parents = new int[mesh.triangleCount()];
     for (int t = 0; t < mesh.triangleCount(); t++) {
-      Box box = Box.EMPTY;
-      for (int k = 0; k < 3; k++) {
-        box = box.with(mesh.x(mesh.vertex(t, k)), mesh.y(mesh.vertex(t, k)));
-      }
-      if (!box.meets(window)) {
+      if (!meets(t, window)) {
         continue;
       }
       for (int k = 0; k < 3; k++) {
@@ -69,125 +71,146 @@ final class Sampling {
           int v = mesh.vertex(t, k);
           numbers[value] = patch.addVertex(mesh.x(v), mesh.y(v), field.atCorner(t, k));
         }
+        active[3 * count + k] = numbers[value];
       }
-      parents[patch.triangles()] = t;
-      patch.addTriangle(
-          numbers[field.cornerValue(t, 0)],
-          numbers[field.cornerValue(t, 1)],
-          numbers[field.cornerValue(t, 2)]);
+      parents[count++] = t;
     }
   }
 
-  /** One pass; false if nothing had to be split. */
-  private boolean refine() {
-    int n = patch.triangles();
-    SideTable sides = new SideTable(2 * n);
-    int[] sideOf = new int[3 * n];
-    for (int t = 0; t < n; t++) {
-      for (int k = 0; k < 3; k++) {
-        sideOf[3 * t + k] = sides.id(patch.corner(t, (k + 1) % 3), patch.corner(t, (k + 2) % 3));
-      }
+  private boolean meets(int t, Box window) {
+    double x0 = mesh.x(mesh.vertex(t, 0));
+    double x1 = mesh.x(mesh.vertex(t, 1));
+    double x2 = mesh.x(mesh.vertex(t, 2));
+    if (x0 < window.x0() && x1 < window.x0() && x2 < window.x0()
+        || x0 > window.x1() && x1 > window.x1() && x2 > window.x1()) {
+      return false;
+    }
+    double y0 = mesh.y(mesh.vertex(t, 0));
+    double y1 = mesh.y(mesh.vertex(t, 1));
+    double y2 = mesh.y(mesh.vertex(t, 2));
+    return !(y0 < window.y0() && y1 < window.y0() && y2 < window.y0()
+        || y0 > window.y1() && y1 > window.y1() && y2 > window.y1());
+  }
+
+  /** Puts away the triangles that need no splitting, and splits the others. */
+  private void refine(int pass) {
+    SideTable sides = new SideTable(2 * count);
+    int[] sideOf = new int[3 * count];
+    for (int i = 0; i < 3 * count; i++) {
+      int from = i - i % 3;
+      sideOf[i] = sides.id(active[from + (i + 1) % 3], active[from + (i + 2) % 3]);
     }
     double[] middles = new double[sides.size()];
-    Arrays.fill(middles, Double.NaN);
     boolean[] split = new boolean[sides.size()];
-    boolean any = false;
-    for (int t = 0; t < n; t++) {
-      double slope = patch.slope(t);
-      for (int k = 0; k < 3; k++) {
-        int side = sideOf[3 * t + k];
-        if (Double.isNaN(middles[side])) {
-          middles[side] = middle(t, k);
-        }
-        if (!split[side] && bent(t, k, middles[side], slope)) {
-          split[side] = true;
-          any = true;
+    if (pass < MOST_PASSES) {
+      for (int i = 0; i < 3 * count; i++) {
+        if (!split[sideOf[i]]) {
+          look(i, pass == 0, sideOf[i], middles, split);
         }
       }
     }
-    if (any) {
-      split(sideOf, split, middles);
+    split(sideOf, split, middles);
+  }
+
+  /** Decides whether side k of an active triangle has to be halved; i is three times it plus k. */
+  private void look(int i, boolean first, int side, double[] middles, boolean[] split) {
+    int from = i - i % 3;
+    int a = active[from + (i + 1) % 3];
+    int b = active[from + (i + 2) % 3];
+    double dx = (patch.x(a) - patch.x(b)) * pointsPerM;
+    double dy = (patch.y(a) - patch.y(b)) * pointsPerM;
+    if (dx * dx + dy * dy < SHORT * SHORT) {
+      return;
     }
-    return any;
-  }
-
-  private boolean bent(int t, int k, double middle, double slope) {
-    int a = patch.corner(t, (k + 1) % 3);
-    int b = patch.corner(t, (k + 2) % 3);
-    double length = Math.hypot(patch.x(a) - patch.x(b), patch.y(a) - patch.y(b)) * pointsPerM;
+    int parent = parents[from / 3];
+    double middle;
+    if (first) {
+      middle = field.atMiddle(parent, i - from);
+    } else {
+      double x = (patch.x(a) + patch.x(b)) / 2;
+      double y = (patch.y(a) + patch.y(b)) / 2;
+      middle = field.in(parent, Barycentric.of(mesh, parent, x, y));
+    }
     double off = Math.abs(middle - (patch.value(a) + patch.value(b)) / 2);
-    return length > SHORT && off > SHARE_OF_STEP * step && off * pointsPerM > DISPLACEMENT * slope;
-  }
-
-  private double middle(int t, int k) {
-    int a = patch.corner(t, (k + 1) % 3);
-    int b = patch.corner(t, (k + 2) % 3);
-    double x = (patch.x(a) + patch.x(b)) / 2;
-    double y = (patch.y(a) + patch.y(b)) / 2;
-    int parent = parents[t];
-    return field.in(parent, Barycentric.of(mesh, parent, x, y));
+    if (off > leastOff
+        && off * pointsPerM
+            > DISPLACEMENT * patch.slope(active[from], active[from + 1], active[from + 2])) {
+      split[side] = true;
+      middles[side] = middle;
+    }
   }
 
   private void split(int[] sideOf, boolean[] split, double[] middles) {
-    LinearPatch old = patch;
-    int[] oldParents = parents;
-    int n = old.triangles();
-    patch = new LinearPatch(2 * old.vertices(), 4 * n);
-    parents = new int[4 * n];
-    for (int v = 0; v < old.vertices(); v++) {
-      patch.addVertex(old.x(v), old.y(v), old.value(v));
-    }
     int[] middleVertex = new int[split.length];
     Arrays.fill(middleVertex, -1);
+    int[] old = active;
+    int[] oldParents = parents;
+    int oldCount = count;
+    active = new int[12 * oldCount];
+    parents = new int[4 * oldCount];
+    count = 0;
     int[] m = new int[3];
-    for (int t = 0; t < n; t++) {
-      int from = patch.triangles();
+    for (int t = 0; t < oldCount; t++) {
+      int from = 3 * t;
+      int halved = 0;
       for (int k = 0; k < 3; k++) {
-        int side = sideOf[3 * t + k];
-        if (split[side] && middleVertex[side] < 0) {
-          int a = old.corner(t, (k + 1) % 3);
-          int b = old.corner(t, (k + 2) % 3);
-          middleVertex[side] =
-              patch.addVertex((old.x(a) + old.x(b)) / 2, (old.y(a) + old.y(b)) / 2, middles[side]);
+        int side = sideOf[from + k];
+        if (split[side]) {
+          halved++;
+          if (middleVertex[side] < 0) {
+            int a = old[from + (k + 1) % 3];
+            int b = old[from + (k + 2) % 3];
+            middleVertex[side] =
+                patch.addVertex(
+                    (patch.x(a) + patch.x(b)) / 2, (patch.y(a) + patch.y(b)) / 2, middles[side]);
+          }
         }
         m[k] = middleVertex[side];
       }
-      pieces(old, t, m);
-      Arrays.fill(parents, from, patch.triangles(), oldParents[t]);
+      if (halved == 0) {
+        patch.addTriangle(old[from], old[from + 1], old[from + 2]);
+      } else {
+        pieces(old, from, m, halved, oldParents[t]);
+      }
     }
   }
 
-  /** Adds the one to four pieces of a triangle; m[k] is the vertex on side k, or −1. */
-  private void pieces(LinearPatch old, int t, int[] m) {
-    int count = (m[0] >= 0 ? 1 : 0) + (m[1] >= 0 ? 1 : 0) + (m[2] >= 0 ? 1 : 0);
+  /** Makes the two to four pieces of a triangle active; m[k] is the vertex on side k, or −1. */
+  private void pieces(int[] old, int from, int[] m, int halved, int parent) {
     int k = 0;
-    if (count == 1) {
+    if (halved == 1) {
       k = m[0] >= 0 ? 0 : m[1] >= 0 ? 1 : 2;
-    } else if (count == 2) {
+    } else if (halved == 2) {
       k = m[0] < 0 ? 0 : m[1] < 0 ? 1 : 2;
     }
-    int apex = old.corner(t, k);
-    int a = old.corner(t, (k + 1) % 3);
-    int b = old.corner(t, (k + 2) % 3);
+    int apex = old[from + k];
+    int a = old[from + (k + 1) % 3];
+    int b = old[from + (k + 2) % 3];
     int onA = m[(k + 2) % 3];
     int onB = m[(k + 1) % 3];
-    switch (count) {
-      case 0 -> patch.addTriangle(apex, a, b);
+    switch (halved) {
       case 1 -> {
-        patch.addTriangle(apex, a, m[k]);
-        patch.addTriangle(apex, m[k], b);
+        activate(apex, a, m[k], parent);
+        activate(apex, m[k], b, parent);
       }
       case 2 -> {
-        patch.addTriangle(apex, onA, onB);
-        patch.addTriangle(onA, a, b);
-        patch.addTriangle(onA, b, onB);
+        activate(apex, onA, onB, parent);
+        activate(onA, a, b, parent);
+        activate(onA, b, onB, parent);
       }
       default -> {
-        patch.addTriangle(apex, onA, onB);
-        patch.addTriangle(onA, a, m[k]);
-        patch.addTriangle(onB, m[k], b);
-        patch.addTriangle(m[k], onB, onA);
+        activate(apex, onA, onB, parent);
+        activate(onA, a, m[k], parent);
+        activate(onB, m[k], b, parent);
+        activate(m[k], onB, onA, parent);
       }
     }
+  }
+
+  private void activate(int a, int b, int c, int parent) {
+    active[3 * count] = a;
+    active[3 * count + 1] = b;
+    active[3 * count + 2] = c;
+    parents[count++] = parent;
   }
 }

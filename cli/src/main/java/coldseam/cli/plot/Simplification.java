@@ -40,7 +40,9 @@ final class Simplification {
     int far = from;
     double most = -1;
     for (int i = 0; i < line.size(); i++) {
-      double d = Math.hypot(line.x(i) - line.x(from), line.y(i) - line.y(from));
+      double dx = line.x(i) - line.x(from);
+      double dy = line.y(i) - line.y(from);
+      double d = dx * dx + dy * dy;
       if (d > most) {
         most = d;
         far = i;
@@ -59,19 +61,7 @@ final class Simplification {
     while (top > 0) {
       int b = stack[--top];
       int a = stack[--top];
-      double ax = line.x(a);
-      double ay = line.y(a);
-      double bx = line.x(b % n);
-      double by = line.y(b % n);
-      int worst = -1;
-      double most = tolerance;
-      for (int i = a + 1; i < b; i++) {
-        double d = distance(line.x(i), line.y(i), ax, ay, bx, by);
-        if (d > most) {
-          most = d;
-          worst = i;
-        }
-      }
+      int worst = farthest(line, a, b, tolerance);
       if (worst >= 0) {
         kept.set(worst);
         stack[top++] = a;
@@ -82,12 +72,30 @@ final class Simplification {
     }
   }
 
-  private static double distance(double x, double y, double ax, double ay, double bx, double by) {
-    double dx = bx - ax;
-    double dy = by - ay;
+  /** The point between two that lies farthest from the line through them, or −1 if none does. */
+  private static int farthest(Polyline line, int a, int b, double tolerance) {
+    double ax = line.x(a);
+    double ay = line.y(a);
+    double dx = line.x(b % line.size()) - ax;
+    double dy = line.y(b % line.size()) - ay;
     double squared = dx * dx + dy * dy;
-    double t = squared == 0 ? 0 : ((x - ax) * dx + (y - ay) * dy) / squared;
-    t = Math.max(0, Math.min(1, t));
-    return Math.hypot(x - ax - t * dx, y - ay - t * dy);
+    double most = tolerance * tolerance;
+    int worst = -1;
+    for (int i = a + 1; i < b; i++) {
+      double px = line.x(i) - ax;
+      double py = line.y(i) - ay;
+      double t = px * dx + py * dy;
+      if (t > 0 && squared > 0) {
+        double part = t < squared ? t / squared : 1;
+        px -= part * dx;
+        py -= part * dy;
+      }
+      double d = px * px + py * py;
+      if (d > most) {
+        most = d;
+        worst = i;
+      }
+    }
+    return worst;
   }
 }

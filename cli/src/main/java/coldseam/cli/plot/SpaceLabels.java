@@ -61,7 +61,7 @@ final class SpaceLabels {
   private void writeWithLeader(List<Polyline> seen, List<String> lines) {
     Box size = Plates.size(lines, Lettering.STRONG);
     for (Polyline surface : seen) {
-      double[] at = at(surface, surface.length() / 2);
+      double[] at = surface.at(surface.length() / 2);
       double x = at[0] + OFF * at[2];
       double y = at[1] + OFF * at[3];
       Optional<Box> place =
@@ -92,7 +92,7 @@ final class SpaceLabels {
   private Optional<Box> place(int space, List<Polyline> seen, double width, double height) {
     int label = section.labelOfSpace(space);
     for (int face : section.largestFirst(label)) {
-      Optional<Box> inside = ground.within(owner -> owner == face, width, height);
+      Optional<Box> inside = ground.within(face, section.bounds(face, panel), width, height);
       if (inside.isPresent()) {
         return inside;
       }
@@ -111,7 +111,7 @@ final class SpaceLabels {
     double length = surface.length();
     for (double away = 10; away < 90; away += 6) {
       for (double part : new double[] {0.5, 0.35, 0.65, 0.2, 0.8, 0.08, 0.92}) {
-        double[] at = at(surface, part * length);
+        double[] at = surface.at(part * length);
         double reach = away + Math.abs(at[2]) * width / 2 + Math.abs(at[3]) * height / 2;
         Box box = Box.around(at[0] + at[2] * reach, at[1] + at[3] * reach, width, height);
         if (ground.free(box, accepted)) {
@@ -120,22 +120,5 @@ final class SpaceLabels {
       }
     }
     return Optional.empty();
-  }
-
-  /** The point a distance along a line on the sheet, and the unit vector to its right there. */
-  static double[] at(Polyline line, double distance) {
-    double left = distance;
-    for (int i = 0; i < line.pieces(); i++) {
-      int j = line.after(i);
-      double dx = line.x(j) - line.x(i);
-      double dy = line.y(j) - line.y(i);
-      double length = Math.hypot(dx, dy);
-      if (length > 0 && (left <= length || i == line.pieces() - 1)) {
-        double t = Math.min(1, left / length);
-        return new double[] {line.x(i) + t * dx, line.y(i) + t * dy, -dy / length, dx / length};
-      }
-      left -= length;
-    }
-    return new double[] {line.x(0), line.y(0), 0, 0};
   }
 }

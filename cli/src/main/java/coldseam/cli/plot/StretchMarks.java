@@ -62,7 +62,7 @@ final class StretchMarks {
       Canvas canvas, Ground ground, Polyline line, IntPredicate open, String text) {
     Box size = Plates.size(List.of(text), Lettering.QUIET);
     for (double part : new double[] {0.5, 0.2, 0.8}) {
-      double[] at = SpaceLabels.at(line, part * line.length());
+      double[] at = line.at(part * line.length());
       double x = at[0] + AWAY * at[2];
       double y = at[1] + AWAY * at[3];
       Optional<Box> place = ground.near(x, y, size.width(), size.height(), 8, 150, open);
@@ -83,19 +83,19 @@ final class StretchMarks {
       return;
     }
     double at = 0;
-    double[] start = SpaceLabels.at(line, 0.5);
+    double[] start = line.at(0.5);
     path.moveTo(start[0] + FOOT * start[2], start[1] + FOOT * start[3]);
     for (int i = 0; i < line.pieces(); i++) {
       int j = line.after(i);
       double piece = Math.hypot(line.x(j) - line.x(i), line.y(j) - line.y(i));
       double inset = Math.min(0.5, piece / 4);
-      double[] from = SpaceLabels.at(line, at + inset);
-      double[] to = SpaceLabels.at(line, at + piece - inset);
+      double[] from = line.at(at + inset);
+      double[] to = line.at(at + piece - inset);
       path.lineTo(from[0] + AWAY * from[2], from[1] + AWAY * from[3]);
       path.lineTo(to[0] + AWAY * to[2], to[1] + AWAY * to[3]);
       at += piece;
     }
-    double[] end = SpaceLabels.at(line, length - 0.5);
+    double[] end = line.at(length - 0.5);
     path.lineTo(end[0] + FOOT * end[2], end[1] + FOOT * end[3]);
   }
 }

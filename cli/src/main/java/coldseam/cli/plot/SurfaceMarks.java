@@ -68,7 +68,7 @@ final class SurfaceMarks {
     double length = line.length();
     int n = (int) Math.max(1, Math.round(length / pitch));
     for (int i = 0; i < n; i++) {
-      double[] at = SpaceLabels.at(line, (i + 0.5) * length / n);
+      double[] at = line.at((i + 0.5) * length / n);
       double along = slant;
       path.moveTo(at[0], at[1]);
       path.lineTo(at[0] + LENGTH * at[2] + along * at[3], at[1] + LENGTH * at[3] - along * at[2]);
@@ -94,7 +94,7 @@ final class SurfaceMarks {
     double length = line.length();
     int n = (int) Math.max(1, Math.round(length / 14));
     for (int i = 0; i < n; i++) {
-      double[] at = SpaceLabels.at(line, (i + 0.5) * length / n);
+      double[] at = line.at((i + 0.5) * length / n);
       double tx = at[3];
       double ty = -at[2];
       path.moveTo(at[0] + 9 * at[2], at[1] + 9 * at[3]);
@@ -112,7 +112,7 @@ final class SurfaceMarks {
         double length = line.length();
         int n = (int) Math.max(1, Math.round(length / 3));
         for (int i = 0; i < n; i++) {
-          double[] at = SpaceLabels.at(line, (i + 0.5) * length / n);
+          double[] at = line.at((i + 0.5) * length / n);
           ground.keepClear(Box.around(at[0] + 3 * at[2], at[1] + 3 * at[3], 3, 3));
         }
       }

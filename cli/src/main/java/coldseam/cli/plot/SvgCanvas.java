@@ -1,12 +1,15 @@
 package coldseam.cli.plot;
 
 import java.awt.Dimension;
+import java.awt.Shape;
+import java.awt.geom.PathIterator;
 import java.util.ArrayList;
 import java.util.List;
 import javax.xml.parsers.DocumentBuilderFactory;
 import javax.xml.parsers.ParserConfigurationException;
 import org.apache.batik.svggen.SVGGeneratorContext;
 import org.apache.batik.svggen.SVGGraphics2D;
+import org.apache.batik.svggen.SVGShape;
 import org.w3c.dom.Document;
 import org.w3c.dom.Element;
 import org.w3c.dom.Node;
@@ -17,6 +20,26 @@ final class SvgCanvas extends Canvas {
   static final String SVG = "http://www.w3.org/2000/svg";
 
   private static final int DECIMALS = 2;
+
+  /** Batik's graphics, writing shapes as {@link PathText} does. */
+  private static final class Shapes extends SVGGraphics2D {
+    Shapes(SVGGeneratorContext context) {
+      super(context, false);
+      shapeConverter =
+          new SVGShape(context) {
+            @Override
+            public Element toSVG(Shape shape) {
+              Element path = context.getDOMFactory().createElementNS(SVG, "path");
+              PathIterator pieces = shape.getPathIterator(null);
+              if (pieces.getWindingRule() == PathIterator.WIND_EVEN_ODD) {
+                path.setAttribute("fill-rule", "evenodd");
+              }
+              path.setAttribute("d", PathText.of(pieces));
+              return path;
+            }
+          };
+    }
+  }
 
   private final SVGGraphics2D graphics;
   private final Document document;
@@ -52,7 +75,7 @@ final class SvgCanvas extends Canvas {
     SVGGeneratorContext context = SVGGeneratorContext.createDefault(document);
     context.setPrecision(DECIMALS);
     context.setComment(null);
-    return new SvgCanvas(new SVGGraphics2D(context, false), document, name);
+    return new SvgCanvas(new Shapes(context), document, name);
   }
 
   @Override

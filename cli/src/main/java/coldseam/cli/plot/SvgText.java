@@ -25,7 +25,11 @@ final class SvgText {
       Node attribute = attributes.item(i);
       if (!attribute.getNodeName().startsWith("xmlns")) {
         out.append(' ').append(attribute.getNodeName()).append("=\"");
-        escape(attribute.getNodeValue(), out);
+        if (attribute.getNodeName().equals("d")) {
+          out.append(attribute.getNodeValue());
+        } else {
+          escape(attribute.getNodeValue(), out);
+        }
         out.append('"');
       }
     }

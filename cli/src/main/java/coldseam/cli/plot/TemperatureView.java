@@ -9,8 +9,8 @@ import coldseam.solver.detail.FilmSet;
 import coldseam.solver.detail.Space;
 import coldseam.solver.result.Result;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
-import java.util.Locale;
 import java.util.Optional;
 import java.util.function.IntPredicate;
 
@@ -124,22 +124,26 @@ final class TemperatureView extends View {
 
   @Override
   void paint(Canvas canvas, Panel panel, Optional<Panel> zoom) {
-    double stepK = figures().differenceK(step);
-    Contours contours =
-        Contours.of(
-            Sampling.of(new NodalTemperature(field), panel.window(), panel.pointsPerM(), stepK));
+    double[] traced = traced();
+    LinearPatch patch =
+        Sampling.of(
+            new NodalTemperature(field),
+            panel.window(),
+            panel.pointsPerM(),
+            figures().differenceK(step));
+    Bands bands = new Bands(Contours.of(patch, traced), panel);
     canvas.layer(panel.name() + "-bands");
-    Bands bands = new Bands(contours, panel);
-    bands.fill(canvas, Double.NEGATIVE_INFINITY, Palette.temperature(part(0)));
+    bands.fillAll(canvas, Palette.temperature(part(0)));
     for (int k = 0; k < levels.size(); k++) {
-      bands.fill(canvas, figures().celsius(levels.get(k)), Palette.temperature(part(k + 1)));
+      bands.fill(canvas, index(traced, levelC(k)), Palette.temperature(part(k + 1)));
     }
     SectionLines lines = new SectionLines(section(), panel);
     lines.joints(canvas, Palette.mix(Palette.INK, Palette.PAPER, 0.25), Pen.HAIR);
     List<List<Polyline>> isotherms = new ArrayList<>();
-    for (double level : levels) {
-      canvas.layer(panel.name() + "-isotherm_" + String.format(Locale.ROOT, "%.6g", level));
-      List<Polyline> drawn = bands.lines(figures().celsius(level));
+    for (int k = 0; k < levels.size(); k++) {
+      double level = levels.get(k);
+      canvas.layer(panel.name() + "-isotherm_" + Digits.shortest(level, 6).replace('−', '-'));
+      List<Polyline> drawn = bands.lines(index(traced, levelC(k)));
       isotherms.add(drawn);
       canvas.stroke(Polyline.path(drawn), Palette.INK, index(level) ? INDEX_ISOTHERM : ISOTHERM);
     }
@@ -147,7 +151,7 @@ final class TemperatureView extends View {
     List<List<Polyline>> heavy = new ArrayList<>();
     for (Critical c : critical) {
       canvas.layer(panel.name() + "-" + c.id());
-      List<Polyline> drawn = bands.lines(c.temperatureC());
+      List<Polyline> drawn = bands.lines(index(traced, c.temperatureC()));
       heavy.add(drawn);
       canvas.stroke(Polyline.path(drawn), Palette.PAPER, CASING);
       canvas.stroke(Polyline.path(drawn), Palette.INK, c.pen());
@@ -160,6 +164,27 @@ final class TemperatureView extends View {
     points(canvas, panel, ground, elsewhere);
     elsewhere.ifPresent(ground::take);
     label(canvas, panel, ground, isotherms, heavy, zoom);
+  }
+
+  /** Every temperature at which something is traced, ascending, °C. */
+  private double[] traced() {
+    double[] all = new double[levels.size() + critical.size()];
+    for (int k = 0; k < levels.size(); k++) {
+      all[k] = levelC(k);
+    }
+    for (int i = 0; i < critical.size(); i++) {
+      all[levels.size() + i] = critical.get(i).temperatureC();
+    }
+    Arrays.sort(all);
+    return all;
+  }
+
+  private double levelC(int k) {
+    return figures().celsius(levels.get(k));
+  }
+
+  private static int index(double[] traced, double temperatureC) {
+    return Arrays.binarySearch(traced, temperatureC);
   }
 
   private double part(int band) {
@@ -178,27 +203,22 @@ final class TemperatureView extends View {
       List<List<Polyline>> heavy,
       Optional<Panel> zoom) {
     canvas.layer(panel.name() + "-isotherm-labels");
+    LineLabels lone = new LineLabels(canvas, ground, (x, y) -> Double.POSITIVE_INFINITY);
     for (int i = 0; i < critical.size(); i++) {
       Critical c = critical.get(i);
       String text = c.name() + " " + figures().temperature(c.temperatureC(), 1);
-      boolean written =
-          LineLabels.write(
-              canvas, ground, heavy.get(i), text, Lettering.SMALL_STRONG, (x, y) -> 24, 0);
-      if (!written && zoom.isEmpty()) {
+      if (!lone.write(heavy.get(i), text, Lettering.SMALL_STRONG, 0) && zoom.isEmpty()) {
         beside(canvas, ground, heavy.get(i), text);
       }
     }
-    LineLabels.Spacing spacing = (x, y) -> spacing(panel, x, y);
+    LineLabels labels = new LineLabels(canvas, ground, (x, y) -> spacing(panel, x, y));
     for (boolean first : new boolean[] {true, false}) {
       for (int i = 0; i < levels.size(); i++) {
         if (index(levels.get(i)) == first) {
-          LineLabels.write(
-              canvas,
-              ground,
+          labels.write(
               isotherms.get(i),
               Digits.shortest(levels.get(i), 6),
               first ? Lettering.SMALL_STRONG : Lettering.SMALL,
-              spacing,
               first ? 0 : CROWDED);
         }
       }
@@ -216,7 +236,7 @@ final class TemperatureView extends View {
     if (longest == null) {
       return;
     }
-    double[] at = SpaceLabels.at(longest, longest.length() / 2);
+    double[] at = longest.at(longest.length() / 2);
     Box size = Plates.size(List.of(text), Lettering.SMALL_STRONG);
     PointMarks.place(ground, size, at[0], at[1], 14, 120, SectionLines.open(section()))
         .ifPresent(
