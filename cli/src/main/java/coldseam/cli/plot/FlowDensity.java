@@ -166,26 +166,30 @@ final class FlowDensity implements Nodal {
   }
 
   /**
-   * The density that is reached on all but a share of the area.
+   * The density that is reached on all but a share of the section.
    *
-   * @param share of the area with less
+   * @param share of the section with less
+   * @param power of the density that areas are weighted with: with 0 an area counts as it is, with
+   *     2 places of much flow count however small they are
    * @return W/m²
    */
-  double quantile(double share) {
+  double quantile(double share, int power) {
     int n = mesh.triangleCount();
     double[] means = new double[n];
+    double[] weights = new double[n];
     double total = 0;
     Integer[] sorted = new Integer[n];
     for (int t = 0; t < n; t++) {
       means[t] = (atCorner(t, 0) + atCorner(t, 1) + atCorner(t, 2)) / 3;
-      total += mesh.area(t);
+      weights[t] = mesh.area(t) * Math.pow(10, power * means[t]);
+      total += weights[t];
       sorted[t] = t;
     }
     Arrays.sort(sorted, (a, b) -> Double.compare(means[a], means[b]));
     double sum = 0;
     double found = n == 0 ? 0 : means[sorted[n - 1]];
     for (int i = 0; i < n && sum < share * total; i++) {
-      sum += mesh.area(sorted[i]);
+      sum += weights[sorted[i]];
       found = means[sorted[i]];
     }
     return Math.pow(10, found);

@@ -283,8 +283,8 @@ final class Ground {
   }
 
   /**
-   * Whether a leader from the middle of a box to a point crosses nothing written, and not much but
-   * accepted owners.
+   * Whether a leader from the middle of a box to a point crosses nothing written but at the point,
+   * and not much but accepted owners.
    */
   private boolean clear(Box box, double x, double y, IntPredicate accepted) {
     int[] last = {-1};
@@ -293,13 +293,20 @@ final class Ground {
     walk(
         Polyline.of(box.midX(), box.midY(), x, y),
         square -> {
-          crossed[0] |= taken[square] == WRITTEN;
+          crossed[0] |= taken[square] == WRITTEN && far(square, x, y);
           if (square != last[0] && !accepted.test(owners[square])) {
             strange[0]++;
           }
           last[0] = square;
         });
     return !crossed[0] && strange[0] <= MOST_STRANGE;
+  }
+
+  /** Whether a square is not the one at a point, nor next to it. */
+  private boolean far(int square, double x, double y) {
+    double dx = frame.x0() + (square % columns + 0.5) * SQUARE - x;
+    double dy = frame.y0() + (square / columns + 0.5) * SQUARE - y;
+    return Math.max(Math.abs(dx), Math.abs(dy)) > 2 * SQUARE;
   }
 
   /**

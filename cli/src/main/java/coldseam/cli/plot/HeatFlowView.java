@@ -12,8 +12,13 @@ import java.util.Optional;
 /** Heat flow: its density in filled bands, its direction, what passes through each space. */
 final class HeatFlowView extends View {
   private static final int MOST_LEVELS = 10;
+
+  /** Part of the area with less than the lowest band begins with. */
   private static final double LITTLE = 0.02;
-  private static final double MUCH = 0.998;
+
+  /** Part of the squared flow that the highest band leaves below it. */
+  private static final double MUCH = 0.9;
+
   private static final double GRID = 26;
   private static final double SHORTEST = 7;
   private static final double LONGEST = 21;
@@ -21,8 +26,11 @@ final class HeatFlowView extends View {
   /** Decimal orders of density beyond the levels over which arrows still shrink and grow. */
   private static final double ORDERS = 0.4;
 
-  /** How much the sampled logarithm of the density may be off where it decides between bands. */
+  /** Decimal orders between two levels, about. */
   private static final double STEP = 0.3;
+
+  /** How far the rim of a band may be drawn from its place, points. */
+  private static final double DISPLACEMENT = 0.5;
 
   private final FlowDensity density;
   private final List<Double> levels;
@@ -31,8 +39,8 @@ final class HeatFlowView extends View {
     super(result, caption, section);
     Solution solution = result.heatLoss();
     density = new FlowDensity(solution.temperatures(temperaturesC()), solution.conditions());
-    double little = figures().scaledDensity(density.quantile(LITTLE));
-    double much = figures().scaledDensity(density.quantile(MUCH));
+    double little = figures().scaledDensity(density.quantile(LITTLE, 0));
+    double much = figures().scaledDensity(density.quantile(MUCH, 2));
     List<Double> series = Levels.series(little, Math.max(much, 2 * little));
     levels = series.subList(Math.max(0, series.size() - MOST_LEVELS), series.size());
   }
@@ -99,7 +107,8 @@ final class HeatFlowView extends View {
     for (int k = 0; k < traced.length; k++) {
       traced[k] = Math.log10(figures().densityWPerM2(levels.get(k)));
     }
-    LinearPatch patch = Sampling.of(density, panel.window(), panel.pointsPerM(), STEP);
+    LinearPatch patch =
+        Sampling.of(density, panel.window(), panel.pointsPerM(), STEP, DISPLACEMENT);
     Bands bands = new Bands(Contours.of(patch, traced), panel);
     canvas.layer(panel.name() + "-bands");
     bands.fillAll(canvas, Palette.flow(part(0)));

@@ -2,7 +2,9 @@ package coldseam.cli.plot;
 
 import coldseam.cli.plot.Canvas.Anchor;
 import java.util.ArrayList;
+import java.util.HashMap;
 import java.util.List;
+import java.util.Map;
 
 /** The key of a plot: headings, samples with words, rows of figures; flows into columns. */
 final class Key {
@@ -42,6 +44,7 @@ final class Key {
   record Column(double x, double y, double width, double height) {}
 
   private final List<Row> rows = new ArrayList<>();
+  private final Map<Double, double[]> heights = new HashMap<>();
 
   void heading(String words) {
     rows.add(new Row(true, null, words, "", 0));
@@ -66,18 +69,19 @@ final class Key {
   /** How high the rows are in columns of a width, all under each other. */
   double height(double width) {
     double sum = 0;
-    for (Row row : rows) {
-      sum += height(row, width);
+    for (double height : heights(width)) {
+      sum += height;
     }
     return sum;
   }
 
   /** How many rows, from one on, fit into a height; a heading never ends a column. */
   private int fitting(int from, double width, double height) {
+    double[] heights = heights(width);
     double sum = 0;
     int fit = from;
     for (int i = from; i < rows.size(); i++) {
-      sum += height(rows.get(i), width) - (i == from && rows.get(i).heading() ? HEADING_GAP : 0);
+      sum += heights[i] - (i == from && rows.get(i).heading() ? HEADING_GAP : 0);
       if (sum > height) {
         break;
       }
@@ -112,7 +116,7 @@ final class Key {
     int from = fitting(0, firstWidth, firstHeight);
     double height = 0;
     for (int i = from; i < rows.size(); i++) {
-      height = Math.max(height, height(rows.get(i), width));
+      height = Math.max(height, heights(width)[i]);
     }
     while (!fits(from, width, height, columns)) {
       height += 4;
@@ -139,7 +143,7 @@ final class Key {
           y -= HEADING_GAP;
         }
         draw(canvas, row, column.x(), y, column.width());
-        y += height(row, column.width());
+        y += heights(column.width())[i];
       }
       at = end;
     }
@@ -152,6 +156,12 @@ final class Key {
   private static double wordsWidth(Row row, double width) {
     double value = row.value().isEmpty() ? 0 : TextWidths.of(row.value(), Lettering.SMALL) + 8;
     return width - (row.sample() == null ? 0 : SAMPLE) - value;
+  }
+
+  /** Heights of all rows in a column of a width. */
+  private double[] heights(double width) {
+    return heights.computeIfAbsent(
+        width, w -> rows.stream().mapToDouble(row -> height(row, w)).toArray());
   }
 
   private static double height(Row row, double width) {

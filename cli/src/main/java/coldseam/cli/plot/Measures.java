@@ -11,6 +11,10 @@ import java.util.function.IntPredicate;
 final class Measures {
   private static final double TIER = 16;
   private static final int TIERS = 9;
+
+  /** How much of a line may be blocked rather than lie one tier farther away. */
+  private static final double AWAY = 0.02;
+
   private static final double TICK = 3.2;
   private static final double EXTENSION_GAP = 4;
   private static final double BEYOND = 3.5;
@@ -125,7 +129,7 @@ final class Measures {
     int[] sides = right == 0 ? openSides(line, ux, uy) : new int[] {right};
     double best = Double.POSITIVE_INFINITY;
     double found = nearest * sides[0];
-    for (int tier = 0; tier < TIERS; tier++) {
+    for (int tier = 0; tier < TIERS && best > AWAY * tier; tier++) {
       for (int side : sides) {
         double offset = side * (nearest + tier * TIER);
         double blocked = 0;
@@ -140,7 +144,7 @@ final class Measures {
                       line.y(1) + off * ux),
                   open);
         }
-        double score = blocked + 0.02 * tier;
+        double score = blocked + AWAY * tier;
         if (score < best) {
           best = score;
           found = offset;

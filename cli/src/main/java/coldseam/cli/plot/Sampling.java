@@ -11,9 +11,6 @@ import java.util.Arrays;
  * a new side are done.
  */
 final class Sampling {
-  /** How far a line may be drawn from its place, points. */
-  private static final double DISPLACEMENT = 0.15;
-
   /** How wrong the value on a drawn line may be, as a share of the step between two. */
   private static final double SHARE_OF_STEP = 0.004;
 
@@ -25,16 +22,18 @@ final class Sampling {
   private final Nodal field;
   private final Mesh mesh;
   private final double pointsPerM;
+  private final double displacement;
   private final double leastOff;
   private final LinearPatch patch;
   private int[] active;
   private int[] parents;
   private int count;
 
-  private Sampling(Nodal field, double pointsPerM, double step) {
+  private Sampling(Nodal field, double pointsPerM, double step, double displacement) {
     this.field = field;
     this.mesh = field.mesh();
     this.pointsPerM = pointsPerM;
+    this.displacement = displacement;
     leastOff = SHARE_OF_STEP * step;
     patch = new LinearPatch(mesh.vertexCount() * 2, mesh.triangleCount() * 2);
   }
@@ -46,9 +45,11 @@ final class Sampling {
    * @param window triangles outside it are left out, m
    * @param pointsPerM scale of the picture
    * @param step between two lines
+   * @param displacement how far a line may be drawn from its place, points
    */
-  static LinearPatch of(Nodal field, Box window, double pointsPerM, double step) {
-    Sampling sampling = new Sampling(field, pointsPerM, step);
+  static LinearPatch of(
+      Nodal field, Box window, double pointsPerM, double step, double displacement) {
+    Sampling sampling = new Sampling(field, pointsPerM, step, displacement);
     sampling.start(window);
     for (int pass = 0; sampling.count > 0; pass++) {
       sampling.refine(pass);
@@ -134,7 +135,7 @@ final class Sampling {
     double off = Math.abs(middle - (patch.value(a) + patch.value(b)) / 2);
     if (off > leastOff
         && off * pointsPerM
-            > DISPLACEMENT * patch.slope(active[from], active[from + 1], active[from + 2])) {
+            > displacement * patch.slope(active[from], active[from + 1], active[from + 2])) {
       split[side] = true;
       middles[side] = middle;
     }

@@ -102,12 +102,12 @@ final class SectionLines {
     }
   }
 
-  /** Takes the ends of the cut-off planes, which reach beyond the section. */
-  void take(Ground ground) {
+  /** Keeps labels off the ends of the cut-off planes, which reach beyond the section. */
+  void keepClear(Ground ground) {
     for (DrawnSection.CutOff cutOff : section.cutOffs()) {
       Polyline line = cutOff.line().on(panel);
       for (int end = 0; end < 2; end++) {
-        ground.take(Box.around(line.x(end), line.y(end), 2 * BEYOND, 2 * BEYOND));
+        ground.keepClear(Box.around(line.x(end), line.y(end), BEYOND, BEYOND));
       }
     }
   }

@@ -6,7 +6,9 @@ import java.awt.Color;
 import java.awt.geom.Path2D;
 import java.util.HashSet;
 import java.util.List;
+import java.util.Optional;
 import java.util.Set;
+import java.util.function.IntPredicate;
 
 /** Fringes that tell films, fixed temperatures and given flows along the surfaces, with values. */
 final class SurfaceMarks {
@@ -135,19 +137,34 @@ final class SurfaceMarks {
                 if (said.contains(surface.space() + text) || line.length() < 12) {
                   continue;
                 }
-                double width = TextWidths.of(text, Lettering.SMALL) + 2;
-                labels
-                    .beside(line, width, Lettering.SMALL.size() * 1.15, SectionLines.open(section))
-                    .ifPresent(
-                        box -> {
-                          said.add(surface.space() + text);
-                          ground.take(box);
-                          Color ink = ink(surface);
-                          Plates.unplated(
-                              canvas, List.of(text), box, Lettering.SMALL.in(ink), Lettering.SMALL);
-                        });
+                if (value(canvas, ground, labels, line, text, ink(surface))) {
+                  said.add(surface.space() + text);
+                }
               }
             });
+  }
+
+  /** Writes a value beside its surface, or with a leader where there is more room. */
+  private boolean value(
+      Canvas canvas, Ground ground, SpaceLabels labels, Polyline line, String text, Color ink) {
+    Lettering lettering = Lettering.SMALL.in(ink);
+    double width = TextWidths.of(text, lettering) + 2;
+    double height = lettering.size() * 1.15;
+    IntPredicate open = SectionLines.open(section);
+    double[] at = line.at(line.length() / 2);
+    double x = at[0] + LENGTH * at[2];
+    double y = at[1] + LENGTH * at[3];
+    Optional<Box> place = labels.beside(line, width, height, open);
+    if (place.isEmpty()) {
+      place = ground.near(x, y, width, height, 8, 150, open);
+      place.ifPresent(box -> Plates.leader(canvas, box, x, y));
+    }
+    place.ifPresent(
+        box -> {
+          ground.take(box);
+          Plates.unplated(canvas, List.of(text), box, lettering, lettering);
+        });
+    return place.isPresent();
   }
 
   private Color ink(DrawnSection.Surface surface) {

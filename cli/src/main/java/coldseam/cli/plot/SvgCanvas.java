@@ -3,12 +3,20 @@ package coldseam.cli.plot;
 import java.awt.Dimension;
 import java.awt.Shape;
 import java.awt.geom.PathIterator;
+import java.text.DecimalFormat;
+import java.text.DecimalFormatSymbols;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
 import javax.xml.parsers.DocumentBuilderFactory;
 import javax.xml.parsers.ParserConfigurationException;
+import org.apache.batik.svggen.DefaultErrorHandler;
+import org.apache.batik.svggen.DefaultExtensionHandler;
+import org.apache.batik.svggen.DefaultStyleHandler;
+import org.apache.batik.svggen.ImageHandlerBase64Encoder;
 import org.apache.batik.svggen.SVGGeneratorContext;
 import org.apache.batik.svggen.SVGGraphics2D;
+import org.apache.batik.svggen.SVGIDGenerator;
 import org.apache.batik.svggen.SVGShape;
 import org.w3c.dom.Document;
 import org.w3c.dom.Element;
@@ -19,7 +27,19 @@ import org.w3c.dom.NodeList;
 final class SvgCanvas extends Canvas {
   static final String SVG = "http://www.w3.org/2000/svg";
 
-  private static final int DECIMALS = 2;
+  /** Batik's settings, with a number format of its own: the common one is for one thread only. */
+  private static final class Context extends SVGGeneratorContext {
+    Context(Document document) {
+      super(document);
+      setIDGenerator(new SVGIDGenerator());
+      setExtensionHandler(new DefaultExtensionHandler());
+      setImageHandler(new ImageHandlerBase64Encoder());
+      setStyleHandler(new DefaultStyleHandler());
+      setErrorHandler(new DefaultErrorHandler());
+      setComment(null);
+      decimalFormat = new DecimalFormat("0.##", DecimalFormatSymbols.getInstance(Locale.ROOT));
+    }
+  }
 
   /** Batik's graphics, writing shapes as {@link PathText} does. */
   private static final class Shapes extends SVGGraphics2D {
@@ -65,17 +85,14 @@ final class SvgCanvas extends Canvas {
     Document document;
     try {
       document =
-          DocumentBuilderFactory.newInstance()
+          DocumentBuilderFactory.newDefaultInstance()
               .newDocumentBuilder()
               .getDOMImplementation()
               .createDocument(SVG, "svg", null);
     } catch (ParserConfigurationException e) {
       throw new IllegalStateException("this Java has no XML document builder", e);
     }
-    SVGGeneratorContext context = SVGGeneratorContext.createDefault(document);
-    context.setPrecision(DECIMALS);
-    context.setComment(null);
-    return new SvgCanvas(new Shapes(context), document, name);
+    return new SvgCanvas(new Shapes(new Context(document)), document, name);
   }
 
   @Override

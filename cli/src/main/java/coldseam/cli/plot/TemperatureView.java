@@ -31,6 +31,9 @@ final class TemperatureView extends View {
 
   private static final int LONG_NAME = 4;
 
+  /** How far an isotherm may be drawn from its place, points. */
+  private static final double DISPLACEMENT = 0.15;
+
   private final Solution solution;
   private final TemperatureField field;
   private final double step;
@@ -130,7 +133,8 @@ final class TemperatureView extends View {
             new NodalTemperature(field),
             panel.window(),
             panel.pointsPerM(),
-            figures().differenceK(step));
+            figures().differenceK(step),
+            DISPLACEMENT);
     Bands bands = new Bands(Contours.of(patch, traced), panel);
     canvas.layer(panel.name() + "-bands");
     bands.fillAll(canvas, Palette.temperature(part(0)));

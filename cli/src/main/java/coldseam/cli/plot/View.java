@@ -157,7 +157,7 @@ abstract class View {
 
   /** Labels, the scale and the direction that every frame has, and what is kept clear of labels. */
   final void frame(Canvas canvas, Panel panel, Ground ground, Optional<Panel> zoom) {
-    new SectionLines(section, panel).take(ground);
+    new SectionLines(section, panel).keepClear(ground);
     zoom.ifPresent(z -> Zoom.keepClear(ground, panel, z));
     if (panel.name().equals(Panel.ZOOM)) {
       ground.take(Zoom.words(panel));
