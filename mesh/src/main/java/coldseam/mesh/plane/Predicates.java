@@ -8,7 +8,7 @@ package coldseam.mesh.plane;
  * evaluated exactly. Bounds and expansion arithmetic: J. R. Shewchuk, "Adaptive precision
  * floating-point arithmetic and fast robust geometric predicates", Discrete and Computational
  * Geometry 18 (1997), sections 2, 4.2 and 4.3. Exact as long as no product under- or overflows:
- * coordinates of 0 or between 1e-70 and 1e70 in magnitude are safe.
+ * coordinates of 0 or between 1e-50 and 1e50 in magnitude are safe.
  */
 public final class Predicates {
   /** Half the spacing of doubles just above 1. */

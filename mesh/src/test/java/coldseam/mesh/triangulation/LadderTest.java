@@ -21,6 +21,27 @@ class LadderTest {
     assertThat(areaOf(mesh, SHEET)).isCloseTo(1.2e-4, within(1e-9 * 1.2e-4));
   }
 
+  /** Vertices on the two sides of a foil pair up, so that its triangles are right-angled. */
+  @ParameterizedTest
+  @ValueSource(doubles = {0, 17, 90, 133})
+  void rungsAreSquareToTheFoil(double degrees) {
+    Drawing drawing = wall(degrees).strip(SHEET, 0.1, 80, 0, 80, 1200);
+    Mesh mesh = check(drawing.box(3, 80.05, 333, 300, 555).box(4, -20, 700, 79.95, 711), 300);
+    int count = 0;
+    for (int t = 0; t < mesh.triangleCount(); t++) {
+      if (mesh.label(t) == SHEET) {
+        double hypotenuse = mesh.sideLength(mesh.side(t, 0));
+        double one = mesh.sideLength(mesh.side(t, 1));
+        double other = mesh.sideLength(mesh.side(t, 2));
+        assertThat((one * one + other * other) / (hypotenuse * hypotenuse))
+            .isCloseTo(1, within(1e-9));
+        assertThat(Math.min(one, other)).isCloseTo(1e-4, within(1e-12));
+        count++;
+      }
+    }
+    assertThat(count).isGreaterThan(10);
+  }
+
   @ParameterizedTest
   @ValueSource(doubles = {0, 17, 90, 133})
   void aFoilThatEndsWithinAWall(double degrees) {

@@ -90,7 +90,22 @@ class TriangulatorTest {
           radius * Math.sin(next));
       angle = next;
     }
-    assertThat(mesh(drawing, SizeField.NONE).triangleCount()).isLessThan(1500);
+    assertThat(mesh(drawing, SizeField.NONE).triangleCount()).isLessThan(500);
+  }
+
+  /** A bar within a wedge draws small triangles near a sharp corner; they must not spread to it. */
+  @Test
+  void smallTrianglesDoNotRunIntoSharpCorners() {
+    for (double degrees : new double[] {0.5, 1, 2, 5, 10}) {
+      double half = Math.tan(Math.toRadians(degrees / 2));
+      double end = Math.toRadians(degrees);
+      Drawing drawing = Drawing.upright().box(0, -1000, -1000, 1000, 1000);
+      drawing.polygon(1, 0, 0, 700, 0, 700 * Math.cos(end), 700 * Math.sin(end));
+      drawing.disc(2, 350, 350 * half, 175 * half, 12);
+      assertThat(mesh(drawing, SizeField.NONE).triangleCount())
+          .as("%s degrees", degrees)
+          .isLessThan(400);
+    }
   }
 
   @Test
