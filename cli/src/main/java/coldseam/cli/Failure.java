@@ -7,7 +7,6 @@ import java.io.PrintStream;
 import java.io.PrintWriter;
 import java.io.StringWriter;
 import java.nio.file.AccessDeniedException;
-import java.nio.file.FileAlreadyExistsException;
 import java.nio.file.FileSystemException;
 import java.nio.file.Files;
 import java.nio.file.Path;
@@ -64,17 +63,14 @@ final class Failure {
     }
   }
 
-  private static String words(IOException failure) {
-    if (failure instanceof FileSystemException file) {
-      String name = file.getFile() == null ? "a file" : file.getFile();
-      if (failure instanceof AccessDeniedException) {
-        return name + ": no permission to write here; choose another folder with --out";
-      }
-      if (failure instanceof FileAlreadyExistsException) {
-        return name + ": there is a file of this name already; choose another with --out";
-      }
+  /** What an input or output error is about, and why it happened. */
+  static String words(IOException failure) {
+    if (failure instanceof AccessDeniedException denied) {
+      return denied.getFile() + ": no permission";
+    }
+    if (failure instanceof FileSystemException file && file.getFile() != null) {
       String reason = file.getReason() == null ? "" : ": " + file.getReason();
-      return name + ": cannot be written" + reason + "; choose another folder with --out";
+      return file.getFile() + reason;
     }
     return failure.getMessage() == null ? "input or output failed" : failure.getMessage();
   }

@@ -208,9 +208,9 @@ final class SolveCommand implements Command {
 
   private static int conclude(
       Job job, Result result, Syntax.Typed typed, Surroundings here, boolean first)
-      throws UsageException, IOException {
+      throws UsageException {
     if (job.folder().isPresent()) {
-      job.folder().get().write(files(job, result, typed));
+      write(job.folder().get(), files(job, result, typed));
     }
     if (typed.has(JSON)) {
       here.out().println(Sheet.json(job.subject(), result, false));
@@ -229,6 +229,19 @@ final class SolveCommand implements Command {
         .println(
             here.errInk().alert(job.subject().file() + ": the accuracy asked for was not reached"));
     return ExitCode.ACCURACY;
+  }
+
+  private static void write(OutputFolder folder, Map<String, byte[]> files) throws UsageException {
+    try {
+      folder.write(files);
+    } catch (IOException e) {
+      throw new UsageException(
+          NAME,
+          folder.shown()
+              + " cannot take the output: "
+              + Failure.words(e)
+              + "; choose another with --out FOLDER");
+    }
   }
 
   /** Names of the files that one solve writes. */

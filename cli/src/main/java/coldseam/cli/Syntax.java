@@ -10,8 +10,7 @@ import java.util.Map;
  * What may follow a command's name: its options and operands. The same description reads a command
  * line and writes the help, so that they cannot differ.
  *
- * <p>Written here because a library for it costs a quarter of the time that a whole solve may take
- * to start.
+ * <p>Written here because a library for it takes nearly as long to start as Java itself.
  *
  * @param command its name
  * @param summary what it does, one line
