@@ -21,6 +21,13 @@ final class Discretisation {
   final int nodeCount;
   final int[] nodes;
   final double[] couplings;
+
+  /** Three times the x of each triangle's centre, m. */
+  final double[] centreX;
+
+  /** Three times the y of each triangle's centre, m. */
+  final double[] centreY;
+
   final Outline outline;
 
   /** Place of a node's unknown in the order of elimination, −1 for fixed nodes. */
@@ -43,15 +50,15 @@ final class Discretisation {
     nodeCount = mesh.vertexCount() + mesh.sideCount();
     nodes = new int[QuadraticElement.NODES * mesh.triangleCount()];
     couplings = new double[3 * mesh.triangleCount()];
-    double[] x = new double[mesh.triangleCount()];
-    double[] y = new double[mesh.triangleCount()];
+    centreX = new double[mesh.triangleCount()];
+    centreY = new double[mesh.triangleCount()];
     for (int t = 0; t < mesh.triangleCount(); t++) {
       for (int k = 0; k < 3; k++) {
         int vertex = mesh.vertex(t, k);
         nodes[QuadraticElement.NODES * t + k] = vertex;
         nodes[QuadraticElement.NODES * t + 3 + k] = mesh.vertexCount() + mesh.side(t, k);
-        x[t] += mesh.x(vertex);
-        y[t] += mesh.y(vertex);
+        centreX[t] += mesh.x(vertex);
+        centreY[t] += mesh.y(vertex);
       }
       QuadraticElement.couplings(mesh, t, conditions.material(mesh.label(t)), couplings, 3 * t);
     }
@@ -76,7 +83,7 @@ final class Discretisation {
       count += free[n] ? 1 : 0;
     }
     unknowns = count;
-    unknown = FillReducingOrder.of(free, nodes, QuadraticElement.NODES, x, y);
+    unknown = FillReducingOrder.of(free, nodes, QuadraticElement.NODES, centreX, centreY);
   }
 
   private static double extentSquared(Mesh mesh) {

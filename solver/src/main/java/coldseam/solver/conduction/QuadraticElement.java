@@ -156,6 +156,29 @@ final class QuadraticElement {
   }
 
   /**
+   * Writes the derivatives along the sides at the middles of the sides: D_k at the middle of side m
+   * stands at 3m + k.
+   *
+   * @param nodes nodes of all triangles
+   * @param t the triangle
+   * @param u nodal values
+   * @param out nine numbers
+   */
+  static void derivativesAtMiddles(int[] nodes, int t, double[] u, double[] out) {
+    int at = NODES * t;
+    for (int k = 0; k < 3; k++) {
+      int a = k == 2 ? 0 : k + 1;
+      int b = k == 0 ? 2 : k - 1;
+      double p = u[nodes[at + b]] - u[nodes[at + 3 + k]];
+      double q = u[nodes[at + 3 + k]] - u[nodes[at + a]];
+      double middle = 2 * (u[nodes[at + 3 + a]] - u[nodes[at + 3 + b]]);
+      out[3 * k + k] = p + q;
+      out[3 * b + k] = q - p + middle;
+      out[3 * a + k] = p - q + middle;
+    }
+  }
+
+  /**
    * Flow out of a triangle across side k per unit of its parameter, −… times the side's length:
    * |side| n·λ∇u at a corner, with n outward.
    *

@@ -1,0 +1,266 @@
+package coldseam.solver.conduction;
+
+import coldseam.solver.algebra.FillReducingOrder;
+import coldseam.solver.algebra.SymmetricSystem;
+import coldseam.solver.detail.Conditions;
+import java.util.Arrays;
+
+/**
+ * The conjugate problem: for each space k the stream function S_k that maximises 2F_k − R, with F_k
+ * the flow in from space k and R = ∫q·λ⁻¹q + Σ∫Rs q_n²; that is, for every V,
+ *
+ * <p>∫∇S·(λ/det λ)∇V + Σ_film ∫Rs S′V′ = the fall of V along the outline that faces space k.
+ *
+ * <p>One more S carries the given flows and nothing else. A flux made of any of these S, exactly
+ * solved or not, has no divergence and crosses no side it must not.
+ */
+final class ConjugateProblem {
+  private final Discretisation d;
+  private final StreamSpace space;
+
+  /** Couplings of the triangles for λ/det λ. */
+  private final double[] couplings;
+
+  private final int[] unknown;
+  private final int[] jumpUnknown;
+  private final int unknowns;
+  private final int[] solved;
+  private final double[][] load;
+  private int[] rows;
+  private int[] columns;
+  private double[] values;
+  private int count;
+
+  private ConjugateProblem(Discretisation d, StreamSpace space) {
+    this.d = d;
+    this.space = space;
+    couplings = couplings(d);
+    int meshNodes = d.nodeCount;
+    boolean[] free = new boolean[meshNodes];
+    int found = 0;
+    for (int n = 0; n < meshNodes; n++) {
+      free[n] = space.chain[n] == n && !space.pinned[n];
+      found += free[n] ? 1 : 0;
+    }
+    int[] chains = new int[d.nodes.length];
+    for (int i = 0; i < chains.length; i++) {
+      chains[i] = space.chain[space.nodes[i]];
+    }
+    unknown = FillReducingOrder.of(free, chains, QuadraticElement.NODES, d.centreX, d.centreY);
+    jumpUnknown = new int[space.cuts];
+    for (int c = 0; c < space.cuts; c++) {
+      jumpUnknown[c] = Double.isNaN(space.givenJump[c]) ? found++ : -1;
+    }
+    unknowns = found;
+    int fields = d.spaces - 1 + (d.hasFlow ? 1 : 0);
+    solved = new int[fields];
+    for (int f = 0; f < fields; f++) {
+      solved[f] = f < d.spaces - 1 ? f : d.spaces;
+    }
+    load = new double[fields][unknowns];
+    int capacity = 21 * d.mesh.triangleCount() + 6 * d.outline.count;
+    rows = new int[capacity];
+    columns = new int[capacity];
+    values = new double[capacity];
+  }
+
+  /** Couplings of λ/det λ: those of λ over det λ. */
+  static double[] couplings(Discretisation d) {
+    double[] conjugate = new double[d.couplings.length];
+    for (int t = 0; t < d.mesh.triangleCount(); t++) {
+      double root = QuadraticElement.conductivity(d.couplings, t);
+      for (int k = 0; k < 3; k++) {
+        conjugate[3 * t + k] = d.couplings[3 * t + k] / (root * root);
+      }
+    }
+    return conjugate;
+  }
+
+  /**
+   * Solves for the stream functions.
+   *
+   * @param d the discretisation
+   * @param space the space of stream functions
+   * @return values at the nodes of {@code space} for each space, then for the given flows (all 0 if
+   *     there are none)
+   */
+  static double[][] streamFunctions(Discretisation d, StreamSpace space) {
+    ConjugateProblem problem = new ConjugateProblem(d, space);
+    double[][] fields = new double[d.spaces + 1][space.nodeCount];
+    if (problem.solved.length > 0) {
+      problem.resistance();
+      problem.films();
+      problem.drops();
+      problem.solve(fields);
+    }
+    double[] last = fields[d.spaces - 1];
+    for (int f = 0; f < d.spaces - 1; f++) {
+      for (int n = 0; n < last.length; n++) {
+        last[n] -= fields[f][n];
+      }
+    }
+    return fields;
+  }
+
+  /** ∫∇φ_p·(λ/det λ)∇φ_q over the triangles. */
+  private void resistance() {
+    for (int t = 0; t < d.mesh.triangleCount(); t++) {
+      int at = QuadraticElement.NODES * t;
+      for (int p = 0; p < QuadraticElement.NODES; p++) {
+        for (int q = 0; q <= p; q++) {
+          add(
+              space.nodes[at + p],
+              space.nodes[at + q],
+              QuadraticElement.stiffness(couplings, t, p, q),
+              p == q);
+        }
+      }
+    }
+  }
+
+  /** ∫Rs φ_p′ φ_q′ over the surfaces with a film. */
+  private void films() {
+    Outline o = d.outline;
+    for (int s = 0; s < o.count; s++) {
+      if (o.kind[s] != Conditions.Kind.FILM) {
+        continue;
+      }
+      double unit = o.filmM2KPerW[s] / (3 * o.lengthM[s]);
+      int start = streamStart(d, space, s);
+      int middle = streamMiddle(d, space, s);
+      int end = streamEnd(d, space, s);
+      add(start, start, 7 * unit, true);
+      add(end, end, 7 * unit, true);
+      add(middle, middle, 16 * unit, true);
+      add(start, end, unit, false);
+      add(start, middle, -8 * unit, false);
+      add(end, middle, -8 * unit, false);
+    }
+  }
+
+  /** The fall of φ_p along what faces each space. */
+  private void drops() {
+    Outline o = d.outline;
+    for (int s = 0; s < o.count; s++) {
+      if (o.space[s] >= 0 && o.space[s] < d.spaces - 1) {
+        toLoad(load[o.space[s]], streamStart(d, space, s), 1);
+        toLoad(load[o.space[s]], streamEnd(d, space, s), -1);
+      }
+    }
+  }
+
+  /** Node of S at the start of side s of the outline, as its triangle sees it. */
+  static int streamStart(Discretisation d, StreamSpace space, int s) {
+    return at(d, space, s, (d.outline.sideOfTriangle[s] + 1) % 3);
+  }
+
+  /** Node of S in the middle of side s of the outline. */
+  static int streamMiddle(Discretisation d, StreamSpace space, int s) {
+    return at(d, space, s, 3 + d.outline.sideOfTriangle[s]);
+  }
+
+  /** Node of S at the end of side s of the outline, as its triangle sees it. */
+  static int streamEnd(Discretisation d, StreamSpace space, int s) {
+    return at(d, space, s, (d.outline.sideOfTriangle[s] + 2) % 3);
+  }
+
+  private static int at(Discretisation d, StreamSpace space, int s, int local) {
+    return space.nodes[QuadraticElement.NODES * d.outline.triangle[s] + local];
+  }
+
+  private void toLoad(double[] b, int node, double value) {
+    int i = unknown[space.chain[node]];
+    if (i >= 0) {
+      b[i] += value;
+    }
+    for (int c = 0; space.jumps(node) && c < space.cuts; c++) {
+      if (jumpUnknown[c] >= 0) {
+        b[jumpUnknown[c]] += space.jump(node, c) * value;
+      }
+    }
+  }
+
+  /** Adds value · (S_p V_q + S_q V_p), or value · S_p V_p for {@code same}. */
+  private void add(int p, int q, double value, boolean same) {
+    if (value == 0) {
+      return;
+    }
+    if (!space.jumps(p) && !space.jumps(q)) {
+      entry(unknown[space.chain[p]], unknown[space.chain[q]], value, same);
+    } else {
+      for (int a = -1; a < space.cuts; a++) {
+        double ca = factor(p, a);
+        for (int b = same ? a : -1; b < space.cuts && ca != 0; b++) {
+          double cb = factor(q, b);
+          if (cb != 0) {
+            entry(place(p, a), place(q, b), ca * cb * value, same && a == b);
+          }
+        }
+      }
+    }
+    if (d.hasFlow) {
+      double[] b = load[solved.length - 1];
+      toLoad(b, p, -value * given(q));
+      if (!same) {
+        toLoad(b, q, -value * given(p));
+      }
+    }
+  }
+
+  private double factor(int node, int term) {
+    return term < 0 ? 1 : space.jumps(node) ? space.jump(node, term) : 0;
+  }
+
+  private int place(int node, int term) {
+    return term < 0 ? unknown[space.chain[node]] : jumpUnknown[term];
+  }
+
+  /** What is given of a node's value in the field of the given flows. */
+  private double given(int node) {
+    double sum = space.given[node];
+    for (int c = 0; space.jumps(node) && c < space.cuts; c++) {
+      if (jumpUnknown[c] < 0) {
+        sum += space.jump(node, c) * space.givenJump[c];
+      }
+    }
+    return sum;
+  }
+
+  /** One entry stands for both of an off-diagonal pair; a pair that met on the diagonal is two. */
+  private void entry(int row, int column, double value, boolean once) {
+    if (row < 0 || column < 0) {
+      return;
+    }
+    if (count == rows.length) {
+      rows = Arrays.copyOf(rows, 2 * count);
+      columns = Arrays.copyOf(columns, 2 * count);
+      values = Arrays.copyOf(values, 2 * count);
+    }
+    rows[count] = row;
+    columns[count] = column;
+    values[count++] = row == column && !once ? 2 * value : value;
+  }
+
+  private void solve(double[][] fields) {
+    SymmetricSystem system =
+        unknowns == 0 ? null : SymmetricSystem.factor(unknowns, rows, columns, values, count);
+    rows = null;
+    columns = null;
+    values = null;
+    for (int f = 0; f < solved.length; f++) {
+      double[] x = system == null ? new double[0] : system.solve(load[f]).x();
+      double[] field = fields[solved[f]];
+      boolean flows = solved[f] == d.spaces;
+      for (int n = 0; n < space.nodeCount; n++) {
+        int i = unknown[space.chain[n]];
+        double value = i >= 0 ? x[i] : 0;
+        for (int c = 0; space.jumps(n) && c < space.cuts; c++) {
+          if (jumpUnknown[c] >= 0) {
+            value += space.jump(n, c) * x[jumpUnknown[c]];
+          }
+        }
+        field[n] = flows ? value + given(n) : value;
+      }
+    }
+  }
+}

@@ -1,0 +1,265 @@
+package coldseam.solver.conduction;
+
+import coldseam.solver.detail.Conditions;
+
+/**
+ * Two-sided bounds of the matrix A of the spaces from temperature fields u_i and fluxes q_i
+ * (Thomson; Prager and Synge 1947):
+ *
+ * <p>up_ij = ∫λ∇u_i·∇u_j + Σ∫(u_i − δ_i)(u_j − δ_j)/Rs and lo_ij = F_i(q_j) + F_j(q_i) −
+ * ∫q_i·λ⁻¹q_j − Σ∫Rs q_in q_jn. With G = up − lo, xᵀAy lies within ½√(xᵀGx · yᵀGy) of xᵀ(up +
+ * lo)y/2. A given flow g is one more row and column, in which up gains −∫g u_i and −∫g u_j.
+ *
+ * <p>G is also the sum of a local gap over triangles and film sides, Σ∫(q_i + λ∇u_i)·λ⁻¹(q_j +
+ * λ∇u_j) + Σ∫Rs(q_in − (δ_i − u_i)/Rs)(q_jn − (δ_j − u_j)/Rs), for any u that takes the fixed
+ * temperatures and any q without divergence that crosses no side it must not, solved or not. It is
+ * evaluated both ways; the two must agree.
+ *
+ * <p>What is assumed: the section is exactly that of the partition, its conductivities constant in
+ * each label; all energies are sums of products of differences of nodal values, whose rounding is
+ * covered by the allowance of {@link #ROUNDING} times the energy and more for stretched triangles.
+ */
+final class TwoSidedBound {
+  /** Relative rounding allowance of an energy for triangles of aspect up to {@link #ASPECT}. */
+  static final double ROUNDING = 1e-12;
+
+  /** The allowance grows with the aspect over this. */
+  static final double ASPECT = 1000;
+
+  /** Upper energies, W/(m·K); the last row and column belong to the given flows. */
+  final double[][] up;
+
+  /** Lower energies. */
+  final double[][] lo;
+
+  /** The sum of the local gaps. */
+  final double[][] gap;
+
+  /** Local gap of each field by triangle; those of a film side count to its triangle. */
+  final double[][] local;
+
+  /** Relative rounding allowance. */
+  final double allowance;
+
+  private final Discretisation d;
+  private final StreamSpace space;
+  private final double[][] fields;
+  private final double[][] streams;
+  private final double[] conjugate;
+
+  /**
+   * Works the bounds out.
+   *
+   * @param d the discretisation
+   * @param fields unit fields and the field of the given flows
+   * @param space the space of the stream functions
+   * @param streams stream functions of the same
+   */
+  TwoSidedBound(Discretisation d, double[][] fields, StreamSpace space, double[][] streams) {
+    this.d = d;
+    this.space = space;
+    this.fields = fields;
+    this.streams = streams;
+    conjugate = ConjugateProblem.couplings(d);
+    int n = d.spaces + 1;
+    up = new double[n][n];
+    lo = new double[n][n];
+    gap = new double[n][n];
+    local = new double[n][d.mesh.triangleCount()];
+    allowance = ROUNDING * Math.max(1, aspect() / ASPECT);
+    int used = d.hasFlow ? n : n - 1;
+    for (int i = 0; i < used; i++) {
+      for (int j = i; j < used; j++) {
+        up[i][j] = upper(i, j);
+        lo[i][j] = lower(i, j);
+        up[j][i] = up[i][j];
+        lo[j][i] = lo[i][j];
+      }
+    }
+    gaps(used);
+  }
+
+  /** Largest disagreement of the two ways to the gap, relative to the energies. */
+  double mismatch() {
+    double worst = 0;
+    for (int i = 0; i < gap.length; i++) {
+      for (int j = 0; j < gap.length; j++) {
+        double scale = Math.sqrt(scale(i) * scale(j));
+        double difference = Math.abs(up[i][j] - lo[i][j] - gap[i][j]);
+        worst = scale > 0 ? Math.max(worst, difference / scale) : Math.max(worst, difference);
+      }
+    }
+    return worst;
+  }
+
+  private double scale(int i) {
+    return Math.max(Math.abs(up[i][i]), Math.max(Math.abs(lo[i][i]), gap[i][i]));
+  }
+
+  /** Largest ratio of longest side to height over the triangles. */
+  private double aspect() {
+    double worst = 1;
+    for (int t = 0; t < d.mesh.triangleCount(); t++) {
+      double longest = 0;
+      for (int k = 0; k < 3; k++) {
+        int a = d.mesh.vertex(t, (k + 1) % 3);
+        int b = d.mesh.vertex(t, (k + 2) % 3);
+        double dx = d.mesh.x(b) - d.mesh.x(a);
+        double dy = d.mesh.y(b) - d.mesh.y(a);
+        longest = Math.max(longest, dx * dx + dy * dy);
+      }
+      worst = Math.max(worst, longest / (2 * d.mesh.area(t)));
+    }
+    return worst;
+  }
+
+  private double upper(int i, int j) {
+    double sum = 0;
+    for (int t = 0; t < d.mesh.triangleCount(); t++) {
+      sum += QuadraticElement.energy(d.couplings, d.nodes, t, fields[i], fields[j]);
+    }
+    Outline o = d.outline;
+    for (int s = 0; s < o.count; s++) {
+      if (o.kind[s] == Conditions.Kind.FILM) {
+        sum += o.filmEnergy(s, fields[i], unit(s, i), fields[j], unit(s, j));
+      } else if (o.kind[s] == Conditions.Kind.FLOW) {
+        double flow = o.lengthM[s] * o.flowWPerM2[s];
+        sum -= j == d.spaces ? flow * o.mean(s, fields[i]) : 0;
+        sum -= i == d.spaces ? flow * o.mean(s, fields[j]) : 0;
+      }
+    }
+    return sum;
+  }
+
+  private double lower(int i, int j) {
+    double sum = 0;
+    for (int t = 0; t < d.mesh.triangleCount(); t++) {
+      sum -= QuadraticElement.energy(conjugate, space.nodes, t, streams[i], streams[j]);
+    }
+    Outline o = d.outline;
+    for (int s = 0; s < o.count; s++) {
+      if (o.kind[s] == Conditions.Kind.FILM) {
+        sum -= filmResistance(s, streams[i], streams[j]);
+      }
+      if (o.space[s] >= 0) {
+        sum += unit(s, i) * fall(s, streams[j]) + unit(s, j) * fall(s, streams[i]);
+      }
+    }
+    return sum;
+  }
+
+  private double unit(int s, int field) {
+    return d.outline.space[s] == field ? 1 : 0;
+  }
+
+  /** Flow in across a side of the outline. */
+  double fall(int s, double[] stream) {
+    return stream[ConjugateProblem.streamStart(d, space, s)]
+        - stream[ConjugateProblem.streamEnd(d, space, s)];
+  }
+
+  /** ∫Rs S′T′ along a side. */
+  private double filmResistance(int s, double[] a, double[] b) {
+    double ap = rise(s, a, true);
+    double aq = rise(s, a, false);
+    double bp = rise(s, b, true);
+    double bq = rise(s, b, false);
+    return d.outline.filmM2KPerW[s]
+        / (6 * d.outline.lengthM[s])
+        * ((3 * ap - aq) * (3 * bp - bq)
+            + 4 * (ap + aq) * (bp + bq)
+            + (3 * aq - ap) * (3 * bq - bp));
+  }
+
+  /** Rise of S along the first or second half of a side. */
+  private double rise(int s, double[] stream, boolean first) {
+    double middle = stream[ConjugateProblem.streamMiddle(d, space, s)];
+    return first
+        ? middle - stream[ConjugateProblem.streamStart(d, space, s)]
+        : stream[ConjugateProblem.streamEnd(d, space, s)] - middle;
+  }
+
+  /** The gap from what q and −λ∇u differ by, triangle by triangle. */
+  private void gaps(int used) {
+    double[][] misfit = new double[used][9];
+    for (int t = 0; t < d.mesh.triangleCount(); t++) {
+      for (int f = 0; f < used; f++) {
+        misfit(t, f, misfit[f]);
+      }
+      for (int i = 0; i < used; i++) {
+        for (int j = i; j < used; j++) {
+          double sum = 0;
+          for (int m = 0; m < 9; m++) {
+            sum -= d.couplings[3 * t + m % 3] * misfit[i][m] * misfit[j][m];
+          }
+          count(t, i, j, sum / 3);
+        }
+      }
+    }
+    Outline o = d.outline;
+    double[][] film = new double[used][3];
+    for (int s = 0; s < o.count; s++) {
+      if (o.kind[s] != Conditions.Kind.FILM) {
+        continue;
+      }
+      for (int f = 0; f < used; f++) {
+        filmMisfit(s, f, film[f]);
+      }
+      for (int i = 0; i < used; i++) {
+        for (int j = i; j < used; j++) {
+          count(o.triangle[s], i, j, product(s, film[i], film[j]));
+        }
+      }
+    }
+  }
+
+  private void count(int t, int i, int j, double value) {
+    gap[i][j] += value;
+    if (i == j) {
+      local[i][t] += value;
+    } else {
+      gap[j][i] += value;
+    }
+  }
+
+  /**
+   * The field λ⁻¹q + ∇u at the three middles of sides, as its components along the three sides: 3m
+   * + k for side k at the middle of side m.
+   */
+  private void misfit(int t, int field, double[] out) {
+    double[] du = new double[9];
+    double[] ds = new double[9];
+    QuadraticElement.derivativesAtMiddles(d.nodes, t, fields[field], du);
+    QuadraticElement.derivativesAtMiddles(space.nodes, t, streams[field], ds);
+    for (int m = 0; m < 3; m++) {
+      for (int k = 0; k < 3; k++) {
+        int a = (k + 1) % 3;
+        int b = (k + 2) % 3;
+        // λ⁻¹ curl S along side k is 2|T| ∇L_k·(λ/det λ)∇S: towards corners a and b from corner k
+        double along =
+            2 * (conjugate[3 * t + b] * ds[3 * m + b] - conjugate[3 * t + a] * ds[3 * m + a]);
+        out[3 * m + k] = du[3 * m + k] + along;
+      }
+    }
+  }
+
+  /** Rs q_n − (δ − u) at start, middle and end of a side with a film, K. */
+  private void filmMisfit(int s, int field, double[] out) {
+    Outline o = d.outline;
+    double first = rise(s, streams[field], true);
+    double second = rise(s, streams[field], false);
+    double scale = o.filmM2KPerW[s] / o.lengthM[s];
+    double delta = unit(s, field);
+    out[0] = fields[field][o.start[s]] - delta - scale * (3 * first - second);
+    out[1] = fields[field][o.middle[s]] - delta - scale * (first + second);
+    out[2] = fields[field][o.end[s]] - delta - scale * (3 * second - first);
+  }
+
+  private double product(int s, double[] a, double[] b) {
+    return d.outline.lengthM[s]
+        / (30 * d.outline.filmM2KPerW[s])
+        * (a[0] * (4 * b[0] + 2 * b[1] - b[2])
+            + a[1] * (2 * b[0] + 16 * b[1] + 2 * b[2])
+            + a[2] * (4 * b[2] + 2 * b[1] - b[0]));
+  }
+}
