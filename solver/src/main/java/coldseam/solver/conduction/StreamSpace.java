@@ -300,8 +300,7 @@ final class StreamSpace {
     int start = 0;
     boolean closed = true;
     for (int i = 0; i < loop.length; i++) {
-      int before = loop[(i + loop.length - 1) % loop.length];
-      if (!flowGiven(before)) {
+      if (!flowGiven(loop[(i + loop.length - 1) % loop.length])) {
         closed = false;
         start = i;
         break;
@@ -310,6 +309,7 @@ final class StreamSpace {
     int[] sofar = NO_JUMPS;
     double fall = 0;
     int head = -1;
+    int before = -1;
     for (int i = 0; i < loop.length; i++) {
       int h = loop[(start + i) % loop.length];
       if (!flowGiven(h)) {
@@ -325,7 +325,11 @@ final class StreamSpace {
         head = mesh.vertex(t, (k + 1) % 3);
         sofar = fanJumps(first);
         fall = 0;
+      } else {
+        // a cut that ends here makes the two sides of the chain differ
+        sofar = sum(sofar, difference(fanJumps(first), fanJumps(before)));
       }
+      before = last;
       double flow = flowIn(h);
       tie(middle, mesh.vertexCount() + mesh.side(t, k), head, sofar, fall + flow / 2, nodeJumps);
       fall += flow;
