@@ -8,9 +8,18 @@ import coldseam.solver.detail.Conditions;
 import java.util.Arrays;
 import java.util.BitSet;
 import java.util.concurrent.CancellationException;
+import java.util.concurrent.CompletableFuture;
 
 /** Solve, estimate, mark, refine, until what is asked is met. */
 final class AdaptiveLoop {
+  /** Part of an accuracy that a proved half-width may take: the middle is better than its proof. */
+  private static final double PART_OF_PROVED = 0.35;
+
+  /**
+   * Largest disagreement of the two ways to the gap, relative to the energy, times the allowance.
+   */
+  private static final double MISMATCH = 1;
+
   /** Part of a relative accuracy that the guessed error may take. */
   private static final double PART_OF_RELATIVE = 0.1;
 
@@ -43,12 +52,14 @@ final class AdaptiveLoop {
   private final Conduction.Goal goal;
   private final Progress progress;
   private final History history;
+  private final boolean proving;
 
   // of the present pass
   private Discretisation d;
   private double[][] fields;
   private ConductanceMatrix matrix;
   private HierarchicalIndicator indicator;
+  private TwoSidedBound bound;
   private boolean[][] meeting;
   private double[] sums;
   private double[] targets;
@@ -59,8 +70,10 @@ final class AdaptiveLoop {
       Conditions conditions,
       Conduction.Goal goal,
       Progress progress,
-      double earlierRatio) {
+      double earlierRatio,
+      boolean proving) {
     this.partition = partition;
+    this.proving = proving;
     this.conditions = conditions;
     this.goal = goal;
     this.progress = progress;
@@ -91,14 +104,19 @@ final class AdaptiveLoop {
       }
       mesh = finer;
     }
-    return new FieldSolution(partition, conditions, d, fields, matrix, history);
+    return new FieldSolution(partition, conditions, d, fields, matrix, bound, history);
   }
 
   private void solve(Mesh mesh) {
     d = new Discretisation(mesh, conditions);
-    fields = Assembly.unitFields(d);
-    matrix = ConductanceMatrix.of(d, fields);
     meeting = d.meeting();
+    if (proving && d.spaces > 1 && !meetsAnywhere()) {
+      solveBothSides();
+    } else {
+      fields = Assembly.unitFields(d);
+      bound = null;
+      matrix = ConductanceMatrix.of(d, fields);
+    }
     boolean[] wanted = new boolean[d.spaces + 1];
     Arrays.fill(wanted, 0, d.spaces > 2 ? d.spaces : d.spaces - 1, true);
     wanted[d.spaces] = d.hasFlow;
@@ -118,6 +136,29 @@ final class AdaptiveLoop {
     setTargets();
   }
 
+  /** The temperature problem and the conjugate one side by side. */
+  private void solveBothSides() {
+    StreamSpace space = new StreamSpace(d.mesh, conditions);
+    CompletableFuture<double[][]> streams =
+        CompletableFuture.supplyAsync(() -> ConjugateProblem.streamFunctions(d, space));
+    fields = Assembly.unitFields(d);
+    bound = new TwoSidedBound(d, fields, space, streams.join());
+    matrix = ConductanceMatrix.of(d, bound);
+    if (!(bound.mismatch() <= MISMATCH * bound.allowance)) {
+      throw new IllegalStateException(
+          "the two ways to the gap of the bounds disagree by " + bound.mismatch());
+    }
+  }
+
+  private boolean meetsAnywhere() {
+    for (int i = 0; i < d.spaces; i++) {
+      if (infinite(i)) {
+        return true;
+      }
+    }
+    return false;
+  }
+
   private void setTargets() {
     Accuracy accuracy = goal.accuracy();
     double relative = accuracy.couplingRelative();
@@ -128,14 +169,16 @@ final class AdaptiveLoop {
     if (goal.psiAsked()) {
       absolute = Math.min(absolute, accuracy.psiWPerMK());
     }
+    double relativePart = bound == null ? PART_OF_RELATIVE : PART_OF_PROVED;
+    double absolutePart = bound == null ? PART_OF_ABSOLUTE : PART_OF_PROVED;
     targets = new double[d.spaces + 1];
     for (int i = 0; i < d.spaces; i++) {
       targets[i] =
           infinite(i)
               ? Double.POSITIVE_INFINITY
-              : Math.min(PART_OF_RELATIVE * relative * matrix.a[i][i], PART_OF_ABSOLUTE * absolute);
+              : Math.min(relativePart * relative * matrix.a[i][i], absolutePart * absolute);
     }
-    targets[d.spaces] = PART_OF_RELATIVE * relative * matrix.flowEnergy;
+    targets[d.spaces] = relativePart * relative * matrix.flowEnergy;
   }
 
   private boolean infinite(int space) {
@@ -154,12 +197,14 @@ final class AdaptiveLoop {
     for (int i = 0; i < d.spaces; i++) {
       if (!infinite(i) && targets[i] > 0) {
         x[i] = 1;
-        worst = Math.max(worst, history.error(x) / targets[i]);
+        double error = bound == null ? history.error(x) : bound.gap[i][i] / 2;
+        worst = Math.max(worst, error / targets[i]);
         x[i] = 0;
       }
     }
     if (d.hasFlow && targets[d.spaces] > 0) {
-      worst = Math.max(worst, sums[d.spaces] / targets[d.spaces]);
+      double error = bound == null ? sums[d.spaces] : bound.gap[d.spaces][d.spaces] / 2;
+      worst = Math.max(worst, error / targets[d.spaces]);
     }
     return worst;
   }
@@ -192,7 +237,8 @@ final class AdaptiveLoop {
       }
       boolean jumps = Double.isInfinite(targets[f]);
       for (int t = 0; t < wishes.length; t++) {
-        wishes[t] += jumps ? jumpWish(f, t) : indicator.energy[f][t] / targets[f];
+        double lacking = bound == null ? indicator.energy[f][t] : bound.local[f][t] / 2;
+        wishes[t] += jumps ? jumpWish(f, t) : lacking / targets[f];
       }
     }
     return wishes;

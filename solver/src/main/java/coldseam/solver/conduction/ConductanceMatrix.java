@@ -27,6 +27,24 @@ final class ConductanceMatrix {
     this.flowEnergy = flowEnergy;
   }
 
+  /** The middle of two-sided bounds. */
+  static ConductanceMatrix of(Discretisation d, TwoSidedBound bound) {
+    int n = d.spaces;
+    double[][] a = new double[n][n];
+    double[] driven = new double[n];
+    for (int i = 0; i < n; i++) {
+      driven[i] = bound.middle(i, n);
+      for (int j = 0; j < n; j++) {
+        a[i][j] = bound.middle(i, j);
+      }
+    }
+    double prescribed = 0;
+    for (int s = 0; s < d.outline.count; s++) {
+      prescribed += d.outline.lengthM[s] * d.outline.flowWPerM2[s];
+    }
+    return new ConductanceMatrix(a, driven, prescribed, -bound.middle(n, n));
+  }
+
   static ConductanceMatrix of(Discretisation d, double[][] fields) {
     int n = d.spaces;
     double[][] a = new double[n][n];

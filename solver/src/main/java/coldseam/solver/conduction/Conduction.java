@@ -40,7 +40,7 @@ public final class Conduction {
   public static Solution solve(
       Partition partition, Conditions conditions, Goal goal, Progress progress) {
     Mesh coarse = Triangulator.triangulate(partition, conditions::conducts, SizeField.NONE);
-    return new AdaptiveLoop(partition, conditions, goal, progress, Double.NaN).run(coarse);
+    return new AdaptiveLoop(partition, conditions, goal, progress, Double.NaN, true).run(coarse);
   }
 
   /**
@@ -55,6 +55,7 @@ public final class Conduction {
   public static Solution solveNext(
       Solution first, Conditions conditions, Goal goal, Progress progress) {
     double ratio = ((FieldSolution) first).errorRatio();
-    return new AdaptiveLoop(first.partition(), conditions, goal, progress, ratio).run(first.mesh());
+    return new AdaptiveLoop(first.partition(), conditions, goal, progress, ratio, false)
+        .run(first.mesh());
   }
 }

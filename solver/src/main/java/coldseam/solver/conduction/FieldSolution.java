@@ -7,7 +7,7 @@ import coldseam.solver.detail.Conditions;
 /** The unit fields on the final mesh and what follows from them. */
 final class FieldSolution implements Solution {
   static final String NOT_PROVED =
-      "bounds are not computed yet: the error is guessed from what refinement still changed";
+      "no bounds are computed with these films: the error is guessed from what refinement changed";
   static final String MEETING =
       "two fixed temperatures meet in a point, so the heat flow between them is infinite:"
           + " only temperatures have a meaning";
@@ -17,6 +17,7 @@ final class FieldSolution implements Solution {
   private final Discretisation d;
   private final double[][] fields;
   private final ConductanceMatrix matrix;
+  private final TwoSidedBound bound;
   private final History history;
   private final boolean[][] meeting;
   private volatile StretchFlows stretchFlows;
@@ -27,12 +28,14 @@ final class FieldSolution implements Solution {
       Discretisation d,
       double[][] fields,
       ConductanceMatrix matrix,
+      TwoSidedBound bound,
       History history) {
     this.partition = partition;
     this.conditions = conditions;
     this.d = d;
     this.fields = fields;
     this.matrix = matrix;
+    this.bound = bound;
     this.history = history;
     meeting = d.meeting();
   }
@@ -107,6 +110,10 @@ final class FieldSolution implements Solution {
         value -= matrix.a[i][j];
       }
     }
+    if (bound != null) {
+      double proved = bound.halfWidth(x, y);
+      return new Quantity(value, new Certificate.Certified(value - proved, value + proved));
+    }
     double halfWidth = Math.sqrt(history.error(x) * history.error(y));
     return new Quantity(value, new Certificate.NotCertified(NOT_PROVED, halfWidth));
   }
@@ -131,7 +138,7 @@ final class FieldSolution implements Solution {
   public double stretchFlow(int stretch, double[] temperaturesC) {
     StretchFlows ready = stretchFlows;
     if (ready == null) {
-      ready = new StretchFlows(d, conditions, fields);
+      ready = new StretchFlows(d, conditions, fields, bound);
       stretchFlows = ready;
     }
     return ready.flow(stretch, temperaturesC);

@@ -24,8 +24,10 @@ final class StretchFlows {
    * @param d the discretisation
    * @param conditions knows which stretches lie on an edge
    * @param fields nodal values of each space's unit field, then of the field of the given flows
+   * @param bound bounds whose stream functions give each flow a second time, or null; the mean of
+   *     both counts, so that stretches add up to the middle of the bounds
    */
-  StretchFlows(Discretisation d, Conditions conditions, double[][] fields) {
+  StretchFlows(Discretisation d, Conditions conditions, double[][] fields, TwoSidedBound bound) {
     this.d = d;
     fixedSideFrom = new int[d.mesh.vertexCount()];
     fixedSideTo = new int[d.mesh.vertexCount()];
@@ -39,6 +41,9 @@ final class StretchFlows {
     }
     for (int f = 0; f < fields.length; f++) {
       double[] inflow = inflows(fields[f], f);
+      for (int s = 0; bound != null && s < inflow.length; s++) {
+        inflow[s] = (inflow[s] + bound.fall(s, f)) / 2;
+      }
       for (int s = 0; s < d.outline.count; s++) {
         for (int stretch : conditions.stretches(d.outline.partitionEdge[s])) {
           flows.computeIfAbsent(stretch, key -> new double[fields.length])[f] += inflow[s];

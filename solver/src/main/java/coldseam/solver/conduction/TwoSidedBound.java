@@ -152,8 +152,40 @@ final class TwoSidedBound {
     return d.outline.space[s] == field ? 1 : 0;
   }
 
-  /** Flow in across a side of the outline. */
-  double fall(int s, double[] stream) {
+  /** The middle of the bounds of an entry. */
+  double middle(int i, int j) {
+    return (up[i][j] + lo[i][j]) / 2;
+  }
+
+  /**
+   * How far xᵀAy may be from the middle: ½√(xᵀGx · yᵀGy) and the allowance for rounding.
+   *
+   * @param x a number for each space
+   * @param y a number for each space
+   * @return W/(m·K)
+   */
+  double halfWidth(double[] x, double[] y) {
+    double gaps = form(gap, x) * form(gap, y);
+    double energies = form(up, x) * form(up, y);
+    return Math.sqrt(Math.max(0, gaps)) / 2 + allowance * Math.sqrt(Math.max(0, energies));
+  }
+
+  private static double form(double[][] a, double[] x) {
+    double sum = 0;
+    for (int i = 0; i < x.length; i++) {
+      for (int j = 0; j < x.length; j++) {
+        sum += x[i] * a[i][j] * x[j];
+      }
+    }
+    return sum;
+  }
+
+  /** Flow in across a side of the outline by the stream function of a field. */
+  double fall(int s, int field) {
+    return fall(s, streams[field]);
+  }
+
+  private double fall(int s, double[] stream) {
     return stream[ConjugateProblem.streamStart(d, space, s)]
         - stream[ConjugateProblem.streamEnd(d, space, s)];
   }

@@ -33,8 +33,17 @@ class TwoSidedBoundTest {
     double[][] streams = ConjugateProblem.streamFunctions(d, space);
     TwoSidedBound b = new TwoSidedBound(d, fields, space, streams);
     System.out.println(
-        mesh.triangleCount() + " up " + b.up[0][0] + " lo " + b.lo[0][0] + " gap " + b.gap[0][0]
-            + " mismatch " + b.mismatch() + " cuts " + space.cuts);
+        mesh.triangleCount()
+            + " up "
+            + b.up[0][0]
+            + " lo "
+            + b.lo[0][0]
+            + " gap "
+            + b.gap[0][0]
+            + " mismatch "
+            + b.mismatch()
+            + " cuts "
+            + space.cuts);
     return b;
   }
 
@@ -70,24 +79,51 @@ class TwoSidedBoundTest {
 
   @Test
   void a_one_hole() {
-      bound(new Sketch().box(SOLID, 0, 0, 1, 1).box(Sketch.space("pipe", 50, 0.1), 0.3, 0.3, 0.5, 0.5)
-                  .facing(Sketch.space("b", 0, 0.04), 1, 0, 1, 1), 0);
-      bound(new Sketch().box(SOLID, 0, 0, 1, 1).box(Sketch.space("pipe", 50, 0.1), 0.3, 0.3, 0.5, 0.5)
-                  .facing(Sketch.space("b", 0, 0.04), 1, 0, 1, 1, 0,1), 1);
-      bound(new Sketch().box(SOLID, 0, 0, 1, 1).box(Sketch.space("pipe", 50, 0.1), 0.3, 0.3, 0.5, 0.5)
-                  .facing(Sketch.space("b", 0, 0.04), 1, 0, 1, 1, 0,1, 0,0,1,0), 1);
-      bound(new Sketch().box(SOLID, 0, 0, 1, 1).box(Sketch.space("pipe", 50, 0.1), 0.3, 0.3, 0.5, 0.5)
-                  .flow(5, 0, 0, 0, 1)
-                  .facing(Sketch.space("b", 0, 0.04), 1, 0, 1, 1), 0);
-      bound(new Sketch().box(SOLID, 0, 0, 1, 1)
-                  .flow(5, 0, 0, 0, 1)
-                  .facing(Sketch.space("b", 0, 0.04), 1, 0, 1, 1), 0);
-      bound(new Sketch().box(SOLID, 0, 0, 1, 1).box(Sketch.space("pipe", 50, 0.1), 0.3, 0.3, 0.5, 0.5)
-                  .box(Sketch.space("pipe 2", 50, 0.1), 0.6, 0.3, 0.7, 0.5)
-                  .facing(Sketch.space("b", 0, 0.04), 1, 0, 1, 1), 0);
-      bound(new Sketch().box(SOLID, 0, 0, 1, 1).box(Sketch.space("pipe", 50, 0.1), 0.3, 0.3, 0.5, 0.5)
-                  .box(new Hollow("void"), 0.1, 0.7, 0.3, 0.8)
-                  .facing(Sketch.space("b", 0, 0.04), 1, 0, 1, 1), 0);
+    bound(
+        new Sketch()
+            .box(SOLID, 0, 0, 1, 1)
+            .box(Sketch.space("pipe", 50, 0.1), 0.3, 0.3, 0.5, 0.5)
+            .facing(Sketch.space("b", 0, 0.04), 1, 0, 1, 1),
+        0);
+    bound(
+        new Sketch()
+            .box(SOLID, 0, 0, 1, 1)
+            .box(Sketch.space("pipe", 50, 0.1), 0.3, 0.3, 0.5, 0.5)
+            .facing(Sketch.space("b", 0, 0.04), 1, 0, 1, 1, 0, 1),
+        1);
+    bound(
+        new Sketch()
+            .box(SOLID, 0, 0, 1, 1)
+            .box(Sketch.space("pipe", 50, 0.1), 0.3, 0.3, 0.5, 0.5)
+            .facing(Sketch.space("b", 0, 0.04), 1, 0, 1, 1, 0, 1, 0, 0, 1, 0),
+        1);
+    bound(
+        new Sketch()
+            .box(SOLID, 0, 0, 1, 1)
+            .box(Sketch.space("pipe", 50, 0.1), 0.3, 0.3, 0.5, 0.5)
+            .flow(5, 0, 0, 0, 1)
+            .facing(Sketch.space("b", 0, 0.04), 1, 0, 1, 1),
+        0);
+    bound(
+        new Sketch()
+            .box(SOLID, 0, 0, 1, 1)
+            .flow(5, 0, 0, 0, 1)
+            .facing(Sketch.space("b", 0, 0.04), 1, 0, 1, 1),
+        0);
+    bound(
+        new Sketch()
+            .box(SOLID, 0, 0, 1, 1)
+            .box(Sketch.space("pipe", 50, 0.1), 0.3, 0.3, 0.5, 0.5)
+            .box(Sketch.space("pipe 2", 50, 0.1), 0.6, 0.3, 0.7, 0.5)
+            .facing(Sketch.space("b", 0, 0.04), 1, 0, 1, 1),
+        0);
+    bound(
+        new Sketch()
+            .box(SOLID, 0, 0, 1, 1)
+            .box(Sketch.space("pipe", 50, 0.1), 0.3, 0.3, 0.5, 0.5)
+            .box(new Hollow("void"), 0.1, 0.7, 0.3, 0.8)
+            .facing(Sketch.space("b", 0, 0.04), 1, 0, 1, 1),
+        0);
   }
 
   @Test
