@@ -98,7 +98,7 @@ class JunctionsTest {
 
   /** Nothing is certified yet, and every figure says so. */
   @Test
-  void no_figure_claims_to_be_certified() {
+  void a_psi_is_certified_as_its_coupling_is() {
     Result result =
         new DrawnDetail()
             .box(OUTDOORS, -1500, -1500, 800, 800)
@@ -107,7 +107,7 @@ class JunctionsTest {
             .psi("internal", IN, OUT, INTERNAL)
             .solve(1e-3);
     Quantity psi = psi(result, "internal").valueWPerMK();
-    assertThat(psi.certified()).isFalse();
+    assertThat(psi.certified()).isTrue();
     assertThat(psi.halfWidth()).isGreaterThan(0).isLessThan(1e-3);
   }
 

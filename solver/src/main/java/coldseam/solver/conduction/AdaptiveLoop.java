@@ -53,12 +53,17 @@ final class AdaptiveLoop {
   private final Progress progress;
   private final History history;
   private final boolean proving;
+  private int passes;
 
   // of the present pass
   private Discretisation d;
   private double[][] fields;
   private ConductanceMatrix matrix;
+
+  /** Null where bounds steer and no temperature is asked for. */
   private HierarchicalIndicator indicator;
+
+  private boolean[] wanted;
   private TwoSidedBound bound;
   private boolean[][] meeting;
   private double[] sums;
@@ -94,7 +99,7 @@ final class AdaptiveLoop {
       double energy = Math.max(energyRatio(), jumpRatio());
       double reached = Math.max(energy, Math.max(temperatureRatio(excess), surfaceRatio(excess)));
       tell(reached);
-      if (reached <= 1 || history.passes() >= MOST_PASSES) {
+      if (reached <= 1 || passes >= MOST_PASSES) {
         break;
       }
       Mesh finer = marking.refine(wishes(), part(energy), excess);
@@ -104,7 +109,7 @@ final class AdaptiveLoop {
       }
       mesh = finer;
     }
-    return new FieldSolution(partition, conditions, d, fields, matrix, bound, history);
+    return new FieldSolution(partition, conditions, d, fields, matrix, bound, history, passes);
   }
 
   private void solve(Mesh mesh) {
@@ -117,9 +122,18 @@ final class AdaptiveLoop {
       bound = null;
       matrix = ConductanceMatrix.of(d, fields);
     }
-    boolean[] wanted = new boolean[d.spaces + 1];
+    passes++;
+    wanted = new boolean[d.spaces + 1];
     Arrays.fill(wanted, 0, d.spaces > 2 ? d.spaces : d.spaces - 1, true);
     wanted[d.spaces] = d.hasFlow;
+    indicator = null;
+    if (bound == null || goal.surfaceTemperatures()) {
+      estimate();
+    }
+    setTargets();
+  }
+
+  private void estimate() {
     indicator = new HierarchicalIndicator(d, fields, wanted);
     sums = new double[d.spaces + 1];
     for (int f = 0; f < sums.length; f++) {
@@ -133,7 +147,6 @@ final class AdaptiveLoop {
       sums[1] = sums[0];
     }
     history.add(matrix, Arrays.copyOf(sums, d.spaces), d.unknowns);
-    setTargets();
   }
 
   /** The temperature problem and the conjugate one side by side. */
@@ -169,8 +182,9 @@ final class AdaptiveLoop {
     if (goal.psiAsked()) {
       absolute = Math.min(absolute, accuracy.psiWPerMK());
     }
-    double relativePart = bound == null ? PART_OF_RELATIVE : PART_OF_PROVED;
-    double absolutePart = bound == null ? PART_OF_ABSOLUTE : PART_OF_PROVED;
+    double provedPart = goal.surfaceTemperatures() ? PART_WITH_TEMPERATURES : PART_OF_PROVED;
+    double relativePart = bound == null ? PART_OF_RELATIVE : provedPart;
+    double absolutePart = bound == null ? PART_OF_ABSOLUTE : provedPart;
     targets = new double[d.spaces + 1];
     for (int i = 0; i < d.spaces; i++) {
       targets[i] =
@@ -213,7 +227,7 @@ final class AdaptiveLoop {
   private double jumpRatio() {
     double sum = 0;
     for (int i = 0; i < d.spaces; i++) {
-      if (infinite(i) && indicator.energy[i] != null) {
+      if (infinite(i) && wanted[i]) {
         for (int t = 0; t < d.mesh.triangleCount(); t++) {
           sum += jumpWish(i, t);
         }
@@ -232,7 +246,7 @@ final class AdaptiveLoop {
   private double[] wishes() {
     double[] wishes = new double[d.mesh.triangleCount()];
     for (int f = 0; f <= d.spaces; f++) {
-      if (indicator.energy[f] == null || !(targets[f] > 0)) {
+      if (!wanted[f] || !(targets[f] > 0)) {
         continue;
       }
       boolean jumps = Double.isInfinite(targets[f]);
@@ -256,6 +270,9 @@ final class AdaptiveLoop {
    * @param excess takes the square of the error over what it may be, by triangle
    */
   private double temperatureRatio(double[] excess) {
+    if (indicator == null) {
+      return 0;
+    }
     double worst = 0;
     double smallest = SMALLEST * SMALLEST * d.extentSquared;
     for (int f = 0; f <= d.spaces; f++) {
@@ -300,8 +317,8 @@ final class AdaptiveLoop {
   }
 
   private void tell(double reached) {
-    if (!progress.pass(conditions.filmSet().toString(), history.passes(), d.unknowns, reached)) {
-      throw new CancellationException("cancelled after pass " + history.passes());
+    if (!progress.pass(conditions.filmSet().toString(), passes, d.unknowns, reached)) {
+      throw new CancellationException("cancelled after pass " + passes);
     }
   }
 }

@@ -19,6 +19,7 @@ final class FieldSolution implements Solution {
   private final ConductanceMatrix matrix;
   private final TwoSidedBound bound;
   private final History history;
+  private final int passes;
   private final boolean[][] meeting;
   private volatile StretchFlows stretchFlows;
 
@@ -29,7 +30,8 @@ final class FieldSolution implements Solution {
       double[][] fields,
       ConductanceMatrix matrix,
       TwoSidedBound bound,
-      History history) {
+      History history,
+      int passes) {
     this.partition = partition;
     this.conditions = conditions;
     this.d = d;
@@ -37,11 +39,15 @@ final class FieldSolution implements Solution {
     this.matrix = matrix;
     this.bound = bound;
     this.history = history;
+    this.passes = passes;
     meeting = d.meeting();
   }
 
   /** Guessed error over the sum of the indicators, the worst of the spaces. */
   double errorRatio() {
+    if (history.passes() == 0) {
+      return Double.NaN;
+    }
     double worst = 0;
     for (int i = 0; i < d.spaces; i++) {
       double[] x = new double[d.spaces];
@@ -77,7 +83,7 @@ final class FieldSolution implements Solution {
 
   @Override
   public int passes() {
-    return history.passes();
+    return passes;
   }
 
   @Override

@@ -286,7 +286,9 @@ class ExactCasesTest {
     Solution solution = checkerboard(a, b).accuracy(a * b < 1 ? 2e-3 : 1e-4).solve();
 
     assertThat(coupling(solution)).isCloseTo(Math.sqrt(a * b), withPercentage(percent));
-    assertThat(coupling(solution)).isGreaterThan(Math.sqrt(a * b));
+    Certificate.Certified proved =
+        (Certificate.Certified) solution.coupling(new int[] {0}, new int[] {1}).certificate();
+    assertThat(Math.sqrt(a * b)).isBetween(proved.lower(), proved.upper());
     assertThat(solution.temperatures(new double[] {1, 0}).at(new Point(0.5, 0.5)))
         .isCloseTo(0.5, within(0.01));
   }
@@ -465,6 +467,7 @@ class ExactCasesTest {
             .facing(out, 0, 0, 3, 0)
             .facing(a, 0, 0.3, 1.4, 0.3, 1.4, 1.8)
             .facing(b, 1.6, 1.8, 1.6, 0.3, 3, 0.3)
+            .surfaceTemperatures()
             .solve();
     double[] temperatures = {0, 20, 15};
 

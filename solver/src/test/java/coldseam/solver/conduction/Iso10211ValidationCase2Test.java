@@ -48,7 +48,7 @@ class Iso10211ValidationCase2Test {
   }
 
   private static void check(Sketch sketch, UnaryOperator<Point> move, double kelvin) {
-    Solution solution = sketch.solve();
+    Solution solution = sketch.surfaceTemperatures().solve();
     double[] temperatures = {20, 0};
     TemperatureField field = solution.temperatures(temperatures);
 

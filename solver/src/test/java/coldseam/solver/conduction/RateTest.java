@@ -51,9 +51,10 @@ class RateTest {
     SimpleRegression line = new SimpleRegression();
     for (double accuracy : accuracies) {
       Solution solution = sketch.accuracy(accuracy).solve();
-      double error = solution.coupling(new int[] {0}, new int[] {1}).value() / exact - 1;
-      assertThat(error).isBetween(0.0, accuracy);
-      line.addData(Math.log(solution.unknowns()), Math.log(error));
+      Quantity coupling = solution.coupling(new int[] {0}, new int[] {1});
+      assertThat(Math.abs(coupling.value() - exact)).isLessThan(coupling.halfWidth());
+      assertThat(coupling.halfWidth()).isLessThan(accuracy * exact);
+      line.addData(Math.log(solution.unknowns()), Math.log(coupling.halfWidth()));
     }
     assertThat(line.getSlope()).isLessThan(-1.8);
   }
