@@ -15,6 +15,9 @@ final class AdaptiveLoop {
   /** Part of an accuracy that a proved half-width may take: the middle is better than its proof. */
   private static final double PART_OF_PROVED = 0.35;
 
+  /** The same where temperatures are asked for: near singular corners they are last to settle. */
+  private static final double PART_WITH_TEMPERATURES = 0.12;
+
   /**
    * Largest disagreement of the two ways to the gap, relative to the energy, times the allowance.
    */
