@@ -24,6 +24,14 @@ final class DelaunayRefinement {
   /** Height over base of the tallest triangle wanted, a little less than the limit. */
   private static final double TALLEST = 0.475 / Math.tan(Math.toRadians(LEAST_ANGLE_DEGREES / 2));
 
+  /**
+   * Ends the search for good angles, should ladders and sharp corners ever keep it from ending by
+   * itself: the mesh is sound after any step. Random drawings take some ten steps a triangle.
+   */
+  private static final int MOST_STEPS_A_TRIANGLE = 200;
+
+  private static final int MOST_STEPS_AT_LEAST = 20_000;
+
   private final ConstrainedDelaunay plane;
   private final Ladders ladders;
   private final boolean[] meshed;
@@ -34,6 +42,7 @@ final class DelaunayRefinement {
 
   private int[] stamp;
   private int stamps;
+  private int stepsLeft;
   private int[] cavity = new int[64];
 
   /**
@@ -66,15 +75,19 @@ final class DelaunayRefinement {
 
   /** Refines until nothing bad is left that can be bettered. */
   void run() {
+    run(MOST_STEPS_A_TRIANGLE * plane.triangleCount + MOST_STEPS_AT_LEAST);
+  }
+
+  /** Refines; after so many steps for the sake of angles only sizes are looked at. */
+  void run(int mostSteps) {
+    stepsLeft = mostSteps;
     for (int t = 0; t < plane.triangleCount; t++) {
       consider(t);
     }
     plane.touchedCount = 0;
     while (queue.poll()) {
       int t = queue.triangle();
-      if (plane.corner[3 * t] == queue.corner(0)
-          && plane.corner[3 * t + 1] == queue.corner(1)
-          && plane.corner[3 * t + 2] == queue.corner(2)) {
+      if (isUnchanged(t) && (isTooLarge(t) || stepsLeft-- > 0)) {
         boolean acted = improve(t);
         for (int i = 0; i < plane.touchedCount; i++) {
           consider(plane.touched[i]);
@@ -85,6 +98,13 @@ final class DelaunayRefinement {
         }
       }
     }
+  }
+
+  /** Whether a triangle still has the corners with which it was queued. */
+  private boolean isUnchanged(int t) {
+    return plane.corner[3 * t] == queue.corner(0)
+        && plane.corner[3 * t + 1] == queue.corner(1)
+        && plane.corner[3 * t + 2] == queue.corner(2);
   }
 
   private boolean isMeshed(int t) {
@@ -99,7 +119,8 @@ final class DelaunayRefinement {
     }
     int shortest = shortestSide(t);
     double length = plane.length(shortest);
-    boolean thin = !ladders.isLadder(t) && isThin(t, shortest) && !sharp.excuses(shortest);
+    boolean thin =
+        stepsLeft > 0 && !ladders.isLadder(t) && isThin(t, shortest) && !sharp.excuses(shortest);
     if (thin || isTooLarge(t)) {
       queue.add(length, t, plane.corner[3 * t], plane.corner[3 * t + 1], plane.corner[3 * t + 2]);
     }

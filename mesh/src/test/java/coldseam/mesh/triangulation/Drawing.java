@@ -1,7 +1,6 @@
 package coldseam.mesh.triangulation;
 
 import coldseam.mesh.partition.LabelledArea;
-import coldseam.mesh.partition.LabelledLine;
 import coldseam.mesh.partition.Partition;
 import coldseam.mesh.plane.Point;
 import coldseam.mesh.plane.Resolution;
@@ -41,14 +40,18 @@ final class Drawing {
 
   /** x, y, x, y, … */
   Drawing polygon(int label, double... corners) {
-    List<Point> ring = new ArrayList<>();
+    areas.add(new LabelledArea(label, List.of(points(corners))));
+    return this;
+  }
+
+  private List<Point> points(double... corners) {
+    List<Point> points = new ArrayList<>();
     for (int i = 0; i < corners.length; i += 2) {
       double x = corners[i] / 1000;
       double y = corners[i + 1] / 1000;
-      ring.add(new Point(cos * x - sin * y + shiftXM, sin * x + cos * y + shiftYM));
+      points.add(new Point(cos * x - sin * y + shiftXM, sin * x + cos * y + shiftYM));
     }
-    areas.add(new LabelledArea(label, List.of(ring)));
-    return this;
+    return points;
   }
 
   /** A sheet of constant thickness along x, y, x, y, …, mitred at the bends. */
@@ -82,7 +85,7 @@ final class Drawing {
   }
 
   Partition partition() {
-    return Partition.of(areas, List.<LabelledLine>of(), Resolution.STANDARD);
+    return Partition.of(areas, List.of(), Resolution.STANDARD);
   }
 
   private static double[] normal(double[] line, int piece) {

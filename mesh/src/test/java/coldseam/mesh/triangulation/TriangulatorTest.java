@@ -6,6 +6,7 @@ import static org.assertj.core.api.Assertions.within;
 
 import coldseam.mesh.partition.Partition;
 import coldseam.mesh.plane.Point;
+import java.util.Arrays;
 import org.junit.jupiter.api.Test;
 
 class TriangulatorTest {
@@ -106,6 +107,55 @@ class TriangulatorTest {
           .as("%s degrees", degrees)
           .isLessThan(400);
     }
+  }
+
+  @Test
+  void lowlyMeshesAreSoundToo() {
+    for (int steps = 0; steps < 60; steps += 3) {
+      Linework lines = Linework.of(RandomDrawing.of(steps).partition()).alongCurve();
+      boolean[] meshed = new boolean[lines.faceLabel.length];
+      Arrays.fill(meshed, true);
+      ConstrainedDelaunay plane = new ConstrainedDelaunay(lines);
+      Faces.fill(plane, lines);
+      Ladders ladders = new Ladders(plane, lines);
+      ladders.build(LadderSearch.search(plane, meshed));
+      int before = plane.triangleCount;
+      new DelaunayRefinement(plane, lines, ladders, meshed, SizeField.NONE).run(steps);
+      Mesh mesh = MeshAssembly.assemble(plane, lines, meshed);
+      MeshCheck.require(mesh, lines, meshed);
+      assertThat(plane.triangleCount).isBetween(before, before + 100 * steps);
+    }
+  }
+
+  /** An edge right across a face and one with loose ends, the same face on both hands. */
+  @Test
+  void edgesWithinAFaceAreKept() {
+    Linework lines =
+        new Linework(
+            new Point(0, 0),
+            new double[] {0, 1, 1, 0, 0, 1, 0.3, 0.3},
+            new double[] {0, 0, 0.4, 0.4, 0.2, 0.2, 0.05, 0.199},
+            new int[] {0, 1, 5, 2, 3, 4, 4, 6},
+            new int[] {1, 5, 2, 3, 4, 0, 5, 7},
+            new int[8],
+            new int[] {-1, -1, -1, -1, -1, -1, 0, 0},
+            new int[1]);
+    Mesh mesh = Triangulator.triangulate(lines, l -> true, SizeField.NONE);
+    double[] lengths = new double[8];
+    boolean[] seen = new boolean[mesh.sideCount()];
+    for (int t = 0; t < mesh.triangleCount(); t++) {
+      for (int k = 0; k < 3; k++) {
+        int edge = mesh.partitionEdge(t, k);
+        int side = mesh.side(t, k);
+        if (edge != Mesh.NONE && !seen[side]) {
+          seen[side] = true;
+          lengths[edge] += mesh.sideLength(side);
+        }
+      }
+    }
+    assertThat(lengths[6]).isCloseTo(1, within(1e-12));
+    assertThat(lengths[7]).isCloseTo(0.149, within(1e-12));
+    assertThat(mesh.triangleCount()).isLessThan(100);
   }
 
   @Test
