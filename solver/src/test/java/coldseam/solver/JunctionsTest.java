@@ -11,6 +11,7 @@ import static org.assertj.core.api.Assertions.catchThrowableOfType;
 import static org.assertj.core.api.Assertions.within;
 
 import coldseam.mesh.plane.Point;
+import coldseam.solver.conduction.Certificate;
 import coldseam.solver.conduction.Quantity;
 import coldseam.solver.detail.DetailException;
 import coldseam.solver.detail.FilmSet;
@@ -18,9 +19,12 @@ import coldseam.solver.detail.Material;
 import coldseam.solver.detail.Space;
 import coldseam.solver.detail.Subtraction;
 import coldseam.solver.detail.View;
+import coldseam.solver.detail.Wanted;
 import coldseam.solver.result.Result;
+import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.OptionalDouble;
 import org.junit.jupiter.api.Test;
 
 /**
@@ -96,19 +100,34 @@ class JunctionsTest {
         .containsExactly("resolve", "heat loss", "surface temperatures", "results");
   }
 
-  /** Nothing is certified yet, and every figure says so. */
+  /** Computed: degree 8, eight digits stable. U of the flanks is exact, so ψ is as wide as L2D. */
   @Test
-  void a_psi_is_certified_as_its_coupling_is() {
+  void a_psi_is_certified_as_its_coupling_is_and_contains_the_fine_value() {
     Result result =
         new DrawnDetail()
             .box(OUTDOORS, -1500, -1500, 800, 800)
             .box(material("masonry", 0.5), -1500, -1500, 300, 300)
             .box(INDOORS, -1500, -1500, 0, 0)
             .psi("internal", IN, OUT, INTERNAL)
+            .psi("external", IN, OUT, EXTERNAL)
+            .want(new Wanted.Transmittance("wall", IN, OUT, OptionalDouble.of(1)))
             .solve(1e-3);
-    Quantity psi = psi(result, "internal").valueWPerMK();
-    assertThat(psi.certified()).isTrue();
-    assertThat(psi.halfWidth()).isGreaterThan(0).isLessThan(1e-3);
+    assertContains(psi(result, "internal").valueWPerMK(), 0.17411129);
+    assertContains(psi(result, "external").valueWPerMK(), -0.60510949);
+    assertContains(result.transmittances().get(0).valueWPerM2K(), 4.07021518);
+    assertContains(result.transmittances().get(0).resistanceM2KPerW(), 1 / 4.07021518);
+    Quantity coupling = psi(result, "internal").couplingWPerMK();
+    assertThat(psi(result, "internal").valueWPerMK().halfWidth())
+        .isCloseTo(coupling.halfWidth(), within(1e-12));
+  }
+
+  /** The fine value is rounded to eight decimals. */
+  private static void assertContains(Quantity quantity, double fine) {
+    assertThat(quantity.certificate())
+        .isInstanceOfSatisfying(
+            Certificate.Certified.class,
+            proved -> assertThat(fine).isBetween(proved.lower() - 5e-9, proved.upper() + 5e-9));
+    assertThat(quantity.halfWidth()).isGreaterThan(0).isLessThan(1e-2);
   }
 
   /** Computed; flows, weighting factors and corner temperatures likewise. */
@@ -130,7 +149,7 @@ class JunctionsTest {
     assertThat(space(result, "b").heatFlowWPerM()).isCloseTo(-9.89429, within(3e-3));
     assertThat(point(result, "corner a")).isCloseTo(17.85127, within(8e-3));
     assertThat(point(result, "corner b")).isCloseTo(15.67579, within(8e-3));
-    Map<String, Double> g = new java.util.HashMap<>();
+    Map<String, Double> g = new HashMap<>();
     result.weights().stream()
         .filter(w -> w.point().equals("corner a"))
         .forEach(w -> g.put(w.space(), w.g()));
@@ -353,8 +372,8 @@ class JunctionsTest {
                 OUT,
                 Map.of(),
                 EXTERNAL,
-                new Subtraction.OfFlank("top flank", java.util.OptionalDouble.empty()),
-                new Subtraction.OfFlank("ground", java.util.OptionalDouble.of(4.38)))
+                new Subtraction.OfFlank("top flank", OptionalDouble.empty()),
+                new Subtraction.OfFlank("ground", OptionalDouble.of(4.38)))
             .point("corner", 0, 0, FilmSet.HEAT_LOSS)
             .solve(1e-4);
     assertThat(coupling(result, "indoors", "outdoors"))
