@@ -5,6 +5,7 @@ import coldseam.solver.conduction.TemperatureField;
 import coldseam.solver.detail.Conditions;
 import coldseam.solver.detail.Material;
 import java.util.Arrays;
+import java.util.function.IntToDoubleFunction;
 
 /**
  * The heat-flow density q = −Λ grad θ, W/m²: averaged at each vertex and side middle over the
@@ -166,30 +167,52 @@ final class FlowDensity implements Nodal {
   }
 
   /**
-   * The density that is reached on all but a share of the section.
+   * The density that is reached on all but a share of the area.
    *
-   * @param share of the section with less
-   * @param power of the density that areas are weighted with: with 0 an area counts as it is, with
-   *     2 places of much flow count however small they are
+   * @param share of the area with less
    * @return W/m²
    */
-  double quantile(double share, int power) {
+  double ofArea(double share) {
+    return quantile(share, mesh::area);
+  }
+
+  /**
+   * The density that is reached where all but a share of the dissipation q²/λ takes place, so that
+   * small places count where much temperature is lost, and thin sheets of good conductors do not.
+   *
+   * @param share of the dissipation where there is less
+   * @return W/m²
+   */
+  double ofDissipation(double share) {
+    return quantile(
+        share,
+        t -> {
+          Material material = conditions.material(mesh.label(t));
+          double lambda =
+              Math.max(material.conductivityWPerMK(), material.crossConductivityWPerMK());
+          return mesh.area(t) * Math.pow(10, 2 * mean(t)) / lambda;
+        });
+  }
+
+  private double mean(int t) {
+    return (atCorner(t, 0) + atCorner(t, 1) + atCorner(t, 2)) / 3;
+  }
+
+  private double quantile(double share, IntToDoubleFunction weight) {
     int n = mesh.triangleCount();
     double[] means = new double[n];
-    double[] weights = new double[n];
     double total = 0;
     Integer[] sorted = new Integer[n];
     for (int t = 0; t < n; t++) {
-      means[t] = (atCorner(t, 0) + atCorner(t, 1) + atCorner(t, 2)) / 3;
-      weights[t] = mesh.area(t) * Math.pow(10, power * means[t]);
-      total += weights[t];
+      means[t] = mean(t);
+      total += weight.applyAsDouble(t);
       sorted[t] = t;
     }
     Arrays.sort(sorted, (a, b) -> Double.compare(means[a], means[b]));
     double sum = 0;
-    double found = n == 0 ? 0 : means[sorted[n - 1]];
+    double found = means[sorted[n - 1]];
     for (int i = 0; i < n && sum < share * total; i++) {
-      sum += weights[sorted[i]];
+      sum += weight.applyAsDouble(sorted[i]);
       found = means[sorted[i]];
     }
     return Math.pow(10, found);

@@ -16,8 +16,8 @@ final class HeatFlowView extends View {
   /** Part of the area with less than the lowest band begins with. */
   private static final double LITTLE = 0.02;
 
-  /** Part of the squared flow that the highest band leaves below it. */
-  private static final double MUCH = 0.9;
+  /** Part of the dissipation where there is less than the highest band begins with. */
+  private static final double MUCH = 0.97;
 
   private static final double GRID = 26;
   private static final double SHORTEST = 7;
@@ -39,8 +39,8 @@ final class HeatFlowView extends View {
     super(result, caption, section);
     Solution solution = result.heatLoss();
     density = new FlowDensity(solution.temperatures(temperaturesC()), solution.conditions());
-    double little = figures().scaledDensity(density.quantile(LITTLE, 0));
-    double much = figures().scaledDensity(density.quantile(MUCH, 2));
+    double little = figures().scaledDensity(density.ofArea(LITTLE));
+    double much = figures().scaledDensity(density.ofDissipation(MUCH));
     List<Double> series = Levels.series(little, Math.max(much, 2 * little));
     levels = series.subList(Math.max(0, series.size() - MOST_LEVELS), series.size());
   }
