@@ -34,11 +34,17 @@ abstract class Canvas {
   abstract void written(Anchor anchor);
 
   final void fill(Shape shape, Color colour) {
+    if (shape.getPathIterator(null).isDone()) {
+      return;
+    }
     graphics.setPaint(colour);
     graphics.fill(shape);
   }
 
   final void stroke(Shape shape, Color colour, Pen pen) {
+    if (shape.getPathIterator(null).isDone()) {
+      return;
+    }
     graphics.setPaint(colour);
     graphics.setStroke(pen.stroke());
     graphics.draw(shape);

@@ -57,9 +57,9 @@ final class Clip {
     };
   }
 
-  /** The parts of a line inside, in order. */
+  /** The parts of a line inside, in order; the line itself if it lies inside altogether. */
   static List<Polyline> line(Polyline line, Box box) {
-    if (!line.closed() && box.contains(line.bounds())) {
+    if (box.contains(line.bounds())) {
       return List.of(line);
     }
     List<Polyline> parts = new ArrayList<>();

@@ -11,6 +11,9 @@ import java.util.Optional;
 
 /** Heat flow: its density in filled bands, its direction, what passes through each space. */
 final class HeatFlowView extends View {
+  /** Said where two fixed temperatures meet in a point. */
+  private static final String NOT_FINITE = "no finite heat flow";
+
   private static final int MOST_LEVELS = 10;
 
   /** Part of the area with less than the lowest band begins with. */
@@ -40,9 +43,15 @@ final class HeatFlowView extends View {
     Solution solution = result.heatLoss();
     density = new FlowDensity(solution.temperatures(temperaturesC()), solution.conditions());
     double little = figures().scaledDensity(density.ofArea(LITTLE));
-    double much = figures().scaledDensity(density.ofDissipation(MUCH));
+    double much = figures().scaledDensity(much());
     List<Double> series = Levels.series(little, Math.max(much, 2 * little));
     levels = series.subList(Math.max(0, series.size() - MOST_LEVELS), series.size());
+  }
+
+  private double much() {
+    boolean finite =
+        result().spaces().stream().allMatch(space -> Double.isFinite(space.heatFlowWPerM()));
+    return finite ? density.ofDissipation(MUCH) : density.ofArea(1 - LITTLE);
   }
 
   @Override
@@ -62,6 +71,9 @@ final class HeatFlowView extends View {
   /** "12.3 W/m into the detail". */
   private String passing(Result.SpaceResult space) {
     double flow = space.heatFlowWPerM();
+    if (!Double.isFinite(flow)) {
+      return NOT_FINITE;
+    }
     String sense = flow > 0 ? " into the detail" : flow < 0 ? " out of the detail" : "";
     return figures().flow(Math.abs(flow), halfWidth(space.name()))
         + Figures.JOINED
@@ -70,6 +82,9 @@ final class HeatFlowView extends View {
   }
 
   private String signed(double flow, double halfWidth) {
+    if (!Double.isFinite(flow)) {
+      return NOT_FINITE;
+    }
     return Digits.signed(figures().flow(flow, halfWidth)) + Figures.JOINED + figures().flowUnit();
   }
 
@@ -86,6 +101,13 @@ final class HeatFlowView extends View {
       }
     }
     return sum;
+  }
+
+  /** The flow through a stretch; infinite if its space has no finite one. */
+  private double stretchFlow(Result.StretchResult stretch) {
+    int space = section().detail().spaceIndex(stretch.space());
+    double whole = space < 0 ? 0 : result().spaces().get(space).heatFlowWPerM();
+    return Double.isFinite(whole) ? stretch.heatFlowWPerM() : whole;
   }
 
   private double worstHalfWidth() {
@@ -133,7 +155,7 @@ final class HeatFlowView extends View {
 
   private String stretch(int index) {
     Result.StretchResult stretch = result().stretches().get(index);
-    return stretch.name() + " " + signed(stretch.heatFlowWPerM(), worstHalfWidth());
+    return stretch.name() + " " + signed(stretchFlow(stretch), worstHalfWidth());
   }
 
   /** Arrows on a staggered grid, longer where more flows, all one path. */
@@ -227,7 +249,7 @@ final class HeatFlowView extends View {
     if (!result().stretches().isEmpty()) {
       key.heading("Of it, through stretches");
       for (Result.StretchResult stretch : result().stretches()) {
-        key.row(stretch.name(), signed(stretch.heatFlowWPerM(), worstHalfWidth()));
+        key.row(stretch.name(), signed(stretchFlow(stretch), worstHalfWidth()));
       }
     }
     return key;

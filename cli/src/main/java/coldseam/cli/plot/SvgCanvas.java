@@ -136,6 +136,7 @@ final class SvgCanvas extends Canvas {
       root.removeChild(root.getFirstChild());
     }
     root.setAttribute("viewBox", "0 0 " + (int) width + " " + (int) height);
+    root.setAttribute("font-family", "sans-serif");
     root.setAttribute("role", "img");
     root.setAttribute("aria-labelledby", name + "-title " + name + "-desc");
     root.appendChild(told("title", title));
