@@ -5,8 +5,10 @@ import coldseam.mesh.refinement.NewestVertexBisection;
 import coldseam.mesh.triangulation.Mesh;
 import coldseam.solver.detail.Accuracy;
 import coldseam.solver.detail.Conditions;
+import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.BitSet;
+import java.util.List;
 import java.util.concurrent.CancellationException;
 import java.util.concurrent.CompletableFuture;
 
@@ -56,6 +58,7 @@ final class AdaptiveLoop {
   private final Progress progress;
   private final History history;
   private final boolean proving;
+  private final List<Proved> proved = new ArrayList<>();
   private int passes;
 
   // of the present pass
@@ -72,6 +75,16 @@ final class AdaptiveLoop {
   private double[] sums;
   private double[] targets;
   private SurfaceExtremes extremes;
+
+  /**
+   * What one pass proved.
+   *
+   * @param unknowns unknowns of the temperature problem
+   * @param up upper energies
+   * @param lo lower energies
+   * @param gap their difference as the sum of local gaps
+   */
+  record Proved(int unknowns, double[][] up, double[][] lo, double[][] gap) {}
 
   AdaptiveLoop(
       Partition partition,
@@ -112,7 +125,8 @@ final class AdaptiveLoop {
       }
       mesh = finer;
     }
-    return new FieldSolution(partition, conditions, d, fields, matrix, bound, history, passes);
+    return new FieldSolution(
+        partition, conditions, d, fields, matrix, bound, history, List.copyOf(proved), passes);
   }
 
   private void solve(Mesh mesh) {
@@ -160,6 +174,7 @@ final class AdaptiveLoop {
     fields = Assembly.unitFields(d);
     bound = new TwoSidedBound(d, fields, space, streams.join());
     matrix = ConductanceMatrix.of(d, bound);
+    proved.add(new Proved(d.unknowns, bound.up, bound.lo, bound.gap));
     if (!(bound.mismatch() <= MISMATCH * bound.allowance)) {
       throw new IllegalStateException(
           "the two ways to the gap of the bounds disagree by " + bound.mismatch());

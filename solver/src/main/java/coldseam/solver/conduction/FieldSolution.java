@@ -3,6 +3,7 @@ package coldseam.solver.conduction;
 import coldseam.mesh.partition.Partition;
 import coldseam.mesh.triangulation.Mesh;
 import coldseam.solver.detail.Conditions;
+import java.util.List;
 
 /** The unit fields on the final mesh and what follows from them. */
 final class FieldSolution implements Solution {
@@ -19,6 +20,7 @@ final class FieldSolution implements Solution {
   private final ConductanceMatrix matrix;
   private final TwoSidedBound bound;
   private final History history;
+  private final List<AdaptiveLoop.Proved> proved;
   private final int passes;
   private final boolean[][] meeting;
   private volatile StretchFlows stretchFlows;
@@ -31,6 +33,7 @@ final class FieldSolution implements Solution {
       ConductanceMatrix matrix,
       TwoSidedBound bound,
       History history,
+      List<AdaptiveLoop.Proved> proved,
       int passes) {
     this.partition = partition;
     this.conditions = conditions;
@@ -39,6 +42,7 @@ final class FieldSolution implements Solution {
     this.matrix = matrix;
     this.bound = bound;
     this.history = history;
+    this.proved = proved;
     this.passes = passes;
     meeting = d.meeting();
   }
@@ -55,6 +59,11 @@ final class FieldSolution implements Solution {
       worst = Math.max(worst, history.ratio(x));
     }
     return worst;
+  }
+
+  /** What each pass proved, in order. */
+  List<AdaptiveLoop.Proved> proved() {
+    return proved;
   }
 
   History history() {

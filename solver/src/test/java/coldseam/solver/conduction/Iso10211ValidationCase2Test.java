@@ -29,7 +29,7 @@ class Iso10211ValidationCase2Test {
     {500, 0, 18.3, 18.333663}
   };
 
-  private static Sketch detail(UnaryOperator<Point> move) {
+  static Sketch detail(UnaryOperator<Point> move) {
     Space inside = space("inside", 20, 0.11);
     Space outside = space("outside", 0, 0.06);
     Material metal = material("aluminium", 230);
