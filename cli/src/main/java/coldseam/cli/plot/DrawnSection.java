@@ -300,7 +300,13 @@ final class DrawnSection {
    * @param space index of a space
    */
   int labelOfSpace(int space) {
-    return fills.indexOf(detail().spaces().get(space));
+    String name = detail().spaces().get(space).name();
+    for (int label = 0; label < fills.size(); label++) {
+      if (fills.get(label).name().equals(name)) {
+        return label;
+      }
+    }
+    return -1;
   }
 
   Partition partition() {

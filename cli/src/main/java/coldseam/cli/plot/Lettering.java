@@ -24,7 +24,7 @@ record Lettering(float size, boolean bold, Color ink) {
 
   /** Java's logical sans-serif face, which becomes {@code sans-serif} in an SVG. */
   Font font() {
-    return new Font(Font.SANS_SERIF, bold ? Font.BOLD : Font.PLAIN, 1).deriveFont(size);
+    return new NamedFont(Font.SANS_SERIF, bold ? Font.BOLD : Font.PLAIN, size);
   }
 
   /** Height of a line of this text, points. */

@@ -37,6 +37,9 @@ final class SvgCanvas extends Canvas {
       setStyleHandler(new DefaultStyleHandler());
       setErrorHandler(new DefaultErrorHandler());
       setComment(null);
+      GraphicContextDefaults defaults = new GraphicContextDefaults();
+      defaults.setFont(Lettering.LABEL.font());
+      setGraphicContextDefaults(defaults);
       decimalFormat = new DecimalFormat("0.##", DecimalFormatSymbols.getInstance(Locale.ROOT));
     }
   }
