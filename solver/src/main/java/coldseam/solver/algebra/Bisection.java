@@ -28,11 +28,8 @@ final class Bisection {
   /** A set is long if one side is that many times the other. */
   private static final double LONG_FROM = 6;
 
-  /** Sets with fewer elements are cut along the axes only. */
-  private static final int MANY_DIRECTIONS_FROM = 100;
-
-  /** Cuts of sets with fewer elements are not smoothed. */
-  private static final int SMOOTHED_FROM = 48;
+  /** Sets with fewer elements are cut along the axes only, and not smoothed. */
+  private static final int SMALL_SET = 100;
 
   private final ElementSet set;
   private final double[] key;
@@ -78,7 +75,7 @@ final class Bisection {
       for (int e = 0; e < right.length; e++) {
         right[e] = bisection.best.ofElement(e) > bisection.bestCut;
       }
-      if (right.length >= SMOOTHED_FROM) {
+      if (right.length >= SMALL_SET) {
         CutSmoothing.of(set, bisection.best, bisection.bestCut, right);
       }
     }
@@ -86,32 +83,33 @@ final class Bisection {
   }
 
   private void sweepPlane() {
-    double[] x = set.x();
-    double[] y = set.y();
-    System.arraycopy(x, 0, key, 0, key.length);
-    sweep();
+    sweepAlong(1, 0);
     double middleX = sample[sample.length / 2];
     double extentX = extent();
-    System.arraycopy(y, 0, key, 0, key.length);
-    sweep();
-    if (key.length < MANY_DIRECTIONS_FROM) {
+    sweepAlong(0, 1);
+    if (key.length < SMALL_SET) {
       return;
     }
     double middleY = sample[sample.length / 2];
     double stretch = stretch(extentX / extent());
-    for (int e = 0; e < key.length; e++) {
-      key[e] = x[e] + stretch * y[e];
-    }
-    sweep();
-    for (int e = 0; e < key.length; e++) {
-      key[e] = x[e] - stretch * y[e];
-    }
-    sweep();
+    sweepAlong(1, stretch);
+    sweepAlong(1, -stretch);
+    double[] x = set.x();
+    double[] y = set.y();
     for (int e = 0; e < key.length; e++) {
       double dx = x[e] - middleX;
       double dy = stretch * (y[e] - middleY);
       // the bits of a positive number grow almost like its logarithm
       key[e] = Double.doubleToRawLongBits(dx * dx + dy * dy);
+    }
+    sweep();
+  }
+
+  private void sweepAlong(double dx, double dy) {
+    double[] x = set.x();
+    double[] y = set.y();
+    for (int e = 0; e < key.length; e++) {
+      key[e] = dx * x[e] + dy * y[e];
     }
     sweep();
   }

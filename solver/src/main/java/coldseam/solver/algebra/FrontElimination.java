@@ -101,7 +101,7 @@ final class FrontElimination {
       addToTrapezium(
           c, inside ? pile[other] : passed[c], inside ? layout.update()[c] : 0, a, at, width);
     }
-    boolean shared = units.count() > 1 && fronts.work(f) > WORTH_SHARING;
+    boolean shared = fronts.work(f) > WORTH_SHARING;
     int bad =
         shared
             ? eliminateShared(a, at, width, width + rows)
@@ -113,12 +113,12 @@ final class FrontElimination {
       return -1;
     }
     boolean stays = fronts.parent()[f] < lastOfUnit;
-    double[] u = stays ? pile[1 - other] : new double[DenseBlocks.triangle(rows)];
+    double[] u = stays ? pile[1 - other] : new double[DenseUpdate.triangle(rows)];
     int to = stays ? layout.update()[f] : 0;
     if (shared) {
       updateShared(a, at + width * width, width, rows, u, to);
     } else {
-      DenseBlocks.update(a, at + width * width, width, 0, rows, u, to);
+      DenseUpdate.write(a, at + width * width, width, 0, rows, u, to);
     }
     for (int c = fronts.firstChild()[f]; c >= 0; c = fronts.sibling()[c]) {
       boolean inside = c >= firstOfUnit;
@@ -161,9 +161,9 @@ final class FrontElimination {
     while (first < rows && place[start + first] < width) {
       first++;
     }
-    int p = at + DenseBlocks.triangle(first);
+    int p = at + DenseUpdate.triangle(first);
     for (int i = first; i < rows; i++) {
-      int base = to + DenseBlocks.triangle(place[start + i] - width) - width;
+      int base = to + DenseUpdate.triangle(place[start + i] - width) - width;
       for (int j = first; j <= i; j++) {
         u[base + place[start + j]] += from[p + j];
       }
@@ -197,7 +197,7 @@ final class FrontElimination {
     for (int k = 1; k <= PIECES; k++) {
       int begin = row;
       int end = k == PIECES ? rows : (int) (rows * Math.sqrt((double) k / PIECES)) & ~3;
-      pieces.add(new Piece(() -> DenseBlocks.update(a, at, width, begin, end, u, to)));
+      pieces.add(new Piece(() -> DenseUpdate.write(a, at, width, begin, end, u, to)));
       row = end;
     }
     ForkJoinTask.invokeAll(pieces);

@@ -39,7 +39,7 @@ record Layout(
         int pile = odd[f] ? 1 : 0;
         if (fronts.parent()[f] >= 0 && fronts.parent()[f] < last) {
           update[f] = top[pile];
-          top[pile] = Math.addExact(top[pile], DenseBlocks.triangle(fronts.rows(f)));
+          top[pile] = Math.addExact(top[pile], DenseUpdate.triangle(fronts.rows(f)));
           if (pile == 0) {
             evenPile[u] = Math.max(evenPile[u], top[0]);
           } else {
@@ -48,7 +48,7 @@ record Layout(
         }
         for (int c = fronts.firstChild()[f]; c >= 0; c = fronts.sibling()[c]) {
           if (c >= first) {
-            top[1 - pile] -= DenseBlocks.triangle(fronts.rows(c));
+            top[1 - pile] -= DenseUpdate.triangle(fronts.rows(c));
           }
         }
       }

@@ -23,8 +23,8 @@ class DenseBlocksTest {
     DMatrixRMaj full = RandomMatrices_DDRM.symmetricPosDef(n, new Random(n));
     double[] a = trapezium(full, width, 3);
     assertThat(DenseBlocks.eliminate(a, 3, width, n)).isEqualTo(-1);
-    double[] u = new double[DenseBlocks.triangle(rows) + 5];
-    DenseBlocks.update(a, 3 + width * width, width, 0, rows, u, 5);
+    double[] u = new double[DenseUpdate.triangle(rows) + 5];
+    DenseUpdate.write(a, 3 + width * width, width, 0, rows, u, 5);
     CholeskyDecomposition_F64<DMatrixRMaj> cholesky = DecompositionFactory_DDRM.chol(n, true);
     assertThat(cholesky.decompose(full.copy())).isTrue();
     DMatrixRMaj l = cholesky.getT(null);
@@ -40,7 +40,7 @@ class DenseBlocksTest {
         for (int k = 0; k < width; k++) {
           sum += l.get(width + i, k) * l.get(width + j, k);
         }
-        assertThat(u[5 + DenseBlocks.triangle(i) + j]).isCloseTo(-sum, within(1e-11 * scale));
+        assertThat(u[5 + DenseUpdate.triangle(i) + j]).isCloseTo(-sum, within(1e-11 * scale));
       }
     }
   }
@@ -61,11 +61,11 @@ class DenseBlocksTest {
       DenseBlocks.eliminateRows(parts, 0, width, from, to, to, third);
     }
     assertThat(lower(parts, width)).isEqualTo(lower(whole, width));
-    double[] u = new double[DenseBlocks.triangle(rows)];
-    double[] v = new double[DenseBlocks.triangle(rows)];
-    DenseBlocks.update(whole, width * width, width, 0, rows, u, 0);
-    DenseBlocks.update(whole, width * width, width, 48, rows, v, 0);
-    DenseBlocks.update(whole, width * width, width, 0, 48, v, 0);
+    double[] u = new double[DenseUpdate.triangle(rows)];
+    double[] v = new double[DenseUpdate.triangle(rows)];
+    DenseUpdate.write(whole, width * width, width, 0, rows, u, 0);
+    DenseUpdate.write(whole, width * width, width, 48, rows, v, 0);
+    DenseUpdate.write(whole, width * width, width, 0, 48, v, 0);
     assertThat(v).isEqualTo(u);
   }
 

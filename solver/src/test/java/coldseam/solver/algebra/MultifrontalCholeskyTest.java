@@ -8,6 +8,7 @@ import static org.assertj.core.api.Assertions.within;
 import java.util.Arrays;
 import java.util.Random;
 import java.util.concurrent.ForkJoinPool;
+import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.data.DMatrixSparseCSC;
 import org.ejml.data.DMatrixSparseTriplet;
@@ -139,20 +140,67 @@ class MultifrontalCholeskyTest {
   void the_numbers_do_not_depend_on_the_number_of_threads() {
     QuadraticLaplacian problem =
         new QuadraticLaplacian(
-            QuadraticLaplacian.square(130, 120), (x, y) -> x + y > 1 ? 1.0 : 1e-4);
-    double[] b = RandomSystems.rightHandSide(problem.unknowns, new Random(8));
-    EliminationPlan plan = EliminationPlan.of(problem.matrix, problem.order());
-    double[][] answers = new double[4][];
-    for (int k = 0; k < answers.length; k++) {
-      ForkJoinPool pool = new ForkJoinPool(1 + k);
+            QuadraticLaplacian.square(120, 100), (x, y) -> x + y > 1 ? 1.0 : 1e-4);
+    assertSameBits(problem.matrix, EliminationPlan.of(problem.matrix, problem.order()));
+    SparseSymmetric nearlyFull = RandomSystems.scattered(800, 300, new Random(9));
+    assertSameBits(nearlyFull, EliminationPlan.of(nearlyFull, NestedDissection.of(nearlyFull)));
+  }
+
+  private static void assertSameBits(SparseSymmetric matrix, EliminationPlan plan) {
+    double[] b = RandomSystems.rightHandSide(matrix.unknowns(), new Random(8));
+    double[] first = null;
+    for (int threads = 1; threads <= 4; threads++) {
+      ForkJoinPool pool = new ForkJoinPool(threads);
       try {
-        answers[k] =
-            pool.submit(() -> MultifrontalCholesky.factor(plan, problem.matrix).substitute(b)[0])
-                .join();
+        double[] x =
+            pool.submit(() -> MultifrontalCholesky.factor(plan, matrix).substitute(b)[0]).join();
+        first = first == null ? x : first;
+        assertThat(x).isEqualTo(first);
       } finally {
         pool.shutdown();
       }
-      assertThat(answers[k]).isEqualTo(answers[0]);
+    }
+  }
+
+  /** In its natural order a band makes one long branch of fronts. */
+  @Test
+  void a_long_band_in_its_natural_order_is_solved() {
+    int n = 12_000;
+    int half = 60;
+    int[] start = new int[n + 1];
+    int[] row = new int[n * (half + 1)];
+    double[] value = new double[row.length];
+    double[] b = new double[n];
+    int count = 0;
+    for (int c = 0; c < n; c++) {
+      for (int r = Math.max(0, c - half); r <= c; r++) {
+        row[count] = r;
+        double v = r == c ? 2.0 * half + 1 : -1;
+        value[count++] = v;
+        b[r] += v;
+        b[c] += r == c ? 0 : v;
+      }
+      start[c + 1] = count;
+    }
+    SparseSymmetric matrix = SparseSymmetric.of(start, row, value);
+    int[] natural = IntStream.range(0, n).toArray();
+    EliminationPlan plan = EliminationPlan.of(matrix, natural);
+    double[] x = MultifrontalCholesky.factor(plan, matrix).substitute(b)[0];
+    for (double one : x) {
+      assertThat(one).isCloseTo(1, within(1e-12));
+    }
+  }
+
+  @Test
+  void a_great_many_unknowns_that_stand_alone_are_solved() {
+    int n = 30_000;
+    int[] at = IntStream.range(0, n).toArray();
+    double[] value = new double[n];
+    Arrays.setAll(value, i -> 1 + i);
+    SparseSymmetric matrix = SparseSymmetric.sum(n, at, at, value, n);
+    double[] x = factored(matrix).substitute(value)[0];
+    for (double one : x) {
+      assertThat(one).isCloseTo(1, within(1e-15));
     }
   }
 

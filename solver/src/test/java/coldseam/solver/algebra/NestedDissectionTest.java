@@ -8,6 +8,7 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Random;
 import java.util.concurrent.ForkJoinPool;
+import java.util.stream.IntStream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
@@ -74,7 +75,7 @@ class NestedDissectionTest {
       int[] order = NestedDissection.of(n, start, member, placed ? x : null, placed ? y : null);
       assertThat(Arrays.stream(order).sorted().toArray())
           .as("seed %d", seed)
-          .isEqualTo(java.util.stream.IntStream.range(0, n).toArray());
+          .isEqualTo(IntStream.range(0, n).toArray());
     }
   }
 
