@@ -212,6 +212,10 @@ class JunctionsTest {
       assertThat(space(result, "b").heatFlowWPerM()).isCloseTo(-extra * thetaB, within(2e-3));
       double effective = lao + lab * (lbo + extra) / (lab + lbo + extra);
       assertThat(psi(result, "wall").couplingWPerMK().value()).isCloseTo(effective, within(4e-4));
+      Certificate.Certified proved =
+          (Certificate.Certified) psi(result, "wall").couplingWPerMK().certificate();
+      assertThat(effective).isBetween(proved.lower() - 3e-7, proved.upper() + 3e-7);
+      assertThat(proved.upper() - proved.lower()).isLessThan(2e-3);
       double b = (lbo + extra) / (lab + lbo + extra);
       assertThat(psi(result, "wall").subtracted())
           .anySatisfy(

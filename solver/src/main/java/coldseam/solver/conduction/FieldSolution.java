@@ -3,7 +3,9 @@ package coldseam.solver.conduction;
 import coldseam.mesh.partition.Partition;
 import coldseam.mesh.triangulation.Mesh;
 import coldseam.solver.detail.Conditions;
+import java.util.Arrays;
 import java.util.List;
+import java.util.Optional;
 
 /** The unit fields on the final mesh and what follows from them. */
 final class FieldSolution implements Solution {
@@ -131,6 +133,20 @@ final class FieldSolution implements Solution {
     }
     double halfWidth = Math.sqrt(history.error(x) * history.error(y));
     return new Quantity(value, new Certificate.NotCertified(NOT_PROVED, halfWidth));
+  }
+
+  @Override
+  public Optional<MatrixBounds> bounds() {
+    if (bound == null) {
+      return Optional.empty();
+    }
+    double[][] upper = new double[d.spaces][];
+    double[][] lower = new double[d.spaces][];
+    for (int i = 0; i < d.spaces; i++) {
+      upper[i] = Arrays.copyOf(bound.up[i], d.spaces);
+      lower[i] = Arrays.copyOf(bound.lo[i], d.spaces);
+    }
+    return Optional.of(new MatrixBounds(upper, lower, bound.allowance));
   }
 
   @Override

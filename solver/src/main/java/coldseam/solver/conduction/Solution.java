@@ -4,6 +4,7 @@ import coldseam.mesh.partition.Partition;
 import coldseam.mesh.triangulation.Mesh;
 import coldseam.solver.detail.Conditions;
 import coldseam.solver.detail.FilmSet;
+import java.util.Optional;
 
 /**
  * The unit fields of one detail with one film set: field k has space k at 1 and all others at 0,
@@ -51,6 +52,9 @@ public interface Solution {
    * @return W/(m·K)
    */
   Quantity coupling(int[] warm, int[] cold);
+
+  /** Matrices that bracket A, where bounds are proved. */
+  Optional<MatrixBounds> bounds();
 
   /**
    * Flow from a space into the detail.

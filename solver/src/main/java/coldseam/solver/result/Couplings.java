@@ -23,6 +23,10 @@ final class Couplings {
   private final Detail detail;
   private final Solution solution;
   private final double[][] matrix;
+
+  /** What the floating spaces' own conductances add to A. */
+  private final double[][] joined;
+
   private final int count;
 
   Couplings(Detail detail, Solution solution) {
@@ -30,6 +34,7 @@ final class Couplings {
     this.solution = solution;
     count = detail.spaces().size();
     matrix = new double[count][count];
+    joined = new double[count][count];
     for (int i = 0; i < count; i++) {
       for (int j = 0; j < count; j++) {
         matrix[i][j] = solution.matrix(i, j);
@@ -44,10 +49,12 @@ final class Couplings {
   }
 
   private void join(int i, int j, double conductance) {
-    matrix[i][i] += conductance;
-    matrix[j][j] += conductance;
-    matrix[i][j] -= conductance;
-    matrix[j][i] -= conductance;
+    for (double[][] a : new double[][][] {matrix, joined}) {
+      a[i][i] += conductance;
+      a[j][j] += conductance;
+      a[i][j] -= conductance;
+      a[j][i] -= conductance;
+    }
   }
 
   /** L2D of every pair of spaces that the section faces. */
@@ -92,6 +99,13 @@ final class Couplings {
     Quantity direct = solution.coupling(warm, cold);
     if (floating.length == 0 || !Double.isFinite(direct.value())) {
       return direct;
+    }
+    Optional<Quantity> proved =
+        solution
+            .bounds()
+            .flatMap(bounds -> FloatingBounds.coupling(bounds, joined, floating, warm, cold));
+    if (proved.isPresent()) {
+      return proved.get();
     }
     double[][] responses = responses(floating);
     double through = 0;
