@@ -97,6 +97,23 @@ final class Ladders {
     cut(last ? cell.turned() : cell, RETREAT * cell.width(plane));
   }
 
+  /**
+   * Gives every cell the longer of its diagonals. In a cell that ends in a mitre the longest side
+   * of both triangles is then the diagonal, as in all others, and refinement knows it for a cell.
+   */
+  void takeLongerDiagonals() {
+    for (int h = 0; h < 3 * plane.triangleCount; h++) {
+      int g = plane.twin[h];
+      if (h < g
+          && plane.kept[h] == Triangulation.NONE
+          && isLadder(h / 3)
+          && number(h / 3) == number(g / 3)
+          && plane.distance(plane.apex(h), plane.apex(g)) > plane.length(h)) {
+        plane.flip(h);
+      }
+    }
+  }
+
   /** Makes cells of a part whose sides may have vertices between its corners. */
   private void build(Cell part) {
     if (part.length(plane) < shortest(part)) {

@@ -41,6 +41,7 @@ public final class Triangulator {
     Ladders ladders = new Ladders(plane, ordered);
     ladders.build(LadderSearch.search(plane, wanted));
     new DelaunayRefinement(plane, ordered, ladders, wanted, size).run();
+    ladders.takeLongerDiagonals();
     Mesh mesh = MeshAssembly.assemble(plane, ordered, wanted);
     MeshCheck.require(mesh, ordered, wanted);
     return mesh;

@@ -34,6 +34,9 @@ final class AdaptiveLoop {
   /** Temperature error that may be left, in parts of the temperature difference: 0.01 K in 25. */
   private static final double TEMPERATURE = 4e-4;
 
+  /** The part of it that may be left beside the coldest and warmest points. */
+  private static final double PART_AT_EXTREMES = 0.4;
+
   /** The part of the indicators' sum that a pass splits at most. */
   private static final double BULK = 0.9;
 
@@ -101,19 +104,31 @@ final class AdaptiveLoop {
     history = new History(earlierRatio);
   }
 
-  FieldSolution run(Mesh start) {
-    Mesh mesh = start;
+  /** A mesh to begin with, made from the coarsest one. */
+  static Mesh prepared(Mesh coarsest) {
+    Mesh mesh = Corners.squared(coarsest);
     while (mesh.triangleCount() < FEWEST_TRIANGLES) {
       BitSet all = new BitSet(mesh.triangleCount());
       all.set(0, mesh.triangleCount());
       mesh = NewestVertexBisection.refine(mesh, all).mesh();
     }
+    return mesh;
+  }
+
+  /**
+   * Runs.
+   *
+   * @param start the mesh to begin with
+   * @return the solution on the last mesh
+   */
+  FieldSolution run(Mesh start) {
+    Mesh mesh = start;
     Marking marking = new Marking(mesh);
     while (true) {
       solve(mesh);
       double[] excess = new double[mesh.triangleCount()];
       double energy = Math.max(energyRatio(), jumpRatio());
-      double reached = Math.max(energy, Math.max(temperatureRatio(excess), surfaceRatio(excess)));
+      double reached = Math.max(energy, temperatureRatios(excess));
       tell(reached);
       if (reached <= 1 || passes >= MOST_PASSES) {
         break;
@@ -281,16 +296,33 @@ final class AdaptiveLoop {
     return Math.min(BULK, Math.max(0, (1 - AIM / ratio) / (1 - LEFT_BY_SPLITTING)));
   }
 
+  /** Temperature errors over what they may be, inside and at the coldest and warmest points. */
+  private double temperatureRatios(double[] excess) {
+    if (indicator == null) {
+      return 0;
+    }
+    SurfaceExtremes before = extremes;
+    extremes = new SurfaceExtremes(d, FieldSolution.nodal(d, fields, goal.temperaturesC()));
+    BitSet near = extremes.triangles(d);
+    double local = temperatureRatio(excess, near);
+    if (!goal.surfaceTemperatures() || before == null) {
+      return local;
+    }
+    double moved = surfaceRatio(before);
+    if (moved > 1) {
+      near.stream().forEach(t -> excess[t] = Math.max(excess[t], moved));
+    }
+    return Math.max(local, moved);
+  }
+
   /**
    * Local temperature errors over what they may be, in every field of finite energy and every
    * triangle not too small to matter.
    *
    * @param excess takes the square of the error over what it may be, by triangle
+   * @param near the triangles beside the coldest and warmest points
    */
-  private double temperatureRatio(double[] excess) {
-    if (indicator == null) {
-      return 0;
-    }
+  private double temperatureRatio(double[] excess, BitSet near) {
     double worst = 0;
     double smallest = SMALLEST * SMALLEST * d.extentSquared;
     for (int f = 0; f <= d.spaces; f++) {
@@ -300,8 +332,8 @@ final class AdaptiveLoop {
       }
       double may = TEMPERATURE * (f < d.spaces ? 1 : largest(fields[f]));
       for (int t = 0; t < excess.length; t++) {
-        double over = amplitude[t] / may;
-        if (over > Math.min(1, worst) && d.mesh.area(t) > smallest) {
+        double over = amplitude[t] / (near.get(t) ? PART_AT_EXTREMES * may : may);
+        if (over > 0 && d.mesh.area(t) > smallest) {
           worst = Math.max(worst, over);
           excess[t] = Math.max(excess[t], over * over);
         }
@@ -318,20 +350,11 @@ final class AdaptiveLoop {
     return largest;
   }
 
-  /** How much the coldest and warmest points still move, over what they may. */
-  private double surfaceRatio(double[] excess) {
-    if (!goal.surfaceTemperatures()) {
-      return 0;
-    }
-    double[] temperatures = goal.temperaturesC();
-    double low = Arrays.stream(temperatures).min().orElse(0);
-    double high = Arrays.stream(temperatures).max().orElse(0);
-    SurfaceExtremes before = extremes;
-    extremes = new SurfaceExtremes(d, FieldSolution.nodal(d, fields, temperatures));
-    if (before == null || !(high > low)) {
-      return 0;
-    }
-    return extremes.change(before) / (TEMPERATURE * (high - low));
+  /** How much the coldest and warmest points moved since the pass before, over what they may. */
+  private double surfaceRatio(SurfaceExtremes before) {
+    double low = Arrays.stream(goal.temperaturesC()).min().orElse(0);
+    double high = Arrays.stream(goal.temperaturesC()).max().orElse(0);
+    return high > low ? extremes.change(before) / (TEMPERATURE * (high - low)) : 0;
   }
 
   private void tell(double reached) {

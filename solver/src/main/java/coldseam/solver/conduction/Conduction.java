@@ -40,7 +40,8 @@ public final class Conduction {
   public static Solution solve(
       Partition partition, Conditions conditions, Goal goal, Progress progress) {
     Mesh coarse = Triangulator.triangulate(partition, conditions::conducts, SizeField.NONE);
-    return new AdaptiveLoop(partition, conditions, goal, progress, Double.NaN, true).run(coarse);
+    return new AdaptiveLoop(partition, conditions, goal, progress, Double.NaN, true)
+        .run(AdaptiveLoop.prepared(coarse));
   }
 
   /**

@@ -58,7 +58,9 @@ final class FieldSolution implements Solution {
     for (int i = 0; i < d.spaces; i++) {
       double[] x = new double[d.spaces];
       x[i] = 1;
-      worst = Math.max(worst, history.ratio(x));
+      double indicated = history.indicated(history.passes() - 1, x);
+      boolean known = bound != null && indicated > 0;
+      worst = Math.max(worst, known ? bound.gap[i][i] / 2 / indicated : history.ratio(x));
     }
     return worst;
   }

@@ -247,12 +247,7 @@ final class HierarchicalIndicator {
    * joints and edges, polynomials of any degree see but a fourth to a tenth of what is lacking.
    */
   private double unseen(int t) {
-    double longest = 0;
-    for (int k = 0; k < 3; k++) {
-      longest = Math.max(longest, d.mesh.sideLength(d.mesh.side(t, k)));
-    }
-    double slenderness = longest * longest / (2 * d.mesh.area(t));
-    return Math.min(MOST_UNSEEN, Math.max(1, slenderness / SLENDER));
+    return Math.min(MOST_UNSEEN, Math.max(1, Corners.slenderness(d.mesh, t) / SLENDER));
   }
 
   /** Integrates the products of derivatives along the sides by a rule exact to degree 6. */

@@ -23,9 +23,18 @@ final class Marking {
   /** Excess that later rounds aim at. */
   private static final double ENOUGH = 0.5;
 
+  private final BitSet corners;
   private Mesh mesh;
-  private BitSet corners;
-  private double[] expected;
+
+  /** Triangles known to lie at a singular corner when they were made. */
+  private BitSet singular = new BitSet();
+
+  /** What each triangle would lack now, had the field been smooth in the round that made it. */
+  private double[] ifSmooth;
+
+  // of the present round
+  private double[] sizes;
+  private double[] others;
 
   /**
    * Starts on a mesh.
@@ -34,7 +43,7 @@ final class Marking {
    */
   Marking(Mesh mesh) {
     this.mesh = mesh;
-    corners = corners(mesh);
+    corners = Corners.of(mesh);
   }
 
   /**
@@ -46,13 +55,18 @@ final class Marking {
    * @return the finer mesh, or the same if nothing could be split
    */
   Mesh refine(double[] lacking, double part, double[] excess) {
-    BitSet singular = new BitSet(lacking.length);
-    for (int t = 0; t < lacking.length; t++) {
-      singular.set(t, expected != null && lacking[t] > SINGULAR * expected[t]);
+    for (int t = 0; ifSmooth != null && t < lacking.length; t++) {
+      boolean muchMore = lacking[t] > SINGULAR * ifSmooth[t];
+      singular.set(t, muchMore && Corners.touches(corners, mesh, t));
     }
     double threshold = threshold(lacking, part);
-    double[] sizes = lacking;
-    double[] others = excess;
+    sizes = lacking;
+    others = excess;
+    // what is not split keeps its class: it lacks as much as SINGULAR times this or less
+    ifSmooth = new double[lacking.length];
+    for (int t = 0; t < lacking.length; t++) {
+      ifSmooth[t] = singular.get(t) ? 0 : lacking[t];
+    }
     for (int round = 0; round < MOST_ROUNDS; round++) {
       BitSet marked = new BitSet(sizes.length);
       for (int t = 0; t < sizes.length; t++) {
@@ -62,57 +76,36 @@ final class Marking {
       if (next.mesh() == mesh) {
         break;
       }
-      int[] parent = next.parent();
-      double[] nextSizes = new double[parent.length];
-      double[] nextOthers = new double[parent.length];
-      BitSet nextSingular = new BitSet(parent.length);
-      for (int t = 0; t < parent.length; t++) {
-        int p = parent[t];
-        double kept = Math.pow(next.mesh().area(t) / mesh.area(p), 3);
-        if (kept < 1 && singular.get(p) && touchesCorner(next.mesh(), t)) {
-          kept = KEPT_AT_CORNERS;
-          nextSingular.set(t);
-        }
-        nextSizes[t] = sizes[p] * kept;
-        nextOthers[t] = others[p] * kept;
-      }
-      mesh = next.mesh();
-      sizes = nextSizes;
-      others = nextOthers;
-      singular = nextSingular;
+      inherit(next);
     }
-    expected = sizes;
     return mesh;
   }
 
-  private boolean touchesCorner(Mesh finer, int t) {
-    return corners.get(finer.vertex(t, 0))
-        || corners.get(finer.vertex(t, 1))
-        || corners.get(finer.vertex(t, 2));
-  }
-
-  /** The vertices where different edges of the partition meet. */
-  private static BitSet corners(Mesh mesh) {
-    int[] edge = new int[mesh.vertexCount()];
-    Arrays.fill(edge, Mesh.NONE);
-    BitSet corners = new BitSet(edge.length);
-    for (int t = 0; t < mesh.triangleCount(); t++) {
-      for (int k = 0; k < 3; k++) {
-        int own = mesh.partitionEdge(t, k);
-        if (own == Mesh.NONE) {
-          continue;
-        }
-        for (int end = 1; end <= 2; end++) {
-          int v = mesh.vertex(t, (k + end) % 3);
-          if (edge[v] == Mesh.NONE) {
-            edge[v] = own;
-          } else if (edge[v] != own) {
-            corners.set(v);
-          }
-        }
+  /** Passes on to the parts what is expected of them. */
+  private void inherit(NewestVertexBisection.Refined next) {
+    int[] parent = next.parent();
+    double[] nextSizes = new double[parent.length];
+    double[] nextOthers = new double[parent.length];
+    double[] nextIfSmooth = new double[parent.length];
+    BitSet nextSingular = new BitSet(parent.length);
+    for (int t = 0; t < parent.length; t++) {
+      int p = parent[t];
+      double share = next.mesh().area(t) / mesh.area(p);
+      double kept = share * share * share;
+      boolean split = kept < 1;
+      nextIfSmooth[t] = split ? sizes[p] * kept : ifSmooth[p];
+      if (singular.get(p) && (!split || Corners.touches(corners, next.mesh(), t))) {
+        nextSingular.set(t);
+        kept = split ? KEPT_AT_CORNERS : 1;
       }
+      nextSizes[t] = sizes[p] * kept;
+      nextOthers[t] = others[p] * kept;
     }
-    return corners;
+    mesh = next.mesh();
+    sizes = nextSizes;
+    others = nextOthers;
+    ifSmooth = nextIfSmooth;
+    singular = nextSingular;
   }
 
   /** The size from which on triangles together hold the part asked for. */

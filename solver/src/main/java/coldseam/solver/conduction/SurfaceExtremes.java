@@ -2,6 +2,7 @@ package coldseam.solver.conduction;
 
 import coldseam.solver.detail.Conditions;
 import java.util.Arrays;
+import java.util.BitSet;
 
 /** Coldest and warmest point of the surface that faces each space through a film. */
 final class SurfaceExtremes {
@@ -59,6 +60,28 @@ final class SurfaceExtremes {
     double slope = (b - a) / 2;
     double curvature = (a - m) + (b - m);
     return Math.abs(slope) < Math.abs(curvature) ? m - slope * slope / (2 * curvature) : m;
+  }
+
+  /** The triangles that touch an end of a side with a coldest or warmest point. */
+  BitSet triangles(Discretisation d) {
+    BitSet ends = new BitSet();
+    for (int[] sides : new int[][] {coldestSide, warmestSide}) {
+      for (int side : sides) {
+        if (side >= 0) {
+          ends.set(d.outline.start[side]);
+          ends.set(d.outline.end[side]);
+        }
+      }
+    }
+    BitSet touching = new BitSet();
+    for (int t = 0; t < d.mesh.triangleCount(); t++) {
+      for (int k = 0; k < 3; k++) {
+        if (ends.get(d.mesh.vertex(t, k))) {
+          touching.set(t);
+        }
+      }
+    }
+    return touching;
   }
 
   /**
