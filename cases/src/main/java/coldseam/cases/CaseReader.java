@@ -1,10 +1,8 @@
 package coldseam.cases;
 
-import coldseam.solver.detail.Detail;
 import java.io.IOException;
 import java.nio.file.Path;
 import java.util.ArrayList;
-import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -83,40 +81,29 @@ final class CaseReader {
     LengthUnit unit = unit(top);
     List<Node.Entry> values = values(top);
     List<Variant> variants = variants(top, values);
-    List<String> variantNames = new ArrayList<>();
+    List<String> names = new ArrayList<>();
     for (Variant variant : variants) {
-      variantNames.add(variant.name());
+      names.add(variant.name());
     }
-    Problems fromTop = problems;
-    Pass base = pass(problems, unit, values, Optional.empty());
-    assumeUnit(top, base);
-    DetailReader reader =
-        new DetailReader(top, base, new OtherCases(base, chain, others), Optional.empty());
-    Optional<Detail> detail = reader.read(title, variantNames);
-    Map<String, Detail> details = new LinkedHashMap<>();
-    Map<String, Map<String, Node>> places = new LinkedHashMap<>();
-    detail.ifPresent(d -> details.put("", d));
-    places.put("", base.places());
+    ReadCase.Builder builder = new ReadCase.Builder(file, title, names, unit);
+    Pass base = pass(top, problems, unit, values, Optional.empty());
+    DetailReader reader = reader(top, base, Optional.empty());
+    builder.add(Optional.empty(), reader.read(title, names), base.places());
     for (Variant variant : variants) {
       Problems own = new Problems(file.toString());
-      Pass pass = pass(own, unit, values, Optional.of(variant));
-      assumeUnit(top, pass);
-      DetailReader ofVariant =
-          new DetailReader(
-              top.reportingTo(own),
-              pass,
-              new OtherCases(pass, chain, others),
-              Optional.of(variant));
-      Optional<Detail> changed = ofVariant.read(title, variantNames);
-      fromTop.addOfVariant(variant.name(), own);
-      changed.ifPresent(d -> details.put("variant " + variant.name(), d));
-      places.put("variant " + variant.name(), pass.places());
+      Pass pass = pass(top, own, unit, values, Optional.of(variant));
+      DetailReader ofVariant = reader(top.reportingTo(own), pass, Optional.of(variant));
+      builder.add(Optional.of(variant.name()), ofVariant.read(title, names), pass.places());
+      problems.addOfVariant(variant.name(), own);
     }
     if (!problems.none()) {
       throw new CaseException(problems.inOrder());
     }
-    return new ReadCase(
-        file, title, variantNames, details, places, reader.accuracy(), reader.expectations(), unit);
+    return builder.build(reader.accuracy(), reader.expectations());
+  }
+
+  private DetailReader reader(Fields top, Pass pass, Optional<Variant> variant) {
+    return new DetailReader(top, pass, new OtherCases(pass, chain, others), variant);
   }
 
   private void checkVersion(Fields top) {
@@ -144,12 +131,6 @@ final class CaseReader {
   private LengthUnit unit(Fields top) {
     Optional<String> word = top.word("unit", LengthUnit.NAMES);
     return word.isPresent() ? LengthUnit.named(word.get()) : LengthUnit.MM;
-  }
-
-  private static void assumeUnit(Fields top, Pass pass) {
-    if (!top.has("unit")) {
-      pass.assume("unit of bare lengths", "mm", "by convention of this tool");
-    }
   }
 
   private List<Node.Entry> values(Fields top) {
@@ -196,13 +177,21 @@ final class CaseReader {
   }
 
   private Pass pass(
-      Problems into, LengthUnit unit, List<Node.Entry> values, Optional<Variant> variant) {
+      Fields top,
+      Problems into,
+      LengthUnit unit,
+      List<Node.Entry> values,
+      Optional<Variant> variant) {
     NamedValues named = new NamedValues(into, unit);
     for (Node.Entry entry : values) {
       named.put(entry.key().text(), entry.value());
     }
     variant.ifPresent(v -> v.replaceValues(named));
     named.workOutAll();
-    return new Pass(file, into, new Quantities(into, named, unit));
+    Pass pass = new Pass(file, into, new Quantities(into, named, unit));
+    if (!top.has("unit")) {
+      pass.assume("unit of bare lengths", unit.name(), "by convention of this tool");
+    }
+    return pass;
   }
 }

@@ -8,6 +8,9 @@ import java.util.Optional;
 
 /** Reads {@code between}: the two sides of a result, each one space or a list of them. */
 final class PairReader {
+  /** Temperatures that differ by less are equal but for rounding, K. */
+  private static final double SAME_K = 1e-9;
+
   private final Problems problems;
   private final Map<String, Optional<Space>> spaces;
 
@@ -63,39 +66,50 @@ final class PairReader {
     double temperature = Double.NaN;
     boolean good = true;
     for (Node item : items) {
-      Optional<String> name = Fields.text(problems, "a space of " + what, item);
+      Optional<String> name = name(item, what, names);
       if (name.isEmpty()) {
         good = false;
         continue;
       }
+      names.add(name.get());
       Optional<Space> space = spaces.get(name.get());
-      if (space == null) {
-        good = false;
-        problems.add(
-            item,
-            "`" + Node.shortened(name.get()) + "` is no space of this case",
-            Problems.suggestion(name.get(), spaces.keySet()));
-      } else if (names.contains(name.get())) {
-        good = false;
-        problems.add(item, "`" + name.get() + "` is named twice", "name each space once");
-      } else if (space.isPresent() && space.get().floating().isEmpty()) {
-        double own = space.get().temperatureC();
-        if (!Double.isNaN(temperature) && own != temperature) {
-          good = false;
-          problems.add(
-              item,
-              what
-                  + " joins spaces of "
-                  + Figures.of(temperature)
-                  + " and "
-                  + Figures.of(own)
-                  + " °C",
-              "only spaces of equal temperature are joined; weight the others by `b`");
-        }
-        temperature = own;
+      if (space.isEmpty() || space.get().floating().isPresent()) {
+        continue;
       }
-      name.ifPresent(names::add);
+      double own = space.get().temperatureC();
+      if (!Double.isNaN(temperature) && Math.abs(own - temperature) > SAME_K) {
+        good = false;
+        reportUnequal(item, what, temperature, own);
+      }
+      temperature = own;
     }
     return good ? Optional.of(names) : Optional.empty();
+  }
+
+  /** The name of a space, or empty if it is none or a repeated one, which is reported. */
+  private Optional<String> name(Node item, String what, List<String> before) {
+    Optional<String> name = Fields.text(problems, "a space of " + what, item);
+    if (name.isEmpty()) {
+      return name;
+    }
+    if (!spaces.containsKey(name.get())) {
+      problems.add(
+          item,
+          "`" + Node.shortened(name.get()) + "` is no space of this case",
+          Problems.suggestion(name.get(), spaces.keySet()));
+      return Optional.empty();
+    }
+    if (before.contains(name.get())) {
+      problems.add(item, "`" + name.get() + "` is named twice", "name each space once");
+      return Optional.empty();
+    }
+    return name;
+  }
+
+  private void reportUnequal(Node item, String what, double one, double other) {
+    problems.add(
+        item,
+        what + " joins spaces of " + Figures.of(one) + " and " + Figures.of(other) + " °C",
+        "only spaces of equal temperature are joined; weight the others by `b`");
   }
 }

@@ -5,6 +5,7 @@ import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.Fault;
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -14,29 +15,56 @@ final class ReadCase implements Case {
   private final Path file;
   private final String title;
   private final List<String> variants;
-  private final Map<String, Detail> details;
-  private final Map<String, Map<String, Node>> places;
+  private final LengthUnit unit;
+  private final Map<Optional<String>, Detail> details;
+  private final List<Map<String, Node>> places;
   private final Accuracy accuracy;
   private final List<Expectation> expectations;
-  private final LengthUnit unit;
 
-  ReadCase(
-      Path file,
-      String title,
-      List<String> variants,
-      Map<String, Detail> details,
-      Map<String, Map<String, Node>> places,
-      Accuracy accuracy,
-      List<Expectation> expectations,
-      LengthUnit unit) {
-    this.file = file;
-    this.title = title;
-    this.variants = List.copyOf(variants);
-    this.details = Map.copyOf(details);
-    this.places = places;
+  private ReadCase(Builder from, Accuracy accuracy, List<Expectation> expectations) {
+    this.file = from.file;
+    this.title = from.title;
+    this.variants = List.copyOf(from.variants);
+    this.unit = from.unit;
+    this.details = Map.copyOf(from.details);
+    this.places = List.copyOf(from.places);
     this.accuracy = accuracy;
     this.expectations = List.copyOf(expectations);
-    this.unit = unit;
+  }
+
+  /** Takes the base case and each variant as they are read. */
+  static final class Builder {
+    private final Path file;
+    private final String title;
+    private final List<String> variants;
+    private final LengthUnit unit;
+    private final Map<Optional<String>, Detail> details = new HashMap<>();
+    private final List<Map<String, Node>> places = new ArrayList<>();
+
+    Builder(Path file, String title, List<String> variants, LengthUnit unit) {
+      this.file = file;
+      this.title = title;
+      this.variants = variants;
+      this.unit = unit;
+    }
+
+    /**
+     * Adds what one pass through the file has found.
+     *
+     * @param variant its variant, empty for the base case
+     * @param detail the detail, empty if a mistake was reported
+     * @param placesOfPass where things are written, by part and name
+     */
+    void add(Optional<String> variant, Optional<Detail> detail, Map<String, Node> placesOfPass) {
+      if (detail.isPresent()) {
+        details.put(variant, detail.get());
+      }
+      places.add(placesOfPass);
+    }
+
+    ReadCase build(Accuracy accuracy, List<Expectation> expectations) {
+      return new ReadCase(this, accuracy, expectations);
+    }
   }
 
   @Override
@@ -56,7 +84,7 @@ final class ReadCase implements Case {
 
   @Override
   public Detail detail(Optional<String> variant) throws CaseException {
-    Detail detail = details.get(variant.isPresent() ? "variant " + variant.get() : "");
+    Detail detail = details.get(variant);
     if (detail == null) {
       String right = Problems.suggestion(variant.orElse(""), variants);
       throw new CaseException(
@@ -118,7 +146,7 @@ final class ReadCase implements Case {
     }
     names.add("");
     for (String wanted : names) {
-      for (Map<String, Node> ofPass : places.values()) {
+      for (Map<String, Node> ofPass : places) {
         Node node = ofPass.get(Pass.key(part, wanted));
         if (node != null) {
           return node;

@@ -153,31 +153,22 @@ final class SpaceReader {
   private Optional<Space> space(String name, Fields fields, double temperature) {
     int before = problems.count();
     Optional<Exposure> exposure = exposure(fields);
-    OptionalDouble humidity = OptionalDouble.empty();
-    if (fields.has("humidity")) {
-      humidity =
-          OptionalDouble.of(
-              pass.quantities()
-                  .read(
-                      fields.get("humidity").get(),
-                      "`humidity` of " + fields.what(),
-                      Place.HUMIDITY));
-    }
+    OptionalDouble humidity = humidity(fields);
     Optional<Space.Floating> floating = floating(name, fields);
-    FilmReader.Films own = FilmReader.Films.NONE;
-    if (fields.has("film")) {
-      own = films.read(fields.get("film").get(), fields.what(), exposure);
-    }
-    boolean complete = own.heatLoss().isPresent() && own.surface().isPresent();
-    boolean mistaken = problems.count() > before;
-    if (!mistaken && exposure.isEmpty() && !complete && !fields.reported("exposure")) {
+    FilmReader.Films own =
+        fields.has("film")
+            ? films.read(fields.get("film").get(), fields.what(), exposure)
+            : FilmReader.Films.NONE;
+    boolean enough =
+        exposure.isPresent() || (own.heatLoss().isPresent() && own.surface().isPresent());
+    if (problems.count() == before && !enough && !fields.reported("exposure")) {
       problems.add(
           fields.node(),
           fields.what() + " has no `exposure`, which decides its films",
           "add `exposure: inside` or `exposure: outside`");
     }
     boolean noTemperature = Double.isNaN(temperature) && floating.isEmpty();
-    if (problems.count() > before || noTemperature || (exposure.isEmpty() && !complete)) {
+    if (problems.count() > before || noTemperature || !enough) {
       return Optional.empty();
     }
     Exposure side = exposure.isPresent() ? exposure.get() : assumedExposure(name, temperature);
@@ -194,6 +185,15 @@ final class SpaceReader {
             own.heatLoss().orElse(iso.heatLoss().get()),
             own.surface().orElse(iso.surface().get()),
             floating));
+  }
+
+  private OptionalDouble humidity(Fields fields) {
+    Optional<Node> node = fields.get("humidity");
+    if (node.isEmpty()) {
+      return OptionalDouble.empty();
+    }
+    return OptionalDouble.of(
+        pass.quantities().read(node.get(), "`humidity` of " + fields.what(), Place.HUMIDITY));
   }
 
   private static boolean isAshrae(FilmRule rule) {
