@@ -53,6 +53,18 @@ class LocateTest {
   }
 
   @Test
+  void a_part_of_several_materials_is_where_its_first_one_is_laid() throws CaseException {
+    assertThat(
+            located(
+                Written.WALL
+                    + "  - {fill: steel, box: [900, 0, 910, 10]}\n"
+                    + "  - {fill: copper, box: [910, 0, 920, 10]}\n"))
+        .singleElement()
+        .asString()
+        .matches("1[23]:5: a part of the section around (?s).*");
+  }
+
+  @Test
   void faults_without_a_place_are_of_the_file() throws CaseException {
     Case read = Written.read(folder, Written.WALL);
     Problem section = read.locate(new Fault("section", "", "is odd; mend it", Optional.empty()));

@@ -130,6 +130,7 @@ class MessageTest {
             section:
               - {fill: a, polygon: [[0, 0], [100, 100], [100, 0], [0, 100]]}
               - {fill: a, polygon: [[0, 0], [100, 0], [100, 100], [50, -50], [0, 100]]}
+              - {fill: a, polygon: [[0, 0], [100, 0], [100, 100], [50, 0], [0, -50]]}
               - {fill: a, polygon: [[0, 0], [100, 0], [200, 0]]}
               - {fill: a, polygon: [[0, 0], [100, 0]]}
               - {fill: a, box: [0, 0, 0, 10]}
@@ -149,26 +150,28 @@ class MessageTest {
             + " 0] to [0, 100]; list the corners in order around it",
         "7:24: this polygon crosses itself: the edge from [0, 0] to [100, 0] meets that from [100,"
             + " 100] to [50, -50]; list the corners in order around it",
-        "8:24: this polygon has no area; list the corners in order around it",
-        "9:24: a polygon has 2 different points; it needs 3 or more",
-        "10:20: this box has no width; give two opposite corners, `[x1, y1, x2, y2]`",
-        "11:20: a box is four numbers, not a list of 5; write `[x1, y1, x2, y2]`, two opposite"
+        "8:24: this polygon crosses itself: the edge from [0, 0] to [100, 0] meets that from [50, 0] to"
+            + " [0, -50]; list the corners in order around it",
+        "9:24: this polygon has no area; list the corners in order around it",
+        "10:24: a polygon has 2 different points; it needs 3 or more",
+        "11:20: this box has no width; give two opposite corners, `[x1, y1, x2, y2]`",
+        "12:20: a box is four numbers, not a list of 5; write `[x1, y1, x2, y2]`, two opposite"
             + " corners, with decimal points, not commas",
-        "12:46: `radius` of the disc is out of range: 0; it is a length of 0.001 mm or more, e.g."
+        "13:46: `radius` of the disc is out of range: 0; it is a length of 0.001 mm or more, e.g."
             + " `160 mm`",
-        "13:59: this sector reaches over -90 degrees; `to` is more than `from`, by at most 360",
-        "14:22: this strip turns back on itself at point 2; lay it in pieces, or give its outline as"
+        "14:59: this sector reaches over -90 degrees; `to` is more than `from`, by at most 360",
+        "15:22: this strip turns back on itself at point 2; lay it in pieces, or give its outline as"
             + " a polygon",
-        "15:22: this strip is too thick for the short piece between points 2 and 3; lay it in"
+        "16:22: this strip is too thick for the short piece between points 2 and 3; lay it in"
             + " pieces, or give its outline as a polygon",
-        "16:22: this strip crosses itself: the edge from [0, -0.5] to [101.207, -0.5] meets that"
+        "17:22: this strip crosses itself: the edge from [0, -0.5] to [101.207, -0.5] meets that"
             + " from [49.5, 51.2071] to [49.5, -50]; lay it in pieces that do not overlap",
-        "17:48: `towards` runs along the face; name a side that the face looks to",
-        "18:5: this entry has `box` and `disc` at once; write an entry of its own for each",
-        "19:5: this entry has no shape; add `box`, `polygon`, `disc` or `strip`, or write a `stack`"
+        "18:48: `towards` runs along the face; name a side that the face looks to",
+        "19:5: this entry has `box` and `disc` at once; write an entry of its own for each",
+        "20:5: this entry has no shape; add `box`, `polygon`, `disc` or `strip`, or write a `stack`"
             + " or a `group`",
-        "20:6: this box has no key `fil`; did you mean `fill`?",
-        "21:6: this group has no key `fill`; known are `group`, `mirror`, `rotate`, `move` and"
+        "21:6: this box has no key `fil`; did you mean `fill`?",
+        "22:6: this group has no key `fill`; known are `group`, `mirror`, `rotate`, `move` and"
             + " `repeat`");
   }
 
@@ -215,7 +218,7 @@ class MessageTest {
             materials: {a: {tolerance: 5 %}, b: {thickness: 1}}
             spaces: {i: {exposure: inside}, o: {temperature: 0}}
             section: [{fill: , box: [0, 0, 1, 1]}, {box: [0, 0, 1, 1]}]
-            psi: {p: {between: [i, o]}}
+            psi: {p: {between: [i, q]}}
             U: {of: wall}
             stretches: {s: {flow: 3}, t: {side: left, film: 0.1}}
             flanks: {f: {U: 0.2}}
@@ -231,6 +234,7 @@ class MessageTest {
         "5:40: this box has no `fill`; add `fill: ` and a material or a space",
         "6:7: ψ `p` does not say in which dimensions it is, and without them it means nothing; add"
             + " `dimensions: internal`, `overall-internal` or `external`",
+        "6:24: `q` is no space of this case; known are `i` and `o`",
         "7:4: `U` has no `between`; add `between: [indoors, outdoors]`",
         "8:16: stretch `s` lies nowhere; add `along: [[x, y], [x, y]]`, or `side: left`, `right`,"
             + " `top` or `bottom`",

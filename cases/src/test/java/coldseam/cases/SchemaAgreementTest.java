@@ -103,6 +103,35 @@ class SchemaAgreementTest {
     }
   }
 
+  /** Texts in quotes are texts, and what excludes each other is refused together. */
+  @Test
+  void both_refuse_what_only_looks_right() throws IOException {
+    String text = Files.readString(SpoiledCasesTest.EVERYTHING);
+    String[][] changes = {
+      {"coldseam: 1", "coldseam: \"1\""},
+      {"loft: {floats: true,", "loft: {floats: \"true\","},
+      {"loft: {floats: true,", "loft: {floats: false,"},
+      {"keep: true", "keep: \"true\""},
+      {"keep: true", "keep: yes"},
+      {"side: top, adiabatic: true", "side: top, adiabatic: \"false\""},
+      {"side: top, adiabatic: true", "side: top, adiabatic: false, flow: 3"},
+      {"side: top, adiabatic: true", "side: top, along: [[0, 0], [1, 1]], adiabatic: true"},
+      {"{conductivity: 0.50,", "{conductivity: 0.50, resistance: R-13,"},
+      {"{resistance: R-13, thickness", "{from: EPS, thickness"},
+      {"{U: 0.3, length: 500}", "{U: 0.3}"},
+      {"{surface-of: indoors,", "{surface-of: indoors, points: 3,"},
+      {"cut: [100, 0]", "cut: left side"},
+      {"unit: mm", "unit: km"},
+      {"{psi: external, value", "{psi: external, U: wall, value"},
+    };
+    for (String[] change : changes) {
+      assertThat(text).contains(change[0]);
+      String spoiled = text.replace(change[0], change[1]);
+      assertThat(refusals(spoiled)).as("schema: " + change[1]).isNotEmpty();
+      assertThat(Written.problems(folder, spoiled)).as("reader: " + change[1]).isNotEmpty();
+    }
+  }
+
   private static List<String> refusals(String text) {
     Optional<Node> root = YamlTree.read(text, new Problems(""));
     if (root.isEmpty()) {

@@ -20,11 +20,14 @@ import org.junit.jupiter.params.provider.MethodSource;
 class SpoiledCasesTest {
   private static final long SEED = 20250314;
 
+  /** Every key of the format at least once. */
+  static final Path EVERYTHING = Path.of("src/test/resources/coldseam/cases/everything.yaml");
+
   @TempDir private Path folder;
 
   static List<Path> samples() {
     List<Path> samples = new ArrayList<>(Written.shipped());
-    samples.add(Path.of("src/test/resources/coldseam/cases/everything.yaml"));
+    samples.add(EVERYTHING);
     return samples;
   }
 
