@@ -10,7 +10,8 @@ record FlowSection(Result result, Units units, Ink ink) {
   private static final int MOST_DECIMALS = 3;
 
   void write(StringBuilder text) {
-    TextCard.heading(text, ink, "Heat flow", "W/m, positive into the detail; films for heat loss");
+    TextCard.heading(
+        text, ink, "Heat flow", "W/m, positive into the detail; ± estimated; films for heat loss");
     Table table = new Table("lrrrl", 2, TextCard.PAGE);
     for (Result.SpaceResult space : result.spaces()) {
       row(

@@ -3,6 +3,7 @@ package coldseam.cli.sheet;
 import coldseam.cli.text.Digits;
 import coldseam.cli.text.Ink;
 import coldseam.cli.text.Table;
+import coldseam.solver.conduction.Certificate;
 import coldseam.solver.conduction.Quantity;
 import coldseam.solver.detail.Assumption;
 import coldseam.solver.detail.DimensionSystem;
@@ -64,7 +65,7 @@ final class TextCard {
 
   private void numbers() {
     heading(text, ink, "Result", "films for heat loss");
-    Table table = new Table("llrrll", 2, PAGE);
+    Table table = new Table("llrrlll", 2, PAGE);
     for (Result.LinearTransmittance psi : result.psi()) {
       boolean plain = psi.of().isEmpty() || psi.of().equals(psi.name()) || psi.of().equals(PLAIN);
       String of = plain ? "" : " of " + psi.of();
@@ -117,41 +118,57 @@ final class TextCard {
 
   private void number(
       Table table, String name, String between, Quantity quantity, Scale scale, String note) {
-    Digits.Figure figure = Digits.of(quantity.value(), quantity.halfWidth(), scale.decimals());
+    Digits.Figure figure = figure(quantity, 1, scale.decimals());
     table.row(
         ink.strong(name),
         between,
         ink.strong(figure.value()),
         "± " + figure.halfWidth(),
         scale.si(),
+        quantity.certified() ? ink.good("certified") : ink.alert("estimate"),
         ink.faint(note));
     if (units.customary()) {
-      Digits.Figure us =
-          Digits.of(
-              quantity.value() * scale.factor(),
-              quantity.halfWidth() * scale.factor(),
-              scale.decimals());
+      Digits.Figure us = figure(quantity, scale.factor(), scale.decimals());
       table.row("", "", us.value(), "± " + us.halfWidth(), scale.customary());
     }
   }
 
+  /** A quantity in another unit with what is known of it. */
+  private static Digits.Figure figure(Quantity quantity, double factor, int mostDecimals) {
+    double value = quantity.value() * factor;
+    if (quantity.certificate() instanceof Certificate.Certified proved) {
+      return Digits.between(value, proved.lower() * factor, proved.upper() * factor, mostDecimals);
+    }
+    return Digits.of(value, quantity.halfWidth() * factor, mostDecimals);
+  }
+
   private void certificate() {
-    if (Words.certified(result)) {
-      text.append("  certified: the exact result of the stated problem lies within ±\n");
-      return;
-    }
     Set<String> reasons = new LinkedHashSet<>();
-    result.couplings().forEach(c -> reasons.add(Words.reason(c.valueWPerMK())));
-    result.psi().forEach(p -> reasons.add(Words.reason(p.valueWPerMK())));
-    result.transmittances().forEach(u -> reasons.add(Words.reason(u.valueWPerM2K())));
-    reasons.remove("");
-    String why = reasons.isEmpty() ? "" : " (" + String.join("; ", reasons) + ")";
-    String line = "Not certified: ± is an estimate of the numerical error, not a bound" + why;
-    text.append("  ");
-    for (String part : Table.wrapped(line, PAGE - 2, "").split("\n")) {
-      text.append(ink.alert(part)).append("\n  ");
+    boolean proved = false;
+    boolean guessed = false;
+    for (Quantity quantity : Words.numbers(result)) {
+      proved |= quantity.certified();
+      guessed |= !quantity.certified();
+      reasons.add(Words.reason(quantity));
     }
-    text.setLength(text.length() - 2);
+    reasons.remove("");
+    if (proved) {
+      sentence("Certified: the exact number of the section as resolved lies within its ±", "");
+    }
+    if (guessed) {
+      String why = reasons.isEmpty() ? "" : " (" + String.join("; ", reasons) + ")";
+      sentence(
+          "Not certified"
+              + (proved ? " where it says estimate" : "")
+              + ": ± is an estimate of the numerical error, not a bound",
+          why);
+    }
+  }
+
+  private void sentence(String claim, String why) {
+    for (String line : Table.wrapped(claim + why, PAGE - 2, "").split("\n")) {
+      text.append("  ").append(ink.faint(line)).append('\n');
+    }
   }
 
   private void accounts() {
@@ -173,8 +190,7 @@ final class TextCard {
             Digits.fixed(-term.valueWPerMK().mid(), guarded),
             ink.faint(derivation(term)));
       }
-      Digits.Figure value =
-          Digits.of(psi.valueWPerMK().value(), psi.valueWPerMK().halfWidth(), guarded);
+      Digits.Figure value = figure(psi.valueWPerMK(), 1, guarded);
       table.row("ψ", ink.strong(value.value()), ink.faint("± " + value.halfWidth()));
       text.append(table.text());
     }

@@ -5,6 +5,7 @@ import coldseam.solver.conduction.Quantity;
 import coldseam.solver.detail.DimensionSystem;
 import coldseam.solver.detail.FilmSet;
 import coldseam.solver.result.Result;
+import java.util.ArrayList;
 import java.util.List;
 
 /** What things are called, the same on every sheet. */
@@ -36,20 +37,26 @@ final class Words {
     return spaces(warm) + " – " + spaces(cold);
   }
 
-  /** Whether every number that has bounds at all has proved ones. */
-  static boolean certified(Result result) {
-    for (Result.Coupling coupling : result.couplings()) {
-      if (!coupling.valueWPerMK().certified()) {
-        return false;
-      }
-    }
+  /** Every number that could have proved bounds: couplings, ψ, U and R. */
+  static List<Quantity> numbers(Result result) {
+    List<Quantity> numbers = new ArrayList<>();
     for (Result.LinearTransmittance psi : result.psi()) {
-      if (!psi.valueWPerMK().certified()) {
-        return false;
-      }
+      numbers.add(psi.valueWPerMK());
     }
     for (Result.EffectiveTransmittance u : result.transmittances()) {
-      if (!u.valueWPerM2K().certified()) {
+      numbers.add(u.valueWPerM2K());
+      numbers.add(u.resistanceM2KPerW());
+    }
+    for (Result.Coupling coupling : result.couplings()) {
+      numbers.add(coupling.valueWPerMK());
+    }
+    return numbers;
+  }
+
+  /** Whether every number that could have proved bounds has them. */
+  static boolean certified(Result result) {
+    for (Quantity quantity : numbers(result)) {
+      if (!quantity.certified()) {
         return false;
       }
     }

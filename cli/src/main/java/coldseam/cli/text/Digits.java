@@ -41,12 +41,40 @@ public final class Digits {
     if (!Double.isFinite(halfWidth)) {
       return new Figure(significant(value, 3), "?");
     }
-    int decimals = Math.min(decimals(halfWidth), mostDecimals);
     BigDecimal exact = BigDecimal.valueOf(value);
+    BigDecimal width = BigDecimal.valueOf(Math.abs(halfWidth));
+    int decimals = Math.min(decimals(halfWidth), mostDecimals);
+    return covering(exact, exact.subtract(width), exact.add(width), decimals);
+  }
+
+  /**
+   * Writes a number between two bounds, so that number ± half-width as written covers both bounds.
+   *
+   * @param value the number
+   * @param lower lower bound, not above it
+   * @param upper upper bound, not below it
+   * @param mostDecimals decimals never to exceed
+   * @return the figure
+   */
+  public static Figure between(double value, double lower, double upper, int mostDecimals) {
+    double halfWidth = Math.max(upper - value, value - lower);
+    if (!Double.isFinite(value) || !Double.isFinite(halfWidth)) {
+      return of(value, halfWidth, mostDecimals);
+    }
+    return covering(
+        BigDecimal.valueOf(value),
+        BigDecimal.valueOf(lower),
+        BigDecimal.valueOf(upper),
+        Math.min(decimals(halfWidth), mostDecimals));
+  }
+
+  private static Figure covering(
+      BigDecimal exact, BigDecimal lower, BigDecimal upper, int decimals) {
     BigDecimal rounded = exact.setScale(decimals, RoundingMode.HALF_EVEN);
     BigDecimal width =
-        BigDecimal.valueOf(Math.abs(halfWidth))
-            .add(exact.subtract(rounded).abs())
+        upper
+            .subtract(rounded)
+            .max(rounded.subtract(lower))
             .setScale(decimals, RoundingMode.CEILING);
     return new Figure(plain(rounded), plain(width));
   }

@@ -32,7 +32,8 @@ class JsonResultsTest {
 
   @Test
   void every_kind_of_result_fits_the_schema() throws Exception {
-    for (Result result : List.of(Samples.estimated(), Samples.certified(), Samples.infinite())) {
+    for (Result result :
+        List.of(Samples.estimated(), Samples.certified(), Samples.mixed(), Samples.infinite())) {
       assertThat(against(Sheet.json(Samples.subject(), result, false))).isEmpty();
       assertThat(against(Sheet.json(Samples.inches(), result, true))).isEmpty();
     }

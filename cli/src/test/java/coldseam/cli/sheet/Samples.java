@@ -50,15 +50,29 @@ final class Samples {
 
   /** Two spaces, everything estimated. */
   static Result estimated() {
-    return result(estimate(1.23456, 0.0004), estimate(0.61234, 0.00042), estimate(0.2134, 1e-4));
+    return result(
+        estimate(1.23456, 0.0004),
+        estimate(0.61234, 0.00042),
+        estimate(0.2134, 1e-4),
+        estimate(4.686036, 0.003));
   }
 
   /** The same with bounds. */
   static Result certified() {
+    return bounded(proved(4.686036, 4.6838, 4.6883));
+  }
+
+  /** The same with bounds but for R. */
+  static Result mixed() {
+    return bounded(estimate(4.686036, 0.003));
+  }
+
+  private static Result bounded(Quantity resistance) {
     return result(
         proved(1.23456, 1.2342, 1.2349),
         proved(0.61234, 0.6119, 0.6128),
-        proved(0.2134, 0.2133, 0.2135));
+        proved(0.2134, 0.2133, 0.2135),
+        resistance);
   }
 
   /** Two fixed temperatures meet: no finite coupling, temperatures only. */
@@ -68,10 +82,10 @@ final class Samples {
             Double.POSITIVE_INFINITY,
             new Certificate.NotCertified(
                 "two fixed temperatures meet in a point", Double.POSITIVE_INFINITY));
-    return result(none, estimate(0.6, 0.0001), estimate(0.2, 0.0001));
+    return result(none, estimate(0.6, 0.0001), estimate(0.2, 0.0001), estimate(5, 0.0025));
   }
 
-  private static Result result(Quantity coupling, Quantity psi, Quantity u) {
+  private static Result result(Quantity coupling, Quantity psi, Quantity u, Quantity resistance) {
     Detail detail =
         new Detail(
             "Slab edge",
@@ -115,12 +129,7 @@ final class Samples {
                 List.of())),
         List.of(
             new Result.EffectiveTransmittance(
-                "wall",
-                List.of("indoors"),
-                List.of("outdoors"),
-                u,
-                estimate(1 / u.value(), 0.003),
-                0.6)),
+                "wall", List.of("indoors"), List.of("outdoors"), u, resistance, 0.6)),
         List.of(
             space("indoors", 20, coupling.value() * 25),
             space("outdoors", -5, -coupling.value() * 25)),

@@ -21,10 +21,10 @@ class TextCardTest {
             cases/slab.yaml
 
             Result  films for heat loss
-              ψ external of floor edge  indoors – outdoors  0.6123  ± 0.0005  W/(m·K)   external dimensions
-              U wall                    indoors – outdoors  0.2134  ± 0.0001  W/(m²·K)  over 600 mm
-              R wall                    films included       4.686   ± 0.004  m²·K/W
-              L2D                       indoors – outdoors  1.2346  ± 0.0005  W/(m·K)
+              ψ external of floor edge  indoors – outdoors  0.6123  ± 0.0005  W/(m·K)   estimate  external dimensions
+              U wall                    indoors – outdoors  0.2134  ± 0.0001  W/(m²·K)  estimate  over 600 mm
+              R wall                    films included       4.686   ± 0.004  m²·K/W    estimate
+              L2D                       indoors – outdoors  1.2346  ± 0.0005  W/(m·K)   estimate
               Not certified: ± is an estimate of the numerical error, not a bound (no bounds are computed)
             """);
   }
@@ -82,8 +82,15 @@ class TextCardTest {
   @Test
   void bounds_are_called_bounds_only_when_proved() {
     assertThat(Sheet.card(Samples.subject(), Samples.certified(), Ink.NONE))
-        .contains("certified: the exact result of the stated problem lies within ±")
+        .contains("1.2346  ± 0.0004  W/(m·K)   certified\n")
+        .contains("Certified: the exact number of the section as resolved lies within its ±")
         .doesNotContain("Not certified");
+    assertThat(Sheet.card(Samples.subject(), Samples.mixed(), Ink.NONE))
+        .contains("1.2346  ± 0.0004  W/(m·K)   certified\n")
+        .contains("4.686   ± 0.004  m²·K/W    estimate\n")
+        .contains("Not certified where it says estimate: ±");
+    assertThat(Words.certified(Samples.certified())).isTrue();
+    assertThat(Words.certified(Samples.mixed())).isFalse();
   }
 
   @Test

@@ -51,6 +51,24 @@ class DigitsTest {
   }
 
   @Test
+  void bounds_are_covered_and_no_more() {
+    assertThat(Digits.between(1.23456, 1.2342, 1.2349, 4).text()).isEqualTo("1.2346 ± 0.0004");
+    assertThat(Digits.between(1.5, 1.5, 1.7, 4).text()).isEqualTo("1.5 ± 0.2");
+    assertThat(Digits.between(1.5, Double.NEGATIVE_INFINITY, 2, 4).text()).isEqualTo("1.5 ± ?");
+    Random random = new Random(5);
+    for (int i = 0; i < 20000; i++) {
+      double lower = random.nextGaussian();
+      double upper = lower + random.nextDouble() * Math.pow(10, -random.nextInt(6));
+      double value = lower + random.nextDouble() * (upper - lower);
+      Digits.Figure figure = Digits.between(value, lower, upper, 6);
+      BigDecimal number = new BigDecimal(figure.value().replace('−', '-'));
+      BigDecimal width = new BigDecimal(figure.halfWidth());
+      assertThat(number.subtract(width)).isLessThanOrEqualTo(BigDecimal.valueOf(lower));
+      assertThat(number.add(width)).isGreaterThanOrEqualTo(BigDecimal.valueOf(upper));
+    }
+  }
+
+  @Test
   void what_is_not_known_is_not_printed_as_if_it_were() {
     assertThat(Digits.of(1.23456, Double.POSITIVE_INFINITY, 4).text()).isEqualTo("1.23 ± ?");
     assertThat(Digits.of(1.23456, Double.NaN, 4).text()).isEqualTo("1.23 ± ?");
