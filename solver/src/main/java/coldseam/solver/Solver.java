@@ -4,7 +4,6 @@ import coldseam.mesh.partition.Partition;
 import coldseam.mesh.plane.Resolution;
 import coldseam.solver.conduction.Conduction;
 import coldseam.solver.conduction.Progress;
-import coldseam.solver.conduction.Quantity;
 import coldseam.solver.conduction.Solution;
 import coldseam.solver.detail.Accuracy;
 import coldseam.solver.detail.Assumption;
@@ -16,6 +15,7 @@ import coldseam.solver.detail.FilmSet;
 import coldseam.solver.detail.Geometry;
 import coldseam.solver.detail.Subtraction;
 import coldseam.solver.detail.Wanted;
+import coldseam.solver.result.OtherCoupling;
 import coldseam.solver.result.Plan;
 import coldseam.solver.result.Result;
 import java.util.Collections;
@@ -87,7 +87,7 @@ public final class Solver {
     boolean shared = surfaceNeeded && plan.sameFilms();
     Solution heatLoss =
         resolved.solveHeatLoss(accuracy, shared || plan.heatLossTemperaturesWanted(), progress);
-    Map<Subtraction.OfDetail, Quantity> others = solveOthers(resolved, accuracy, progress);
+    Map<Subtraction.OfDetail, OtherCoupling> others = solveOthers(resolved, accuracy, progress);
     start = lap(times, "heat loss", start);
 
     Optional<Solution> surface = Optional.empty();
@@ -114,9 +114,9 @@ public final class Solver {
         });
   }
 
-  private static Map<Subtraction.OfDetail, Quantity> solveOthers(
+  private static Map<Subtraction.OfDetail, OtherCoupling> solveOthers(
       Resolved resolved, Accuracy accuracy, Progress progress) {
-    Map<Subtraction.OfDetail, Quantity> couplings = new LinkedHashMap<>();
+    Map<Subtraction.OfDetail, OtherCoupling> couplings = new LinkedHashMap<>();
     resolved
         .others()
         .forEach(

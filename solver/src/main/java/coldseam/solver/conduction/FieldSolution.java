@@ -26,6 +26,7 @@ final class FieldSolution implements Solution {
   private final int passes;
   private final boolean[][] meeting;
   private volatile StretchFlows stretchFlows;
+  private volatile Dissipation dissipation;
 
   FieldSolution(
       Partition partition,
@@ -175,6 +176,16 @@ final class FieldSolution implements Solution {
       stretchFlows = ready;
     }
     return ready.flow(stretch, temperaturesC);
+  }
+
+  @Override
+  public Dissipation dissipation() {
+    Dissipation ready = dissipation;
+    if (ready == null) {
+      ready = new Dissipation(conditions, d, fields, bound);
+      dissipation = ready;
+    }
+    return ready;
   }
 
   @Override

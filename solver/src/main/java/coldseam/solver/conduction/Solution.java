@@ -74,6 +74,9 @@ public interface Solution {
    */
   double stretchFlow(int stretch, double[] temperaturesC);
 
+  /** What each material and film contributes to the matrix A; without prescribed flows. */
+  Dissipation dissipation();
+
   /** Total prescribed flow into the detail, W/m. */
   double prescribedFlow();
 

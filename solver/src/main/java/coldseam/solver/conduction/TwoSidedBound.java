@@ -134,12 +134,12 @@ final class TwoSidedBound {
   private double lower(int i, int j) {
     double sum = 0;
     for (int t = 0; t < d.mesh.triangleCount(); t++) {
-      sum -= QuadraticElement.energy(conjugate, space.nodes, t, streams[i], streams[j]);
+      sum -= resistance(t, i, j);
     }
     Outline o = d.outline;
     for (int s = 0; s < o.count; s++) {
       if (o.kind[s] == Conditions.Kind.FILM) {
-        sum -= filmResistance(s, streams[i], streams[j]);
+        sum -= filmResistance(s, i, j);
       }
       if (o.space[s] >= 0) {
         sum += unit(s, i) * fall(s, streams[j]) + unit(s, j) * fall(s, streams[i]);
@@ -190,8 +190,15 @@ final class TwoSidedBound {
         - stream[ConjugateProblem.streamEnd(d, space, s)];
   }
 
-  /** ∫Rs S′T′ along a side. */
-  private double filmResistance(int s, double[] a, double[] b) {
+  /** ∫q_i·λ⁻¹q_j over a triangle. */
+  double resistance(int t, int i, int j) {
+    return QuadraticElement.energy(conjugate, space.nodes, t, streams[i], streams[j]);
+  }
+
+  /** ∫Rs q_in q_jn along a side with a film. */
+  double filmResistance(int s, int i, int j) {
+    double[] a = streams[i];
+    double[] b = streams[j];
     double ap = rise(s, a, true);
     double aq = rise(s, a, false);
     double bp = rise(s, b, true);

@@ -11,6 +11,7 @@ import coldseam.solver.detail.Space;
 import java.util.ArrayList;
 import java.util.BitSet;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.stream.IntStream;
 
@@ -63,11 +64,22 @@ final class Couplings {
     List<Result.Coupling> pairs = new ArrayList<>();
     for (int i = faced.nextSetBit(0); i >= 0; i = faced.nextSetBit(i + 1)) {
       for (int j = faced.nextSetBit(i + 1); j >= 0; j = faced.nextSetBit(j + 1)) {
-        pairs.add(
-            new Result.Coupling(name(i), name(j), solution.coupling(new int[] {i}, new int[] {j})));
+        pairs.add(pair(i, j));
       }
     }
     return pairs;
+  }
+
+  private Result.Coupling pair(int i, int j) {
+    int[] from = {i};
+    int[] to = {j};
+    Quantity value = solution.coupling(from, to);
+    return new Result.Coupling(
+        name(i),
+        name(j),
+        value,
+        byPart(from, to, Map.of(), new int[0])
+            .flatMap(parts -> new Combination().add(1, parts).tolerance(value)));
   }
 
   static BitSet faced(Solution solution) {
@@ -124,6 +136,75 @@ final class Couplings {
       reason = not.reason();
     }
     return new Quantity(direct.value() + through, new Certificate.NotCertified(reason, estimate));
+  }
+
+  /**
+   * How a coupling of two groups depends on materials and films.
+   *
+   * @param warm one group
+   * @param cold the other
+   * @param weights spaces between that count as often as said, by index
+   * @param floating indices of the spaces to eliminate
+   * @return empty where the coupling is infinite
+   */
+  Optional<ByPart> byPart(int[] warm, int[] cold, Map<Integer, Double> weights, int[] floating) {
+    double[] x = extended(warm, floating);
+    double[] y = extended(cold, floating);
+    boolean finite = Double.isFinite(solution.coupling(warm, cold).value());
+    for (Map.Entry<Integer, Double> weight : weights.entrySet()) {
+      int[] between = {weight.getKey()};
+      finite &= Double.isFinite(solution.coupling(warm, between).value());
+      double[] more = extended(between, floating);
+      for (int i = 0; i < count; i++) {
+        y[i] += weight.getValue() * more[i];
+      }
+    }
+    if (!finite) {
+      return Optional.empty();
+    }
+    boolean whole = floating.length == 0 && weights.isEmpty() && warm.length + cold.length == count;
+    return Optional.of(ByPart.coupling(detail, solution.dissipation(), x, y, whole));
+  }
+
+  /** 1 in a group, what the floating spaces take of it, 0 elsewhere. */
+  private double[] extended(int[] group, int[] floating) {
+    double[] x = new double[count];
+    for (int i : group) {
+      x[i] = 1;
+    }
+    if (floating.length > 0) {
+      double[][] responses = responses(floating);
+      for (int f = 0; f < floating.length; f++) {
+        for (int i : group) {
+          x[floating[f]] += responses[f][i];
+        }
+      }
+    }
+    return x;
+  }
+
+  /**
+   * How {@link #response} depends on materials and films: ∂r = −A_ff⁻¹ (∂A ỹ)_f.
+   *
+   * @return dimensionless slopes, never bounded
+   */
+  ByPart responseByPart(int[] floating, int which, int[] cold) {
+    int size = floating.length;
+    double[][] system = new double[size][2 * size];
+    for (int f = 0; f < size; f++) {
+      system[f][size + f] = 1;
+      for (int g = 0; g < size; g++) {
+        system[f][g] = matrix[floating[f]][floating[g]];
+      }
+    }
+    eliminate(system, floating);
+    double[] x = new double[count];
+    for (int f = 0; f < size; f++) {
+      for (int g = 0; g < size; g++) {
+        x[floating[g]] += floating[f] == which ? system[f][size + g] : 0;
+      }
+    }
+    return ByPart.coupling(detail, solution.dissipation(), x, extended(cold, floating), false);
   }
 
   /** By how much a floating space warms when the cold group warms by 1 K, 0 … 1. */

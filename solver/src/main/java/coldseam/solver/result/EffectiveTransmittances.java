@@ -10,6 +10,7 @@ import coldseam.solver.detail.Wording;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 
 /** U = L2D / width over a module, and R = 1/U. */
@@ -175,7 +176,10 @@ final class EffectiveTransmittances {
               plan.wanted().cold(),
               u,
               Total.inverse(u),
-              plan.widthM()));
+              plan.widthM(),
+              couplings
+                  .byPart(plan.warm(), plan.cold(), Map.of(), plan.floating())
+                  .flatMap(parts -> new Combination().add(1 / plan.widthM(), parts).tolerance(u))));
     }
     return all;
   }

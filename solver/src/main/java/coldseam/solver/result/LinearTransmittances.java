@@ -2,19 +2,26 @@ package coldseam.solver.result;
 
 import coldseam.solver.conduction.Quantity;
 import coldseam.solver.detail.Bracket;
+import coldseam.solver.detail.Conditions;
+import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.Subtraction;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.function.Function;
 
 /** ψ = Σ b·L2D − Σ b·U·l (ISO 10211:2017, clause 12). */
 final class LinearTransmittances {
   private final List<PsiPlan> plans;
+  private final Detail detail;
+  private final Conditions conditions;
 
-  LinearTransmittances(List<PsiPlan> plans) {
+  LinearTransmittances(List<PsiPlan> plans, Detail detail, Conditions conditions) {
     this.plans = List.copyOf(plans);
+    this.detail = detail;
+    this.conditions = conditions;
   }
 
   boolean any() {
@@ -46,12 +53,12 @@ final class LinearTransmittances {
    * @param others L2D of the other details
    */
   List<Result.LinearTransmittance> evaluate(
-      Couplings couplings, Function<Subtraction.OfDetail, Quantity> others) {
+      Couplings couplings, Function<Subtraction.OfDetail, OtherCoupling> others) {
     return plans.stream().map(plan -> evaluate(plan, couplings, others)).toList();
   }
 
   private Result.LinearTransmittance evaluate(
-      PsiPlan plan, Couplings couplings, Function<Subtraction.OfDetail, Quantity> others) {
+      PsiPlan plan, Couplings couplings, Function<Subtraction.OfDetail, OtherCoupling> others) {
     Total coupling = new Total();
     coupling.add(1, couplings.between(plan.warm(), plan.cold(), plan.floating()));
     plan.weights()
@@ -69,7 +76,7 @@ final class LinearTransmittances {
               : couplings.response(plan.floating(), term.separation().floating(), plan.cold());
       Bracket value;
       if (term.other().isPresent()) {
-        Quantity other = others.apply(term.other().get());
+        Quantity other = others.apply(term.other().get()).value();
         psi.add(-1, other);
         value = Total.bracket(other);
       } else {
@@ -87,6 +94,8 @@ final class LinearTransmittances {
               value,
               term.derivation()));
     }
+    Quantity value = psi.quantity();
+    Optional<Combination> made = combination(plan, couplings, others);
     return new Result.LinearTransmittance(
         plan.wanted().name(),
         plan.wanted().of(),
@@ -94,9 +103,47 @@ final class LinearTransmittances {
         plan.wanted().cold(),
         plan.wanted().dimensions(),
         start,
-        psi.quantity(),
+        value,
         List.copyOf(subtracted),
-        parts(plan, couplings));
+        parts(plan, couplings),
+        made.map(Combination::sensitivities).orElse(List.of()),
+        made.flatMap(all -> all.tolerance(value)));
+  }
+
+  /** ψ by material and film: empty where an L2D in it is infinite. */
+  private Optional<Combination> combination(
+      PsiPlan plan, Couplings couplings, Function<Subtraction.OfDetail, OtherCoupling> others) {
+    Optional<ByPart> coupling =
+        couplings.byPart(plan.warm(), plan.cold(), plan.weights(), plan.floating());
+    if (coupling.isEmpty()) {
+      return Optional.empty();
+    }
+    Combination all = new Combination().add(1, coupling.get());
+    for (PsiPlan.Term term : plan.terms()) {
+      if (term.other().isPresent()) {
+        Optional<ByPart> other = others.apply(term.other().get()).byPart();
+        if (other.isEmpty()) {
+          return Optional.empty();
+        }
+        all.add(-1, other.get());
+        continue;
+      }
+      Bracket u = term.uWPerM2K().get();
+      double weight = term.separation().weight();
+      int floating = term.separation().floating();
+      if (floating >= 0) {
+        weight = couplings.response(plan.floating(), floating, plan.cold());
+        ByPart slopes = couplings.responseByPart(plan.floating(), floating, plan.cold());
+        all.add(-u.mid() * term.lengthM(), slopes);
+      }
+      Optional<ByPart> layers = term.flank().flatMap(flank -> flank.byPart(detail, conditions));
+      if (layers.isPresent()) {
+        all.add(-weight * term.lengthM(), layers.get());
+      } else {
+        all.subtract(Total.scaled(u, weight * term.lengthM()));
+      }
+    }
+    return Optional.of(all);
   }
 
   private List<Result.Coupling> parts(PsiPlan plan, Couplings couplings) {
@@ -119,6 +166,9 @@ final class LinearTransmittances {
       PsiPlan plan, Couplings couplings, int warm, int other, double weight) {
     Quantity whole = couplings.between(new int[] {warm}, new int[] {other}, plan.floating());
     return new Result.Coupling(
-        couplings.name(warm), couplings.name(other), new Total().add(weight, whole).quantity());
+        couplings.name(warm),
+        couplings.name(other),
+        new Total().add(weight, whole).quantity(),
+        Optional.empty());
   }
 }

@@ -1,7 +1,9 @@
 package coldseam.solver.result;
 
 import coldseam.solver.detail.Bracket;
+import coldseam.solver.detail.Conditions;
 import coldseam.solver.detail.CutOffPlane;
+import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.DimensionSystem;
 import coldseam.solver.detail.Flank;
 import coldseam.solver.detail.Wording;
@@ -50,6 +52,26 @@ record PlacedFlank(
       return stated;
     }
     return Optional.of(Bracket.of(drawnUWPerM2K().getAsDouble()));
+  }
+
+  /** How U depends on materials and films; empty if it is typed. */
+  Optional<ByPart> byPart(Detail detail, Conditions conditions) {
+    if (typedU() || reading.layers().isEmpty() || warmEnd.isEmpty() || coldEnd.isEmpty()) {
+      return Optional.empty();
+    }
+    List<FlankLayers.Layer> layers = reading.layers().get().layers();
+    List<Part> parts = new ArrayList<>();
+    double[] resistances = new double[layers.size() + 2];
+    for (FlankLayers.Layer layer : layers) {
+      resistances[parts.size()] = layer.thicknessM() / layer.conductivityWPerMK();
+      parts.add(Part.of(layer.material()));
+    }
+    for (FlankEnd end : List.of(warmEnd.get(), coldEnd.get())) {
+      resistances[parts.size()] = conditions.filmM2KPerW(end.face());
+      parts.add(
+          Part.film(detail.spaces().get(end.space()).name(), conditions.filmM2KPerW(end.face())));
+    }
+    return Optional.of(ByPart.layers(parts, resistances));
   }
 
   boolean typedU() {

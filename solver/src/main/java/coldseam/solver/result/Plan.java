@@ -1,7 +1,6 @@
 package coldseam.solver.result;
 
 import coldseam.mesh.partition.Partition;
-import coldseam.solver.conduction.Quantity;
 import coldseam.solver.conduction.Solution;
 import coldseam.solver.detail.Assumption;
 import coldseam.solver.detail.Bracket;
@@ -62,7 +61,7 @@ public final class Plan {
     flanks = finder.flanks();
     lengths = new FlankLengths(outline, flanks);
     PsiPlanner planner = new PsiPlanner(detail, outline, flanks, lengths);
-    psi = new LinearTransmittances(planner.plans());
+    psi = new LinearTransmittances(planner.plans(), detail, heatLoss);
     transmittances = new EffectiveTransmittances(detail, outline);
     SectionChecks section = new SectionChecks(detail, outline);
     cutOffs = new CutOffChecks(outline);
@@ -222,14 +221,16 @@ public final class Plan {
    * @param cold names on the other
    * @return W/(m·K)
    */
-  public Quantity coupling(Solution heatLossSolution, List<String> warm, List<String> cold) {
+  public OtherCoupling coupling(Solution heatLossSolution, List<String> warm, List<String> cold) {
     int[] one = warm.stream().mapToInt(detail::spaceIndex).toArray();
     int[] other = cold.stream().mapToInt(detail::spaceIndex).toArray();
     int[] floating =
         Arrays.stream(Couplings.floating(detail))
             .filter(f -> !Couplings.contains(one, f) && !Couplings.contains(other, f))
             .toArray();
-    return new Couplings(detail, heatLossSolution).between(one, other, floating);
+    Couplings couplings = new Couplings(detail, heatLossSolution);
+    return new OtherCoupling(
+        couplings.between(one, other, floating), couplings.byPart(one, other, Map.of(), floating));
   }
 
   /** Faults in the sides between which another detail's L2D is asked of this one. */
@@ -252,7 +253,7 @@ public final class Plan {
   public Result result(
       Solution heatLossSolution,
       Optional<Solution> surfaceSolution,
-      Function<Subtraction.OfDetail, Quantity> others,
+      Function<Subtraction.OfDetail, OtherCoupling> others,
       Supplier<Map<String, Double>> timesMs) {
     Couplings couplings = new Couplings(detail, heatLossSolution);
     double[] temperatures = couplings.temperatures();
@@ -277,6 +278,7 @@ public final class Plan {
         balances.stretches(),
         profiles.points(),
         profiles.profiles(),
+        Sharing.of(detail, heatLossSolution, temperatures),
         Weights.of(detail, surfaces, coldestFields, sets),
         flanks(),
         assumptions(),

@@ -1,6 +1,7 @@
 package coldseam.solver.result;
 
 import coldseam.mesh.plane.Point;
+import coldseam.solver.conduction.Certificate;
 import coldseam.solver.conduction.Quantity;
 import coldseam.solver.conduction.Solution;
 import coldseam.solver.detail.Assumption;
@@ -24,6 +25,7 @@ import java.util.OptionalDouble;
  * @param stretches one entry a named stretch, in the detail's order
  * @param points temperatures at named points
  * @param profiles temperatures along lines and surfaces
+ * @param shares what the heat flow hangs on, largest share first; none where it is 0 or infinite
  * @param weights temperature weighting factors of the coldest point of each space and of the named
  *     points; empty for fewer than three spaces
  * @param flanks every flank, named or found
@@ -47,6 +49,7 @@ public record Result(
     List<StretchResult> stretches,
     List<PointResult> points,
     List<ProfileResult> profiles,
+    Shares shares,
     List<Weight> weights,
     List<FlankResult> flanks,
     List<Assumption> assumptions,
@@ -65,8 +68,48 @@ public record Result(
    * @param from a space
    * @param to another
    * @param valueWPerMK W/(m·K)
+   * @param tolerance what the tolerances of conductivities add; empty if none is stated
    */
-  public record Coupling(String from, String to, Quantity valueWPerMK) {}
+  public record Coupling(
+      String from, String to, Quantity valueWPerMK, Optional<Tolerance> tolerance) {}
+
+  /**
+   * What tolerances of conductivities add to a number, each conductivity anywhere within its own.
+   *
+   * @param halfWidth what value ± its own half-width has to be widened by, same unit
+   * @param certificate an interval that is proved for every combination of conductivities; or,
+   *     where nothing is proved, the worst case to first order, Σ|∂|·tolerance
+   */
+  public record Tolerance(double halfWidth, Certificate certificate) {}
+
+  /**
+   * How a number follows a conductivity or the conductance of a film.
+   *
+   * @param of name of the material, or "film indoors 0.13"
+   * @param film whether it is a film
+   * @param slope change of the number over relative change of the conductivity, or of 1/Rs, to
+   *     first order, unit of the number
+   */
+  public record Sensitivity(String of, boolean film, double slope) {}
+
+  /**
+   * Shares. They say what the number hangs on, not where the heat passes: that is the heat flow
+   * through each stretch.
+   *
+   * @param referTo the number they are shares of, in words
+   * @param parts largest first; they add up to 1
+   */
+  public record Shares(String referTo, List<Share> parts) {}
+
+  /**
+   * Relative change of a heat flow over relative change of one conductivity or film conductance.
+   *
+   * @param of name of the material, or "film indoors 0.13"
+   * @param film whether it is a film
+   * @param share part of 1
+   * @param relativeTolerance of the conductivity, 0 if none is stated
+   */
+  public record Share(String of, boolean film, double share, double relativeTolerance) {}
 
   /**
    * One term taken off L2D.
@@ -98,6 +141,8 @@ public record Result(
    * @param valueWPerMK ψ, W/(m·K)
    * @param subtracted what was taken off
    * @param parts each pair's part of the L2D, when spaces were merged: name "warm – cold"
+   * @param sensitivities ∂ψ of every material and film, flanks and other details included
+   * @param tolerance what the tolerances of conductivities add; empty if none is stated
    */
   public record LinearTransmittance(
       String name,
@@ -108,7 +153,9 @@ public record Result(
       Quantity couplingWPerMK,
       Quantity valueWPerMK,
       List<Subtracted> subtracted,
-      List<Coupling> parts) {}
+      List<Coupling> parts,
+      List<Sensitivity> sensitivities,
+      Optional<Tolerance> tolerance) {}
 
   /**
    * Effective U.
@@ -119,6 +166,7 @@ public record Result(
    * @param valueWPerM2K U, W/(m²·K)
    * @param resistanceM2KPerW total resistance 1/U, films included, m²·K/W
    * @param widthM module width, m
+   * @param tolerance what the tolerances of conductivities add to U; empty if none is stated
    */
   public record EffectiveTransmittance(
       String of,
@@ -126,7 +174,8 @@ public record Result(
       List<String> cold,
       Quantity valueWPerM2K,
       Quantity resistanceM2KPerW,
-      double widthM) {}
+      double widthM,
+      Optional<Tolerance> tolerance) {}
 
   /**
    * A point of a surface; an estimate, never certified.

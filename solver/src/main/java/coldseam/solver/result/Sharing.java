@@ -1,0 +1,79 @@
+package coldseam.solver.result;
+
+import coldseam.solver.conduction.Dissipation;
+import coldseam.solver.conduction.Solution;
+import coldseam.solver.detail.Detail;
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.List;
+
+/**
+ * Shares of materials and films: λ ∂L2D/∂λ over L2D is what is dissipated in a material over all
+ * that is dissipated, per unit of temperature difference. With more than two temperatures they are
+ * shares of θᵀAθ, which for two temperatures ΔT apart is L2D·ΔT².
+ */
+final class Sharing {
+  private static final Result.Shares NONE = new Result.Shares("", List.of());
+
+  private Sharing() {}
+
+  /**
+   * Works the shares out.
+   *
+   * @param detail what was solved
+   * @param solution its solution with the films for heat loss
+   * @param temperaturesC of every space, °C; two spaces need no difference
+   * @return none where no heat flows, or infinitely much
+   */
+  static Result.Shares of(Detail detail, Solution solution, double[] temperaturesC) {
+    int spaces = temperaturesC.length;
+    double[] x = spaces == 2 ? new double[] {1, 0} : temperaturesC;
+    for (int i = 0; i < spaces; i++) {
+      for (int j = 0; j < spaces; j++) {
+        if (x[i] != x[j] && !Double.isFinite(solution.matrix(i, j))) {
+          return NONE;
+        }
+      }
+    }
+    Dissipation dissipation = solution.dissipation();
+    List<Part> parts = Part.of(detail, dissipation);
+    double[] energies = new double[parts.size()];
+    double all = 0;
+    for (int p = 0; p < energies.length; p++) {
+      energies[p] = dissipation.dissipated(p, x, x);
+      all += energies[p];
+    }
+    if (!(all > 0)) {
+      return NONE;
+    }
+    List<Result.Share> shares = new ArrayList<>();
+    for (int p = 0; p < energies.length; p++) {
+      Part part = parts.get(p);
+      shares.add(
+          new Result.Share(part.name(), part.film(), energies[p] / all, part.relativeTolerance()));
+    }
+    shares.sort(Comparator.comparingDouble(share -> -share.share()));
+    return new Result.Shares(words(detail, x), List.copyOf(shares));
+  }
+
+  private static String words(Detail detail, double[] x) {
+    List<String> high = new ArrayList<>();
+    List<String> low = new ArrayList<>();
+    double highest = x[0];
+    double lowest = x[0];
+    for (double value : x) {
+      highest = Math.max(highest, value);
+      lowest = Math.min(lowest, value);
+    }
+    for (int i = 0; i < x.length; i++) {
+      if (x[i] == highest) {
+        high.add(detail.spaces().get(i).name());
+      } else if (x[i] == lowest) {
+        low.add(detail.spaces().get(i).name());
+      }
+    }
+    return high.size() + low.size() == x.length
+        ? "L2D " + String.join(" + ", high) + " – " + String.join(" + ", low)
+        : "θᵀAθ, the heat flows of all spaces times their temperatures";
+  }
+}
