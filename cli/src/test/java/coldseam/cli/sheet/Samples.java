@@ -101,7 +101,7 @@ final class Samples {
             List.of());
     return new Result(
         detail,
-        List.of(new Result.Coupling("indoors", "outdoors", coupling)),
+        List.of(new Result.Coupling("indoors", "outdoors", coupling, tolerance(coupling))),
         List.of(
             new Result.LinearTransmittance(
                 "external",
@@ -126,10 +126,20 @@ final class Samples {
                         0.5,
                         new Bracket(0.15995, 0.16005),
                         "")),
-                List.of())),
+                List.of(),
+                List.of(
+                    new Result.Sensitivity("insulation", false, 0.01234),
+                    new Result.Sensitivity("film indoors 0.13", true, -0.002)),
+                tolerance(psi))),
         List.of(
             new Result.EffectiveTransmittance(
-                "wall", List.of("indoors"), List.of("outdoors"), u, resistance, 0.6)),
+                "wall",
+                List.of("indoors"),
+                List.of("outdoors"),
+                u,
+                resistance,
+                0.6,
+                tolerance(u))),
         List.of(
             space("indoors", 20, coupling.value() * 25),
             space("outdoors", -5, -coupling.value() * 25)),
@@ -142,6 +152,14 @@ final class Samples {
                 List.of(
                     new Result.Sample(0, new Point(0, 0), 12.5),
                     new Result.Sample(0.5, new Point(0, 0.5), Double.NaN)))),
+        Double.isFinite(coupling.value())
+            ? new Result.Shares(
+                "L2D indoors – outdoors",
+                List.of(
+                    new Result.Share("insulation", false, 0.8, 0.03),
+                    new Result.Share("film indoors 0.13", true, 0.1996, 0),
+                    new Result.Share("foil", false, 0.0004, 0)))
+            : new Result.Shares("", List.of()),
         List.of(
             new Result.Weight("A", FilmSet.HEAT_LOSS, "indoors", 0.65),
             new Result.Weight("A", FilmSet.HEAT_LOSS, "outdoors", 0.35)),
@@ -167,6 +185,20 @@ final class Samples {
         1234,
         5678,
         new TreeMap<>(Map.of("mesh", 12.5, "solve", 80.25)));
+  }
+
+  /** Proved where the number is, of a quarter of it. */
+  private static Optional<Result.Tolerance> tolerance(Quantity quantity) {
+    if (!Double.isFinite(quantity.value())) {
+      return Optional.empty();
+    }
+    double width = quantity.value() / 4;
+    return Optional.of(
+        new Result.Tolerance(
+            width - quantity.halfWidth(),
+            quantity.certified()
+                ? new Certificate.Certified(quantity.value() - width, quantity.value() + width)
+                : new Certificate.NotCertified("no bounds are computed", width)));
   }
 
   private static Result.SpaceResult space(String name, double temperatureC, double flow) {
