@@ -1,6 +1,7 @@
 package coldseam.solver.detail;
 
 import coldseam.mesh.plane.Point;
+import coldseam.mesh.plane.Resolution;
 import java.math.BigDecimal;
 import java.math.MathContext;
 import java.math.RoundingMode;
@@ -10,6 +11,9 @@ public final class Wording {
   private static final int PLACE_DECIMALS = 1;
   private static final int SIZE_DIGITS = 4;
   private static final int FIGURE_DIGITS = 6;
+
+  /** Shorter lengths are none: below it points of a drawing are the same. */
+  private static final double SHORTEST_M = Resolution.STANDARD.snapM();
 
   private Wording() {}
 
@@ -30,6 +34,9 @@ public final class Wording {
    * @return text such as "340 mm"
    */
   public static String length(double lengthM) {
+    if (Math.abs(lengthM) < SHORTEST_M) {
+      return "0 mm";
+    }
     BigDecimal mm = BigDecimal.valueOf(lengthM * 1000);
     int digits = Math.max(SIZE_DIGITS, mm.precision() - mm.scale() + PLACE_DECIMALS);
     return plain(mm.round(new MathContext(digits, RoundingMode.HALF_EVEN))) + " mm";
