@@ -61,7 +61,7 @@ class GroundTest {
     ground.take(new Box(180, 100, 240, 112));
     ground.take(new Box(180, 188, 240, 200));
     ground.take(new Box(228, 100, 240, 200));
-    Box box = ground.near(200, 150, 70, 14, 30, 120, owner -> true).orElseThrow();
+    Box box = ground.near(200, 150, 70, 14, 60, 120, owner -> true).orElseThrow();
     assertThat(box.x1()).isLessThan(200);
   }
 }
