@@ -18,6 +18,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.concurrent.FutureTask;
 
 /** Solves cases: card, data, plots. */
 final class SolveCommand implements Command {
@@ -91,6 +92,12 @@ final class SolveCommand implements Command {
       throws UsageException, CaseException, IOException {
     contradictions(typed);
     List<Job> jobs = jobs(typed, here);
+    if (!typed.has(NO_PLOTS) && jobs.stream().anyMatch(job -> job.folder().isPresent())) {
+      // A task keeps to itself what goes wrong; drawing will say it again.
+      Thread plots = new Thread(new FutureTask<>(Plots::prepare, null), "prepare plots");
+      plots.setDaemon(true);
+      plots.start();
+    }
     int code = ExitCode.DONE;
     boolean first = true;
     for (Job job : jobs) {
@@ -271,10 +278,10 @@ final class SolveCommand implements Command {
             new Plots.Caption(
                 job.subject().variant(), job.from().unit(), job.from().metresPerUnit()));
     try {
+      if (!typed.has(NO_PLOTS)) {
+        plots.svgs(PLOTS).forEach((kind, svg) -> files.put(kind.stem() + ".svg", bytes(svg)));
+      }
       for (Plots.Kind kind : PLOTS) {
-        if (!typed.has(NO_PLOTS)) {
-          files.put(kind.stem() + ".svg", bytes(plots.svg(kind)));
-        }
         if (typed.has(PNG)) {
           files.put(kind.stem() + ".png", plots.png(kind));
         }

@@ -28,6 +28,7 @@ enum Hatch {
   CROSSED;
 
   private static final double WIDEST_ZIGZAG = 30;
+  private static final double USUAL_PITCH = 9;
   private static final double DOT = 1;
 
   /** Marks are cut off this near to the rim of a face narrower than it is worth hatching. */
@@ -74,7 +75,7 @@ enum Hatch {
     double height = field.box.height();
     int rows = (int) Math.ceil(height / WIDEST_ZIGZAG);
     double row = height / rows;
-    double half = Math.max(2.5, Math.min(pitch, row * 0.36));
+    double half = Math.max(2.5, row * pitch / USUAL_PITCH * 0.36);
     for (int r = 0; r < rows; r++) {
       double low = field.box.y0() + r * row;
       int n = (int) Math.ceil(field.box.width() / half);

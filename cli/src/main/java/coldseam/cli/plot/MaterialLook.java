@@ -10,7 +10,6 @@ import java.util.EnumMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
-import java.util.regex.Pattern;
 
 /**
  * The tone and the hatch of a material. Both follow from what it is, by its conductivity or, for
@@ -24,12 +23,12 @@ import java.util.regex.Pattern;
  * @param pitch between two hatch lines, points
  */
 record MaterialLook(Hatch hatch, Color tone, Color line, double turn, double pitch) {
-  private static final Pattern GROUND =
-      Pattern.compile("\\b(soil|ground|earth|clay|silt|sand|gravel|hardcore|fill)\\b");
-  private static final Pattern TIMBER =
-      Pattern.compile("wood|timber|plywood|spruce|pine|oak|osb|stud|rafter|joist");
-  private static final Pattern AIR = Pattern.compile("\\b(air|cavity|void|argon|krypton)\\b");
-  private static final Pattern GLASS = Pattern.compile("\\b(glass|pane)\\b");
+  private static final List<String> GROUND =
+      List.of("soil", "ground", "earth", "clay", "silt", "sand", "gravel", "hardcore", "fill");
+  private static final List<String> TIMBER =
+      List.of("wood", "timber", "plywood", "spruce", "pine", "oak", "osb", "rafter", "joist");
+  private static final List<String> AIR = List.of("air", "cavity", "void", "argon", "krypton");
+  private static final List<String> GLASS = List.of("glass", "pane");
 
   private static final double INSULATION_BELOW = 0.065;
   private static final double BOARD_BELOW = 0.26;
@@ -65,7 +64,7 @@ record MaterialLook(Hatch hatch, Color tone, Color line, double turn, double pit
     MaterialLook look(int n) {
       Color tone = new Color(tones[n % tones.length]);
       double turned = turn + (turn == 0 ? 0 : (n % 2) * Math.PI / 2);
-      double wider = pitch * (1 + 0.45 * (n / 2 % 3)) * (turn == 0 ? 1 + 0.3 * (n % 2) : 1);
+      double wider = pitch * (1 + 0.45 * (n / 2)) * (turn == 0 ? 1 + 0.3 * (n % 2) : 1);
       Hatch kind = this == MASONRY && n >= 2 ? Hatch.PAIRS : hatch;
       return new MaterialLook(kind, tone, Palette.mix(tone, Palette.INK, 0.42), turned, wider);
     }
@@ -103,21 +102,38 @@ record MaterialLook(Hatch hatch, Color tone, Color line, double turn, double pit
     if (lambda == 0) {
       return Kind.HOLLOW;
     }
-    if (AIR.matcher(name).find()) {
+    if (names(name, AIR, false)) {
       return Kind.AIR;
     }
     if (lambda < INSULATION_BELOW) {
       return Kind.INSULATION;
     }
-    if (GROUND.matcher(name).find()) {
+    if (names(name, GROUND, false)) {
       return Kind.GROUND;
     }
-    if (GLASS.matcher(name).find() && lambda >= 0.5) {
+    if (names(name, GLASS, false) && lambda >= 0.5) {
       return Kind.GLASS;
     }
-    if (TIMBER.matcher(name).find()) {
+    if (names(name, TIMBER, true)) {
       return Kind.TIMBER;
     }
     return lambda < BOARD_BELOW ? Kind.BOARD : lambda < MASONRY_BELOW ? Kind.MASONRY : Kind.MINERAL;
+  }
+
+  /** Whether one of some words stands in a name, or also ends a word of it, as in "softwood". */
+  private static boolean names(String name, List<String> words, boolean endings) {
+    for (String word : words) {
+      int at = name.indexOf(word);
+      while (at >= 0) {
+        int end = at + word.length();
+        boolean whole = at == 0 || !Character.isLetter(name.charAt(at - 1));
+        boolean ends = end == name.length() || !Character.isLetter(name.charAt(end));
+        if (ends && (whole || endings)) {
+          return true;
+        }
+        at = name.indexOf(word, at + 1);
+      }
+    }
+    return false;
   }
 }

@@ -1,7 +1,15 @@
 package coldseam.cli.plot;
 
 import coldseam.solver.result.Result;
+import java.util.ArrayList;
+import java.util.Collections;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
 import java.util.Optional;
+import java.util.concurrent.CancellationException;
+import java.util.concurrent.ExecutionException;
+import java.util.concurrent.FutureTask;
 
 /** The plots of one result, as SVG text or PNG bytes. Immutable and thread-safe. */
 public final class Plots {
@@ -81,6 +89,55 @@ public final class Plots {
     SvgCanvas canvas = SvgCanvas.blank(kind.stem());
     view.draw(canvas, page);
     return canvas.document(page.width(), page.height(), view.title(), view.told());
+  }
+
+  /**
+   * Draws several plots as SVG, at once where the machine has the processors.
+   *
+   * @param kinds which
+   * @return one XML document each, in the order given
+   */
+  public Map<Kind, String> svgs(List<Kind> kinds) {
+    Map<Kind, FutureTask<String>> tasks = new LinkedHashMap<>();
+    kinds.forEach(kind -> tasks.put(kind, new FutureTask<>(() -> svg(kind))));
+    int others = Math.min(kinds.size(), Runtime.getRuntime().availableProcessors()) - 1;
+    for (int i = 0; i < others; i++) {
+      // A task runs once, whoever comes first.
+      Thread thread = new Thread(() -> tasks.values().forEach(FutureTask::run), "plots");
+      thread.setDaemon(true);
+      thread.start();
+    }
+    List<FutureTask<String>> mine = new ArrayList<>(tasks.values());
+    Collections.reverse(mine);
+    mine.forEach(FutureTask::run);
+    Map<Kind, String> drawn = new LinkedHashMap<>();
+    tasks.forEach((kind, task) -> drawn.put(kind, result(kind, task)));
+    return drawn;
+  }
+
+  private static String result(Kind kind, FutureTask<String> task) {
+    try {
+      return task.get();
+    } catch (ExecutionException e) {
+      throw new IllegalStateException("the plot " + kind.stem() + " failed", e.getCause());
+    } catch (InterruptedException e) {
+      Thread.currentThread().interrupt();
+      throw new CancellationException("drawing was interrupted");
+    }
+  }
+
+  /**
+   * Loads what drawing needs, which takes as long as drawing: worth doing on another thread while a
+   * detail is solved.
+   */
+  public static void prepare() {
+    SvgCanvas canvas = SvgCanvas.blank("prepared");
+    canvas.layer("all");
+    Polyline line = new Polyline.Builder().add(0, 0).add(9, 0).add(9, 9.5).closed();
+    canvas.fill(Polyline.path(List.of(line)), Palette.PAPER);
+    canvas.stroke(Polyline.path(List.of(line)), Palette.INK, Pen.CUT_OFF);
+    canvas.text("prepared", 1, 1, Lettering.LABEL, Canvas.Anchor.MIDDLE, 1);
+    canvas.document(9, 9, "prepared", "prepared");
   }
 
   /**

@@ -107,6 +107,12 @@ final class TemperatureView extends View {
     return "Temperature · " + films(solution.filmSet());
   }
 
+  /** Temperatures have no proved bounds, whatever is known of the couplings. */
+  @Override
+  String state() {
+    return certified() ? "TEMPERATURES ARE ESTIMATES" : super.state();
+  }
+
   @Override
   String told() {
     StringBuilder out = new StringBuilder("Temperatures in the detail, isotherms every ");

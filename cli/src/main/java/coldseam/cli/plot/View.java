@@ -83,14 +83,17 @@ abstract class View {
     return shown() + variant;
   }
 
-  /** The state of certification of the couplings. */
-  private String state() {
-    boolean certified =
-        !result.couplings().isEmpty()
-            && result.couplings().stream()
-                .map(Result.Coupling::valueWPerMK)
-                .allMatch(Quantity::certified);
-    return certified ? "L2D CERTIFIED" : "NOT CERTIFIED";
+  /** The state of certification, for the stamp. */
+  String state() {
+    return certified() ? "L2D CERTIFIED" : "NOT CERTIFIED";
+  }
+
+  /** Whether bounds of every coupling are proved. */
+  final boolean certified() {
+    return !result.couplings().isEmpty()
+        && result.couplings().stream()
+            .map(Result.Coupling::valueWPerMK)
+            .allMatch(Quantity::certified);
   }
 
   final void draw(Canvas canvas, Page page) {

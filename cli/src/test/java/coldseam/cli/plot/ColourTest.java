@@ -61,7 +61,7 @@ class ColourTest {
   void materials_of_a_kind_differ_in_their_hatch() {
     for (double lambda : new double[] {0.035, 0.2, 0.5, 2, 100}) {
       List<Fill> fills = new ArrayList<>();
-      for (int i = 0; i < 4; i++) {
+      for (int i = 0; i < 9; i++) {
         fills.add(Material.of("stuff " + i, lambda));
       }
       Set<String> hatches = new HashSet<>();
@@ -69,7 +69,7 @@ class ColourTest {
         hatches.add(look.hatch() + " " + look.turn() + " " + look.pitch());
         assertThat(look.hatch()).isNotEqualTo(Hatch.NONE);
       }
-      assertThat(hatches).as("λ = %s", lambda).hasSize(4);
+      assertThat(hatches).as("λ = %s", lambda).hasSize(9);
     }
   }
 
