@@ -133,13 +133,7 @@ final class Samples {
                 tolerance(psi))),
         List.of(
             new Result.EffectiveTransmittance(
-                "wall",
-                List.of("indoors"),
-                List.of("outdoors"),
-                u,
-                resistance,
-                0.6,
-                tolerance(u))),
+                "wall", List.of("indoors"), List.of("outdoors"), u, resistance, 0.6, tolerance(u))),
         List.of(
             space("indoors", 20, coupling.value() * 25),
             space("outdoors", -5, -coupling.value() * 25)),
