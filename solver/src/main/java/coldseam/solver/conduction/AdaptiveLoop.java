@@ -124,13 +124,14 @@ final class AdaptiveLoop {
   FieldSolution run(Mesh start) {
     Mesh mesh = start;
     Marking marking = new Marking(mesh);
+    Outlook outlook = new Outlook(goal.accuracy().mostUnknowns());
     while (true) {
       solve(mesh);
       double[] excess = new double[mesh.triangleCount()];
       double energy = Math.max(energyRatio(), jumpRatio());
       double reached = Math.max(energy, temperatureRatios(excess));
       tell(reached);
-      if (reached <= 1 || passes >= MOST_PASSES) {
+      if (reached <= 1 || passes >= MOST_PASSES || !outlook.worthwhile(d.unknowns, reached)) {
         break;
       }
       Mesh finer = marking.refine(wishes(), part(energy), excess);

@@ -5,8 +5,9 @@ import java.util.List;
 
 /**
  * What the passes of the adaptive loop found, and what is still missing by their decrease. Energies
- * of nested meshes only fall. What is left is guessed by extrapolation: in proportion to the local
- * indicators, and by the rate at which the last falls came (Richardson). It is no bound.
+ * of nested meshes only fall. A fall of the local indicators' sum went with a fall of the energy;
+ * what is left of the sum is taken to go with what is left to fall in the same ratio. It is no
+ * bound.
  */
 final class History {
   /** Lacking energy over the indicators' sum, before two passes have shown it. */

@@ -179,8 +179,7 @@ final class QuadraticElement {
   }
 
   /**
-   * Flow out of a triangle across side k per unit of its parameter, −… times the side's length:
-   * |side| n·λ∇u at a corner, with n outward.
+   * Density of n·λ∇u on side k, n outward, at one of its corners, times the side's length.
    *
    * @param g couplings of all triangles
    * @param t the triangle

@@ -158,6 +158,20 @@ class ConductionTest {
     }
   }
 
+  /** Conductors of 230 : 0.03 touching in one point: no affordable mesh closes that. */
+  @Test
+  void aHopelessCaseEndsSoonAndIsHonest() {
+    Solution solution = ExactCasesTest.checkerboard(230, 0.03).accuracy(Accuracy.STANDARD).solve();
+    Quantity coupling = solution.coupling(INDOORS, OUTDOORS);
+
+    assertThat(solution.unknowns()).isLessThan(60_000);
+    // exact: √(ab), Keller 1964
+    assertThat(Math.sqrt(230 * 0.03))
+        .isBetween(
+            coupling.value() - coupling.halfWidth(), coupling.value() + coupling.halfWidth());
+    assertThat(coupling.halfWidth()).isGreaterThan(0.1 * coupling.value());
+  }
+
   @Test
   void progressIsToldOfEveryPassAndCanCancel() {
     List<String> told = new ArrayList<>();
