@@ -34,7 +34,7 @@ final class SolveCommand implements Command {
   private static final String QUIET = "--quiet";
 
   private static final List<Plots.Kind> PLOTS =
-      List.of(Plots.Kind.SECTION, Plots.Kind.TEMPERATURE, Plots.Kind.HEAT_FLOW);
+      List.of(Plots.Kind.SECTION, Plots.Kind.TEMPERATURE, Plots.Kind.HEAT_FLOW, Plots.Kind.SHARES);
 
   @Override
   public Syntax syntax() {
@@ -45,7 +45,7 @@ final class SolveCommand implements Command {
         1,
         "Solves each case and prints its card. Data and plots go to a folder beside the case file,"
             + " balcony.coldseam for balcony.yaml: result.json, result.csv, section.svg,"
-            + " temperature.svg and heat-flow.svg; a variant has a folder of its own in it. What an"
+            + " temperature.svg, heat-flow.svg and shares.svg; a variant has a folder of its own in it. What an"
             + " earlier solve wrote there is replaced, nothing else.",
         List.of(
             new Syntax.Option(VARIANT, "NAME", "solve this variant instead of the base case"),

@@ -29,7 +29,13 @@ class NothingHalfWrittenTest {
     Path out = dir.resolve("wall.coldseam");
     for (Path folder : List.of(out, out.resolve("thick"))) {
       for (String name :
-          List.of("result.json", "result.csv", "section.svg", "temperature.svg", "heat-flow.svg")) {
+          List.of(
+              "result.json",
+              "result.csv",
+              "section.svg",
+              "temperature.svg",
+              "heat-flow.svg",
+              "shares.svg")) {
         assertThat(folder.resolve(name)).isNotEmptyFile();
       }
     }

@@ -123,6 +123,20 @@ record Figures(Caption caption) {
     return Digits.of(wPerM * factor, halfWidthWPerM * factor, 3).value();
   }
 
+  /** A ψ or a change of it on the written scale. */
+  double scaledLinear(double wPerMK) {
+    return customary() ? wPerMK * FLOW * KELVINS : wPerMK;
+  }
+
+  /** A ψ or a change of it, without its unit. */
+  String linear(double wPerMK) {
+    return Digits.fixed(scaledLinear(wPerMK), 4);
+  }
+
+  String linearUnit() {
+    return customary() ? "Btu/(h·ft·°F)" : "W/(m·K)";
+  }
+
   String flowUnit() {
     return customary() ? "Btu/(h·ft)" : "W/m";
   }

@@ -21,6 +21,8 @@ public final class Plots {
     TEMPERATURE("temperature"),
     /** Heat-flow density, its direction, and the heat flow of every space. */
     HEAT_FLOW("heat-flow"),
+    /** What the numbers hang on: share of each material and film. */
+    SHARES("shares"),
     /** The triangles of the solution, for whoever works on the solver. */
     MESH("mesh");
 
@@ -160,6 +162,7 @@ public final class Plots {
       case SECTION -> new SectionView(result, caption, section);
       case TEMPERATURE -> new TemperatureView(result, caption, section);
       case HEAT_FLOW -> new HeatFlowView(result, caption, section);
+      case SHARES -> new SharesView(result, caption, section);
       case MESH -> new MeshView(result, caption, section);
     };
   }

@@ -215,7 +215,7 @@ final class SectionView extends View {
     return key;
   }
 
-  private static void swatch(Canvas canvas, Box box, MaterialLook look) {
+  static void swatch(Canvas canvas, Box box, MaterialLook look) {
     Box area = new Box(box.x0(), box.y0() + 1, box.x1(), box.y1() - 1);
     Polyline ring =
         new Polyline.Builder()

@@ -54,24 +54,26 @@ abstract class View {
    */
   abstract void paint(Canvas canvas, Panel panel, Optional<Panel> zoom);
 
-  final Page page() {
+  /** What of the drawing is laid out, m. */
+  Box drawn() {
     Box bounds = section.bounds();
     double least = 0.02 * section.extentM();
-    Box drawn =
-        Box.around(
-            bounds.midX(),
-            bounds.midY(),
-            Math.max(least, bounds.width()),
-            Math.max(least, bounds.height()));
+    return Box.around(
+        bounds.midX(),
+        bounds.midY(),
+        Math.max(least, bounds.width()),
+        Math.max(least, bounds.height()));
+  }
+
+  /** The part of it that is shown larger, if any. */
+  Optional<Box> zoomed() {
+    return Zoom.of(section);
+  }
+
+  final Page page() {
     return Page.of(
         new Page.Content(
-            section.detail().title(),
-            subtitle(),
-            state(),
-            drawn,
-            gutters(),
-            Zoom.of(section),
-            key()));
+            section.detail().title(), subtitle(), state(), drawn(), gutters(), zoomed(), key()));
   }
 
   final String title() {

@@ -46,7 +46,15 @@ final class CsvResults {
           "distance_mm",
           "Rs_m2K_per_W",
           "fRsi",
-          "g");
+          "g",
+          "share",
+          "changePer10Percent_W_per_mK",
+          "toleranceHalfWidth_W_per_mK",
+          "toleranceLower_W_per_mK",
+          "toleranceUpper_W_per_mK",
+          "toleranceHalfWidth_W_per_m2K",
+          "toleranceLower_W_per_m2K",
+          "toleranceUpper_W_per_m2K");
 
   private final Subject subject;
   private final Result result;
@@ -98,6 +106,12 @@ final class CsvResults {
           .number("g", weight.g())
           .end();
     }
+    for (Result.Share share : result.shares().parts()) {
+      row("share", share.of())
+          .word("between", result.shares().referTo())
+          .number("share", share.share())
+          .end();
+    }
     row("balance", "").number("heatFlow_W_per_m", result.balance().sumWPerM()).end();
     return text.toString();
   }
@@ -107,6 +121,7 @@ final class CsvResults {
       row("coupling", "")
           .word("between", coupling.from() + " – " + coupling.to())
           .quantity(coupling.valueWPerMK(), "W_per_mK")
+          .tolerance(coupling.tolerance(), "W_per_mK")
           .end();
     }
   }
@@ -117,6 +132,7 @@ final class CsvResults {
           .word("between", Words.between(psi.warm(), psi.cold()))
           .word("dimensions", Words.name(psi.dimensions()))
           .quantity(psi.valueWPerMK(), "W_per_mK")
+          .tolerance(psi.tolerance(), "W_per_mK")
           .end();
       for (Result.Subtracted term : psi.subtracted()) {
         Row row =
@@ -129,6 +145,12 @@ final class CsvResults {
         term.lengthM().ifPresent(l -> row.number("length_m", l));
         row.end();
       }
+      for (Result.Sensitivity sensitivity : psi.sensitivities()) {
+        row("sensitivity", sensitivity.of())
+            .word("between", psi.name())
+            .number("changePer10Percent_W_per_mK", ShareSection.RISE * sensitivity.slope())
+            .end();
+      }
     }
   }
 
@@ -137,6 +159,7 @@ final class CsvResults {
       row("U", u.of())
           .word("between", Words.between(u.warm(), u.cold()))
           .quantity(u.valueWPerM2K(), "W_per_m2K")
+          .tolerance(u.tolerance(), "W_per_m2K")
           .number("length_m", u.widthM())
           .end();
       row("R", u.of())
@@ -208,6 +231,17 @@ final class CsvResults {
         return number("lower_" + unit, proved.lower()).number("upper_" + unit, proved.upper());
       }
       return number("estimatedHalfWidth_" + unit, quantity.halfWidth());
+    }
+
+    Row tolerance(Optional<Result.Tolerance> stated, String unit) {
+      if (stated.isPresent()) {
+        number("toleranceHalfWidth_" + unit, stated.get().halfWidth());
+        if (stated.get().certificate() instanceof Certificate.Certified proved) {
+          number("toleranceLower_" + unit, proved.lower());
+          number("toleranceUpper_" + unit, proved.upper());
+        }
+      }
+      return this;
     }
 
     void end() {

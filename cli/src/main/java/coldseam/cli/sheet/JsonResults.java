@@ -34,6 +34,7 @@ record JsonResults(Subject subject, Result result) {
     points(json);
     profiles(json);
     weights(json);
+    shares(json);
     flanks(json, result.flanks());
     assumptions(json, result.assumptions());
     json.member("warnings", result.warnings());
@@ -99,6 +100,7 @@ record JsonResults(Subject subject, Result result) {
     for (Result.Coupling coupling : couplings) {
       json.object().member("between", List.of(coupling.from(), coupling.to()));
       quantity(json, coupling.valueWPerMK(), "W_per_mK");
+      tolerance(json, coupling.tolerance(), "W_per_mK");
       json.endObject();
     }
     json.endArray();
@@ -123,6 +125,38 @@ record JsonResults(Subject subject, Result result) {
     }
   }
 
+  /** What tolerances of conductivities add; nothing where none is stated. */
+  private static void tolerance(Json json, Optional<Result.Tolerance> stated, String unit) {
+    if (stated.isEmpty()) {
+      return;
+    }
+    Result.Tolerance tolerance = stated.get();
+    json.member("toleranceHalfWidth_" + unit, tolerance.halfWidth());
+    if (tolerance.certificate() instanceof Certificate.Certified proved) {
+      json.member("toleranceLower_" + unit, proved.lower())
+          .member("toleranceUpper_" + unit, proved.upper())
+          .member("toleranceCertified", true);
+    } else if (tolerance.certificate() instanceof Certificate.NotCertified not) {
+      json.nothing("toleranceLower_" + unit)
+          .nothing("toleranceUpper_" + unit)
+          .member("toleranceCertified", false)
+          .member("toleranceReason", not.reason());
+    }
+  }
+
+  private void shares(Json json) {
+    json.array("shares");
+    for (Result.Share share : result.shares().parts()) {
+      json.object().member("of", share.of()).member("film", share.film());
+      json.member("share", share.share());
+      if (share.relativeTolerance() > 0) {
+        json.member("relativeTolerance", share.relativeTolerance());
+      }
+      json.endObject();
+    }
+    json.endArray().member("sharesReferTo", result.shares().referTo());
+  }
+
   private void psi(Json json) {
     json.array("psi");
     for (Result.LinearTransmittance psi : result.psi()) {
@@ -132,6 +166,7 @@ record JsonResults(Subject subject, Result result) {
           .member("between", List.of(Words.spaces(psi.warm()), Words.spaces(psi.cold())))
           .member("dimensions", Words.name(psi.dimensions()));
       quantity(json, psi.valueWPerMK(), "W_per_mK");
+      tolerance(json, psi.tolerance(), "W_per_mK");
       json.object("coupling");
       quantity(json, psi.couplingWPerMK(), "W_per_mK");
       json.endObject();
@@ -143,6 +178,15 @@ record JsonResults(Subject subject, Result result) {
       if (!psi.parts().isEmpty()) {
         couplings(json, "parts", psi.parts());
       }
+      json.array("sensitivities");
+      for (Result.Sensitivity sensitivity : psi.sensitivities()) {
+        json.object()
+            .member("of", sensitivity.of())
+            .member("film", sensitivity.film())
+            .member("changePer10Percent_W_per_mK", ShareSection.RISE * sensitivity.slope())
+            .endObject();
+      }
+      json.endArray();
       json.endObject();
     }
     json.endArray();
@@ -193,6 +237,7 @@ record JsonResults(Subject subject, Result result) {
     json.member("between", List.of(Words.spaces(u.warm()), Words.spaces(u.cold())))
         .member("of", u.of());
     quantity(json, u.valueWPerM2K(), "W_per_m2K");
+    tolerance(json, u.tolerance(), "W_per_m2K");
     json.member("width_m", u.widthM());
     json.object("R");
     quantity(json, u.resistanceM2KPerW(), "m2K_per_W");

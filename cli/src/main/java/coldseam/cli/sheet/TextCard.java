@@ -14,6 +14,7 @@ import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.Set;
 
 /** The result card on the terminal: numbers first, then what they rest on. */
@@ -41,6 +42,7 @@ final class TextCard {
     numbers();
     accounts();
     new FlowSection(result, units, ink).write(text);
+    new ShareSection(result, units, ink).write(text);
     new SurfaceSection(result, units, ink).write(text);
     flanks(text, result.flanks(), ink);
     assumptions(text, result.assumptions(), ink);
@@ -65,7 +67,7 @@ final class TextCard {
 
   private void numbers() {
     heading(text, ink, "Result", "films for heat loss");
-    Table table = new Table("llrrlll", 2, PAGE);
+    Table table = new Table("llrrrlll", 2, PAGE);
     for (Result.LinearTransmittance psi : result.psi()) {
       boolean plain = psi.of().isEmpty() || psi.of().equals(psi.name()) || psi.of().equals(PLAIN);
       String of = plain ? "" : " of " + psi.of();
@@ -74,6 +76,7 @@ final class TextCard {
           "ψ " + psi.name() + of,
           Words.between(psi.warm(), psi.cold()),
           psi.valueWPerMK(),
+          psi.tolerance(),
           new Scale(4, "W/(m·K)", Units.PSI, Units.PSI_NAME),
           Words.name(psi.dimensions()) + " dimensions");
     }
@@ -83,6 +86,7 @@ final class TextCard {
           "U " + u.of(),
           Words.between(u.warm(), u.cold()),
           u.valueWPerM2K(),
+          u.tolerance(),
           new Scale(4, "W/(m²·K)", Units.U, Units.U_NAME),
           "over " + units.length(u.widthM()) + " " + units.unit());
       number(
@@ -90,6 +94,7 @@ final class TextCard {
           "R " + u.of(),
           "films included",
           u.resistanceM2KPerW(),
+          Optional.empty(),
           new Scale(3, "m²·K/W", Units.R, Units.R_NAME),
           "");
     }
@@ -99,6 +104,7 @@ final class TextCard {
           "L2D",
           coupling.from() + " – " + coupling.to(),
           coupling.valueWPerMK(),
+          coupling.tolerance(),
           new Scale(4, "W/(m·K)", Units.PSI, Units.PSI_NAME),
           "");
     }
@@ -117,20 +123,41 @@ final class TextCard {
   private record Scale(int decimals, String si, double factor, String customary) {}
 
   private void number(
-      Table table, String name, String between, Quantity quantity, Scale scale, String note) {
+      Table table,
+      String name,
+      String between,
+      Quantity quantity,
+      Optional<Result.Tolerance> tolerance,
+      Scale scale,
+      String note) {
     Digits.Figure figure = figure(quantity, 1, scale.decimals());
     table.row(
         ink.strong(name),
         between,
         ink.strong(figure.value()),
         "± " + figure.halfWidth(),
+        material(tolerance, 1, scale.decimals()),
         scale.si(),
         quantity.certified() ? ink.good("certified") : ink.alert("estimate"),
         ink.faint(note));
     if (units.customary()) {
       Digits.Figure us = figure(quantity, scale.factor(), scale.decimals());
-      table.row("", "", us.value(), "± " + us.halfWidth(), scale.customary());
+      table.row(
+          "",
+          "",
+          us.value(),
+          "± " + us.halfWidth(),
+          material(tolerance, scale.factor(), scale.decimals()),
+          scale.customary());
     }
+  }
+
+  /** What tolerances of conductivities add, rounded outward. */
+  private static String material(
+      Optional<Result.Tolerance> tolerance, double factor, int mostDecimals) {
+    return tolerance.isEmpty()
+        ? ""
+        : "± " + Digits.outward(tolerance.get().halfWidth() * factor, 2, mostDecimals);
   }
 
   /** A quantity in another unit with what is known of it. */
@@ -162,6 +189,29 @@ final class TextCard {
               + (proved ? " where it says estimate" : "")
               + ": ± is an estimate of the numerical error, not a bound",
           why);
+    }
+    tolerances();
+  }
+
+  /** What a second ± means. */
+  private void tolerances() {
+    boolean proved = false;
+    Set<String> reasons = new LinkedHashSet<>();
+    for (Result.Tolerance tolerance : Words.tolerances(result)) {
+      if (tolerance.certificate() instanceof Certificate.NotCertified not) {
+        reasons.add(not.reason());
+      } else {
+        proved = true;
+      }
+    }
+    String claim = "Second ±: conductivities anywhere within their stated tolerances";
+    if (proved) {
+      sentence(claim + "; certified for every combination of them", "");
+    }
+    if (!reasons.isEmpty()) {
+      sentence(
+          (proved ? "Elsewhere" : claim + ":") + " the worst combination to first order, estimated",
+          " (" + String.join("; ", reasons) + ")");
     }
   }
 

@@ -63,6 +63,15 @@ final class Words {
     return !result.couplings().isEmpty();
   }
 
+  /** What tolerances of conductivities add, wherever that is known. */
+  static List<Result.Tolerance> tolerances(Result result) {
+    List<Result.Tolerance> all = new ArrayList<>();
+    result.psi().forEach(psi -> psi.tolerance().ifPresent(all::add));
+    result.transmittances().forEach(u -> u.tolerance().ifPresent(all::add));
+    result.couplings().forEach(coupling -> coupling.tolerance().ifPresent(all::add));
+    return all;
+  }
+
   /** Why nothing is proved of a number; empty if something is. */
   static String reason(Quantity quantity) {
     return quantity.certificate() instanceof Certificate.NotCertified not ? not.reason() : "";

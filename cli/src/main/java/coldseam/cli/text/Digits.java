@@ -127,6 +127,26 @@ public final class Digits {
   }
 
   /**
+   * Writes a half-width, rounded upwards.
+   *
+   * @param value the half-width, 0 or more
+   * @param digits significant digits
+   * @param mostDecimals decimals never to exceed
+   * @return the text
+   */
+  public static String outward(double value, int digits, int mostDecimals) {
+    if (!Double.isFinite(value) || value == 0) {
+      return fixed(value, 0);
+    }
+    BigDecimal rounded =
+        BigDecimal.valueOf(value).round(new MathContext(digits, RoundingMode.CEILING));
+    return plain(
+        rounded.scale() > mostDecimals
+            ? rounded.setScale(mostDecimals, RoundingMode.CEILING)
+            : rounded);
+  }
+
+  /**
    * Writes an input figure as short as it is: up to a count of decimals, no trailing zeros.
    *
    * @param value the number

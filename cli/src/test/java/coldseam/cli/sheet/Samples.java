@@ -150,9 +150,9 @@ final class Samples {
             ? new Result.Shares(
                 "L2D indoors – outdoors",
                 List.of(
-                    new Result.Share("insulation", false, 0.8, 0.03),
-                    new Result.Share("film indoors 0.13", true, 0.1996, 0),
-                    new Result.Share("foil", false, 0.0004, 0)))
+                    new Result.Share("insulation", "", 0.8, 0.03),
+                    new Result.Share("film indoors 0.13", "indoors", 0.1996, 0),
+                    new Result.Share("foil", "", 0.0004, 0)))
             : new Result.Shares("", List.of()),
         List.of(
             new Result.Weight("A", FilmSet.HEAT_LOSS, "indoors", 0.65),

@@ -105,11 +105,16 @@ public record Result(
    * Relative change of a heat flow over relative change of one conductivity or film conductance.
    *
    * @param of name of the material, or "film indoors 0.13"
-   * @param film whether it is a film
+   * @param space the space that a film faces; empty for a material
    * @param share part of 1
    * @param relativeTolerance of the conductivity, 0 if none is stated
    */
-  public record Share(String of, boolean film, double share, double relativeTolerance) {}
+  public record Share(String of, String space, double share, double relativeTolerance) {
+    /** Whether it is a film. */
+    public boolean film() {
+      return !space.isEmpty();
+    }
+  }
 
   /**
    * One term taken off L2D.

@@ -50,10 +50,20 @@ final class Sharing {
     for (int p = 0; p < energies.length; p++) {
       Part part = parts.get(p);
       shares.add(
-          new Result.Share(part.name(), part.film(), energies[p] / all, part.relativeTolerance()));
+          new Result.Share(
+              part.name(),
+              space(detail, dissipation.parts().get(p)),
+              energies[p] / all,
+              part.relativeTolerance()));
     }
     shares.sort(Comparator.comparingDouble(share -> -share.share()));
     return new Result.Shares(words(detail, x), List.copyOf(shares));
+  }
+
+  private static String space(Detail detail, Dissipation.Part part) {
+    return part instanceof Dissipation.Part.Film film
+        ? detail.spaces().get(film.space()).name()
+        : "";
   }
 
   private static String words(Detail detail, double[] x) {
