@@ -26,6 +26,10 @@ final class SharesView extends View {
   private static final double NAMES = 150;
   private static final double COLUMN = 72;
   private static final double FIGURE = 56;
+  private static final double LEAST_FRINGE = 10;
+
+  /** Heat flows are written to a tenth. */
+  private static final double FLOW_HALF_WIDTH = 0.05;
 
   /** Low drawings would be laid over the whole sheet, with the key below. */
   private static final double LEAST_HEIGHT = 320;
@@ -111,19 +115,23 @@ final class SharesView extends View {
     double scale = (right - left) / most;
     grid(canvas, left, scale, most, top, top + rows.size() * row);
     heads(canvas, frame, right + FIGURE);
+    canvas.layer("names");
+    for (int i = 0; i < rows.size(); i++) {
+      names(canvas, rows.get(i), left - 10, top + (i + 0.5) * row);
+    }
+    canvas.layer("bars");
     for (int i = 0; i < rows.size(); i++) {
       double middle = top + (i + 0.5) * row;
-      names(canvas, rows.get(i), left - 10, middle);
-      double length = rows.get(i).part() * scale;
-      canvas.layer("bars");
-      bar(
-          canvas,
-          rows.get(i),
-          new Box(left, middle - BAR / 2, left + Math.max(0.5, length), middle + BAR / 2));
-      figures(canvas, rows.get(i), left + length + 6, right + FIGURE, base(middle));
+      double end = left + Math.max(0.5, rows.get(i).part() * scale);
+      bar(canvas, rows.get(i), new Box(left, middle - BAR / 2, end, middle + BAR / 2));
     }
     canvas.stroke(
         new Line2D.Double(left, top - 4, left, top + rows.size() * row), Palette.INK, Pen.MEDIUM);
+    canvas.layer("figures");
+    for (int i = 0; i < rows.size(); i++) {
+      double x = left + rows.get(i).part() * scale + 6;
+      figures(canvas, rows.get(i), x, right + FIGURE, base(top + (i + 0.5) * row));
+    }
   }
 
   private static double base(double middle) {
@@ -152,7 +160,11 @@ final class SharesView extends View {
     }
     double right = frame.x1() - 4;
     canvas.text(
-        "change of ψ, " + figures().linearUnit() + ", per 10" + Figures.JOINED + "% more",
+        "change of ψ in "
+            + figures().linearUnit()
+            + " if it conducts 10"
+            + Figures.JOINED
+            + "% more",
         right,
         frame.y0() + 12,
         Lettering.SMALL,
@@ -168,7 +180,6 @@ final class SharesView extends View {
   }
 
   private static void names(Canvas canvas, Row row, double right, double middle) {
-    canvas.layer("names");
     List<String> lines = Wrapping.of(row.name(), NAMES - 14, Lettering.SMALL);
     double step = Lettering.SMALL.lineHeight() - 1;
     int count = Math.min(2, lines.size());
@@ -184,7 +195,9 @@ final class SharesView extends View {
       boolean inside = section().detail().spaces().get(space).exposure() == Exposure.INSIDE;
       Rectangle2D shape = new Rectangle2D.Double(box.x0(), box.y0(), box.width(), box.height());
       canvas.fill(shape, Palette.PAPER);
-      SurfaceMarks.sample(canvas, new Box(box.x0(), box.y0(), box.x1(), box.y1() + 3), inside);
+      if (box.width() >= LEAST_FRINGE) {
+        SurfaceMarks.sample(canvas, new Box(box.x0(), box.y0(), box.x1(), box.y1() + 3), inside);
+      }
       canvas.stroke(shape, inside ? Palette.INSIDE : Palette.OUTSIDE, Pen.FINE);
       return;
     }
@@ -201,8 +214,10 @@ final class SharesView extends View {
   }
 
   private void figures(Canvas canvas, Row row, double x, double columns, double base) {
-    canvas.layer("figures");
-    canvas.text(percent(row.part()), x, base, Lettering.STRONG);
+    String part = percent(row.part());
+    double width = TextWidths.of(part, Lettering.STRONG);
+    canvas.fill(new Rectangle2D.Double(x - 2, base - 10, width + 4, 13), Palette.PAPER);
+    canvas.text(part, x, base, Lettering.STRONG);
     for (int c = 0; c < psi.size() && row.share().isPresent(); c++) {
       for (Result.Sensitivity sensitivity : psi.get(c).sensitivities()) {
         if (sensitivity.of().equals(row.name())) {
@@ -252,7 +267,7 @@ final class SharesView extends View {
   }
 
   private String flow(double wPerM) {
-    return Digits.signed(figures().flow(wPerM, Math.abs(wPerM) * 1e-3))
+    return Digits.signed(figures().flow(wPerM, FLOW_HALF_WIDTH))
         + Figures.JOINED
         + figures().flowUnit();
   }
@@ -275,14 +290,23 @@ final class SharesView extends View {
       }
     }
     for (Result.LinearTransmittance one : psi) {
-      one.tolerance()
-          .ifPresent(
-              tolerance ->
-                  key.row(
-                      "so ψ " + one.name(),
-                      "±"
-                          + Figures.JOINED
-                          + Digits.outward(figures().scaledLinear(tolerance.halfWidth()), 2, 4)));
+      tolerance(key, "so ψ " + one.name(), one.tolerance());
+    }
+    if (psi.isEmpty() && result().couplings().size() == 1) {
+      tolerance(key, "so L2D", result().couplings().get(0).tolerance());
+    }
+  }
+
+  private void tolerance(Key key, String words, Optional<Result.Tolerance> tolerance) {
+    if (tolerance.isPresent()) {
+      double halfWidth = figures().scaledLinear(tolerance.get().halfWidth());
+      key.row(
+          words,
+          "±"
+              + Figures.JOINED
+              + Digits.outward(halfWidth, 2, 4)
+              + Figures.JOINED
+              + figures().linearUnit());
     }
   }
 }

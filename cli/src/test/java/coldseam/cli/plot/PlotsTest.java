@@ -5,6 +5,7 @@ import static org.assertj.core.api.Assertions.assertThatThrownBy;
 
 import coldseam.cli.plot.Plots.Caption;
 import coldseam.cli.plot.Plots.Kind;
+import coldseam.solver.result.Result;
 import java.awt.image.BufferedImage;
 import java.io.ByteArrayInputStream;
 import java.nio.file.Path;
@@ -103,6 +104,30 @@ class PlotsTest {
         Read.lines(Read.of(sheet.svg(Kind.SECTION)).layers("section-whole-joints").get(0));
     double length = 0.1755 * panel.pointsPerM();
     assertThat(lines).anyMatch(line -> line.closed() && Math.abs(line.length() / 2 - length) < 1);
+  }
+
+  /** Shares add up to 100 % (Euler), but for what is lost in writing them. */
+  @Test
+  void written_shares_add_up() {
+    Solved balcony = Solved.shipped("balcony.yaml");
+    List<Result.Share> shares = balcony.result().shares().parts();
+    assertThat(words(balcony, Kind.SHARES))
+        .contains(shares.get(0).of(), "film outdoors 0.04", "balcony surface")
+        .anyMatch(text -> text.startsWith("Shares of L2D indoors – outdoors"));
+    double sum = 0;
+    for (String text : words(balcony, Kind.SHARES)) {
+      if (text.matches("[0-9.]+ %") && text.contains(".")) {
+        sum += Double.parseDouble(text.substring(0, text.length() - 2));
+      }
+    }
+    assertThat(sum).isBetween(99.5, 100.5);
+  }
+
+  @Test
+  void where_nothing_finite_flows_there_are_no_shares() {
+    assertThat(words(Solved.shipped("iso-10211-case-1.yaml"), Kind.SHARES))
+        .anyMatch(text -> text.startsWith("Shares: no heat flows, or infinitely much"))
+        .noneMatch(text -> text.matches("[0-9.]+ %"));
   }
 
   @Test

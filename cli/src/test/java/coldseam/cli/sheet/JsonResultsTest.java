@@ -84,6 +84,34 @@ class JsonResultsTest {
   }
 
   @Test
+  void tolerances_and_shares_say_what_is_proved_of_them() throws Exception {
+    JsonNode json = JACKSON.readTree(Sheet.json(Samples.subject(), Samples.certified(), false));
+    JsonNode coupling = json.get("coupling").get(0);
+    assertThat(coupling.get("toleranceHalfWidth_W_per_mK").doubleValue())
+        .isCloseTo(1.23456 / 4 - 0.00036, offset(1e-12));
+    assertThat(coupling.get("toleranceUpper_W_per_mK").doubleValue())
+        .isCloseTo(1.23456 * 1.25, offset(1e-12));
+    assertThat(coupling.get("toleranceCertified").booleanValue()).isTrue();
+    assertThat(json.get("U").has("toleranceLower_W_per_m2K")).isTrue();
+    assertThat(json.get("shares").get(0).toString())
+        .isEqualTo(
+            "{\"of\":\"insulation\",\"film\":false,\"share\":0.8,\"relativeTolerance\":0.03}");
+    assertThat(json.get("sharesReferTo").textValue()).isEqualTo("L2D indoors – outdoors");
+    JsonNode change = json.get("psi").get(0).get("sensitivities").get(1);
+    assertThat(change.get("film").booleanValue()).isTrue();
+    assertThat(change.get("changePer10Percent_W_per_mK").doubleValue())
+        .isCloseTo(-0.0002, offset(1e-15));
+
+    json = JACKSON.readTree(Sheet.json(Samples.subject(), Samples.mixed(), false));
+    JsonNode psi = json.get("psi").get(0);
+    assertThat(psi.get("toleranceCertified").booleanValue()).isFalse();
+    assertThat(psi.get("toleranceLower_W_per_mK").isNull()).isTrue();
+    assertThat(psi.get("toleranceReason").textValue()).contains("more than two");
+    json = JACKSON.readTree(Sheet.json(Samples.subject(), Samples.estimated(), false));
+    assertThat(json.get("coupling").get(0).has("toleranceHalfWidth_W_per_mK")).isFalse();
+  }
+
+  @Test
   void an_infinite_coupling_is_null_and_says_why() throws Exception {
     JsonNode coupling =
         JACKSON
@@ -107,5 +135,22 @@ class JsonResultsTest {
     assertThat(cells[heading.indexOf("certified")]).isEqualTo("false");
     assertThat(cells[heading.indexOf("lower_W_per_mK")]).isEmpty();
     assertThat(cells[heading.indexOf("estimatedHalfWidth_W_per_mK")]).isEqualTo("4.2E-4");
+    assertThat(cells[heading.indexOf("toleranceHalfWidth_W_per_mK")]).isEmpty();
+    assertThat(cell(Samples.certified(), "coupling", "toleranceLower_W_per_mK"))
+        .isEqualTo(Double.toString(1.23456 - 1.23456 / 4));
+    assertThat(cell(Samples.mixed(), "coupling", "toleranceLower_W_per_mK")).isEmpty();
+    assertThat(cell(Samples.mixed(), "share,insulation", "share")).isEqualTo("0.8");
+    assertThat(
+            Double.parseDouble(cell(Samples.mixed(), "sensitivity", "changePer10Percent_W_per_mK")))
+        .isCloseTo(0.001234, offset(1e-15));
+  }
+
+  /** A cell of the first row of a quantity. */
+  private static String cell(Result result, String quantity, String column) {
+    List<String> lines = Sheet.csv(Samples.subject(), result).lines().toList();
+    int at = List.of(lines.get(0).split(",")).indexOf(column);
+    String row =
+        lines.stream().filter(l -> l.contains("," + quantity + ",")).findFirst().orElseThrow();
+    return row.split(",", -1)[at];
   }
 }

@@ -101,7 +101,8 @@ final class Samples {
             List.of());
     return new Result(
         detail,
-        List.of(new Result.Coupling("indoors", "outdoors", coupling, tolerance(coupling))),
+        List.of(
+            new Result.Coupling("indoors", "outdoors", coupling, tolerance(coupling, resistance))),
         List.of(
             new Result.LinearTransmittance(
                 "external",
@@ -130,10 +131,16 @@ final class Samples {
                 List.of(
                     new Result.Sensitivity("insulation", false, 0.01234),
                     new Result.Sensitivity("film indoors 0.13", true, -0.002)),
-                tolerance(psi))),
+                tolerance(psi, resistance))),
         List.of(
             new Result.EffectiveTransmittance(
-                "wall", List.of("indoors"), List.of("outdoors"), u, resistance, 0.6, tolerance(u))),
+                "wall",
+                List.of("indoors"),
+                List.of("outdoors"),
+                u,
+                resistance,
+                0.6,
+                tolerance(u, resistance))),
         List.of(
             space("indoors", 20, coupling.value() * 25),
             space("outdoors", -5, -coupling.value() * 25)),
@@ -181,18 +188,18 @@ final class Samples {
         new TreeMap<>(Map.of("mesh", 12.5, "solve", 80.25)));
   }
 
-  /** Proved where the number is, of a quarter of it. */
-  private static Optional<Result.Tolerance> tolerance(Quantity quantity) {
-    if (!Double.isFinite(quantity.value())) {
+  /** A quarter of a proved number; proved itself where R is. */
+  private static Optional<Result.Tolerance> tolerance(Quantity quantity, Quantity resistance) {
+    if (!quantity.certified()) {
       return Optional.empty();
     }
     double width = quantity.value() / 4;
     return Optional.of(
         new Result.Tolerance(
             width - quantity.halfWidth(),
-            quantity.certified()
+            resistance.certified()
                 ? new Certificate.Certified(quantity.value() - width, quantity.value() + width)
-                : new Certificate.NotCertified("no bounds are computed", width)));
+                : new Certificate.NotCertified("more than two spaces take part", width)));
   }
 
   private static Result.SpaceResult space(String name, double temperatureC, double flow) {

@@ -82,15 +82,48 @@ class TextCardTest {
   @Test
   void bounds_are_called_bounds_only_when_proved() {
     assertThat(Sheet.card(Samples.subject(), Samples.certified(), Ink.NONE))
-        .contains("1.2346  ± 0.0004  W/(m·K)   certified\n")
+        .contains("1.2346  ± 0.0004   ± 0.31  W/(m·K)   certified\n")
         .contains("Certified: the exact number of the section as resolved lies within its ±")
         .doesNotContain("Not certified");
     assertThat(Sheet.card(Samples.subject(), Samples.mixed(), Ink.NONE))
-        .contains("1.2346  ± 0.0004  W/(m·K)   certified\n")
-        .contains("4.686   ± 0.004  m²·K/W    estimate\n")
+        .contains("1.2346  ± 0.0004   ± 0.31  W/(m·K)   certified\n")
+        .contains("4.686   ± 0.004           m²·K/W    estimate\n")
         .contains("Not certified where it says estimate: ±");
     assertThat(Words.certified(Samples.certified())).isTrue();
     assertThat(Words.certified(Samples.mixed())).isFalse();
+  }
+
+  @Test
+  void a_second_half_width_is_that_of_the_tolerances() {
+    assertThat(Sheet.card(Samples.subject(), Samples.certified(), Ink.NONE))
+        .contains("0.2134  ± 0.0001  ± 0.054  W/(m²·K)")
+        .containsIgnoringWhitespaces(
+            "Second ±: conductivities anywhere within their stated tolerances; certified for every"
+                + " combination of them")
+        .doesNotContain("first order, estimated");
+    assertThat(Sheet.card(Samples.subject(), Samples.mixed(), Ink.NONE))
+        .containsIgnoringWhitespaces(
+            "tolerances: the worst combination to first order, estimated (more than two spaces"
+                + " take part)");
+    assertThat(card()).doesNotContain("Second ±");
+  }
+
+  @Test
+  void shares_stand_beside_the_heat_flow_through_stretches() {
+    assertThat(card())
+        .contains(
+            """
+            Shares  of L2D indoors – outdoors; films for heat loss
+                                   share  tolerance  ψ external
+              insulation          80.0 %      ± 3 %     +0.0012
+              film indoors 0.13   20.0 %                −0.0002
+              foil               < 0.1 %
+            """)
+        .containsIgnoringWhitespaces(
+            "A share says what the number hangs on, not where the heat passes: that is the heat"
+                + " flow through each stretch: slab edge −3.2 W/m");
+    assertThat(Sheet.card(Samples.subject(), Samples.infinite(), Ink.NONE))
+        .doesNotContain("Shares");
   }
 
   @Test

@@ -95,6 +95,18 @@ class DigitsTest {
   }
 
   @ParameterizedTest
+  @CsvSource({
+    "0.04371, 2, 4, 0.044",
+    "0.0400001, 2, 4, 0.041",
+    "0.000012, 2, 4, 0.0001",
+    "99.1, 2, 4, 100",
+    "0, 2, 4, 0"
+  })
+  void half_widths_are_rounded_upwards(double value, int digits, int most, String text) {
+    assertThat(Digits.outward(value, digits, most)).isEqualTo(text);
+  }
+
+  @ParameterizedTest
   @CsvSource({"7e-15, 7e-15", "9.6e-15, 1e-14", "0.25, 3e-1", "0, 0", "12, 2e1"})
   void magnitudes_are_rounded_upwards(double value, String text) {
     assertThat(Digits.magnitude(value)).isEqualTo(text);

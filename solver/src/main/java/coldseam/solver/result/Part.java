@@ -4,6 +4,8 @@ import coldseam.solver.conduction.Dissipation;
 import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.Material;
 import coldseam.solver.detail.Wording;
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.util.ArrayList;
 import java.util.List;
 
@@ -22,6 +24,8 @@ record Part(
     double conductivityWPerMK,
     double crossConductivityWPerMK,
     double relativeTolerance) {
+  private static final int FILM_DIGITS = 4;
+
   static Part of(Material material) {
     return new Part(
         material.name(),
@@ -32,7 +36,9 @@ record Part(
   }
 
   static Part film(String space, double resistanceM2KPerW) {
-    return new Part("film " + space + " " + Wording.figure(resistanceM2KPerW), true, 0, 0, 0);
+    double figure =
+        new BigDecimal(resistanceM2KPerW).round(new MathContext(FILM_DIGITS)).doubleValue();
+    return new Part("film " + space + " " + Wording.figure(figure), true, 0, 0, 0);
   }
 
   /** The parts of a solution. */
