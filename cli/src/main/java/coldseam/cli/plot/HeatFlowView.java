@@ -138,8 +138,10 @@ final class HeatFlowView extends View {
       bands.fill(canvas, k, Palette.flow(part(k + 1)));
     }
     SectionLines lines = new SectionLines(section(), panel);
-    lines.joints(canvas, Palette.INK, Pen.HAIR);
-    arrows(canvas, panel);
+    if (!blackens(panel, zoom)) {
+      lines.joints(canvas, Palette.INK, Pen.HAIR);
+      arrows(canvas, panel);
+    }
     lines.outline(canvas);
     Ground ground = SectionLines.ground(section(), panel);
     frame(canvas, panel, ground, zoom);

@@ -26,7 +26,8 @@ record MaterialLook(Hatch hatch, Color tone, Color line, double turn, double pit
   private static final List<String> GROUND =
       List.of("soil", "ground", "earth", "clay", "silt", "sand", "gravel", "hardcore", "fill");
   private static final List<String> TIMBER =
-      List.of("wood", "timber", "plywood", "spruce", "pine", "oak", "osb", "rafter", "joist");
+      List.of(
+          "wood", "timber", "plywood", "spruce", "pine", "oak", "osb", "rafter", "joist", "plank");
   private static final List<String> AIR = List.of("air", "cavity", "void", "argon", "krypton");
   private static final List<String> GLASS = List.of("glass", "pane");
 
@@ -126,6 +127,7 @@ record MaterialLook(Hatch hatch, Color tone, Color line, double turn, double pit
       int at = name.indexOf(word);
       while (at >= 0) {
         int end = at + word.length();
+        end += end < name.length() && name.charAt(end) == 's' ? 1 : 0;
         boolean whole = at == 0 || !Character.isLetter(name.charAt(at - 1));
         boolean ends = end == name.length() || !Character.isLetter(name.charAt(end));
         if (ends && (whole || endings)) {

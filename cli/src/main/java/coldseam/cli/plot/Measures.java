@@ -25,6 +25,12 @@ final class Measures {
 
   private static final double[] LIFTS = {5, 9};
 
+  /** Where along its line a text is tried, as parts of the room from the middle on. */
+  private static final double[] SHIFTS = {0, 0.15, -0.15, 0.3, -0.3, 0.45, -0.45};
+
+  /** How much of a text may be blocked rather than move it by all the room. */
+  private static final double SHIFTED = 0.05;
+
   /** Steeper than this, text is read from the right. */
   private static final double STEEP = Math.toRadians(75);
 
@@ -83,7 +89,31 @@ final class Measures {
     double ux = (line.x(1) - line.x(0)) / length;
     double uy = (line.y(1) - line.y(0)) / length;
     double offset = place(line, right, nearest, ux, uy);
-    Color ink = lettering.ink();
+    lines(line, offset, marks, lettering.ink());
+    double ox = line.x(0) - offset * uy;
+    double oy = line.y(0) + offset * ux;
+    for (boolean fitting : new boolean[] {true, false}) {
+      for (int i = 0; i < texts.size(); i++) {
+        double from = marks.get(i);
+        double to = marks.get(i + 1);
+        if (TextWidths.of(texts.get(i), lettering) + 2 <= to - from == fitting) {
+          Polyline piece = Polyline.of(ox + from * ux, oy + from * uy, ox + to * ux, oy + to * uy);
+          boolean lone = texts.size() == 1;
+          if (!along(piece, texts.get(i), lettering, fitting, lone)) {
+            beside(piece, texts.get(i), lettering);
+          }
+        }
+      }
+    }
+    ground.take(
+        Polyline.of(ox - 2 * ux, oy - 2 * uy, ox + (length + 2) * ux, oy + (length + 2) * uy));
+  }
+
+  /** The dimension line with its ticks and extension lines. */
+  private void lines(Polyline line, double offset, List<Double> marks, Color ink) {
+    double length = line.length();
+    double ux = (line.x(1) - line.x(0)) / length;
+    double uy = (line.y(1) - line.y(0)) / length;
     double ox = line.x(0) - offset * uy;
     double oy = line.y(0) + offset * ux;
     Path2D path = new Path2D.Double();
@@ -107,21 +137,6 @@ final class Measures {
     canvas.stroke(extensions, Palette.mix(ink, Palette.PAPER, 0.45), Pen.HAIR);
     canvas.stroke(path, ink, Pen.FINE);
     canvas.stroke(ticks, ink, Pen.MEDIUM);
-    for (boolean fitting : new boolean[] {true, false}) {
-      for (int i = 0; i < texts.size(); i++) {
-        double from = marks.get(i);
-        double to = marks.get(i + 1);
-        if (TextWidths.of(texts.get(i), lettering) + 2 <= to - from == fitting) {
-          Polyline piece = Polyline.of(ox + from * ux, oy + from * uy, ox + to * ux, oy + to * uy);
-          boolean lone = texts.size() == 1;
-          if (!along(piece, texts.get(i), lettering, fitting, lone)) {
-            beside(piece, texts.get(i), lettering);
-          }
-        }
-      }
-    }
-    ground.take(
-        Polyline.of(ox - 2 * ux, oy - 2 * uy, ox + (length + 2) * ux, oy + (length + 2) * uy));
   }
 
   /** The signed distance to the right, on the sheet, where the line meets least. */
@@ -194,7 +209,7 @@ final class Measures {
 
   /**
    * Writes a text above its piece of the line, in the middle or where nothing is in the way; one
-   * that is longer than its piece only where nothing at all is in the way.
+   * that is longer than its piece only if it is alone and nothing at all is in the way.
    */
   private boolean along(
       Polyline piece, String text, Lettering lettering, boolean fitting, boolean lone) {
@@ -202,48 +217,49 @@ final class Measures {
       return false;
     }
     double width = TextWidths.of(text, lettering);
-    double length = piece.length();
-    double ux = (piece.x(1) - piece.x(0)) / length;
-    double uy = (piece.y(1) - piece.y(0)) / length;
-    double angle = readable(Math.atan2(uy, ux));
-    double upX = Math.sin(angle);
-    double upY = -Math.cos(angle);
+    double slack = Math.max(0, piece.length() - width - 8);
     double best = Double.POSITIVE_INFINITY;
-    double at = length / 2;
-    double slack = Math.max(0, length - width - 8);
-    for (double part : new double[] {0, 0.15, -0.15, 0.3, -0.3, 0.45, -0.45}) {
-      double middle = length / 2 + part * slack;
-      double score = 0.05 * Math.abs(part);
+    double at = piece.length() / 2;
+    for (double part : SHIFTS) {
+      double middle = piece.length() / 2 + part * slack;
+      double score = SHIFTED * Math.abs(part);
       for (double lift : LIFTS) {
-        score +=
-            ground.blocked(
-                Polyline.of(
-                    piece.x(0) + (middle - width / 2) * ux + lift * upX,
-                    piece.y(0) + (middle - width / 2) * uy + lift * upY,
-                    piece.x(0) + (middle + width / 2) * ux + lift * upX,
-                    piece.y(0) + (middle + width / 2) * uy + lift * upY),
-                open);
+        score += ground.blocked(row(piece, middle, width, lift), open);
       }
       if (score < best) {
         best = score;
         at = middle;
       }
     }
-    if (!fitting && best >= 0.05) {
+    if (!fitting && best >= SHIFTED) {
       return false;
     }
-    double x = piece.x(0) + at * ux;
-    double y = piece.y(0) + at * uy;
-    canvas.text(text, x + LIFT * upX, y + LIFT * upY, lettering, Anchor.MIDDLE, angle);
+    Polyline base = row(piece, at, width, LIFT);
+    canvas.text(
+        text,
+        (base.x(0) + base.x(1)) / 2,
+        (base.y(0) + base.y(1)) / 2,
+        lettering,
+        Anchor.MIDDLE,
+        readable(Math.atan2(piece.y(1) - piece.y(0), piece.x(1) - piece.x(0))));
     for (double lift : LIFTS) {
-      ground.take(
-          Polyline.of(
-              x - width / 2 * ux + lift * upX,
-              y - width / 2 * uy + lift * upY,
-              x + width / 2 * ux + lift * upX,
-              y + width / 2 * uy + lift * upY));
+      ground.take(row(piece, at, width, lift));
     }
     return true;
+  }
+
+  /** A line as long as a text, lifted to the text's side of a piece. */
+  private static Polyline row(Polyline piece, double middle, double width, double lift) {
+    double ux = (piece.x(1) - piece.x(0)) / piece.length();
+    double uy = (piece.y(1) - piece.y(0)) / piece.length();
+    double angle = readable(Math.atan2(uy, ux));
+    double x = piece.x(0) + lift * Math.sin(angle);
+    double y = piece.y(0) - lift * Math.cos(angle);
+    return Polyline.of(
+        x + (middle - width / 2) * ux,
+        y + (middle - width / 2) * uy,
+        x + (middle + width / 2) * ux,
+        y + (middle + width / 2) * uy);
   }
 
   /** Writes a text that is longer than its piece of the line beside it, with a leader. */

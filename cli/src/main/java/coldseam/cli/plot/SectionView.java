@@ -2,6 +2,7 @@ package coldseam.cli.plot;
 
 import coldseam.cli.plot.Canvas.Anchor;
 import coldseam.cli.plot.Plots.Caption;
+import coldseam.cli.text.Digits;
 import coldseam.solver.detail.Conditions;
 import coldseam.solver.detail.DimensionSystem;
 import coldseam.solver.detail.Exposure;
@@ -238,8 +239,11 @@ final class SectionView extends View {
     return material.isotropic()
         ? figures().conductivity(material.conductivityWPerMK())
         : figures().conductivity(material.conductivityWPerMK())
-            + " × "
-            + figures().conductivity(material.crossConductivityWPerMK());
+            + " | "
+            + figures().conductivity(material.crossConductivityWPerMK())
+            + " at "
+            + Digits.shortest(Math.toDegrees(material.angleRad()), 1)
+            + "°";
   }
 
   /** Thicknesses at the cut-off planes, which are not all readable where they are drawn. */
@@ -334,12 +338,7 @@ final class SectionView extends View {
       key.note("Double line: surface at a fixed temperature");
     }
     boolean symmetric = section().cutOffs().stream().anyMatch(DrawnSection.CutOff::symmetry);
-    if (!section().cutOffs().isEmpty()) {
-      key.sample(
-          (c, box) -> line(c, box, Pen.CUT_OFF),
-          "cut-off plane, no heat crosses" + (symmetric ? "; double ticks: symmetry" : ""),
-          "");
-    }
+    planes(key, symmetric);
     if (!references().isEmpty()) {
       key.sample(
           (c, box) -> c.text("123", box.midX(), box.midY() + 4, Lettering.REFERENCE, Anchor.MIDDLE),
@@ -349,9 +348,17 @@ final class SectionView extends View {
     if (!result().points().isEmpty()) {
       key.sample((c, box) -> PointMarks.cross(c, box.midX(), box.midY()), "named point", "");
     }
-    boolean hollow = section().fills().stream().anyMatch(f -> f instanceof Hollow);
-    if (hollow) {
+    if (section().fills().stream().anyMatch(f -> f instanceof Hollow)) {
       key.note("Crossed out: hollow, no heat crosses its rim");
+    }
+  }
+
+  private void planes(Key key, boolean symmetric) {
+    if (!section().cutOffs().isEmpty()) {
+      key.sample(
+          (c, box) -> line(c, box, Pen.CUT_OFF),
+          "cut-off plane, no heat crosses" + (symmetric ? "; double ticks: symmetry" : ""),
+          "");
     }
   }
 

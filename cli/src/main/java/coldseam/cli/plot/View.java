@@ -9,6 +9,9 @@ import java.util.Optional;
 
 /** One plot: what stands on the page, and how the section is painted into a frame of it. */
 abstract class View {
+  /** Breadth of a section below which nothing is drawn in it that a zoom shows better, points. */
+  private static final double SMALLEST = 24;
+
   private final Result result;
   private final Caption caption;
   private final Figures figures;
@@ -149,15 +152,25 @@ abstract class View {
     return coldest;
   }
 
+  /** Whether the two film sets are the same here, so that one solution serves both. */
+  final boolean sameFilms() {
+    return result.surface().isPresent() && result.surface().get() == result.heatLoss();
+  }
+
   /** Which films the temperatures of a solution were computed with. */
   final String films(FilmSet set) {
-    boolean same = result.surface().isPresent() && result.surface().get() == result.heatLoss();
-    if (same) {
+    if (sameFilms()) {
       return "films of the heat-loss and surface sets, which are the same here";
     }
     return set == FilmSet.SURFACE
         ? "surface set of films (for surface temperatures)"
         : "heat-loss set of films (for heat flow)";
+  }
+
+  /** Whether a frame shows the section so small that lines in it would only blacken it. */
+  final boolean blackens(Panel panel, Optional<Panel> zoom) {
+    double across = Math.min(section.bounds().width(), section.bounds().height());
+    return zoom.isPresent() && across * panel.pointsPerM() < SMALLEST;
   }
 
   /** Labels, the scale and the direction that every frame has, and what is kept clear of labels. */

@@ -7,7 +7,7 @@ import java.util.Optional;
 
 /**
  * Finds the part of a drawing that deserves to be shown larger: where most of its inner corners
- * crowd together, when that is much smaller than the whole.
+ * crowd together, when that is much smaller than the whole; or the middle of something slender.
  */
 final class Zoom {
   /** Part of the inner corners that the zoom has to show, at least. */
@@ -21,6 +21,9 @@ final class Zoom {
   private static final int MOST_CORNERS = 1500;
   private static final double AIR = 0.3;
 
+  /** Sections of less than this, breadth over length, are always zoomed. */
+  private static final double SLENDER = 0.05;
+
   private static final double TAG = 15;
 
   private Zoom() {}
@@ -29,7 +32,7 @@ final class Zoom {
     List<double[]> corners = section.innerCorners();
     int n = corners.size();
     if (n < FEWEST_CORNERS || n > MOST_CORNERS) {
-      return Optional.empty();
+      return ofSlender(section.bounds());
     }
     double extent = section.extentM();
     Box found = null;
@@ -59,7 +62,18 @@ final class Zoom {
         found = best;
       }
     }
-    return found == null ? Optional.empty() : worthwhile(found, section);
+    Optional<Box> crowd = found == null ? Optional.empty() : worthwhile(found, section);
+    return crowd.isPresent() ? crowd : ofSlender(section.bounds());
+  }
+
+  /** The middle of a section that is so slender that nothing of it can be told apart. */
+  private static Optional<Box> ofSlender(Box all) {
+    double across = Math.min(all.width(), all.height());
+    if (across > SLENDER * Math.max(all.width(), all.height())) {
+      return Optional.empty();
+    }
+    double grown = (1 + 2 * AIR) * across;
+    return Optional.of(Box.around(all.midX(), all.midY(), grown, grown));
   }
 
   private static Optional<Box> worthwhile(Box corners, DrawnSection section) {

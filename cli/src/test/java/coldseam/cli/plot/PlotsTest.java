@@ -93,6 +93,36 @@ class PlotsTest {
   }
 
   @Test
+  void a_slender_section_is_zoomed_in_its_middle() {
+    StringBuilder yaml =
+        new StringBuilder(
+            """
+            coldseam: 1
+            title: A long wall
+            view: plan
+            materials: {wool: {conductivity: 0.035}, stud: {conductivity: 0.13}}
+            spaces:
+              indoors: {temperature: 20, exposure: inside}
+              outdoors: {temperature: -5, exposure: outside}
+            stretches:
+              inner: {side: bottom, space: indoors}
+              outer: {side: top, space: outdoors}
+            section:
+              - {fill: wool, box: [0, 0, 24000, 150]}
+            """);
+    for (int i = 0; i < 40; i++) {
+      yaml.append(
+          "  - {fill: stud, box: [%d, 0, %d, 150]}%n".formatted(600 * i + 270, 600 * i + 330));
+    }
+    Solved wall = Solved.of(folder, yaml.toString());
+    Box zoom = Zoom.of(DrawnSection.of(wall.result())).orElseThrow();
+    assertThat(zoom.height()).isBetween(0.15, 0.3);
+    Read plot = Read.of(wall.svg(Kind.TEMPERATURE));
+    assertThat(plot.layers("temperature-whole-isotherm_.*")).isEmpty();
+    assertThat(plot.layers("temperature-zoom-isotherm_.*")).hasSizeGreaterThan(5);
+  }
+
+  @Test
   void a_foil_thinner_than_a_line_is_drawn_as_one() {
     Solved sheet = Solved.of(folder, Awkward.TURNED_SHEET);
     Panel panel =
