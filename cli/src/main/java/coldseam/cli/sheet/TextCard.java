@@ -66,7 +66,7 @@ final class TextCard {
   }
 
   private void numbers() {
-    heading(text, ink, "Result", "films for heat loss");
+    heading(text, ink, "Result", "films for heat loss; after a ψ, how lengths are measured");
     Table table = new Table("llrrrlll", 2, PAGE);
     for (Result.LinearTransmittance psi : result.psi()) {
       boolean plain = psi.of().isEmpty() || psi.of().equals(psi.name()) || psi.of().equals(PLAIN);
@@ -78,7 +78,7 @@ final class TextCard {
           psi.valueWPerMK(),
           psi.tolerance(),
           new Scale(4, "W/(m·K)", Units.PSI, Units.PSI_NAME),
-          Words.name(psi.dimensions()) + " dimensions");
+          Words.name(psi.dimensions()));
     }
     for (Result.EffectiveTransmittance u : result.transmittances()) {
       number(

@@ -20,8 +20,8 @@ class TextCardTest {
             Slab edge
             cases/slab.yaml
 
-            Result  films for heat loss
-              ψ external of floor edge  indoors – outdoors  0.6123  ± 0.0005  W/(m·K)   estimate  external dimensions
+            Result  films for heat loss; after a ψ, how lengths are measured
+              ψ external of floor edge  indoors – outdoors  0.6123  ± 0.0005  W/(m·K)   estimate  external
               U wall                    indoors – outdoors  0.2134  ± 0.0001  W/(m²·K)  estimate  over 600 mm
               R wall                    films included       4.686   ± 0.004  m²·K/W    estimate
               L2D                       indoors – outdoors  1.2346  ± 0.0005  W/(m·K)   estimate
