@@ -67,7 +67,7 @@ class SchemaAgreementTest {
     Node root = YamlTree.read(Files.readString(file), new Problems("")).orElseThrow();
     List<String> disagreements = new ArrayList<>();
     int refused = 0;
-    for (String text : Spoiled.all(root, SEED)) {
+    for (String text : Spoiled.some(root, SEED, SpoiledCasesTest.share(file))) {
       List<String> bySchema = refusals(text);
       List<String> byReader = Written.problems(folder, text);
       refused += bySchema.isEmpty() ? 0 : 1;
@@ -86,7 +86,7 @@ class SchemaAgreementTest {
       }
     }
     assertThat(disagreements).isEmpty();
-    assertThat(refused).isGreaterThan(100);
+    assertThat(refused).isGreaterThan(20);
   }
 
   @ParameterizedTest

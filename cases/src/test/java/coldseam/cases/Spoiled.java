@@ -49,9 +49,19 @@ final class Spoiled {
    *
    * @param root the case
    * @param seed of the choice between ways
+   * @param everyNth of all changes only each n-th is taken, beginning at a place the seed decides
    * @return texts, each with one change
    */
-  static List<String> all(Node root, long seed) {
+  static List<String> some(Node root, long seed, int everyNth) {
+    List<String> all = all(root, seed);
+    List<String> some = new ArrayList<>();
+    for (int i = (int) (seed % everyNth); i < all.size(); i += everyNth) {
+      some.add(all.get(i));
+    }
+    return some;
+  }
+
+  private static List<String> all(Node root, long seed) {
     Spoiled spoiled = new Spoiled(seed);
     spoiled.spoil(
         root,

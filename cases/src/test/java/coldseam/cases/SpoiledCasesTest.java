@@ -31,6 +31,11 @@ class SpoiledCasesTest {
     return samples;
   }
 
+  /** Of all changes to the sample with every key every second is tried, of others every sixth. */
+  static int share(Path file) {
+    return file.equals(EVERYTHING) ? 2 : 6;
+  }
+
   @ParameterizedTest
   @MethodSource("samples")
   void cut_after_every_line(Path file) throws IOException {
@@ -47,7 +52,7 @@ class SpoiledCasesTest {
   @MethodSource("samples")
   void every_place_spoiled_in_several_ways(Path file) throws IOException {
     Node root = YamlTree.read(Files.readString(file), new Problems("")).orElseThrow();
-    List<String> spoiled = Spoiled.all(root, SEED);
+    List<String> spoiled = Spoiled.some(root, SEED, share(file));
     int refused = 0;
     for (String text : spoiled) {
       refused += refused(text) ? 1 : 0;
@@ -62,7 +67,7 @@ class SpoiledCasesTest {
     String text = Files.readString(file);
     Random random = new Random(SEED);
     String alphabet = "{}[]:,-'\"#&*!|>%@`\n \t0159.eEaxyzψ";
-    for (int i = 0; i < 300; i++) {
+    for (int i = 0; i < 150; i++) {
       StringBuilder spoiled = new StringBuilder(text);
       for (int k = 0; k < 1 + i % 3; k++) {
         int at = random.nextInt(spoiled.length());
