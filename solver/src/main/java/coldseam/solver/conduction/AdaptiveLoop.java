@@ -28,8 +28,8 @@ final class AdaptiveLoop {
   /** Part of a relative accuracy that the guessed error may take. */
   private static final double PART_OF_RELATIVE = 0.1;
 
-  /** Part of an absolute accuracy that the guessed error may take. */
-  private static final double PART_OF_ABSOLUTE = 0.3;
+  /** The same for the second film set, of which only temperatures are read. */
+  private static final double PART_FOR_SURFACES = 0.5;
 
   /** Temperature error that may be left, in parts of the temperature difference: 0.01 K in 25. */
   private static final double TEMPERATURE = 4e-4;
@@ -41,7 +41,7 @@ final class AdaptiveLoop {
   private static final double BULK = 0.9;
 
   /** What splitting leaves of a triangle's indicator, cautiously. */
-  private static final double LEFT_BY_SPLITTING = 0.2;
+  private static final double LEFT_BY_SPLITTING = 0.08;
 
   /** The error aimed at by a pass over what it may be. */
   private static final double AIM = 0.7;
@@ -217,8 +217,9 @@ final class AdaptiveLoop {
       absolute = Math.min(absolute, accuracy.psiWPerMK());
     }
     double provedPart = goal.surfaceTemperatures() ? PART_WITH_TEMPERATURES : PART_OF_PROVED;
-    double relativePart = bound == null ? PART_OF_RELATIVE : provedPart;
-    double absolutePart = bound == null ? PART_OF_ABSOLUTE : provedPart;
+    double guessedPart = proving ? PART_OF_RELATIVE : PART_FOR_SURFACES;
+    double relativePart = bound == null ? guessedPart : provedPart;
+    double absolutePart = bound == null ? 3 * guessedPart : provedPart;
     targets = new double[d.spaces + 1];
     for (int i = 0; i < d.spaces; i++) {
       targets[i] =

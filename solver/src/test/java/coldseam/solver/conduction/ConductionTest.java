@@ -208,7 +208,7 @@ class ConductionTest {
 
     assertThat(next.filmSet()).isEqualTo(FilmSet.SURFACE);
     assertThat(next.partition()).isSameAs(partition);
-    assertThat(next.passes()).isLessThanOrEqualTo(3);
+    assertThat(next.passes()).isLessThanOrEqualTo(4);
     assertThat(next.unknowns()).isGreaterThanOrEqualTo(first.unknowns());
     // the films of a sketch are the same in both sets
     assertThat(next.coupling(INDOORS, OUTDOORS).value())

@@ -106,7 +106,7 @@ class ExactCasesTest {
   @Test
   void cornerWithFilms() {
     Sketch sketch = corner(0.3, 0.3, 1.5, 1.5, 0.13, 0.04, material("block", 0.5));
-    Solution solution = sketch.solve();
+    Solution solution = sketch.surfaceTemperatures().solve();
     TemperatureField field = solution.temperatures(new double[] {1, 0});
 
     assertThat(coupling(solution)).isCloseTo(4.07021518, withPercentage(0.003));
