@@ -44,6 +44,15 @@ public final class EliminationPlan {
     return new EliminationPlan(matrix.places(), fronts, column, units, Layout.of(fronts, units));
   }
 
+  /** Plans the factorisation of a matrix whose unknowns are numbered in their order. */
+  static EliminationPlan inOrder(SparseSymmetric matrix) {
+    int[] order = new int[matrix.unknowns()];
+    for (int u = 0; u < order.length; u++) {
+      order[u] = u;
+    }
+    return of(matrix, order);
+  }
+
   private static void checkOrder(int unknowns, int[] order) {
     boolean[] taken = new boolean[unknowns];
     if (order.length != unknowns) {

@@ -60,6 +60,9 @@ public final class FillReducingOrder {
     for (boolean f : free) {
       unknowns += f ? 1 : 0;
     }
+    if (unknowns >= SymmetricSystem.LARGE) {
+      return dissected(free, unknowns, nodes, perElement, x, y);
+    }
     FillReducingOrder order = new FillReducingOrder(free.length, nodes, perElement, x, y, unknowns);
     for (int n = 0; n < free.length; n++) {
       order.seen[n] = free[n] ? 0 : Integer.MAX_VALUE;
@@ -69,6 +72,28 @@ public final class FillReducingOrder {
       throw new IllegalArgumentException(order.next + " nodes belong to no element");
     }
     return order.place;
+  }
+
+  private static int[] dissected(
+      boolean[] free, int unknowns, int[] nodes, int perElement, double[] x, double[] y) {
+    int[] number = new int[free.length];
+    int next = 0;
+    for (int n = 0; n < number.length; n++) {
+      number[n] = free[n] ? next++ : -1;
+    }
+    int[] member = new int[nodes.length];
+    for (int i = 0; i < member.length; i++) {
+      member[i] = number[nodes[i]];
+    }
+    int[] start = new int[x.length + 1];
+    for (int e = 0; e <= x.length; e++) {
+      start[e] = e * perElement;
+    }
+    int[] order = NestedDissection.of(unknowns, start, member, x, y);
+    for (int n = 0; n < number.length; n++) {
+      number[n] = free[n] ? order[number[n]] : -1;
+    }
+    return number;
   }
 
   private void dissect(int from, int to) {

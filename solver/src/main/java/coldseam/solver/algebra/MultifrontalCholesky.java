@@ -6,7 +6,7 @@ package coldseam.solver.algebra;
  * parts of the elimination tree and the rows of large fronts are done at the same time; the numbers
  * do not depend on how many threads there are or which is first.
  */
-public final class MultifrontalCholesky {
+public final class MultifrontalCholesky implements Factor {
   private final EliminationPlan plan;
   private final SparseSymmetric matrix;
   private final double[][] factor;
@@ -87,6 +87,7 @@ public final class MultifrontalCholesky {
    * @param b right-hand sides
    * @return the solutions, in the same order
    */
+  @Override
   public double[][] substitute(double[]... b) {
     int n = unknowns();
     double[][] x = new double[b.length][n];
@@ -109,6 +110,11 @@ public final class MultifrontalCholesky {
       ordered = free;
     }
     return x;
+  }
+
+  @Override
+  public long factorEntries() {
+    return plan.factorEntries();
   }
 
   private static double largest(double[] values) {

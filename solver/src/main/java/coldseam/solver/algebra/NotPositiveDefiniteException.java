@@ -1,7 +1,7 @@
 package coldseam.solver.algebra;
 
 /** A matrix could not be factored because it is not positive definite, or not finite. */
-public final class NotPositiveDefiniteException extends RuntimeException {
+public final class NotPositiveDefiniteException extends IllegalStateException {
   private static final long serialVersionUID = 1L;
 
   private final int unknown;

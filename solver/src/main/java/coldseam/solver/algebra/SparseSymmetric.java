@@ -82,8 +82,8 @@ public final class SparseSymmetric {
    * @param values the entries; several at one place are added in the order given
    * @param count how many of the entries to use
    * @return the matrix
-   * @throws IllegalArgumentException if an unknown has no diagonal entry or an index is out of
-   *     range
+   * @throws IllegalArgumentException if an index is out of range
+   * @throws IllegalStateException if an unknown has no diagonal entry
    */
   public static SparseSymmetric sum(
       int unknowns, int[] rows, int[] columns, double[] values, int count) {
@@ -135,7 +135,8 @@ public final class SparseSymmetric {
     for (int c = 0; c < end.length; c++) {
       int length = end[c] - start[c];
       if (length == 0 || row[end[c] - 1] != c) {
-        throw new IllegalArgumentException("unknown " + c + " has no entry of its own");
+        throw new IllegalStateException(
+            "unknown " + c + " of " + end.length + " has no entry of its own");
       }
       System.arraycopy(row, start[c], row, used, length);
       System.arraycopy(value, start[c], value, used, length);
@@ -169,6 +170,16 @@ public final class SparseSymmetric {
   /** Value of entry {@code p}. */
   double value(int p) {
     return value[p];
+  }
+
+  /** The column starts, not to be changed. */
+  int[] starts() {
+    return start;
+  }
+
+  /** The rows, not to be changed. */
+  int[] rows() {
+    return row;
   }
 
   /** The values, not to be changed: for the inner loops of this package. */

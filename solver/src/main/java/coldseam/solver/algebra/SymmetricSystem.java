@@ -1,24 +1,26 @@
 package coldseam.solver.algebra;
 
-import java.util.Arrays;
-import org.ejml.data.DMatrixSparseCSC;
-import org.ejml.sparse.csc.decomposition.chol.CholeskyUpLooking_DSCC;
-import org.ejml.sparse.csc.misc.TriangularSolver_DSCC;
-
 /**
  * A sparse symmetric positive definite system A x = b, factored once and solved many times. The
  * unknowns are numbered in their order of elimination from the start (see {@link
- * FillReducingOrder}), so nothing is permuted here.
+ * FillReducingOrder}), so nothing is permuted here. Small systems are factored row by row, large
+ * ones front by front on all processors.
  */
 public final class SymmetricSystem {
-  private final DMatrixSparseCSC upper;
-  private final DMatrixSparseCSC factor;
+  /**
+   * Systems with so many unknowns are factored front by front. Measured on quadratic elements, both
+   * ways warm: NNN.
+   */
+  static final int LARGE = Integer.getInteger("large", 10_000);
+
+  private final SparseSymmetric matrix;
+  private final Factor factor;
   private final double norm;
 
-  private SymmetricSystem(DMatrixSparseCSC upper, DMatrixSparseCSC factor) {
-    this.upper = upper;
+  private SymmetricSystem(SparseSymmetric matrix, Factor factor) {
+    this.matrix = matrix;
     this.factor = factor;
-    norm = rowSumNorm();
+    norm = matrix.norm();
   }
 
   /**
@@ -44,30 +46,33 @@ public final class SymmetricSystem {
    */
   public static SymmetricSystem factor(
       int unknowns, int[] rows, int[] columns, double[] values, int count) {
-    DMatrixSparseCSC upper = sum(unknowns, rows, columns, values, count);
-    CholeskyUpLooking_DSCC cholesky = new CholeskyUpLooking_DSCC();
-    if (!cholesky.decompose(upper)) {
-      throw new IllegalStateException(
-          "the system of " + unknowns + " unknowns is not positive definite");
-    }
-    DMatrixSparseCSC factor = cholesky.getL();
-    for (int c = 0; c < unknowns; c++) {
-      double pivot = factor.nz_values[factor.col_idx[c]];
-      if (!(pivot > 0) || Double.isInfinite(pivot)) {
-        throw new IllegalStateException("pivot " + c + " of " + unknowns + " is " + pivot);
-      }
-    }
-    return new SymmetricSystem(upper, factor);
+    return factor(SparseSymmetric.sum(unknowns, rows, columns, values, count));
+  }
+
+  /**
+   * Factors a matrix.
+   *
+   * @param matrix the matrix
+   * @return the factored system
+   * @throws IllegalStateException if the matrix is not positive definite or has entries that are
+   *     not finite
+   */
+  public static SymmetricSystem factor(SparseSymmetric matrix) {
+    Factor factor =
+        matrix.unknowns() < LARGE
+            ? UpLookingCholesky.of(matrix)
+            : MultifrontalCholesky.factor(EliminationPlan.inOrder(matrix), matrix);
+    return new SymmetricSystem(matrix, factor);
   }
 
   /** How many unknowns. */
   public int unknowns() {
-    return upper.numCols;
+    return matrix.unknowns();
   }
 
   /** Entries of the triangular factor. */
-  public int factorEntries() {
-    return factor.nz_length;
+  public long factorEntries() {
+    return factor.factorEntries();
   }
 
   /**
@@ -77,48 +82,32 @@ public final class SymmetricSystem {
    * @return the solution and its residual
    */
   public Solved solve(double[] b) {
-    double[] x = b.clone();
-    substitute(x);
-    double[] r = residual(b, x);
-    substitute(r);
-    for (int i = 0; i < x.length; i++) {
-      x[i] += r[i];
+    double[][] one = {b};
+    return solve(one)[0];
+  }
+
+  /**
+   * Solves with one step of iterative refinement for each right-hand side.
+   *
+   * @param b right-hand sides
+   * @return the solutions with their residuals, in the same order
+   */
+  public Solved[] solve(double[][] b) {
+    double[][] x = factor.substitute(b);
+    double[][] r = new double[b.length][];
+    for (int k = 0; k < b.length; k++) {
+      r[k] = matrix.residual(b[k], x[k]);
     }
-    return new Solved(x, largest(residual(b, x)) / (norm * largest(x) + largest(b)));
-  }
-
-  private void substitute(double[] x) {
-    TriangularSolver_DSCC.solveL(factor, x);
-    TriangularSolver_DSCC.solveTranL(factor, x);
-  }
-
-  private double[] residual(double[] b, double[] x) {
-    double[] r = b.clone();
-    for (int c = 0; c < x.length; c++) {
-      double sum = 0;
-      int diagonal = upper.col_idx[c + 1] - 1;
-      for (int p = upper.col_idx[c]; p < diagonal; p++) {
-        int row = upper.nz_rows[p];
-        r[row] -= upper.nz_values[p] * x[c];
-        sum += upper.nz_values[p] * x[row];
+    double[][] correction = factor.substitute(r);
+    Solved[] solved = new Solved[b.length];
+    for (int k = 0; k < b.length; k++) {
+      for (int i = 0; i < x[k].length; i++) {
+        x[k][i] += correction[k][i];
       }
-      r[c] -= sum + upper.nz_values[diagonal] * x[c];
+      double left = largest(matrix.residual(b[k], x[k]));
+      solved[k] = new Solved(x[k], left / (norm * largest(x[k]) + largest(b[k])));
     }
-    return r;
-  }
-
-  private double rowSumNorm() {
-    double[] sums = new double[upper.numCols];
-    for (int c = 0; c < sums.length; c++) {
-      for (int p = upper.col_idx[c]; p < upper.col_idx[c + 1]; p++) {
-        double size = Math.abs(upper.nz_values[p]);
-        sums[c] += size;
-        if (upper.nz_rows[p] != c) {
-          sums[upper.nz_rows[p]] += size;
-        }
-      }
-    }
-    return largest(sums);
+    return solved;
   }
 
   private static double largest(double[] values) {
@@ -127,68 +116,5 @@ public final class SymmetricSystem {
       largest = Math.max(largest, Math.abs(v));
     }
     return largest;
-  }
-
-  /** The upper triangle by columns, rows ascending, the diagonal last in each column. */
-  private static DMatrixSparseCSC sum(
-      int n, int[] rows, int[] columns, double[] values, int count) {
-    int[] byRow = sortByRow(n, rows, columns, count);
-    int[] start = new int[n + 1];
-    for (int i = 0; i < count; i++) {
-      start[Math.max(rows[i], columns[i]) + 1]++;
-    }
-    for (int c = 0; c < n; c++) {
-      start[c + 1] += start[c];
-    }
-    int[] sortedRows = new int[count];
-    double[] sorted = new double[count];
-    int[] end = Arrays.copyOf(start, n);
-    for (int i : byRow) {
-      int row = Math.min(rows[i], columns[i]);
-      int column = Math.max(rows[i], columns[i]);
-      int last = end[column] - 1;
-      if (last >= start[column] && sortedRows[last] == row) {
-        sorted[last] += values[i];
-      } else {
-        sortedRows[last + 1] = row;
-        sorted[last + 1] = values[i];
-        end[column]++;
-      }
-    }
-    int[] columnStarts = new int[n + 1];
-    int used = 0;
-    for (int c = 0; c < n; c++) {
-      columnStarts[c] = used;
-      int length = end[c] - start[c];
-      if (length == 0 || sortedRows[end[c] - 1] != c) {
-        throw new IllegalStateException("unknown " + c + " of " + n + " has no entry of its own");
-      }
-      System.arraycopy(sortedRows, start[c], sortedRows, used, length);
-      System.arraycopy(sorted, start[c], sorted, used, length);
-      used += length;
-    }
-    columnStarts[n] = used;
-    DMatrixSparseCSC upper = new DMatrixSparseCSC(n, n, 0);
-    upper.col_idx = columnStarts;
-    upper.nz_rows = sortedRows;
-    upper.nz_values = sorted;
-    upper.nz_length = used;
-    upper.indicesSorted = true;
-    return upper;
-  }
-
-  private static int[] sortByRow(int n, int[] rows, int[] columns, int count) {
-    int[] start = new int[n + 1];
-    for (int i = 0; i < count; i++) {
-      start[Math.min(rows[i], columns[i]) + 1]++;
-    }
-    for (int r = 0; r < n; r++) {
-      start[r + 1] += start[r];
-    }
-    int[] sorted = new int[count];
-    for (int i = 0; i < count; i++) {
-      sorted[start[Math.min(rows[i], columns[i])]++] = i;
-    }
-    return sorted;
   }
 }

@@ -1,5 +1,8 @@
 package coldseam.solver.conduction;
 
+import coldseam.solver.algebra.ElementSum;
+import coldseam.solver.algebra.EntryList;
+import coldseam.solver.algebra.SparseSymmetric;
 import coldseam.solver.algebra.SymmetricSystem;
 import coldseam.solver.detail.Conditions;
 import java.util.Arrays;
@@ -15,10 +18,7 @@ final class Assembly {
   private final int[] solved;
 
   private final double[][] load;
-  private int[] rows;
-  private int[] columns;
-  private double[] values;
-  private int count;
+  private final EntryList films = new EntryList();
 
   private Assembly(Discretisation d) {
     this.d = d;
@@ -28,10 +28,6 @@ final class Assembly {
       solved[f] = f < d.spaces - 1 ? f : d.spaces;
     }
     load = new double[fields][d.unknowns];
-    int capacity = 21 * d.mesh.triangleCount() + 6 * d.outline.count;
-    rows = new int[capacity];
-    columns = new int[capacity];
-    values = new double[capacity];
   }
 
   /**
@@ -45,7 +41,7 @@ final class Assembly {
     Assembly assembly = new Assembly(d);
     double[][] fields = new double[d.spaces + 1][d.nodeCount];
     if (assembly.solved.length > 0) {
-      assembly.conduction();
+      assembly.fixedNodes();
       assembly.films();
       assembly.flows();
       assembly.solve(fields);
@@ -60,16 +56,36 @@ final class Assembly {
     return fields;
   }
 
-  /** ∫∇φ_p·λ∇φ_q over the triangles. */
-  private void conduction() {
-    for (int t = 0; t < d.mesh.triangleCount(); t++) {
+  /** What multiplies fixed nodes in ∫∇φ_p·λ∇φ_q over the triangles goes to the loads. */
+  private void fixedNodes() {
+    for (int t = 0; t < d.mesh.triangleCount() && d.unknowns < d.nodeCount; t++) {
       int at = QuadraticElement.NODES * t;
       for (int p = 0; p < QuadraticElement.NODES; p++) {
-        for (int q = 0; q <= p; q++) {
-          add(d.nodes[at + p], d.nodes[at + q], QuadraticElement.stiffness(d.couplings, t, p, q));
+        if (d.unknown[d.nodes[at + p]] >= 0) {
+          continue;
+        }
+        for (int q = 0; q < QuadraticElement.NODES; q++) {
+          int free = d.unknown[d.nodes[at + q]];
+          if (free >= 0) {
+            toLoads(free, d.nodes[at + p], QuadraticElement.stiffness(d.couplings, t, p, q));
+          }
         }
       }
     }
+  }
+
+  /** ∫∇φ_p·λ∇φ_q over the triangles and what the films add. */
+  private SparseSymmetric matrix() {
+    int[] member = new int[d.nodes.length];
+    for (int i = 0; i < member.length; i++) {
+      member[i] = d.unknown[d.nodes[i]];
+    }
+    return ElementSum.of(
+        d.unknowns,
+        QuadraticElement.NODES,
+        member,
+        (t, p, q) -> QuadraticElement.stiffness(d.couplings, t, p, q),
+        films);
   }
 
   /** ∫φ_p φ_q/Rs over the surfaces with a film, and ∫φ_p/Rs for the space behind it. */
@@ -119,17 +135,16 @@ final class Assembly {
   private void add(int p, int q, double value) {
     int row = d.unknown[p];
     int column = d.unknown[q];
-    if (value == 0 || row < 0 && column < 0) {
-      return;
-    }
     if (row >= 0 && column >= 0) {
-      rows[count] = row;
-      columns[count] = column;
-      values[count++] = value;
-      return;
+      films.add(row, column, value);
+    } else if (row >= 0) {
+      toLoads(row, q, value);
+    } else if (column >= 0) {
+      toLoads(column, p, value);
     }
-    int free = Math.max(row, column);
-    int fixed = row < 0 ? p : q;
+  }
+
+  private void toLoads(int free, int fixed, double value) {
     for (int f = 0; f < solved.length; f++) {
       if (solved[f] < d.spaces) {
         load[f][free] -= value * d.fixedValue(fixed, solved[f]);
@@ -138,14 +153,11 @@ final class Assembly {
   }
 
   private void solve(double[][] fields) {
-    SymmetricSystem system =
-        d.unknowns == 0 ? null : SymmetricSystem.factor(d.unknowns, rows, columns, values, count);
-    rows = null;
-    columns = null;
-    values = null;
+    SymmetricSystem.Solved[] done =
+        d.unknowns == 0 ? null : SymmetricSystem.factor(matrix()).solve(load);
     for (int f = 0; f < solved.length; f++) {
+      double[] x = done == null ? new double[0] : done[f].x();
       double[] field = fields[solved[f]];
-      double[] x = system == null ? new double[0] : system.solve(load[f]).x();
       for (int n = 0; n < d.nodeCount; n++) {
         if (d.unknown[n] >= 0) {
           field[n] = x[d.unknown[n]];

@@ -1,6 +1,9 @@
 package coldseam.solver.conduction;
 
+import coldseam.solver.algebra.ElementSum;
+import coldseam.solver.algebra.EntryList;
 import coldseam.solver.algebra.FillReducingOrder;
+import coldseam.solver.algebra.SparseSymmetric;
 import coldseam.solver.algebra.SymmetricSystem;
 import coldseam.solver.detail.Conditions;
 import java.util.Arrays;
@@ -26,10 +29,13 @@ final class ConjugateProblem {
   private final int unknowns;
   private final int[] solved;
   private final double[][] load;
-  private int[] rows;
-  private int[] columns;
-  private double[] values;
-  private int count;
+
+  /** What films add, and all of the triangles that touch a cut. */
+  private final EntryList others = new EntryList();
+
+  /** Unknowns at the nodes of the triangles that touch no cut. */
+  private final int[] member;
+
 
   private ConjugateProblem(Discretisation d, StreamSpace space) {
     this.d = d;
@@ -58,10 +64,7 @@ final class ConjugateProblem {
       solved[f] = f < d.spaces - 1 ? f : d.spaces;
     }
     load = new double[fields][unknowns];
-    int capacity = 21 * d.mesh.triangleCount() + 6 * d.outline.count;
-    rows = new int[capacity];
-    columns = new int[capacity];
-    values = new double[capacity];
+    member = new int[space.nodes.length];
   }
 
   /** Couplings of λ/det λ: those of λ over det λ. */
@@ -102,10 +105,22 @@ final class ConjugateProblem {
     return fields;
   }
 
-  /** ∫∇φ_p·(λ/det λ)∇φ_q over the triangles. */
+  /**
+   * Prepares ∫∇φ_p·(λ/det λ)∇φ_q over the triangles: those that touch no cut are left to the sum
+   * over elements.
+   */
   private void resistance() {
     for (int t = 0; t < d.mesh.triangleCount(); t++) {
       int at = QuadraticElement.NODES * t;
+      boolean plain = true;
+      for (int p = 0; p < QuadraticElement.NODES; p++) {
+        int node = space.nodes[at + p];
+        plain &= !space.jumps(node);
+        member[at + p] = unknown[space.chain[node]];
+      }
+      if (plain && !d.hasFlow) {
+        continue;
+      }
       for (int p = 0; p < QuadraticElement.NODES; p++) {
         for (int q = 0; q <= p; q++) {
           add(
@@ -115,6 +130,7 @@ final class ConjugateProblem {
               p == q);
         }
       }
+      Arrays.fill(member, at, at + QuadraticElement.NODES, -1);
     }
   }
 
@@ -228,27 +244,25 @@ final class ConjugateProblem {
 
   /** One entry stands for both of an off-diagonal pair; a pair that met on the diagonal is two. */
   private void entry(int row, int column, double value, boolean once) {
-    if (row < 0 || column < 0) {
-      return;
+    if (row >= 0 && column >= 0) {
+      others.add(row, column, row == column && !once ? 2 * value : value);
     }
-    if (count == rows.length) {
-      rows = Arrays.copyOf(rows, 2 * count);
-      columns = Arrays.copyOf(columns, 2 * count);
-      values = Arrays.copyOf(values, 2 * count);
-    }
-    rows[count] = row;
-    columns[count] = column;
-    values[count++] = row == column && !once ? 2 * value : value;
+  }
+
+  private SparseSymmetric matrix() {
+    return ElementSum.of(
+        unknowns,
+        QuadraticElement.NODES,
+        member,
+        (t, p, q) -> QuadraticElement.stiffness(couplings, t, p, q),
+        others);
   }
 
   private void solve(double[][] fields) {
-    SymmetricSystem system =
-        unknowns == 0 ? null : SymmetricSystem.factor(unknowns, rows, columns, values, count);
-    rows = null;
-    columns = null;
-    values = null;
+    SymmetricSystem.Solved[] done =
+        unknowns == 0 ? null : SymmetricSystem.factor(matrix()).solve(load);
     for (int f = 0; f < solved.length; f++) {
-      double[] x = system == null ? new double[0] : system.solve(load[f]).x();
+      double[] x = done == null ? new double[0] : done[f].x();
       double[] field = fields[solved[f]];
       boolean flows = solved[f] == d.spaces;
       for (int n = 0; n < space.nodeCount; n++) {
