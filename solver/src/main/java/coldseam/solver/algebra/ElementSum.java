@@ -96,7 +96,7 @@ public final class ElementSum {
    * @param entries the elements' matrices; asked from several threads
    * @param others what else to add
    * @return the matrix
-   * @throws IllegalStateException if an unknown has no diagonal entry
+   * @throws IllegalArgumentException if an unknown has no diagonal entry
    */
   public static SparseSymmetric of(
       int unknowns, int perElement, int[] member, Entries entries, EntryList others) {
@@ -145,8 +145,7 @@ public final class ElementSum {
         column(c);
         length[c] = used - begin;
         if (used == begin || row[used - 1] != c) {
-          throw new IllegalStateException(
-              "unknown " + c + " of " + unknowns + " has no entry of its own");
+          throw new IllegalArgumentException("unknown " + c + " has no entry of its own");
         }
       }
     }

@@ -82,8 +82,8 @@ public final class SparseSymmetric {
    * @param values the entries; several at one place are added in the order given
    * @param count how many of the entries to use
    * @return the matrix
-   * @throws IllegalArgumentException if an index is out of range
-   * @throws IllegalStateException if an unknown has no diagonal entry
+   * @throws IllegalArgumentException if an unknown has no diagonal entry or an index is out of
+   *     range
    */
   public static SparseSymmetric sum(
       int unknowns, int[] rows, int[] columns, double[] values, int count) {
@@ -135,8 +135,7 @@ public final class SparseSymmetric {
     for (int c = 0; c < end.length; c++) {
       int length = end[c] - start[c];
       if (length == 0 || row[end[c] - 1] != c) {
-        throw new IllegalStateException(
-            "unknown " + c + " of " + end.length + " has no entry of its own");
+        throw new IllegalArgumentException("unknown " + c + " has no entry of its own");
       }
       System.arraycopy(row, start[c], row, used, length);
       System.arraycopy(value, start[c], value, used, length);

@@ -41,6 +41,8 @@ public final class SymmetricSystem {
    * @param values the entries; several at one place are added
    * @param count how many of the entries to use
    * @return the factored system
+   * @throws IllegalArgumentException if an unknown has no diagonal entry or an index is out of
+   *     range
    * @throws IllegalStateException if the matrix is not positive definite or has entries that are
    *     not finite
    */

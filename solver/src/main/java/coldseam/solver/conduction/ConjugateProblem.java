@@ -36,7 +36,6 @@ final class ConjugateProblem {
   /** Unknowns at the nodes of the triangles that touch no cut. */
   private final int[] member;
 
-
   private ConjugateProblem(Discretisation d, StreamSpace space) {
     this.d = d;
     this.space = space;

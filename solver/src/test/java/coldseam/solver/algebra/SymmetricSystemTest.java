@@ -115,7 +115,7 @@ class SymmetricSystemTest {
   void refusesAnUnknownWithoutAnEntry() {
     assertThatThrownBy(
             () -> SymmetricSystem.factor(2, new int[] {0}, new int[] {0}, new double[] {1}, 1))
-        .isInstanceOf(IllegalStateException.class)
-        .hasMessageContaining("unknown 1 of 2");
+        .isInstanceOf(IllegalArgumentException.class)
+        .hasMessageContaining("unknown 1 has no entry of its own");
   }
 }
