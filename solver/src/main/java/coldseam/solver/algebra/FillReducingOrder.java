@@ -6,6 +6,7 @@ import java.util.Arrays;
  * Geometric nested dissection of a finite-element mesh (George 1973; Lipton, Rose and Tarjan 1979).
  * The elements are halved at the median of their centres across the direction in which fewer nodes
  * are shared by the two halves; the shared nodes come last, the halves are treated in the same way.
+ * Meshes of large systems are left to {@link NestedDissection}.
  */
 public final class FillReducingOrder {
   /** Element sets of this size or less are not halved. */
@@ -63,6 +64,12 @@ public final class FillReducingOrder {
     if (unknowns >= SymmetricSystem.LARGE) {
       return dissected(free, unknowns, nodes, perElement, x, y);
     }
+    return geometric(free, unknowns, nodes, perElement, x, y);
+  }
+
+  /** The order of this class itself, quick to begin with. */
+  static int[] geometric(
+      boolean[] free, int unknowns, int[] nodes, int perElement, double[] x, double[] y) {
     FillReducingOrder order = new FillReducingOrder(free.length, nodes, perElement, x, y, unknowns);
     for (int n = 0; n < free.length; n++) {
       order.seen[n] = free[n] ? 0 : Integer.MAX_VALUE;
@@ -74,7 +81,8 @@ public final class FillReducingOrder {
     return order.place;
   }
 
-  private static int[] dissected(
+  /** The order of {@link NestedDissection}, which leaves fewer entries in large factors. */
+  static int[] dissected(
       boolean[] free, int unknowns, int[] nodes, int perElement, double[] x, double[] y) {
     int[] number = new int[free.length];
     int next = 0;

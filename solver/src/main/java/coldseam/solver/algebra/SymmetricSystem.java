@@ -8,10 +8,12 @@ package coldseam.solver.algebra;
  */
 public final class SymmetricSystem {
   /**
-   * Systems with so many unknowns are factored front by front. Measured on quadratic elements, both
-   * ways warm: NNN.
+   * Systems with so many unknowns are factored front by front. Measured on both problems of a
+   * uniformly refined section, order and bounds included, processor time of the one way over that
+   * of the other: warm 0.9 at 6,000 unknowns, 0.5 at 11,000 and 20,000, 0.26 at 43,000; as the
+   * first thing a process does 1.4 at 11,000, 0.85 at 22,000.
    */
-  static final int LARGE = Integer.getInteger("large", 10_000);
+  static final int LARGE = 10_000;
 
   private final SparseSymmetric matrix;
   private final Factor factor;

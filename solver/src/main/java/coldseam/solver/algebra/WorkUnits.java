@@ -2,6 +2,7 @@ package coldseam.solver.algebra;
 
 import java.util.Arrays;
 import java.util.concurrent.CountedCompleter;
+import java.util.concurrent.ForkJoinPool;
 import java.util.function.IntConsumer;
 
 /**
@@ -108,7 +109,7 @@ record WorkUnits(int[] start, int[] parent, int[] firstBelow, int[] nextBelow) {
     if (count() == 1) {
       work.accept(0);
     } else {
-      new Walk(null, this, count(), true, work).invoke();
+      invokeApart(new Walk(null, this, count(), true, work));
     }
   }
 
@@ -117,7 +118,20 @@ record WorkUnits(int[] start, int[] parent, int[] firstBelow, int[] nextBelow) {
     if (count() == 1) {
       work.accept(0);
     } else {
-      new Walk(null, this, count(), false, work).invoke();
+      invokeApart(new Walk(null, this, count(), false, work));
+    }
+  }
+
+  /**
+   * Walks in a pool of its own. In a shared one a thread that waits for its walk can meet a part of
+   * another walk on top of its queue; Java 17 then keeps a processor busy looking at it.
+   */
+  private static void invokeApart(Walk walk) {
+    ForkJoinPool pool = new ForkJoinPool();
+    try {
+      pool.invoke(walk);
+    } finally {
+      pool.shutdown();
     }
   }
 

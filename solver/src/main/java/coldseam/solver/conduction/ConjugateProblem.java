@@ -2,7 +2,6 @@ package coldseam.solver.conduction;
 
 import coldseam.solver.algebra.ElementSum;
 import coldseam.solver.algebra.EntryList;
-import coldseam.solver.algebra.FillReducingOrder;
 import coldseam.solver.algebra.SparseSymmetric;
 import coldseam.solver.algebra.SymmetricSystem;
 import coldseam.solver.detail.Conditions;
@@ -40,18 +39,8 @@ final class ConjugateProblem {
     this.d = d;
     this.space = space;
     couplings = couplings(d);
-    int meshNodes = d.nodeCount;
-    boolean[] free = new boolean[meshNodes];
-    int found = 0;
-    for (int n = 0; n < meshNodes; n++) {
-      free[n] = space.chain[n] == n && !space.pinned[n];
-      found += free[n] ? 1 : 0;
-    }
-    int[] chains = new int[d.nodes.length];
-    for (int i = 0; i < chains.length; i++) {
-      chains[i] = space.chain[space.nodes[i]];
-    }
-    unknown = FillReducingOrder.of(free, chains, QuadraticElement.NODES, d.centreX, d.centreY);
+    unknown = new int[d.nodeCount];
+    int found = number(d, space, unknown);
     jumpUnknown = new int[space.cuts];
     for (int c = 0; c < space.cuts; c++) {
       jumpUnknown[c] = Double.isNaN(space.givenJump[c]) ? found++ : -1;
@@ -64,6 +53,32 @@ final class ConjugateProblem {
     }
     load = new double[fields][unknowns];
     member = new int[space.nodes.length];
+  }
+
+  /**
+   * Numbers the unknowns at nodes in the order of the temperature problem. What stands for a whole
+   * chain meets too many others to be eliminated before them and comes last.
+   *
+   * @return how many
+   */
+  private static int number(Discretisation d, StreamSpace space, int[] unknown) {
+    boolean[] shared = new boolean[d.nodeCount];
+    for (int n = 0; n < d.nodeCount; n++) {
+      if (space.chain[n] != n) {
+        shared[space.chain[n]] = true;
+      }
+    }
+    int found = 0;
+    for (boolean last : new boolean[] {false, true}) {
+      for (int n : d.inOrder) {
+        if (space.chain[n] != n || space.pinned[n]) {
+          unknown[n] = -1;
+        } else if (shared[n] == last) {
+          unknown[n] = found++;
+        }
+      }
+    }
+    return found;
   }
 
   /** Couplings of λ/det λ: those of λ over det λ. */

@@ -30,6 +30,9 @@ final class Discretisation {
 
   final Outline outline;
 
+  /** All nodes in an order good for elimination. */
+  final int[] inOrder;
+
   /** Place of a node's unknown in the order of elimination, −1 for fixed nodes. */
   final int[] unknown;
 
@@ -76,14 +79,19 @@ final class Discretisation {
       }
     }
     hasFlow = flow;
-    boolean[] free = new boolean[nodeCount];
-    int count = 0;
+    boolean[] all = new boolean[nodeCount];
+    Arrays.fill(all, true);
+    int[] place = FillReducingOrder.of(all, nodes, QuadraticElement.NODES, centreX, centreY);
+    inOrder = new int[nodeCount];
     for (int n = 0; n < nodeCount; n++) {
-      free[n] = fixedSpace[n] == FREE;
-      count += free[n] ? 1 : 0;
+      inOrder[place[n]] = n;
+    }
+    unknown = place;
+    int count = 0;
+    for (int n : inOrder) {
+      unknown[n] = fixedSpace[n] == FREE ? count++ : -1;
     }
     unknowns = count;
-    unknown = FillReducingOrder.of(free, nodes, QuadraticElement.NODES, centreX, centreY);
   }
 
   private static double extentSquared(Mesh mesh) {

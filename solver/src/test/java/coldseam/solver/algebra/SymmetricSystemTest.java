@@ -4,6 +4,7 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;
 import static org.assertj.core.api.Assertions.within;
 
+import java.util.Arrays;
 import java.util.Random;
 import org.apache.commons.math3.linear.Array2DRowRealMatrix;
 import org.apache.commons.math3.linear.ArrayRealVector;
@@ -117,5 +118,59 @@ class SymmetricSystemTest {
             () -> SymmetricSystem.factor(2, new int[] {0}, new int[] {0}, new double[] {1}, 1))
         .isInstanceOf(IllegalArgumentException.class)
         .hasMessageContaining("unknown 1 has no entry of its own");
+  }
+
+  /** Front by front the same numbers come out as row by row by EJML: materials 10⁴ apart. */
+  @Test
+  void solvesALargeSystemAsEjmlDoes() {
+    QuadraticLaplacian section =
+        new QuadraticLaplacian(
+            QuadraticLaplacian.square(60, 60), (x, y) -> Math.floor(10 * x) % 2 == 0 ? 200 : 0.02);
+    assertThat(section.unknowns).isGreaterThan(SymmetricSystem.LARGE);
+    SparseSymmetric matrix = ordered(section);
+    double[] b = new Random(20260406).doubles(section.unknowns).toArray();
+
+    SymmetricSystem.Solved solved = SymmetricSystem.factor(matrix).solve(b);
+
+    double[] expected = UpLookingCholesky.of(matrix).substitute(b)[0];
+    double largest = 0;
+    double difference = 0;
+    for (int i = 0; i < expected.length; i++) {
+      largest = Math.max(largest, Math.abs(expected[i]));
+      difference = Math.max(difference, Math.abs(solved.x()[i] - expected[i]));
+    }
+    assertThat(difference / largest).isLessThan(1e-8);
+    assertThat(solved.relativeResidual()).isLessThan(1e-15);
+  }
+
+  private static SparseSymmetric ordered(QuadraticLaplacian section) {
+    boolean[] all = new boolean[section.unknowns];
+    Arrays.fill(all, true);
+    int[] place = FillReducingOrder.of(all, section.nodes, 6, section.centreX, section.centreY);
+    SparseSymmetric from = section.matrix;
+    int[] rows = new int[from.entries()];
+    int[] columns = new int[from.entries()];
+    for (int c = 0; c < section.unknowns; c++) {
+      for (int p = from.start(c); p < from.start(c + 1); p++) {
+        rows[p] = place[from.row(p)];
+        columns[p] = place[c];
+      }
+    }
+    return SparseSymmetric.sum(section.unknowns, rows, columns, from.values(), rows.length);
+  }
+
+  @Test
+  void refusesALargeMatrixThatIsNotPositiveDefinite() {
+    int n = SymmetricSystem.LARGE;
+    EntryList entries = new EntryList();
+    int[] member = new int[n];
+    for (int u = 0; u < n; u++) {
+      member[u] = u;
+    }
+    SparseSymmetric matrix = ElementSum.of(n, 1, member, (u, p, q) -> u == n / 2 ? -1 : 1, entries);
+
+    assertThatThrownBy(() -> SymmetricSystem.factor(matrix))
+        .isInstanceOf(IllegalStateException.class)
+        .hasMessageContaining("unknown " + n / 2);
   }
 }
