@@ -13,6 +13,12 @@ record Reached(Accuracy asked) {
   /** Half-widths that exceed what was asked by rounding alone count as reached. */
   private static final double ROUNDING = 1 + 1e-9;
 
+  /**
+   * Part of the absolute half-width asked for of a coupling that is always reached: where no heat
+   * path joins two spaces, a part of the coupling itself would be nothing.
+   */
+  private static final double NEGLIGIBLE = 1e-6;
+
   boolean by(Result result) {
     for (Result.LinearTransmittance psi : result.psi()) {
       if (exceeds(psi.valueWPerMK(), asked.psiWPerMK() + stated(psi))) {
@@ -20,7 +26,10 @@ record Reached(Accuracy asked) {
       }
     }
     for (Result.EffectiveTransmittance u : result.transmittances()) {
-      double allowed = asked.transmittanceRelative() * Math.abs(u.valueWPerM2K().value());
+      double allowed =
+          Math.max(
+              asked.transmittanceRelative() * Math.abs(u.valueWPerM2K().value()),
+              NEGLIGIBLE * asked.couplingWPerMK() / u.widthM());
       if (exceeds(u.valueWPerM2K(), allowed)) {
         return false;
       }
@@ -47,11 +56,13 @@ record Reached(Accuracy asked) {
   /**
    * The half-width allowed for a coupling: relative to √(A_ii A_jj), the geometric mean of all that
    * couples to its two spaces, since a coupling next to nothing cannot be known to a part of
-   * itself; the smaller of that and the absolute one.
+   * itself; the smaller of that and the absolute one, but never nothing.
    */
   private double allowed(Result.Coupling coupling, Result result) {
     double scale = Math.sqrt(total(coupling.from(), result) * total(coupling.to(), result));
-    return Math.min(asked.couplingRelative() * scale, asked.couplingWPerMK());
+    return Math.max(
+        NEGLIGIBLE * asked.couplingWPerMK(),
+        Math.min(asked.couplingRelative() * scale, asked.couplingWPerMK()));
   }
 
   private static double total(String space, Result result) {

@@ -15,11 +15,15 @@ import java.util.Optional;
 
 /** U = L2D / width over a module, and R = 1/U. */
 final class EffectiveTransmittances {
+  /** Relative difference of a typed width from the drawn one above which a warning is given. */
+  private static final double TYPED_WIDTH_DIFFERS = 1e-3;
+
   private final Detail detail;
   private final Outline outline;
   private final List<Fault> faults = new ArrayList<>();
   private final List<Assumption> assumptions = new ArrayList<>();
   private final List<Plan> plans = new ArrayList<>();
+  private final List<String> warnings = new ArrayList<>();
 
   private record Plan(
       Wanted.Transmittance wanted, int[] warm, int[] cold, int[] floating, double widthM) {}
@@ -45,6 +49,10 @@ final class EffectiveTransmittances {
     return assumptions;
   }
 
+  List<String> warnings() {
+    return warnings;
+  }
+
   boolean any() {
     return !plans.isEmpty();
   }
@@ -65,6 +73,7 @@ final class EffectiveTransmittances {
         faults.add(new Fault("U", wanted.of(), "its width must be more than 0", Optional.empty()));
         return;
       }
+      warnOfWidth(wanted.of(), width, sides(warm, cold));
     } else {
       Optional<Double> found = width(wanted, warm, cold);
       if (found.isEmpty()) {
@@ -94,13 +103,7 @@ final class EffectiveTransmittances {
     }
     Side a = sides.get(0);
     Side b = sides.get(1);
-    double warmWidth = outline.distance(a.warmVertex(), b.warmVertex());
-    double coldWidth = outline.distance(a.coldVertex(), b.coldVertex());
-    boolean parallel =
-        Math.abs(a.run().cross(b.run())) <= FlankLayers.PARALLEL_SINE
-            && a.run().dot(b.run()) < 0
-            && Math.abs(warmWidth - coldWidth) <= FlankLayers.PARALLEL_SINE * warmWidth;
-    if (!parallel) {
+    if (!parallel(a, b)) {
       faults.add(
           new Fault(
               "U",
@@ -109,12 +112,38 @@ final class EffectiveTransmittances {
               Optional.of(outline.point(a.warmVertex()))));
       return Optional.empty();
     }
+    double warmWidth = outline.distance(a.warmVertex(), b.warmVertex());
     assumptions.add(
         new Assumption(
             "width of " + wanted.of(),
             Wording.length(warmWidth) + " between the two cut-off planes, along the face",
             "by convention of this tool"));
     return Optional.of(warmWidth);
+  }
+
+  private boolean parallel(Side a, Side b) {
+    double warmWidth = outline.distance(a.warmVertex(), b.warmVertex());
+    double coldWidth = outline.distance(a.coldVertex(), b.coldVertex());
+    return Math.abs(a.run().cross(b.run())) <= FlankLayers.PARALLEL_SINE
+        && a.run().dot(b.run()) < 0
+        && Math.abs(warmWidth - coldWidth) <= FlankLayers.PARALLEL_SINE * warmWidth;
+  }
+
+  private void warnOfWidth(String of, double typed, List<Side> sides) {
+    if (sides.size() != 2 || !parallel(sides.get(0), sides.get(1))) {
+      return;
+    }
+    double drawn = outline.distance(sides.get(0).warmVertex(), sides.get(1).warmVertex());
+    if (Math.abs(typed - drawn) > TYPED_WIDTH_DIFFERS * drawn) {
+      warnings.add(
+          "U of "
+              + of
+              + ": its typed width "
+              + Wording.length(typed)
+              + " differs from the "
+              + Wording.length(drawn)
+              + " between the two cut-off planes");
+    }
   }
 
   private List<Side> sides(int[] warm, int[] cold) {

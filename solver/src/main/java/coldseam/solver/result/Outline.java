@@ -6,12 +6,17 @@ import coldseam.mesh.plane.Resolution;
 import coldseam.solver.detail.Conditions;
 import coldseam.solver.detail.Conditions.Kind;
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.List;
 
 /** The outline of the conducting section, walked with the section on the left. */
 final class Outline {
   /** How far a vertex may lie off a straight line, as a part of the line's length. */
   static final double IN_LINE = 1e-6;
+
+  /** Places from left to right, then upwards. */
+  static final Comparator<Point> LEFT_TO_RIGHT =
+      Comparator.comparingDouble(Point::x).thenComparingDouble(Point::y);
 
   private final Partition partition;
   private final Conditions conditions;

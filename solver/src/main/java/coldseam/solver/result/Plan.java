@@ -76,6 +76,10 @@ public final class Plan {
     }
     assumptions = collectAssumptions(planner.assumptions(), others);
     warnings = new ArrayList<>(section.warnings());
+    warnings.addAll(new HeatPaths(detail, outline).warnings());
+    warnings.addAll(new SpaceChecks(detail, outline).warnings());
+    warnings.addAll(planner.warnings());
+    warnings.addAll(transmittances.warnings());
     if (!module) {
       warnings.addAll(cutOffs.distances());
     }

@@ -30,6 +30,7 @@ final class PsiPlanner {
   private final List<Fault> faults = new ArrayList<>();
   private final List<Assumption> assumptions = new ArrayList<>();
   private final List<PsiPlan> plans = new ArrayList<>();
+  private final List<String> warnings = new ArrayList<>();
 
   PsiPlanner(Detail detail, Outline outline, List<PlacedFlank> flanks, FlankLengths lengths) {
     this.detail = detail;
@@ -51,6 +52,10 @@ final class PsiPlanner {
 
   List<Assumption> assumptions() {
     return assumptions;
+  }
+
+  List<String> warnings() {
+    return warnings;
   }
 
   List<PsiPlan> plans() {
@@ -77,6 +82,7 @@ final class PsiPlanner {
       planAllFlanks(plan);
     } else {
       psi.subtractions().forEach(subtraction -> planStated(plan, subtraction));
+      warnOfFlanksLeft(plan);
     }
     plans.add(plan);
   }
@@ -122,6 +128,55 @@ final class PsiPlanner {
             "what ψ '" + plan.wanted().name() + "' subtracts",
             "every flank between its two sides: " + String.join(", ", words),
             "ISO 10211, clause 12"));
+  }
+
+  /**
+   * Flanks between the two sides that a stated list leaves out; a part known by its U or another
+   * detail may stand for one each.
+   */
+  private void warnOfFlanksLeft(PsiPlan plan) {
+    List<PlacedFlank> left =
+        flanks.stream()
+            .filter(flank -> flank.uWPerM2K().isPresent())
+            .filter(flank -> flank.warm() >= 0 || flank.cold() >= 0 || facedSpaces <= 2)
+            .filter(flank -> !plan.separation(flank).none())
+            .filter(
+                flank ->
+                    plan.wanted().subtractions().stream()
+                        .noneMatch(
+                            stated ->
+                                stated instanceof Subtraction.OfFlank of
+                                    && of.flank().equals(flank.name())))
+            .toList();
+    long others =
+        plan.wanted().subtractions().stream()
+            .filter(stated -> !(stated instanceof Subtraction.OfFlank))
+            .count();
+    if (left.size() <= others) {
+      return;
+    }
+    for (PlacedFlank flank : left) {
+      double u = flank.uWPerM2K().orElseThrow().mid();
+      warnings.add(
+          "ψ '"
+              + plan.wanted().name()
+              + "': its list leaves out flank '"
+              + flank.name()
+              + "', which lies between its two sides; not subtracted: "
+              + lengths
+                  .of(flank, plan.wanted().dimensions())
+                  .length()
+                  .map(
+                      l ->
+                          "U·l = "
+                              + Wording.figure(u)
+                              + " W/(m²·K) × "
+                              + Wording.length(l.valueM())
+                              + " = "
+                              + Wording.figure(u * l.valueM())
+                              + " W/(m·K)")
+                  .orElse("U = " + Wording.figure(u) + " W/(m²·K), length unknown"));
+    }
   }
 
   private void planStated(PsiPlan plan, Subtraction subtraction) {

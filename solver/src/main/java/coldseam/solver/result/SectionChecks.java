@@ -11,7 +11,9 @@ import coldseam.solver.detail.Stretch;
 import coldseam.solver.detail.Wanted;
 import coldseam.solver.detail.Wording;
 import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 
 /** What looks doubtful in the drawing, and places asked about that lie outside the section. */
@@ -37,6 +39,7 @@ final class SectionChecks {
       }
     }
     warnings.addAll(stretchesPartlyOff());
+    warnings.addAll(stretchesOverlaid());
     return warnings;
   }
 
@@ -105,6 +108,45 @@ final class SectionChecks {
                 + " lie off the outline of the conducting section and count for nothing");
       }
     }
+    return warnings;
+  }
+
+  /** Stretches whose condition a later one with another condition replaces. */
+  private List<String> stretchesOverlaid() {
+    Map<List<Integer>, Double> lengths = new LinkedHashMap<>();
+    for (int edge = 0; edge < partition.edgeCount(); edge++) {
+      if (!outline.contains(edge)) {
+        continue;
+      }
+      List<Integer> stating =
+          outline.conditions().stretches(edge).stream()
+              .filter(i -> detail.stretches().get(i).condition().isPresent())
+              .toList();
+      for (int k = 0; k < stating.size() - 1; k++) {
+        int earlier = stating.get(k);
+        int later = stating.get(stating.size() - 1);
+        if (!detail
+            .stretches()
+            .get(earlier)
+            .condition()
+            .equals(detail.stretches().get(later).condition())) {
+          lengths.merge(List.of(earlier, later), partition.edgeLength(edge), Double::sum);
+        }
+      }
+    }
+    List<String> warnings = new ArrayList<>();
+    lengths.forEach(
+        (pair, length) ->
+            warnings.add(
+                "stretches '"
+                    + detail.stretches().get(pair.get(0)).name()
+                    + "' and '"
+                    + detail.stretches().get(pair.get(1)).name()
+                    + "' say different things along the same "
+                    + Wording.length(length)
+                    + ": the later one, '"
+                    + detail.stretches().get(pair.get(1)).name()
+                    + "', counts there"));
     return warnings;
   }
 
