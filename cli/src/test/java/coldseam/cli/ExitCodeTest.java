@@ -129,6 +129,21 @@ class ExitCodeTest {
     assertThat(Ran.in(dir, "solve", "corner.yaml", "--json").code()).isZero();
   }
 
+  /** Two leaves that do not meet: L2D and U are 0, of which no part can be asked for. */
+  @Test
+  void nothing_to_be_accurate_about_is_0_with_a_warning() throws IOException {
+    String leaves =
+        Cases.WALL.replace(
+            "- {fill: brick, box: [0, 0, 200, 1000]}",
+            "- {fill: brick, box: [0, 0, 80, 1000]}\n  - {fill: brick, box: [120, 0, 200, 1000]}");
+    Cases.write(dir, "leaves.yaml", leaves);
+    Ran ran = Ran.in(dir, "solve", "leaves.yaml", "--json");
+    assertThat(ran.code()).as(ran.err()).isZero();
+    assertThat(ran.out())
+        .contains("\"reached\":true")
+        .contains("no heat path joins 'indoors' and 'outdoors'");
+  }
+
   @Test
   void a_defect_is_70_says_what_to_report_and_keeps_its_trace_to_a_file() {
     PrintStream broken =

@@ -13,12 +13,6 @@ record Reached(Accuracy asked) {
   /** Half-widths that exceed what was asked by rounding alone count as reached. */
   private static final double ROUNDING = 1 + 1e-9;
 
-  /**
-   * Part of the absolute half-width asked for of a coupling that is always reached: where no heat
-   * path joins two spaces, a part of the coupling itself would be nothing.
-   */
-  private static final double NEGLIGIBLE = 1e-6;
-
   boolean by(Result result) {
     for (Result.LinearTransmittance psi : result.psi()) {
       if (exceeds(psi.valueWPerMK(), asked.psiWPerMK() + stated(psi))) {
@@ -29,7 +23,7 @@ record Reached(Accuracy asked) {
       double allowed =
           Math.max(
               asked.transmittanceRelative() * Math.abs(u.valueWPerM2K().value()),
-              NEGLIGIBLE * asked.couplingWPerMK() / u.widthM());
+              asked.negligibleWPerMK() / u.widthM());
       if (exceeds(u.valueWPerM2K(), allowed)) {
         return false;
       }
@@ -61,7 +55,7 @@ record Reached(Accuracy asked) {
   private double allowed(Result.Coupling coupling, Result result) {
     double scale = Math.sqrt(total(coupling.from(), result) * total(coupling.to(), result));
     return Math.max(
-        NEGLIGIBLE * asked.couplingWPerMK(),
+        asked.negligibleWPerMK(),
         Math.min(asked.couplingRelative() * scale, asked.couplingWPerMK()));
   }
 

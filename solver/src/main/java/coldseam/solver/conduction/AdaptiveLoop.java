@@ -31,9 +31,6 @@ final class AdaptiveLoop {
   /** The same for the second film set, of which only temperatures are read. */
   private static final double PART_FOR_SURFACES = 0.5;
 
-  /** Part of an absolute accuracy as good as none: where no heat path leads there is no more. */
-  private static final double NEGLIGIBLE = 1e-6;
-
   /** Temperature error that may be left, in parts of the temperature difference: 0.01 K in 25. */
   private static final double TEMPERATURE = 4e-4;
 
@@ -229,7 +226,7 @@ final class AdaptiveLoop {
           infinite(i)
               ? Double.POSITIVE_INFINITY
               : Math.max(
-                  NEGLIGIBLE * absolute,
+                  accuracy.negligibleWPerMK(),
                   Math.min(relativePart * relative * matrix.a[i][i], absolutePart * absolute));
     }
     targets[d.spaces] = relativePart * relative * matrix.flowEnergy;

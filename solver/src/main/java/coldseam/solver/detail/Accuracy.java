@@ -18,6 +18,9 @@ public record Accuracy(
   /** L2D the smaller of 0.2 % and 0.001 W/(m·K); ψ 0.001 W/(m·K); U 0.2 %. */
   public static final Accuracy STANDARD = new Accuracy(0.002, 0.001, 0.001, 0.002, 2_000_000);
 
+  /** Part of an absolute half-width that is as good as none. */
+  private static final double NEGLIGIBLE = 1e-6;
+
   /**
    * Checks the figures.
    *
@@ -31,5 +34,16 @@ public record Accuracy(
         || mostUnknowns <= 0) {
       throw new IllegalArgumentException("every accuracy is more than 0");
     }
+  }
+
+  /**
+   * The half-width of a coupling that always does: a millionth of the smallest absolute one asked
+   * for or standard. Where no heat path joins two spaces, a part of their L2D would be nothing.
+   *
+   * @return W/(m·K), 1e-9 or less
+   */
+  public double negligibleWPerMK() {
+    double smallest = Math.min(couplingWPerMK, psiWPerMK);
+    return NEGLIGIBLE * Math.min(smallest, STANDARD.couplingWPerMK);
   }
 }
