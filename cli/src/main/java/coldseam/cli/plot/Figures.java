@@ -137,6 +137,16 @@ record Figures(Caption caption) {
     return customary() ? "Btu/(h·ft·°F)" : "W/(m·K)";
   }
 
+  /** A heat flow per metre on the written scale. */
+  double scaledFlow(double wPerM) {
+    return customary() ? wPerM * FLOW : wPerM;
+  }
+
+  /** A heat flow per metre of the written scale in W/m. */
+  double flowWPerM(double scaled) {
+    return customary() ? scaled / FLOW : scaled;
+  }
+
   String flowUnit() {
     return customary() ? "Btu/(h·ft)" : "W/m";
   }

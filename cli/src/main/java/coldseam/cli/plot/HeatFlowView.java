@@ -4,12 +4,17 @@ import coldseam.cli.plot.Plots.Caption;
 import coldseam.cli.text.Digits;
 import coldseam.solver.conduction.Solution;
 import coldseam.solver.result.Result;
+import java.awt.Color;
+import java.awt.geom.Line2D;
 import java.awt.geom.Path2D;
 import java.util.Collections;
 import java.util.List;
 import java.util.Optional;
 
-/** Heat flow: its density in filled bands, its direction, what passes through each space. */
+/**
+ * Heat flow: its density in filled bands, tubes that each carry the same heat, what passes through
+ * each space. Where there are no tubes arrows show the direction.
+ */
 final class HeatFlowView extends View {
   /** Said where two fixed temperatures meet in a point. */
   private static final String NOT_FINITE = "no finite heat flow";
@@ -35,8 +40,12 @@ final class HeatFlowView extends View {
   /** How far the rim of a band may be drawn from its place, points. */
   private static final double DISPLACEMENT = 0.5;
 
+  /** Part of the scale of colours under tubes, so that their lines are read on all of it. */
+  private static final double QUIET = 0.6;
+
   private final FlowDensity density;
   private final List<Double> levels;
+  private final Optional<FlowTubes> tubes;
 
   HeatFlowView(Result result, Caption caption, DrawnSection section) {
     super(result, caption, section);
@@ -46,6 +55,7 @@ final class HeatFlowView extends View {
     double much = figures().scaledDensity(much());
     List<Double> series = Levels.series(little, Math.max(much, 2 * little));
     levels = series.subList(Math.max(0, series.size() - MOST_LEVELS), series.size());
+    tubes = FlowTubes.of(solution, temperaturesC(), figures());
   }
 
   private double much() {
@@ -62,6 +72,7 @@ final class HeatFlowView extends View {
   @Override
   String told() {
     StringBuilder out = new StringBuilder("Density and direction of the heat flow in the detail.");
+    tubes.ifPresent(t -> out.append(" Each tube carries ").append(t.each()).append('.'));
     for (Result.SpaceResult space : result().spaces()) {
       out.append(' ').append(space.name()).append(": ").append(passing(space)).append('.');
     }
@@ -133,14 +144,14 @@ final class HeatFlowView extends View {
         Sampling.of(density, panel.window(), panel.pointsPerM(), STEP, DISPLACEMENT);
     Bands bands = new Bands(Contours.of(patch, traced), panel);
     canvas.layer(panel.name() + "-bands");
-    bands.fillAll(canvas, Palette.flow(part(0)));
+    bands.fillAll(canvas, colour(0));
     for (int k = 0; k < traced.length; k++) {
-      bands.fill(canvas, k, Palette.flow(part(k + 1)));
+      bands.fill(canvas, k, colour(k + 1));
     }
     SectionLines lines = new SectionLines(section(), panel);
     if (!blackens(panel, zoom)) {
       lines.joints(canvas, Palette.INK, Pen.HAIR);
-      arrows(canvas, panel);
+      tubes.ifPresentOrElse(t -> t.draw(canvas, panel, density), () -> arrows(canvas, panel));
     }
     lines.outline(canvas);
     Ground ground = SectionLines.ground(section(), panel);
@@ -151,8 +162,9 @@ final class HeatFlowView extends View {
         .draw(canvas, ground, labels, SectionLines.open(section()), this::stretch);
   }
 
-  private double part(int band) {
-    return (band + 0.5) / (levels.size() + 1);
+  private Color colour(int band) {
+    double part = (band + 0.5) / (levels.size() + 1);
+    return Palette.flow(tubes.isPresent() ? QUIET * part : part);
   }
 
   private String stretch(int index) {
@@ -233,14 +245,7 @@ final class HeatFlowView extends View {
     Key key = new Key();
     key.heading("Density in " + figures().densityUnit());
     key.tall(this::scale, (levels.size() + 1) * Bands.STEP + 4);
-    key.sample(
-        (canvas, box) -> {
-          Path2D path = new Path2D.Double();
-          outline(path, box.midX(), box.midY(), 1, 0, LONGEST);
-          canvas.fill(path, Palette.INK);
-        },
-        "direction of flow; longer where more flows",
-        "");
+    tubes.ifPresentOrElse(t -> explain(key, t), () -> explainArrows(key));
     key.heading("Heat flow, + into the detail");
     for (Result.SpaceResult space : result().spaces()) {
       key.row(space.name(), signed(space.heatFlowWPerM(), halfWidth(space.name())));
@@ -257,12 +262,49 @@ final class HeatFlowView extends View {
     return key;
   }
 
+  private static void explain(Key key, FlowTubes tubes) {
+    key.heading("Heat flows between the lines");
+    key.sample(HeatFlowView::drawTube, "each tube between two lines carries " + tubes.each(), "");
+    tubes.reason().ifPresent(key::note);
+    key.note("No heat crosses a line; a tube at the rim may carry less.");
+    if (tubes.seamed()) {
+      key.sample(
+          (canvas, box) ->
+              canvas.stroke(
+                  new Line2D.Double(box.x0(), box.midY(), box.x1(), box.midY()),
+                  Palette.INK,
+                  FlowTubes.SEAM),
+          "heat crosses here; only the lines do not go on",
+          "");
+    }
+  }
+
+  private static void drawTube(Canvas canvas, Box box) {
+    Path2D heads = new Path2D.Double();
+    for (double y : new double[] {box.midY() - 4, box.midY() + 4}) {
+      canvas.stroke(new Line2D.Double(box.x0(), y, box.x1(), y), Palette.INK, FlowTubes.LINE);
+      FlowTubes.head(heads, box.midX(), y, 1, 0);
+    }
+    canvas.fill(heads, Palette.INK);
+  }
+
+  private static void explainArrows(Key key) {
+    key.sample(
+        (canvas, box) -> {
+          Path2D path = new Path2D.Double();
+          outline(path, box.midX(), box.midY(), 1, 0, LONGEST);
+          canvas.fill(path, Palette.INK);
+        },
+        "direction of flow; longer where more flows",
+        "");
+  }
+
   private void scale(Canvas canvas, Box box) {
     Bands.scale(
         canvas,
         box,
         levels.stream().map(Figures::round).toList(),
         Collections.nCopies(levels.size(), false),
-        k -> Palette.flow(part(k)));
+        this::colour);
   }
 }

@@ -6,6 +6,7 @@ import static org.assertj.core.api.Assertions.within;
 import coldseam.cli.plot.Plots.Kind;
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.List;
 import java.util.Random;
 import org.junit.jupiter.api.Test;
@@ -33,6 +34,25 @@ class PlotGeometryTest {
         outer: {side: right, space: outdoors}
       """;
 
+  private static final String PIPE =
+      """
+      coldseam: 1
+      title: A pipe in a block
+      view: plan
+      materials: {stone: {conductivity: 1.0}, wood: {conductivity: 0.13}}
+      spaces:
+        pipe: {temperature: 60, film: 0.05, exposure: inside}
+        indoors: {temperature: 20, film: 0.13, exposure: inside}
+        outdoors: {temperature: -5, film: 0.04, exposure: outside}
+      section:
+        - {fill: stone, box: [0, 0, 500, 300]}
+        - {fill: wood, box: [0, 0, 100, 300]}
+        - {fill: pipe, box: [200, 100, 300, 200]}
+      stretches:
+        inner: {side: left, space: indoors}
+        outer: {side: right, space: outdoors}
+      """;
+
   @TempDir Path folder;
 
   /**
@@ -53,9 +73,11 @@ class PlotGeometryTest {
   private static Panel panel(Solved solved, Kind kind) {
     DrawnSection section = DrawnSection.of(solved.result());
     View view =
-        kind == Kind.TEMPERATURE
-            ? new TemperatureView(solved.result(), solved.caption(), section)
-            : new SectionView(solved.result(), solved.caption(), section);
+        switch (kind) {
+          case TEMPERATURE -> new TemperatureView(solved.result(), solved.caption(), section);
+          case HEAT_FLOW -> new HeatFlowView(solved.result(), solved.caption(), section);
+          default -> new SectionView(solved.result(), solved.caption(), section);
+        };
     return view.page().panel();
   }
 
@@ -150,16 +172,101 @@ class PlotGeometryTest {
     assertThat(drawn.width() / drawn.height()).isCloseTo(1.5, within(1e-3));
   }
 
+  /**
+   * 25 K / (0.1 + 0.3 + 0.1) m²·K/W · 0.2 m = 10 W/m, in 20 tubes of 0.5 W/m, each 10 mm wide at
+   * the scale of the sheet; a line is written to 0.01 points.
+   */
   @Test
-  void arrows_follow_the_heat() {
+  void tubes_of_a_plane_wall_are_of_one_width() {
     Solved solved = Solved.of(folder, WALL);
-    Element layer = Read.of(solved.svg(Kind.HEAT_FLOW)).layers("heat-flow-whole-arrows").get(0);
-    List<Polyline> arrows = Read.lines(layer);
+    Panel panel = panel(solved, Kind.HEAT_FLOW);
+    Read plot = Read.of(solved.svg(Kind.HEAT_FLOW));
+    assertThat(plot.texts().stream().map(Read.Text::words))
+        .anyMatch(text -> text.contains("0.5\u00a0W/m"));
+    double bottom = panel.on(DrawnSection.of(solved.result()).bounds()).y1();
+    List<Polyline> lines = Read.lines(plot.layers("heat-flow-whole-tubes").get(0));
+    assertThat(lines).hasSize(19);
+    lines.sort(Comparator.comparingDouble(line -> -line.y(0)));
+    for (int i = 0; i < lines.size(); i++) {
+      double place = bottom - (i + 1) * 0.01 * panel.pointsPerM();
+      Polyline line = lines.get(i);
+      assertThat(line.bounds().width()).isCloseTo(0.3 * panel.pointsPerM(), within(0.02));
+      assertThat(line.x(line.size() - 1)).as("with the heat").isGreaterThan(line.x(0));
+      assertThat(line.bounds().y0()).isCloseTo(place, within(0.02));
+      assertThat(line.bounds().y1()).isCloseTo(place, within(0.02));
+    }
+    List<Polyline> heads = Read.lines(plot.layers("heat-flow-whole-heads").get(0));
+    assertThat(heads).isNotEmpty();
+    for (Polyline head : heads) {
+      // The first point of a head is its tip, the third lies in its tail.
+      assertThat(head.x(0) - head.x(2)).isGreaterThan(5);
+      assertThat(Math.abs(head.y(0) - head.y(2))).isLessThan(0.1);
+    }
+  }
+
+  /** What flows out of the pipe is a whole number of tubes, so that no line ends in the block. */
+  @Test
+  void tubes_go_on_around_a_hole() {
+    Solved solved = Solved.of(folder, PIPE);
+    Panel panel = panel(solved, Kind.HEAT_FLOW);
+    Read plot = Read.of(solved.svg(Kind.HEAT_FLOW));
+    Box box = panel.on(DrawnSection.of(solved.result()).bounds());
+    List<double[]> inside = new ArrayList<>();
+    for (Polyline line : Read.lines(plot.layers("heat-flow-whole-tubes").get(0))) {
+      // None runs along a cut-off plane, which is no line between tubes.
+      assertThat(line.bounds().y0()).isGreaterThan(box.y0() + 1);
+      assertThat(line.bounds().y1()).isLessThan(box.y1() - 1);
+      for (int end : new int[] {0, line.size() - 1}) {
+        double x = line.x(end);
+        double y = line.y(end);
+        double pipe =
+            Math.max(
+                Math.abs(panel.localX(x) - panel.localX(box.x0()) - 0.25),
+                Math.abs(panel.localY(y) - panel.localY(box.midY())));
+        boolean free =
+            Math.min(Math.min(x - box.x0(), box.x1() - x), Math.min(y - box.y0(), box.y1() - y))
+                > 0.3;
+        if (!line.closed() && free && pipe > 0.0505) {
+          inside.add(new double[] {x, y});
+        }
+      }
+    }
+    assertThat(inside).as("ends at the jump").isNotEmpty();
+    for (double[] end : inside) {
+      assertThat(inside.stream().filter(o -> Math.hypot(o[0] - end[0], o[1] - end[1]) < 0.5))
+          .hasSize(2);
+    }
+    assertThat(plot.layers("heat-flow-whole-seams")).isEmpty();
+  }
+
+  @Test
+  void lines_that_do_not_go_on_are_said_to() {
+    String second =
+        PIPE.replace(
+                "outdoors: {",
+                "feed: {temperature: 45, film: 0.05, exposure: inside}\n  outdoors: {")
+            .replace("stretches:", "  - {fill: feed, box: [380, 60, 430, 110]}\nstretches:");
+    Read plot = Read.of(Solved.of(folder, second).svg(Kind.HEAT_FLOW));
+    assertThat(plot.layers("heat-flow-.*-seams")).isNotEmpty();
+    assertThat(plot.texts().stream().map(Read.Text::words))
+        .anyMatch(text -> text.startsWith("heat crosses here"));
+  }
+
+  @Test
+  void without_heat_there_are_no_tubes() {
+    Solved solved = Solved.of(folder, PIPE.replaceAll("temperature: -?\\d+", "temperature: 20"));
+    assertThat(Read.of(solved.svg(Kind.HEAT_FLOW)).layers("heat-flow-whole-tubes")).isEmpty();
+  }
+
+  @Test
+  void arrows_stand_in_where_there_are_no_tubes() {
+    Read plot = Read.of(Solved.shipped(COLUMN).svg(Kind.HEAT_FLOW));
+    assertThat(plot.layers("heat-flow-whole-tubes")).isEmpty();
+    List<Polyline> arrows = Read.lines(plot.layers("heat-flow-whole-arrows").get(0));
     assertThat(arrows.size()).isGreaterThan(20);
     for (Polyline arrow : arrows) {
-      // The fourth point of an arrow is its tip, the first lies at its tail.
-      assertThat(arrow.x(3) - arrow.x(0)).isGreaterThan(5);
-      assertThat(Math.abs(arrow.y(3) - arrow.y(0))).isLessThan(1);
+      // Heat flows in through the upper face only; the fourth point of an arrow is its tip.
+      assertThat(arrow.y(3) - arrow.y(0)).isGreaterThan(-0.1);
     }
   }
 

@@ -203,6 +203,11 @@ final class FieldSolution implements Solution {
     return new TemperatureField(d.mesh, nodal(d, fields, temperaturesC));
   }
 
+  @Override
+  public Optional<StreamFunction> streamFunction(double[] temperaturesC) {
+    return Optional.ofNullable(bound).map(b -> b.streamFunction(temperaturesC));
+  }
+
   /** Nodal temperatures; spaces of one temperature give exactly that temperature. */
   static double[] nodal(Discretisation d, double[][] fields, double[] temperaturesC) {
     double[] nodal = new double[d.nodeCount];

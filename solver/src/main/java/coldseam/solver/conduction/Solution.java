@@ -95,4 +95,12 @@ public interface Solution {
    * @return the field
    */
   TemperatureField temperatures(double[] temperaturesC);
+
+  /**
+   * The stream function of the heat flow for given temperatures of the spaces.
+   *
+   * @param temperaturesC temperature of every space, °C
+   * @return the function; empty where no bounds are proved, which need one
+   */
+  Optional<StreamFunction> streamFunction(double[] temperaturesC);
 }

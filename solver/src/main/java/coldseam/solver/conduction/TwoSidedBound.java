@@ -190,6 +190,18 @@ final class TwoSidedBound {
         - stream[ConjugateProblem.streamEnd(d, space, s)];
   }
 
+  /** The stream function for given temperatures; those of the spaces add up to 0. */
+  StreamFunction streamFunction(double[] temperaturesC) {
+    double[] sum = streams[d.spaces].clone();
+    for (int i = 1; i < d.spaces; i++) {
+      double difference = temperaturesC[i] - temperaturesC[0];
+      for (int n = 0; n < sum.length && difference != 0; n++) {
+        sum[n] += difference * streams[i][n];
+      }
+    }
+    return new StreamFunction(d.mesh, space.nodes, sum);
+  }
+
   /** ∫q_i·λ⁻¹q_j over a triangle. */
   double resistance(int t, int i, int j) {
     return QuadraticElement.energy(conjugate, space.nodes, t, streams[i], streams[j]);
