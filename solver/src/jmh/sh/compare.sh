@@ -29,6 +29,8 @@ classpath=$home/solver/target/test-classes:$home/solver/target/classes:$(cat "$h
 "$home/cli/coldseam" solve "$home/cases/demo/balcony.yaml" --json > "$work/case.json"
 side=$(awk -v n="$unknowns" 'BEGIN { printf "%.6f", 0.0028 * sqrt(1e6 / n) }')
 
+cd "$here" # FreeFem++ looks for what a script includes in the working directory
+
 load() { cut -d ' ' -f 1-3 /proc/loadavg; }
 cpus=$(getconf _NPROCESSORS_ONLN)
 echo "processors $cpus, load before $(load), Java heap -Xmx$heap, turns $turns"
@@ -49,7 +51,7 @@ stamp() {
 }
 
 uniform() {
-  /usr/bin/time -q -f '%M' -o "$work/time" FreeFem++ -nw -v 0 "$here/uniform.edp" -h "$side" \
+  /usr/bin/time -q -f '%M' -o "$work/time" FreeFem++ -nw -v 0 uniform.edp -h "$side" \
     | stamp > "$work/stamped"
   awk 'NR == FNR { memory = $1 / 1024; next }
     $2 == "meshed" { from = $1 } $2 == "solved" { to = $1 }
@@ -73,13 +75,13 @@ turn=1
 while [ "$turn" -le "$turns" ]; do
   uniform
   certified
-  whole p1 FreeFem++ -nw -v 0 "$here/adaptive-p1.edp" -L2D "$known"
+  whole p1 FreeFem++ -nw -v 0 adaptive-p1.edp -L2D "$known"
   tail -n 1 "$work/out" > "$work/p1-said"
-  whole p2 FreeFem++ -nw -v 0 "$here/adaptive-p2.edp" -L2D "$known"
+  whole p2 FreeFem++ -nw -v 0 adaptive-p2.edp -L2D "$known"
   tail -n 1 "$work/out" > "$work/p2-said"
-  whole p1u FreeFem++ -nw -v 0 "$here/adaptive-p1.edp"
+  whole p1u FreeFem++ -nw -v 0 adaptive-p1.edp
   tail -n 1 "$work/out" > "$work/p1u-said"
-  whole p2u FreeFem++ -nw -v 0 "$here/adaptive-p2.edp"
+  whole p2u FreeFem++ -nw -v 0 adaptive-p2.edp
   tail -n 1 "$work/out" > "$work/p2u-said"
   whole case "$home/cli/coldseam" solve "$home/cases/demo/balcony.yaml" --json
   turn=$((turn + 1))
