@@ -26,6 +26,9 @@ public final class SolveAndCertify {
       start = System.nanoTime();
       long startCpu = cpu();
       TwoSidedBound bound = certify(balcony);
+      if (!(bound.mismatch() <= bound.allowance)) {
+        throw new IllegalStateException("the gap's two ways disagree by " + bound.mismatch());
+      }
       double tookS = (System.nanoTime() - start) / 1e9;
       double cpuS = (cpu() - startCpu) / 1e9;
       System.out.printf(

@@ -114,10 +114,15 @@ final class TwoSidedBound {
   }
 
   private double upper(int i, int j) {
-    double sum = 0;
-    for (int t = 0; t < d.mesh.triangleCount(); t++) {
-      sum += QuadraticElement.energy(d.couplings, d.nodes, t, fields[i], fields[j]);
-    }
+    double sum =
+        TriangleSums.of(
+            d.mesh.triangleCount(),
+            1,
+            (from, to, sums) -> {
+              for (int t = from; t < to; t++) {
+                sums[0] += QuadraticElement.energy(d.couplings, d.nodes, t, fields[i], fields[j]);
+              }
+            })[0];
     Outline o = d.outline;
     for (int s = 0; s < o.count; s++) {
       if (o.kind[s] == Conditions.Kind.FILM) {
@@ -132,10 +137,15 @@ final class TwoSidedBound {
   }
 
   private double lower(int i, int j) {
-    double sum = 0;
-    for (int t = 0; t < d.mesh.triangleCount(); t++) {
-      sum -= resistance(t, i, j);
-    }
+    double sum =
+        TriangleSums.of(
+            d.mesh.triangleCount(),
+            1,
+            (from, to, sums) -> {
+              for (int t = from; t < to; t++) {
+                sums[0] -= resistance(t, i, j);
+              }
+            })[0];
     Outline o = d.outline;
     for (int s = 0; s < o.count; s++) {
       if (o.kind[s] == Conditions.Kind.FILM) {
@@ -232,19 +242,13 @@ final class TwoSidedBound {
 
   /** The gap from what q and −λ∇u differ by, triangle by triangle. */
   private void gaps(int used) {
-    double[][] misfit = new double[used][9];
-    for (int t = 0; t < d.mesh.triangleCount(); t++) {
-      for (int f = 0; f < used; f++) {
-        misfit(t, f, misfit[f]);
-      }
-      for (int i = 0; i < used; i++) {
-        for (int j = i; j < used; j++) {
-          double sum = 0;
-          for (int m = 0; m < 9; m++) {
-            sum -= d.couplings[3 * t + m % 3] * misfit[i][m] * misfit[j][m];
-          }
-          count(t, i, j, sum / 3);
-        }
+    double[] sums =
+        TriangleSums.of(
+            d.mesh.triangleCount(), used * used, (from, to, part) -> gaps(from, to, used, part));
+    for (int i = 0; i < used; i++) {
+      for (int j = i; j < used; j++) {
+        gap[i][j] = sums[used * i + j];
+        gap[j][i] = gap[i][j];
       }
     }
     Outline o = d.outline;
@@ -259,6 +263,27 @@ final class TwoSidedBound {
       for (int i = 0; i < used; i++) {
         for (int j = i; j < used; j++) {
           count(o.triangle[s], i, j, product(s, film[i], film[j]));
+        }
+      }
+    }
+  }
+
+  private void gaps(int from, int to, int used, double[] sums) {
+    double[][] misfit = new double[used][9];
+    for (int t = from; t < to; t++) {
+      for (int f = 0; f < used; f++) {
+        misfit(t, f, misfit[f]);
+      }
+      for (int i = 0; i < used; i++) {
+        for (int j = i; j < used; j++) {
+          double sum = 0;
+          for (int m = 0; m < 9; m++) {
+            sum -= d.couplings[3 * t + m % 3] * misfit[i][m] * misfit[j][m];
+          }
+          sums[used * i + j] += sum / 3;
+          if (i == j) {
+            local[i][t] = sum / 3;
+          }
         }
       }
     }
