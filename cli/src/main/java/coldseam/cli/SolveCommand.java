@@ -232,9 +232,11 @@ final class SolveCommand implements Command {
     if (Sheet.accurateEnough(job.subject(), result)) {
       return ExitCode.DONE;
     }
-    here.err()
-        .println(
-            here.errInk().alert(job.subject().file() + ": the accuracy asked for was not reached"));
+    String which = job.subject().file() + job.subject().variant().map(v -> ", " + v).orElse("");
+    here.err().println(here.errInk().alert(which + ": the accuracy asked for was not reached"));
+    for (String line : Sheet.accuracyMissed(job.subject(), result)) {
+      here.err().println("  " + line);
+    }
     return ExitCode.ACCURACY;
   }
 

@@ -124,7 +124,10 @@ class ExitCodeTest {
             "--most-unknowns",
             "500");
     assertThat(ran.code()).as(ran.err()).isEqualTo(3);
-    assertThat(ran.err()).contains("accuracy asked for was not reached");
+    assertThat(ran.err())
+        .contains("corner.yaml: the accuracy asked for was not reached")
+        .containsPattern("L2D \\S+ – \\S+: asked ± \\S+, reached ± \\S+ W/\\(m·K\\)")
+        .contains("--most-unknowns");
     assertThat(ran.out()).contains("\"reached\":false");
     assertThat(Ran.in(dir, "solve", "corner.yaml", "--json").code()).isZero();
   }

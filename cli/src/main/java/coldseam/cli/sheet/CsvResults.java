@@ -2,6 +2,7 @@ package coldseam.cli.sheet;
 
 import coldseam.solver.conduction.Certificate;
 import coldseam.solver.conduction.Quantity;
+import coldseam.solver.detail.FilmSet;
 import coldseam.solver.result.Result;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -73,6 +74,7 @@ final class CsvResults {
     spaces();
     for (Result.StretchResult stretch : result.stretches()) {
       row("stretch", stretch.name())
+          .word("filmSet", Words.name(FilmSet.HEAT_LOSS))
           .word("between", stretch.space())
           .number("heatFlow_W_per_m", stretch.heatFlowWPerM())
           .number("length_m", stretch.lengthM())
@@ -108,17 +110,22 @@ final class CsvResults {
     }
     for (Result.Share share : result.shares().parts()) {
       row("share", share.of())
+          .word("filmSet", Words.name(FilmSet.HEAT_LOSS))
           .word("between", result.shares().referTo())
           .number("share", share.share())
           .end();
     }
-    row("balance", "").number("heatFlow_W_per_m", result.balance().sumWPerM()).end();
+    row("balance", "")
+        .word("filmSet", Words.name(FilmSet.HEAT_LOSS))
+        .number("heatFlow_W_per_m", result.balance().sumWPerM())
+        .end();
     return text.toString();
   }
 
   private void couplings() {
     for (Result.Coupling coupling : result.couplings()) {
       row("coupling", "")
+          .word("filmSet", Words.name(FilmSet.HEAT_LOSS))
           .word("between", coupling.from() + " – " + coupling.to())
           .quantity(coupling.valueWPerMK(), "W_per_mK")
           .tolerance(coupling.tolerance(), "W_per_mK")
@@ -129,6 +136,7 @@ final class CsvResults {
   private void psi() {
     for (Result.LinearTransmittance psi : result.psi()) {
       row("psi", psi.name())
+          .word("filmSet", Words.name(FilmSet.HEAT_LOSS))
           .word("between", Words.between(psi.warm(), psi.cold()))
           .word("dimensions", Words.name(psi.dimensions()))
           .quantity(psi.valueWPerMK(), "W_per_mK")
@@ -137,6 +145,7 @@ final class CsvResults {
       for (Result.Subtracted term : psi.subtracted()) {
         Row row =
             row("subtracted", term.name())
+                .word("filmSet", Words.name(FilmSet.HEAT_LOSS))
                 .word("between", psi.name())
                 .number("value_W_per_mK", term.valueWPerMK().mid())
                 .number("lower_W_per_mK", term.valueWPerMK().lower())
@@ -147,6 +156,7 @@ final class CsvResults {
       }
       for (Result.Sensitivity sensitivity : psi.sensitivities()) {
         row("sensitivity", sensitivity.of())
+            .word("filmSet", Words.name(FilmSet.HEAT_LOSS))
             .word("between", psi.name())
             .number("changePer10Percent_W_per_mK", ShareSection.RISE * sensitivity.slope())
             .end();
@@ -157,12 +167,14 @@ final class CsvResults {
   private void transmittances() {
     for (Result.EffectiveTransmittance u : result.transmittances()) {
       row("U", u.of())
+          .word("filmSet", Words.name(FilmSet.HEAT_LOSS))
           .word("between", Words.between(u.warm(), u.cold()))
           .quantity(u.valueWPerM2K(), "W_per_m2K")
           .tolerance(u.tolerance(), "W_per_m2K")
           .number("length_m", u.widthM())
           .end();
       row("R", u.of())
+          .word("filmSet", Words.name(FilmSet.HEAT_LOSS))
           .word("between", Words.between(u.warm(), u.cold()))
           .quantity(u.resistanceM2KPerW(), "m2K_per_W")
           .end();
@@ -172,6 +184,7 @@ final class CsvResults {
   private void spaces() {
     for (Result.SpaceResult space : result.spaces()) {
       row("space", space.name())
+          .word("filmSet", Words.name(FilmSet.HEAT_LOSS))
           .number("temperature_C", space.temperatureC())
           .number("heatFlow_W_per_m", space.heatFlowWPerM())
           .end();

@@ -9,6 +9,9 @@ import coldseam.solver.result.Result;
 record FlowSection(Result result, Units units, Ink ink) {
   private static final int MOST_DECIMALS = 3;
 
+  /** A balance that is off by less than this part of what flows is off by rounding alone. */
+  private static final double ROUNDING = 1e-9;
+
   void write(StringBuilder text) {
     TextCard.heading(
         text, ink, "Heat flow", "W/m, positive into the detail; ± estimated; films for heat loss");
@@ -41,8 +44,14 @@ record FlowSection(Result result, Units units, Ink ink) {
         "",
         Digits.fixed(result.balance().sumWPerM(), 2),
         "",
-        ink.faint(Digits.magnitude(Math.abs(result.balance().relative())) + " of what flows"));
+        ink.faint(balance(Math.abs(result.balance().relative()))));
     text.append(table.text());
+  }
+
+  private static String balance(double relative) {
+    return relative <= ROUNDING
+        ? "what flows in flows out"
+        : "in and out differ by " + Digits.magnitude(relative) + " of what flows";
   }
 
   private void row(

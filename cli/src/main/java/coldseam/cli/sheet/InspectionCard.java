@@ -37,7 +37,7 @@ final class InspectionCard {
     outline();
     TextCard.flanks(text, inspection.flanks(), ink);
     wanted();
-    TextCard.assumptions(text, inspection.assumptions(), ink);
+    TextCard.assumptions(text, inspection.assumptions(), List.of(), ink);
     TextCard.warnings(text, inspection.warnings(), ink);
     return text.toString();
   }

@@ -6,6 +6,7 @@ import coldseam.solver.conduction.Quantity;
 import coldseam.solver.detail.Assumption;
 import coldseam.solver.detail.Bracket;
 import coldseam.solver.detail.DimensionSystem;
+import coldseam.solver.detail.FilmSet;
 import coldseam.solver.result.Result;
 import java.util.List;
 import java.util.Map;
@@ -98,7 +99,9 @@ record JsonResults(Subject subject, Result result) {
   private static void couplings(Json json, String name, List<Result.Coupling> couplings) {
     json.array(name);
     for (Result.Coupling coupling : couplings) {
-      json.object().member("between", List.of(coupling.from(), coupling.to()));
+      json.object()
+          .member("between", List.of(coupling.from(), coupling.to()))
+          .member("filmSet", Words.name(FilmSet.HEAT_LOSS));
       quantity(json, coupling.valueWPerMK(), "W_per_mK");
       tolerance(json, coupling.tolerance(), "W_per_mK");
       json.endObject();
@@ -164,7 +167,8 @@ record JsonResults(Subject subject, Result result) {
           .member("name", psi.name())
           .member("of", psi.of())
           .member("between", List.of(Words.spaces(psi.warm()), Words.spaces(psi.cold())))
-          .member("dimensions", Words.name(psi.dimensions()));
+          .member("dimensions", Words.name(psi.dimensions()))
+          .member("filmSet", Words.name(FilmSet.HEAT_LOSS));
       quantity(json, psi.valueWPerMK(), "W_per_mK");
       tolerance(json, psi.tolerance(), "W_per_mK");
       json.object("coupling");
@@ -235,7 +239,8 @@ record JsonResults(Subject subject, Result result) {
 
   private static void transmittance(Json json, Result.EffectiveTransmittance u) {
     json.member("between", List.of(Words.spaces(u.warm()), Words.spaces(u.cold())))
-        .member("of", u.of());
+        .member("of", u.of())
+        .member("filmSet", Words.name(FilmSet.HEAT_LOSS));
     quantity(json, u.valueWPerM2K(), "W_per_m2K");
     tolerance(json, u.tolerance(), "W_per_m2K");
     json.member("width_m", u.widthM());
@@ -251,6 +256,7 @@ record JsonResults(Subject subject, Result result) {
           .member("name", space.name())
           .member("temperature_C", space.temperatureC())
           .member("floats", space.floating())
+          .member("filmSet", Words.name(FilmSet.HEAT_LOSS))
           .member("heatFlow_W_per_m", space.heatFlowWPerM());
       if (!Double.isFinite(space.heatFlowWPerM())) {
         json.member("note", "infinite: two fixed temperatures meet");
@@ -298,7 +304,8 @@ record JsonResults(Subject subject, Result result) {
       } else {
         json.member("space", stretch.space());
       }
-      json.member("heatFlow_W_per_m", stretch.heatFlowWPerM())
+      json.member("filmSet", Words.name(FilmSet.HEAT_LOSS))
+          .member("heatFlow_W_per_m", stretch.heatFlowWPerM())
           .member("length_m", stretch.lengthM())
           .endObject();
     }

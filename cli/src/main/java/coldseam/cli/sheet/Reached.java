@@ -1,8 +1,13 @@
 package coldseam.cli.sheet;
 
+import coldseam.cli.text.Digits;
 import coldseam.solver.conduction.Quantity;
 import coldseam.solver.detail.Accuracy;
 import coldseam.solver.result.Result;
+import java.util.ArrayList;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Set;
 
 /**
  * Tells whether the half-widths asked for were reached.
@@ -13,27 +18,91 @@ record Reached(Accuracy asked) {
   /** Half-widths that exceed what was asked by rounding alone count as reached. */
   private static final double ROUNDING = 1 + 1e-9;
 
+  private static final int MOST_DECIMALS = 12;
+
+  /**
+   * A number that is not known as well as was asked.
+   *
+   * @param what its name
+   * @param asked the half-width asked for
+   * @param reached the half-width reached
+   * @param unit of both
+   * @param option how the half-width is asked for
+   */
+  record Missed(String what, double asked, double reached, String unit, String option) {
+    /** In words, with the half-width reached rounded up and the one asked for as it counts. */
+    String inWords() {
+      return what
+          + ": asked ± "
+          + Digits.significant(asked, 3)
+          + ", reached ± "
+          + (Double.isFinite(reached) ? Digits.outward(reached, 2, MOST_DECIMALS) : "?")
+          + " "
+          + unit;
+    }
+  }
+
   boolean by(Result result) {
+    return missed(result).isEmpty();
+  }
+
+  /** Every number that is not known as well as was asked, in the order of the card. */
+  List<Missed> missed(Result result) {
+    List<Missed> missed = new ArrayList<>();
     for (Result.LinearTransmittance psi : result.psi()) {
-      if (exceeds(psi.valueWPerMK(), asked.psiWPerMK() + stated(psi))) {
-        return false;
-      }
+      double allowed = asked.psiWPerMK() + stated(psi);
+      note(missed, "ψ " + psi.name(), psi.valueWPerMK(), allowed, "W/(m·K)", "psi");
     }
     for (Result.EffectiveTransmittance u : result.transmittances()) {
       double allowed =
           Math.max(
               asked.transmittanceRelative() * Math.abs(u.valueWPerM2K().value()),
               asked.negligibleWPerMK() / u.widthM());
-      if (exceeds(u.valueWPerM2K(), allowed)) {
-        return false;
-      }
+      note(missed, "U " + u.of(), u.valueWPerM2K(), allowed, "W/(m²·K)", "U");
     }
     for (Result.Coupling coupling : result.couplings()) {
-      if (exceeds(coupling.valueWPerMK(), allowed(coupling, result))) {
-        return false;
-      }
+      String what = "L2D " + coupling.from() + " – " + coupling.to();
+      note(missed, what, coupling.valueWPerMK(), allowed(coupling, result), "W/(m·K)", "L2D");
     }
-    return true;
+    return missed;
+  }
+
+  private static void note(
+      List<Missed> missed,
+      String what,
+      Quantity quantity,
+      double allowed,
+      String unit,
+      String option) {
+    if (exceeds(quantity, allowed)) {
+      missed.add(new Missed(what, allowed, quantity.halfWidth(), unit, option));
+    }
+  }
+
+  /**
+   * What was not reached and what can be done about it, a line each.
+   *
+   * @param result the result
+   * @return the lines; none if everything was reached
+   */
+  List<String> inWords(Result result) {
+    List<String> lines = new ArrayList<>();
+    Set<String> options = new LinkedHashSet<>();
+    for (Missed missed : missed(result)) {
+      lines.add(missed.inWords());
+      options.add(missed.option());
+    }
+    if (!lines.isEmpty()) {
+      lines.add(
+          "refinement stopped at "
+              + Digits.grouped(result.unknowns())
+              + " unknowns, with "
+              + Digits.grouped(asked.mostUnknowns())
+              + " allowed: allow more with --most-unknowns, or ask for a coarser accuracy of "
+              + String.join(", ", options)
+              + " with --accuracy");
+    }
+    return lines;
   }
 
   /** What is uncertain of a ψ before anything is solved: U given or known only as a range. */

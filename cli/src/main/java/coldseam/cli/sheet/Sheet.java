@@ -4,6 +4,7 @@ import coldseam.cli.text.Ink;
 import coldseam.solver.Solver;
 import coldseam.solver.detail.Detail;
 import coldseam.solver.result.Result;
+import java.util.List;
 
 /** Writes a result for people and for machines, and what is understood of a case before solving. */
 public final class Sheet {
@@ -83,5 +84,17 @@ public final class Sheet {
    */
   public static boolean accurateEnough(Subject subject, Result result) {
     return new Reached(subject.accuracy()).by(result);
+  }
+
+  /**
+   * Which numbers are not as near to the exact ones as was asked for, with the half-widths asked
+   * and reached, and what can be done about it.
+   *
+   * @param subject what was asked
+   * @param result the result
+   * @return lines without line feeds; none if everything was reached
+   */
+  public static List<String> accuracyMissed(Subject subject, Result result) {
+    return new Reached(subject.accuracy()).inWords(result);
   }
 }

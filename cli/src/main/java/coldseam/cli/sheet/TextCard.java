@@ -45,7 +45,7 @@ final class TextCard {
     new ShareSection(result, units, ink).write(text);
     new SurfaceSection(result, units, ink).write(text);
     flanks(text, result.flanks(), ink);
-    assumptions(text, result.assumptions(), ink);
+    assumptions(text, result.assumptions(), names(result.flanks()), ink);
     warnings(text, result.warnings(), ink);
     foot();
     return text.toString();
@@ -191,6 +191,19 @@ final class TextCard {
           why);
     }
     tolerances();
+    missed();
+  }
+
+  /** Which numbers are not as near as was asked, and the remedy. */
+  private void missed() {
+    List<String> lines = new Reached(subject.accuracy()).inWords(result);
+    if (lines.isEmpty()) {
+      return;
+    }
+    text.append("  ").append(ink.alert("Accuracy not reached")).append('\n');
+    for (String line : lines) {
+      text.append("    ! ").append(Table.wrapped(line, PAGE - 6, "      ")).append('\n');
+    }
   }
 
   /** What a second ± means. */
@@ -231,7 +244,7 @@ final class TextCard {
       int guarded = Math.max(0, Math.min(4, Digits.decimals(psi.valueWPerMK().halfWidth()) + 1));
       Table table = new Table("lrl", 2, PAGE);
       table.row(
-          "L2D " + Words.between(psi.warm(), psi.cold()),
+          coupling(psi),
           Digits.fixed(psi.couplingWPerMK().value(), guarded),
           ink.faint(parts(psi)));
       for (Result.Subtracted term : psi.subtracted()) {
@@ -246,21 +259,40 @@ final class TextCard {
     }
   }
 
-  private static String parts(Result.LinearTransmittance psi) {
+  /** What a ψ starts from: one L2D, or several of them added up. */
+  private static String coupling(Result.LinearTransmittance psi) {
+    return psi.parts().size() < 2
+        ? "L2D " + Words.between(psi.warm(), psi.cold())
+        : "sum of L2D, as it counts";
+  }
+
+  /** The sum in figures, {@code 0.2926 + 0.48 × 0.8239}, then which L2D they are. */
+  private String parts(Result.LinearTransmittance psi) {
     if (psi.parts().size() < 2) {
       return "";
     }
-    StringBuilder parts = new StringBuilder();
+    List<String> terms = new ArrayList<>();
+    List<String> pairs = new ArrayList<>();
     for (Result.Coupling part : psi.parts()) {
-      parts
-          .append(parts.length() == 0 ? "" : ", ")
-          .append(part.from())
-          .append(" – ")
-          .append(part.to())
-          .append(' ')
-          .append(Digits.fixed(part.valueWPerMK().value(), 4));
+      double counted = part.valueWPerMK().value();
+      double whole = whole(part);
+      String weight = counted == whole ? "1" : Digits.shortest(counted / whole, 4);
+      terms.add((weight.equals("1") ? "" : weight + " × ") + Digits.fixed(whole, 4));
+      pairs.add((weight.equals("1") ? "" : "b × ") + part.from() + " – " + part.to());
     }
-    return parts.toString();
+    return String.join(" + ", terms) + ": " + String.join(" + ", pairs);
+  }
+
+  /** A coupling before its factor b; as it counts if it is 0 or stands nowhere else. */
+  private double whole(Result.Coupling part) {
+    for (Result.Coupling coupling : result.couplings()) {
+      Set<String> pair = Set.of(coupling.from(), coupling.to());
+      double value = coupling.valueWPerMK().value();
+      if (pair.equals(Set.of(part.from(), part.to())) && value != 0 && Double.isFinite(value)) {
+        return value;
+      }
+    }
+    return part.valueWPerMK().value();
   }
 
   private static String derivation(Result.Subtracted term) {
@@ -318,22 +350,45 @@ final class TextCard {
     text.append(table.text());
   }
 
-  static void assumptions(StringBuilder text, List<Assumption> assumptions, Ink ink) {
+  private static List<String> names(List<Result.FlankResult> flanks) {
+    return flanks.stream().map(Result.FlankResult::name).toList();
+  }
+
+  /**
+   * What was assumed, under its source.
+   *
+   * @param shown flanks whose layers and lengths are on the sheet already: only where they come
+   *     from is said of them
+   */
+  static void assumptions(
+      StringBuilder text, List<Assumption> assumptions, List<String> shown, Ink ink) {
     if (assumptions.isEmpty()) {
       return;
     }
     heading(text, ink, "Assumed", "");
-    Map<String, List<Assumption>> bySource = new LinkedHashMap<>();
+    Map<String, Set<String>> bySource = new LinkedHashMap<>();
     for (Assumption assumption : assumptions) {
-      bySource.computeIfAbsent(assumption.source(), s -> new ArrayList<>()).add(assumption);
+      bySource
+          .computeIfAbsent(assumption.source(), s -> new LinkedHashSet<>())
+          .add(line(assumption, shown));
     }
-    for (Map.Entry<String, List<Assumption>> source : bySource.entrySet()) {
+    for (Map.Entry<String, Set<String>> source : bySource.entrySet()) {
       text.append("  ").append(ink.faint(source.getKey())).append('\n');
-      for (Assumption assumption : source.getValue()) {
-        String line = assumption.what() + ": " + assumption.value();
+      for (String line : source.getValue()) {
         text.append("    ").append(Table.wrapped(line, PAGE - 4, "      ")).append('\n');
       }
     }
+  }
+
+  private static String line(Assumption assumption, List<String> shown) {
+    for (String flank : shown) {
+      String end = " of flank '" + flank + "'";
+      if (assumption.what().endsWith(end)) {
+        int stem = assumption.what().length() - end.length();
+        return assumption.what().substring(0, stem) + " of flanks, as above";
+      }
+    }
+    return assumption.what() + ": " + assumption.value();
   }
 
   static void warnings(StringBuilder text, List<String> warnings, Ink ink) {
@@ -351,6 +406,8 @@ final class TextCard {
     for (double ms : result.timesMs().values()) {
       seconds += ms / 1000;
     }
+    double movedMm = result.largestDisplacementM() * 1000;
+    String moved = movedMm > 0 ? Digits.shortest(movedMm, 6) : "0";
     String films = result.surface().isPresent() ? " (films for heat loss)" : "";
     text.append('\n')
         .append(
@@ -360,13 +417,14 @@ final class TextCard {
                     + Digits.grouped(result.unknowns())
                     + " unknowns"
                     + films
-                    + ", drawing moved by at most "
-                    + Digits.shortest(result.largestDisplacementM() * 1000, 6)
-                    + " mm, "
+                    + (moved.equals("0") ? "" : ", drawing moved by at most " + moved + " mm")
+                    + ", "
                     + Digits.significant(seconds, 2)
                     + " s"))
         .append('\n')
         .append(ink.faint(Table.wrapped(Words.SAFETY, PAGE, "")))
+        .append('\n')
+        .append(ink.faint("Coldseam " + subject.version()))
         .append('\n');
   }
 

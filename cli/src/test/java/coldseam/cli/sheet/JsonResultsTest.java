@@ -50,6 +50,23 @@ class JsonResultsTest {
   }
 
   @Test
+  void every_figure_says_its_films() throws Exception {
+    JsonNode json = JACKSON.readTree(Sheet.json(Samples.subject(), Samples.estimated(), false));
+    for (String of : List.of("coupling", "psi", "spaces", "stretches")) {
+      assertThat(json.get(of)).as(of).isNotEmpty();
+      for (JsonNode each : json.get(of)) {
+        assertThat(each.get("filmSet").textValue()).as(of).isEqualTo("heat-loss");
+      }
+    }
+    assertThat(json.get("U").get("filmSet").textValue()).isEqualTo("heat-loss");
+    List<String> lines = Sheet.csv(Samples.subject(), Samples.estimated()).lines().toList();
+    int at = List.of(lines.get(0).split(",")).indexOf("filmSet");
+    for (String line : lines.subList(1, lines.size())) {
+      assertThat(line.split(",", -1)[at]).as(line).isIn("heat-loss", "surface");
+    }
+  }
+
+  @Test
   void estimates_have_no_bounds() throws Exception {
     JsonNode json = JACKSON.readTree(Sheet.json(Samples.subject(), Samples.estimated(), false));
     JsonNode coupling = json.get("coupling").get(0);

@@ -5,6 +5,7 @@ import static org.assertj.core.data.Offset.offset;
 
 import coldseam.cli.text.Ink;
 import coldseam.solver.detail.Accuracy;
+import java.util.Optional;
 import org.junit.jupiter.api.Test;
 
 class TextCardTest {
@@ -148,5 +149,38 @@ class TextCardTest {
     }
     assertThat(new Reached(new Accuracy(0.00033, 0.00041, 0.00043, 0.00048, 100)))
         .matches(reached -> reached.by(Samples.estimated()));
+  }
+
+  /** 0.0004 of 1.23456 was reached; 0.01 % of it, 0.000123, was asked for. */
+  @Test
+  void an_accuracy_not_reached_says_which_number_and_what_to_do() {
+    Subject asked =
+        new Subject(
+            "Slab edge",
+            "cases/slab.yaml",
+            Optional.empty(),
+            "mm",
+            0.001,
+            new Accuracy(0.0001, 1, 0.0003, 0.002, 6000),
+            "0.1.0");
+    assertThat(Sheet.card(asked, Samples.estimated(), Ink.NONE))
+        .contains(
+            """
+              Accuracy not reached
+                ! ψ external: asked ± 0.000350, reached ± 0.00042 W/(m·K)
+                ! L2D indoors – outdoors: asked ± 0.000123, reached ± 0.00040 W/(m·K)
+            """)
+        .containsIgnoringWhitespaces(
+            "refinement stopped at 5,678 unknowns, with 6,000 allowed: allow more with"
+                + " --most-unknowns, or ask for a coarser accuracy of psi, L2D with --accuracy");
+    assertThat(card()).doesNotContain("not reached");
+    assertThat(Sheet.accuracyMissed(Samples.subject(), Samples.estimated())).isEmpty();
+  }
+
+  @Test
+  void the_card_ends_with_the_version_and_says_what_flows_in_flows_out() {
+    assertThat(card())
+        .endsWith("\nColdseam 0.1.0\n")
+        .containsPattern("balance +0\\.00 +what flows in flows out\n");
   }
 }
