@@ -38,22 +38,61 @@ final class Fields {
       return;
     }
     this.broken = false;
+    Node.Entry before = null;
     for (Node.Entry entry : mapping.entries()) {
       String key = entry.key().text();
-      if (!known.contains(key)) {
+      if (decimalComma(problems, before, entry)) {
+        reported.add(before.key().text());
+      } else if (!known.contains(key)) {
         problems.add(
             entry.key(),
             what + " has no key `" + Node.shortened(key) + "`",
             Problems.suggestion(key, known));
-        reported.add(nearest(key, known));
+        reported.add(nearest(key, known).orElse(""));
       } else {
         addUnlessRepeatedOrEmpty(problems, entry, entries, reported);
       }
+      before = entry;
     }
   }
 
-  private static String nearest(String key, List<String> known) {
-    return Spelling.nearest(key, known).orElse("");
+  /**
+   * Reports a number with a decimal comma between braces, where the comma begins a key: {@code
+   * {conductivity: 0,5}} has a key {@code 5} without a value.
+   */
+  private static boolean decimalComma(Problems problems, Node.Entry before, Node.Entry entry) {
+    String after = entry.key().text();
+    boolean bare =
+        entry.value() instanceof Node.Scalar value
+            && value.empty()
+            && value.style() == Node.Style.PLAIN
+            && PlainNumber.digits(after, 0) > 0;
+    if (!bare || before == null || !(before.value() instanceof Node.Scalar whole)) {
+      return false;
+    }
+    String number = whole.text();
+    int sign = number.startsWith("-") || number.startsWith("+") ? 1 : 0;
+    if (number.length() == sign || PlainNumber.digits(number, sign) < number.length()) {
+      return false;
+    }
+    problems.add(
+        whole,
+        "`"
+            + Node.shortened(before.key().text())
+            + "` has a decimal comma: `"
+            + Node.shortened(number + "," + after)
+            + "`",
+        "write " + Node.shortened(number + "." + after) + " with a point");
+    return true;
+  }
+
+  private static Optional<String> nearest(String key, List<String> known) {
+    return Spelling.nearest(key, known);
+  }
+
+  /** The word that a longer one begins with, such as in for inch; a single letter says nothing. */
+  private static Optional<String> begun(String typed, List<String> words) {
+    return words.stream().filter(w -> w.length() > 1 && typed.startsWith(w)).findFirst();
   }
 
   private static void addUnlessRepeatedOrEmpty(
@@ -95,7 +134,13 @@ final class Fields {
       return List.of();
     }
     Map<String, Node.Entry> entries = new LinkedHashMap<>();
+    Node.Entry before = null;
     for (Node.Entry entry : mapping.entries()) {
+      if (decimalComma(problems, before, entry)) {
+        before = entry;
+        continue;
+      }
+      before = entry;
       if (entry.key().text().isBlank()) {
         problems.add(entry.key(), what + " has an entry without a name", "write `name: …`");
       } else {
@@ -103,6 +148,35 @@ final class Fields {
       }
     }
     return List.copyOf(entries.values());
+  }
+
+  /**
+   * The entries of a mapping whose keys are names of the user's own and whose values have keys
+   * themselves; a forgotten name is reported, once.
+   *
+   * @param problems told what is wrong
+   * @param what how messages call the mapping, e.g. "`psi`"
+   * @param node the mapping; anything else is reported
+   * @param known the keys that each value may have
+   * @param one how messages call one of them, e.g. "a ψ"
+   * @param name a name for an example
+   * @return the entries without repeated, blank and empty ones; none if the name was forgotten
+   */
+  static List<Node.Entry> named(
+      Problems problems, String what, Node node, List<String> known, String one, String name) {
+    if (node instanceof Node.Mapping mapping) {
+      for (Node.Entry entry : mapping.entries()) {
+        String key = entry.key().text();
+        if (known.contains(key) && !(entry.value() instanceof Node.Mapping)) {
+          problems.add(
+              entry.key(),
+              one + " needs a name before its `" + key + "`",
+              "write " + what.replace("`", "") + ": {" + name + ": {" + key + ": …}}");
+          return List.of();
+        }
+      }
+    }
+    return named(problems, what, node);
   }
 
   private Fields(Fields other, Problems problems) {
@@ -217,7 +291,10 @@ final class Fields {
     problems.add(
         value.get(),
         "`" + key + "` is " + orList(words) + ", not " + Node.describe(value.get()),
-        typed.isEmpty() ? "" : Problems.suggestion(typed, words));
+        nearest(typed, words)
+            .or(() -> begun(typed, words))
+            .map(near -> "did you mean `" + near + "`?")
+            .orElse(""));
     return Optional.empty();
   }
 

@@ -45,7 +45,7 @@ final class FlankReader {
    */
   void read(Node node, List<Area> areas) {
     Sidelines sidelines = new Sidelines(problems, areas);
-    for (Node.Entry entry : Fields.named(problems, "`flanks`", node)) {
+    for (Node.Entry entry : Fields.named(problems, "`flanks`", node, KEYS, "a flank", "wall")) {
       String name = entry.key().text();
       names.add(name);
       pass.place("flank", name, entry.key());

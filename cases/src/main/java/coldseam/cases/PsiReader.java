@@ -42,7 +42,7 @@ final class PsiReader {
    */
   List<Wanted> read(Node node) {
     List<Wanted> wanted = new ArrayList<>();
-    for (Node.Entry entry : Fields.named(problems, "`psi`", node)) {
+    for (Node.Entry entry : Fields.named(problems, "`psi`", node, KEYS, "a ψ", "external")) {
       pass.place("psi", entry.key().text(), entry.key());
       Optional<Wanted.Psi> psi = psi(entry.key(), entry.value());
       if (psi.isPresent()) {

@@ -57,7 +57,8 @@ final class StretchReader {
    */
   void read(Node node, List<Area> areas, Map<String, ?> materials) {
     Sidelines sidelines = new Sidelines(problems, areas);
-    for (Node.Entry entry : Fields.named(problems, "`stretches`", node)) {
+    for (Node.Entry entry :
+        Fields.named(problems, "`stretches`", node, KEYS, "a stretch", "face")) {
       String name = entry.key().text();
       names.add(name);
       pass.place("stretch", name, entry.key());

@@ -333,4 +333,35 @@ class MessageTest {
     assertThat(problems.get(Problems.MOST_LISTED))
         .isEqualTo("112:33: and 400 more mistakes from here on; mend those above first");
   }
+
+  @Test
+  void a_decimal_comma_is_called_one() {
+    says(
+        WALL.replace("conductivity: 0.5", "conductivity: 0,5, tolerance: 10 %")
+            + "values: {depth: -0,16 m, other: 2}\n",
+        "4:27: `conductivity` has a decimal comma: `0,5`; write 0.5 with a point",
+        "12:17: `depth` has a decimal comma: `-0,16 m`; write -0.16 m with a point");
+  }
+
+  @Test
+  void a_forgotten_name_is_asked_for() {
+    says(
+        WALL
+            + """
+            psi: {between: [indoors, outdoors], dimensions: external}
+            flanks: {cut: top}
+            stretches: {side: left, space: indoors}
+            """,
+        "12:7: a ψ needs a name before its `between`; write psi: {external: {between: …}}",
+        "13:10: a flank needs a name before its `cut`; write flanks: {wall: {cut: …}}",
+        "14:13: a stretch needs a name before its `side`; write stretches: {face: {side: …}}");
+  }
+
+  @Test
+  void a_few_words_are_listed_once() {
+    says(
+        WALL + "unit: inch\n",
+        "12:7: `unit` is `mm`, `cm`, `m` or `in`, not `inch`; did you mean `in`?");
+    says(WALL + "unit: yard\n", "12:7: `unit` is `mm`, `cm`, `m` or `in`, not `yard`");
+  }
 }
