@@ -42,27 +42,9 @@ record EliminationTree(int[] place, int[] parent, Lower lower, int[] count) {
   /** Liu's algorithm with path compression, row after row. */
   private static int[] parents(SparseSymmetric matrix, int[] place) {
     int n = place.length;
-    int[] start = new int[n + 1];
-    for (int c = 0; c < n; c++) {
-      int pc = place[c];
-      int diagonal = matrix.start(c + 1) - 1;
-      for (int p = matrix.start(c); p < diagonal; p++) {
-        start[Math.max(pc, place[matrix.row(p)]) + 1]++;
-      }
-    }
-    for (int i = 0; i < n; i++) {
-      start[i + 1] += start[i];
-    }
-    int[] column = new int[start[n]];
-    int[] fill = Arrays.copyOf(start, n);
-    for (int c = 0; c < n; c++) {
-      int pc = place[c];
-      int diagonal = matrix.start(c + 1) - 1;
-      for (int p = matrix.start(c); p < diagonal; p++) {
-        int pr = place[matrix.row(p)];
-        column[fill[Math.max(pc, pr)]++] = Math.min(pc, pr);
-      }
-    }
+    Grouped rows = group(matrix, place, true);
+    int[] start = rows.start;
+    int[] column = rows.other;
     int[] parent = new int[n];
     int[] ancestor = new int[n];
     for (int i = 0; i < n; i++) {
@@ -118,19 +100,28 @@ record EliminationTree(int[] place, int[] parent, Lower lower, int[] count) {
   }
 
   private static Lower lower(SparseSymmetric matrix, int[] place) {
+    Grouped columns = group(matrix, place, false);
+    return new Lower(columns.start, columns.other, columns.source);
+  }
+
+  /** Entries off the diagonal by one of their two places: the other place, and where they stand. */
+  private record Grouped(int[] start, int[] other, int[] source) {}
+
+  /** Groups the entries by the greater or the smaller of their two places. */
+  private static Grouped group(SparseSymmetric matrix, int[] place, boolean byGreater) {
     int n = place.length;
     int[] start = new int[n + 1];
     for (int c = 0; c < n; c++) {
-      int pc = place[c];
       int diagonal = matrix.start(c + 1) - 1;
       for (int p = matrix.start(c); p < diagonal; p++) {
-        start[Math.min(pc, place[matrix.row(p)]) + 1]++;
+        int pr = place[matrix.row(p)];
+        start[pr > place[c] == byGreater ? pr + 1 : place[c] + 1]++;
       }
     }
     for (int i = 0; i < n; i++) {
       start[i + 1] += start[i];
     }
-    int[] row = new int[start[n]];
+    int[] other = new int[start[n]];
     int[] source = new int[start[n]];
     int[] fill = Arrays.copyOf(start, n);
     for (int c = 0; c < n; c++) {
@@ -138,12 +129,13 @@ record EliminationTree(int[] place, int[] parent, Lower lower, int[] count) {
       int diagonal = matrix.start(c + 1) - 1;
       for (int p = matrix.start(c); p < diagonal; p++) {
         int pr = place[matrix.row(p)];
-        int at = fill[Math.min(pc, pr)]++;
-        row[at] = Math.max(pc, pr);
+        boolean byRow = pr > pc == byGreater;
+        int at = fill[byRow ? pr : pc]++;
+        other[at] = byRow ? pc : pr;
         source[at] = p;
       }
     }
-    return new Lower(start, row, source);
+    return new Grouped(start, other, source);
   }
 
   /** Column counts of the factor (Gilbert, Ng and Peyton 1994), columns in postorder. */

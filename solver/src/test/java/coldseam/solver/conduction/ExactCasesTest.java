@@ -55,7 +55,7 @@ class ExactCasesTest {
   }
 
   /** Adds c(ρ) of the conformal map dz/dw = (d₁/π) √((w−1)/(w+ρ²))/w to the arms. */
-  private static double cornerTerm(double rho) {
+  static double cornerTerm(double rho) {
     return (2 / rho * Math.atan(rho)
             + 2 * rho * Math.atan(1 / rho)
             - Math.log(16 * rho * rho / Math.pow(1 + rho * rho, 2)))

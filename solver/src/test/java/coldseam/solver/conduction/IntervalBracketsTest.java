@@ -54,25 +54,21 @@ class IntervalBracketsTest {
         .facing(ZERO, 0, d1 + l2, 0, 0, d2 + l1, 0);
   }
 
-  private static double cornerTerm(double rho) {
-    return (2 / rho * Math.atan(rho)
-            + 2 * rho * Math.atan(1 / rho)
-            - Math.log(16 * rho * rho / Math.pow(1 + rho * rho, 2)))
-        / Math.PI;
-  }
-
   /** Exact: conformal map; adiabatic ends of arms of 5 thicknesses change less than 1e-13. */
   @ParameterizedTest
   @ValueSource(doubles = {1, 1.5, 2, 3, 4})
   void isothermal_corner(double rho) {
-    holds(corner(rho, 1, 5 * rho, 5, material("stone", 1)), 10 + cornerTerm(rho), 1e-9);
+    holds(
+        corner(rho, 1, 5 * rho, 5, material("stone", 1)),
+        10 + ExactCasesTest.cornerTerm(rho),
+        1e-9);
   }
 
   /** Exact by scaling of the axes: l1 + 4 l2 + 2 c(2) for λx 4, λy 1. */
   @Test
   void orthotropic_corner() {
     // the arm along x conducts across itself, along y, with 1; the other with 4
-    double exact = 6 + 4 * 6 + 2 * cornerTerm(2);
+    double exact = 6 + 4 * 6 + 2 * ExactCasesTest.cornerTerm(2);
     holds(corner(1, 1, 6, 6, orthotropic("wood", 4, 1, 0)), exact, 1e-6);
   }
 
