@@ -78,9 +78,9 @@ final class SolveCommand implements Command {
                 "cli/coldseam solve cases/demo/balcony.yaml --variants --json",
                 "prints two lines of JSON, writes nothing"),
             new Syntax.Example(
-                "cli/coldseam solve cases/demo/balcony.yaml --variant \"thermal break\" --out /tmp/b"
+                "cli/coldseam solve cases/demo/balcony.yaml --variant \"thermal break\" --out break"
                     + " --png",
-                "solves one variant and writes PNG beside SVG to /tmp/b")));
+                "solves one variant and writes PNG beside SVG to the folder break")));
   }
 
   /** One case or variant to solve. */

@@ -72,6 +72,7 @@ class DoubtfulDrawingsTest {
     assertThat(result.couplings().get(0).valueWPerMK().value()).isCloseTo(0, within(1e-12));
     assertThat(result.couplings().get(0).valueWPerMK().halfWidth()).isLessThan(1e-10);
     assertThat(result.unknowns()).isLessThan(5000);
+    assertThat(result.shares().parts()).isEmpty();
   }
 
   @Test

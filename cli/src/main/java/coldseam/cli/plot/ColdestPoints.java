@@ -45,7 +45,7 @@ final class ColdestPoints {
   }
 
   private static String factor(Result.SurfacePoint point) {
-    return point.fRsi().isPresent() ? "fRsi " + Digits.fixed(point.fRsi().getAsDouble(), 3) : "";
+    return point.fRsi().isPresent() ? "f_Rsi " + Digits.fixed(point.fRsi().getAsDouble(), 3) : "";
   }
 
   /**

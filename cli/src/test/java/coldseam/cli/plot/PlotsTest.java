@@ -66,7 +66,7 @@ class PlotsTest {
   void coldest_points_carry_value_and_film() {
     assertThat(words(Solved.shipped("balcony.yaml"), Kind.TEMPERATURE))
         .anyMatch(text -> text.matches("1\\d\\.\\d+\u00a0°C"))
-        .anyMatch(text -> text.matches("fRsi 0\\.\\d+, Rs 0\\.25"));
+        .anyMatch(text -> text.matches("f_Rsi 0\\.\\d+, Rs 0\\.25"));
   }
 
   @Test

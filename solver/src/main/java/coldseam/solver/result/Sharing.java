@@ -2,7 +2,9 @@ package coldseam.solver.result;
 
 import coldseam.solver.conduction.Dissipation;
 import coldseam.solver.conduction.Solution;
+import coldseam.solver.detail.Area;
 import coldseam.solver.detail.Detail;
+import coldseam.solver.detail.Material;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
@@ -13,6 +15,9 @@ import java.util.List;
  * shares of θᵀAθ, which for two temperatures ΔT apart is L2D·ΔT².
  */
 final class Sharing {
+  /** Less than this times the best conductivity and ΔT² is rounding: no heat flows. */
+  private static final double ROUNDING = 1e-12;
+
   private static final Result.Shares NONE = new Result.Shares("", List.of());
 
   private Sharing() {}
@@ -43,7 +48,7 @@ final class Sharing {
       energies[p] = dissipation.dissipated(p, x, x);
       all += energies[p];
     }
-    if (!(all > 0)) {
+    if (!(all > ROUNDING * scale(detail, x))) {
       return NONE;
     }
     List<Result.Share> shares = new ArrayList<>();
@@ -58,6 +63,24 @@ final class Sharing {
     }
     shares.sort(Comparator.comparingDouble(share -> -share.share()));
     return new Result.Shares(words(detail, x), List.copyOf(shares));
+  }
+
+  /** The best conductivity times the square of the largest difference. */
+  private static double scale(Detail detail, double[] x) {
+    double best = 0;
+    for (Area area : detail.areas()) {
+      if (area.fill() instanceof Material material) {
+        best = Math.max(best, material.conductivityWPerMK());
+        best = Math.max(best, material.crossConductivityWPerMK());
+      }
+    }
+    double highest = x[0];
+    double lowest = x[0];
+    for (double value : x) {
+      highest = Math.max(highest, value);
+      lowest = Math.min(lowest, value);
+    }
+    return best * (highest - lowest) * (highest - lowest);
   }
 
   private static String space(Detail detail, Dissipation.Part part) {

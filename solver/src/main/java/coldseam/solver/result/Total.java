@@ -76,8 +76,17 @@ final class Total {
         : Bracket.of(quantity.value());
   }
 
-  /** One over a quantity that is more than 0. */
+  /**
+   * One over a quantity. Where its proved interval reaches down to 0 nothing is known of the
+   * inverse: it is infinite.
+   */
   static Quantity inverse(Quantity quantity) {
+    if (quantity.certificate() instanceof Certificate.Certified proved && proved.lower() <= 0) {
+      return new Quantity(
+          Double.POSITIVE_INFINITY,
+          new Certificate.NotCertified(
+              "the interval of what it is the inverse of contains 0", Double.POSITIVE_INFINITY));
+    }
     double inverse = 1 / quantity.value();
     if (quantity.certificate() instanceof Certificate.Certified proved && proved.lower() > 0) {
       return new Quantity(

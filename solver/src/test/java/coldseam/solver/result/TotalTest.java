@@ -74,6 +74,7 @@ class TotalTest {
     assertThat(unproved.value()).isEqualTo(0.5);
     assertThat(unproved.halfWidth()).isCloseTo(0.25 / 4, within(1e-12));
     assertThat(Total.inverse(certified(-1, 3)).certified()).isFalse();
+    assertThat(Total.inverse(certified(-1, 3)).value()).isInfinite();
   }
 
   @Test
