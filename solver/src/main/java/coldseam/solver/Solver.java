@@ -18,6 +18,7 @@ import coldseam.solver.detail.Wanted;
 import coldseam.solver.result.OtherCoupling;
 import coldseam.solver.result.Plan;
 import coldseam.solver.result.Result;
+import java.util.ArrayList;
 import java.util.Collections;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -77,18 +78,17 @@ public final class Solver {
    * @throws coldseam.solver.detail.DetailException if it cannot be solved as it stands
    */
   public static Result solve(Detail detail, Accuracy accuracy, Progress progress) {
-    Map<String, Double> times = new LinkedHashMap<>();
-    long start = System.nanoTime();
+    StageTimes times = new StageTimes();
     Resolved resolved = Resolved.of(detail);
     Plan plan = resolved.plan();
-    start = lap(times, "resolve", start);
+    times.ended("resolve");
 
     boolean surfaceNeeded = plan.surfaceNeeded();
     boolean shared = surfaceNeeded && plan.sameFilms();
     Solution heatLoss =
         resolved.solveHeatLoss(accuracy, shared || plan.heatLossTemperaturesWanted(), progress);
     Map<Subtraction.OfDetail, OtherCoupling> others = solveOthers(resolved, accuracy, progress);
-    start = lap(times, "heat loss", start);
+    times.ended("heat loss");
 
     Optional<Solution> surface = Optional.empty();
     if (shared) {
@@ -102,62 +102,63 @@ public final class Solver {
                   new Conduction.Goal(accuracy, false, false, true, plan.temperatures(heatLoss)),
                   progress));
     }
-    long last = lap(times, "surface temperatures", start);
+    times.ended("surface temperatures");
 
-    return plan.result(
-        heatLoss,
-        surface,
-        others::get,
-        () -> {
-          lap(times, "results", last);
-          return Collections.unmodifiableMap(times);
-        });
+    return plan.result(heatLoss, surface, others, times);
   }
 
   private static Map<Subtraction.OfDetail, OtherCoupling> solveOthers(
       Resolved resolved, Accuracy accuracy, Progress progress) {
     Map<Subtraction.OfDetail, OtherCoupling> couplings = new LinkedHashMap<>();
-    resolved
-        .others()
-        .forEach(
-            (of, other) -> {
-              double[] temperatures = other.plan().statedTemperatures();
-              Conduction.Goal goal =
-                  new Conduction.Goal(accuracy, true, false, false, temperatures);
-              Solution solution =
-                  Conduction.solve(other.partition(), other.heatLoss(), goal, progress);
-              couplings.put(
-                  of, nested(of, () -> other.plan().coupling(solution, of.warm(), of.cold())));
-            });
+    for (Map.Entry<Subtraction.OfDetail, Resolved> entry : resolved.others().entrySet()) {
+      Subtraction.OfDetail of = entry.getKey();
+      Resolved other = entry.getValue();
+      double[] temperatures = other.plan().statedTemperatures();
+      Conduction.Goal goal = new Conduction.Goal(accuracy, true, false, false, temperatures);
+      Solution solution = Conduction.solve(other.partition(), other.heatLoss(), goal, progress);
+      try {
+        couplings.put(of, other.plan().coupling(solution, of.warm(), of.cold()));
+      } catch (DetailException e) {
+        throw nested(of, e);
+      }
+    }
     return couplings;
   }
 
   /** Names the subtracted detail in whatever is at fault in it. */
-  private static <T> T nested(Subtraction.OfDetail other, Supplier<T> work) {
-    try {
-      return work.get();
-    } catch (DetailException e) {
-      throw new DetailException(
-          e.faults().stream()
-              .map(
-                  fault ->
-                      new Fault(
-                          "psi",
-                          other.name(),
-                          "in the detail it subtracts, "
-                              + fault.part()
-                              + (fault.name().isEmpty() ? "" : " '" + fault.name() + "'")
-                              + ": "
-                              + fault.message(),
-                          Optional.empty()))
-              .toList());
+  private static DetailException nested(Subtraction.OfDetail other, DetailException e) {
+    List<Fault> named = new ArrayList<>();
+    for (Fault fault : e.faults()) {
+      named.add(
+          new Fault(
+              "psi",
+              other.name(),
+              "in the detail it subtracts, "
+                  + fault.part()
+                  + (fault.name().isEmpty() ? "" : " '" + fault.name() + "'")
+                  + ": "
+                  + fault.message(),
+              Optional.empty()));
     }
+    return new DetailException(named);
   }
 
-  private static long lap(Map<String, Double> times, String stage, long start) {
-    long now = System.nanoTime();
-    times.put(stage, (now - start) / NANOS_PER_MS);
-    return now;
+  /** Milliseconds by stage, in the order run; asking for them ends the last stage. */
+  private static final class StageTimes implements Supplier<Map<String, Double>> {
+    private final Map<String, Double> times = new LinkedHashMap<>();
+    private long start = System.nanoTime();
+
+    void ended(String stage) {
+      long now = System.nanoTime();
+      times.put(stage, (now - start) / NANOS_PER_MS);
+      start = now;
+    }
+
+    @Override
+    public Map<String, Double> get() {
+      ended("results");
+      return Collections.unmodifiableMap(times);
+    }
   }
 
   /** A detail with its partition, conditions and plan, and the details it subtracts. */
@@ -178,7 +179,9 @@ public final class Solver {
       Conditions surface = Conditions.of(detail, partition, FilmSet.SURFACE);
       Map<Subtraction.OfDetail, Resolved> others = others(detail);
       Map<Subtraction.OfDetail, Plan> plans = new LinkedHashMap<>();
-      others.forEach((of, other) -> plans.put(of, other.plan()));
+      for (Map.Entry<Subtraction.OfDetail, Resolved> other : others.entrySet()) {
+        plans.put(other.getKey(), other.getValue().plan());
+      }
       Plan plan = Plan.of(detail, partition, heatLoss, surface, plans);
       return new Resolved(partition, heatLoss, surface, plan, others);
     }
@@ -189,12 +192,20 @@ public final class Solver {
         if (wanted instanceof Wanted.Psi psi) {
           for (Subtraction subtraction : psi.subtractions()) {
             if (subtraction instanceof Subtraction.OfDetail of) {
-              others.put(of, nested(of, () -> Resolved.of(of.detail())));
+              others.put(of, resolveOther(of));
             }
           }
         }
       }
       return others;
+    }
+
+    private static Resolved resolveOther(Subtraction.OfDetail of) {
+      try {
+        return of(of.detail());
+      } catch (DetailException e) {
+        throw nested(of, e);
+      }
     }
 
     private static Partition partition(Detail detail) {

@@ -1,6 +1,7 @@
 package coldseam.solver.detail;
 
 import coldseam.mesh.plane.Point;
+import java.util.ArrayList;
 import java.util.List;
 
 /**
@@ -14,6 +15,10 @@ import java.util.List;
 public record Area(String name, Fill fill, List<List<Point>> rings, boolean glazing) {
   /** Copies the rings. */
   public Area {
-    rings = rings.stream().map(List::copyOf).toList();
+    List<List<Point>> copies = new ArrayList<>();
+    for (List<Point> ring : rings) {
+      copies.add(List.copyOf(ring));
+    }
+    rings = List.copyOf(copies);
   }
 }

@@ -32,10 +32,19 @@ final class CutOffPlanes {
     partition = reading.partition();
     for (int edge = 0; edge < partition.edgeCount(); edge++) {
       if (reading.kinds()[edge] == Kind.CUT_OFF) {
-        leaving.computeIfAbsent(start(edge), v -> new ArrayList<>()).add(edge);
-        arriving.computeIfAbsent(end(edge), v -> new ArrayList<>()).add(edge);
+        add(leaving, start(edge), edge);
+        add(arriving, end(edge), edge);
       }
     }
+  }
+
+  private static void add(Map<Integer, List<Integer>> edgesAt, int vertex, int edge) {
+    List<Integer> edges = edgesAt.get(vertex);
+    if (edges == null) {
+      edges = new ArrayList<>(1);
+      edgesAt.put(vertex, edges);
+    }
+    edges.add(edge);
   }
 
   List<CutOffPlane> find() {

@@ -82,6 +82,21 @@ public record Detail(
   }
 
   /**
+   * Mean of the stated temperatures, those of floating spaces left out, °C; 0 if none is stated.
+   */
+  public double meanStatedTemperatureC() {
+    double sum = 0;
+    int stated = 0;
+    for (Space space : spaces) {
+      if (space.floating().isEmpty()) {
+        sum += space.temperatureC();
+        stated++;
+      }
+    }
+    return stated == 0 ? 0 : sum / stated;
+  }
+
+  /**
    * Index of a space.
    *
    * @param name its name

@@ -60,10 +60,12 @@ final class DetailCheck {
       }
     }
     for (Space space : detail.spaces()) {
-      space
-          .floating()
-          .filter(floating -> detail.spaceIndex(floating.to()) >= 0)
-          .ifPresent(floating -> faced.set(detail.spaceIndex(floating.to())));
+      if (space.floating().isPresent()) {
+        int to = detail.spaceIndex(space.floating().get().to());
+        if (to >= 0) {
+          faced.set(to);
+        }
+      }
     }
     List<Fault> faults = new ArrayList<>();
     for (int i = 0; i < detail.spaces().size(); i++) {
@@ -117,37 +119,40 @@ final class DetailCheck {
 
   private List<Fault> isolatedParts(int[] part) {
     BitSet held = new BitSet();
-    Map<Integer, Set<String>> names = new TreeMap<>();
-    for (int face = 0; face < partition.faceCount(); face++) {
-      if (conducting(face)) {
-        names
-            .computeIfAbsent(root(part, face), p -> new TreeSet<>())
-            .add(reading.fills().get(partition.faceLabel(face)).name());
-      }
-    }
     for (int edge = 0; edge < partition.edgeCount(); edge++) {
       if (reading.kinds()[edge] == Kind.FILM || reading.kinds()[edge] == Kind.FIXED) {
         held.set(root(part, conductingFace(edge)));
       }
     }
     List<Fault> faults = new ArrayList<>();
-    names.forEach(
-        (root, materials) -> {
-          if (!held.get(root)) {
-            Point at = corner(root);
-            faults.add(
-                new Fault(
-                    "section",
-                    String.join(", ", materials),
-                    "a part of the section around "
-                        + Wording.place(at)
-                        + " ("
-                        + String.join(", ", materials)
-                        + ") touches no space, so that its temperature is undetermined",
-                    Optional.of(at)));
-          }
-        });
+    for (int face = 0; face < partition.faceCount(); face++) {
+      if (conducting(face) && root(part, face) == face && !held.get(face)) {
+        String materials = materials(part, face);
+        Point at = corner(face);
+        faults.add(
+            new Fault(
+                "section",
+                materials,
+                "a part of the section around "
+                    + Wording.place(at)
+                    + " ("
+                    + materials
+                    + ") touches no space, so that its temperature is undetermined",
+                Optional.of(at)));
+      }
+    }
     return faults;
+  }
+
+  /** The materials of a part in words, in alphabetical order. */
+  private String materials(int[] part, int root) {
+    Set<String> names = new TreeSet<>();
+    for (int face = 0; face < partition.faceCount(); face++) {
+      if (conducting(face) && root(part, face) == root) {
+        names.add(reading.fills().get(partition.faceLabel(face)).name());
+      }
+    }
+    return String.join(", ", names);
   }
 
   /** Floating spaces that no part of the section and no conductance connects with a stated one. */

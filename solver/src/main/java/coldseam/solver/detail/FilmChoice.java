@@ -6,7 +6,9 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Set;
 import java.util.TreeMap;
+import java.util.TreeSet;
 
 /**
  * Chooses the film of every edge by the direction of heat flow through it (ISO 6946: horizontal
@@ -33,8 +35,8 @@ final class FilmChoice {
     }
   }
 
-  /** Films from one source at one space: what was chosen, with the length it holds on, m. */
-  private record Group(int space, String source, Map<String, Double> lengthByWords) {}
+  /** Films from one source at one space: what was chosen. */
+  private record Group(int space, String source, Set<String> words) {}
 
   private final OutlineReading reading;
   private final Detail detail;
@@ -75,47 +77,55 @@ final class FilmChoice {
         reading.films()[edge] = film;
         words = Wording.figure(film) + " m²·K/W" + direction.words;
         if (direction == Direction.UNDECIDED) {
-          undecided
-              .computeIfAbsent(space, s -> new TreeMap<>())
-              .merge(film, partition.edgeLength(edge), Double::sum);
+          addUndecided(undecided, space, film, partition.edgeLength(edge));
         }
       }
-      used.computeIfAbsent(
-              space + " " + rule.source(), key -> new Group(space, rule.source(), new TreeMap<>()))
-          .lengthByWords()
-          .merge(words, partition.edgeLength(edge), Double::sum);
+      String key = space + " " + rule.source();
+      Group group = used.get(key);
+      if (group == null) {
+        group = new Group(space, rule.source(), new TreeSet<>());
+        used.put(key, group);
+      }
+      group.words().add(words);
     }
     return assumptions(used, undecided);
+  }
+
+  private static void addUndecided(
+      Map<Integer, Map<Double, Double>> undecided, int space, double film, double lengthM) {
+    Map<Double, Double> lengthByFilm = undecided.get(space);
+    if (lengthByFilm == null) {
+      lengthByFilm = new TreeMap<>();
+      undecided.put(space, lengthByFilm);
+    }
+    lengthByFilm.put(film, lengthByFilm.getOrDefault(film, 0.0) + lengthM);
   }
 
   private List<Assumption> assumptions(
       Map<String, Group> used, Map<Integer, Map<Double, Double>> undecided) {
     List<Assumption> lines = new ArrayList<>();
     String set = reading.filmSet() == FilmSet.HEAT_LOSS ? "heat loss" : "surface temperature";
-    used.values()
-        .forEach(
-            group ->
-                lines.add(
-                    new Assumption(
-                        "film at " + detail.spaces().get(group.space()).name() + ", " + set,
-                        String.join("; ", group.lengthByWords().keySet()),
-                        group.source())));
-    undecided.forEach(
-        (space, films) ->
-            films.forEach(
-                (film, length) ->
-                    lines.add(
-                        new Assumption(
-                            "direction of heat flow at "
-                                + detail.spaces().get(space).name()
-                                + ", "
-                                + set,
-                            "cannot be decided over "
-                                + Wording.length(length)
-                                + ": "
-                                + Wording.figure(film)
-                                + " m²·K/W as for horizontal flow",
-                            "ISO 6946, horizontal value where the direction is not known"))));
+    for (Group group : used.values()) {
+      lines.add(
+          new Assumption(
+              "film at " + detail.spaces().get(group.space()).name() + ", " + set,
+              String.join("; ", group.words()),
+              group.source()));
+    }
+    for (Map.Entry<Integer, Map<Double, Double>> films : undecided.entrySet()) {
+      String space = detail.spaces().get(films.getKey()).name();
+      for (Map.Entry<Double, Double> film : films.getValue().entrySet()) {
+        lines.add(
+            new Assumption(
+                "direction of heat flow at " + space + ", " + set,
+                "cannot be decided over "
+                    + Wording.length(film.getValue())
+                    + ": "
+                    + Wording.figure(film.getKey())
+                    + " m²·K/W as for horizontal flow",
+                "ISO 6946, horizontal value where the direction is not known"));
+      }
+    }
     return lines;
   }
 

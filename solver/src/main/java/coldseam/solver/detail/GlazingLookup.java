@@ -4,9 +4,7 @@ import coldseam.mesh.partition.Partition;
 import coldseam.mesh.plane.Point;
 import coldseam.mesh.plane.Resolution;
 import java.util.ArrayList;
-import java.util.HashMap;
 import java.util.List;
-import java.util.Map;
 
 /**
  * Whether the conducting side of an edge belongs to an area laid as glazing or frame. Areas of one
@@ -18,28 +16,34 @@ final class GlazingLookup {
 
   private final Partition partition;
   private final List<Fill> fills;
-  private final Map<Fill, List<Area>> laid = new HashMap<>();
+  private final List<Area> areas;
+  private final boolean any;
 
   GlazingLookup(Detail detail, Partition partition) {
     this.partition = partition;
     fills = detail.fills();
-    if (detail.areas().stream().anyMatch(Area::glazing)) {
-      for (Area area : detail.areas()) {
-        laid.computeIfAbsent(area.fill(), fill -> new ArrayList<>()).add(area);
+    areas = detail.areas();
+    any = contains(areas, true);
+  }
+
+  private static boolean contains(List<Area> areas, boolean glazing) {
+    for (Area area : areas) {
+      if (area.glazing() == glazing) {
+        return true;
       }
     }
+    return false;
   }
 
   boolean onEdge(int edge, boolean conductsLeft) {
-    if (laid.isEmpty()) {
+    if (!any) {
       return false;
     }
-    Fill fill = fills.get(conductsLeft ? partition.leftLabel(edge) : partition.rightLabel(edge));
-    List<Area> ofFill = laid.get(fill);
-    if (ofFill.stream().allMatch(Area::glazing)) {
+    List<Area> ofFill = laid(conductsLeft ? partition.leftLabel(edge) : partition.rightLabel(edge));
+    if (!contains(ofFill, false)) {
       return true;
     }
-    if (ofFill.stream().noneMatch(Area::glazing)) {
+    if (!contains(ofFill, true)) {
       return false;
     }
     Point probe = justInside(edge, conductsLeft);
@@ -50,6 +54,16 @@ final class GlazingLookup {
       }
     }
     return glazing;
+  }
+
+  private List<Area> laid(int label) {
+    List<Area> ofFill = new ArrayList<>();
+    for (Area area : areas) {
+      if (area.fill().name().equals(fills.get(label).name())) {
+        ofFill.add(area);
+      }
+    }
+    return ofFill;
   }
 
   private Point justInside(int edge, boolean left) {

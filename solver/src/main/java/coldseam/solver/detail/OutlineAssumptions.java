@@ -49,17 +49,18 @@ final class OutlineAssumptions {
           && reading.fills().get(right) instanceof Space b) {
         boolean ordered = a.name().compareTo(b.name()) < 0;
         String pair = ordered ? a.name() + " and " + b.name() : b.name() + " and " + a.name();
-        lengths.merge(pair, partition.edgeLength(edge), Double::sum);
+        lengths.put(pair, lengths.getOrDefault(pair, 0.0) + partition.edgeLength(edge));
       }
     }
     List<Assumption> lines = new ArrayList<>();
-    lengths.forEach(
-        (pair, length) ->
-            lines.add(
-                new Assumption(
-                    "spaces that touch: " + pair,
-                    Wording.length(length) + " with nothing between; no heat is counted there",
-                    "by convention of this tool")));
+    for (Map.Entry<String, Double> touching : lengths.entrySet()) {
+      lines.add(
+          new Assumption(
+              "spaces that touch: " + touching.getKey(),
+              Wording.length(touching.getValue())
+                  + " with nothing between; no heat is counted there",
+              "by convention of this tool"));
+    }
     return lines;
   }
 

@@ -89,7 +89,9 @@ final class OutlineReading {
       if (stretch.glazing()) {
         glazing.set(edge);
       }
-      stretch.condition().ifPresent(condition -> apply(edge, stretch, condition));
+      if (stretch.condition().isPresent()) {
+        apply(edge, stretch, stretch.condition().get());
+      }
     }
   }
 

@@ -97,6 +97,14 @@ final class Combination {
     return List.copyOf(all);
   }
 
+  /** What the tolerances add to a single conductance times a factor; empty if it is unknown. */
+  static Optional<Result.Tolerance> tolerance(
+      double factor, Optional<ByPart> conductance, Quantity quantity) {
+    return conductance.isEmpty()
+        ? Optional.empty()
+        : new Combination().add(factor, conductance.get()).tolerance(quantity);
+  }
+
   /**
    * What the tolerances of the conductivities add.
    *
@@ -133,25 +141,33 @@ final class Combination {
     for (Row row : rows) {
       most = Math.max(most, 1 / (1 - row.part.relativeTolerance()));
     }
-    double high = constantUpper + least(s -> above(s) - 2 * s * inflowTaken);
-    double low = constantLower - least(s -> below(s) - 2 * s * inflowAdded);
+    double high = constantUpper + least(new Above());
+    double low = constantLower - least(new Below());
     return new Certificate.Certified(low - allowance * most, high + allowance * most);
   }
 
-  private double above(double s) {
-    double sum = 0;
-    for (Row row : rows) {
-      sum += worst(row.upper, s * s * row.upperInverse, row.part.relativeTolerance());
+  /** The upper bound without its constant, the fluxes taken off multiplied by s. */
+  private final class Above implements DoubleUnaryOperator {
+    @Override
+    public double applyAsDouble(double s) {
+      double sum = 0;
+      for (Row row : rows) {
+        sum += worst(row.upper, s * s * row.upperInverse, row.part.relativeTolerance());
+      }
+      return sum - 2 * s * inflowTaken;
     }
-    return sum;
   }
 
-  private double below(double s) {
-    double sum = 0;
-    for (Row row : rows) {
-      sum += worst(row.lower, s * s * row.lowerInverse, row.part.relativeTolerance());
+  /** The lower bound with a minus, without its constant, the fluxes added multiplied by s. */
+  private final class Below implements DoubleUnaryOperator {
+    @Override
+    public double applyAsDouble(double s) {
+      double sum = 0;
+      for (Row row : rows) {
+        sum += worst(row.lower, s * s * row.lowerInverse, row.part.relativeTolerance());
+      }
+      return sum - 2 * s * inflowAdded;
     }
-    return sum;
   }
 
   /** The largest of a f + b/f for f within 1 ± t: convex for a, b ≥ 0, so at an end. */

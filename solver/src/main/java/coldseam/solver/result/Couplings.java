@@ -9,11 +9,11 @@ import coldseam.solver.detail.DetailException;
 import coldseam.solver.detail.Fault;
 import coldseam.solver.detail.Space;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.BitSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.stream.IntStream;
 
 /**
  * Coupling coefficients of a solution (ISO 10211, several environments): the matrix A with A_ij =
@@ -78,8 +78,7 @@ final class Couplings {
         name(i),
         name(j),
         value,
-        byPart(from, to, Map.of(), new int[0])
-            .flatMap(parts -> new Combination().add(1, parts).tolerance(value)));
+        Combination.tolerance(1, byPart(from, to, Map.of(), new int[0]), value));
   }
 
   static BitSet faced(Solution solution) {
@@ -112,12 +111,12 @@ final class Couplings {
     if (floating.length == 0 || !Double.isFinite(direct.value())) {
       return direct;
     }
-    Optional<Quantity> proved =
-        solution
-            .bounds()
-            .flatMap(bounds -> FloatingBounds.coupling(bounds, joined, floating, warm, cold));
-    if (proved.isPresent()) {
-      return proved.get();
+    if (solution.bounds().isPresent()) {
+      Optional<Quantity> proved =
+          FloatingBounds.coupling(solution.bounds().get(), joined, floating, warm, cold);
+      if (proved.isPresent()) {
+        return proved.get();
+      }
     }
     double[][] responses = responses(floating);
     double through = 0;
@@ -309,9 +308,21 @@ final class Couplings {
 
   /** Indices of the floating spaces. */
   static int[] floating(Detail detail) {
-    return IntStream.range(0, detail.spaces().size())
-        .filter(i -> detail.spaces().get(i).floating().isPresent())
-        .toArray();
+    return floatingBeside(detail, new int[0], new int[0]);
+  }
+
+  /** Indices of the floating spaces that belong to neither group. */
+  static int[] floatingBeside(Detail detail, int[] one, int[] other) {
+    int[] indices = new int[detail.spaces().size()];
+    int count = 0;
+    for (int i = 0; i < indices.length; i++) {
+      if (detail.spaces().get(i).floating().isPresent()
+          && !contains(one, i)
+          && !contains(other, i)) {
+        indices[count++] = i;
+      }
+    }
+    return Arrays.copyOf(indices, count);
   }
 
   static boolean contains(int[] indices, int index) {

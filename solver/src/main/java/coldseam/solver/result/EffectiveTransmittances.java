@@ -8,7 +8,6 @@ import coldseam.solver.detail.Fault;
 import coldseam.solver.detail.Wanted;
 import coldseam.solver.detail.Wording;
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -81,10 +80,7 @@ final class EffectiveTransmittances {
       }
       width = found.get();
     }
-    int[] floating =
-        Arrays.stream(Couplings.floating(detail))
-            .filter(f -> !Couplings.contains(warm, f) && !Couplings.contains(cold, f))
-            .toArray();
+    int[] floating = Couplings.floatingBeside(detail, warm, cold);
     plans.add(new Plan(wanted, warm, cold, floating, width));
   }
 
@@ -206,9 +202,10 @@ final class EffectiveTransmittances {
               u,
               Total.inverse(u),
               plan.widthM(),
-              couplings
-                  .byPart(plan.warm(), plan.cold(), Map.of(), plan.floating())
-                  .flatMap(parts -> new Combination().add(1 / plan.widthM(), parts).tolerance(u))));
+              Combination.tolerance(
+                  1 / plan.widthM(),
+                  couplings.byPart(plan.warm(), plan.cold(), Map.of(), plan.floating()),
+                  u)));
     }
     return all;
   }

@@ -10,8 +10,9 @@ import coldseam.solver.detail.Space;
 import coldseam.solver.detail.View;
 import coldseam.solver.detail.Wording;
 import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.HashMap;
 import java.util.HashSet;
-import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -34,27 +35,31 @@ final class FlankFinder {
   FlankFinder(Detail detail, Outline outline) {
     this.detail = detail;
     this.outline = outline;
-    Map<CutOffPlane, Flank> named = attach();
+    Map<Integer, Flank> named = attach();
     Set<String> names = new HashSet<>();
-    detail.flanks().forEach(flank -> names.add(flank.name()));
     for (Flank flank : detail.flanks()) {
+      names.add(flank.name());
       if (flank.cut().isEmpty()) {
         flanks.add(withoutPlane(flank));
       }
     }
-    for (CutOffPlane plane : outline.conditions().cutOffPlanes()) {
-      Optional<Flank> typed = Optional.ofNullable(named.get(plane));
+    List<CutOffPlane> planes = outline.conditions().cutOffPlanes();
+    for (int i = 0; i < planes.size(); i++) {
+      CutOffPlane plane = planes.get(i);
+      Optional<Flank> typed = Optional.ofNullable(named.get(i));
       FlankEnd first = firstEnd(plane);
       FlankEnd last = lastEnd(plane);
       boolean separates = first.space() >= 0 && last.space() >= 0 && first.space() != last.space();
       if (typed.isPresent() || (separates && !plane.symmetry())) {
-        String name = typed.map(Flank::name).orElseGet(() -> freeName(plane, names));
+        String name = typed.isPresent() ? typed.get().name() : freeName(plane, names);
         names.add(name);
         flanks.add(place(name, typed, plane, first, last));
       }
     }
     orderAsNamed();
-    flanks.forEach(this::checkU);
+    for (PlacedFlank flank : flanks) {
+      checkU(flank);
+    }
   }
 
   List<PlacedFlank> flanks() {
@@ -124,11 +129,7 @@ final class FlankFinder {
     if (of.floating().isEmpty()) {
       return of.temperatureC();
     }
-    return detail.spaces().stream()
-        .filter(other -> other.floating().isEmpty())
-        .mapToDouble(Space::temperatureC)
-        .average()
-        .orElse(0);
+    return detail.meanStatedTemperatureC();
   }
 
   private boolean innerIsWarm(int warm, int cold) {
@@ -138,27 +139,29 @@ final class FlankFinder {
         || detail.spaces().get(warm).exposure() == Exposure.INSIDE;
   }
 
-  private Map<CutOffPlane, Flank> attach() {
-    Map<CutOffPlane, Flank> taken = new LinkedHashMap<>();
+  /** Named flanks by the index of the cut-off plane they lie at. */
+  private Map<Integer, Flank> attach() {
+    List<CutOffPlane> planes = outline.conditions().cutOffPlanes();
+    Map<Integer, Flank> taken = new HashMap<>();
     double reach = NEAR * extent();
     for (Flank flank : detail.flanks()) {
       if (flank.cut().isEmpty()) {
         continue;
       }
       Point cut = flank.cut().get();
-      CutOffPlane nearest = null;
+      int nearest = -1;
       double least = Double.POSITIVE_INFINITY;
-      for (CutOffPlane plane : outline.conditions().cutOffPlanes()) {
-        double distance =
-            SectionShape.distance(cut, outline.point(plane.first()), outline.point(plane.last()));
+      for (int i = 0; i < planes.size(); i++) {
+        Point first = outline.point(planes.get(i).first());
+        double distance = SectionShape.distance(cut, first, outline.point(planes.get(i).last()));
         if (distance < least) {
           least = distance;
-          nearest = plane;
+          nearest = i;
         }
       }
-      if (nearest == null || least > reach) {
+      if (nearest < 0 || least > reach) {
         fault(flank, "no cut-off plane near its point " + Wording.place(cut) + nearestWords(least));
-      } else if (nearest.symmetry()) {
+      } else if (planes.get(nearest).symmetry()) {
         fault(flank, "its cut-off plane is marked as a plane of symmetry, which is no flank");
       } else if (taken.containsKey(nearest)) {
         fault(flank, "lies at the cut-off plane of flank '" + taken.get(nearest).name() + "'");
@@ -206,14 +209,31 @@ final class FlankFinder {
     }
   }
 
+  /** Named flanks first, as the case names them, then those found, as they stand. */
   private void orderAsNamed() {
-    List<String> order = detail.flanks().stream().map(Flank::name).toList();
-    flanks.sort((a, b) -> Integer.compare(position(order, a.name()), position(order, b.name())));
+    List<String> names = new ArrayList<>();
+    for (Flank flank : detail.flanks()) {
+      names.add(flank.name());
+    }
+    flanks.sort(new AsNamed(names));
   }
 
-  private static int position(List<String> order, String name) {
-    int index = order.indexOf(name);
-    return index < 0 ? order.size() : index;
+  private static final class AsNamed implements Comparator<PlacedFlank> {
+    private final List<String> names;
+
+    private AsNamed(List<String> names) {
+      this.names = names;
+    }
+
+    @Override
+    public int compare(PlacedFlank a, PlacedFlank b) {
+      return Integer.compare(position(a), position(b));
+    }
+
+    private int position(PlacedFlank flank) {
+      int index = names.indexOf(flank.name());
+      return index < 0 ? names.size() : index;
+    }
   }
 
   /** "left flank", "top flank", … by the side of the drawing the plane looks to. */

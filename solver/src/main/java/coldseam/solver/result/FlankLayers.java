@@ -64,7 +64,11 @@ record FlankLayers(
 
   /** Thickness of all layers together, m. */
   double thicknessM() {
-    return layers.stream().mapToDouble(Layer::thicknessM).sum();
+    double sum = 0;
+    for (Layer layer : layers) {
+      sum += layer.thicknessM();
+    }
+    return sum;
   }
 
   /** Reads the layers at a plane whose two ends continue into faces. */

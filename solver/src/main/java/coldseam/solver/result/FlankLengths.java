@@ -79,9 +79,11 @@ final class FlankLengths {
   /** All lengths of a flank that are known. */
   Map<DimensionSystem, Result.Length> known(PlacedFlank flank) {
     Map<DimensionSystem, Result.Length> known = new EnumMap<>(DimensionSystem.class);
-    outcomes
-        .get(flank.name())
-        .forEach((system, outcome) -> outcome.length().ifPresent(l -> known.put(system, l)));
+    for (Map.Entry<DimensionSystem, Outcome> outcome : outcomes.get(flank.name()).entrySet()) {
+      if (outcome.getValue().length().isPresent()) {
+        known.put(outcome.getKey(), outcome.getValue().length().get());
+      }
+    }
     return known;
   }
 
@@ -203,9 +205,10 @@ final class FlankLengths {
     }
     Faces own = faces.get(flank.name());
     Face opposite = face.inner() ? own.outer() : own.inner();
-    Optional<Partner> facing =
-        inLine(flank, opposite).filter(p -> p.flank().name().equals(other.name()));
-    if (facing.isPresent() && facing.get().gapM() > tolerance(face)) {
+    Optional<Partner> facing = inLine(flank, opposite);
+    if (facing.isPresent()
+        && facing.get().flank().name().equals(other.name())
+        && facing.get().gapM() > tolerance(face)) {
       double part =
           outline.along(face.walk().direction(), face.walk().from(), opposite.walk().to())
               + facing.get().gapM() / 2;
@@ -234,11 +237,9 @@ final class FlankLengths {
 
   private String endWords(Face face) {
     int stop = face.walk().stop();
-    if (planeOf(stop).map(CutOffPlane::symmetry).orElse(false)) {
-      return "the plane of symmetry";
-    }
-    if (planeOf(stop).isPresent()) {
-      return "the cut-off plane opposite";
+    Optional<CutOffPlane> plane = planeOf(stop);
+    if (plane.isPresent()) {
+      return plane.get().symmetry() ? "the plane of symmetry" : "the cut-off plane opposite";
     }
     if (stop >= 0 && outline.conditions().space(stop) != face.walk().space()) {
       return "where it faces another space";
@@ -248,26 +249,36 @@ final class FlankLengths {
 
   /** The flank at whose cut-off plane a straight face ends. */
   private Optional<PlacedFlank> runsThroughTo(PlacedFlank flank, Face face) {
-    return flankAt(face.walk().stop()).filter(other -> !other.name().equals(flank.name()));
+    return otherFlankAt(face.walk().stop(), flank);
   }
 
   /** The flank at whose cut-off plane the outline that faces the space ends. */
   private Optional<PlacedFlank> partnerByOutline(PlacedFlank flank, Face face) {
-    return flankAt(face.end().stop())
-        .filter(other -> !other.name().equals(flank.name()) && faces.containsKey(other.name()))
-        .filter(other -> faceOf(other, face.inner()).walk().space() == face.walk().space());
+    Optional<PlacedFlank> other = otherFlankAt(face.end().stop(), flank);
+    boolean partner =
+        other.isPresent()
+            && faces.containsKey(other.get().name())
+            && faceOf(other.get(), face.inner()).walk().space() == face.walk().space();
+    return partner ? other : Optional.empty();
   }
 
-  private Optional<PlacedFlank> flankAt(int edge) {
-    return flanks.stream()
-        .filter(flank -> flank.plane().isPresent() && flank.plane().get().edges().contains(edge))
-        .findFirst();
+  /** The flank at whose cut-off plane an edge lies, if it is not the one given. */
+  private Optional<PlacedFlank> otherFlankAt(int edge, PlacedFlank flank) {
+    for (PlacedFlank candidate : flanks) {
+      if (candidate.plane().isPresent() && candidate.plane().get().edges().contains(edge)) {
+        return candidate.name().equals(flank.name()) ? Optional.empty() : Optional.of(candidate);
+      }
+    }
+    return Optional.empty();
   }
 
   private Optional<CutOffPlane> planeOf(int edge) {
-    return outline.conditions().cutOffPlanes().stream()
-        .filter(plane -> plane.edges().contains(edge))
-        .findFirst();
+    for (CutOffPlane plane : outline.conditions().cutOffPlanes()) {
+      if (plane.edges().contains(edge)) {
+        return Optional.of(plane);
+      }
+    }
+    return Optional.empty();
   }
 
   private Face faceOf(PlacedFlank flank, boolean inner) {

@@ -4,6 +4,7 @@ import coldseam.mesh.partition.Partition;
 import coldseam.mesh.plane.Point;
 import coldseam.solver.detail.Conditions.Kind;
 import coldseam.solver.detail.Detail;
+import coldseam.solver.detail.Space;
 import coldseam.solver.detail.Wording;
 import java.util.ArrayList;
 import java.util.Arrays;
@@ -11,6 +12,7 @@ import java.util.BitSet;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Set;
 import java.util.TreeMap;
 import java.util.TreeSet;
 
@@ -35,13 +37,22 @@ final class HeatPaths {
     for (int edge = 0; edge < partition.edgeCount(); edge++) {
       int space = outline.conditions().space(edge);
       if (space >= 0) {
-        faced.computeIfAbsent(conductingPart(edge), p -> new BitSet()).set(space);
+        facedBy(conductingPart(edge)).set(space);
       }
       if (outline.conditions().kind(edge) == Kind.FLOW
           && outline.conditions().flowWPerM2(edge) != 0) {
         heated.set(conductingPart(edge));
       }
     }
+  }
+
+  private BitSet facedBy(int root) {
+    BitSet spaces = faced.get(root);
+    if (spaces == null) {
+      spaces = new BitSet();
+      faced.put(root, spaces);
+    }
+    return spaces;
   }
 
   private void joinMeetingFaces() {
@@ -75,30 +86,18 @@ final class HeatPaths {
   /** Pairs of spaces that no part of the section joins, not by way of a floating space either. */
   private List<String> unjoinedSpaces() {
     int[] floating = Couplings.floating(detail);
-    int[] chain = singles(detail.spaces().size());
-    BitSet touching = new BitSet();
+    int[] chain = chainedByFloating(floating);
+    BitSet fixed = new BitSet();
     for (BitSet spaces : faced.values()) {
-      touching.or(spaces);
-      for (int f : floating) {
-        if (spaces.get(f)) {
-          spaces.stream().forEach(space -> join(chain, f, space));
-        }
-      }
+      fixed.or(spaces);
     }
     for (int f : floating) {
-      touching.clear(f);
-      detail.spaces().get(f).floating().stream()
-          .filter(own -> own.conductanceWPerMK() > 0)
-          .forEach(own -> join(chain, f, detail.spaceIndex(own.to())));
+      fixed.clear(f);
     }
     List<String> warnings = new ArrayList<>();
-    int[] fixed = touching.stream().toArray();
-    for (int i = 0; i < fixed.length; i++) {
-      for (int j = i + 1; j < fixed.length; j++) {
-        int a = fixed[i];
-        int b = fixed[j];
-        boolean joined = root(chain, a) == root(chain, b);
-        if (!joined && faced.values().stream().noneMatch(s -> s.get(a) && s.get(b))) {
+    for (int a = fixed.nextSetBit(0); a >= 0; a = fixed.nextSetBit(a + 1)) {
+      for (int b = fixed.nextSetBit(a + 1); b >= 0; b = fixed.nextSetBit(b + 1)) {
+        if (root(chain, a) != root(chain, b) && !onePartFaces(a, b)) {
           warnings.add(
               "no heat path joins "
                   + name(a)
@@ -111,35 +110,59 @@ final class HeatPaths {
     return warnings;
   }
 
+  /** Spaces joined by way of floating ones: of each chain all have one root. */
+  private int[] chainedByFloating(int[] floating) {
+    int[] chain = singles(detail.spaces().size());
+    for (int f : floating) {
+      for (BitSet spaces : faced.values()) {
+        if (spaces.get(f)) {
+          for (int space = spaces.nextSetBit(0); space >= 0; space = spaces.nextSetBit(space + 1)) {
+            join(chain, f, space);
+          }
+        }
+      }
+      Space.Floating own = detail.spaces().get(f).floating().orElseThrow();
+      if (own.conductanceWPerMK() > 0) {
+        join(chain, f, detail.spaceIndex(own.to()));
+      }
+    }
+    return chain;
+  }
+
+  private boolean onePartFaces(int a, int b) {
+    for (BitSet spaces : faced.values()) {
+      if (spaces.get(a) && spaces.get(b)) {
+        return true;
+      }
+    }
+    return false;
+  }
+
   /** Parts that face one space alone while there are others, alike ones together. */
   private List<String> detachedParts() {
     if (faced.size() < 2) {
       return List.of();
     }
-    Map<Integer, TreeSet<String>> materials = new TreeMap<>();
-    for (int face = 0; face < partition.faceCount(); face++) {
-      if (conducts(partition.faceLabel(face))) {
-        materials
-            .computeIfAbsent(root(part, face), p -> new TreeSet<>())
-            .add("'" + detail.fills().get(partition.faceLabel(face)).name() + "'");
+    Map<String, List<Integer>> alike = new LinkedHashMap<>();
+    for (Map.Entry<Integer, BitSet> entry : faced.entrySet()) {
+      int root = entry.getKey();
+      BitSet spaces = entry.getValue();
+      if (spaces.cardinality() == 1 && !heated.get(root)) {
+        String key = materials(root) + "\n" + spaces.nextSetBit(0);
+        List<Integer> parts = alike.get(key);
+        if (parts == null) {
+          parts = new ArrayList<>();
+          alike.put(key, parts);
+        }
+        parts.add(root);
       }
     }
-    Map<String, List<Integer>> alike = new LinkedHashMap<>();
-    faced.forEach(
-        (root, spaces) -> {
-          if (spaces.cardinality() == 1 && !heated.get(root)) {
-            String words = String.join(", ", materials.get(root));
-            alike
-                .computeIfAbsent(words + "\n" + spaces.nextSetBit(0), k -> new ArrayList<>())
-                .add(root);
-          }
-        });
     List<String> warnings = new ArrayList<>();
     for (List<Integer> parts : alike.values()) {
       int first = parts.get(0);
       int more = parts.size() - 1;
       warnings.add(
-          String.join(", ", materials.get(first))
+          materials(first)
               + " at "
               + Wording.place(corner(first))
               + (more > 0 ? " and " + more + " more like it" : "")
@@ -148,6 +171,18 @@ final class HeatPaths {
               + " alone; no heat flows through it");
     }
     return warnings;
+  }
+
+  /** The materials of a part in words, in alphabetical order. */
+  private String materials(int root) {
+    Set<String> names = new TreeSet<>();
+    for (int face = 0; face < partition.faceCount(); face++) {
+      int label = partition.faceLabel(face);
+      if (conducts(label) && root(part, face) == root) {
+        names.add("'" + outline.conditions().material(label).name() + "'");
+      }
+    }
+    return String.join(", ", names);
   }
 
   private String name(int space) {
@@ -165,15 +200,22 @@ final class HeatPaths {
 
   /** Of the corners of a face the one farthest left, the lowest of several. */
   private Point corner(int face) {
-    return Arrays.stream(partition.faceRings(face).get(0))
-        .mapToObj(outline::point)
-        .min(Outline.LEFT_TO_RIGHT)
-        .orElseThrow();
+    int[] ring = partition.faceRings(face).get(0);
+    Point first = outline.point(ring[0]);
+    for (int vertex : ring) {
+      Point point = outline.point(vertex);
+      if (Outline.LEFT_TO_RIGHT.compare(point, first) < 0) {
+        first = point;
+      }
+    }
+    return first;
   }
 
   private static int[] singles(int size) {
     int[] set = new int[size];
-    Arrays.setAll(set, i -> i);
+    for (int i = 0; i < size; i++) {
+      set[i] = i;
+    }
     return set;
   }
 

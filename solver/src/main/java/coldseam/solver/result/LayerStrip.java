@@ -36,7 +36,9 @@ final class LayerStrip {
     lateralSign = Math.signum(lateral);
     sine = Math.abs(lateral);
     borders.add(0.0);
-    layers.layers().forEach(layer -> borders.add(layer.endM() * sine));
+    for (FlankLayers.Layer layer : layers.layers()) {
+      borders.add(layer.endM() * sine);
+    }
   }
 
   /** Depth at which an edge first disturbs the layers; infinite if it is part of them. */

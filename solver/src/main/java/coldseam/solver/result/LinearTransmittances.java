@@ -8,9 +8,9 @@ import coldseam.solver.detail.Subtraction;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
-import java.util.function.Function;
 
 /** ψ = Σ b·L2D − Σ b·U·l (ISO 10211:2017, clause 12). */
 final class LinearTransmittances {
@@ -33,7 +33,7 @@ final class LinearTransmittances {
     List<String> shifts = new ArrayList<>();
     for (PsiPlan plan : plans) {
       for (PsiPlan.Term term : plan.terms()) {
-        if (term.flank().filter(flank::equals).isPresent() && term.separation().floating() < 0) {
+        if (term.of(flank) && term.separation().floating() < 0) {
           double shift =
               -(term.uWPerM2K().get().mid() - flank.drawnUWPerM2K().getAsDouble())
                   * term.lengthM()
@@ -53,19 +53,22 @@ final class LinearTransmittances {
    * @param others L2D of the other details
    */
   List<Result.LinearTransmittance> evaluate(
-      Couplings couplings, Function<Subtraction.OfDetail, OtherCoupling> others) {
-    return plans.stream().map(plan -> evaluate(plan, couplings, others)).toList();
+      Couplings couplings, Map<Subtraction.OfDetail, OtherCoupling> others) {
+    List<Result.LinearTransmittance> all = new ArrayList<>();
+    for (PsiPlan plan : plans) {
+      all.add(evaluate(plan, couplings, others));
+    }
+    return all;
   }
 
   private Result.LinearTransmittance evaluate(
-      PsiPlan plan, Couplings couplings, Function<Subtraction.OfDetail, OtherCoupling> others) {
+      PsiPlan plan, Couplings couplings, Map<Subtraction.OfDetail, OtherCoupling> others) {
     Total coupling = new Total();
     coupling.add(1, couplings.between(plan.warm(), plan.cold(), plan.floating()));
-    plan.weights()
-        .forEach(
-            (space, b) ->
-                coupling.add(
-                    b, couplings.between(plan.warm(), new int[] {space}, plan.floating())));
+    for (Map.Entry<Integer, Double> weight : plan.weights().entrySet()) {
+      int[] between = {weight.getKey()};
+      coupling.add(weight.getValue(), couplings.between(plan.warm(), between, plan.floating()));
+    }
     Quantity start = coupling.quantity();
     Total psi = new Total().add(1, start);
     List<Result.Subtracted> subtracted = new ArrayList<>();
@@ -76,7 +79,7 @@ final class LinearTransmittances {
               : couplings.response(plan.floating(), term.separation().floating(), plan.cold());
       Bracket value;
       if (term.other().isPresent()) {
-        Quantity other = others.apply(term.other().get()).value();
+        Quantity other = others.get(term.other().get()).value();
         psi.add(-1, other);
         value = Total.bracket(other);
       } else {
@@ -106,13 +109,13 @@ final class LinearTransmittances {
         value,
         List.copyOf(subtracted),
         parts(plan, couplings),
-        made.map(Combination::sensitivities).orElse(List.of()),
-        made.flatMap(all -> all.tolerance(value)));
+        made.isEmpty() ? List.of() : made.get().sensitivities(),
+        made.isEmpty() ? Optional.empty() : made.get().tolerance(value));
   }
 
   /** ψ by material and film: empty where an L2D in it is infinite. */
   private Optional<Combination> combination(
-      PsiPlan plan, Couplings couplings, Function<Subtraction.OfDetail, OtherCoupling> others) {
+      PsiPlan plan, Couplings couplings, Map<Subtraction.OfDetail, OtherCoupling> others) {
     Optional<ByPart> coupling =
         couplings.byPart(plan.warm(), plan.cold(), plan.weights(), plan.floating());
     if (coupling.isEmpty()) {
@@ -121,7 +124,7 @@ final class LinearTransmittances {
     Combination all = new Combination().add(1, coupling.get());
     for (PsiPlan.Term term : plan.terms()) {
       if (term.other().isPresent()) {
-        Optional<ByPart> other = others.apply(term.other().get()).byPart();
+        Optional<ByPart> other = others.get(term.other().get()).byPart();
         if (other.isEmpty()) {
           return Optional.empty();
         }
@@ -136,7 +139,8 @@ final class LinearTransmittances {
         ByPart slopes = couplings.responseByPart(plan.floating(), floating, plan.cold());
         all.add(-u.mid() * term.lengthM(), slopes);
       }
-      Optional<ByPart> layers = term.flank().flatMap(flank -> flank.byPart(detail, conditions));
+      Optional<ByPart> layers =
+          term.flank().isEmpty() ? Optional.empty() : term.flank().get().byPart(detail, conditions);
       if (layers.isPresent()) {
         all.add(-weight * term.lengthM(), layers.get());
       } else {
@@ -157,7 +161,9 @@ final class LinearTransmittances {
       for (int c : plan.cold()) {
         parts.add(part(plan, couplings, w, c, 1));
       }
-      plan.weights().forEach((space, b) -> parts.add(part(plan, couplings, w, space, b)));
+      for (Map.Entry<Integer, Double> weight : plan.weights().entrySet()) {
+        parts.add(part(plan, couplings, w, weight.getKey(), weight.getValue()));
+      }
     }
     return parts;
   }

@@ -15,8 +15,15 @@ final class Outline {
   static final double IN_LINE = 1e-6;
 
   /** Places from left to right, then upwards. */
-  static final Comparator<Point> LEFT_TO_RIGHT =
-      Comparator.comparingDouble(Point::x).thenComparingDouble(Point::y);
+  static final Comparator<Point> LEFT_TO_RIGHT = new LeftToRight();
+
+  private static final class LeftToRight implements Comparator<Point> {
+    @Override
+    public int compare(Point a, Point b) {
+      int across = Double.compare(a.x(), b.x());
+      return across != 0 ? across : Double.compare(a.y(), b.y());
+    }
+  }
 
   private final Partition partition;
   private final Conditions conditions;

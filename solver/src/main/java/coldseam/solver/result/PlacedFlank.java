@@ -47,7 +47,7 @@ record PlacedFlank(
 
   /** U as typed, else of the drawn layers. */
   Optional<Bracket> uWPerM2K() {
-    Optional<Bracket> stated = typed.flatMap(Flank::typedUWPerM2K);
+    Optional<Bracket> stated = statedUWPerM2K();
     if (stated.isPresent() || drawnUWPerM2K().isEmpty()) {
       return stated;
     }
@@ -74,8 +74,12 @@ record PlacedFlank(
     return Optional.of(ByPart.layers(parts, resistances));
   }
 
+  private Optional<Bracket> statedUWPerM2K() {
+    return typed.isEmpty() ? Optional.empty() : typed.get().typedUWPerM2K();
+  }
+
   boolean typedU() {
-    return typed.flatMap(Flank::typedUWPerM2K).isPresent();
+    return statedUWPerM2K().isPresent();
   }
 
   Optional<FlankEnd> inner() {
@@ -92,7 +96,9 @@ record PlacedFlank(
       return List.of();
     }
     List<String> words = new ArrayList<>();
-    reading.layers().get().layers().forEach(layer -> words.add(layer.words()));
+    for (FlankLayers.Layer layer : reading.layers().get().layers()) {
+      words.add(layer.words());
+    }
     if (plane.isPresent() && warmEnd.isPresent() && warmEnd.get().vertex() != plane.get().first()) {
       Collections.reverse(words);
     }
@@ -108,17 +114,16 @@ record PlacedFlank(
 
   /** The two ends of its plane in words. */
   String placeWords(Outline outline) {
-    return plane
-        .map(
-            p ->
-                "the cut-off plane "
-                    + Wording.place(outline.point(p.first()))
-                    + " to "
-                    + Wording.place(outline.point(p.last())))
-        .orElse("no plane of its own");
+    if (plane.isEmpty()) {
+      return "no plane of its own";
+    }
+    return "the cut-off plane "
+        + Wording.place(outline.point(plane.get().first()))
+        + " to "
+        + Wording.place(outline.point(plane.get().last()));
   }
 
   Map<DimensionSystem, Double> typedLengths() {
-    return typed.map(Flank::typedLengthM).orElse(Map.of());
+    return typed.isEmpty() ? Map.of() : typed.get().typedLengthM();
   }
 }

@@ -1,6 +1,7 @@
 package coldseam.solver.result;
 
 import coldseam.mesh.partition.Partition;
+import coldseam.mesh.plane.Point;
 import coldseam.solver.conduction.Solution;
 import coldseam.solver.detail.Assumption;
 import coldseam.solver.detail.Bracket;
@@ -15,13 +16,11 @@ import coldseam.solver.detail.Subtraction;
 import coldseam.solver.detail.Wanted;
 import coldseam.solver.detail.Wording;
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.BitSet;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.function.Function;
 import java.util.function.Supplier;
 
 /**
@@ -70,7 +69,9 @@ public final class Plan {
     faults.addAll(planner.faults());
     faults.addAll(transmittances.faults());
     faults.addAll(section.faults());
-    others.forEach((of, other) -> faults.addAll(other.sides(of.name(), of.warm(), of.cold())));
+    for (Map.Entry<Subtraction.OfDetail, Plan> other : others.entrySet()) {
+      faults.addAll(other.getValue().sides(other.getKey()));
+    }
     if (!faults.isEmpty()) {
       throw new DetailException(faults);
     }
@@ -83,10 +84,14 @@ public final class Plan {
     if (!module) {
       warnings.addAll(cutOffs.distances());
     }
-    flanks.forEach(this::warnOfFlank);
-    others.forEach(
-        (of, other) ->
-            other.warnings.forEach(warning -> warnings.add("in '" + of.name() + "': " + warning)));
+    for (PlacedFlank flank : flanks) {
+      warnOfFlank(flank);
+    }
+    for (Map.Entry<Subtraction.OfDetail, Plan> other : others.entrySet()) {
+      for (String warning : other.getValue().warnings) {
+        warnings.add("in '" + other.getKey().name() + "': " + warning);
+      }
+    }
   }
 
   /**
@@ -115,22 +120,25 @@ public final class Plan {
     List<Result.FlankResult> results = new ArrayList<>();
     Outline outline = new Outline(partition, heatLoss);
     for (PlacedFlank flank : flanks) {
-      flank
-          .uWPerM2K()
-          .ifPresent(
-              u ->
-                  results.add(
-                      new Result.FlankResult(
-                          flank.name(),
-                          u,
-                          name(flank.warm()),
-                          name(flank.cold()),
-                          flank.warmEnd().map(end -> outline.point(end.vertex())),
-                          flank.coldEnd().map(end -> outline.point(end.vertex())),
-                          flank.layerWords(),
-                          lengths.known(flank))));
+      Optional<Bracket> u = flank.uWPerM2K();
+      if (u.isPresent()) {
+        results.add(
+            new Result.FlankResult(
+                flank.name(),
+                u.get(),
+                name(flank.warm()),
+                name(flank.cold()),
+                place(outline, flank.warmEnd()),
+                place(outline, flank.coldEnd()),
+                flank.layerWords(),
+                lengths.known(flank)));
+      }
     }
     return results;
+  }
+
+  private static Optional<Point> place(Outline outline, Optional<FlankEnd> end) {
+    return end.isEmpty() ? Optional.empty() : Optional.of(outline.point(end.get().vertex()));
   }
 
   private String name(int space) {
@@ -162,15 +170,31 @@ public final class Plan {
    * a point or profile asks for them.
    */
   public boolean surfaceNeeded() {
+    return facesInside() || asksFor(FilmSet.SURFACE);
+  }
+
+  private boolean facesInside() {
     BitSet faced = Couplings.faced(partition.edgeCount(), heatLoss);
-    boolean inside =
-        faced.stream().anyMatch(i -> detail.spaces().get(i).exposure() == Exposure.INSIDE);
-    return inside || detail.wanted().stream().anyMatch(wanted -> asksFor(wanted, FilmSet.SURFACE));
+    for (int i = faced.nextSetBit(0); i >= 0; i = faced.nextSetBit(i + 1)) {
+      if (detail.spaces().get(i).exposure() == Exposure.INSIDE) {
+        return true;
+      }
+    }
+    return false;
   }
 
   /** Whether a point or profile asks for the films for heat loss. */
   public boolean heatLossTemperaturesWanted() {
-    return detail.wanted().stream().anyMatch(wanted -> asksFor(wanted, FilmSet.HEAT_LOSS));
+    return asksFor(FilmSet.HEAT_LOSS);
+  }
+
+  private boolean asksFor(FilmSet set) {
+    for (Wanted wanted : detail.wanted()) {
+      if (asksFor(wanted, set)) {
+        return true;
+      }
+    }
+    return false;
   }
 
   private static boolean asksFor(Wanted wanted, FilmSet set) {
@@ -196,15 +220,13 @@ public final class Plan {
    * Temperatures to start from: those stated, and the mean of the stated ones for floating spaces.
    */
   public double[] statedTemperatures() {
-    double mean =
-        detail.spaces().stream()
-            .filter(space -> space.floating().isEmpty())
-            .mapToDouble(Space::temperatureC)
-            .average()
-            .orElse(0);
-    return detail.spaces().stream()
-        .mapToDouble(space -> space.floating().isEmpty() ? space.temperatureC() : mean)
-        .toArray();
+    double mean = detail.meanStatedTemperatureC();
+    double[] temperatures = new double[detail.spaces().size()];
+    for (int i = 0; i < temperatures.length; i++) {
+      Space space = detail.spaces().get(i);
+      temperatures[i] = space.floating().isEmpty() ? space.temperatureC() : mean;
+    }
+    return temperatures;
   }
 
   /**
@@ -226,21 +248,26 @@ public final class Plan {
    * @return W/(m·K)
    */
   public OtherCoupling coupling(Solution heatLossSolution, List<String> warm, List<String> cold) {
-    int[] one = warm.stream().mapToInt(detail::spaceIndex).toArray();
-    int[] other = cold.stream().mapToInt(detail::spaceIndex).toArray();
-    int[] floating =
-        Arrays.stream(Couplings.floating(detail))
-            .filter(f -> !Couplings.contains(one, f) && !Couplings.contains(other, f))
-            .toArray();
+    int[] one = indices(warm);
+    int[] other = indices(cold);
+    int[] floating = Couplings.floatingBeside(detail, one, other);
     Couplings couplings = new Couplings(detail, heatLossSolution);
     return new OtherCoupling(
         couplings.between(one, other, floating), couplings.byPart(one, other, Map.of(), floating));
   }
 
+  private int[] indices(List<String> names) {
+    int[] indices = new int[names.size()];
+    for (int i = 0; i < indices.length; i++) {
+      indices[i] = detail.spaceIndex(names.get(i));
+    }
+    return indices;
+  }
+
   /** Faults in the sides between which another detail's L2D is asked of this one. */
-  private List<Fault> sides(String name, List<String> warm, List<String> cold) {
-    SpaceGroups groups = new SpaceGroups(detail, "psi", name);
-    groups.checkApart(groups.indices(warm), groups.indices(cold));
+  private List<Fault> sides(Subtraction.OfDetail asked) {
+    SpaceGroups groups = new SpaceGroups(detail, "psi", asked.name());
+    groups.checkApart(groups.indices(asked.warm()), groups.indices(asked.cold()));
     return groups.faults();
   }
 
@@ -257,15 +284,17 @@ public final class Plan {
   public Result result(
       Solution heatLossSolution,
       Optional<Solution> surfaceSolution,
-      Function<Subtraction.OfDetail, OtherCoupling> others,
+      Map<Subtraction.OfDetail, OtherCoupling> others,
       Supplier<Map<String, Double>> timesMs) {
     Couplings couplings = new Couplings(detail, heatLossSolution);
     double[] temperatures = couplings.temperatures();
     FieldSet lossFields = new FieldSet(FilmSet.HEAT_LOSS, heatLossSolution, temperatures);
     Optional<FieldSet> surfaceFields =
-        surfaceSolution.map(solution -> new FieldSet(FilmSet.SURFACE, solution, temperatures));
+        surfaceSolution.isEmpty()
+            ? Optional.empty()
+            : Optional.of(new FieldSet(FilmSet.SURFACE, surfaceSolution.get(), temperatures));
     FieldSet coldestFields = surfaceFields.orElse(lossFields);
-    Profiles.Sets sets = set -> set == FilmSet.HEAT_LOSS ? lossFields : surfaceFields.orElseThrow();
+    FieldSets sets = new FieldSets(lossFields, surfaceFields);
     SurfaceTemperatures surfaces = new SurfaceTemperatures(detail, temperatures, coldestFields);
     Balances balances = new Balances(detail, heatLossSolution, temperatures);
     Profiles profiles = new Profiles(detail, sets);
@@ -278,7 +307,7 @@ public final class Plan {
         couplings.pairs(),
         psi.evaluate(couplings, others),
         transmittances.evaluate(couplings),
-        surfaces.spaces(balances::ofSpace),
+        surfaces.spaces(balances),
         balances.stretches(),
         profiles.points(),
         profiles.profiles(),
@@ -315,7 +344,9 @@ public final class Plan {
       }
     }
     all.addAll(ofPsi);
-    others.forEach((of, other) -> other.heatLossAssumptions(of.name()).forEach(all::add));
+    for (Map.Entry<Subtraction.OfDetail, Plan> other : others.entrySet()) {
+      all.addAll(other.getValue().heatLossAssumptions(other.getKey().name()));
+    }
     all.addAll(transmittances.assumptions());
     if (module && cutOffs.any()) {
       all.add(
@@ -345,13 +376,13 @@ public final class Plan {
 
   /** What was assumed for the L2D that another detail subtracts. */
   private List<Assumption> heatLossAssumptions(String name) {
-    List<Assumption> of = new ArrayList<>(detail.assumptions());
-    of.addAll(heatLoss.assumptions());
-    return of.stream()
-        .map(
-            line ->
-                new Assumption("in '" + name + "': " + line.what(), line.value(), line.source()))
-        .toList();
+    List<Assumption> own = new ArrayList<>(detail.assumptions());
+    own.addAll(heatLoss.assumptions());
+    List<Assumption> named = new ArrayList<>();
+    for (Assumption line : own) {
+      named.add(new Assumption("in '" + name + "': " + line.what(), line.value(), line.source()));
+    }
+    return named;
   }
 
   private void warnOfFlank(PlacedFlank flank) {

@@ -2,7 +2,6 @@ package coldseam.solver.result;
 
 import coldseam.mesh.plane.Point;
 import coldseam.solver.detail.Detail;
-import coldseam.solver.detail.FilmSet;
 import coldseam.solver.detail.Wanted;
 import java.util.ArrayList;
 import java.util.Comparator;
@@ -13,15 +12,9 @@ import java.util.Map;
 /** Temperatures at named points, along lines, and along the developed surface of a space. */
 final class Profiles {
   private final Detail detail;
-  private final Sets sets;
+  private final FieldSets sets;
 
-  /** The fields of each film set. */
-  @FunctionalInterface
-  interface Sets {
-    FieldSet of(FilmSet filmSet);
-  }
-
-  Profiles(Detail detail, Sets sets) {
+  Profiles(Detail detail, FieldSets sets) {
     this.detail = detail;
     this.sets = sets;
   }

@@ -42,7 +42,11 @@ record PsiPlan(
       Optional<Bracket> uWPerM2K,
       double lengthM,
       Optional<Subtraction.OfDetail> other,
-      String derivation) {}
+      String derivation) {
+    boolean of(PlacedFlank placed) {
+      return flank.isPresent() && flank.get().name().equals(placed.name());
+    }
+  }
 
   /**
    * How a flank counts in a ψ.

@@ -10,11 +10,13 @@ import coldseam.solver.detail.Wanted;
 import coldseam.solver.detail.Wording;
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.HashSet;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.Set;
 import java.util.TreeMap;
 
 /**
@@ -81,17 +83,23 @@ final class PsiPlanner {
     if (psi.subtractions().isEmpty()) {
       planAllFlanks(plan);
     } else {
-      psi.subtractions().forEach(subtraction -> planStated(plan, subtraction));
+      for (Subtraction subtraction : psi.subtractions()) {
+        planStated(plan, subtraction);
+      }
       warnOfFlanksLeft(plan);
     }
     plans.add(plan);
   }
 
   private int[] eliminated(int[] warm, int[] cold, Map<Integer, Double> weights) {
-    return Arrays.stream(Couplings.floating(detail))
-        .filter(f -> !Couplings.contains(warm, f) && !Couplings.contains(cold, f))
-        .filter(f -> !weights.containsKey(f))
-        .toArray();
+    int[] beside = Couplings.floatingBeside(detail, warm, cold);
+    int count = 0;
+    for (int f : beside) {
+      if (!weights.containsKey(f)) {
+        beside[count++] = f;
+      }
+    }
+    return Arrays.copyOf(beside, count);
   }
 
   private void planAllFlanks(PsiPlan plan) {
@@ -135,48 +143,54 @@ final class PsiPlanner {
    * detail may stand for one each.
    */
   private void warnOfFlanksLeft(PsiPlan plan) {
-    List<PlacedFlank> left =
-        flanks.stream()
-            .filter(flank -> flank.uWPerM2K().isPresent())
-            .filter(flank -> flank.warm() >= 0 || flank.cold() >= 0 || facedSpaces <= 2)
-            .filter(flank -> !plan.separation(flank).none())
-            .filter(
-                flank ->
-                    plan.wanted().subtractions().stream()
-                        .noneMatch(
-                            stated ->
-                                stated instanceof Subtraction.OfFlank of
-                                    && of.flank().equals(flank.name())))
-            .toList();
-    long others =
-        plan.wanted().subtractions().stream()
-            .filter(stated -> !(stated instanceof Subtraction.OfFlank))
-            .count();
+    Set<String> stated = new HashSet<>();
+    int others = 0;
+    for (Subtraction subtraction : plan.wanted().subtractions()) {
+      if (subtraction instanceof Subtraction.OfFlank of) {
+        stated.add(of.flank());
+      } else {
+        others++;
+      }
+    }
+    List<PlacedFlank> left = new ArrayList<>();
+    for (PlacedFlank flank : flanks) {
+      if (!stated.contains(flank.name()) && known(flank) && !plan.separation(flank).none()) {
+        left.add(flank);
+      }
+    }
     if (left.size() <= others) {
       return;
     }
     for (PlacedFlank flank : left) {
-      double u = flank.uWPerM2K().orElseThrow().mid();
       warnings.add(
           "ψ '"
               + plan.wanted().name()
               + "': its list leaves out flank '"
               + flank.name()
               + "', which lies between its two sides; not subtracted: "
-              + lengths
-                  .of(flank, plan.wanted().dimensions())
-                  .length()
-                  .map(
-                      l ->
-                          "U·l = "
-                              + Wording.figure(u)
-                              + " W/(m²·K) × "
-                              + Wording.length(l.valueM())
-                              + " = "
-                              + Wording.figure(u * l.valueM())
-                              + " W/(m·K)")
-                  .orElse("U = " + Wording.figure(u) + " W/(m²·K), length unknown"));
+              + transmissionWords(flank, plan.wanted().dimensions()));
     }
+  }
+
+  /** Whether the U of a flank is known, and between which spaces it lies. */
+  private boolean known(PlacedFlank flank) {
+    return flank.uWPerM2K().isPresent()
+        && (flank.warm() >= 0 || flank.cold() >= 0 || facedSpaces <= 2);
+  }
+
+  private String transmissionWords(PlacedFlank flank, DimensionSystem system) {
+    double u = flank.uWPerM2K().orElseThrow().mid();
+    Optional<Result.Length> length = lengths.of(flank, system).length();
+    if (length.isEmpty()) {
+      return "U = " + Wording.figure(u) + " W/(m²·K), length unknown";
+    }
+    return "U·l = "
+        + Wording.figure(u)
+        + " W/(m²·K) × "
+        + Wording.length(length.get().valueM())
+        + " = "
+        + Wording.figure(u * length.get().valueM())
+        + " W/(m·K)";
   }
 
   private void planStated(PsiPlan plan, Subtraction subtraction) {
@@ -208,8 +222,7 @@ final class PsiPlanner {
   }
 
   private void planStatedFlank(PsiPlan plan, Subtraction.OfFlank of) {
-    Optional<PlacedFlank> flank =
-        flanks.stream().filter(f -> f.name().equals(of.flank())).findFirst();
+    Optional<PlacedFlank> flank = named(of.flank());
     if (flank.isEmpty()) {
       fault(plan, "subtracts flank '" + of.flank() + "', which is not one of the flanks" + all());
       return;
@@ -228,10 +241,21 @@ final class PsiPlanner {
     addFlank(plan, flank.get(), separation, of.lengthM());
   }
 
+  private Optional<PlacedFlank> named(String name) {
+    for (PlacedFlank flank : flanks) {
+      if (flank.name().equals(name)) {
+        return Optional.of(flank);
+      }
+    }
+    return Optional.empty();
+  }
+
   private String all() {
-    return flanks.isEmpty()
-        ? "; there are none"
-        : " (" + String.join(", ", flanks.stream().map(PlacedFlank::name).toList()) + ")";
+    List<String> names = new ArrayList<>();
+    for (PlacedFlank flank : flanks) {
+      names.add(flank.name());
+    }
+    return names.isEmpty() ? "; there are none" : " (" + String.join(", ", names) + ")";
   }
 
   private String pairWords(PlacedFlank flank) {
@@ -257,18 +281,18 @@ final class PsiPlanner {
                     Optional.empty(),
                     "length typed for this ψ"))
             : derivedLength(plan, flank);
-    length.ifPresent(
-        known ->
-            plan.terms()
-                .add(
-                    new PsiPlan.Term(
-                        flank.name(),
-                        Optional.of(flank),
-                        separation,
-                        flank.uWPerM2K(),
-                        known.valueM(),
-                        Optional.empty(),
-                        flank.uWords() + "; " + known.derivation())));
+    if (length.isPresent()) {
+      plan.terms()
+          .add(
+              new PsiPlan.Term(
+                  flank.name(),
+                  Optional.of(flank),
+                  separation,
+                  flank.uWPerM2K(),
+                  length.get().valueM(),
+                  Optional.empty(),
+                  flank.uWords() + "; " + length.get().derivation()));
+    }
   }
 
   /** A flank named in the case is at fault by itself; one found here is so for this ψ. */
@@ -321,7 +345,9 @@ final class PsiPlanner {
   }
 
   private Optional<Point> place(PlacedFlank flank) {
-    return flank.plane().map(plane -> outline.point(plane.first()));
+    return flank.plane().isEmpty()
+        ? Optional.empty()
+        : Optional.of(outline.point(flank.plane().get().first()));
   }
 
   private void fault(PsiPlan plan, String message) {

@@ -68,11 +68,12 @@ final class SectionChecks {
 
   private String fills(List<Integer> labels) {
     List<Fill> fills = detail.fills();
-    List<String> names =
-        labels.stream()
-            .filter(label -> label >= 0 && label < fills.size())
-            .map(label -> "'" + fills.get(label).name() + "'")
-            .toList();
+    List<String> names = new ArrayList<>();
+    for (int label : labels) {
+      if (label >= 0 && label < fills.size()) {
+        names.add("'" + fills.get(label).name() + "'");
+      }
+    }
     int last = names.size() - 1;
     return last < 1
         ? String.join("", names)
@@ -118,10 +119,7 @@ final class SectionChecks {
       if (!outline.contains(edge)) {
         continue;
       }
-      List<Integer> stating =
-          outline.conditions().stretches(edge).stream()
-              .filter(i -> detail.stretches().get(i).condition().isPresent())
-              .toList();
+      List<Integer> stating = stating(edge);
       for (int k = 0; k < stating.size() - 1; k++) {
         int earlier = stating.get(k);
         int later = stating.get(stating.size() - 1);
@@ -130,24 +128,38 @@ final class SectionChecks {
             .get(earlier)
             .condition()
             .equals(detail.stretches().get(later).condition())) {
-          lengths.merge(List.of(earlier, later), partition.edgeLength(edge), Double::sum);
+          List<Integer> pair = List.of(earlier, later);
+          lengths.put(pair, lengths.getOrDefault(pair, 0.0) + partition.edgeLength(edge));
         }
       }
     }
     List<String> warnings = new ArrayList<>();
-    lengths.forEach(
-        (pair, length) ->
-            warnings.add(
-                "stretches '"
-                    + detail.stretches().get(pair.get(0)).name()
-                    + "' and '"
-                    + detail.stretches().get(pair.get(1)).name()
-                    + "' say different things along the same "
-                    + Wording.length(length)
-                    + ": the later one, '"
-                    + detail.stretches().get(pair.get(1)).name()
-                    + "', counts there"));
+    for (Map.Entry<List<Integer>, Double> overlaid : lengths.entrySet()) {
+      String earlier = detail.stretches().get(overlaid.getKey().get(0)).name();
+      String later = detail.stretches().get(overlaid.getKey().get(1)).name();
+      warnings.add(
+          "stretches '"
+              + earlier
+              + "' and '"
+              + later
+              + "' say different things along the same "
+              + Wording.length(overlaid.getValue())
+              + ": the later one, '"
+              + later
+              + "', counts there");
+    }
     return warnings;
+  }
+
+  /** The stretches on an edge that state a condition, the one that counts last. */
+  private List<Integer> stating(int edge) {
+    List<Integer> stating = new ArrayList<>();
+    for (int stretch : outline.conditions().stretches(edge)) {
+      if (detail.stretches().get(stretch).condition().isPresent()) {
+        stating.add(stretch);
+      }
+    }
+    return stating;
   }
 
   /** Faults of points and profiles asked for. */

@@ -20,6 +20,13 @@ final class Sharing {
 
   private static final Result.Shares NONE = new Result.Shares("", List.of());
 
+  private static final class LargestFirst implements Comparator<Result.Share> {
+    @Override
+    public int compare(Result.Share a, Result.Share b) {
+      return Double.compare(b.share(), a.share());
+    }
+  }
+
   private Sharing() {}
 
   /**
@@ -61,7 +68,7 @@ final class Sharing {
               energies[p] / all,
               part.relativeTolerance()));
     }
-    shares.sort(Comparator.comparingDouble(share -> -share.share()));
+    shares.sort(new LargestFirst());
     return new Result.Shares(words(detail, x), List.copyOf(shares));
   }
 

@@ -11,8 +11,8 @@ import coldseam.solver.detail.Wording;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.TreeMap;
-import java.util.function.BinaryOperator;
 
 /** What looks doubtful in the spaces: air that meets other air, and temperatures. */
 final class SpaceChecks {
@@ -47,21 +47,25 @@ final class SpaceChecks {
           && unlike(one, other)) {
         String pair = "'" + one.name() + "' meets '" + other.name() + "'";
         for (int end : new int[] {partition.edgeStart(edge), partition.edgeEnd(edge)}) {
-          places.merge(pair, outline.point(end), BinaryOperator.minBy(Outline.LEFT_TO_RIGHT));
+          Point at = outline.point(end);
+          Point first = places.get(pair);
+          if (first == null || Outline.LEFT_TO_RIGHT.compare(at, first) < 0) {
+            places.put(pair, at);
+          }
         }
-        lengths.merge(pair, partition.edgeLength(edge), Double::sum);
+        lengths.put(pair, lengths.getOrDefault(pair, 0.0) + partition.edgeLength(edge));
       }
     }
     List<String> warnings = new ArrayList<>();
-    lengths.forEach(
-        (pair, length) ->
-            warnings.add(
-                pair
-                    + " with nothing between them along "
-                    + Wording.length(length)
-                    + " from "
-                    + Wording.place(places.get(pair))
-                    + ": no heat is counted there"));
+    for (Map.Entry<String, Double> meeting : lengths.entrySet()) {
+      warnings.add(
+          meeting.getKey()
+              + " with nothing between them along "
+              + Wording.length(meeting.getValue())
+              + " from "
+              + Wording.place(places.get(meeting.getKey()))
+              + ": no heat is counted there");
+    }
     return warnings;
   }
 
@@ -77,45 +81,58 @@ final class SpaceChecks {
   /** Each outside space with the coldest of the inside ones colder than it. */
   private List<String> warmOutside() {
     List<String> warnings = new ArrayList<>();
-    for (Space outside : stated(Exposure.OUTSIDE)) {
-      stated(Exposure.INSIDE).stream()
-          .filter(inside -> inside.temperatureC() < outside.temperatureC())
-          .min((a, b) -> Double.compare(a.temperatureC(), b.temperatureC()))
-          .ifPresent(
-              inside ->
-                  warnings.add(
-                      "outside '"
-                          + outside.name()
-                          + "' at "
-                          + Wording.figure(outside.temperatureC())
-                          + " °C is warmer than inside '"
-                          + inside.name()
-                          + "' at "
-                          + Wording.figure(inside.temperatureC())
-                          + " °C: is it meant?"));
+    Optional<Space> coldestInside = coldestInside();
+    if (coldestInside.isEmpty()) {
+      return warnings;
+    }
+    Space inside = coldestInside.get();
+    for (Space outside : detail.spaces()) {
+      if (outside.floating().isEmpty()
+          && outside.exposure() == Exposure.OUTSIDE
+          && outside.temperatureC() > inside.temperatureC()) {
+        warnings.add(
+            "outside '"
+                + outside.name()
+                + "' at "
+                + Wording.figure(outside.temperatureC())
+                + " °C is warmer than inside '"
+                + inside.name()
+                + "' at "
+                + Wording.figure(inside.temperatureC())
+                + " °C: is it meant?");
+      }
     }
     return warnings;
   }
 
-  private List<Space> stated(Exposure exposure) {
-    return detail.spaces().stream()
-        .filter(space -> space.floating().isEmpty() && space.exposure() == exposure)
-        .toList();
+  /** The coldest inside space of stated temperature, the first of several. */
+  private Optional<Space> coldestInside() {
+    Space coldest = null;
+    for (Space space : detail.spaces()) {
+      if (space.floating().isEmpty()
+          && space.exposure() == Exposure.INSIDE
+          && (coldest == null || space.temperatureC() < coldest.temperatureC())) {
+        coldest = space;
+      }
+    }
+    return Optional.ofNullable(coldest);
   }
 
   private List<String> equalTemperatures() {
-    double[] stated =
-        detail.spaces().stream()
-            .filter(space -> space.floating().isEmpty())
-            .mapToDouble(Space::temperatureC)
-            .distinct()
-            .toArray();
-    if (detail.spaces().size() < 2 || stated.length != 1 || heated()) {
+    double lowest = Double.POSITIVE_INFINITY;
+    double highest = Double.NEGATIVE_INFINITY;
+    for (Space space : detail.spaces()) {
+      if (space.floating().isEmpty()) {
+        lowest = Math.min(lowest, space.temperatureC());
+        highest = Math.max(highest, space.temperatureC());
+      }
+    }
+    if (detail.spaces().size() < 2 || lowest != highest || heated()) {
       return List.of();
     }
     return List.of(
         "every space is at "
-            + Wording.figure(stated[0])
+            + Wording.figure(lowest)
             + " °C: no heat flows; only L2D, ψ and U have a meaning");
   }
 

@@ -3,6 +3,7 @@ package coldseam.solver.result;
 import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.Fault;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 
@@ -20,7 +21,15 @@ final class SpaceGroups {
   }
 
   int[] indices(List<String> names) {
-    return names.stream().mapToInt(this::index).filter(i -> i >= 0).distinct().toArray();
+    int[] indices = new int[names.size()];
+    int count = 0;
+    for (String space : names) {
+      int index = index(space);
+      if (index >= 0 && !Couplings.contains(Arrays.copyOf(indices, count), index)) {
+        indices[count++] = index;
+      }
+    }
+    return Arrays.copyOf(indices, count);
   }
 
   private int index(String space) {

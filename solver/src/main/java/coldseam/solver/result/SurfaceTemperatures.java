@@ -55,7 +55,7 @@ final class SurfaceTemperatures {
   }
 
   /** What concerns every space, its flow taken from the heat-loss solution. */
-  List<Result.SpaceResult> spaces(Flows flows) {
+  List<Result.SpaceResult> spaces(Balances flows) {
     List<Result.SpaceResult> results = new ArrayList<>();
     for (int i = 0; i < detail.spaces().size(); i++) {
       Space space = detail.spaces().get(i);
@@ -66,8 +66,8 @@ final class SurfaceTemperatures {
               temperaturesC[i],
               space.floating().isPresent(),
               flows.ofSpace(i),
-              extreme(i, true).map(this::point),
-              extreme(i, false).map(this::point),
+              point(extreme(i, true)),
+              point(extreme(i, false)),
               compared ? Optional.of(detail.spaces().get(reference).name()) : Optional.empty()));
     }
     return results;
@@ -105,6 +105,10 @@ final class SurfaceTemperatures {
         : side.at(fields.field(), s);
   }
 
+  private Optional<Result.SurfacePoint> point(Optional<Extreme> extreme) {
+    return extreme.isEmpty() ? Optional.empty() : Optional.of(point(extreme.get()));
+  }
+
   private Result.SurfacePoint point(Extreme extreme) {
     int edge = extreme.place().side().edge();
     int space = conditions.space(edge);
@@ -128,11 +132,5 @@ final class SurfaceTemperatures {
         && faced.get(space)
         && detail.spaces().get(space).exposure() == Exposure.INSIDE
         && temperaturesC[space] > temperaturesC[reference];
-  }
-
-  /** Heat flow of a space, W/m. */
-  @FunctionalInterface
-  interface Flows {
-    double ofSpace(int space);
   }
 }

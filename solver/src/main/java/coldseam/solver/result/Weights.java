@@ -6,7 +6,7 @@ import coldseam.solver.detail.Wanted;
 import java.util.ArrayList;
 import java.util.BitSet;
 import java.util.List;
-import java.util.function.IntToDoubleFunction;
+import java.util.Optional;
 
 /**
  * Temperature weighting factors g with θ(point) = Σ g_k θ_k (ISO 10211, more than two
@@ -31,7 +31,7 @@ final class Weights {
    * @param fields the fields of each film set
    */
   static List<Result.Weight> of(
-      Detail detail, SurfaceTemperatures surfaces, FieldSet coldestFields, Profiles.Sets fields) {
+      Detail detail, SurfaceTemperatures surfaces, FieldSet coldestFields, FieldSets fields) {
     BitSet faced = Couplings.faced(coldestFields.solution());
     if (faced.cardinality() < FEWEST_SPACES) {
       return List.of();
@@ -40,32 +40,27 @@ final class Weights {
     for (int i = faced.nextSetBit(0); i >= 0; i = faced.nextSetBit(i + 1)) {
       if (detail.spaces().get(i).exposure() == Exposure.INSIDE) {
         String name = "coldest of " + detail.spaces().get(i).name();
-        surfaces
-            .extreme(i, true)
-            .ifPresent(
-                extreme ->
-                    all.add(
-                        name,
-                        coldestFields,
-                        faced,
-                        k ->
-                            extreme.place().side().at(coldestFields.unit(k), extreme.place().s())));
+        Optional<SurfaceTemperatures.Extreme> coldest = surfaces.extreme(i, true);
+        if (coldest.isPresent()) {
+          SurfaceTrace.Place place = coldest.get().place();
+          for (int k = faced.nextSetBit(0); k >= 0; k = faced.nextSetBit(k + 1)) {
+            all.add(name, coldestFields, k, place.side().at(coldestFields.unit(k), place.s()));
+          }
+        }
       }
     }
     for (Wanted wanted : detail.wanted()) {
       if (wanted instanceof Wanted.Temperature point) {
         FieldSet set = fields.of(point.filmSet());
-        all.add(point.name(), set, faced, k -> set.at(set.unit(k), point.at()));
+        for (int k = faced.nextSetBit(0); k >= 0; k = faced.nextSetBit(k + 1)) {
+          all.add(point.name(), set, k, set.at(set.unit(k), point.at()));
+        }
       }
     }
     return all.weights;
   }
 
-  private void add(String point, FieldSet set, BitSet faced, IntToDoubleFunction g) {
-    for (int k = faced.nextSetBit(0); k >= 0; k = faced.nextSetBit(k + 1)) {
-      weights.add(
-          new Result.Weight(
-              point, set.filmSet(), detail.spaces().get(k).name(), g.applyAsDouble(k)));
-    }
+  private void add(String point, FieldSet set, int space, double g) {
+    weights.add(new Result.Weight(point, set.filmSet(), detail.spaces().get(space).name(), g));
   }
 }
