@@ -35,6 +35,13 @@ final class OutputFolder {
     void write(Path file, byte[] bytes) throws IOException;
   }
 
+  private static final class OnDisk implements FileWriter {
+    @Override
+    public void write(Path file, byte[] bytes) throws IOException {
+      Files.write(file, bytes);
+    }
+  }
+
   private final Path folder;
   private final String shown;
   private final FileWriter writer;
@@ -46,7 +53,7 @@ final class OutputFolder {
    * @param shown how messages call it
    */
   OutputFolder(Path folder, String shown) {
-    this(folder, shown, Files::write);
+    this(folder, shown, new OnDisk());
   }
 
   OutputFolder(Path folder, String shown, FileWriter writer) {

@@ -9,6 +9,7 @@ import coldseam.cli.sheet.Subject;
 import coldseam.solver.Solver;
 import coldseam.solver.conduction.Progress;
 import coldseam.solver.detail.Accuracy;
+import coldseam.solver.detail.Detail;
 import coldseam.solver.result.Result;
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
@@ -92,9 +93,9 @@ final class SolveCommand implements Command {
       throws UsageException, CaseException, IOException {
     contradictions(typed);
     List<Job> jobs = jobs(typed, here);
-    if (!typed.has(NO_PLOTS) && jobs.stream().anyMatch(job -> job.folder().isPresent())) {
+    if (!typed.has(NO_PLOTS) && anyFolder(jobs)) {
       // A task keeps to itself what goes wrong; drawing will say it again.
-      Thread plots = new Thread(new FutureTask<>(Plots::prepare, null), "prepare plots");
+      Thread plots = new Thread(new FutureTask<>(new Preparation(), null), "prepare plots");
       plots.setDaemon(true);
       plots.start();
     }
@@ -106,6 +107,23 @@ final class SolveCommand implements Command {
       first = false;
     }
     return code;
+  }
+
+  private static boolean anyFolder(List<Job> jobs) {
+    for (Job job : jobs) {
+      if (job.folder().isPresent()) {
+        return true;
+      }
+    }
+    return false;
+  }
+
+  /** Makes ready for plots while the case is solved. */
+  private static final class Preparation implements Runnable {
+    @Override
+    public void run() {
+      Plots.prepare();
+    }
   }
 
   private static void contradictions(Syntax.Typed typed) throws UsageException {
@@ -131,7 +149,9 @@ final class SolveCommand implements Command {
       } else {
         variants.add(Optional.empty());
         if (typed.has(VARIANTS)) {
-          from.variants().forEach(name -> variants.add(Optional.of(name)));
+          for (String name : from.variants()) {
+            variants.add(Optional.of(name));
+          }
         }
       }
       Accuracy accuracy = from.accuracy();
@@ -166,7 +186,7 @@ final class SolveCommand implements Command {
       return Optional.empty();
     }
     Path file = here.cwd().resolve(from.file());
-    String stem = file.getFileName().toString().replaceFirst("\\.ya?ml$", "");
+    String stem = stem(file.getFileName().toString());
     Path folder;
     if (!typed.has(OUT)) {
       folder = file.resolveSibling(stem + ".coldseam");
@@ -188,29 +208,47 @@ final class SolveCommand implements Command {
     return Optional.of(new OutputFolder(folder, here.shown(folder)));
   }
 
+  /** The name of a case file without its ending. */
+  private static String stem(String file) {
+    for (String ending : List.of(".yaml", ".yml")) {
+      if (file.endsWith(ending)) {
+        return file.substring(0, file.length() - ending.length());
+      }
+    }
+    return file;
+  }
+
   /** A variant's name as the name of a folder. */
   static String fileName(String variant) {
     StringBuilder name = new StringBuilder();
-    variant
-        .codePoints()
-        .forEach(
-            c ->
-                name.appendCodePoint(
-                    Character.isLetterOrDigit(c) ? c : "._+".indexOf(c) >= 0 ? c : '-'));
+    for (int i = 0; i < variant.length(); i += Character.charCount(variant.codePointAt(i))) {
+      int c = variant.codePointAt(i);
+      name.appendCodePoint(Character.isLetterOrDigit(c) || "._+".indexOf(c) >= 0 ? c : '-');
+    }
     return name.charAt(0) == '.' ? "-" + name : name.toString();
   }
 
   private static Result solve(Job job, Syntax.Typed typed, Surroundings here) throws CaseException {
     Optional<String> variant = job.subject().variant();
     if (!here.errIsTerminal() || typed.has(QUIET)) {
-      return CaseList.work(
-          job.from(), variant, detail -> Solver.solve(detail, job.accuracy(), Progress.SILENT));
+      return CaseList.work(job.from(), variant, new Solving(job.accuracy(), Progress.SILENT));
     }
-    String name = job.subject().file() + variant.map(v -> ", " + v).orElse("");
-    try (ProgressLine progress = new ProgressLine(here.err(), name)) {
-      return CaseList.work(
-          job.from(), variant, detail -> Solver.solve(detail, job.accuracy(), progress));
+    try (ProgressLine progress = new ProgressLine(here.err(), name(job))) {
+      return CaseList.work(job.from(), variant, new Solving(job.accuracy(), progress));
     }
+  }
+
+  private record Solving(Accuracy accuracy, Progress progress) implements CaseList.Work<Result> {
+    @Override
+    public Result on(Detail detail) {
+      return Solver.solve(detail, accuracy, progress);
+    }
+  }
+
+  /** The file of a job, and its variant if it has one. */
+  private static String name(Job job) {
+    Optional<String> variant = job.subject().variant();
+    return job.subject().file() + (variant.isEmpty() ? "" : ", " + variant.get());
   }
 
   private static int conclude(
@@ -232,8 +270,7 @@ final class SolveCommand implements Command {
     if (Sheet.accurateEnough(job.subject(), result)) {
       return ExitCode.DONE;
     }
-    String which = job.subject().file() + job.subject().variant().map(v -> ", " + v).orElse("");
-    here.err().println(here.errInk().alert(which + ": the accuracy asked for was not reached"));
+    here.err().println(here.errInk().alert(name(job) + ": the accuracy asked for was not reached"));
     for (String line : Sheet.accuracyMissed(job.subject(), result)) {
       here.err().println("  " + line);
     }
@@ -281,7 +318,9 @@ final class SolveCommand implements Command {
                 job.subject().variant(), job.from().unit(), job.from().metresPerUnit()));
     try {
       if (!typed.has(NO_PLOTS)) {
-        plots.svgs(PLOTS).forEach((kind, svg) -> files.put(kind.stem() + ".svg", bytes(svg)));
+        for (Map.Entry<Plots.Kind, String> svg : plots.svgs(PLOTS).entrySet()) {
+          files.put(svg.getKey().stem() + ".svg", bytes(svg.getValue()));
+        }
       }
       for (Plots.Kind kind : PLOTS) {
         if (typed.has(PNG)) {

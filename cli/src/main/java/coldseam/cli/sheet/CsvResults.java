@@ -150,8 +150,12 @@ final class CsvResults {
                 .number("value_W_per_mK", term.valueWPerMK().mid())
                 .number("lower_W_per_mK", term.valueWPerMK().lower())
                 .number("upper_W_per_mK", term.valueWPerMK().upper());
-        term.uWPerM2K().ifPresent(u -> row.number("U_W_per_m2K", u.mid()));
-        term.lengthM().ifPresent(l -> row.number("length_m", l));
+        if (term.uWPerM2K().isPresent()) {
+          row.number("U_W_per_m2K", term.uWPerM2K().get().mid());
+        }
+        if (term.lengthM().isPresent()) {
+          row.number("length_m", term.lengthM().getAsDouble());
+        }
         row.end();
       }
       for (Result.Sensitivity sensitivity : psi.sensitivities()) {
@@ -205,7 +209,9 @@ final class CsvResults {
               .number("x_mm", JsonResults.mm(point.at().x()))
               .number("y_mm", JsonResults.mm(point.at().y()))
               .number("Rs_m2K_per_W", point.filmM2KPerW());
-      point.fRsi().ifPresent(f -> row.number("fRsi", f));
+      if (point.fRsi().isPresent()) {
+        row.number("fRsi", point.fRsi().getAsDouble());
+      }
       row.end();
     }
   }

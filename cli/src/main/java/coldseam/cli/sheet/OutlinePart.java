@@ -6,9 +6,12 @@ import coldseam.solver.Solver;
 import coldseam.solver.detail.Conditions;
 import coldseam.solver.detail.Detail;
 import java.util.ArrayList;
+import java.util.Collection;
 import java.util.LinkedHashMap;
+import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
+import java.util.Set;
 
 /**
  * A part of the outline of the conducting section on which the same holds.
@@ -60,11 +63,24 @@ record OutlinePart(String name, double lengthM, String films) {
       double sum = known == null ? length : known.lengthM + length;
       parts.put(key, new OutlinePart(name, sum, films));
     }
-    Map<String, List<OutlinePart>> byName = new LinkedHashMap<>();
-    for (OutlinePart part : parts.values()) {
-      byName.computeIfAbsent(part.name, n -> new ArrayList<>()).add(part);
+    return byName(parts.values());
+  }
+
+  /** Parts of one name side by side, where the first of them stands. */
+  private static List<OutlinePart> byName(Collection<OutlinePart> parts) {
+    Set<String> names = new LinkedHashSet<>();
+    for (OutlinePart part : parts) {
+      names.add(part.name);
     }
-    return byName.values().stream().flatMap(List::stream).toList();
+    List<OutlinePart> sorted = new ArrayList<>();
+    for (String name : names) {
+      for (OutlinePart part : parts) {
+        if (part.name.equals(name)) {
+          sorted.add(part);
+        }
+      }
+    }
+    return sorted;
   }
 
   /** The named stretches with their lengths. */

@@ -30,7 +30,11 @@ record SurfaceSection(Result result, Units units, Ink ink) {
       return;
     }
     Set<String> references = new TreeSet<>();
-    result.spaces().forEach(space -> space.referenceSpace().ifPresent(references::add));
+    for (Result.SpaceResult space : result.spaces()) {
+      if (space.referenceSpace().isPresent()) {
+        references.add(space.referenceSpace().get());
+      }
+    }
     String factor =
         references.isEmpty() ? "" : "; f_Rsi relative to " + String.join(", ", references);
     TextCard.heading(

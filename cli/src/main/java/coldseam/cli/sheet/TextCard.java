@@ -6,6 +6,7 @@ import coldseam.cli.text.Table;
 import coldseam.solver.conduction.Certificate;
 import coldseam.solver.conduction.Quantity;
 import coldseam.solver.detail.Assumption;
+import coldseam.solver.detail.Bracket;
 import coldseam.solver.detail.DimensionSystem;
 import coldseam.solver.detail.FilmSet;
 import coldseam.solver.result.Result;
@@ -53,7 +54,7 @@ final class TextCard {
 
   static void title(StringBuilder text, Subject subject, Ink ink) {
     text.append(ink.strong(subject.title())).append('\n');
-    String variant = subject.variant().map(v -> ", variant " + v).orElse("");
+    String variant = subject.variant().isEmpty() ? "" : ", variant " + subject.variant().get();
     text.append(ink.faint(subject.file() + variant)).append('\n');
   }
 
@@ -300,14 +301,13 @@ final class TextCard {
     if (term.weight() != 1) {
       words.append("b ").append(Digits.shortest(term.weight(), 4)).append(" × ");
     }
-    term.uWPerM2K()
-        .ifPresent(
-            u -> {
-              words.append("U ").append(Digits.fixed(u.lower(), 4));
-              if (u.upper() > u.lower()) {
-                words.append(" to ").append(Digits.fixed(u.upper(), 4));
-              }
-            });
+    if (term.uWPerM2K().isPresent()) {
+      Bracket u = term.uWPerM2K().get();
+      words.append("U ").append(Digits.fixed(u.lower(), 4));
+      if (u.upper() > u.lower()) {
+        words.append(" to ").append(Digits.fixed(u.upper(), 4));
+      }
+    }
     if (term.lengthM().isPresent()) {
       words.append(" × ").append(Digits.fixed(term.lengthM().getAsDouble(), 4)).append(" m");
     }
@@ -351,7 +351,11 @@ final class TextCard {
   }
 
   private static List<String> names(List<Result.FlankResult> flanks) {
-    return flanks.stream().map(Result.FlankResult::name).toList();
+    List<String> names = new ArrayList<>();
+    for (Result.FlankResult flank : flanks) {
+      names.add(flank.name());
+    }
+    return names;
   }
 
   /**
@@ -368,9 +372,12 @@ final class TextCard {
     heading(text, ink, "Assumed", "");
     Map<String, Set<String>> bySource = new LinkedHashMap<>();
     for (Assumption assumption : assumptions) {
-      bySource
-          .computeIfAbsent(assumption.source(), s -> new LinkedHashSet<>())
-          .add(line(assumption, shown));
+      Set<String> lines = bySource.get(assumption.source());
+      if (lines == null) {
+        lines = new LinkedHashSet<>();
+        bySource.put(assumption.source(), lines);
+      }
+      lines.add(line(assumption, shown));
     }
     for (Map.Entry<String, Set<String>> source : bySource.entrySet()) {
       text.append("  ").append(ink.faint(source.getKey())).append('\n');

@@ -7,6 +7,7 @@ import coldseam.solver.detail.FilmSet;
 import coldseam.solver.result.Result;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 
 /** What things are called, the same on every sheet. */
 final class Words {
@@ -66,10 +67,22 @@ final class Words {
   /** What tolerances of conductivities add, wherever that is known. */
   static List<Result.Tolerance> tolerances(Result result) {
     List<Result.Tolerance> all = new ArrayList<>();
-    result.psi().forEach(psi -> psi.tolerance().ifPresent(all::add));
-    result.transmittances().forEach(u -> u.tolerance().ifPresent(all::add));
-    result.couplings().forEach(coupling -> coupling.tolerance().ifPresent(all::add));
+    for (Result.LinearTransmittance psi : result.psi()) {
+      add(all, psi.tolerance());
+    }
+    for (Result.EffectiveTransmittance u : result.transmittances()) {
+      add(all, u.tolerance());
+    }
+    for (Result.Coupling coupling : result.couplings()) {
+      add(all, coupling.tolerance());
+    }
     return all;
+  }
+
+  private static void add(List<Result.Tolerance> all, Optional<Result.Tolerance> tolerance) {
+    if (tolerance.isPresent()) {
+      all.add(tolerance.get());
+    }
   }
 
   /** Why nothing is proved of a number; empty if something is. */

@@ -4,7 +4,13 @@ package coldseam.mesh.triangulation;
 @FunctionalInterface
 public interface SizeField {
   /** No wish: the drawing alone grades the mesh. */
-  SizeField NONE = (x, y) -> Double.POSITIVE_INFINITY;
+  SizeField NONE =
+      new SizeField() {
+        @Override
+        public double longestSideM(double x, double y) {
+          return Double.POSITIVE_INFINITY;
+        }
+      };
 
   /**
    * The longest side wanted.

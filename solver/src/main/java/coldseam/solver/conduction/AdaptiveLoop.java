@@ -11,6 +11,7 @@ import java.util.BitSet;
 import java.util.List;
 import java.util.concurrent.CancellationException;
 import java.util.concurrent.CompletableFuture;
+import java.util.function.Supplier;
 
 /** Solve, estimate, mark, refine, until what is asked is met. */
 final class AdaptiveLoop {
@@ -182,11 +183,20 @@ final class AdaptiveLoop {
     history.add(matrix, Arrays.copyOf(sums, d.spaces), d.unknowns);
   }
 
+  /** The conjugate problem, to be solved by another thread. */
+  private record StreamFunctions(Discretisation d, StreamSpace space)
+      implements Supplier<double[][]> {
+    @Override
+    public double[][] get() {
+      return ConjugateProblem.streamFunctions(d, space);
+    }
+  }
+
   /** The temperature problem and the conjugate one side by side. */
   private void solveBothSides() {
     StreamSpace space = new StreamSpace(d.mesh, conditions);
     CompletableFuture<double[][]> streams =
-        CompletableFuture.supplyAsync(() -> ConjugateProblem.streamFunctions(d, space));
+        CompletableFuture.supplyAsync(new StreamFunctions(d, space));
     fields = Assembly.unitFields(d);
     bound = new TwoSidedBound(d, fields, space, streams.join());
     matrix = ConductanceMatrix.of(d, bound);
@@ -314,7 +324,9 @@ final class AdaptiveLoop {
     }
     double moved = surfaceRatio(before);
     if (moved > 1) {
-      near.stream().forEach(t -> excess[t] = Math.max(excess[t], moved));
+      for (int t = near.nextSetBit(0); t >= 0; t = near.nextSetBit(t + 1)) {
+        excess[t] = Math.max(excess[t], moved);
+      }
     }
     return Math.max(local, moved);
   }
@@ -356,8 +368,12 @@ final class AdaptiveLoop {
 
   /** How much the coldest and warmest points moved since the pass before, over what they may. */
   private double surfaceRatio(SurfaceExtremes before) {
-    double low = Arrays.stream(goal.temperaturesC()).min().orElse(0);
-    double high = Arrays.stream(goal.temperaturesC()).max().orElse(0);
+    double low = Double.POSITIVE_INFINITY;
+    double high = Double.NEGATIVE_INFINITY;
+    for (double temperature : goal.temperaturesC()) {
+      low = Math.min(low, temperature);
+      high = Math.max(high, temperature);
+    }
     return high > low ? extremes.change(before) / (TEMPERATURE * (high - low)) : 0;
   }
 

@@ -84,7 +84,7 @@ final class Assembly {
         d.unknowns,
         QuadraticElement.NODES,
         member,
-        (t, p, q) -> QuadraticElement.stiffness(d.couplings, t, p, q),
+        new QuadraticElement.Stiffness(d.couplings),
         films);
   }
 

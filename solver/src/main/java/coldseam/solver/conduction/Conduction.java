@@ -6,6 +6,7 @@ import coldseam.mesh.triangulation.SizeField;
 import coldseam.mesh.triangulation.Triangulator;
 import coldseam.solver.detail.Accuracy;
 import coldseam.solver.detail.Conditions;
+import java.util.function.IntPredicate;
 
 /** Solves one detail with one film set: the adaptive loop and nothing else. */
 public final class Conduction {
@@ -28,6 +29,13 @@ public final class Conduction {
       boolean surfaceTemperatures,
       double[] temperaturesC) {}
 
+  private record Conducting(Conditions conditions) implements IntPredicate {
+    @Override
+    public boolean test(int label) {
+      return conditions.conducts(label);
+    }
+  }
+
   /**
    * Solves.
    *
@@ -39,7 +47,7 @@ public final class Conduction {
    */
   public static Solution solve(
       Partition partition, Conditions conditions, Goal goal, Progress progress) {
-    Mesh coarse = Triangulator.triangulate(partition, conditions::conducts, SizeField.NONE);
+    Mesh coarse = Triangulator.triangulate(partition, new Conducting(conditions), SizeField.NONE);
     return new AdaptiveLoop(partition, conditions, goal, progress, Double.NaN, true)
         .run(AdaptiveLoop.prepared(coarse));
   }

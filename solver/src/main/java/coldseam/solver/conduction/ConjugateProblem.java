@@ -268,7 +268,7 @@ final class ConjugateProblem {
         unknowns,
         QuadraticElement.NODES,
         member,
-        (t, p, q) -> QuadraticElement.stiffness(couplings, t, p, q),
+        new QuadraticElement.Stiffness(couplings),
         others);
   }
 

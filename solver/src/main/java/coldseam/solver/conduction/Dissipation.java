@@ -62,8 +62,10 @@ public final class Dissipation {
     inflow = new double[last][last];
     solids(conditions);
     films();
-    dissipated.forEach(Dissipation::mirror);
-    resisted.forEach(Dissipation::mirror);
+    for (int part = 0; part < dissipated.size(); part++) {
+      mirror(dissipated.get(part));
+      mirror(resisted.get(part));
+    }
     mirror(inflow);
   }
 

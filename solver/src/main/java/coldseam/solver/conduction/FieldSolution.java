@@ -205,7 +205,7 @@ final class FieldSolution implements Solution {
 
   @Override
   public Optional<StreamFunction> streamFunction(double[] temperaturesC) {
-    return Optional.ofNullable(bound).map(b -> b.streamFunction(temperaturesC));
+    return bound == null ? Optional.empty() : Optional.of(bound.streamFunction(temperaturesC));
   }
 
   /** Nodal temperatures; spaces of one temperature give exactly that temperature. */

@@ -4,7 +4,13 @@ package coldseam.solver.conduction;
 @FunctionalInterface
 public interface Progress {
   /** Listens to nothing and never cancels. */
-  Progress SILENT = (stage, pass, unknowns, relativeError) -> true;
+  Progress SILENT =
+      new Progress() {
+        @Override
+        public boolean pass(String stage, int pass, int unknowns, double relativeError) {
+          return true;
+        }
+      };
 
   /**
    * A pass is done.

@@ -1,6 +1,7 @@
 package coldseam.solver.conduction;
 
 import coldseam.mesh.triangulation.Mesh;
+import coldseam.solver.algebra.ElementSum;
 import coldseam.solver.detail.Material;
 
 /**
@@ -77,6 +78,18 @@ final class QuadraticElement {
     }
     int middle = Math.max(p, q) - 3;
     return middle == Math.min(p, q) ? 0 : 4 * g[at + middle] / 3;
+  }
+
+  /**
+   * The stiffness matrices of all triangles, to be summed up.
+   *
+   * @param g couplings of all triangles
+   */
+  record Stiffness(double[] g) implements ElementSum.Entries {
+    @Override
+    public double entry(int element, int p, int q) {
+      return stiffness(g, element, p, q);
+    }
   }
 
   private static double sum(double[] g, int at) {

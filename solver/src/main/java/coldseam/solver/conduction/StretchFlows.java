@@ -46,7 +46,12 @@ final class StretchFlows {
       }
       for (int s = 0; s < d.outline.count; s++) {
         for (int stretch : conditions.stretches(d.outline.partitionEdge[s])) {
-          flows.computeIfAbsent(stretch, key -> new double[fields.length])[f] += inflow[s];
+          double[] flow = flows.get(stretch);
+          if (flow == null) {
+            flow = new double[fields.length];
+            flows.put(stretch, flow);
+          }
+          flow[f] += inflow[s];
           if (d.outline.space[s] >= 0) {
             spaces.putIfAbsent(stretch, d.outline.space[s]);
           }

@@ -113,16 +113,20 @@ final class TwoSidedBound {
     return worst;
   }
 
+  /** ∫∇u·λ∇v by triangle, or the same of fluxes. */
+  private record Energies(double[] couplings, int[] nodes, double[] u, double[] v)
+      implements TriangleSums.Terms {
+    @Override
+    public void add(int from, int to, double[] sums) {
+      for (int t = from; t < to; t++) {
+        sums[0] += QuadraticElement.energy(couplings, nodes, t, u, v);
+      }
+    }
+  }
+
   private double upper(int i, int j) {
-    double sum =
-        TriangleSums.of(
-            d.mesh.triangleCount(),
-            1,
-            (from, to, sums) -> {
-              for (int t = from; t < to; t++) {
-                sums[0] += QuadraticElement.energy(d.couplings, d.nodes, t, fields[i], fields[j]);
-              }
-            })[0];
+    Energies energies = new Energies(d.couplings, d.nodes, fields[i], fields[j]);
+    double sum = TriangleSums.of(d.mesh.triangleCount(), 1, energies)[0];
     Outline o = d.outline;
     for (int s = 0; s < o.count; s++) {
       if (o.kind[s] == Conditions.Kind.FILM) {
@@ -137,15 +141,8 @@ final class TwoSidedBound {
   }
 
   private double lower(int i, int j) {
-    double sum =
-        TriangleSums.of(
-            d.mesh.triangleCount(),
-            1,
-            (from, to, sums) -> {
-              for (int t = from; t < to; t++) {
-                sums[0] -= resistance(t, i, j);
-              }
-            })[0];
+    Energies energies = new Energies(conjugate, space.nodes, streams[i], streams[j]);
+    double sum = -TriangleSums.of(d.mesh.triangleCount(), 1, energies)[0];
     Outline o = d.outline;
     for (int s = 0; s < o.count; s++) {
       if (o.kind[s] == Conditions.Kind.FILM) {
@@ -242,9 +239,7 @@ final class TwoSidedBound {
 
   /** The gap from what q and −λ∇u differ by, triangle by triangle. */
   private void gaps(int used) {
-    double[] sums =
-        TriangleSums.of(
-            d.mesh.triangleCount(), used * used, (from, to, part) -> gaps(from, to, used, part));
+    double[] sums = TriangleSums.of(d.mesh.triangleCount(), used * used, new Gaps(used));
     for (int i = 0; i < used; i++) {
       for (int j = i; j < used; j++) {
         gap[i][j] = sums[used * i + j];
@@ -268,24 +263,39 @@ final class TwoSidedBound {
     }
   }
 
-  private void gaps(int from, int to, int used, double[] sums) {
-    double[][] misfit = new double[used][9];
-    for (int t = from; t < to; t++) {
-      for (int f = 0; f < used; f++) {
-        misfit(t, f, misfit[f]);
-      }
-      for (int i = 0; i < used; i++) {
-        for (int j = i; j < used; j++) {
-          double sum = 0;
-          for (int m = 0; m < 9; m++) {
-            sum -= d.couplings[3 * t + m % 3] * misfit[i][m] * misfit[j][m];
-          }
-          sums[used * i + j] += sum / 3;
-          if (i == j) {
-            local[i][t] = sum / 3;
+  /** The local gaps of triangles; those of a field with itself are kept. */
+  private final class Gaps implements TriangleSums.Terms {
+    private final int used;
+
+    private Gaps(int used) {
+      this.used = used;
+    }
+
+    @Override
+    public void add(int from, int to, double[] sums) {
+      double[][] misfit = new double[used][9];
+      for (int t = from; t < to; t++) {
+        for (int f = 0; f < used; f++) {
+          misfit(t, f, misfit[f]);
+        }
+        for (int i = 0; i < used; i++) {
+          for (int j = i; j < used; j++) {
+            double part = gap(t, misfit[i], misfit[j]);
+            sums[used * i + j] += part;
+            if (i == j) {
+              local[i][t] = part;
+            }
           }
         }
       }
+    }
+
+    private double gap(int t, double[] one, double[] other) {
+      double sum = 0;
+      for (int m = 0; m < 9; m++) {
+        sum -= d.couplings[3 * t + m % 3] * one[m] * other[m];
+      }
+      return sum / 3;
     }
   }
 
