@@ -8,10 +8,12 @@ import coldseam.solver.conduction.Solution;
 import coldseam.solver.detail.Accuracy;
 import coldseam.solver.detail.Assumption;
 import coldseam.solver.detail.Conditions;
+import coldseam.solver.detail.CornerZones;
 import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.DetailException;
 import coldseam.solver.detail.Fault;
 import coldseam.solver.detail.FilmSet;
+import coldseam.solver.detail.FrameDetail;
 import coldseam.solver.detail.Geometry;
 import coldseam.solver.detail.Subtraction;
 import coldseam.solver.detail.Wanted;
@@ -113,8 +115,7 @@ public final class Solver {
     for (Map.Entry<Subtraction.OfDetail, Resolved> entry : resolved.others().entrySet()) {
       Subtraction.OfDetail of = entry.getKey();
       Resolved other = entry.getValue();
-      double[] temperatures = other.plan().statedTemperatures();
-      Conduction.Goal goal = new Conduction.Goal(accuracy, true, false, false, temperatures);
+      Conduction.Goal goal = other.goal(accuracy, true, false);
       Solution solution = Conduction.solve(other.partition(), other.heatLoss(), goal, progress);
       try {
         couplings.put(of, other.plan().coupling(solution, of.warm(), of.cold()));
@@ -174,7 +175,13 @@ public final class Solver {
             List.of(
                 new Fault("section", "", "only plane sections can be solved", Optional.empty())));
       }
-      Partition partition = partition(detail);
+      Detail ready = FrameDetail.prepared(detail);
+      Partition first = partition(ready);
+      Detail placed = CornerZones.placed(ready, first);
+      return of(placed, placed == ready ? first : partition(placed));
+    }
+
+    private static Resolved of(Detail detail, Partition partition) {
       Conditions heatLoss = Conditions.of(detail, partition, FilmSet.HEAT_LOSS);
       Conditions surface = Conditions.of(detail, partition, FilmSet.SURFACE);
       Map<Subtraction.OfDetail, Resolved> others = others(detail);
@@ -194,6 +201,11 @@ public final class Solver {
             if (subtraction instanceof Subtraction.OfDetail of) {
               others.put(of, resolveOther(of));
             }
+          }
+        } else if (wanted instanceof Wanted.Frame frame) {
+          if (frame.panelRun().isPresent()) {
+            Subtraction.OfDetail run = frame.panelRun().get();
+            others.put(run, Resolved.of(run.detail()));
           }
         }
       }
@@ -218,14 +230,18 @@ public final class Solver {
     }
 
     Solution solveHeatLoss(Accuracy accuracy, boolean temperatures, Progress progress) {
-      Conduction.Goal goal =
-          new Conduction.Goal(
-              accuracy,
-              plan.psiWanted(),
-              plan.transmittanceWanted(),
-              temperatures,
-              plan.statedTemperatures());
+      Conduction.Goal goal = goal(accuracy, plan.psiWanted(), temperatures);
       return Conduction.solve(partition, heatLoss, goal, progress);
+    }
+
+    Conduction.Goal goal(Accuracy accuracy, boolean psi, boolean temperatures) {
+      return new Conduction.Goal(
+          accuracy,
+          psi,
+          plan.transmittanceWanted(),
+          plan.takenOffWPerMK(),
+          temperatures,
+          plan.statedTemperatures());
     }
   }
 }

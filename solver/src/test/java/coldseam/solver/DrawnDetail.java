@@ -116,6 +116,12 @@ public final class DrawnDetail {
     return area(fill, true, xy);
   }
 
+  /** A piece of the glazing, or the panel, of a frame. */
+  public DrawnDetail infill(Area.Role role, Fill fill, double... xy) {
+    areas.add(new Area("area " + areas.size(), fill, List.of(points(xy)), false, role));
+    return this;
+  }
+
   private DrawnDetail area(Fill fill, boolean glazing, double... xy) {
     if (fill instanceof Space space) {
       know(space);

@@ -169,7 +169,7 @@ final class SectionView extends View {
     Set<DimensionSystem> systems = new TreeSet<>();
     for (Result.LinearTransmittance psi : result().psi()) {
       if (psi.subtracted().stream().anyMatch(s -> s.name().equals(flank))) {
-        systems.add(psi.dimensions());
+        psi.dimensions().ifPresent(systems::add);
       }
     }
     return systems;

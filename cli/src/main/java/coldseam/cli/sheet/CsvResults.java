@@ -138,7 +138,7 @@ final class CsvResults {
       row("psi", psi.name())
           .word("filmSet", Words.name(FilmSet.HEAT_LOSS))
           .word("between", Words.between(psi.warm(), psi.cold()))
-          .word("dimensions", Words.name(psi.dimensions()))
+          .word("dimensions", Words.dimensions(psi))
           .quantity(psi.valueWPerMK(), "W_per_mK")
           .tolerance(psi.tolerance(), "W_per_mK")
           .end();

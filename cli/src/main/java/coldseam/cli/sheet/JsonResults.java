@@ -30,6 +30,7 @@ record JsonResults(Subject subject, Result result) {
     couplings(json, "coupling", result.couplings());
     psi(json);
     transmittances(json);
+    frame(json);
     spaces(json);
     stretches(json);
     points(json);
@@ -167,7 +168,7 @@ record JsonResults(Subject subject, Result result) {
           .member("name", psi.name())
           .member("of", psi.of())
           .member("between", List.of(Words.spaces(psi.warm()), Words.spaces(psi.cold())))
-          .member("dimensions", Words.name(psi.dimensions()))
+          .member("dimensions", Words.dimensions(psi))
           .member("filmSet", Words.name(FilmSet.HEAT_LOSS));
       quantity(json, psi.valueWPerMK(), "W_per_mK");
       tolerance(json, psi.tolerance(), "W_per_mK");
@@ -247,6 +248,33 @@ record JsonResults(Subject subject, Result result) {
     json.object("R");
     quantity(json, u.resistanceM2KPerW(), "m2K_per_W");
     json.endObject().endObject();
+  }
+
+  /** The two runs of a frame and its lengths; nothing where no frame is asked for. */
+  private void frame(Json json) {
+    if (result.frame().isEmpty()) {
+      return;
+    }
+    Result.Frame frame = result.frame().get();
+    json.object("frame")
+        .member("width_m", frame.widthM())
+        .member("innerWidth_m", frame.innerM())
+        .member("outerWidth_m", frame.outerM())
+        .object("panelRun");
+    quantity(json, frame.couplingWPerMK(), "W_per_mK");
+    json.array("subtracted");
+    for (Result.Subtracted term : frame.panels()) {
+      subtracted(json, term);
+    }
+    json.endArray().endObject();
+    if (frame.glazedCouplingWPerMK().isPresent()) {
+      json.object("glazedRun");
+      quantity(json, frame.glazedCouplingWPerMK().get(), "W_per_mK");
+      json.endObject();
+    } else {
+      json.nothing("glazedRun");
+    }
+    json.endObject();
   }
 
   private void spaces(Json json) {

@@ -9,6 +9,7 @@ import coldseam.solver.detail.Assumption;
 import coldseam.solver.detail.Bracket;
 import coldseam.solver.detail.DimensionSystem;
 import coldseam.solver.detail.FilmSet;
+import coldseam.solver.detail.Wanted;
 import coldseam.solver.result.Result;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
@@ -79,7 +80,7 @@ final class TextCard {
           psi.valueWPerMK(),
           psi.tolerance(),
           new Scale(4, "W/(m·K)", Units.PSI, Units.PSI_NAME),
-          Words.name(psi.dimensions()));
+          Words.dimensions(psi));
     }
     for (Result.EffectiveTransmittance u : result.transmittances()) {
       number(
@@ -90,6 +91,9 @@ final class TextCard {
           u.tolerance(),
           new Scale(4, "W/(m²·K)", Units.U, Units.U_NAME),
           "over " + units.length(u.widthM()) + " " + units.unit());
+      if (ofFrame(u)) {
+        continue;
+      }
       number(
           table,
           "R " + u.of(),
@@ -236,12 +240,17 @@ final class TextCard {
   }
 
   private void accounts() {
+    if (result.frame().isPresent()) {
+      frame(result.frame().get());
+    }
     for (Result.LinearTransmittance psi : result.psi()) {
       heading(
           text,
           ink,
           "ψ " + psi.name() + " = L2D less what is counted elsewhere",
-          "W/(m·K), " + Words.name(psi.dimensions()) + " dimensions");
+          "W/(m·K), "
+              + Words.dimensions(psi)
+              + (psi.dimensions().isPresent() ? " dimensions" : " lengths"));
       int guarded = Math.max(0, Math.min(4, Digits.decimals(psi.valueWPerMK().halfWidth()) + 1));
       Table table = new Table("lrl", 2, PAGE);
       table.row(
@@ -258,6 +267,36 @@ final class TextCard {
       table.row("ψ", ink.strong(value.value()), ink.faint("± " + value.halfWidth()));
       text.append(table.text());
     }
+  }
+
+  /** The run with the panel, what is taken off, and over which width. */
+  private void frame(Result.Frame frame) {
+    heading(
+        text,
+        ink,
+        "U frame = (L2D less what passes the panel) over the projected width",
+        "W/(m·K)");
+    int guarded = Math.max(0, Math.min(4, Digits.decimals(frame.lossWPerMK().halfWidth()) + 1));
+    Table table = new Table("lrl", 2, PAGE);
+    table.row(
+        "L2D with the insulating panel", Digits.fixed(frame.couplingWPerMK().value(), guarded), "");
+    for (Result.Subtracted term : frame.panels()) {
+      table.row(
+          "less " + term.name(),
+          Digits.fixed(-term.valueWPerMK().mid(), guarded),
+          ink.faint(derivation(term)));
+    }
+    Digits.Figure loss = figure(frame.lossWPerMK(), 1, guarded);
+    table.row(
+        "frame",
+        ink.strong(loss.value()),
+        ink.faint("± " + loss.halfWidth() + ", over " + Digits.fixed(frame.widthM(), 4) + " m"));
+    text.append(table.text());
+  }
+
+  /** U_f has an account of its own, and its inverse means nothing. */
+  private boolean ofFrame(Result.EffectiveTransmittance u) {
+    return result.frame().isPresent() && u.of().equals(Wanted.Frame.NAME);
   }
 
   /** What a ψ starts from: one L2D, or several of them added up. */

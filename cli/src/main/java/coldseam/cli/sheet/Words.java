@@ -16,6 +16,9 @@ final class Words {
       "Calculated under the assumptions stated. Local codes and a licensed professional decide;"
           + " thermal changes to loadbearing or fire-separating parts need their approval.";
 
+  /** How lengths of a glass edge are measured: projected width of the frame, visible lengths. */
+  static final String VISIBLE = "visible";
+
   private Words() {}
 
   static String name(FilmSet set) {
@@ -28,6 +31,11 @@ final class Words {
       case OVERALL_INTERNAL -> "overall-internal";
       case EXTERNAL -> "external";
     };
+  }
+
+  /** How the lengths of a ψ are measured. */
+  static String dimensions(Result.LinearTransmittance psi) {
+    return psi.dimensions().isPresent() ? name(psi.dimensions().get()) : VISIBLE;
   }
 
   static String spaces(List<String> names) {

@@ -109,7 +109,7 @@ final class Samples {
                 "floor edge",
                 List.of("indoors"),
                 List.of("outdoors"),
-                DimensionSystem.EXTERNAL,
+                Optional.of(DimensionSystem.EXTERNAL),
                 coupling,
                 psi,
                 List.of(
@@ -141,6 +141,7 @@ final class Samples {
                 resistance,
                 0.6,
                 tolerance(u, resistance))),
+        Optional.empty(),
         List.of(
             space("indoors", 20, coupling.value() * 25),
             space("outdoors", -5, -coupling.value() * 25)),

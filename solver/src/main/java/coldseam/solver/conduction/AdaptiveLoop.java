@@ -47,6 +47,9 @@ final class AdaptiveLoop {
   /** The error aimed at by a pass over what it may be. */
   private static final double AIM = 0.7;
 
+  /** If less than this part of a conductance is left for a U, this part counts. */
+  private static final double LEAST_PART_LEFT = 0.01;
+
   /** The coarsest mesh is refined until it has so many triangles. */
   private static final int FEWEST_TRIANGLES = 64;
 
@@ -220,7 +223,7 @@ final class AdaptiveLoop {
     Accuracy accuracy = goal.accuracy();
     double relative = accuracy.couplingRelative();
     double absolute = accuracy.couplingWPerMK();
-    if (goal.transmittanceAsked()) {
+    if (goal.transmittanceAsked() && goal.takenOffWPerMK() == 0) {
       relative = Math.min(relative, accuracy.transmittanceRelative());
     }
     if (goal.psiAsked()) {
@@ -237,9 +240,21 @@ final class AdaptiveLoop {
               ? Double.POSITIVE_INFINITY
               : Math.max(
                   accuracy.negligibleWPerMK(),
-                  Math.min(relativePart * relative * matrix.a[i][i], absolutePart * absolute));
+                  Math.min(
+                      relativePart * relativeTarget(relative, matrix.a[i][i]),
+                      absolutePart * absolute));
     }
     targets[d.spaces] = relativePart * relative * matrix.flowEnergy;
+  }
+
+  /** The relative accuracy of a conductance, and of what is left of it for a U. */
+  private double relativeTarget(double relative, double conductance) {
+    double target = relative * conductance;
+    if (goal.transmittanceAsked() && goal.takenOffWPerMK() > 0) {
+      double left = Math.max(conductance - goal.takenOffWPerMK(), LEAST_PART_LEFT * conductance);
+      target = Math.min(target, goal.accuracy().transmittanceRelative() * left);
+    }
+    return target;
   }
 
   private boolean infinite(int space) {

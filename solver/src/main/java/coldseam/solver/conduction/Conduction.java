@@ -18,6 +18,7 @@ public final class Conduction {
    * @param accuracy the half-widths asked for and the cap on unknowns
    * @param psiAsked whether a ψ is wanted, so that its absolute accuracy counts
    * @param transmittanceAsked whether a U is wanted
+   * @param takenOffWPerMK what is taken off a coupling before the relative accuracy of U counts
    * @param surfaceTemperatures whether coldest and warmest surface points are wanted: refinement
    *     then also goes on until they move by less than 0.01 K (for spaces 25 K apart, scaled)
    * @param temperaturesC temperature of every space, °C; decides which points are coldest
@@ -26,8 +27,19 @@ public final class Conduction {
       Accuracy accuracy,
       boolean psiAsked,
       boolean transmittanceAsked,
+      double takenOffWPerMK,
       boolean surfaceTemperatures,
-      double[] temperaturesC) {}
+      double[] temperaturesC) {
+    /** A goal where nothing is taken off a coupling. */
+    public Goal(
+        Accuracy accuracy,
+        boolean psiAsked,
+        boolean transmittanceAsked,
+        boolean surfaceTemperatures,
+        double[] temperaturesC) {
+      this(accuracy, psiAsked, transmittanceAsked, 0, surfaceTemperatures, temperaturesC);
+    }
+  }
 
   private record Conducting(Conditions conditions) implements IntPredicate {
     @Override

@@ -11,8 +11,19 @@ import java.util.List;
  * @param fill what fills it
  * @param rings closed rings by the even-odd rule, m
  * @param glazing whether its surfaces count as glazing or frame for the surface films
+ * @param role what it is to a frame drawn with it
  */
-public record Area(String name, Fill fill, List<List<Point>> rings, boolean glazing) {
+public record Area(String name, Fill fill, List<List<Point>> rings, boolean glazing, Role role) {
+  /** What a shape is to a frame drawn with it (ISO 10077-2). */
+  public enum Role {
+    /** Any other shape: the frame itself, gaskets, a wall. */
+    OTHER,
+    /** A piece of the glazing: a pane, gas, spacer, sealant. */
+    GLAZING,
+    /** The insulating panel in place of the glazing. */
+    PANEL
+  }
+
   /** Copies the rings. */
   public Area {
     List<List<Point>> copies = new ArrayList<>();
@@ -20,5 +31,17 @@ public record Area(String name, Fill fill, List<List<Point>> rings, boolean glaz
       copies.add(List.copyOf(ring));
     }
     rings = List.copyOf(copies);
+  }
+
+  /**
+   * A shape that is neither glazing nor panel of a frame.
+   *
+   * @param name how messages call it
+   * @param fill what fills it
+   * @param rings closed rings by the even-odd rule, m
+   * @param glazing whether its surfaces count as glazing or frame for the surface films
+   */
+  public Area(String name, Fill fill, List<List<Point>> rings, boolean glazing) {
+    this(name, fill, rings, glazing, Role.OTHER);
   }
 }

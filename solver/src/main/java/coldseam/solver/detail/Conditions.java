@@ -29,9 +29,11 @@ public final class Conditions {
   private final int[] spaces;
   private final double[] films;
   private final double[] flows;
+  private final Area.Role[] roles;
   private final BitSet glazing;
   private final BitSet symmetry;
   private final int spaceCount;
+  private final int stretchCount;
   private final List<CutOffPlane> cutOffPlanes;
   private final List<Assumption> assumptions;
 
@@ -43,9 +45,11 @@ public final class Conditions {
     spaces = reading.spaces();
     films = reading.films();
     flows = reading.flows();
+    roles = reading.roles();
     glazing = reading.glazing();
     symmetry = reading.symmetry();
     spaceCount = reading.detail().spaces().size();
+    stretchCount = reading.detail().stretches().size();
     cutOffPlanes = List.copyOf(reading.cutOffPlanes());
     assumptions = List.copyOf(reading.assumptions());
   }
@@ -98,7 +102,17 @@ public final class Conditions {
 
   /** Indices of the stretches on an edge, ascending. */
   public List<Integer> stretches(int partitionEdge) {
-    return partition.linesOn(partitionEdge);
+    List<Integer> lines = partition.linesOn(partitionEdge);
+    int count = lines.size();
+    while (count > 0 && lines.get(count - 1) >= stretchCount) {
+      count--;
+    }
+    return lines.subList(0, count);
+  }
+
+  /** What the area on the conducting side of an outline edge is to a frame. */
+  public Area.Role role(int partitionEdge) {
+    return roles[partitionEdge];
   }
 
   /** Whether an edge counts as glazing or frame. */

@@ -19,6 +19,7 @@ import java.util.Map;
  * @param flanks flanks named in the case; others are found by the solver
  * @param wanted the results asked for
  * @param assumptions what reading the case had to assume
+ * @param cornerZones where the film for heat loss is reduced at inner corners of a frame
  */
 public record Detail(
     String title,
@@ -29,7 +30,8 @@ public record Detail(
     List<Stretch> stretches,
     List<Flank> flanks,
     List<Wanted> wanted,
-    List<Assumption> assumptions) {
+    List<Assumption> assumptions,
+    List<CornerZone> cornerZones) {
   /** Copies the lists. */
   public Detail {
     areas = List.copyOf(areas);
@@ -38,6 +40,21 @@ public record Detail(
     flanks = List.copyOf(flanks);
     wanted = List.copyOf(wanted);
     assumptions = List.copyOf(assumptions);
+    cornerZones = List.copyOf(cornerZones);
+  }
+
+  /** A detail as a case states it: corner zones are placed later. */
+  public Detail(
+      String title,
+      Geometry geometry,
+      View view,
+      List<Area> areas,
+      List<Space> spaces,
+      List<Stretch> stretches,
+      List<Flank> flanks,
+      List<Wanted> wanted,
+      List<Assumption> assumptions) {
+    this(title, geometry, view, areas, spaces, stretches, flanks, wanted, assumptions, List.of());
   }
 
   /**
@@ -72,11 +89,17 @@ public record Detail(
     return labelled;
   }
 
-  /** The lines of the stretches with their index as label, ready to be noded with the areas. */
+  /**
+   * The lines of the stretches with their index as label, then those of the corner zones, ready to
+   * be noded with the areas.
+   */
   public List<LabelledLine> labelledLines() {
-    List<LabelledLine> labelled = new ArrayList<>(stretches.size());
+    List<LabelledLine> labelled = new ArrayList<>(stretches.size() + cornerZones.size());
     for (int i = 0; i < stretches.size(); i++) {
       labelled.add(new LabelledLine(i, stretches.get(i).along()));
+    }
+    for (CornerZone zone : cornerZones) {
+      labelled.add(new LabelledLine(labelled.size(), zone.along()));
     }
     return labelled;
   }

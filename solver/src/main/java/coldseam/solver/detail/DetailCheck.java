@@ -86,8 +86,10 @@ final class DetailCheck {
     double[] on = new double[detail.stretches().size()];
     for (int edge = 0; edge < partition.edgeCount(); edge++) {
       if (reading.outline(edge)) {
-        for (int stretch : partition.linesOn(edge)) {
-          on[stretch] += partition.edgeLength(edge);
+        for (int line : partition.linesOn(edge)) {
+          if (line < on.length) {
+            on[line] += partition.edgeLength(edge);
+          }
         }
       }
     }

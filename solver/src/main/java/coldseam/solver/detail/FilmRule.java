@@ -34,6 +34,10 @@ public record FilmRule(
   public static final FilmRule ISO_13788_OUTSIDE =
       new FilmRule(0.04, 0.04, 0.04, 0.04, "ISO 13788 surface resistance, outside");
 
+  /** ISO 10077-2: less radiation and convection at inner corners of frames. */
+  public static final FilmRule ISO_10077_2_REDUCED =
+      uniform(0.20, "ISO 10077-2 reduced radiation and convection at inner corners");
+
   /** The surface has the temperature of the space. */
   public static final FilmRule FIXED_TEMPERATURE =
       new FilmRule(0, 0, 0, 0, "fixed surface temperature");

@@ -22,9 +22,11 @@ final class OutlineReading {
   private final FilmRule[] rules;
   private final double[] films;
   private final double[] flows;
+  private final Area.Role[] roles;
   private final BitSet glazing = new BitSet();
   private final BitSet symmetry = new BitSet();
   private final BitSet stated = new BitSet();
+  private final BitSet ownFilm = new BitSet();
   private final List<Fault> faults = new ArrayList<>();
   private final List<CutOffPlane> cutOffPlanes;
   private final List<Assumption> assumptions = new ArrayList<>();
@@ -41,15 +43,21 @@ final class OutlineReading {
     rules = new FilmRule[edges];
     films = new double[edges];
     flows = new double[edges];
-    GlazingLookup glazed = new GlazingLookup(detail, partition);
+    roles = new Area.Role[edges];
+    AreaLookup areas = new AreaLookup(detail, partition);
     for (int edge = 0; edge < edges; edge++) {
       kinds[edge] = Kind.NONE;
       spaces[edge] = -1;
+      roles[edge] = Area.Role.OTHER;
       if (outline(edge)) {
         readFarSide(edge);
         readStretches(edge);
-        if (glazed.onEdge(edge, conductsLeft(edge))) {
-          glazing.set(edge);
+        Area area = areas.onEdge(edge, conductsLeft(edge));
+        if (area != null) {
+          roles[edge] = area.role();
+          if (area.glazing()) {
+            glazing.set(edge);
+          }
         }
       }
     }
@@ -84,7 +92,12 @@ final class OutlineReading {
   }
 
   private void readStretches(int edge) {
+    boolean zone = false;
     for (int index : partition.linesOn(edge)) {
+      if (index >= detail.stretches().size()) {
+        zone = true;
+        continue;
+      }
       Stretch stretch = detail.stretches().get(index);
       if (stretch.glazing()) {
         glazing.set(edge);
@@ -93,6 +106,20 @@ final class OutlineReading {
         apply(edge, stretch, stretch.condition().get());
       }
     }
+    if (zone && reducible(edge)) {
+      rules[edge] = FilmRule.ISO_10077_2_REDUCED;
+    }
+  }
+
+  /**
+   * Whether the film of an edge is the standard's inside one for heat loss, which gives way to the
+   * reduced one at inner corners of frames; a film typed on a stretch does not.
+   */
+  boolean reducible(int edge) {
+    return filmSet == FilmSet.HEAT_LOSS
+        && kinds[edge] == Kind.FILM
+        && !ownFilm.get(edge)
+        && FilmRule.ISO_6946_INSIDE.equals(rules[edge]);
   }
 
   private void apply(int edge, Stretch stretch, EdgeCondition condition) {
@@ -100,6 +127,7 @@ final class OutlineReading {
     rules[edge] = null;
     flows[edge] = 0;
     symmetry.clear(edge);
+    ownFilm.clear(edge);
     stated.set(edge);
     if (condition instanceof EdgeCondition.HeatFlow flow) {
       kinds[edge] = Kind.FLOW;
@@ -115,6 +143,7 @@ final class OutlineReading {
         return;
       }
       Optional<FilmRule> own = filmSet == FilmSet.HEAT_LOSS ? faces.heatLoss() : faces.surface();
+      ownFilm.set(edge, own.isPresent());
       face(edge, index, own.orElse(detail.spaces().get(index).films(filmSet)));
     }
   }
@@ -194,6 +223,10 @@ final class OutlineReading {
 
   double[] flows() {
     return flows;
+  }
+
+  Area.Role[] roles() {
+    return roles;
   }
 
   BitSet glazing() {

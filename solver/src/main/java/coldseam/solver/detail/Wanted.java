@@ -3,6 +3,7 @@ package coldseam.solver.detail;
 import coldseam.mesh.plane.Point;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.OptionalDouble;
 
 /** One result asked for, beside what is always given (couplings, flows, coldest surfaces). */
@@ -51,6 +52,46 @@ public sealed interface Wanted {
     public Transmittance {
       warm = List.copyOf(warm);
       cold = List.copyOf(cold);
+    }
+  }
+
+  /**
+   * A frame (ISO 10077-2): its U_f with an insulating panel in place of the glazing and, if the
+   * glazing is drawn, the ψ of the glass edge. Areas carry their {@link Area.Role}.
+   *
+   * @param warm spaces on the warm side
+   * @param cold spaces on the cold side
+   * @param panelWPerMK conductivity of the panel that takes the place of a drawn glazing, W/(m·K)
+   * @param widthM projected width b_f of the frame, m; empty: from the drawing
+   * @param visibleM visible lengths of panels or glazings, from left to right, m; empty: from the
+   *     drawing
+   * @param corners where the film is reduced
+   * @param panelRun the same detail with the panel in place of the glazing; {@link FrameDetail}
+   *     makes it
+   */
+  record Frame(
+      List<String> warm,
+      List<String> cold,
+      double panelWPerMK,
+      OptionalDouble widthM,
+      List<Double> visibleM,
+      CornerRule corners,
+      Optional<Subtraction.OfDetail> panelRun)
+      implements Wanted {
+    /** Conductivity of the insulating panel, ISO 10077-2, W/(m·K). */
+    public static final double PANEL_W_PER_MK = 0.035;
+
+    /** Name of its U. */
+    public static final String NAME = "frame";
+
+    /** Name of the ψ of its glass edge. */
+    public static final String GLASS_EDGE = "glass edge";
+
+    /** Copies the lists. */
+    public Frame {
+      warm = List.copyOf(warm);
+      cold = List.copyOf(cold);
+      visibleM = List.copyOf(visibleM);
     }
   }
 

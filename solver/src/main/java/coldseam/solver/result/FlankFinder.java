@@ -1,6 +1,7 @@
 package coldseam.solver.result;
 
 import coldseam.mesh.plane.Point;
+import coldseam.solver.detail.Area;
 import coldseam.solver.detail.CutOffPlane;
 import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.Exposure;
@@ -29,12 +30,14 @@ final class FlankFinder {
 
   private final Detail detail;
   private final Outline outline;
+  private final boolean frame;
   private final List<Fault> faults = new ArrayList<>();
   private final List<PlacedFlank> flanks = new ArrayList<>();
 
   FlankFinder(Detail detail, Outline outline) {
     this.detail = detail;
     this.outline = outline;
+    frame = FramePlan.wanted(detail).isPresent();
     Map<Integer, Flank> named = attach();
     Set<String> names = new HashSet<>();
     for (Flank flank : detail.flanks()) {
@@ -51,6 +54,9 @@ final class FlankFinder {
       FlankEnd last = lastEnd(plane);
       boolean separates = first.space() >= 0 && last.space() >= 0 && first.space() != last.space();
       if (typed.isPresent() || (separates && !plane.symmetry())) {
+        if (typed.isEmpty() && sideOfFrame(plane)) {
+          continue;
+        }
         String name = typed.isPresent() ? typed.get().name() : freeName(plane, names);
         names.add(name);
         flanks.add(place(name, typed, plane, first, last));
@@ -60,6 +66,11 @@ final class FlankFinder {
     for (PlacedFlank flank : flanks) {
       checkU(flank);
     }
+  }
+
+  /** Whether a frame is asked for and the plane is not the end of its glazing or panel. */
+  private boolean sideOfFrame(CutOffPlane plane) {
+    return frame && FramePlan.role(outline, plane) == Area.Role.OTHER;
   }
 
   List<PlacedFlank> flanks() {
@@ -245,7 +256,10 @@ final class FlankFinder {
     double up = run.y() * upX - run.x() * upY;
     double right = run.y() * upY + run.x() * upX;
     String side;
-    if (Math.abs(up) > Math.abs(right)) {
+    Area.Role role = FramePlan.role(outline, plane);
+    if (frame && role != Area.Role.OTHER) {
+      side = FrameTransmittances.name(role);
+    } else if (Math.abs(up) > Math.abs(right)) {
       side = up > 0 ? "top flank" : "bottom flank";
     } else {
       side = right > 0 ? "right flank" : "left flank";

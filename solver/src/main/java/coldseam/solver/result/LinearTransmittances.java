@@ -104,7 +104,7 @@ final class LinearTransmittances {
         plan.wanted().of(),
         plan.wanted().warm(),
         plan.wanted().cold(),
-        plan.wanted().dimensions(),
+        Optional.of(plan.wanted().dimensions()),
         start,
         value,
         List.copyOf(subtracted),

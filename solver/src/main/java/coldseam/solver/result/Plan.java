@@ -40,6 +40,7 @@ public final class Plan {
   private final FlankLengths lengths;
   private final LinearTransmittances psi;
   private final EffectiveTransmittances transmittances;
+  private final FrameTransmittances frames;
   private final CutOffChecks cutOffs;
   private final boolean module;
   private final List<Assumption> assumptions;
@@ -62,12 +63,14 @@ public final class Plan {
     PsiPlanner planner = new PsiPlanner(detail, outline, flanks, lengths);
     psi = new LinearTransmittances(planner.plans(), detail, heatLoss);
     transmittances = new EffectiveTransmittances(detail, outline);
+    frames = new FrameTransmittances(detail, outline, flanks, others);
     SectionChecks section = new SectionChecks(detail, outline);
     cutOffs = new CutOffChecks(outline);
     module = transmittances.any() && !psi.any();
     List<Fault> faults = new ArrayList<>(finder.faults());
     faults.addAll(planner.faults());
     faults.addAll(transmittances.faults());
+    faults.addAll(frames.faults());
     faults.addAll(section.faults());
     for (Map.Entry<Subtraction.OfDetail, Plan> other : others.entrySet()) {
       faults.addAll(other.getValue().sides(other.getKey()));
@@ -81,7 +84,8 @@ public final class Plan {
     warnings.addAll(new SpaceChecks(detail, outline).warnings());
     warnings.addAll(planner.warnings());
     warnings.addAll(transmittances.warnings());
-    if (!module) {
+    warnings.addAll(frames.warnings());
+    if (!module && !frames.any()) {
       warnings.addAll(cutOffs.distances());
     }
     for (PlacedFlank flank : flanks) {
@@ -101,7 +105,7 @@ public final class Plan {
    * @param partition its partition
    * @param heatLoss conditions with the films for heat loss
    * @param surface conditions with the films for surface temperatures
-   * @param others the plan of every detail that a ψ subtracts
+   * @param others the plan of every detail that a ψ subtracts, and of the frame with its panel
    * @return the plan
    * @throws DetailException if a flank has no U, a length or width that is needed cannot be
    *     derived, or a wanted result names what is not there; all such faults together
@@ -157,12 +161,25 @@ public final class Plan {
 
   /** Whether a ψ is wanted. */
   public boolean psiWanted() {
-    return psi.any();
+    return psi.any() || frames.glazed();
   }
 
   /** Whether a U is wanted. */
   public boolean transmittanceWanted() {
-    return transmittances.any();
+    return transmittances.any() || (frames.any() && !frames.glazed());
+  }
+
+  /**
+   * What is taken off L2D before the relative accuracy of a U counts: Σ U b of the panels of a
+   * frame, W/(m·K); 0 for any other U.
+   */
+  public double takenOffWPerMK() {
+    return frames.any() && transmittanceWanted() ? frames.plan().get().takenOffWPerMK() : 0;
+  }
+
+  /** The lengths of the frame asked for, if one is. */
+  Optional<FramePlan> framePlan() {
+    return frames.plan();
   }
 
   /**
@@ -299,14 +316,22 @@ public final class Plan {
     Balances balances = new Balances(detail, heatLossSolution, temperatures);
     Profiles profiles = new Profiles(detail, sets);
     List<String> allWarnings = new ArrayList<>(warnings);
-    if (!module) {
+    if (!module && !frames.any()) {
       allWarnings.addAll(cutOffs.profiles(lossFields, temperatures));
+    }
+    List<Result.LinearTransmittance> allPsi = new ArrayList<>(psi.evaluate(couplings, others));
+    List<Result.EffectiveTransmittance> allU = new ArrayList<>(transmittances.evaluate(couplings));
+    Optional<FrameTransmittances.Outcome> frame = frames.evaluate(couplings, others);
+    if (frame.isPresent()) {
+      allU.add(frame.get().transmittance());
+      allPsi.addAll(frame.get().glassEdge());
     }
     return new Result(
         detail,
         couplings.pairs(),
-        psi.evaluate(couplings, others),
-        transmittances.evaluate(couplings),
+        List.copyOf(allPsi),
+        List.copyOf(allU),
+        frame.isPresent() ? Optional.of(frame.get().account()) : Optional.empty(),
         surfaces.spaces(balances),
         balances.stretches(),
         profiles.points(),
@@ -345,9 +370,11 @@ public final class Plan {
     }
     all.addAll(ofPsi);
     for (Map.Entry<Subtraction.OfDetail, Plan> other : others.entrySet()) {
-      all.addAll(other.getValue().heatLossAssumptions(other.getKey().name()));
+      List<Assumption> known = frames.glazed() ? all : List.of();
+      all.addAll(other.getValue().heatLossAssumptions(other.getKey().name(), known));
     }
     all.addAll(transmittances.assumptions());
+    all.addAll(frames.assumptions());
     if (module && cutOffs.any()) {
       all.add(
           new Assumption(
@@ -374,10 +401,11 @@ public final class Plan {
     return new ArrayList<>(once.values());
   }
 
-  /** What was assumed for the L2D that another detail subtracts. */
-  private List<Assumption> heatLossAssumptions(String name) {
+  /** What was assumed for the L2D that another detail subtracts, beside what is known. */
+  private List<Assumption> heatLossAssumptions(String name, List<Assumption> known) {
     List<Assumption> own = new ArrayList<>(detail.assumptions());
     own.addAll(heatLoss.assumptions());
+    own.removeAll(known);
     List<Assumption> named = new ArrayList<>();
     for (Assumption line : own) {
       named.add(new Assumption("in '" + name + "': " + line.what(), line.value(), line.source()));

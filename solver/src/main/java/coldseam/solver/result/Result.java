@@ -21,6 +21,7 @@ import java.util.OptionalDouble;
  * @param couplings coupling coefficients between all pairs of spaces
  * @param psi linear transmittances in the order asked
  * @param transmittances effective U in the order asked
+ * @param frame how U_f, the last of the U, came about, if a frame is asked for
  * @param spaces one entry a space, in the detail's order
  * @param stretches one entry a named stretch, in the detail's order
  * @param points temperatures at named points
@@ -45,6 +46,7 @@ public record Result(
     List<Coupling> couplings,
     List<LinearTransmittance> psi,
     List<EffectiveTransmittance> transmittances,
+    Optional<Frame> frame,
     List<SpaceResult> spaces,
     List<StretchResult> stretches,
     List<PointResult> points,
@@ -141,7 +143,8 @@ public record Result(
    * @param of the junction or "glass edge"
    * @param warm spaces on the warm side
    * @param cold spaces on the cold side
-   * @param dimensions how lengths are measured
+   * @param dimensions how lengths are measured; empty for the glass edge of a frame, whose lengths
+   *     are the projected width of the frame and visible lengths
    * @param couplingWPerMK the (weighted) L2D it starts from
    * @param valueWPerMK ψ, W/(m·K)
    * @param subtracted what was taken off
@@ -154,7 +157,7 @@ public record Result(
       String of,
       List<String> warm,
       List<String> cold,
-      DimensionSystem dimensions,
+      Optional<DimensionSystem> dimensions,
       Quantity couplingWPerMK,
       Quantity valueWPerMK,
       List<Subtracted> subtracted,
@@ -181,6 +184,31 @@ public record Result(
       Quantity resistanceM2KPerW,
       double widthM,
       Optional<Tolerance> tolerance) {}
+
+  /**
+   * How U_f of a frame came about (ISO 10077-2).
+   *
+   * @param widthM projected width b_f that U_f refers to, m
+   * @param innerM projected width seen from inside as drawn, m
+   * @param outerM projected width seen from outside as drawn, m
+   * @param couplingWPerMK L2D of the run with the insulating panel
+   * @param panels what was taken off for panels
+   * @param lossWPerMK what is left, U_f·b_f
+   * @param glazedCouplingWPerMK L2D of the run with the glazing; empty if the panel itself is drawn
+   */
+  public record Frame(
+      double widthM,
+      double innerM,
+      double outerM,
+      Quantity couplingWPerMK,
+      List<Subtracted> panels,
+      Quantity lossWPerMK,
+      Optional<Quantity> glazedCouplingWPerMK) {
+    /** Copies the list. */
+    public Frame {
+      panels = List.copyOf(panels);
+    }
+  }
 
   /**
    * A point of a surface; an estimate, never certified.

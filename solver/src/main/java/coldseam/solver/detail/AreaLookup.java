@@ -7,10 +7,11 @@ import java.util.ArrayList;
 import java.util.List;
 
 /**
- * Whether the conducting side of an edge belongs to an area laid as glazing or frame. Areas of one
- * fill may differ in this; then the topmost one over a point just inside the edge counts.
+ * What the area on the conducting side of an edge is: glazing or frame for the surface films, and
+ * its role in a frame. Areas of one fill may differ in this; then the topmost one over a point just
+ * inside the edge counts.
  */
-final class GlazingLookup {
+final class AreaLookup {
   /** How far inside an edge its area is looked up, in closing lengths of the resolution. */
   private static final double STEP_INSIDE = 10;
 
@@ -19,41 +20,48 @@ final class GlazingLookup {
   private final List<Area> areas;
   private final boolean any;
 
-  GlazingLookup(Detail detail, Partition partition) {
+  AreaLookup(Detail detail, Partition partition) {
     this.partition = partition;
     fills = detail.fills();
     areas = detail.areas();
-    any = contains(areas, true);
+    any = anyMarked(areas);
   }
 
-  private static boolean contains(List<Area> areas, boolean glazing) {
+  private static boolean anyMarked(List<Area> areas) {
     for (Area area : areas) {
-      if (area.glazing() == glazing) {
+      if (area.glazing() || area.role() != Area.Role.OTHER) {
         return true;
       }
     }
     return false;
   }
 
-  boolean onEdge(int edge, boolean conductsLeft) {
+  /** The area, or null if no area is marked or none of its fill covers the place. */
+  Area onEdge(int edge, boolean conductsLeft) {
     if (!any) {
-      return false;
+      return null;
     }
     List<Area> ofFill = laid(conductsLeft ? partition.leftLabel(edge) : partition.rightLabel(edge));
-    if (!contains(ofFill, false)) {
-      return true;
-    }
-    if (!contains(ofFill, true)) {
-      return false;
+    if (alike(ofFill)) {
+      return ofFill.get(0);
     }
     Point probe = justInside(edge, conductsLeft);
-    boolean glazing = false;
+    Area topmost = null;
     for (Area area : ofFill) {
       if (covers(area, probe)) {
-        glazing = area.glazing();
+        topmost = area;
       }
     }
-    return glazing;
+    return topmost;
+  }
+
+  private static boolean alike(List<Area> areas) {
+    for (Area area : areas) {
+      if (area.glazing() != areas.get(0).glazing() || area.role() != areas.get(0).role()) {
+        return false;
+      }
+    }
+    return true;
   }
 
   private List<Area> laid(int label) {

@@ -1,0 +1,368 @@
+package coldseam.solver.result;
+
+import coldseam.solver.detail.Area;
+import coldseam.solver.detail.Assumption;
+import coldseam.solver.detail.CutOffPlane;
+import coldseam.solver.detail.Detail;
+import coldseam.solver.detail.Fault;
+import coldseam.solver.detail.Wanted;
+import coldseam.solver.detail.Wording;
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.Comparator;
+import java.util.List;
+import java.util.Optional;
+
+/**
+ * The lengths of a frame (ISO 10077-2): the glazings or panels it holds, at the cut-off planes
+ * where they end, how much of each is seen, and the projected width b_f of the frame, the larger of
+ * that seen from inside and that seen from outside. Lengths of glazings are taken on the side where
+ * the frame is wider, so that they add up with b_f to the width of the section.
+ */
+final class FramePlan {
+  /** Least visible length of glazing or panel, m: ISO 10077-2. */
+  private static final double LEAST_VISIBLE_M = 0.190;
+
+  /** Rounding allowed on that length, and by which lengths add up, relative. */
+  private static final double ROUNDING = 1e-6;
+
+  private static final double LENGTHS_DIFFER = 1e-3;
+
+  /** Sine of the angle up to which two glazings lie in one plane. */
+  private static final double PARALLEL_SINE = 1e-3;
+
+  /**
+   * A glazing or panel.
+   *
+   * @param flank its layers at the cut-off plane where it ends
+   * @param role glazing or panel
+   * @param visibleM the length that counts, m
+   * @param derivation where the length comes from, in words
+   */
+  record Infill(PlacedFlank flank, Area.Role role, double visibleM, String derivation) {
+    String name() {
+      return flank.name();
+    }
+  }
+
+  private final Detail detail;
+  private final Outline outline;
+  private final Wanted.Frame wanted;
+  private final List<Fault> faults = new ArrayList<>();
+  private final List<String> warnings = new ArrayList<>();
+  private final List<Assumption> assumptions = new ArrayList<>();
+  private final List<Infill> infills = new ArrayList<>();
+  private int[] warm;
+  private int[] cold;
+  private int[] floating;
+  private double widthM = Double.NaN;
+  private double innerM;
+  private double outerM;
+  private double wholeM;
+
+  private FramePlan(Detail detail, Outline outline, List<PlacedFlank> flanks, Wanted.Frame wanted) {
+    this.detail = detail;
+    this.outline = outline;
+    this.wanted = wanted;
+    SpaceGroups groups = new SpaceGroups(detail, "frame", "");
+    warm = groups.indices(wanted.warm());
+    cold = groups.indices(wanted.cold());
+    groups.checkApart(warm, cold);
+    faults.addAll(groups.faults());
+    if (!faults.isEmpty()) {
+      return;
+    }
+    floating =
+        Arrays.stream(Couplings.floating(detail))
+            .filter(f -> !Couplings.contains(warm, f) && !Couplings.contains(cold, f))
+            .toArray();
+    List<PlacedFlank> held = held(flanks);
+    if (held.isEmpty()) {
+      faults.add(
+          fault(
+              "no glazing or panel ends at a cut-off plane between its two sides; mark the shapes of"
+                  + " the glazing by `part: glazing`, or the panel by `part: panel`, and let them"
+                  + " end where the drawing ends"));
+      return;
+    }
+    measure(held);
+  }
+
+  /** The frame of a detail, if it asks for one. */
+  static Optional<FramePlan> of(Detail detail, Outline outline, List<PlacedFlank> flanks) {
+    Optional<Wanted.Frame> frame = wanted(detail);
+    return frame.isPresent()
+        ? Optional.of(new FramePlan(detail, outline, flanks, frame.get()))
+        : Optional.empty();
+  }
+
+  /** The frame that a detail asks for. */
+  static Optional<Wanted.Frame> wanted(Detail detail) {
+    for (Wanted any : detail.wanted()) {
+      if (any instanceof Wanted.Frame frame) {
+        return Optional.of(frame);
+      }
+    }
+    return Optional.empty();
+  }
+
+  private static Fault fault(String message) {
+    return new Fault("frame", "", message, Optional.empty());
+  }
+
+  /** What the outline along a cut-off plane belongs to: one glazing or panel, or something else. */
+  static Area.Role role(Outline outline, CutOffPlane plane) {
+    Area.Role role = outline.conditions().role(plane.edges().get(0));
+    for (int edge : plane.edges()) {
+      if (outline.conditions().role(edge) != role) {
+        return Area.Role.OTHER;
+      }
+    }
+    return role;
+  }
+
+  /** Glazings and panels that separate the two sides, from left to right, then upwards. */
+  private List<PlacedFlank> held(List<PlacedFlank> flanks) {
+    List<PlacedFlank> held = new ArrayList<>();
+    for (PlacedFlank flank : flanks) {
+      if (flank.plane().isPresent()
+          && Couplings.contains(warm, flank.warm())
+          && Couplings.contains(cold, flank.cold())
+          && role(outline, flank.plane().get()) != Area.Role.OTHER) {
+        held.add(flank);
+      }
+    }
+    held.sort(
+        Comparator.comparing(
+            flank -> outline.point(flank.plane().orElseThrow().first()), Outline.LEFT_TO_RIGHT));
+    return held;
+  }
+
+  private void measure(List<PlacedFlank> held) {
+    for (PlacedFlank flank : held) {
+      if (flank.uWPerM2K().isEmpty()) {
+        faults.add(
+            fault(
+                "the "
+                    + flank.name()
+                    + " is not layered at "
+                    + flank.placeWords(outline)
+                    + " ("
+                    + flank.reading().reason()
+                    + ")"));
+      }
+    }
+    if (!wanted.visibleM().isEmpty() && wanted.visibleM().size() != held.size()) {
+      faults.add(
+          fault(
+              wanted.visibleM().size()
+                  + " visible lengths are stated, but it holds "
+                  + held.size()
+                  + " glazings or panels"));
+    }
+    Direction axis = axis(held.get(0));
+    boolean typed = wanted.widthM().isPresent() && !wanted.visibleM().isEmpty();
+    for (PlacedFlank flank : held) {
+      if (!typed && Math.abs(axis.cross(axis(flank))) > PARALLEL_SINE) {
+        faults.add(
+            fault(
+                "its glazings do not lie in one plane; state `width` and `visible` of the frame"));
+      }
+    }
+    if (!faults.isEmpty()) {
+      return;
+    }
+    double inner = extent(warm, axis);
+    double outer = extent(cold, axis);
+    wholeM = Math.max(inner, outer);
+    innerM = inner;
+    outerM = outer;
+    for (PlacedFlank flank : held) {
+      innerM -= visible(flank.warmEnd().orElseThrow());
+      outerM -= visible(flank.coldEnd().orElseThrow());
+    }
+    widthM = wanted.widthM().orElse(Math.max(innerM, outerM));
+    if (!(widthM > 0)) {
+      faults.add(fault("its projected width is " + Wording.length(widthM) + "; state its `width`"));
+      return;
+    }
+    for (int i = 0; i < held.size(); i++) {
+      infills.add(infill(held.get(i), i));
+    }
+    describe();
+  }
+
+  /** Along the glazing, out of the section. */
+  private Direction axis(PlacedFlank flank) {
+    CutOffPlane plane = flank.plane().orElseThrow();
+    Direction run = outline.direction(plane.first(), plane.last());
+    return new Direction(run.y(), -run.x());
+  }
+
+  /** Width of the surfaces that face one side, seen square to the glazing. */
+  private double extent(int[] spaces, Direction axis) {
+    double low = Double.POSITIVE_INFINITY;
+    double high = Double.NEGATIVE_INFINITY;
+    for (int edge = 0; edge < outline.partition().edgeCount(); edge++) {
+      if (outline.contains(edge) && Couplings.contains(spaces, outline.conditions().space(edge))) {
+        for (int vertex : new int[] {outline.start(edge), outline.end(edge)}) {
+          double along = axis.dot(outline.partition().x(vertex), outline.partition().y(vertex));
+          low = Math.min(low, along);
+          high = Math.max(high, along);
+        }
+      }
+    }
+    return high - low;
+  }
+
+  /** How far the glazing or panel is seen from its end on, m. */
+  private double visible(FlankEnd end) {
+    Area.Role role = outline.conditions().role(end.face());
+    int at = end.vertex();
+    int edge = end.face();
+    int guard = outline.partition().edgeCount();
+    while (edge >= 0
+        && guard-- > 0
+        && role != Area.Role.OTHER
+        && outline.conditions().space(edge) == end.space()
+        && outline.conditions().role(edge) == role
+        && straight(end.vertex(), at, far(edge, end))) {
+      at = far(edge, end);
+      edge = end.forward() ? outline.next(edge) : outline.previous(edge);
+    }
+    return outline.distance(end.vertex(), at);
+  }
+
+  private int far(int edge, FlankEnd end) {
+    return end.forward() ? outline.end(edge) : outline.start(edge);
+  }
+
+  private boolean straight(int from, int at, int to) {
+    if (at == from) {
+      return true;
+    }
+    Direction line = outline.direction(from, to);
+    return line.dot(outline.direction(at, to)) > 0
+        && Math.abs(outline.across(line, from, at)) <= Outline.offset(outline.distance(from, to));
+  }
+
+  private Infill infill(PlacedFlank flank, int index) {
+    Area.Role role = role(outline, flank.plane().orElseThrow());
+    if (!wanted.visibleM().isEmpty()) {
+      return new Infill(flank, role, wanted.visibleM().get(index), "visible length stated");
+    }
+    boolean inside = innerM >= outerM;
+    double length = visible(inside ? flank.warmEnd().orElseThrow() : flank.coldEnd().orElseThrow());
+    return new Infill(
+        flank, role, length, "visible length seen from " + (inside ? "inside" : "outside"));
+  }
+
+  private void describe() {
+    if (wanted.widthM().isEmpty()) {
+      assumptions.add(
+          new Assumption(
+              "projected width b_f of the frame",
+              Wording.length(widthM)
+                  + ", the larger of "
+                  + Wording.length(innerM)
+                  + " seen from inside and "
+                  + Wording.length(outerM)
+                  + " from outside",
+              "ISO 10077-2, lengths"));
+    }
+    double sum = widthM;
+    for (Infill infill : infills) {
+      sum += infill.visibleM();
+      if (wanted.visibleM().isEmpty()) {
+        assumptions.add(
+            new Assumption(
+                "visible length of the " + infill.name(),
+                Wording.length(infill.visibleM()) + ", " + infill.derivation(),
+                "ISO 10077-2, lengths"));
+      }
+      if (infill.visibleM() < LEAST_VISIBLE_M * (1 - ROUNDING)) {
+        warnings.add(
+            "the "
+                + infill.name()
+                + " is seen over "
+                + Wording.length(infill.visibleM())
+                + "; ISO 10077-2 asks for "
+                + Wording.length(LEAST_VISIBLE_M)
+                + " at least");
+      }
+    }
+    if (Math.abs(sum - wholeM) > LENGTHS_DIFFER * wholeM) {
+      warnings.add(
+          "width of the frame and visible lengths add up to "
+              + Wording.length(sum)
+              + ", but the section is "
+              + Wording.length(wholeM)
+              + " wide");
+    }
+  }
+
+  Wanted.Frame wanted() {
+    return wanted;
+  }
+
+  Detail detail() {
+    return detail;
+  }
+
+  List<Fault> faults() {
+    return faults;
+  }
+
+  List<String> warnings() {
+    return warnings;
+  }
+
+  List<Assumption> assumptions() {
+    return assumptions;
+  }
+
+  List<Infill> infills() {
+    return infills;
+  }
+
+  int[] warm() {
+    return warm;
+  }
+
+  int[] cold() {
+    return cold;
+  }
+
+  int[] floating() {
+    return floating;
+  }
+
+  /** b_f, m. */
+  double widthM() {
+    return widthM;
+  }
+
+  /** Projected width from inside as drawn, m. */
+  double innerM() {
+    return innerM;
+  }
+
+  /** Projected width from outside as drawn, m. */
+  double outerM() {
+    return outerM;
+  }
+
+  /** How U of a glazing or panel depends on materials and films. */
+  Optional<ByPart> byPart(Infill infill) {
+    return infill.flank().byPart(detail, outline.conditions());
+  }
+
+  /** Σ U b of glazings and panels, W/(m·K). */
+  double takenOffWPerMK() {
+    double sum = 0;
+    for (Infill infill : infills) {
+      sum += infill.flank().uWPerM2K().orElseThrow().mid() * infill.visibleM();
+    }
+    return sum;
+  }
+}
