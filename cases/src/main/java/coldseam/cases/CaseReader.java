@@ -26,6 +26,7 @@ final class CaseReader {
           "flanks",
           "psi",
           "U",
+          "frame",
           "points",
           "profiles",
           "accuracy",

@@ -66,6 +66,7 @@ final class DetailReader {
     PsiReader psi = new PsiReader(pass, spaces, flanks, others);
     top.get("psi").ifPresent(n -> wanted.addAll(psi.read(n)));
     top.get("U").ifPresent(n -> wanted.addAll(results.transmittances(n)));
+    top.get("frame").ifPresent(n -> frame(n, spaces, results, wanted));
     top.get("points").ifPresent(n -> wanted.addAll(results.points(n)));
     top.get("profiles").ifPresent(n -> wanted.addAll(results.profiles(n)));
     top.get("accuracy").ifPresent(n -> accuracy = new AccuracyReader(pass).read(n));
@@ -84,6 +85,18 @@ final class DetailReader {
             flanks.flanks(),
             wanted,
             pass.assumptions()));
+  }
+
+  private void frame(Node node, SpaceReader spaces, ResultsReader results, List<Wanted> wanted) {
+    Node key = top.keyNode("frame");
+    if (results.transmittances().contains(Wanted.Frame.NAME)) {
+      problems.add(key, "there is a U of `frame` already", "call the other one otherwise");
+    }
+    Optional<Wanted> frame = new FrameReader(pass, spaces).read(key, node);
+    if (frame.isPresent()) {
+      wanted.add(frame.get());
+      results.transmittances().add(Wanted.Frame.NAME);
+    }
   }
 
   private List<Area> section(Fills fills, boolean haveSpaces) {
@@ -111,7 +124,7 @@ final class DetailReader {
   private View view() {
     Optional<String> word = top.word("view", List.of("vertical", "plan"));
     boolean plan = word.orElse("vertical").equals("plan");
-    if (!top.has("view")) {
+    if (!top.has("view") && !top.has("frame")) {
       pass.assume("view", "vertical section", "by convention of this tool");
     }
     top.word("geometry", List.of("plane"));
@@ -153,6 +166,9 @@ final class DetailReader {
       for (Node.Entry entry : mapping.entries()) {
         psi.add(entry.key().text());
       }
+    }
+    if (top.has("frame")) {
+      psi.add(Wanted.Frame.GLASS_EDGE);
     }
     ExpectationReader.Names names =
         new ExpectationReader.Names(

@@ -125,7 +125,9 @@ final class Fills {
     valid.addAll(spaces.spaces().keySet());
     valid.add(HOLLOW);
     String right = Problems.suggestion(name, valid);
-    if (!right.startsWith("did")) {
+    if (name.equals(GlazingReader.GAP)) {
+      right = "a stack with a `gap` needs `glazing: {U: …}` beside its `layers`";
+    } else if (!right.startsWith("did")) {
       List<String> near = Library.nearest(name);
       right =
           near.isEmpty()

@@ -16,14 +16,19 @@ final class SectionReader {
   private static final int MOST_CORNERS = 1_000_000;
 
   private static final List<String> SHAPE_KEYS =
-      List.of("fill", "name", "surface", "box", "polygon", "disc", "strip");
-  private static final List<String> STACK_KEYS = List.of("stack", "layers", "name", "surface");
+      List.of("fill", "name", "surface", "part", "box", "polygon", "disc", "strip");
+  private static final List<String> STACK_KEYS =
+      List.of("stack", "layers", "name", "surface", "part", "glazing");
   private static final List<String> GROUP_KEYS =
-      List.of("group", "mirror", "rotate", "move", "repeat");
+      List.of("group", "part", "mirror", "rotate", "move", "repeat");
   private static final List<String> ANY_KEYS =
       List.of(
           "fill", "box", "polygon", "disc", "strip", "stack", "layers", "group", "name", "surface",
-          "mirror", "rotate", "move", "repeat");
+          "part", "glazing", "mirror", "rotate", "move", "repeat");
+
+  /** In the order of {@link Area.Role} after the first. */
+  private static final List<String> PARTS = List.of("glazing", "panel");
+
   static final List<String> SURFACES = List.of("glazing", "frame");
 
   private final Pass pass;
@@ -31,6 +36,7 @@ final class SectionReader {
   private final Fills fills;
   private final ShapeReader shapes;
   private final StackReader stacks;
+  private final GlazingReader glazings;
   private final List<String> names = new ArrayList<>();
   private boolean full;
 
@@ -40,6 +46,7 @@ final class SectionReader {
     this.fills = fills;
     this.shapes = new ShapeReader(pass);
     this.stacks = new StackReader(pass, fills);
+    this.glazings = new GlazingReader(pass);
   }
 
   /**
@@ -148,6 +155,7 @@ final class SectionReader {
     Fields fields = new Fields(problems, "this " + key, node, SHAPE_KEYS);
     Optional<String> name = name(fields);
     boolean glazing = fields.word("surface", SURFACES).isPresent();
+    Area.Role role = role(fields);
     Optional<Node> fillNode = fields.require("fill", "add `fill: ` and a material or a space");
     Optional<Fill> fill = fillNode.isEmpty() ? Optional.empty() : fills.find(fillNode.get(), name);
     String called = called(path, name, fill);
@@ -161,7 +169,13 @@ final class SectionReader {
     if (fill.isEmpty() || rings.isEmpty()) {
       return List.of();
     }
-    return List.of(new Area(called, fill.get(), rings.get(), glazing));
+    return List.of(new Area(called, fill.get(), rings.get(), glazing, role));
+  }
+
+  /** What a shape is to a frame. */
+  private static Area.Role role(Fields fields) {
+    Optional<String> word = fields.word("part", PARTS);
+    return word.isPresent() ? Area.Role.values()[1 + PARTS.indexOf(word.get())] : Area.Role.OTHER;
   }
 
   private static String called(String path, Optional<String> name, Optional<Fill> fill) {
@@ -173,18 +187,30 @@ final class SectionReader {
     Fields fields = new Fields(problems, "this stack", node, STACK_KEYS);
     Optional<String> name = name(fields);
     boolean glazing = fields.word("surface", SURFACES).isPresent();
+    Area.Role role = role(fields);
+    fields.refuseBoth("glazing", "part", "a glazing is one already");
     Optional<Node> layers = fields.require("layers", "add `layers: [[FILL, THICKNESS], …]`");
     Optional<Node> stack = fields.get("stack");
     if (stack.isEmpty() || layers.isEmpty()) {
       return List.of();
     }
     List<Area> areas = new ArrayList<>();
-    for (StackReader.Layer layer : stacks.read(stack.get(), layers.get(), name)) {
+    boolean unit = fields.has("glazing");
+    List<StackReader.Layer> read = stacks.read(stack.get(), layers.get(), name, unit);
+    if (unit) {
+      areas.addAll(glazings.read(fields.get("glazing").get(), read, path));
+      for (Area area : areas) {
+        pass.place("section", area.name(), node);
+        pass.place("section", area.fill().name(), node);
+      }
+      return areas;
+    }
+    for (StackReader.Layer layer : read) {
       String called =
           called(path + ".layer[" + layer.number() + "]", name, Optional.of(layer.fill()));
       pass.place("section", called, layer.node());
       pass.place("section", layer.fill().name(), layer.node());
-      areas.add(new Area(called, layer.fill(), List.of(layer.ring()), glazing));
+      areas.add(new Area(called, layer.fill(), List.of(layer.ring()), glazing, role));
     }
     return areas;
   }
@@ -194,6 +220,10 @@ final class SectionReader {
     Optional<Node> members = fields.get("group");
     List<Area> areas =
         members.isEmpty() ? List.of() : entries(members.get(), path + ".group", "`group`");
+    Area.Role role = role(fields);
+    if (role != Area.Role.OTHER) {
+      areas = ofRole(areas, role);
+    }
     MotionReader motions = new MotionReader(pass, fields);
     Optional<MotionReader.Mirror> mirror = motions.mirror();
     Optional<Motion> turnAndMove = motions.turnAndMove();
@@ -217,6 +247,18 @@ final class SectionReader {
     return areas;
   }
 
+  /** Areas that are nothing to a frame of their own become part of what their group is. */
+  private static List<Area> ofRole(List<Area> areas, Area.Role role) {
+    List<Area> all = new ArrayList<>(areas.size());
+    for (Area area : areas) {
+      all.add(
+          area.role() == Area.Role.OTHER
+              ? new Area(area.name(), area.fill(), area.rings(), area.glazing(), role)
+              : area);
+    }
+    return all;
+  }
+
   private List<Area> repeated(List<Area> areas, MotionReader.Repeat repeat, Node node) {
     if (tooMany(node, (long) areas.size() * repeat.times())) {
       return List.of();
@@ -238,7 +280,7 @@ final class SectionReader {
       if (place != null) {
         pass.place("section", name, place);
       }
-      moved.add(new Area(name, fill, motion.of(area.rings()), area.glazing()));
+      moved.add(new Area(name, fill, motion.of(area.rings()), area.glazing(), area.role()));
     }
     return moved;
   }

@@ -2,6 +2,7 @@ package coldseam.cases;
 
 import coldseam.mesh.plane.Point;
 import coldseam.solver.detail.Fill;
+import coldseam.solver.detail.Hollow;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -10,6 +11,9 @@ import java.util.Optional;
 final class StackReader {
   static final List<String> KEYS = List.of("face", "towards");
   static final List<String> TOWARDS = List.of("left", "right", "up", "down");
+
+  /** Stands for what fills a gap of a glazing until its U has decided it. */
+  static final Fill GAP_FILL = new Hollow(GlazingReader.GAP);
 
   private final Problems problems;
   private final Quantities quantities;
@@ -37,9 +41,10 @@ final class StackReader {
    * @param stack where it begins and which way it goes
    * @param layers fills and thicknesses
    * @param name the name of the stack, if it has one
+   * @param glazing whether a layer may be a {@link #GAP_FILL}
    * @return the layers; none if a mistake was reported
    */
-  List<Layer> read(Node stack, Node layers, Optional<String> name) {
+  List<Layer> read(Node stack, Node layers, Optional<String> name, boolean glazing) {
     Fields fields = new Fields(problems, "stack", stack, KEYS);
     Optional<Node> faceNode = fields.require("face", "add `face: [[x, y], [x, y]]`");
     Optional<Node> towardsNode =
@@ -55,7 +60,7 @@ final class StackReader {
       face = Optional.empty();
     }
     if (face.isEmpty() || towards.isEmpty()) {
-      readLayers(layers, name, null, null);
+      readLayers(layers, name, glazing, null, null);
       return List.of();
     }
     Point p = face.get().get(0);
@@ -74,7 +79,7 @@ final class StackReader {
       return List.of();
     }
     double sign = Math.signum(along);
-    return readLayers(layers, name, face.get(), new double[] {sign * nx, sign * ny});
+    return readLayers(layers, name, glazing, face.get(), new double[] {sign * nx, sign * ny});
   }
 
   private Optional<double[]> direction(Node node) {
@@ -104,7 +109,7 @@ final class StackReader {
 
   /** Reads the layers; without a face only to report their mistakes. */
   private List<Layer> readLayers(
-      Node node, Optional<String> name, List<Point> face, double[] normal) {
+      Node node, Optional<String> name, boolean glazing, List<Point> face, double[] normal) {
     if (!(node instanceof Node.Sequence sequence) || sequence.items().isEmpty()) {
       problems.add(
           node, "`layers` is a list, not " + Node.describe(node), "write `[[FILL, THICKNESS], …]`");
@@ -123,7 +128,12 @@ final class StackReader {
         good = false;
         continue;
       }
-      Optional<Fill> fill = fills.find(pair.items().get(0), name);
+      Node fillNode = pair.items().get(0);
+      boolean gap =
+          glazing
+              && fillNode instanceof Node.Scalar scalar
+              && scalar.text().strip().equals(GlazingReader.GAP);
+      Optional<Fill> fill = gap ? Optional.of(GAP_FILL) : fills.find(fillNode, name);
       double thickness = quantities.read(pair.items().get(1), "thickness of the layer", Place.SIZE);
       good &= fill.isPresent() && !Double.isNaN(thickness);
       if (good) {

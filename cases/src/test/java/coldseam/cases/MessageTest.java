@@ -171,7 +171,7 @@ class MessageTest {
         "20:5: this entry has no shape; add `box`, `polygon`, `disc` or `strip`, or write a `stack`"
             + " or a `group`",
         "21:6: this box has no key `fil`; did you mean `fill`?",
-        "22:6: this group has no key `fill`; known are `group`, `mirror`, `rotate`, `move` and"
+        "22:6: this group has no key `fill`; known are `group`, `part`, `mirror`, `rotate`, `move` and"
             + " `repeat`");
   }
 
