@@ -5,7 +5,7 @@ import java.awt.geom.Line2D;
 import java.awt.geom.Rectangle2D;
 import java.util.ArrayList;
 import java.util.List;
-import java.util.function.IntFunction;
+import java.util.Optional;
 
 /**
  * Filled bands and lines of equal value in a frame. Each band is one path: the region at or above
@@ -44,7 +44,10 @@ final class Bands {
     for (Polyline ring : region) {
       Polyline simple = Simplification.of(ring, SIMPLIFIED / panel.pointsPerM());
       if (simple.size() > 2) {
-        Clip.ring(simple.on(panel), panel.frame()).ifPresent(rings::add);
+        Optional<Polyline> seen = Clip.ring(simple.on(panel), panel.frame());
+        if (seen.isPresent()) {
+          rings.add(seen.get());
+        }
       }
     }
     if (!rings.isEmpty()) {
@@ -72,16 +75,12 @@ final class Bands {
    * @param colours of the bands, one more than levels
    */
   static void scale(
-      Canvas canvas,
-      Box box,
-      List<String> levels,
-      List<Boolean> heavy,
-      IntFunction<Color> colours) {
+      Canvas canvas, Box box, List<String> levels, List<Boolean> heavy, List<Color> colours) {
     int bands = levels.size() + 1;
     double top = box.y0() + 2;
     for (int k = 0; k < bands; k++) {
       double y = top + (bands - 1 - k) * STEP;
-      canvas.fill(new Rectangle2D.Double(box.x0(), y, SCALE_WIDTH, STEP), colours.apply(k));
+      canvas.fill(new Rectangle2D.Double(box.x0(), y, SCALE_WIDTH, STEP), colours.get(k));
     }
     for (int k = 0; k < levels.size(); k++) {
       double y = top + (bands - 1 - k) * STEP;

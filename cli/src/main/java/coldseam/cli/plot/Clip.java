@@ -27,7 +27,12 @@ final class Clip {
 
   static List<Polyline> rings(List<Polyline> rings, Box box) {
     List<Polyline> inside = new ArrayList<>(rings.size());
-    rings.forEach(ring -> ring(ring, box).ifPresent(inside::add));
+    for (Polyline ring : rings) {
+      Optional<Polyline> seen = ring(ring, box);
+      if (seen.isPresent()) {
+        inside.add(seen.get());
+      }
+    }
     return inside;
   }
 
@@ -88,7 +93,9 @@ final class Clip {
 
   static List<Polyline> lines(List<Polyline> lines, Box box) {
     List<Polyline> inside = new ArrayList<>(lines.size());
-    lines.forEach(line -> inside.addAll(line(line, box)));
+    for (Polyline line : lines) {
+      inside.addAll(line(line, box));
+    }
     return inside;
   }
 

@@ -32,9 +32,11 @@ final class ColdestPoints {
       coldest = Math.min(coldest, other.temperatureC());
     }
     Result.SpaceResult found = result.spaces().get(space);
-    return found.temperatureC() > coldest
-        ? found.coldest().filter(point -> point.filmM2KPerW() > 0)
-        : Optional.empty();
+    boolean marked =
+        found.temperatureC() > coldest
+            && found.coldest().isPresent()
+            && found.coldest().get().filmM2KPerW() > 0;
+    return marked ? found.coldest() : Optional.empty();
   }
 
   /** With the decimals that its estimated error leaves, two at most. */
@@ -80,13 +82,12 @@ final class ColdestPoints {
     String film = "Rs " + figures.film(point.filmM2KPerW());
     String factor = factor(point);
     List<String> wide = List.of(temperature(point), factor.isEmpty() ? film : factor + ", " + film);
-    List<String> narrow = new ArrayList<>(List.of(temperature(point), factor, film));
-    narrow.removeIf(String::isEmpty);
+    List<String> narrow =
+        factor.isEmpty()
+            ? List.of(temperature(point), film)
+            : List.of(temperature(point), factor, film);
     for (IntPredicate accepted :
-        List.of(
-            SectionLines.open(section),
-            (IntPredicate) owner -> owner != Ground.EDGE,
-            owner -> true)) {
+        List.of(SectionLines.open(section), Ground.OFF_LINES, Ground.ANYWHERE)) {
       for (List<String> lines : List.of(wide, narrow)) {
         Box size = Plates.size(lines, Lettering.STRONG);
         Optional<Box> place = ground.near(x, y, size.width(), size.height(), 12, 110, accepted);
@@ -97,6 +98,13 @@ final class ColdestPoints {
           return;
         }
       }
+    }
+  }
+
+  private static final class Diamond implements Key.Sample {
+    @Override
+    public void draw(Canvas canvas, Box box) {
+      PointMarks.diamond(canvas, box.midX(), box.midY());
     }
   }
 
@@ -120,7 +128,7 @@ final class ColdestPoints {
       words.add("Rs " + figures.film(point.filmM2KPerW()) + " " + figures.filmUnit());
       words.add(name(point.filmSet()));
       key.sample(
-          (c, box) -> PointMarks.diamond(c, box.midX(), box.midY()),
+          new Diamond(),
           result.spaces().get(i).name() + ": " + String.join(", ", words),
           temperature(point));
     }

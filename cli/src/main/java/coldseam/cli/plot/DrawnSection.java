@@ -9,6 +9,7 @@ import coldseam.solver.detail.Fill;
 import coldseam.solver.detail.Space;
 import coldseam.solver.result.Result;
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
 
@@ -110,22 +111,49 @@ final class DrawnSection {
     }
   }
 
+  /** The conditions with the films for surface temperatures, if those were solved. */
+  private Optional<Conditions> otherConditions() {
+    return result.surface().isPresent() && result.surface().get().partition() == partition
+        ? Optional.of(result.surface().get().conditions())
+        : Optional.empty();
+  }
+
+  /** Edges joined with the solid to their left. */
+  private abstract class SolidOnLeft implements EdgeChains.Rule {
+    @Override
+    public boolean asDrawn(int edge) {
+      return solidOnLeft(edge);
+    }
+  }
+
+  private final class OneSurface extends SolidOnLeft {
+    private final Optional<Conditions> other;
+
+    private OneSurface(Optional<Conditions> other) {
+      this.other = other;
+    }
+
+    @Override
+    public boolean included(int edge) {
+      return isSurface(conditions.kind(edge));
+    }
+
+    @Override
+    public boolean together(int edge, int next) {
+      return sameSurface(edge, next) && sameSurfaceFilm(other, edge, next);
+    }
+  }
+
   private void collectSurfaces() {
-    Optional<Conditions> other =
-        result.surface().filter(s -> s.partition() == partition).map(Solution::conditions);
-    EdgeChains chains =
-        new EdgeChains(
-            partition,
-            e -> solidOnLeft(e),
-            (a, b) -> sameSurface(a, b) && sameSurfaceFilm(other, a, b));
-    for (EdgeChains.Chain chain : chains.of(e -> isSurface(conditions.kind(e)))) {
+    Optional<Conditions> other = otherConditions();
+    for (EdgeChains.Chain chain : EdgeChains.of(partition, new OneSurface(other))) {
       int edge = chain.firstEdge();
       surfaces.add(
           new Surface(
               conditions.kind(edge),
               conditions.space(edge),
               conditions.filmM2KPerW(edge),
-              other.map(c -> c.filmM2KPerW(edge)).orElse(Double.NaN),
+              other.isEmpty() ? Double.NaN : other.get().filmM2KPerW(edge),
               conditions.flowWPerM2(edge),
               Simplification.of(chain.line(), STRAIGHT * extentM())));
     }
@@ -149,13 +177,20 @@ final class DrawnSection {
     return other.isEmpty() || other.get().filmM2KPerW(a) == other.get().filmM2KPerW(b);
   }
 
+  private final class OnePlane extends SolidOnLeft {
+    @Override
+    public boolean included(int edge) {
+      return conditions.kind(edge) == Conditions.Kind.CUT_OFF;
+    }
+
+    @Override
+    public boolean together(int edge, int next) {
+      return conditions.symmetry(edge) == conditions.symmetry(next) && parallel(edge, next);
+    }
+  }
+
   private void collectCutOffs() {
-    EdgeChains chains =
-        new EdgeChains(
-            partition,
-            e -> solidOnLeft(e),
-            (a, b) -> conditions.symmetry(a) == conditions.symmetry(b) && parallel(a, b));
-    for (EdgeChains.Chain chain : chains.of(e -> conditions.kind(e) == Conditions.Kind.CUT_OFF)) {
+    for (EdgeChains.Chain chain : EdgeChains.of(partition, new OnePlane())) {
       List<Layer> layers = new ArrayList<>();
       double at = 0;
       for (int edge : chain.edges()) {
@@ -242,8 +277,15 @@ final class DrawnSection {
         found.add(face);
       }
     }
-    found.sort((a, b) -> Double.compare(partition.faceArea(b), partition.faceArea(a)));
+    found.sort(new LargestFirst());
     return found;
+  }
+
+  private final class LargestFirst implements Comparator<Integer> {
+    @Override
+    public int compare(Integer a, Integer b) {
+      return Double.compare(partition.faceArea(b), partition.faceArea(a));
+    }
   }
 
   /** The box around a face on the sheet. */
@@ -264,11 +306,28 @@ final class DrawnSection {
     return joints;
   }
 
+  private final class OneStretch extends SolidOnLeft {
+    private final int stretch;
+
+    private OneStretch(int stretch) {
+      this.stretch = stretch;
+    }
+
+    @Override
+    public boolean included(int edge) {
+      return conditions.stretches(edge).contains(stretch);
+    }
+
+    @Override
+    public boolean together(int edge, int next) {
+      return true;
+    }
+  }
+
   /** The edges that a stretch lies on, joined to lines with the solid to their left. */
   List<Polyline> stretch(int index) {
-    EdgeChains chains = new EdgeChains(partition, this::solidOnLeft, (a, b) -> true);
     List<Polyline> lines = new ArrayList<>();
-    for (EdgeChains.Chain chain : chains.of(e -> conditions.stretches(e).contains(index))) {
+    for (EdgeChains.Chain chain : EdgeChains.of(partition, new OneStretch(index))) {
       lines.add(Simplification.of(chain.line(), STRAIGHT * extentM()));
     }
     return lines;

@@ -5,14 +5,19 @@ import java.util.ArrayList;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
-import java.util.function.IntPredicate;
 
 /** Joins edges of a partition, end to end, to lines as long as neighbours belong together. */
 final class EdgeChains {
-  /** Whether two edges that follow each other belong to one line. */
-  @FunctionalInterface
-  interface Together {
-    boolean test(int edge, int next);
+  /** What is joined. */
+  interface Rule {
+    /** Whether an edge belongs to any line. */
+    boolean included(int edge);
+
+    /** Whether two edges that follow each other belong to one line. */
+    boolean together(int edge, int next);
+
+    /** Whether an edge is walked from its start to its end, or the other way. */
+    boolean asDrawn(int edge);
   }
 
   /**
@@ -28,40 +33,32 @@ final class EdgeChains {
   }
 
   private final Partition partition;
-  private final IntPredicate asDrawn;
-  private final Together together;
+  private final Rule rule;
 
-  /**
-   * Prepares.
-   *
-   * @param partition the edges
-   * @param asDrawn whether an edge is walked from its start to its end, or the other way
-   * @param together which neighbours belong together
-   */
-  EdgeChains(Partition partition, IntPredicate asDrawn, Together together) {
+  private EdgeChains(Partition partition, Rule rule) {
     this.partition = partition;
-    this.asDrawn = asDrawn;
-    this.together = together;
+    this.rule = rule;
   }
 
-  List<Chain> of(IntPredicate included) {
+  static List<Chain> of(Partition partition, Rule rule) {
+    return new EdgeChains(partition, rule).chains();
+  }
+
+  private List<Chain> chains() {
     Map<Integer, List<Integer>> leaving = new HashMap<>();
     Map<Integer, List<Integer>> arriving = new HashMap<>();
     List<Integer> all = new ArrayList<>();
     for (int e = 0; e < partition.edgeCount(); e++) {
-      if (included.test(e)) {
+      if (rule.included(e)) {
         all.add(e);
-        leaving.computeIfAbsent(start(e), v -> new ArrayList<>(1)).add(e);
-        arriving.computeIfAbsent(end(e), v -> new ArrayList<>(1)).add(e);
+        add(leaving, start(e), e);
+        add(arriving, end(e), e);
       }
     }
     boolean[] used = new boolean[partition.edgeCount()];
     List<Chain> chains = new ArrayList<>();
     for (int e : all) {
-      boolean begins =
-          arriving.getOrDefault(start(e), List.of()).stream()
-              .noneMatch(before -> together.test(before, e));
-      if (begins && !used[e]) {
+      if (!used[e] && begins(e, arriving)) {
         chains.add(follow(e, leaving, used));
       }
     }
@@ -71,6 +68,25 @@ final class EdgeChains {
       }
     }
     return chains;
+  }
+
+  private static void add(Map<Integer, List<Integer>> edgesAt, int vertex, int edge) {
+    List<Integer> edges = edgesAt.get(vertex);
+    if (edges == null) {
+      edges = new ArrayList<>(1);
+      edgesAt.put(vertex, edges);
+    }
+    edges.add(edge);
+  }
+
+  /** Whether an edge belongs together with none before it. */
+  private boolean begins(int edge, Map<Integer, List<Integer>> arriving) {
+    for (int before : arriving.getOrDefault(start(edge), List.of())) {
+      if (rule.together(before, edge)) {
+        return false;
+      }
+    }
+    return true;
   }
 
   private Chain follow(int first, Map<Integer, List<Integer>> leaving, boolean[] used) {
@@ -84,7 +100,7 @@ final class EdgeChains {
       int end = end(at);
       int next = -1;
       for (int candidate : leaving.getOrDefault(end, List.of())) {
-        if (!used[candidate] && together.test(at, candidate)) {
+        if (!used[candidate] && rule.together(at, candidate)) {
           next = candidate;
           break;
         }
@@ -100,10 +116,10 @@ final class EdgeChains {
   }
 
   private int start(int edge) {
-    return asDrawn.test(edge) ? partition.edgeStart(edge) : partition.edgeEnd(edge);
+    return rule.asDrawn(edge) ? partition.edgeStart(edge) : partition.edgeEnd(edge);
   }
 
   private int end(int edge) {
-    return asDrawn.test(edge) ? partition.edgeEnd(edge) : partition.edgeStart(edge);
+    return rule.asDrawn(edge) ? partition.edgeEnd(edge) : partition.edgeStart(edge);
   }
 }

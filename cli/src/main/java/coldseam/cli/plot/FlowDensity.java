@@ -5,7 +5,7 @@ import coldseam.solver.conduction.TemperatureField;
 import coldseam.solver.detail.Conditions;
 import coldseam.solver.detail.Material;
 import java.util.Arrays;
-import java.util.function.IntToDoubleFunction;
+import java.util.Comparator;
 
 /**
  * The heat-flow density q = −Λ grad θ, W/m²: averaged at each vertex and side middle over the
@@ -173,7 +173,11 @@ final class FlowDensity implements Nodal {
    * @return W/m²
    */
   double ofArea(double share) {
-    return quantile(share, mesh::area);
+    double[] areas = new double[mesh.triangleCount()];
+    for (int t = 0; t < areas.length; t++) {
+      areas[t] = mesh.area(t);
+    }
+    return quantile(share, areas);
   }
 
   /**
@@ -184,35 +188,42 @@ final class FlowDensity implements Nodal {
    * @return W/m²
    */
   double ofDissipation(double share) {
-    return quantile(
-        share,
-        t -> {
-          Material material = conditions.material(mesh.label(t));
-          double lambda =
-              Math.max(material.conductivityWPerMK(), material.crossConductivityWPerMK());
-          return mesh.area(t) * Math.pow(10, 2 * mean(t)) / lambda;
-        });
+    double[] dissipated = new double[mesh.triangleCount()];
+    for (int t = 0; t < dissipated.length; t++) {
+      Material material = conditions.material(mesh.label(t));
+      double lambda = Math.max(material.conductivityWPerMK(), material.crossConductivityWPerMK());
+      dissipated[t] = mesh.area(t) * Math.pow(10, 2 * mean(t)) / lambda;
+    }
+    return quantile(share, dissipated);
   }
 
   private double mean(int t) {
     return (atCorner(t, 0) + atCorner(t, 1) + atCorner(t, 2)) / 3;
   }
 
-  private double quantile(double share, IntToDoubleFunction weight) {
+  /** Indices in the order of the values they stand for. */
+  private record ByValue(double[] values) implements Comparator<Integer> {
+    @Override
+    public int compare(Integer a, Integer b) {
+      return Double.compare(values[a], values[b]);
+    }
+  }
+
+  private double quantile(double share, double[] weights) {
     int n = mesh.triangleCount();
     double[] means = new double[n];
     double total = 0;
     Integer[] sorted = new Integer[n];
     for (int t = 0; t < n; t++) {
       means[t] = mean(t);
-      total += weight.applyAsDouble(t);
+      total += weights[t];
       sorted[t] = t;
     }
-    Arrays.sort(sorted, (a, b) -> Double.compare(means[a], means[b]));
+    Arrays.sort(sorted, new ByValue(means));
     double sum = 0;
     double found = means[sorted[n - 1]];
     for (int i = 0; i < n && sum < share * total; i++) {
-      sum += weight.applyAsDouble(sorted[i]);
+      sum += weights[sorted[i]];
       found = means[sorted[i]];
     }
     return Math.pow(10, found);

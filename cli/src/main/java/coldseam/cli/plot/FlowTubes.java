@@ -64,10 +64,11 @@ final class FlowTubes {
     step = parts == 0 ? round : greatest / parts;
     // The rim that lines begin to be counted from may lie a jump higher elsewhere.
     double shift = jumps.length == 0 ? 0 : step / 2;
-    levels =
-        Levels.between(-shift, function.greatest() - shift, step).stream()
-            .mapToDouble(level -> level + shift)
-            .toArray();
+    List<Double> shifted = Levels.between(-shift, function.greatest() - shift, step);
+    levels = new double[shifted.size()];
+    for (int k = 0; k < levels.length; k++) {
+      levels[k] = shifted.get(k) + shift;
+    }
   }
 
   /**
@@ -79,10 +80,10 @@ final class FlowTubes {
    * @return empty where the solution has no stream function, or no heat flows
    */
   static Optional<FlowTubes> of(Solution solution, double[] temperaturesC, Figures figures) {
-    return solution
-        .streamFunction(temperaturesC)
-        .filter(function -> function.entering() > 0)
-        .map(function -> new FlowTubes(function, figures, function.entering()));
+    Optional<StreamFunction> function = solution.streamFunction(temperaturesC);
+    return function.isPresent() && function.get().entering() > 0
+        ? Optional.of(new FlowTubes(function.get(), figures, function.get().entering()))
+        : Optional.empty();
   }
 
   /** What each tube carries, with its unit. */
@@ -153,8 +154,7 @@ final class FlowTubes {
       for (int i = 0; i < count; i++) {
         for (double place : HEAD_PLACES) {
           double[] at = line.at((i + place) * line.length() / count);
-          if (roomAt(at, density, panel)
-              && taken.stream().noneMatch(t -> Math.hypot(t[0] - at[0], t[1] - at[1]) < CROWDED)) {
+          if (roomAt(at, density, panel) && !crowded(at, taken)) {
             taken.add(at);
             // (at[2], at[3]) is the unit vector to the right of the line, y downwards
             head(path, at[0], at[1], at[3], -at[2]);
@@ -164,6 +164,15 @@ final class FlowTubes {
       }
     }
     return path;
+  }
+
+  private static boolean crowded(double[] at, List<double[]> taken) {
+    for (double[] head : taken) {
+      if (Math.hypot(head[0] - at[0], head[1] - at[1]) < CROWDED) {
+        return true;
+      }
+    }
+    return false;
   }
 
   private boolean roomAt(double[] at, FlowDensity density, Panel panel) {
@@ -195,7 +204,9 @@ final class FlowTubes {
           int a = mesh.vertex(t, (k + 1) % 3);
           int b = mesh.vertex(t, (k + 2) % 3);
           Polyline side = Polyline.of(mesh.x(a), mesh.y(a), mesh.x(b), mesh.y(b));
-          Clip.line(side.on(panel), panel.frame()).forEach(part -> part.appendTo(path));
+          for (Polyline part : Clip.line(side.on(panel), panel.frame())) {
+            part.appendTo(path);
+          }
         }
       }
     }

@@ -16,6 +16,24 @@ final class Ground {
   /** A line of the drawing passes here. */
   static final int EDGE = -2;
 
+  /** Accepts every square. */
+  static final IntPredicate ANYWHERE =
+      new IntPredicate() {
+        @Override
+        public boolean test(int owner) {
+          return true;
+        }
+      };
+
+  /** Accepts every square that no line of the drawing passes. */
+  static final IntPredicate OFF_LINES =
+      new IntPredicate() {
+        @Override
+        public boolean test(int owner) {
+          return owner != EDGE;
+        }
+      };
+
   private static final double SQUARE = 4;
 
   /** Kept clear of labels, but a leader may cross. */
@@ -81,24 +99,25 @@ final class Ground {
       }
     }
     if (edged) {
-      rings.forEach(this::edge);
+      for (Polyline ring : rings) {
+        for (int square : squares(ring)) {
+          owners[square] = EDGE;
+        }
+      }
     }
-  }
-
-  private void edge(Polyline line) {
-    walk(line, square -> owners[square] = EDGE);
   }
 
   /** Takes the squares that a line passes through. */
   void take(Polyline line) {
-    walk(line, square -> taken[square] = WRITTEN);
+    for (int square : squares(line)) {
+      taken[square] = WRITTEN;
+    }
   }
 
-  private interface Visit {
-    void square(int index);
-  }
-
-  private void walk(Polyline line, Visit visit) {
+  /** The squares that a line passes through, in order, each as often as steps end in it. */
+  private int[] squares(Polyline line) {
+    int[] squares = new int[32];
+    int count = 0;
     for (Polyline part : Clip.line(line, frame)) {
       for (int i = 0; i < part.pieces(); i++) {
         int j = part.after(i);
@@ -108,11 +127,15 @@ final class Ground {
         for (int s = 0; s <= steps; s++) {
           int square = square(part.x(i) + dx * s / steps, part.y(i) + dy * s / steps);
           if (square >= 0) {
-            visit.square(square);
+            if (count == squares.length) {
+              squares = Arrays.copyOf(squares, 2 * count);
+            }
+            squares[count++] = square;
           }
         }
       }
     }
+    return Arrays.copyOf(squares, count);
   }
 
   private int square(double x, double y) {
@@ -172,14 +195,12 @@ final class Ground {
 
   /** The share of the squares along a line whose owner is not accepted. */
   double strange(Polyline line, IntPredicate accepted) {
-    int[] counts = new int[2];
-    walk(
-        line,
-        square -> {
-          counts[0]++;
-          counts[1] += accepted.test(owners[square]) ? 0 : 1;
-        });
-    return counts[0] == 0 ? 1 : (double) counts[1] / counts[0];
+    int[] squares = squares(line);
+    int strange = 0;
+    for (int square : squares) {
+      strange += accepted.test(owners[square]) ? 0 : 1;
+    }
+    return squares.length == 0 ? 1 : (double) strange / squares.length;
   }
 
   /**
@@ -187,21 +208,17 @@ final class Ground {
    * leaves the frame.
    */
   double blocked(Polyline line, IntPredicate accepted) {
-    int[] counts = new int[2];
     for (int i = 0; i < line.size(); i++) {
       if (!frame.contains(line.x(i), line.y(i))) {
         return 1;
       }
     }
-    walk(
-        line,
-        square -> {
-          counts[0]++;
-          if (taken[square] != 0 || !accepted.test(owners[square])) {
-            counts[1]++;
-          }
-        });
-    return counts[0] == 0 ? 1 : (double) counts[1] / counts[0];
+    int[] squares = squares(line);
+    int blocked = 0;
+    for (int square : squares) {
+      blocked += taken[square] != 0 || !accepted.test(owners[square]) ? 1 : 0;
+    }
+    return squares.length == 0 ? 1 : (double) blocked / squares.length;
   }
 
   /**
@@ -287,19 +304,18 @@ final class Ground {
    * and not much but accepted owners.
    */
   private boolean clear(Box box, double x, double y, IntPredicate accepted) {
-    int[] last = {-1};
-    int[] strange = new int[1];
-    boolean[] crossed = new boolean[1];
-    walk(
-        Polyline.of(box.midX(), box.midY(), x, y),
-        square -> {
-          crossed[0] |= taken[square] == WRITTEN && far(square, x, y);
-          if (square != last[0] && !accepted.test(owners[square])) {
-            strange[0]++;
-          }
-          last[0] = square;
-        });
-    return !crossed[0] && strange[0] <= MOST_STRANGE;
+    int last = -1;
+    int strange = 0;
+    for (int square : squares(Polyline.of(box.midX(), box.midY(), x, y))) {
+      if (taken[square] == WRITTEN && far(square, x, y)) {
+        return false;
+      }
+      if (square != last && !accepted.test(owners[square])) {
+        strange++;
+      }
+      last = square;
+    }
+    return strange <= MOST_STRANGE;
   }
 
   /** Whether a square is not the one at a point, nor next to it. */

@@ -7,6 +7,7 @@ import coldseam.solver.result.Result;
 import java.awt.Color;
 import java.awt.geom.Line2D;
 import java.awt.geom.Path2D;
+import java.util.ArrayList;
 import java.util.Collections;
 import java.util.List;
 import java.util.Optional;
@@ -59,9 +60,12 @@ final class HeatFlowView extends View {
   }
 
   private double much() {
-    boolean finite =
-        result().spaces().stream().allMatch(space -> Double.isFinite(space.heatFlowWPerM()));
-    return finite ? density.ofDissipation(MUCH) : density.ofArea(1 - LITTLE);
+    for (Result.SpaceResult space : result().spaces()) {
+      if (!Double.isFinite(space.heatFlowWPerM())) {
+        return density.ofArea(1 - LITTLE);
+      }
+    }
+    return density.ofDissipation(MUCH);
   }
 
   @Override
@@ -72,7 +76,9 @@ final class HeatFlowView extends View {
   @Override
   String told() {
     StringBuilder out = new StringBuilder("Density and direction of the heat flow in the detail.");
-    tubes.ifPresent(t -> out.append(" Each tube carries ").append(t.each()).append('.'));
+    if (tubes.isPresent()) {
+      out.append(" Each tube carries ").append(tubes.get().each()).append('.');
+    }
     for (Result.SpaceResult space : result().spaces()) {
       out.append(' ').append(space.name()).append(": ").append(passing(space)).append('.');
     }
@@ -151,15 +157,27 @@ final class HeatFlowView extends View {
     SectionLines lines = new SectionLines(section(), panel);
     if (!blackens(panel, zoom)) {
       lines.joints(canvas, Palette.INK, Pen.HAIR);
-      tubes.ifPresentOrElse(t -> t.draw(canvas, panel, density), () -> arrows(canvas, panel));
+      if (tubes.isPresent()) {
+        tubes.get().draw(canvas, panel, density);
+      } else {
+        arrows(canvas, panel);
+      }
     }
     lines.outline(canvas);
     Ground ground = SectionLines.ground(section(), panel);
     frame(canvas, panel, ground, zoom);
     SpaceLabels labels = new SpaceLabels(canvas, section(), panel, ground);
-    labels.write(i -> List.of(nameOf(i) + ", " + climate(i), passing(result().spaces().get(i))));
+    labels.write(climatesAndFlows());
     new StretchMarks(section(), panel)
-        .draw(canvas, ground, labels, SectionLines.open(section()), this::stretch);
+        .draw(canvas, ground, labels, SectionLines.open(section()), stretchFlows());
+  }
+
+  private List<List<String>> climatesAndFlows() {
+    List<List<String>> said = new ArrayList<>();
+    for (int i = 0; i < result().spaces().size(); i++) {
+      said.add(List.of(nameOf(i) + ", " + climate(i), passing(result().spaces().get(i))));
+    }
+    return said;
   }
 
   private Color colour(int band) {
@@ -167,9 +185,20 @@ final class HeatFlowView extends View {
     return Palette.flow(tubes.isPresent() ? QUIET * part : part);
   }
 
-  private String stretch(int index) {
-    Result.StretchResult stretch = result().stretches().get(index);
-    return stretch.name() + " " + signed(stretchFlow(stretch), worstHalfWidth());
+  private List<Color> colours() {
+    List<Color> colours = new ArrayList<>();
+    for (int band = 0; band <= levels.size(); band++) {
+      colours.add(colour(band));
+    }
+    return colours;
+  }
+
+  private List<String> stretchFlows() {
+    List<String> said = new ArrayList<>();
+    for (Result.StretchResult stretch : result().stretches()) {
+      said.add(stretch.name() + " " + signed(stretchFlow(stretch), worstHalfWidth()));
+    }
+    return said;
   }
 
   /** Arrows on a staggered grid, longer where more flows, all one path. */
@@ -244,8 +273,12 @@ final class HeatFlowView extends View {
   Key key() {
     Key key = new Key();
     key.heading("Density in " + figures().densityUnit());
-    key.tall(this::scale, (levels.size() + 1) * Bands.STEP + 4);
-    tubes.ifPresentOrElse(t -> explain(key, t), () -> explainArrows(key));
+    key.tall(new Scale(), (levels.size() + 1) * Bands.STEP + 4);
+    if (tubes.isPresent()) {
+      explain(key, tubes.get());
+    } else {
+      key.sample(new Arrow(), "direction of flow; longer where more flows", "");
+    }
     key.heading("Heat flow, + into the detail");
     for (Result.SpaceResult space : result().spaces()) {
       key.row(space.name(), signed(space.heatFlowWPerM(), halfWidth(space.name())));
@@ -264,47 +297,46 @@ final class HeatFlowView extends View {
 
   private static void explain(Key key, FlowTubes tubes) {
     key.heading("Heat flows between the lines");
-    key.sample(HeatFlowView::drawTube, "each tube between two lines carries " + tubes.each(), "");
-    tubes.reason().ifPresent(key::note);
+    key.sample(new Tube(), "each tube between two lines carries " + tubes.each(), "");
+    if (tubes.reason().isPresent()) {
+      key.note(tubes.reason().get());
+    }
     key.note("No heat crosses a line; a tube at the rim may carry less.");
     if (tubes.seamed()) {
       key.sample(
-          (canvas, box) ->
-              canvas.stroke(
-                  new Line2D.Double(box.x0(), box.midY(), box.x1(), box.midY()),
-                  Palette.INK,
-                  FlowTubes.SEAM),
-          "heat crosses here; only the lines do not go on",
-          "");
+          new Key.Line(FlowTubes.SEAM), "heat crosses here; only the lines do not go on", "");
     }
   }
 
-  private static void drawTube(Canvas canvas, Box box) {
-    Path2D heads = new Path2D.Double();
-    for (double y : new double[] {box.midY() - 4, box.midY() + 4}) {
-      canvas.stroke(new Line2D.Double(box.x0(), y, box.x1(), y), Palette.INK, FlowTubes.LINE);
-      FlowTubes.head(heads, box.midX(), y, 1, 0);
+  private static final class Tube implements Key.Sample {
+    @Override
+    public void draw(Canvas canvas, Box box) {
+      Path2D heads = new Path2D.Double();
+      for (double y : new double[] {box.midY() - 4, box.midY() + 4}) {
+        canvas.stroke(new Line2D.Double(box.x0(), y, box.x1(), y), Palette.INK, FlowTubes.LINE);
+        FlowTubes.head(heads, box.midX(), y, 1, 0);
+      }
+      canvas.fill(heads, Palette.INK);
     }
-    canvas.fill(heads, Palette.INK);
   }
 
-  private static void explainArrows(Key key) {
-    key.sample(
-        (canvas, box) -> {
-          Path2D path = new Path2D.Double();
-          outline(path, box.midX(), box.midY(), 1, 0, LONGEST);
-          canvas.fill(path, Palette.INK);
-        },
-        "direction of flow; longer where more flows",
-        "");
+  private static final class Arrow implements Key.Sample {
+    @Override
+    public void draw(Canvas canvas, Box box) {
+      Path2D path = new Path2D.Double();
+      outline(path, box.midX(), box.midY(), 1, 0, LONGEST);
+      canvas.fill(path, Palette.INK);
+    }
   }
 
-  private void scale(Canvas canvas, Box box) {
-    Bands.scale(
-        canvas,
-        box,
-        levels.stream().map(Figures::round).toList(),
-        Collections.nCopies(levels.size(), false),
-        this::colour);
+  private final class Scale implements Key.Sample {
+    @Override
+    public void draw(Canvas canvas, Box box) {
+      List<String> texts = new ArrayList<>();
+      for (double level : levels) {
+        texts.add(Figures.round(level));
+      }
+      Bands.scale(canvas, box, texts, Collections.nCopies(levels.size(), false), colours());
+    }
   }
 }

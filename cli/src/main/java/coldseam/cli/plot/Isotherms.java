@@ -7,6 +7,7 @@ import java.awt.Color;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Optional;
 
 /**
  * Bands and isotherms of a temperature field at round steps of the written scale, every fifth
@@ -99,19 +100,34 @@ final class Isotherms {
     return Palette.temperature((band + 0.5) / bands());
   }
 
+  private List<Color> colours() {
+    List<Color> colours = new ArrayList<>();
+    for (int band = 0; band < bands(); band++) {
+      colours.add(colour(band));
+    }
+    return colours;
+  }
+
   private boolean heavy(double level) {
     return Math.round(level / step) % EVERY == 0;
   }
 
-  /** Draws the scale for the key. */
-  void scale(Canvas canvas, Box box) {
-    List<String> texts = new ArrayList<>();
-    List<Boolean> heavy = new ArrayList<>();
-    for (double level : levels) {
-      texts.add(Digits.shortest(level, 6));
-      heavy.add(heavy(level));
+  /** The scale for the key. */
+  Key.Sample scale() {
+    return new Scale();
+  }
+
+  private final class Scale implements Key.Sample {
+    @Override
+    public void draw(Canvas canvas, Box box) {
+      List<String> texts = new ArrayList<>();
+      List<Boolean> heavy = new ArrayList<>();
+      for (double level : levels) {
+        texts.add(Digits.shortest(level, 6));
+        heavy.add(heavy(level));
+      }
+      Bands.scale(canvas, box, texts, heavy, colours());
     }
-    Bands.scale(canvas, box, texts, heavy, this::colour);
   }
 
   /** The bands and lines in one frame. */
@@ -167,7 +183,7 @@ final class Isotherms {
      */
     void label(Canvas canvas, Ground ground, DrawnSection section, boolean leaders) {
       canvas.layer(panel.name() + "-isotherm-labels");
-      LineLabels lone = new LineLabels(canvas, ground, (x, y) -> Double.POSITIVE_INFINITY);
+      LineLabels lone = new LineLabels(canvas, ground, LineLabels.ALONE);
       for (int i = 0; i < criticalLines.size(); i++) {
         Critical c = critical.get(i);
         String text = c.name() + " " + figures.temperature(c.temperatureC(), 1);
@@ -176,7 +192,7 @@ final class Isotherms {
           beside(canvas, ground, section, drawn, text);
         }
       }
-      LineLabels labels = new LineLabels(canvas, ground, this::spacing);
+      LineLabels labels = new LineLabels(canvas, ground, new Spacing(panel));
       for (boolean first : new boolean[] {true, false}) {
         for (int i = 0; i < lines.size(); i++) {
           if (heavy(levels.get(i)) == first) {
@@ -204,16 +220,26 @@ final class Isotherms {
       }
       double[] at = longest.at(longest.length() / 2);
       Box size = Plates.size(List.of(text), Lettering.SMALL_STRONG);
-      PointMarks.place(ground, size, at[0], at[1], 14, 120, SectionLines.open(section))
-          .ifPresent(
-              box -> {
-                Plates.leader(canvas, box, at[0], at[1]);
-                Plates.centred(canvas, List.of(text), box, Lettering.SMALL_STRONG, Lettering.SMALL);
-              });
+      Optional<Box> place =
+          PointMarks.place(ground, size, at[0], at[1], 14, 120, SectionLines.open(section));
+      if (place.isPresent()) {
+        Box box = place.get();
+        Plates.leader(canvas, box, at[0], at[1]);
+        Plates.centred(canvas, List.of(text), box, Lettering.SMALL_STRONG, Lettering.SMALL);
+      }
+    }
+  }
+
+  /** Distance between two isotherms at a place on the sheet, points. */
+  private final class Spacing implements LineLabels.Spacing {
+    private final Panel panel;
+
+    private Spacing(Panel panel) {
+      this.panel = panel;
     }
 
-    /** Distance between two isotherms at a place on the sheet, points. */
-    private double spacing(double x, double y) {
+    @Override
+    public double at(double x, double y) {
       Mesh mesh = field.mesh();
       double lx = panel.localX(x);
       double ly = panel.localY(y);

@@ -22,6 +22,15 @@ final class Key {
     void draw(Canvas canvas, Box box);
   }
 
+  /** A line across the box. */
+  record Line(Pen pen) implements Sample {
+    @Override
+    public void draw(Canvas canvas, Box box) {
+      Polyline across = Polyline.of(box.x0(), box.midY(), box.x1(), box.midY());
+      canvas.stroke(Polyline.path(List.of(across)), Palette.INK, pen);
+    }
+  }
+
   /**
    * One row.
    *
@@ -160,8 +169,15 @@ final class Key {
 
   /** Heights of all rows in a column of a width. */
   private double[] heights(double width) {
-    return heights.computeIfAbsent(
-        width, w -> rows.stream().mapToDouble(row -> height(row, w)).toArray());
+    double[] known = heights.get(width);
+    if (known == null) {
+      known = new double[rows.size()];
+      for (int i = 0; i < known.length; i++) {
+        known[i] = height(rows.get(i), width);
+      }
+      heights.put(width, known);
+    }
+    return known;
   }
 
   private static double height(Row row, double width) {

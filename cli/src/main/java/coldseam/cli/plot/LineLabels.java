@@ -34,6 +34,15 @@ final class LineLabels {
     double at(double x, double y);
   }
 
+  /** Of a contour without neighbours. */
+  static final Spacing ALONE =
+      new Spacing() {
+        @Override
+        public double at(double x, double y) {
+          return Double.POSITIVE_INFINITY;
+        }
+      };
+
   /**
    * Where a label goes.
    *
@@ -126,7 +135,7 @@ final class LineLabels {
   private boolean free(double[] at, double width, double turn, Lettering lettering) {
     double half = lettering.size() / 2;
     for (double lift : new double[] {-half, 0, half}) {
-      if (ground.blocked(row(at[0], at[1], width, turn, lift), owner -> true) > 0) {
+      if (ground.blocked(row(at[0], at[1], width, turn, lift), Ground.ANYWHERE) > 0) {
         return false;
       }
     }

@@ -64,7 +64,10 @@ final class MaterialLabels {
   private List<Polyline> seen(int face) {
     List<Polyline> rings = new ArrayList<>();
     for (Polyline ring : section.faces().get(face).rings()) {
-      Clip.ring(ring.on(panel), panel.frame()).ifPresent(rings::add);
+      Optional<Polyline> seen = Clip.ring(ring.on(panel), panel.frame());
+      if (seen.isPresent()) {
+        rings.add(seen.get());
+      }
     }
     return rings;
   }
@@ -150,7 +153,7 @@ final class MaterialLabels {
     }
     double size = Plates.RING + 2;
     IntPredicate open = SectionLines.open(section);
-    for (IntPredicate accepted : List.of(open, (IntPredicate) owner -> true)) {
+    for (IntPredicate accepted : List.of(open, Ground.ANYWHERE)) {
       for (double[] target : targets) {
         Optional<Box> place = ground.near(target[0], target[1], size, size, 10, 90, accepted);
         if (place.isPresent()) {

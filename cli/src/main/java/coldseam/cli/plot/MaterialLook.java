@@ -81,7 +81,8 @@ record MaterialLook(Hatch hatch, Color tone, Color line, double turn, double pit
     List<MaterialLook> looks = new ArrayList<>(fills.size());
     for (Fill fill : fills) {
       Kind kind = kind(fill);
-      int n = seen.merge(kind, 1, Integer::sum) - 1;
+      int n = seen.getOrDefault(kind, 0);
+      seen.put(kind, n + 1);
       looks.add(kind.look(n));
     }
     return looks;

@@ -270,18 +270,18 @@ final class Measures {
     double height = lettering.size() * 1.1;
     Optional<Box> place = ground.near(x, y, width, height, 5, 90, open);
     if (place.isEmpty()) {
-      place = ground.near(x, y, width, height, 5, 140, any -> true);
+      place = ground.near(x, y, width, height, 5, 140, Ground.ANYWHERE);
     }
-    place.ifPresent(
-        box -> {
-          ground.take(box);
-          Plates.leader(canvas, box, x, y);
-          canvas.text(
-              text,
-              box.midX(),
-              box.midY() + lettering.size() * TextWidths.CAPITAL / 2,
-              lettering,
-              Anchor.MIDDLE);
-        });
+    if (place.isPresent()) {
+      Box box = place.get();
+      ground.take(box);
+      Plates.leader(canvas, box, x, y);
+      canvas.text(
+          text,
+          box.midX(),
+          box.midY() + lettering.size() * TextWidths.CAPITAL / 2,
+          lettering,
+          Anchor.MIDDLE);
+    }
   }
 }

@@ -101,17 +101,24 @@ final class Page {
         narrow
             ? new Box(panel.frame().x1() + GAP, top, zoomRight, bottom)
             : new Box(MARGIN, bottom + GAP, zoomRight, bottom + GAP + ZOOM_HEIGHT);
-    zoom =
-        content
-            .zoom()
-            .map(part -> filling(part, zoomFrame))
-            .filter(larger -> larger.pointsPerM() >= LEAST_ZOOM * panel.pointsPerM());
+    zoom = zoom(content.zoom(), zoomFrame);
     if (zoom.isPresent()) {
       bottom = zoomFrame.y1();
     }
     double keyTop = wide ? panel.frame().y1() + GAP : top;
     bottom = layKey(keyTop, bottom, !wide || zoom.isPresent());
     height = Math.ceil(bottom + 16 + footLines().size() * FOOT.lineHeight() + 14);
+  }
+
+  /** The frame of the part shown larger, if it is worth it. */
+  private Optional<Panel> zoom(Optional<Box> part, Box frame) {
+    if (part.isEmpty()) {
+      return Optional.empty();
+    }
+    Panel larger = filling(part.get(), frame);
+    return larger.pointsPerM() >= LEAST_ZOOM * panel.pointsPerM()
+        ? Optional.of(larger)
+        : Optional.empty();
   }
 
   /**

@@ -7,6 +7,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.concurrent.Callable;
 import java.util.concurrent.CancellationException;
 import java.util.concurrent.ExecutionException;
 import java.util.concurrent.FutureTask;
@@ -101,20 +102,41 @@ public final class Plots {
    */
   public Map<Kind, String> svgs(List<Kind> kinds) {
     Map<Kind, FutureTask<String>> tasks = new LinkedHashMap<>();
-    kinds.forEach(kind -> tasks.put(kind, new FutureTask<>(() -> svg(kind))));
+    for (Kind kind : kinds) {
+      tasks.put(kind, new FutureTask<>(new Drawing(this, kind)));
+    }
+    List<FutureTask<String>> inOrder = new ArrayList<>(tasks.values());
     int others = Math.min(kinds.size(), Runtime.getRuntime().availableProcessors()) - 1;
     for (int i = 0; i < others; i++) {
       // A task runs once, whoever comes first.
-      Thread thread = new Thread(() -> tasks.values().forEach(FutureTask::run), "plots");
+      Thread thread = new Thread(new Work(inOrder), "plots");
       thread.setDaemon(true);
       thread.start();
     }
-    List<FutureTask<String>> mine = new ArrayList<>(tasks.values());
-    Collections.reverse(mine);
-    mine.forEach(FutureTask::run);
+    List<FutureTask<String>> fromTheEnd = new ArrayList<>(inOrder);
+    Collections.reverse(fromTheEnd);
+    new Work(fromTheEnd).run();
     Map<Kind, String> drawn = new LinkedHashMap<>();
-    tasks.forEach((kind, task) -> drawn.put(kind, result(kind, task)));
+    for (Map.Entry<Kind, FutureTask<String>> task : tasks.entrySet()) {
+      drawn.put(task.getKey(), result(task.getKey(), task.getValue()));
+    }
     return drawn;
+  }
+
+  private record Drawing(Plots plots, Kind kind) implements Callable<String> {
+    @Override
+    public String call() {
+      return plots.svg(kind);
+    }
+  }
+
+  private record Work(List<FutureTask<String>> tasks) implements Runnable {
+    @Override
+    public void run() {
+      for (FutureTask<String> task : tasks) {
+        task.run();
+      }
+    }
   }
 
   private static String result(Kind kind, FutureTask<String> task) {

@@ -6,6 +6,7 @@ import java.awt.image.BufferedImage;
 import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.io.UncheckedIOException;
+import java.util.concurrent.Callable;
 import java.util.concurrent.ExecutionException;
 import java.util.concurrent.FutureTask;
 import javax.imageio.ImageIO;
@@ -46,8 +47,7 @@ final class PngCanvas extends Canvas {
    * one Java to the next, errors among them; a task turns all of them into one.
    */
   private static void probe(Graphics2D graphics) throws NoFontException {
-    FutureTask<Integer> width =
-        new FutureTask<>(() -> graphics.getFontMetrics(Lettering.LABEL.font()).stringWidth("m"));
+    FutureTask<Integer> width = new FutureTask<>(new LetterWidth(graphics));
     width.run();
     try {
       if (width.get() <= 0) {
@@ -58,6 +58,13 @@ final class PngCanvas extends Canvas {
     } catch (InterruptedException e) {
       Thread.currentThread().interrupt();
       throw new NoFontException(e);
+    }
+  }
+
+  private record LetterWidth(Graphics2D graphics) implements Callable<Integer> {
+    @Override
+    public Integer call() {
+      return graphics.getFontMetrics(Lettering.LABEL.font()).stringWidth("m");
     }
   }
 

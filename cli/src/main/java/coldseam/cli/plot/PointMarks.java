@@ -55,16 +55,18 @@ final class PointMarks {
         continue;
       }
       Box size = Plates.size(List.of(point.text()), Lettering.SMALL);
-      Optional<Box> place = place(ground, size, point.x(), point.y(), 5, 46, owner -> true);
-      place.ifPresent(
-          box -> {
-            if (!box.grown(12).contains(point.x(), point.y())) {
-              Plates.leader(canvas, box, point.x(), point.y());
-            }
-            Plates.centred(canvas, List.of(point.text()), box, Lettering.SMALL, Lettering.SMALL);
-          });
+      Optional<Box> place = place(ground, size, point.x(), point.y(), 5, 46, Ground.ANYWHERE);
+      if (place.isPresent()) {
+        Box box = place.get();
+        if (!box.grown(12).contains(point.x(), point.y())) {
+          Plates.leader(canvas, box, point.x(), point.y());
+        }
+        Plates.centred(canvas, List.of(point.text()), box, Lettering.SMALL, Lettering.SMALL);
+      }
     }
-    named.forEach(point -> cross(canvas, point.x(), point.y()));
+    for (Named point : named) {
+      cross(canvas, point.x(), point.y());
+    }
   }
 
   /** A named point. */
@@ -103,8 +105,7 @@ final class PointMarks {
       double least,
       double most,
       IntPredicate preferred) {
-    for (IntPredicate accepted :
-        List.of(preferred, (IntPredicate) owner -> owner != Ground.EDGE, owner -> true)) {
+    for (IntPredicate accepted : List.of(preferred, Ground.OFF_LINES, Ground.ANYWHERE)) {
       Optional<Box> place = ground.near(x, y, size.width(), size.height(), least, most, accepted);
       if (place.isPresent()) {
         ground.take(place.get());

@@ -170,7 +170,9 @@ final class Polyline {
   /** All as one path, filled by the even-odd rule. */
   static Path2D path(List<Polyline> lines) {
     Path2D path = new Path2D.Double(Path2D.WIND_EVEN_ODD);
-    lines.forEach(line -> line.appendTo(path));
+    for (Polyline line : lines) {
+      line.appendTo(path);
+    }
     return path;
   }
 }

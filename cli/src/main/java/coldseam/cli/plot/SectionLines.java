@@ -5,6 +5,7 @@ import java.awt.Color;
 import java.awt.geom.Path2D;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import java.util.function.IntPredicate;
 
 /** The lines of the section that every plot has: outline, joints, thin sheets, cut-off planes. */
@@ -83,7 +84,7 @@ final class SectionLines {
             line.y(0) - BEYOND * uy,
             line.x(1) + BEYOND * ux,
             line.y(1) + BEYOND * uy);
-    Clip.line(longer, panel.frame()).forEach(part -> part.appendTo(planes));
+    append(longer, planes);
     if (cutOff.symmetry()) {
       for (int end = 0; end < 2; end++) {
         for (double back : new double[] {1.5, 4.5}) {
@@ -96,9 +97,16 @@ final class SectionLines {
                   y + SYMMETRY_TICK * ux,
                   x + SYMMETRY_TICK * uy,
                   y - SYMMETRY_TICK * ux);
-          Clip.line(tick, panel.frame()).forEach(part -> part.appendTo(ticks));
+          append(tick, ticks);
         }
       }
+    }
+  }
+
+  /** Appends what is seen of a line. */
+  private void append(Polyline line, Path2D path) {
+    for (Polyline part : Clip.line(line, panel.frame())) {
+      part.appendTo(path);
     }
   }
 
@@ -124,7 +132,10 @@ final class SectionLines {
         if (section.solid(section.faces().get(face).label()) == solid) {
           List<Polyline> rings = new ArrayList<>();
           for (Polyline ring : section.faces().get(face).rings()) {
-            Clip.ring(ring.on(panel), panel.frame().grown(8)).ifPresent(rings::add);
+            Optional<Polyline> seen = Clip.ring(ring.on(panel), panel.frame().grown(8));
+            if (seen.isPresent()) {
+              rings.add(seen.get());
+            }
           }
           ground.paint(rings, face, solid);
         }
@@ -135,7 +146,14 @@ final class SectionLines {
 
   /** Accepts the squares of a {@link #ground} where nothing or a space is laid. */
   static IntPredicate open(DrawnSection section) {
-    return owner ->
-        owner == Ground.OPEN || owner >= 0 && !section.solid(section.faces().get(owner).label());
+    return new Open(section);
+  }
+
+  private record Open(DrawnSection section) implements IntPredicate {
+    @Override
+    public boolean test(int owner) {
+      return owner == Ground.OPEN
+          || owner >= 0 && !section.solid(section.faces().get(owner).label());
+    }
   }
 }

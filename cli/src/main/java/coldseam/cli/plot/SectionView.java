@@ -3,6 +3,7 @@ package coldseam.cli.plot;
 import coldseam.cli.plot.Canvas.Anchor;
 import coldseam.cli.plot.Plots.Caption;
 import coldseam.cli.text.Digits;
+import coldseam.mesh.plane.Point;
 import coldseam.solver.detail.Conditions;
 import coldseam.solver.detail.DimensionSystem;
 import coldseam.solver.detail.Exposure;
@@ -10,13 +11,12 @@ import coldseam.solver.detail.Fill;
 import coldseam.solver.detail.Hollow;
 import coldseam.solver.detail.Material;
 import coldseam.solver.detail.Space;
+import coldseam.solver.detail.Stretch;
 import coldseam.solver.result.Result;
 import java.awt.geom.Path2D;
 import java.awt.geom.Rectangle2D;
 import java.util.ArrayList;
-import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 import java.util.TreeSet;
@@ -76,22 +76,29 @@ final class SectionView extends View {
       measures(canvas, panel, ground, open);
     }
     SpaceLabels spaces = new SpaceLabels(canvas, section(), panel, ground);
-    spaces.write(i -> List.of(nameOf(i), climate(i)));
-    points(canvas, panel, ground, zoom.map(z -> panel.on(z.window())));
-    materials.names(canvas, ground, zoom.map(z -> panel.on(z.window())));
+    spaces.write(namesAndClimates());
+    Optional<Box> elsewhere = shownElsewhere(panel, zoom);
+    points(canvas, panel, ground, elsewhere);
+    materials.names(canvas, ground, elsewhere);
     marks.values(canvas, ground, spaces, figures());
-    new StretchMarks(section(), panel)
-        .draw(canvas, ground, spaces, open, i -> section().detail().stretches().get(i).name());
+    new StretchMarks(section(), panel).draw(canvas, ground, spaces, open, stretchNames());
+  }
+
+  private List<String> stretchNames() {
+    List<String> names = new ArrayList<>();
+    for (Stretch stretch : section().detail().stretches()) {
+      names.add(stretch.name());
+    }
+    return names;
   }
 
   private void measures(Canvas canvas, Panel panel, Ground ground, IntPredicate open) {
     Measures measures = new Measures(canvas, ground, open);
     canvas.layer("reference-lengths");
-    for (Map.Entry<Reference, String> reference : references().entrySet()) {
-      Reference r = reference.getKey();
+    for (Reference r : references()) {
       Polyline line =
           Polyline.of(panel.x(r.x0()), panel.y(r.y0()), panel.x(r.x1()), panel.y(r.y1()));
-      measures.single(line, 0, 20, reference.getValue(), Lettering.REFERENCE);
+      measures.single(line, 0, 20, r.text(), Lettering.REFERENCE);
     }
     canvas.layer("dimensions");
     Set<String> drawn = new TreeSet<>();
@@ -131,45 +138,63 @@ final class SectionView extends View {
     }
   }
 
-  /** Where a reference length is drawn, m. */
-  private record Reference(double x0, double y0, double x1, double y1) {}
+  /** A reference length: where it is drawn, m, and what is written beside it. */
+  private record Reference(double x0, double y0, double x1, double y1, String text) {
+    boolean samePlace(Reference other) {
+      return x0 == other.x0 && y0 == other.y0 && x1 == other.x1 && y1 == other.y1;
+    }
+  }
 
   /** Reference lengths by place, each with the flanks and dimension systems it serves. */
-  private Map<Reference, String> references() {
-    Map<Reference, String> texts = new LinkedHashMap<>();
+  private List<Reference> references() {
+    List<Reference> references = new ArrayList<>();
     for (Result.FlankResult flank : result().flanks()) {
       for (DimensionSystem system : systems(flank.name())) {
         Result.Length length = flank.lengthM().get(system);
         if (length != null && length.from().isPresent() && length.to().isPresent()) {
-          Reference place =
-              new Reference(
-                  section().localX(length.from().get()),
-                  section().localY(length.from().get()),
-                  section().localX(length.to().get()),
-                  section().localY(length.to().get()));
-          String value = figures().length(length.valueM());
-          String before = texts.get(place);
-          texts.put(
-              place,
-              before == null
-                  ? flank.name() + ", " + words(system) + " " + value
-                  : before.substring(0, before.lastIndexOf(' '))
-                      + " = "
-                      + words(system)
-                      + " "
-                      + value);
+          String measured = words(system) + " " + figures().length(length.valueM());
+          Point from = length.from().get();
+          Point to = length.to().get();
+          merge(references, reference(from, to, flank.name() + ", " + measured), measured);
         }
       }
     }
-    return texts;
+    return references;
+  }
+
+  private Reference reference(Point from, Point to, String text) {
+    return new Reference(
+        section().localX(from),
+        section().localY(from),
+        section().localX(to),
+        section().localY(to),
+        text);
+  }
+
+  /** Adds a reference length, or what it measures to the text of one that lies there already. */
+  private static void merge(List<Reference> references, Reference added, String measured) {
+    for (int i = 0; i < references.size(); i++) {
+      Reference known = references.get(i);
+      if (known.samePlace(added)) {
+        String before = known.text().substring(0, known.text().lastIndexOf(' '));
+        references.set(
+            i,
+            new Reference(
+                known.x0(), known.y0(), known.x1(), known.y1(), before + " = " + measured));
+        return;
+      }
+    }
+    references.add(added);
   }
 
   /** The dimension systems of every ψ that takes a flank off. */
   private Set<DimensionSystem> systems(String flank) {
     Set<DimensionSystem> systems = new TreeSet<>();
     for (Result.LinearTransmittance psi : result().psi()) {
-      if (psi.subtracted().stream().anyMatch(s -> s.name().equals(flank))) {
-        psi.dimensions().ifPresent(systems::add);
+      for (Result.Subtracted term : psi.subtracted()) {
+        if (term.name().equals(flank) && psi.dimensions().isPresent()) {
+          systems.add(psi.dimensions().get());
+        }
       }
     }
     return systems;
@@ -203,7 +228,7 @@ final class SectionView extends View {
         String value =
             fill instanceof Material material ? conductivity(material) : "no heat crosses";
         int number = MaterialLabels.number(section(), label);
-        key.sample((canvas, box) -> swatch(canvas, box, look), number + "  " + fill.name(), value);
+        key.sample(new Swatch(look), number + "  " + fill.name(), value);
       }
     }
     key.heading("Spaces");
@@ -214,6 +239,34 @@ final class SectionView extends View {
     flanks(key);
     symbols(key);
     return key;
+  }
+
+  private record Swatch(MaterialLook look) implements Key.Sample {
+    @Override
+    public void draw(Canvas canvas, Box box) {
+      swatch(canvas, box, look);
+    }
+  }
+
+  private record Film(boolean inside) implements Key.Sample {
+    @Override
+    public void draw(Canvas canvas, Box box) {
+      SurfaceMarks.sample(canvas, box, inside);
+    }
+  }
+
+  private static final class ReferenceLength implements Key.Sample {
+    @Override
+    public void draw(Canvas canvas, Box box) {
+      canvas.text("123", box.midX(), box.midY() + 4, Lettering.REFERENCE, Anchor.MIDDLE);
+    }
+  }
+
+  private static final class NamedPoint implements Key.Sample {
+    @Override
+    public void draw(Canvas canvas, Box box) {
+      PointMarks.cross(canvas, box.midX(), box.midY());
+    }
   }
 
   static void swatch(Canvas canvas, Box box, MaterialLook look) {
@@ -326,10 +379,10 @@ final class SectionView extends View {
       fixed |= surface.kind() == Conditions.Kind.FIXED;
     }
     if (inside) {
-      key.sample((c, box) -> SurfaceMarks.sample(c, box, true), "film inside", "");
+      key.sample(new Film(true), "film inside", "");
     }
     if (outside) {
-      key.sample((c, box) -> SurfaceMarks.sample(c, box, false), "film outside", "");
+      key.sample(new Film(false), "film outside", "");
     }
     if (inside || outside) {
       key.note("Rs in " + figures().filmUnit() + ": of the heat-loss set | of the surface set");
@@ -337,35 +390,33 @@ final class SectionView extends View {
     if (fixed) {
       key.note("Double line: surface at a fixed temperature");
     }
-    boolean symmetric = section().cutOffs().stream().anyMatch(DrawnSection.CutOff::symmetry);
-    planes(key, symmetric);
+    planes(key);
     if (!references().isEmpty()) {
       key.sample(
-          (c, box) -> c.text("123", box.midX(), box.midY() + 4, Lettering.REFERENCE, Anchor.MIDDLE),
-          "reference length of ψ, with flank and dimension system",
-          "");
+          new ReferenceLength(), "reference length of ψ, with flank and dimension system", "");
     }
     if (!result().points().isEmpty()) {
-      key.sample((c, box) -> PointMarks.cross(c, box.midX(), box.midY()), "named point", "");
+      key.sample(new NamedPoint(), "named point", "");
     }
-    if (section().fills().stream().anyMatch(f -> f instanceof Hollow)) {
+    boolean hollow = false;
+    for (Fill fill : section().fills()) {
+      hollow |= fill instanceof Hollow;
+    }
+    if (hollow) {
       key.note("Crossed out: hollow, no heat crosses its rim");
     }
   }
 
-  private void planes(Key key, boolean symmetric) {
+  private void planes(Key key) {
+    boolean symmetric = false;
+    for (DrawnSection.CutOff cutOff : section().cutOffs()) {
+      symmetric |= cutOff.symmetry();
+    }
     if (!section().cutOffs().isEmpty()) {
       key.sample(
-          (c, box) -> line(c, box, Pen.CUT_OFF),
+          new Key.Line(Pen.CUT_OFF),
           "cut-off plane, no heat crosses" + (symmetric ? "; double ticks: symmetry" : ""),
           "");
     }
-  }
-
-  static void line(Canvas canvas, Box box, Pen pen) {
-    canvas.stroke(
-        Polyline.path(List.of(Polyline.of(box.x0(), box.midY(), box.x1(), box.midY()))),
-        Palette.INK,
-        pen);
   }
 }

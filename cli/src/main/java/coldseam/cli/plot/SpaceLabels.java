@@ -5,7 +5,6 @@ import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
-import java.util.function.IntFunction;
 import java.util.function.IntPredicate;
 
 /** Writes the name of each space, and what else is said of it, where the space is. */
@@ -29,18 +28,20 @@ final class SpaceLabels {
   /**
    * Writes them.
    *
-   * @param said the lines of a space, its name first
+   * @param said the lines of each space, its name first
    */
-  void write(IntFunction<List<String>> said) {
+  void write(List<List<String>> said) {
     canvas.layer(panel.name() + "-spaces");
     for (int space = 0; space < section.detail().spaces().size(); space++) {
       List<Polyline> seen = surfaces(section, panel, space);
       if (seen.isEmpty()) {
         continue;
       }
-      List<String> lines = said.apply(space);
+      List<String> lines = said.get(space);
       List<String> narrow = new ArrayList<>();
-      lines.forEach(line -> narrow.addAll(Wrapping.of(line, NARROW, Lettering.STRONG)));
+      for (String line : lines) {
+        narrow.addAll(Wrapping.of(line, NARROW, Lettering.STRONG));
+      }
       if (!write(space, seen, lines) && !write(space, seen, narrow)) {
         writeWithLeader(seen, narrow);
       }
@@ -50,11 +51,10 @@ final class SpaceLabels {
   private boolean write(int space, List<Polyline> seen, List<String> lines) {
     Box size = Plates.size(lines, Lettering.STRONG);
     Optional<Box> place = place(space, seen, size.width(), size.height());
-    place.ifPresent(
-        box -> {
-          ground.take(box);
-          Plates.unplated(canvas, lines, box, Lettering.STRONG, Lettering.LABEL);
-        });
+    if (place.isPresent()) {
+      ground.take(place.get());
+      Plates.unplated(canvas, lines, place.get(), Lettering.STRONG, Lettering.LABEL);
+    }
     return place.isPresent();
   }
 
@@ -85,8 +85,15 @@ final class SpaceLabels {
         seen.addAll(Clip.line(surface.line().on(panel), panel.frame()));
       }
     }
-    seen.sort(Comparator.comparingDouble(Polyline::length).reversed());
+    seen.sort(new LongestFirst());
     return seen;
+  }
+
+  private static final class LongestFirst implements Comparator<Polyline> {
+    @Override
+    public int compare(Polyline a, Polyline b) {
+      return Double.compare(b.length(), a.length());
+    }
   }
 
   private Optional<Box> place(int space, List<Polyline> seen, double width, double height) {

@@ -3,7 +3,6 @@ package coldseam.cli.plot;
 import java.awt.geom.Path2D;
 import java.util.List;
 import java.util.Optional;
-import java.util.function.IntFunction;
 import java.util.function.IntPredicate;
 
 /** A line beside each named stretch, with its name and what else is said of it. */
@@ -26,17 +25,13 @@ final class StretchMarks {
    * @param ground what is taken
    * @param labels finds room beside a line
    * @param open owners of squares that a name may lie on
-   * @param said what is written beside a stretch
+   * @param said what is written beside each stretch
    */
   void draw(
-      Canvas canvas,
-      Ground ground,
-      SpaceLabels labels,
-      IntPredicate open,
-      IntFunction<String> said) {
+      Canvas canvas, Ground ground, SpaceLabels labels, IntPredicate open, List<String> said) {
     canvas.layer(panel.name() + "-stretches");
     for (int i = 0; i < section.detail().stretches().size(); i++) {
-      String text = said.apply(i);
+      String text = said.get(i);
       boolean named = false;
       Path2D bracket = new Path2D.Double();
       for (Polyline whole : section.stretch(i)) {
@@ -45,12 +40,11 @@ final class StretchMarks {
           if (!named) {
             double width = TextWidths.of(text, Lettering.SMALL) + 2;
             Optional<Box> place = labels.beside(line, width, Lettering.SMALL.size() * 1.15, open);
-            place.ifPresent(
-                box -> {
-                  ground.take(box);
-                  Plates.unplated(canvas, List.of(text), box, Lettering.QUIET, Lettering.QUIET);
-                });
-            named = place.isPresent();
+            if (place.isPresent()) {
+              ground.take(place.get());
+              Plates.unplated(canvas, List.of(text), place.get(), Lettering.QUIET, Lettering.QUIET);
+              named = true;
+            }
           }
         }
       }

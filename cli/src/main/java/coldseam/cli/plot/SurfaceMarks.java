@@ -4,6 +4,8 @@ import coldseam.solver.detail.Conditions;
 import coldseam.solver.detail.Exposure;
 import java.awt.Color;
 import java.awt.geom.Path2D;
+import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Optional;
@@ -125,23 +127,29 @@ final class SurfaceMarks {
   void values(Canvas canvas, Ground ground, SpaceLabels labels, Figures figures) {
     canvas.layer(panel.name() + "-film-values");
     Set<String> said = new HashSet<>();
-    section.surfaces().stream()
-        .sorted((a, b) -> Double.compare(b.line().length(), a.line().length()))
-        .forEach(
-            surface -> {
-              String text = value(surface, figures);
-              if (text.isEmpty()) {
-                return;
-              }
-              for (Polyline line : Clip.line(surface.line().on(panel), panel.frame())) {
-                if (said.contains(surface.space() + text) || line.length() < 12) {
-                  continue;
-                }
-                if (value(canvas, ground, labels, line, text, ink(surface))) {
-                  said.add(surface.space() + text);
-                }
-              }
-            });
+    List<DrawnSection.Surface> surfaces = new ArrayList<>(section.surfaces());
+    surfaces.sort(new LongestFirst());
+    for (DrawnSection.Surface surface : surfaces) {
+      String text = value(surface, figures);
+      if (text.isEmpty()) {
+        continue;
+      }
+      for (Polyline line : Clip.line(surface.line().on(panel), panel.frame())) {
+        if (said.contains(surface.space() + text) || line.length() < 12) {
+          continue;
+        }
+        if (value(canvas, ground, labels, line, text, ink(surface))) {
+          said.add(surface.space() + text);
+        }
+      }
+    }
+  }
+
+  private static final class LongestFirst implements Comparator<DrawnSection.Surface> {
+    @Override
+    public int compare(DrawnSection.Surface a, DrawnSection.Surface b) {
+      return Double.compare(b.line().length(), a.line().length());
+    }
   }
 
   /** Writes a value beside its surface, or with a leader where there is more room. */
@@ -157,13 +165,14 @@ final class SurfaceMarks {
     Optional<Box> place = labels.beside(line, width, height, open);
     if (place.isEmpty()) {
       place = ground.near(x, y, width, height, 8, 150, open);
-      place.ifPresent(box -> Plates.leader(canvas, box, x, y));
+      if (place.isPresent()) {
+        Plates.leader(canvas, place.get(), x, y);
+      }
     }
-    place.ifPresent(
-        box -> {
-          ground.take(box);
-          Plates.unplated(canvas, List.of(text), box, lettering, lettering);
-        });
+    if (place.isPresent()) {
+      ground.take(place.get());
+      Plates.unplated(canvas, List.of(text), place.get(), lettering, lettering);
+    }
     return place.isPresent();
   }
 

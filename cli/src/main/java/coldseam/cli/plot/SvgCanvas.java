@@ -144,7 +144,9 @@ final class SvgCanvas extends Canvas {
     root.setAttribute("aria-labelledby", name + "-title " + name + "-desc");
     root.appendChild(told("title", title));
     root.appendChild(told("desc", description));
-    layers.forEach(root::appendChild);
+    for (Element layer : layers) {
+      root.appendChild(layer);
+    }
     anchor(root);
     return SvgText.of(root);
   }

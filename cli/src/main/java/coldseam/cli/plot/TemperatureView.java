@@ -81,9 +81,9 @@ final class TemperatureView extends View {
     for (Result.SpaceResult space : result().spaces()) {
       out.append(' ').append(space.name()).append(' ');
       out.append(figures().temperature(space.temperatureC(), 1));
-      space
-          .coldest()
-          .ifPresent(p -> out.append(", coldest surface ").append(coldest.temperature(p)));
+      if (space.coldest().isPresent()) {
+        out.append(", coldest surface ").append(coldest.temperature(space.coldest().get()));
+      }
       out.append('.');
     }
     return out.toString();
@@ -110,11 +110,13 @@ final class TemperatureView extends View {
     }
     Ground ground = SectionLines.ground(section(), panel);
     frame(canvas, panel, ground, zoom);
-    Optional<Box> elsewhere = zoom.map(z -> panel.on(z.window()));
+    Optional<Box> elsewhere = shownElsewhere(panel, zoom);
     coldest.draw(canvas, panel, ground, elsewhere);
-    new SpaceLabels(canvas, section(), panel, ground).write(i -> List.of(nameOf(i), climate(i)));
+    new SpaceLabels(canvas, section(), panel, ground).write(namesAndClimates());
     points(canvas, panel, ground, elsewhere);
-    elsewhere.ifPresent(ground::take);
+    if (elsewhere.isPresent()) {
+      ground.take(elsewhere.get());
+    }
     traced.label(canvas, ground, section(), zoom.isEmpty());
   }
 
@@ -145,15 +147,15 @@ final class TemperatureView extends View {
   Key key() {
     Key key = new Key();
     key.heading("Temperature in " + figures().degrees());
-    key.tall(isotherms::scale, isotherms.bands() * Bands.STEP + 4);
+    key.tall(isotherms.scale(), isotherms.bands() * Bands.STEP + 4);
     key.sample(
-        (c, box) -> SectionView.line(c, box, Isotherms.PLAIN),
+        new Key.Line(Isotherms.PLAIN),
         "isotherms every " + Figures.round(isotherms.step()) + " " + figures().kelvins(),
         "");
-    key.sample((c, box) -> SectionView.line(c, box, Isotherms.INDEX), "every fifth of them", "");
+    key.sample(new Key.Line(Isotherms.INDEX), "every fifth of them", "");
     for (Isotherms.Critical c : isotherms.critical()) {
       key.sample(
-          (canvas, box) -> SectionView.line(canvas, box, c.pen()),
+          new Key.Line(c.pen()),
           c.name() + ": " + c.meaning(),
           figures().temperature(c.temperatureC(), 1));
     }

@@ -1,10 +1,11 @@
 package coldseam.cli.plot;
 
 import coldseam.cli.plot.Plots.Caption;
-import coldseam.solver.conduction.Quantity;
 import coldseam.solver.detail.FilmSet;
 import coldseam.solver.detail.Space;
 import coldseam.solver.result.Result;
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Optional;
 
 /** One plot: what stands on the page, and how the section is painted into a frame of it. */
@@ -84,8 +85,8 @@ abstract class View {
   }
 
   private String subtitle() {
-    String variant = caption.variant().map(v -> " · variant “" + v + "”").orElse("");
-    return shown() + variant;
+    Optional<String> variant = caption.variant();
+    return shown() + (variant.isEmpty() ? "" : " · variant “" + variant.get() + "”");
   }
 
   /** The state of certification, for the stamp. */
@@ -95,22 +96,23 @@ abstract class View {
 
   /** Whether bounds of every coupling are proved. */
   final boolean certified() {
-    return !result.couplings().isEmpty()
-        && result.couplings().stream()
-            .map(Result.Coupling::valueWPerMK)
-            .allMatch(Quantity::certified);
+    for (Result.Coupling coupling : result.couplings()) {
+      if (!coupling.valueWPerMK().certified()) {
+        return false;
+      }
+    }
+    return !result.couplings().isEmpty();
   }
 
   final void draw(Canvas canvas, Page page) {
     page.drawGround(canvas);
     paint(canvas, page.panel(), page.zoom());
-    page.zoom()
-        .ifPresent(
-            zoom -> {
-              Zoom.mark(canvas, page.panel(), zoom);
-              paint(canvas, zoom, Optional.empty());
-              Zoom.frame(canvas, page.panel(), zoom);
-            });
+    if (page.zoom().isPresent()) {
+      Panel zoom = page.zoom().get();
+      Zoom.mark(canvas, page.panel(), zoom);
+      paint(canvas, zoom, Optional.empty());
+      Zoom.frame(canvas, page.panel(), zoom);
+    }
     page.drawWords(canvas);
   }
 
@@ -136,8 +138,26 @@ abstract class View {
     return section.detail().spaces().get(space).name();
   }
 
+  /** Name and climate of each space. */
+  final List<List<String>> namesAndClimates() {
+    List<List<String>> said = new ArrayList<>();
+    for (int i = 0; i < section.detail().spaces().size(); i++) {
+      said.add(List.of(nameOf(i), climate(i)));
+    }
+    return said;
+  }
+
+  /** The part of a frame that is shown larger in another. */
+  static Optional<Box> shownElsewhere(Panel panel, Optional<Panel> zoom) {
+    return zoom.isEmpty() ? Optional.empty() : Optional.of(panel.on(zoom.get().window()));
+  }
+
   final double[] temperaturesC() {
-    return result.spaces().stream().mapToDouble(Result.SpaceResult::temperatureC).toArray();
+    double[] temperatures = new double[result.spaces().size()];
+    for (int i = 0; i < temperatures.length; i++) {
+      temperatures[i] = result.spaces().get(i).temperatureC();
+    }
+    return temperatures;
   }
 
   /** Index of the coldest space; −1 if there is none. */
@@ -176,7 +196,9 @@ abstract class View {
   /** Labels, the scale and the direction that every frame has, and what is kept clear of labels. */
   final void frame(Canvas canvas, Panel panel, Ground ground, Optional<Panel> zoom) {
     new SectionLines(section, panel).keepClear(ground);
-    zoom.ifPresent(z -> Zoom.keepClear(ground, panel, z));
+    if (zoom.isPresent()) {
+      Zoom.keepClear(ground, panel, zoom.get());
+    }
     if (panel.name().equals(Panel.ZOOM)) {
       ground.take(Zoom.words(panel));
     } else {

@@ -1,8 +1,8 @@
 package coldseam.cli.plot;
 
+import coldseam.cli.text.Digits;
 import java.awt.geom.Rectangle2D;
 import java.util.List;
-import java.util.Locale;
 import java.util.Optional;
 
 /**
@@ -147,7 +147,7 @@ final class Zoom {
     double times = zoom.pointsPerM() / whole.pointsPerM();
     Plates.write(
         canvas,
-        String.format(Locale.ROOT, "%.1f times larger", times),
+        Digits.fixed(times, 1) + " times larger",
         box.x0() + 24,
         box.y0() + 15,
         Lettering.SMALL_STRONG);
