@@ -113,7 +113,7 @@ final class Discretisation {
       fixedSpace[node] = space;
     } else if (fixedSpace[node] == SHARED) {
       int[] before = sharedNodes.get(node);
-      if (Arrays.stream(before).noneMatch(other -> other == space)) {
+      if (!contains(before, space)) {
         int[] more = Arrays.copyOf(before, before.length + 1);
         more[before.length] = space;
         sharedNodes.put(node, more);
@@ -122,6 +122,15 @@ final class Discretisation {
       sharedNodes.put(node, new int[] {fixedSpace[node], space});
       fixedSpace[node] = SHARED;
     }
+  }
+
+  private static boolean contains(int[] spaces, int space) {
+    for (int other : spaces) {
+      if (other == space) {
+        return true;
+      }
+    }
+    return false;
   }
 
   /** Whether the temperature of a node is fixed. */

@@ -8,7 +8,6 @@ import coldseam.solver.detail.Fault;
 import coldseam.solver.detail.Wanted;
 import coldseam.solver.detail.Wording;
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
@@ -72,10 +71,7 @@ final class FramePlan {
     if (!faults.isEmpty()) {
       return;
     }
-    floating =
-        Arrays.stream(Couplings.floating(detail))
-            .filter(f -> !Couplings.contains(warm, f) && !Couplings.contains(cold, f))
-            .toArray();
+    floating = Couplings.floatingBeside(detail, warm, cold);
     List<PlacedFlank> held = held(flanks);
     if (held.isEmpty()) {
       faults.add(

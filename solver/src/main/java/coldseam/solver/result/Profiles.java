@@ -6,8 +6,10 @@ import coldseam.solver.detail.Wanted;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.HashMap;
+import java.util.HashSet;
 import java.util.List;
 import java.util.Map;
+import java.util.Set;
 
 /** Temperatures at named points, along lines, and along the developed surface of a space. */
 final class Profiles {
@@ -91,21 +93,16 @@ final class Profiles {
 
   private static List<List<SurfaceTrace.Side>> runs(FieldSet set, int space) {
     Map<Integer, SurfaceTrace.Side> starting = new HashMap<>();
-    Map<Integer, SurfaceTrace.Side> ending = new HashMap<>();
+    Set<Integer> ending = new HashSet<>();
     List<SurfaceTrace.Side> sides = new ArrayList<>();
     for (SurfaceTrace.Side side : set.trace().sides()) {
       if (set.solution().conditions().space(side.edge()) == space) {
         sides.add(side);
         starting.put(side.start(), side);
-        ending.put(side.end(), side);
+        ending.add(side.end());
       }
     }
-    Comparator<SurfaceTrace.Side> fromTheLeft =
-        Comparator.<SurfaceTrace.Side>comparingDouble(side -> start(set, side).x())
-            .thenComparingDouble(side -> start(set, side).y());
-    sides.sort(
-        Comparator.<SurfaceTrace.Side, Boolean>comparing(side -> ending.containsKey(side.start()))
-            .thenComparing(fromTheLeft));
+    sides.sort(new BeginningsFirst(set, ending));
     List<List<SurfaceTrace.Side>> runs = new ArrayList<>();
     for (SurfaceTrace.Side first : sides) {
       List<SurfaceTrace.Side> run = new ArrayList<>();
@@ -119,6 +116,18 @@ final class Profiles {
       }
     }
     return runs;
+  }
+
+  /** Sides at which a surface begins come first; then from the left, then upwards. */
+  private record BeginningsFirst(FieldSet set, Set<Integer> continued)
+      implements Comparator<SurfaceTrace.Side> {
+    @Override
+    public int compare(SurfaceTrace.Side a, SurfaceTrace.Side b) {
+      int beginning = Boolean.compare(continued.contains(a.start()), continued.contains(b.start()));
+      return beginning != 0
+          ? beginning
+          : Outline.LEFT_TO_RIGHT.compare(start(set, a), start(set, b));
+    }
   }
 
   private static Point start(FieldSet set, SurfaceTrace.Side side) {
