@@ -113,7 +113,10 @@ public record EquivalentConductivity(
     return factor() * box.depthM() * (convectionWPerM2K + radiationWPerM2K);
   }
 
-  /** λ of the gas alone, d h_a, W/(m·K): what is left when radiation is worked out face by face. */
+  /**
+   * λ of the gas alone, d h_a, W/(m·K): what is left when radiation is worked out face by face
+   * ({@link Radiosity}).
+   */
   public double gasConductivityWPerMK() {
     return factor() * box.depthM() * convectionWPerM2K;
   }
