@@ -137,7 +137,7 @@ class FramesTest {
   void the_account_adds_up_with_its_intervals() {
     Result result = withPanel(CornerRule.LIMITED).solve(1e-3);
     Result.Frame frame = result.frame().orElseThrow();
-    assertThat(frame.widthM()).isCloseTo(0.110, offset(1e-9));
+    assertThat(frame.width().valueM()).isCloseTo(0.110, offset(1e-9));
     assertThat(frame.innerM()).isCloseTo(0.110, offset(1e-9));
     assertThat(frame.outerM()).isCloseTo(0.110, offset(1e-9));
     assertThat(frame.glazedCouplingWPerMK()).isEmpty();
@@ -228,7 +228,7 @@ class FramesTest {
     assertThat(two.couplings().get(0).valueWPerMK().value())
         .isCloseTo(2 * one.couplings().get(0).valueWPerMK().value(), offset(2e-5));
     assertThat(two.frame().orElseThrow().panels()).hasSize(2);
-    assertThat(two.frame().orElseThrow().widthM()).isCloseTo(0.220, offset(1e-9));
+    assertThat(two.frame().orElseThrow().width().valueM()).isCloseTo(0.220, offset(1e-9));
     assertThat(frameU(two)).isCloseTo(frameU(one), offset(1e-4));
   }
 
@@ -254,7 +254,7 @@ class FramesTest {
     Result a = turned.solve(1e-4);
     Result b = straight.solve(1e-4);
     assertThat(frameU(a)).isCloseTo(frameU(b), offset(1e-4));
-    assertThat(a.frame().orElseThrow().widthM()).isCloseTo(0.100, offset(1e-9));
+    assertThat(a.frame().orElseThrow().width().valueM()).isCloseTo(0.100, offset(1e-9));
   }
 
   @Test

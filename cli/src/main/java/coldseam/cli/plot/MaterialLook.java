@@ -28,7 +28,8 @@ record MaterialLook(Hatch hatch, Color tone, Color line, double turn, double pit
   private static final List<String> TIMBER =
       List.of(
           "wood", "timber", "plywood", "spruce", "pine", "oak", "osb", "rafter", "joist", "plank");
-  private static final List<String> AIR = List.of("air", "cavity", "void", "argon", "krypton");
+  private static final List<String> AIR =
+      List.of("air", "gas", "cavity", "void", "argon", "krypton");
   private static final List<String> GLASS = List.of("glass", "pane");
 
   private static final double INSULATION_BELOW = 0.065;

@@ -159,7 +159,21 @@ final class SectionView extends View {
         }
       }
     }
+    if (result().frame().isPresent()) {
+      Result.Frame frame = result().frame().get();
+      add(references, "frame", frame.width());
+      for (Result.Length visible : frame.visible()) {
+        add(references, "visible", visible);
+      }
+    }
     return references;
+  }
+
+  private void add(List<Reference> references, String name, Result.Length length) {
+    if (length.from().isPresent() && length.to().isPresent()) {
+      String text = name + " " + figures().length(length.valueM());
+      references.add(reference(length.from().get(), length.to().get(), text));
+    }
   }
 
   private Reference reference(Point from, Point to, String text) {
@@ -393,7 +407,11 @@ final class SectionView extends View {
     planes(key);
     if (!references().isEmpty()) {
       key.sample(
-          new ReferenceLength(), "reference length of ψ, with flank and dimension system", "");
+          new ReferenceLength(),
+          result().frame().isPresent()
+              ? "projected width of the frame, visible length"
+              : "reference length of ψ, with flank and dimension system",
+          "");
     }
     if (!result().points().isEmpty()) {
       key.sample(new NamedPoint(), "named point", "");

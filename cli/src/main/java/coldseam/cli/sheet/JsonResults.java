@@ -257,7 +257,7 @@ record JsonResults(Subject subject, Result result) {
     }
     Result.Frame frame = result.frame().get();
     json.object("frame")
-        .member("width_m", frame.widthM())
+        .member("width_m", frame.width().valueM())
         .member("innerWidth_m", frame.innerM())
         .member("outerWidth_m", frame.outerM())
         .object("panelRun");

@@ -290,7 +290,8 @@ final class TextCard {
     table.row(
         "frame",
         ink.strong(loss.value()),
-        ink.faint("± " + loss.halfWidth() + ", over " + Digits.fixed(frame.widthM(), 4) + " m"));
+        ink.faint(
+            "± " + loss.halfWidth() + ", over " + Digits.fixed(frame.width().valueM(), 4) + " m"));
     text.append(table.text());
   }
 

@@ -1,5 +1,6 @@
 package coldseam.solver.result;
 
+import coldseam.mesh.plane.Point;
 import coldseam.solver.detail.Area;
 import coldseam.solver.detail.Assumption;
 import coldseam.solver.detail.CutOffPlane;
@@ -35,12 +36,19 @@ final class FramePlan {
    *
    * @param flank its layers at the cut-off plane where it ends
    * @param role glazing or panel
-   * @param visibleM the length that counts, m
-   * @param derivation where the length comes from, in words
+   * @param visible the length that counts
    */
-  record Infill(PlacedFlank flank, Area.Role role, double visibleM, String derivation) {
+  record Infill(PlacedFlank flank, Area.Role role, Result.Length visible) {
     String name() {
       return flank.name();
+    }
+
+    double visibleM() {
+      return visible.valueM();
+    }
+
+    String derivation() {
+      return visible.derivation();
     }
   }
 
@@ -55,6 +63,7 @@ final class FramePlan {
   private int[] cold;
   private int[] floating;
   private double widthM = Double.NaN;
+  private Result.Length width;
   private double innerM;
   private double outerM;
   private double wholeM;
@@ -182,9 +191,7 @@ final class FramePlan {
       faults.add(fault("its projected width is " + Wording.length(widthM) + "; state its `width`"));
       return;
     }
-    for (int i = 0; i < held.size(); i++) {
-      infills.add(infill(held.get(i), i));
-    }
+    placeLengths(held, axis);
     describe();
   }
 
@@ -202,9 +209,8 @@ final class FramePlan {
     for (int edge = 0; edge < outline.partition().edgeCount(); edge++) {
       if (outline.contains(edge) && Couplings.contains(spaces, outline.conditions().space(edge))) {
         for (int vertex : new int[] {outline.start(edge), outline.end(edge)}) {
-          double along = axis.dot(outline.partition().x(vertex), outline.partition().y(vertex));
-          low = Math.min(low, along);
-          high = Math.max(high, along);
+          low = Math.min(low, along(axis, vertex));
+          high = Math.max(high, along(axis, vertex));
         }
       }
     }
@@ -242,15 +248,73 @@ final class FramePlan {
         && Math.abs(outline.across(line, from, at)) <= Outline.offset(outline.distance(from, to));
   }
 
-  private Infill infill(PlacedFlank flank, int index) {
-    Area.Role role = role(outline, flank.plane().orElseThrow());
-    if (!wanted.visibleM().isEmpty()) {
-      return new Infill(flank, role, wanted.visibleM().get(index), "visible length stated");
-    }
+  /** The lengths with the lines to draw them on, all in one line beside the frame. */
+  private void placeLengths(List<PlacedFlank> held, Direction axis) {
     boolean inside = innerM >= outerM;
-    double length = visible(inside ? flank.warmEnd().orElseThrow() : flank.coldEnd().orElseThrow());
-    return new Infill(
-        flank, role, length, "visible length seen from " + (inside ? "inside" : "outside"));
+    PlacedFlank first = held.get(0);
+    Direction away = outline.direction(end(first, !inside).vertex(), end(first, inside).vertex());
+    double level = level(inside ? warm : cold, away);
+    String seen = "seen from " + (inside ? "inside" : "outside");
+    for (int i = 0; i < held.size(); i++) {
+      FlankEnd end = end(held.get(i), inside);
+      Area.Role role = role(outline, held.get(i).plane().orElseThrow());
+      double cut = along(axis, end.vertex());
+      double edge = cut - axis.dot(axis(held.get(i))) * visible(end);
+      Result.Length length =
+          wanted.visibleM().isEmpty()
+              ? new Result.Length(
+                  visible(end),
+                  Optional.of(at(axis, edge, away, level)),
+                  Optional.of(at(axis, cut, away, level)),
+                  "visible length " + seen)
+              : stated(wanted.visibleM().get(i), "visible length stated");
+      infills.add(new Infill(held.get(i), role, length));
+      if (i == 0 && wanted.widthM().isEmpty()) {
+        width =
+            new Result.Length(
+                widthM,
+                Optional.of(at(axis, edge - widthM, away, level)),
+                Optional.of(at(axis, edge, away, level)),
+                "projected width " + seen);
+      }
+    }
+    if (width == null) {
+      width = stated(widthM, "projected width stated");
+    }
+  }
+
+  private static Result.Length stated(double valueM, String words) {
+    return new Result.Length(valueM, Optional.empty(), Optional.empty(), words);
+  }
+
+  private static FlankEnd end(PlacedFlank flank, boolean inside) {
+    return (inside ? flank.warmEnd() : flank.coldEnd()).orElseThrow();
+  }
+
+  private double along(Direction direction, int vertex) {
+    return direction.dot(outline.partition().x(vertex), outline.partition().y(vertex));
+  }
+
+  /** How far the surfaces that face one side stand out. */
+  private double level(int[] spaces, Direction away) {
+    double level = Double.NEGATIVE_INFINITY;
+    for (int edge = 0; edge < outline.partition().edgeCount(); edge++) {
+      if (outline.contains(edge) && Couplings.contains(spaces, outline.conditions().space(edge))) {
+        level = Math.max(level, along(away, outline.start(edge)));
+        level = Math.max(level, along(away, outline.end(edge)));
+      }
+    }
+    return level;
+  }
+
+  /** The place at a distance along each of two directions square to each other. */
+  private Point at(Direction one, double first, Direction other, double second) {
+    Point origin = outline.partition().origin();
+    double square = 1 - one.dot(other) * one.dot(other);
+    double a = (first - one.dot(other) * second) / square;
+    double b = (second - one.dot(other) * first) / square;
+    return new Point(
+        origin.x() + a * one.x() + b * other.x(), origin.y() + a * one.y() + b * other.y());
   }
 
   private void describe() {
@@ -331,6 +395,11 @@ final class FramePlan {
 
   int[] floating() {
     return floating;
+  }
+
+  /** b_f with the line it is measured along. */
+  Result.Length width() {
+    return width;
   }
 
   /** b_f, m. */

@@ -142,7 +142,8 @@ final class FrameTransmittances {
                 ? List.of(glassEdge(drawn, panel, loss, transmittance.valueWPerM2K()))
                 : List.of(),
             new Result.Frame(
-                panel.plan().widthM(),
+                panel.plan().width(),
+                lengths(drawn.plan()),
                 panel.plan().innerM(),
                 panel.plan().outerM(),
                 panel.coupling(),
@@ -216,6 +217,14 @@ final class FrameTransmittances {
               infill.flank().uWords() + "; " + infill.derivation()));
     }
     return terms;
+  }
+
+  private static List<Result.Length> lengths(FramePlan plan) {
+    List<Result.Length> lengths = new ArrayList<>();
+    for (FramePlan.Infill infill : plan.infills()) {
+      lengths.add(infill.visible());
+    }
+    return lengths;
   }
 
   /** U b of a glazing or panel, W/(m·K). */

@@ -188,7 +188,8 @@ public record Result(
   /**
    * How U_f of a frame came about (ISO 10077-2).
    *
-   * @param widthM projected width b_f that U_f refers to, m
+   * @param width projected width b_f that U_f refers to
+   * @param visible visible length of each glazing or panel, from left to right
    * @param innerM projected width seen from inside as drawn, m
    * @param outerM projected width seen from outside as drawn, m
    * @param couplingWPerMK L2D of the run with the insulating panel
@@ -197,7 +198,8 @@ public record Result(
    * @param glazedCouplingWPerMK L2D of the run with the glazing; empty if the panel itself is drawn
    */
   public record Frame(
-      double widthM,
+      Length width,
+      List<Length> visible,
       double innerM,
       double outerM,
       Quantity couplingWPerMK,
@@ -206,6 +208,7 @@ public record Result(
       Optional<Quantity> glazedCouplingWPerMK) {
     /** Copies the list. */
     public Frame {
+      visible = List.copyOf(visible);
       panels = List.copyOf(panels);
     }
   }
