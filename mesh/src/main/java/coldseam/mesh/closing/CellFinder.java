@@ -62,7 +62,12 @@ final class CellFinder {
       rings.add(ring(polygon.getInteriorRingN(i), false, between));
     }
     return new Cells.Cell(
-        rings, polygon.getArea(), depth, groupOf(polygon), new ArrayList<>(between));
+        rings,
+        polygon.getArea(),
+        noded.drawn(polygon.getInteriorPoint().getCoordinate()),
+        depth,
+        groupOf(polygon),
+        new ArrayList<>(between));
   }
 
   private List<Point> ring(LinearRing drawn, boolean counterClockwise, Set<Integer> between) {

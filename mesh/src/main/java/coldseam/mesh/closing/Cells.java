@@ -21,13 +21,19 @@ public record Cells(List<Cell> cells, List<Dropped> dropped) {
    *
    * @param rings the outer ring counter-clockwise, then the holes clockwise; m
    * @param areaM2 its area
+   * @param inner a point well inside it
    * @param depth how many other groups of connected lines enclose the group it belongs to: 1 for a
    *     ring drawn inside another without touching it
    * @param group number of its group of connected lines
    * @param lines indices of the lines that it lies between, ascending
    */
   public record Cell(
-      List<List<Point>> rings, double areaM2, int depth, int group, List<Integer> lines) {
+      List<List<Point>> rings,
+      double areaM2,
+      Point inner,
+      int depth,
+      int group,
+      List<Integer> lines) {
     /** Copies the lists. */
     public Cell {
       rings = rings.stream().map(List::copyOf).toList();
