@@ -55,6 +55,12 @@ final class YamlTree {
    * @return the tree; empty if the text is not YAML, in which case that has been reported
    */
   static Optional<Node> read(String text, Problems problems) {
+    Optional<Node> simple = SimpleYaml.read(text, DEEPEST, MOST_NODES);
+    return simple.isPresent() ? simple : readByLibrary(text, problems);
+  }
+
+  /** The same for any YAML, slower to start. */
+  static Optional<Node> readByLibrary(String text, Problems problems) {
     try {
       return Optional.of(new YamlTree(text, problems).document());
     } catch (Refused e) {
