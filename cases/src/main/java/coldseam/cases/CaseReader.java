@@ -187,7 +187,9 @@ final class CaseReader {
     for (Node.Entry entry : values) {
       named.put(entry.key().text(), entry.value());
     }
-    variant.ifPresent(v -> v.replaceValues(named));
+    if (variant.isPresent()) {
+      variant.get().replaceValues(named);
+    }
     named.workOutAll();
     Pass pass = new Pass(file, into, new Quantities(into, named, unit));
     if (!top.has("unit")) {

@@ -47,30 +47,47 @@ final class DetailReader {
   Optional<Detail> read(String title, List<String> variants) {
     View view = view();
     MaterialReader materials = new MaterialReader(pass);
-    top.get("materials").ifPresent(materials::read);
-    variant.flatMap(Variant::materials).ifPresent(materials::read);
+    Node typed = top.nodeOrNull("materials");
+    if (typed != null) {
+      materials.read(typed);
+    }
+    if (variant.isPresent() && variant.get().materials().isPresent()) {
+      materials.read(variant.get().materials().get());
+    }
     SpaceReader spaces = new SpaceReader(pass);
     Optional<Node> spacesNode =
         top.require("spaces", "add `spaces:` with `indoors` and `outdoors`, say");
-    spacesNode.ifPresent(node -> spaces.read(node, materials.materials()));
+    if (spacesNode.isPresent()) {
+      spaces.read(spacesNode.get(), materials.materials());
+    }
     Fills fills = new Fills(pass, materials, spaces);
-    variant.ifPresent(v -> v.replaceFills(fills));
+    if (variant.isPresent()) {
+      variant.get().replaceFills(fills);
+    }
     List<Area> areas = section(fills, spacesNode.isPresent());
-    variant.ifPresent(v -> v.reportNotReplaced(problems, fills));
+    if (variant.isPresent()) {
+      variant.get().reportNotReplaced(problems, fills);
+    }
     StretchReader stretches = new StretchReader(pass, spaces);
-    top.get("stretches").ifPresent(n -> stretches.read(n, areas, materials.materials()));
+    Node node = top.nodeOrNull("stretches");
+    if (node != null) {
+      stretches.read(node, areas, materials.materials());
+    }
     FlankReader flanks = new FlankReader(pass);
-    top.get("flanks").ifPresent(n -> flanks.read(n, areas));
-    List<Wanted> wanted = new ArrayList<>();
+    node = top.nodeOrNull("flanks");
+    if (node != null) {
+      flanks.read(node, areas);
+    }
     ResultsReader results = new ResultsReader(pass, spaces);
-    PsiReader psi = new PsiReader(pass, spaces, flanks, others);
-    top.get("psi").ifPresent(n -> wanted.addAll(psi.read(n)));
-    top.get("U").ifPresent(n -> wanted.addAll(results.transmittances(n)));
-    top.get("frame").ifPresent(n -> frame(n, spaces, results, wanted));
-    top.get("points").ifPresent(n -> wanted.addAll(results.points(n)));
-    top.get("profiles").ifPresent(n -> wanted.addAll(results.profiles(n)));
-    top.get("accuracy").ifPresent(n -> accuracy = new AccuracyReader(pass).read(n));
-    top.get("expect").ifPresent(n -> expect(n, spaces, stretches, results, variants));
+    List<Wanted> wanted = wanted(spaces, results, new PsiReader(pass, spaces, flanks, others));
+    node = top.nodeOrNull("accuracy");
+    if (node != null) {
+      accuracy = new AccuracyReader(pass).read(node);
+    }
+    node = top.nodeOrNull("expect");
+    if (node != null) {
+      expect(node, spaces, stretches, results, variants);
+    }
     if (!problems.none()) {
       return Optional.empty();
     }
@@ -97,6 +114,31 @@ final class DetailReader {
       wanted.add(frame.get());
       results.transmittances().add(Wanted.Frame.NAME);
     }
+  }
+
+  private List<Wanted> wanted(SpaceReader spaces, ResultsReader results, PsiReader psi) {
+    List<Wanted> wanted = new ArrayList<>();
+    Node node = top.nodeOrNull("psi");
+    if (node != null) {
+      wanted.addAll(psi.read(node));
+    }
+    node = top.nodeOrNull("U");
+    if (node != null) {
+      wanted.addAll(results.transmittances(node));
+    }
+    node = top.nodeOrNull("frame");
+    if (node != null) {
+      frame(node, spaces, results, wanted);
+    }
+    node = top.nodeOrNull("points");
+    if (node != null) {
+      wanted.addAll(results.points(node));
+    }
+    node = top.nodeOrNull("profiles");
+    if (node != null) {
+      wanted.addAll(results.profiles(node));
+    }
+    return wanted;
   }
 
   private List<Area> section(Fills fills, boolean haveSpaces) {

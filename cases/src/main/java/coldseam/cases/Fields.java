@@ -199,6 +199,12 @@ final class Fields {
     return entry == null ? Optional.empty() : Optional.of(entry.value());
   }
 
+  /** The value of a key, or null where the key is not there. */
+  Node nodeOrNull(String key) {
+    Node.Entry entry = entries.get(key);
+    return entry == null ? null : entry.value();
+  }
+
   /** Whether a key is there with a value. */
   boolean has(String key) {
     return get(key).isPresent();

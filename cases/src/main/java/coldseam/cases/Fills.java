@@ -92,7 +92,9 @@ final class Fills {
     Optional<Material> material = materials.materials().get(name);
     if (material != null) {
       Optional<Entry> entry = materials.libraryEntry(name);
-      entry.ifPresent(e -> assume(name, e));
+      if (entry.isPresent()) {
+        assume(name, entry.get());
+      }
       return material.isPresent() ? Optional.of(material.get()) : Optional.empty();
     }
     if (name.equals(HOLLOW)) {

@@ -34,7 +34,7 @@ final class Literal {
       return;
     }
     int blanks = skipBlanks(at);
-    unit = Unit.longestAt(text, blanks, names::startsAt);
+    unit = Unit.longestAt(text, blanks, names);
     if (unit != null) {
       at = unit.end();
       if (wordBetween(blanks, at).startsWith("f")) {

@@ -73,7 +73,9 @@ final class MaterialReader {
   private Optional<Material> material(String name, Node node) {
     if (node instanceof Node.Scalar scalar) {
       Optional<Entry> entry = libraryEntryOf(scalar, "material `" + name + "`");
-      entry.ifPresent(e -> fromLibrary.put(name, e));
+      if (entry.isPresent()) {
+        fromLibrary.put(name, entry.get());
+      }
       return entry.isEmpty() ? Optional.empty() : Optional.of(of(name, entry.get()));
     }
     String what = "material `" + Node.shortened(name) + "`";

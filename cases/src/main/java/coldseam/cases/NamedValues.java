@@ -8,7 +8,7 @@ import java.util.List;
 import java.util.Map;
 
 /** The named values of a case, worked out when first asked for. */
-final class NamedValues {
+final class NamedValues implements Unit.Names {
   /** Longer chains of values and brackets are refused. */
   static final int LONGEST_CHAIN = 100;
 
@@ -63,7 +63,8 @@ final class NamedValues {
   }
 
   /** Whether the name of a value stands at a place. */
-  boolean startsAt(String text, int at) {
+  @Override
+  public boolean named(String text, int at) {
     return !longestAt(text, at).isEmpty();
   }
 

@@ -89,7 +89,7 @@ final class Quantities {
       if (c == '+' || c == '*' || c == '^' || c == '(' || sign) {
         return true;
       }
-      if (Character.isLetter(c) && values.startsAt(text, i)) {
+      if (Character.isLetter(c) && values.named(text, i)) {
         return true;
       }
     }

@@ -147,7 +147,9 @@ final class SectionReader {
       return Optional.empty();
     }
     Optional<String> name = Fields.text(problems, "`name`", fields.get("name").get());
-    name.ifPresent(names::add);
+    if (name.isPresent()) {
+      names.add(name.get());
+    }
     return name;
   }
 
@@ -165,7 +167,9 @@ final class SectionReader {
     }
     Optional<List<List<Point>>> rings = shapes.rings(key, value.get(), called);
     pass.place("section", called, node);
-    fill.ifPresent(f -> pass.place("section", f.name(), node));
+    if (fill.isPresent()) {
+      pass.place("section", fill.get().name(), node);
+    }
     if (fill.isEmpty() || rings.isEmpty()) {
       return List.of();
     }
