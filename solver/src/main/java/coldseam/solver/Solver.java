@@ -88,7 +88,7 @@ public final class Solver {
     boolean surfaceNeeded = plan.surfaceNeeded();
     boolean shared = surfaceNeeded && plan.sameFilms();
     Solution heatLoss =
-        resolved.solveHeatLoss(accuracy, shared || plan.heatLossTemperaturesWanted(), progress);
+        resolved.solveHeatLoss(accuracy, plan.heatLossTemperatures(shared), progress);
     Map<Subtraction.OfDetail, OtherCoupling> others = solveOthers(resolved, accuracy, progress);
     times.ended("heat loss");
 
@@ -101,7 +101,12 @@ public final class Solver {
               Conduction.solveNext(
                   heatLoss,
                   resolved.surface(),
-                  new Conduction.Goal(accuracy, false, false, true, plan.temperatures(heatLoss)),
+                  new Conduction.Goal(
+                      accuracy,
+                      false,
+                      false,
+                      plan.surfaceTemperatures(),
+                      plan.temperatures(heatLoss)),
                   progress));
     }
     times.ended("surface temperatures");
@@ -115,7 +120,7 @@ public final class Solver {
     for (Map.Entry<Subtraction.OfDetail, Resolved> entry : resolved.others().entrySet()) {
       Subtraction.OfDetail of = entry.getKey();
       Resolved other = entry.getValue();
-      Conduction.Goal goal = other.goal(accuracy, true, false);
+      Conduction.Goal goal = other.goal(accuracy, true, Conduction.Temperatures.NONE);
       Solution solution = Conduction.solve(other.partition(), other.heatLoss(), goal, progress);
       try {
         couplings.put(of, other.plan().coupling(solution, of.warm(), of.cold()));
@@ -229,12 +234,13 @@ public final class Solver {
       }
     }
 
-    Solution solveHeatLoss(Accuracy accuracy, boolean temperatures, Progress progress) {
+    Solution solveHeatLoss(
+        Accuracy accuracy, Conduction.Temperatures temperatures, Progress progress) {
       Conduction.Goal goal = goal(accuracy, plan.psiWanted(), temperatures);
       return Conduction.solve(partition, heatLoss, goal, progress);
     }
 
-    Conduction.Goal goal(Accuracy accuracy, boolean psi, boolean temperatures) {
+    Conduction.Goal goal(Accuracy accuracy, boolean psi, Conduction.Temperatures temperatures) {
       return new Conduction.Goal(
           accuracy,
           psi,

@@ -16,7 +16,7 @@ import java.util.function.Supplier;
 /** Solve, estimate, mark, refine, until what is asked is met. */
 final class AdaptiveLoop {
   /** Part of an accuracy that a proved half-width may take: the middle is better than its proof. */
-  private static final double PART_OF_PROVED = 0.35;
+  private static final double PART_OF_PROVED = 0.6;
 
   /** The same where temperatures are asked for: near singular corners they are last to settle. */
   private static final double PART_WITH_TEMPERATURES = 0.12;
@@ -37,6 +37,18 @@ final class AdaptiveLoop {
 
   /** The part of it that may be left beside the coldest and warmest points. */
   private static final double PART_AT_EXTREMES = 0.4;
+
+  /** How many times as much is left inside where only surface temperatures are wanted. */
+  private static final double TIMES_INSIDE = 4;
+
+  /**
+   * Square of the excess given to the triangles beside the extremes found with other films: they
+   * will lie at the same places, and finding that out would take a pass.
+   */
+  private static final double EXCESS_AT_EARLIER_EXTREMES = 16;
+
+  /** Systems with fewer unknowns are solved one after the other, see {@link #solveBothSides}. */
+  private static final int SIDE_BY_SIDE_FROM = 2000;
 
   /** The part of the indicators' sum that a pass splits at most. */
   private static final double BULK = 0.9;
@@ -119,6 +131,18 @@ final class AdaptiveLoop {
     return mesh;
   }
 
+  /** The mesh of another film set's solution, finer beside its coldest and warmest points. */
+  static Mesh gradedToExtremes(FieldSolution other, double[] temperaturesC) {
+    Mesh mesh = other.mesh();
+    double[] nothing = new double[mesh.triangleCount()];
+    double[] excess = new double[mesh.triangleCount()];
+    BitSet beside = other.besideExtremes(temperaturesC);
+    for (int t = beside.nextSetBit(0); t >= 0; t = beside.nextSetBit(t + 1)) {
+      excess[t] = EXCESS_AT_EARLIER_EXTREMES;
+    }
+    return new Marking(mesh).refine(nothing, 0, excess);
+  }
+
   /**
    * Runs.
    *
@@ -164,10 +188,14 @@ final class AdaptiveLoop {
     Arrays.fill(wanted, 0, d.spaces > 2 ? d.spaces : d.spaces - 1, true);
     wanted[d.spaces] = d.hasFlow;
     indicator = null;
-    if (bound == null || goal.surfaceTemperatures()) {
+    if (bound == null || temperaturesWanted()) {
       estimate();
     }
     setTargets();
+  }
+
+  private boolean temperaturesWanted() {
+    return goal.temperatures() != Conduction.Temperatures.NONE;
   }
 
   private void estimate() {
@@ -195,13 +223,23 @@ final class AdaptiveLoop {
     }
   }
 
-  /** The temperature problem and the conjugate one side by side. */
+  /**
+   * The temperature problem and the conjugate one, large ones side by side; of small ones the
+   * second takes less time where the first has warmed the code that they share.
+   */
   private void solveBothSides() {
     StreamSpace space = new StreamSpace(d.mesh, conditions);
-    CompletableFuture<double[][]> streams =
-        CompletableFuture.supplyAsync(new StreamFunctions(d, space));
-    fields = Assembly.unitFields(d);
-    bound = new TwoSidedBound(d, fields, space, streams.join());
+    double[][] streams;
+    if (d.unknowns < SIDE_BY_SIDE_FROM) {
+      fields = Assembly.unitFields(d);
+      streams = ConjugateProblem.streamFunctions(d, space);
+    } else {
+      CompletableFuture<double[][]> other =
+          CompletableFuture.supplyAsync(new StreamFunctions(d, space));
+      fields = Assembly.unitFields(d);
+      streams = other.join();
+    }
+    bound = new TwoSidedBound(d, fields, space, streams);
     matrix = ConductanceMatrix.of(d, bound);
     proved.add(new Proved(d.unknowns, bound.up, bound.lo, bound.gap));
     if (!(bound.mismatch() <= MISMATCH * bound.allowance)) {
@@ -229,7 +267,7 @@ final class AdaptiveLoop {
     if (goal.psiAsked()) {
       absolute = Math.min(absolute, accuracy.psiWPerMK());
     }
-    double provedPart = goal.surfaceTemperatures() ? PART_WITH_TEMPERATURES : PART_OF_PROVED;
+    double provedPart = temperaturesWanted() ? PART_WITH_TEMPERATURES : PART_OF_PROVED;
     double guessedPart = proving ? PART_OF_RELATIVE : PART_FOR_SURFACES;
     double relativePart = bound == null ? guessedPart : provedPart;
     double absolutePart = bound == null ? 3 * guessedPart : provedPart;
@@ -334,7 +372,7 @@ final class AdaptiveLoop {
     extremes = new SurfaceExtremes(d, FieldSolution.nodal(d, fields, goal.temperaturesC()));
     BitSet near = extremes.triangles(d);
     double local = temperatureRatio(excess, near);
-    if (!goal.surfaceTemperatures() || before == null) {
+    if (!temperaturesWanted() || before == null) {
       return local;
     }
     double moved = surfaceRatio(before);
@@ -356,6 +394,7 @@ final class AdaptiveLoop {
   private double temperatureRatio(double[] excess, BitSet near) {
     double worst = 0;
     double smallest = SMALLEST * SMALLEST * d.extentSquared;
+    BitSet strict = strict();
     for (int f = 0; f <= d.spaces; f++) {
       double[] amplitude = indicator.amplitude[f];
       if (amplitude == null || f < d.spaces && infinite(f)) {
@@ -363,7 +402,8 @@ final class AdaptiveLoop {
       }
       double may = TEMPERATURE * (f < d.spaces ? 1 : largest(fields[f]));
       for (int t = 0; t < excess.length; t++) {
-        double over = amplitude[t] / (near.get(t) ? PART_AT_EXTREMES * may : may);
+        double part = near.get(t) ? PART_AT_EXTREMES : strict.get(t) ? 1 : TIMES_INSIDE;
+        double over = amplitude[t] / (part * may);
         if (over > 0 && d.mesh.area(t) > smallest) {
           worst = Math.max(worst, over);
           excess[t] = Math.max(excess[t], over * over);
@@ -371,6 +411,21 @@ final class AdaptiveLoop {
       }
     }
     return worst;
+  }
+
+  /** The triangles whose temperatures are wanted. */
+  private BitSet strict() {
+    BitSet strict = new BitSet(d.mesh.triangleCount());
+    if (goal.temperatures() == Conduction.Temperatures.EVERYWHERE) {
+      strict.set(0, d.mesh.triangleCount());
+      return strict;
+    }
+    for (int s = 0; s < d.outline.count; s++) {
+      if (d.outline.kind[s] == Conditions.Kind.FILM) {
+        strict.set(d.outline.triangle[s]);
+      }
+    }
+    return strict;
   }
 
   private static double largest(double[] values) {

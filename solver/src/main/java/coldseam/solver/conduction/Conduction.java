@@ -12,6 +12,19 @@ import java.util.function.IntPredicate;
 public final class Conduction {
   private Conduction() {}
 
+  /** Which temperatures are wanted, so that refinement goes on until they settle. */
+  public enum Temperatures {
+    /** None: only heat flows. */
+    NONE,
+    /**
+     * Coldest and warmest surface points: until they move by less than 0.01 K (for spaces 25 K
+     * apart, scaled).
+     */
+    SURFACE,
+    /** Those, and all others, at points and along lines, as closely. */
+    EVERYWHERE
+  }
+
   /**
    * What the adaptive loop has to meet.
    *
@@ -19,8 +32,7 @@ public final class Conduction {
    * @param psiAsked whether a ψ is wanted, so that its absolute accuracy counts
    * @param transmittanceAsked whether a U is wanted
    * @param takenOffWPerMK what is taken off a coupling before the relative accuracy of U counts
-   * @param surfaceTemperatures whether coldest and warmest surface points are wanted: refinement
-   *     then also goes on until they move by less than 0.01 K (for spaces 25 K apart, scaled)
+   * @param temperatures which temperatures are wanted
    * @param temperaturesC temperature of every space, °C; decides which points are coldest
    */
   public record Goal(
@@ -28,16 +40,16 @@ public final class Conduction {
       boolean psiAsked,
       boolean transmittanceAsked,
       double takenOffWPerMK,
-      boolean surfaceTemperatures,
+      Temperatures temperatures,
       double[] temperaturesC) {
     /** A goal where nothing is taken off a coupling. */
     public Goal(
         Accuracy accuracy,
         boolean psiAsked,
         boolean transmittanceAsked,
-        boolean surfaceTemperatures,
+        Temperatures temperatures,
         double[] temperaturesC) {
-      this(accuracy, psiAsked, transmittanceAsked, 0, surfaceTemperatures, temperaturesC);
+      this(accuracy, psiAsked, transmittanceAsked, 0, temperatures, temperaturesC);
     }
   }
 
@@ -75,8 +87,9 @@ public final class Conduction {
    */
   public static Solution solveNext(
       Solution first, Conditions conditions, Goal goal, Progress progress) {
-    double ratio = ((FieldSolution) first).errorRatio();
-    return new AdaptiveLoop(first.partition(), conditions, goal, progress, ratio, false)
-        .run(first.mesh());
+    FieldSolution before = (FieldSolution) first;
+    return new AdaptiveLoop(
+            first.partition(), conditions, goal, progress, before.errorRatio(), false)
+        .run(AdaptiveLoop.gradedToExtremes(before, goal.temperaturesC()));
   }
 }

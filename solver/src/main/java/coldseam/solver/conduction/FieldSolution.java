@@ -4,6 +4,7 @@ import coldseam.mesh.partition.Partition;
 import coldseam.mesh.triangulation.Mesh;
 import coldseam.solver.detail.Conditions;
 import java.util.Arrays;
+import java.util.BitSet;
 import java.util.List;
 import java.util.Optional;
 
@@ -64,6 +65,11 @@ final class FieldSolution implements Solution {
       worst = Math.max(worst, known ? bound.gap[i][i] / 2 / indicated : history.ratio(x));
     }
     return worst;
+  }
+
+  /** The triangles beside the coldest and warmest surface points at these temperatures, °C. */
+  BitSet besideExtremes(double[] temperaturesC) {
+    return new SurfaceExtremes(d, nodal(d, fields, temperaturesC)).triangles(d);
   }
 
   /** What each pass proved, in order. */

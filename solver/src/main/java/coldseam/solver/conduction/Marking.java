@@ -26,7 +26,10 @@ final class Marking {
   private final BitSet corners;
   private Mesh mesh;
 
-  /** Triangles known to lie at a singular corner when they were made. */
+  /**
+   * Triangles known to lie at a singular corner when they were made; at first all that touch any
+   * corner are taken for such.
+   */
   private BitSet singular = new BitSet();
 
   /** What each triangle would lack now, had the field been smooth in the round that made it. */
@@ -58,6 +61,9 @@ final class Marking {
     for (int t = 0; ifSmooth != null && t < lacking.length; t++) {
       boolean muchMore = lacking[t] > SINGULAR * ifSmooth[t];
       singular.set(t, muchMore && Corners.touches(corners, mesh, t));
+    }
+    for (int t = 0; ifSmooth == null && t < lacking.length; t++) {
+      singular.set(t, Corners.touches(corners, mesh, t));
     }
     double threshold = threshold(lacking, part);
     sizes = lacking;
@@ -93,13 +99,14 @@ final class Marking {
       double share = next.mesh().area(t) / mesh.area(p);
       double kept = share * share * share;
       boolean split = kept < 1;
+      boolean atCorner = split && Corners.touches(corners, next.mesh(), t);
+      nextOthers[t] = others[p] * (atCorner ? KEPT_AT_CORNERS : kept);
       nextIfSmooth[t] = split ? sizes[p] * kept : ifSmooth[p];
-      if (singular.get(p) && (!split || Corners.touches(corners, next.mesh(), t))) {
+      if (singular.get(p) && (!split || atCorner)) {
         nextSingular.set(t);
         kept = split ? KEPT_AT_CORNERS : 1;
       }
       nextSizes[t] = sizes[p] * kept;
-      nextOthers[t] = others[p] * kept;
     }
     mesh = next.mesh();
     sizes = nextSizes;

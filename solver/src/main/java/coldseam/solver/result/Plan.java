@@ -2,6 +2,7 @@ package coldseam.solver.result;
 
 import coldseam.mesh.partition.Partition;
 import coldseam.mesh.plane.Point;
+import coldseam.solver.conduction.Conduction;
 import coldseam.solver.conduction.Solution;
 import coldseam.solver.detail.Assumption;
 import coldseam.solver.detail.Bracket;
@@ -200,9 +201,23 @@ public final class Plan {
     return false;
   }
 
-  /** Whether a point or profile asks for the films for heat loss. */
-  public boolean heatLossTemperaturesWanted() {
-    return asksFor(FilmSet.HEAT_LOSS);
+  /**
+   * The temperatures wanted of the solution with the films for heat loss.
+   *
+   * @param shared whether it serves for surface temperatures too
+   */
+  public Conduction.Temperatures heatLossTemperatures(boolean shared) {
+    if (asksFor(FilmSet.HEAT_LOSS) || shared && asksFor(FilmSet.SURFACE)) {
+      return Conduction.Temperatures.EVERYWHERE;
+    }
+    return shared ? Conduction.Temperatures.SURFACE : Conduction.Temperatures.NONE;
+  }
+
+  /** The temperatures wanted of the solution with the films for surface temperatures. */
+  public Conduction.Temperatures surfaceTemperatures() {
+    return asksFor(FilmSet.SURFACE)
+        ? Conduction.Temperatures.EVERYWHERE
+        : Conduction.Temperatures.SURFACE;
   }
 
   private boolean asksFor(FilmSet set) {

@@ -161,7 +161,12 @@ final class Sketch {
   }
 
   Conduction.Goal goal() {
-    return new Conduction.Goal(accuracy, false, false, surfaceTemperatures, temperaturesC());
+    return new Conduction.Goal(
+        accuracy,
+        false,
+        false,
+        surfaceTemperatures ? Conduction.Temperatures.EVERYWHERE : Conduction.Temperatures.NONE,
+        temperaturesC());
   }
 
   double[] temperaturesC() {
