@@ -135,35 +135,20 @@ final class UpLookingCholesky implements Factor {
 
   /** Solves for one row, stores it and returns the sum of its squares. */
   private double solveRow(double[] x, int[] column, int first, int end, int[] fill) {
-    int[] rows = row;
-    double[] values = value;
-    double[] diagonals = diagonal;
     double squares = 0;
     int at = first;
     while (at < end) {
       int i = column[at];
-      double a = x[i] / diagonals[i];
-      x[i] = 0;
-      squares += a * a;
-      int p = start[i];
-      int stop = fill[i]++;
-      if (at + 1 < end && paired(i)) {
-        double b = (x[i + 1] - values[p] * a) / diagonals[i + 1];
-        x[i + 1] = 0;
-        squares += b * b;
-        int q = start[i + 1];
-        values[fill[i + 1]++] = b;
-        for (p++; p < stop; p++, q++) {
-          x[rows[p]] -= values[p] * a + values[q] * b;
-        }
+      if (at + 3 < end && paired(i) && paired(i + 1) && paired(i + 2)) {
+        squares += takeFour(x, i, fill);
+        at += 4;
+      } else if (at + 1 < end && paired(i)) {
+        squares += takeTwo(x, i, fill);
         at += 2;
       } else {
-        for (; p < stop; p++) {
-          x[rows[p]] -= values[p] * a;
-        }
+        squares += takeOne(x, i, fill);
         at++;
       }
-      values[stop] = a;
     }
     return squares;
   }
@@ -171,6 +156,63 @@ final class UpLookingCholesky implements Factor {
   /** Whether the next column has the same entries below its diagonal, so that both go together. */
   private boolean paired(int i) {
     return row[start[i]] == i + 1 && start[i + 1] - start[i] == start[i + 2] - start[i + 1] + 1;
+  }
+
+  private double takeOne(double[] x, int i, int[] fill) {
+    int[] rows = row;
+    double[] values = value;
+    double a = x[i] / diagonal[i];
+    x[i] = 0;
+    int stop = fill[i]++;
+    for (int p = start[i]; p < stop; p++) {
+      x[rows[p]] -= values[p] * a;
+    }
+    values[stop] = a;
+    return a * a;
+  }
+
+  private double takeTwo(double[] x, int i, int[] fill) {
+    int[] rows = row;
+    double[] values = value;
+    int p = start[i];
+    int q = start[i + 1];
+    double a = x[i] / diagonal[i];
+    double b = (x[i + 1] - values[p] * a) / diagonal[i + 1];
+    x[i] = 0;
+    x[i + 1] = 0;
+    int stop = fill[i]++;
+    for (p++; p < stop; p++, q++) {
+      x[rows[p]] -= values[p] * a + values[q] * b;
+    }
+    values[stop] = a;
+    values[fill[i + 1]++] = b;
+    return a * a + b * b;
+  }
+
+  private double takeFour(double[] x, int i, int[] fill) {
+    int[] rows = row;
+    double[] values = value;
+    int p = start[i];
+    int q = start[i + 1];
+    int r = start[i + 2];
+    int s = start[i + 3];
+    double a = x[i] / diagonal[i];
+    double b = (x[i + 1] - values[p] * a) / diagonal[i + 1];
+    double c = (x[i + 2] - values[p + 1] * a - values[q] * b) / diagonal[i + 2];
+    double d = (x[i + 3] - values[p + 2] * a - values[q + 1] * b - values[r] * c) / diagonal[i + 3];
+    x[i] = 0;
+    x[i + 1] = 0;
+    x[i + 2] = 0;
+    x[i + 3] = 0;
+    int stop = fill[i]++;
+    for (p += 3, q += 2, r++; p < stop; p++, q++, r++, s++) {
+      x[rows[p]] -= values[p] * a + values[q] * b + values[r] * c + values[s] * d;
+    }
+    values[stop] = a;
+    values[fill[i + 1]++] = b;
+    values[fill[i + 2]++] = c;
+    values[fill[i + 3]++] = d;
+    return a * a + b * b + c * c + d * d;
   }
 
   @Override
