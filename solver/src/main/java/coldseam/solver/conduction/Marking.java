@@ -99,14 +99,13 @@ final class Marking {
       double share = next.mesh().area(t) / mesh.area(p);
       double kept = share * share * share;
       boolean split = kept < 1;
-      boolean atCorner = split && Corners.touches(corners, next.mesh(), t);
-      nextOthers[t] = others[p] * (atCorner ? KEPT_AT_CORNERS : kept);
       nextIfSmooth[t] = split ? sizes[p] * kept : ifSmooth[p];
-      if (singular.get(p) && (!split || atCorner)) {
+      if (singular.get(p) && (!split || Corners.touches(corners, next.mesh(), t))) {
         nextSingular.set(t);
         kept = split ? KEPT_AT_CORNERS : 1;
       }
       nextSizes[t] = sizes[p] * kept;
+      nextOthers[t] = others[p] * kept;
     }
     mesh = next.mesh();
     sizes = nextSizes;

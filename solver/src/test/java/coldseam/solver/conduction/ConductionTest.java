@@ -134,7 +134,7 @@ class ConductionTest {
     for (int v = 0; v < solution.mesh().vertexCount(); v++) {
       assertThat(field.atNode(v)).isCloseTo(nodal[v], within(0.02));
     }
-    assertThat(solution.unknowns()).isLessThan(10000);
+    assertThat(solution.unknowns()).isLessThan(12000);
     assertThat(solution.passes()).isLessThan(8);
   }
 
