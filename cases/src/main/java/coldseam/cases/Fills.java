@@ -2,6 +2,7 @@ package coldseam.cases;
 
 import coldseam.cases.library.Entry;
 import coldseam.cases.library.Library;
+import coldseam.solver.detail.Assumption;
 import coldseam.solver.detail.Fill;
 import coldseam.solver.detail.Hollow;
 import coldseam.solver.detail.Material;
@@ -94,6 +95,10 @@ final class Fills {
       Optional<Entry> entry = materials.libraryEntry(name);
       if (entry.isPresent()) {
         assume(name, entry.get());
+      }
+      Optional<Assumption> conversion = materials.conversion(name);
+      if (conversion.isPresent()) {
+        pass.assume(conversion.get());
       }
       return material.isPresent() ? Optional.of(material.get()) : Optional.empty();
     }

@@ -2,6 +2,7 @@ package coldseam.cases;
 
 import coldseam.cases.library.Entry;
 import coldseam.cases.library.Library;
+import coldseam.solver.detail.Assumption;
 import coldseam.solver.detail.Material;
 import java.util.HashMap;
 import java.util.LinkedHashMap;
@@ -19,6 +20,7 @@ final class MaterialReader {
           "resistance",
           "thickness",
           "from",
+          "at",
           "tolerance",
           "emissivity",
           "vapour-resistance",
@@ -33,6 +35,7 @@ final class MaterialReader {
   private final Problems problems;
   private final Map<String, Optional<Material>> materials = new LinkedHashMap<>();
   private final Map<String, Entry> fromLibrary = new HashMap<>();
+  private final Map<String, Assumption> converted = new HashMap<>();
 
   MaterialReader(Pass pass) {
     this.pass = pass;
@@ -55,6 +58,7 @@ final class MaterialReader {
         continue;
       }
       fromLibrary.remove(name);
+      converted.remove(name);
       materials.put(name, material(name, entry.value()));
       pass.place("material", name, entry.key());
     }
@@ -68,6 +72,11 @@ final class MaterialReader {
   /** The library entry that a material's conductivity comes from. */
   Optional<Entry> libraryEntry(String name) {
     return Optional.ofNullable(fromLibrary.get(name));
+  }
+
+  /** What the conductivity of a material was converted to, if it was. */
+  Optional<Assumption> conversion(String name) {
+    return Optional.ofNullable(converted.get(name));
   }
 
   private Optional<Material> material(String name, Node node) {
@@ -91,6 +100,9 @@ final class MaterialReader {
     double emissivity = number(fields, "emissivity", Place.EMISSIVITY, -1);
     double vapour = number(fields, "vapour-resistance", Place.VAPOUR_RESISTANCE, -1);
     String source = source(fields, what, entry);
+    if (fields.has("at")) {
+      source += convert(name, fields, entry, conductivity);
+    }
     if (problems.count() > before || conductivity == null) {
       return Optional.empty();
     }
@@ -104,6 +116,31 @@ final class MaterialReader {
             emissivity >= 0 ? OptionalDouble.of(emissivity) : entryEmissivity(entry),
             vapour >= 0 ? OptionalDouble.of(vapour) : entryVapour(entry),
             source));
+  }
+
+  /** Converts a conductivity in place; returns what to say of it beside its source. */
+  private String convert(String name, Fields fields, Optional<Entry> entry, double[] conductivity) {
+    Optional<ConversionReader.Conversion> read =
+        new ConversionReader(pass)
+            .read(fields.get("at").get(), fields.what(), entry, fromLibrary.containsKey(name));
+    if (read.isEmpty() || conductivity == null) {
+      return "";
+    }
+    ConversionReader.Conversion conversion = read.get();
+    double stated = conductivity[0];
+    conductivity[0] *= conversion.factor();
+    conductivity[1] *= conversion.factor();
+    converted.put(
+        name,
+        new Assumption(
+            "conductivity of " + name + " at " + conversion.conditions(),
+            Figures.of(conductivity[0])
+                + " W/(m·K) = "
+                + Figures.of(stated)
+                + " W/(m·K) times "
+                + conversion.factors(),
+            conversion.source()));
+    return "; converted by ISO 10456:2007 to " + conversion.conditions();
   }
 
   private Optional<Entry> libraryEntryOf(Node node, String what) {

@@ -35,7 +35,11 @@ final class Pass {
   }
 
   void assume(String what, String value, String source) {
-    assumptions.add(new Assumption(what, value, source));
+    assume(new Assumption(what, value, source));
+  }
+
+  void assume(Assumption assumption) {
+    assumptions.add(assumption);
   }
 
   List<Assumption> assumptions() {

@@ -33,6 +33,14 @@ enum Place {
   VAPOUR_RESISTANCE(Dimension.BARE, "", 0, 1e9, "a number, 0 or more, e.g. `60`"),
   /** By what part of itself a conductivity may be off. */
   TOLERANCE(Dimension.SHARE, "", 0, 0.999999, "0 up to less than 100 %, e.g. `10 %`"),
+  /** ψ of ISO 10456, m³/m³. */
+  MOISTURE_BY_VOLUME(Dimension.SHARE, "", 0, 1, "0 to 100 % of the volume, e.g. `2 %`"),
+  /** u of ISO 10456, kg/kg. */
+  MOISTURE_BY_MASS(Dimension.SHARE, "", 0, 10, "0 or more of the dry mass, e.g. `5 %`"),
+  /** f_T of ISO 10456, per K. */
+  TEMPERATURE_COEFFICIENT(Dimension.BARE, "", -0.1, 0.1, "a number per K, e.g. `0.0046`"),
+  /** f_ψ or f_u of ISO 10456. */
+  MOISTURE_COEFFICIENT(Dimension.BARE, "", 0, 100, "a number, 0 or more, e.g. `4`"),
   /** Heat flow into a stretch. */
   FLOW_DENSITY(Dimension.FLOW_DENSITY, "W/m2", -1e9, 1e9, "a heat flow in W/m2, e.g. `100`"),
   /** An angle. */

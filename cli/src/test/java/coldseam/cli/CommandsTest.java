@@ -117,12 +117,19 @@ class CommandsTest {
   /** EPS is one of the generic names that the case format's page uses as an example. */
   @Test
   void materials_are_found_by_words() throws IOException {
-    assertThat(Ran.in(dir, "materials", "EPS").out()).contains("λ W/(m·K)").contains("EPS");
+    // 1 in of 0.035 W/(m·K): 0.0254/0.035 m²·K/W = 4.12 h·ft²·°F/Btu, by hand.
+    assertThat(Ran.in(dir, "materials", "expanded", "polystyrene").out())
+        .contains("λ W/(m·K)", "R per inch", "EPS ", "0.035", "4.12")
+        .contains("or expanded polystyrene, beadboard", "[1] handbook value");
     JsonNode all = JACKSON.readTree(Ran.in(dir, "materials", "--json").out()).get("materials");
     assertThat(all).hasSizeGreaterThan(20);
     for (JsonNode material : all) {
       assertThat(material.get("conductivity_W_per_mK").doubleValue()).isPositive();
       assertThat(material.get("source").textValue()).isNotBlank();
+      assertThat(
+              material.get("resistancePerInch_h_ft2_F_per_Btu").doubleValue()
+                  * material.get("conductivity_W_per_mK").doubleValue())
+          .isCloseTo(0.144228, within(1e-6)); // 0.0254 m / 0.1761102 m²·K/W
     }
     Ran none = Ran.in(dir, "materials", "minral", "wol");
     assertThat(none.out()).isEmpty();

@@ -13,6 +13,7 @@ import java.util.OptionalDouble;
  * @param vapourResistanceDry μ dry cup, if known; infinite for a vapour-tight material
  * @param vapourResistanceWet μ wet cup, if known
  * @param emissivity thermal emissivity, if known
+ * @param conversion coefficients for temperature and moisture
  * @param source standard and table, or "handbook value"
  * @param status seen or memory
  */
@@ -24,8 +25,21 @@ public record Entry(
     OptionalDouble vapourResistanceDry,
     OptionalDouble vapourResistanceWet,
     OptionalDouble emissivity,
+    Conversion conversion,
     String source,
     String status) {
+  /**
+   * Coefficients of ISO 10456 that convert the conductivity; recalled, whatever the status.
+   *
+   * @param temperaturePerK f_T for the conductivity of the entry, 1/K, if known
+   * @param moistureByVolume f_ψ, per m³/m³, if known
+   * @param moistureByMass f_u, per kg/kg, if known
+   */
+  public record Conversion(
+      OptionalDouble temperaturePerK,
+      OptionalDouble moistureByVolume,
+      OptionalDouble moistureByMass) {}
+
   /** Copies the names. */
   public Entry {
     otherNames = List.copyOf(otherNames);

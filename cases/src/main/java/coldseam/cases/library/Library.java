@@ -21,7 +21,7 @@ public final class Library {
   /** The table, read when first asked for. */
   private static final class Table {
     private static final String RESOURCE = "materials.tsv";
-    private static final int FIELDS = 9;
+    private static final int FIELDS = 12;
     private static final List<Entry> ENTRIES = List.copyOf(read());
     private static final Map<String, Entry> BY_NAME = byName();
 
@@ -50,7 +50,7 @@ public final class Library {
 
     private static Entry entry(List<String> fields) {
       if (fields.size() != FIELDS) {
-        throw new IllegalStateException("a line of " + RESOURCE + " has not nine fields");
+        throw new IllegalStateException("a line of " + RESOURCE + " has not twelve fields");
       }
       return new Entry(
           fields.get(0),
@@ -60,8 +60,9 @@ public final class Library {
           number(fields.get(4)),
           number(fields.get(5)),
           number(fields.get(6)),
-          fields.get(7),
-          fields.get(8));
+          new Entry.Conversion(number(fields.get(7)), number(fields.get(8)), number(fields.get(9))),
+          fields.get(10),
+          fields.get(11));
     }
 
     private static OptionalDouble number(String field) {

@@ -1,6 +1,7 @@
 package coldseam.cases.library;
 
 import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.within;
 
 import java.util.HashMap;
 import java.util.List;
@@ -13,7 +14,7 @@ import org.junit.jupiter.params.provider.CsvSource;
 class LibrarySourcesTest {
   @Test
   void every_entry_has_a_source_and_a_status() {
-    assertThat(Library.all()).hasSizeGreaterThan(100);
+    assertThat(Library.all()).hasSizeGreaterThanOrEqualTo(150);
     for (Entry entry : Library.all()) {
       assertThat(entry.source()).as(entry.name()).isNotBlank();
       assertThat(entry.status()).as(entry.name()).isIn("seen", "memory");
@@ -81,6 +82,46 @@ class LibrarySourcesTest {
   })
   void known_values(String name, double conductivity) {
     assertThat(Library.find(name).orElseThrow().conductivityWPerMK()).isEqualTo(conductivity);
+  }
+
+  /** R per inch and nominal R as labels and ASHRAE Fundamentals give them, from memory. */
+  @ParameterizedTest
+  @CsvSource({
+    "wood framing, 1, 1.25",
+    "XPS R-5 per inch, 1, 5",
+    "EPS 1 lb/ft3, 1, 3.85",
+    "EPS 1.5 lb/ft3, 1, 4.17",
+    "EPS 2 lb/ft3, 1, 4.35",
+    "R-11 batt, 3.5, 11",
+    "R-13 batt, 3.5, 13",
+    "R-15 batt, 3.5, 15",
+    "R-19 batt, 6.25, 19",
+    "R-21 batt, 5.5, 21",
+    "R-30 batt, 9.5, 30",
+    "R-38 batt, 12, 38",
+    "hardboard 50 lb/ft3, 1, 1.37",
+    "insulating sheathing board, 0.5, 1.32",
+    "face brick 130 lb/ft3, 1, 0.11",
+    "common brick 120 lb/ft3, 1, 0.20",
+    "drywall 40 lb/ft3, 0.5, 0.45"
+  })
+  void known_resistances_in_inches(String name, double inches, double rating) {
+    double si = inches * 0.0254 / Library.find(name).orElseThrow().conductivityWPerMK();
+    // 1 h·ft²·°F/Btu = 0.17611 m²·K/W; conductivities are rounded to three digits.
+    assertThat(si / 0.17611).isCloseTo(rating, within(0.025 * rating));
+  }
+
+  /** Coefficients of ISO 10456 by volume and by mass, from memory. */
+  @Test
+  void known_coefficients_of_conversion() {
+    assertThat(Library.find("EPS").orElseThrow().conversion().moistureByVolume()).hasValue(4);
+    assertThat(Library.find("XPS").orElseThrow().conversion().moistureByVolume()).hasValue(2.5);
+    assertThat(Library.find("cellular glass").orElseThrow().conversion().moistureByVolume())
+        .hasValue(0);
+    assertThat(Library.find("AAC 400").orElseThrow().conversion().moistureByMass()).hasValue(4);
+    assertThat(Library.find("mineral wool").orElseThrow().conversion().temperaturePerK())
+        .hasValue(0.0046);
+    assertThat(Library.find("EPS").orElseThrow().conversion().temperaturePerK()).isEmpty();
   }
 
   @Test
