@@ -301,6 +301,39 @@ class FramesTest {
         .anyMatch(w -> w.contains("add up to 270 mm") && w.contains("300 mm"));
   }
 
+  /** ISO 10077-2: b_f is the larger of both projections, and lengths are those of that side. */
+  @Test
+  void the_wider_side_counts() {
+    DrawnDetail d = new DrawnDetail();
+    d.box(room("indoors", 20), 0, 18, 300, 120);
+    d.box(outdoors(0), 0, -40, 300, 18);
+    d.polygon(WOOD, 0, 0, 100, 0, 100, 18, 80, 18, 80, 80, 0, 80);
+    d.infill(Role.PANEL, PANEL, 80, 18, 300, 18, 300, 46, 80, 46);
+    d.want(wanted(CornerRule.LIMITED, OptionalDouble.empty(), List.of()));
+    Result.Frame frame = d.solve(1e-3).frame().orElseThrow();
+    assertThat(frame.innerM()).isCloseTo(0.080, offset(1e-9));
+    assertThat(frame.outerM()).isCloseTo(0.100, offset(1e-9));
+    assertThat(frame.width().valueM()).isCloseTo(0.100, offset(1e-9));
+    assertThat(frame.panels().get(0).lengthM().getAsDouble()).isCloseTo(0.200, offset(1e-9));
+    assertThat(frame.width().from().orElseThrow().y()).isCloseTo(0, offset(1e-9));
+    assertThat(frame.width().to().orElseThrow().x()).isCloseTo(0.100, offset(1e-9));
+  }
+
+  @Test
+  void a_spacer_that_is_not_marked_is_told() {
+    DrawnDetail d = frame(CornerRule.LIMITED);
+    box(d, GLASS, 95, 18, 300, 22);
+    box(d, GLASS, 95, 42, 300, 46);
+    box(d, GAS, 95, 22, 300, 42);
+    assertThat(d.inspect().warnings()).noneMatch(w -> w.contains("not marked"));
+    d.box(material("spacer", 2), 98, 22, 104, 42);
+    assertThat(d.inspect().warnings())
+        .filteredOn(w -> w.contains("not marked"))
+        .singleElement()
+        .asString()
+        .startsWith("area ");
+  }
+
   @Test
   void a_frame_that_holds_nothing_is_a_mistake() {
     DrawnDetail d = frame(CornerRule.LIMITED).box(PANEL, 95, 18, 300, 46);
