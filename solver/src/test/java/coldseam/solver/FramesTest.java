@@ -197,6 +197,10 @@ class FramesTest {
     double slope =
         (more.psi().get(0).valueWPerMK().value() - base.psi().get(0).valueWPerMK().value())
             / Math.log(1.01);
+    // Euler: ψ is of degree 1 in all conductivities and films together, those of the panel
+    // included.
+    assertThat(base.psi().get(0).sensitivities().stream().mapToDouble(s -> s.slope()).sum())
+        .isCloseTo(base.psi().get(0).valueWPerMK().value(), offset(1e-4));
     assertThat(base.psi().get(0).sensitivities())
         .filteredOn(s -> s.of().equals("stainless steel"))
         .singleElement()
