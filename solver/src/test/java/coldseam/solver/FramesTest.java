@@ -187,9 +187,7 @@ class FramesTest {
     assertThat(result.psi().get(0).valueWPerMK().value()).isCloseTo(0.0523, offset(0.0001));
   }
 
-  /**
-   * Sensitivities of ψ_g against runs with another conductivity: of the spacer and of the frame.
-   */
+  /** Sensitivities of ψ_g against a run with another conductivity of the spacer. */
   @Test
   void what_the_glass_edge_hangs_on() {
     Result base = withGlazing(material("stainless steel", 17), 0.2).solve(1e-4);
