@@ -40,7 +40,7 @@ class SharesTest {
   private static final double STEP = 0.05;
 
   /** Accuracy of the details behind difference quotients: the middle of bounds is far better. */
-  private static final double FINE = 5e-5;
+  private static final double FINE = 2e-5;
 
   private static Material material(String name, double conductivity, double tolerance) {
     return new Material(

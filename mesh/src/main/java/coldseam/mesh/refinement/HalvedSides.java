@@ -10,6 +10,9 @@ import java.util.BitSet;
  * mesh, whatever the choice of newest vertices.
  */
 final class HalvedSides {
+  /** Halving cells in length may cut others across; after so many attempts that is let be. */
+  private static final int MOST_ATTEMPTS = 4;
+
   /** Triangles less high than this part of the mesh's extent are not split further. */
   private static final double SMALLEST = 1e-12;
 
@@ -34,12 +37,56 @@ final class HalvedSides {
     waiting = new boolean[mesh.triangleCount()];
   }
 
+  /**
+   * The sides to halve for those marked, and what these entail.
+   *
+   * @param mesh the mesh
+   * @param marked sides wanted halved: 3t + k for side k of triangle t
+   * @param cells the cells of its ladders
+   */
   static HalvedSides of(Mesh mesh, BitSet marked, LadderCells cells) {
+    HalvedSides result = closed(mesh, marked, cells);
+    result.number();
+    return result;
+  }
+
+  /**
+   * The same, but where long cells would be cut across, which leaves triangles as long as a cell
+   * and half as high, nothing else is done than to halve these cells in length.
+   *
+   * @param mesh the mesh
+   * @param marked sides wanted halved
+   * @param cells the cells of its ladders
+   */
+  static HalvedSides squaringFirst(Mesh mesh, BitSet marked, LadderCells cells) {
+    HalvedSides result = closed(mesh, marked, cells);
+    for (int attempt = 0; attempt < MOST_ATTEMPTS; attempt++) {
+      BitSet cut = result.cutCells();
+      if (cut.isEmpty()) {
+        break;
+      }
+      result = closed(mesh, cut, cells);
+    }
+    result.number();
+    return result;
+  }
+
+  private static HalvedSides closed(Mesh mesh, BitSet marked, LadderCells cells) {
     HalvedSides result = new HalvedSides(mesh, cells);
     result.mark(marked);
     result.close();
-    result.number();
     return result;
+  }
+
+  /** The cells that would be cut across, by a side of each. */
+  private BitSet cutCells() {
+    BitSet cut = new BitSet();
+    for (int t = 0; t < mesh.triangleCount(); t++) {
+      if (cells.partner(t) > t && isHalved(t, 0)) {
+        cut.set(3 * t);
+      }
+    }
+    return cut;
   }
 
   /** How many sides are halved. */
@@ -65,16 +112,14 @@ final class HalvedSides {
 
   private void mark(BitSet marked) {
     double smallest = SMALLEST * extent();
-    for (int t = marked.nextSetBit(0); t >= 0; t = marked.nextSetBit(t + 1)) {
-      if (height(t) < smallest) {
+    for (int h = marked.nextSetBit(0); h >= 0; h = marked.nextSetBit(h + 1)) {
+      if (height(h / 3) < smallest) {
         continue;
       }
-      if (cells.partner(t) != Mesh.NONE) {
-        halve(t, cells.longSide(t));
+      if (cells.partner(h / 3) != Mesh.NONE) {
+        halve(h / 3, cells.longSide(h / 3));
       } else {
-        halve(t, 0);
-        halve(t, 1);
-        halve(t, 2);
+        halve(h / 3, h % 3);
       }
     }
   }

@@ -39,7 +39,28 @@ public final class NewestVertexBisection {
    * @return the refined mesh, the old one if nothing is marked
    */
   public static Refined refine(Mesh mesh, BitSet marked) {
-    return split(mesh, marked, LadderCells.of(mesh));
+    BitSet sides = new BitSet(3 * mesh.triangleCount());
+    for (int t = marked.nextSetBit(0); t >= 0; t = marked.nextSetBit(t + 1)) {
+      sides.set(3 * t, 3 * t + 3);
+    }
+    LadderCells cells = LadderCells.of(mesh);
+    return split(mesh, HalvedSides.of(mesh, sides, cells), cells);
+  }
+
+  /**
+   * One of several rounds that lead to the halving of given sides. Where a side other than 0 of a
+   * triangle is halved, its side 0 is too; a cell of a ladder is halved in length, whichever of its
+   * sides is named. If a cell would be cut across by what goes on beyond its rungs, such cells
+   * alone are halved in length, and the sides are to be named again in the next round, on the mesh
+   * returned: so no triangles are left that are as long as a cell and half as high.
+   *
+   * @param mesh the mesh
+   * @param sides the sides to halve: 3t + k for side k of triangle t
+   * @return the refined mesh, the old one if no side is named
+   */
+  public static Refined refineSides(Mesh mesh, BitSet sides) {
+    LadderCells cells = LadderCells.of(mesh);
+    return split(mesh, HalvedSides.squaringFirst(mesh, sides, cells), cells);
   }
 
   /**
@@ -50,12 +71,12 @@ public final class NewestVertexBisection {
    */
   public static Refined refineAll(Mesh mesh) {
     BitSet all = new BitSet(mesh.triangleCount());
-    all.set(0, mesh.triangleCount());
-    return split(mesh, all, LadderCells.none(mesh));
+    all.set(0, 3 * mesh.triangleCount());
+    LadderCells cells = LadderCells.none(mesh);
+    return split(mesh, HalvedSides.of(mesh, all, cells), cells);
   }
 
-  private static Refined split(Mesh mesh, BitSet marked, LadderCells cells) {
-    HalvedSides halved = HalvedSides.of(mesh, marked, cells);
+  private static Refined split(Mesh mesh, HalvedSides halved, LadderCells cells) {
     if (halved.count() == 0) {
       int[] parent = new int[mesh.triangleCount()];
       for (int t = 0; t < parent.length; t++) {

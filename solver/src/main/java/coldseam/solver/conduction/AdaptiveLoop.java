@@ -1,13 +1,11 @@
 package coldseam.solver.conduction;
 
 import coldseam.mesh.partition.Partition;
-import coldseam.mesh.refinement.NewestVertexBisection;
 import coldseam.mesh.triangulation.Mesh;
 import coldseam.solver.detail.Accuracy;
 import coldseam.solver.detail.Conditions;
 import java.util.ArrayList;
 import java.util.Arrays;
-import java.util.BitSet;
 import java.util.List;
 import java.util.concurrent.CancellationException;
 import java.util.concurrent.CompletableFuture;
@@ -32,41 +30,26 @@ final class AdaptiveLoop {
   /** The same for the second film set, of which only temperatures are read. */
   private static final double PART_FOR_SURFACES = 0.5;
 
-  /** Temperature error that may be left, in parts of the temperature difference: 0.01 K in 25. */
-  private static final double TEMPERATURE = 4e-4;
-
-  /** The part of it that may be left beside the coldest and warmest points. */
-  private static final double PART_AT_EXTREMES = 0.4;
-
-  /** How many times as much is left inside where only surface temperatures are wanted. */
-  private static final double TIMES_INSIDE = 4;
-
-  /**
-   * Square of the excess given to the triangles beside the extremes found with other films: they
-   * will lie at the same places, and finding that out would take a pass.
-   */
-  private static final double EXCESS_AT_EARLIER_EXTREMES = 16;
-
   /** Systems with fewer unknowns are solved one after the other, see {@link #solveBothSides}. */
   private static final int SIDE_BY_SIDE_FROM = 2000;
-
-  /** The part of the indicators' sum that a pass splits at most. */
-  private static final double BULK = 0.9;
-
-  /** What splitting leaves of a triangle's indicator, cautiously. */
-  private static final double LEFT_BY_SPLITTING = 0.08;
 
   /** The error aimed at by a pass over what it may be. */
   private static final double AIM = 0.7;
 
+  /**
+   * A large reduction is not asked for in full: splitting spreads to triangles beside those chosen,
+   * which lowers their errors too (measured).
+   */
+  private static final double WITH_NEIGHBOURS = 0.72;
+
+  /** No pass aims at less than this part of the error: what is seen of it is still coarse. */
+  private static final double MOST_AT_ONCE = 0.04;
+
   /** If less than this part of a conductance is left for a U, this part counts. */
   private static final double LEAST_PART_LEFT = 0.01;
 
-  /** The coarsest mesh is refined until it has so many triangles. */
-  private static final int FEWEST_TRIANGLES = 64;
-
-  /** Temperatures in triangles smaller than this part of the section are left alone. */
-  private static final double SMALLEST = 1e-6;
+  /** Temperatures wait while energies are off by more than this many times what they may. */
+  private static final double ENERGY_FIRST = 4;
 
   /** The loop ends after this many passes whatever is reached. */
   private static final int MOST_PASSES = 60;
@@ -74,6 +57,7 @@ final class AdaptiveLoop {
   private final Partition partition;
   private final Conditions conditions;
   private final Conduction.Goal goal;
+  private final Corners corners;
   private final Progress progress;
   private final History history;
   private final boolean proving;
@@ -93,7 +77,7 @@ final class AdaptiveLoop {
   private boolean[][] meeting;
   private double[] sums;
   private double[] targets;
-  private SurfaceExtremes extremes;
+  private TemperatureErrors temperatures;
 
   /**
    * What one pass proved.
@@ -110,37 +94,16 @@ final class AdaptiveLoop {
       Conditions conditions,
       Conduction.Goal goal,
       Progress progress,
+      Corners corners,
       double earlierRatio,
       boolean proving) {
     this.partition = partition;
     this.proving = proving;
     this.conditions = conditions;
     this.goal = goal;
+    this.corners = corners;
     this.progress = progress;
     history = new History(earlierRatio);
-  }
-
-  /** A mesh to begin with, made from the coarsest one. */
-  static Mesh prepared(Mesh coarsest) {
-    Mesh mesh = Corners.squared(coarsest);
-    while (mesh.triangleCount() < FEWEST_TRIANGLES) {
-      BitSet all = new BitSet(mesh.triangleCount());
-      all.set(0, mesh.triangleCount());
-      mesh = NewestVertexBisection.refine(mesh, all).mesh();
-    }
-    return mesh;
-  }
-
-  /** The mesh of another film set's solution, finer beside its coldest and warmest points. */
-  static Mesh gradedToExtremes(FieldSolution other, double[] temperaturesC) {
-    Mesh mesh = other.mesh();
-    double[] nothing = new double[mesh.triangleCount()];
-    double[] excess = new double[mesh.triangleCount()];
-    BitSet beside = other.besideExtremes(temperaturesC);
-    for (int t = beside.nextSetBit(0); t >= 0; t = beside.nextSetBit(t + 1)) {
-      excess[t] = EXCESS_AT_EARLIER_EXTREMES;
-    }
-    return new Marking(mesh).refine(nothing, 0, excess);
   }
 
   /**
@@ -151,18 +114,17 @@ final class AdaptiveLoop {
    */
   FieldSolution run(Mesh start) {
     Mesh mesh = start;
-    Marking marking = new Marking(mesh);
+    Marking marking = new Marking(mesh, corners);
     Outlook outlook = new Outlook(goal.accuracy().mostUnknowns());
     while (true) {
       solve(mesh);
-      double[] excess = new double[mesh.triangleCount()];
       double energy = Math.max(energyRatio(), jumpRatio());
-      double reached = Math.max(energy, temperatureRatios(excess));
+      double reached = Math.max(energy, temperatureRatio());
       tell(reached);
       if (reached <= 1 || passes >= MOST_PASSES || !outlook.worthwhile(d.unknowns, reached)) {
         break;
       }
-      Mesh finer = marking.refine(wishes(), part(energy), excess);
+      Mesh finer = marking.refine(wishes(), part(energy), excess(energy));
       if (finer == mesh
           || finer.vertexCount() + finer.sideCount() > goal.accuracy().mostUnknowns()) {
         break;
@@ -170,7 +132,16 @@ final class AdaptiveLoop {
       mesh = finer;
     }
     return new FieldSolution(
-        partition, conditions, d, fields, matrix, bound, history, List.copyOf(proved), passes);
+        partition,
+        conditions,
+        corners,
+        d,
+        fields,
+        matrix,
+        bound,
+        history,
+        List.copyOf(proved),
+        passes);
   }
 
   private void solve(Mesh mesh) {
@@ -267,7 +238,8 @@ final class AdaptiveLoop {
     if (goal.psiAsked()) {
       absolute = Math.min(absolute, accuracy.psiWPerMK());
     }
-    double provedPart = temperaturesWanted() ? PART_WITH_TEMPERATURES : PART_OF_PROVED;
+    boolean everywhere = goal.temperatures() == Conduction.Temperatures.EVERYWHERE;
+    double provedPart = everywhere ? PART_WITH_TEMPERATURES : PART_OF_PROVED;
     double guessedPart = proving ? PART_OF_RELATIVE : PART_FOR_SURFACES;
     double relativePart = bound == null ? guessedPart : provedPart;
     double absolutePart = bound == null ? 3 * guessedPart : provedPart;
@@ -340,7 +312,7 @@ final class AdaptiveLoop {
   private double jumpWish(int field, int t) {
     double size = d.mesh.area(t) / d.extentSquared;
     double error = indicator.energy[field][t] / QuadraticElement.conductivity(d.couplings, t);
-    return size * error / (TEMPERATURE * TEMPERATURE);
+    return size * error / (TemperatureErrors.MAY * TemperatureErrors.MAY);
   }
 
   private double[] wishes() {
@@ -358,93 +330,43 @@ final class AdaptiveLoop {
     return wishes;
   }
 
-  /** The part to be split so that the last pass does not overshoot by much; 0 for none. */
+  /** The part of the error that the next pass aims at, so that the last does not overshoot. */
   private static double part(double ratio) {
-    return Math.min(BULK, Math.max(0, (1 - AIM / ratio) / (1 - LEFT_BY_SPLITTING)));
+    return ratio <= 1 ? 1 : Math.max(Math.pow(AIM / ratio, WITH_NEIGHBOURS), MOST_AT_ONCE);
   }
 
   /** Temperature errors over what they may be, inside and at the coldest and warmest points. */
-  private double temperatureRatios(double[] excess) {
+  private double temperatureRatio() {
+    TemperatureErrors before = temperatures;
     if (indicator == null) {
       return 0;
     }
-    SurfaceExtremes before = extremes;
-    extremes = new SurfaceExtremes(d, FieldSolution.nodal(d, fields, goal.temperaturesC()));
-    BitSet near = extremes.triangles(d);
-    double local = temperatureRatio(excess, near);
-    if (!temperaturesWanted() || before == null) {
-      return local;
-    }
-    double moved = surfaceRatio(before);
-    if (moved > 1) {
-      for (int t = near.nextSetBit(0); t >= 0; t = near.nextSetBit(t + 1)) {
-        excess[t] = Math.max(excess[t], moved);
+    double[][] amplitude = indicator.amplitude.clone();
+    for (int i = 0; i < d.spaces; i++) {
+      if (infinite(i)) {
+        amplitude[i] = null;
       }
     }
-    return Math.max(local, moved);
+    boolean everywhere = goal.temperatures() != Conduction.Temperatures.SURFACE;
+    temperatures =
+        new TemperatureErrors(d, corners, fields, amplitude, goal.temperaturesC(), everywhere);
+    if (!temperaturesWanted() || before == null) {
+      return temperatures.worst;
+    }
+    double move = temperatures.expectedToMove(before, goal.temperaturesC());
+    if (move > 1) {
+      temperatures.distrustExtremes(move);
+    }
+    return Math.max(temperatures.worst, move);
   }
 
   /**
-   * Local temperature errors over what they may be, in every field of finite energy and every
-   * triangle not too small to matter.
-   *
-   * @param excess takes the square of the error over what it may be, by triangle
-   * @param near the triangles beside the coldest and warmest points
+   * Of temperatures, square of the error over what it may be; nothing while energies are far off.
    */
-  private double temperatureRatio(double[] excess, BitSet near) {
-    double worst = 0;
-    double smallest = SMALLEST * SMALLEST * d.extentSquared;
-    BitSet strict = strict();
-    for (int f = 0; f <= d.spaces; f++) {
-      double[] amplitude = indicator.amplitude[f];
-      if (amplitude == null || f < d.spaces && infinite(f)) {
-        continue;
-      }
-      double may = TEMPERATURE * (f < d.spaces ? 1 : largest(fields[f]));
-      for (int t = 0; t < excess.length; t++) {
-        double part = near.get(t) ? PART_AT_EXTREMES : strict.get(t) ? 1 : TIMES_INSIDE;
-        double over = amplitude[t] / (part * may);
-        if (over > 0 && d.mesh.area(t) > smallest) {
-          worst = Math.max(worst, over);
-          excess[t] = Math.max(excess[t], over * over);
-        }
-      }
-    }
-    return worst;
-  }
-
-  /** The triangles whose temperatures are wanted. */
-  private BitSet strict() {
-    BitSet strict = new BitSet(d.mesh.triangleCount());
-    if (goal.temperatures() == Conduction.Temperatures.EVERYWHERE) {
-      strict.set(0, d.mesh.triangleCount());
-      return strict;
-    }
-    for (int s = 0; s < d.outline.count; s++) {
-      if (d.outline.kind[s] == Conditions.Kind.FILM) {
-        strict.set(d.outline.triangle[s]);
-      }
-    }
-    return strict;
-  }
-
-  private static double largest(double[] values) {
-    double largest = 0;
-    for (double v : values) {
-      largest = Math.max(largest, Math.abs(v));
-    }
-    return largest;
-  }
-
-  /** How much the coldest and warmest points moved since the pass before, over what they may. */
-  private double surfaceRatio(SurfaceExtremes before) {
-    double low = Double.POSITIVE_INFINITY;
-    double high = Double.NEGATIVE_INFINITY;
-    for (double temperature : goal.temperaturesC()) {
-      low = Math.min(low, temperature);
-      high = Math.max(high, temperature);
-    }
-    return high > low ? extremes.change(before) / (TEMPERATURE * (high - low)) : 0;
+  private double[] excess(double energy) {
+    return temperatures == null || energy > ENERGY_FIRST
+        ? new double[d.mesh.triangleCount()]
+        : temperatures.excess;
   }
 
   private void tell(double reached) {

@@ -72,12 +72,14 @@ public final class Conduction {
   public static Solution solve(
       Partition partition, Conditions conditions, Goal goal, Progress progress) {
     Mesh coarse = Triangulator.triangulate(partition, new Conducting(conditions), SizeField.NONE);
-    return new AdaptiveLoop(partition, conditions, goal, progress, Double.NaN, true)
-        .run(AdaptiveLoop.prepared(coarse));
+    Corners corners = Corners.of(coarse, conditions);
+    return new AdaptiveLoop(partition, conditions, goal, progress, corners, Double.NaN, true)
+        .run(StartMesh.of(coarse));
   }
 
   /**
-   * Solves another film set of a detail, beginning with the mesh that the first one ended with.
+   * Solves another film set of a detail, beginning with the mesh that the first one ended with,
+   * finer at its coldest and warmest points.
    *
    * @param first the solution with the first film set, from this class
    * @param conditions conditions on the same partition's edges
@@ -89,7 +91,13 @@ public final class Conduction {
       Solution first, Conditions conditions, Goal goal, Progress progress) {
     FieldSolution before = (FieldSolution) first;
     return new AdaptiveLoop(
-            first.partition(), conditions, goal, progress, before.errorRatio(), false)
-        .run(AdaptiveLoop.gradedToExtremes(before, goal.temperaturesC()));
+            first.partition(),
+            conditions,
+            goal,
+            progress,
+            before.corners(),
+            before.errorRatio(),
+            false)
+        .run(StartMesh.gradedToExtremes(before, goal.temperaturesC()));
   }
 }

@@ -1,97 +1,112 @@
 package coldseam.solver.conduction;
 
-import coldseam.mesh.refinement.NewestVertexBisection;
 import coldseam.mesh.triangulation.Mesh;
+import coldseam.solver.detail.Conditions;
 import java.util.Arrays;
-import java.util.BitSet;
 
-/** The vertices where different edges of the partition meet: where a field may be singular. */
+/**
+ * The vertices where different edges of the partition meet, and how singular a field may be there.
+ * Vertices keep their numbers when the mesh is refined, so what is known of the coarsest mesh holds
+ * for all.
+ */
 final class Corners {
-  /** Length over height up to which a triangle may stay at a corner. */
+  /** Length over height from which on a triangle is too slender to see the corner it touches. */
   private static final double SLENDER = 3.5;
 
-  /** A part that keeps more of its parent's slenderness than this is of no use. */
-  private static final double HARDLY_SQUARER = 0.8;
+  /** Triangles longer than so many of the shortest sides at a corner see it from far away. */
+  private static final double FAR = 3;
 
-  /** Enough rounds for a metre of the thinnest foil. */
-  private static final int MOST_ROUNDS = 24;
+  /** Exponent of the edge of a sheet, which is what the end of a thin part is from far away. */
+  private static final double SLIT = 0.5;
 
-  private Corners() {}
+  /** From the coarsest mesh, NaN where there is no corner. */
+  private final double[] exponents;
 
-  /** Finds them; vertices keep their numbers when the mesh is refined. */
-  static BitSet of(Mesh mesh) {
-    int[] edge = new int[mesh.vertexCount()];
-    Arrays.fill(edge, Mesh.NONE);
-    BitSet corners = new BitSet(edge.length);
-    for (int t = 0; t < mesh.triangleCount(); t++) {
-      for (int k = 0; k < 3; k++) {
-        int own = mesh.partitionEdge(t, k);
-        if (own == Mesh.NONE) {
-          continue;
-        }
-        for (int end = 1; end <= 2; end++) {
-          int v = mesh.vertex(t, (k + end) % 3);
-          if (edge[v] == Mesh.NONE) {
-            edge[v] = own;
-          } else if (edge[v] != own) {
-            corners.set(v);
-          }
-        }
-      }
-    }
-    return corners;
-  }
+  private final double[] shortestSides;
 
-  /** Whether a triangle has a corner among its vertices. */
-  static boolean touches(BitSet corners, Mesh mesh, int t) {
-    return corners.get(mesh.vertex(t, 0))
-        || corners.get(mesh.vertex(t, 1))
-        || corners.get(mesh.vertex(t, 2));
+  private Corners(double[] exponents, double[] shortestSides) {
+    this.exponents = exponents;
+    this.shortestSides = shortestSides;
   }
 
   /**
-   * Halves the cells of ladders in length where they touch a corner, until they are about square:
-   * near the ends and joints of a sheet the field varies in all directions, and splitting slender
-   * triangles in the ordinary way would keep them slender.
+   * Finds them.
    *
-   * @param coarse the mesh
-   * @return a mesh without slender triangles at corners but for those that cannot be made squarer
+   * @param coarsest the coarsest mesh
+   * @param conditions materials and what holds on the outline
    */
-  static Mesh squared(Mesh coarse) {
-    Mesh mesh = coarse;
-    BitSet corners = of(mesh);
-    BitSet hopeless = new BitSet();
-    for (int round = 0; round < MOST_ROUNDS; round++) {
-      BitSet marked = new BitSet(mesh.triangleCount());
-      for (int t = 0; t < mesh.triangleCount(); t++) {
-        marked.set(
-            t, touches(corners, mesh, t) && !hopeless.get(t) && slenderness(mesh, t) > SLENDER);
-      }
-      if (marked.isEmpty()) {
-        return mesh;
-      }
-      NewestVertexBisection.Refined next = NewestVertexBisection.refine(mesh, marked);
-      BitSet nextHopeless = new BitSet(next.mesh().triangleCount());
-      for (int t = 0; t < next.mesh().triangleCount(); t++) {
-        int parent = next.parent()[t];
-        nextHopeless.set(
-            t,
-            hopeless.get(parent)
-                || marked.get(parent)
-                    && slenderness(next.mesh(), t) > HARDLY_SQUARER * slenderness(mesh, parent));
-      }
-      mesh = next.mesh();
-      hopeless = nextHopeless;
+  static Corners of(Mesh coarsest, Conditions conditions) {
+    double[] shortest = new double[coarsest.vertexCount()];
+    Arrays.fill(shortest, Double.POSITIVE_INFINITY);
+    for (int s = 0; s < coarsest.sideCount(); s++) {
+      int a = coarsest.sideStart(s);
+      int b = coarsest.sideEnd(s);
+      double length = coarsest.sideLength(s);
+      shortest[a] = Math.min(shortest[a], length);
+      shortest[b] = Math.min(shortest[b], length);
     }
-    return mesh;
+    return new Corners(CornerExponents.of(coarsest, conditions), shortest);
+  }
+
+  /**
+   * The most singular corner of the drawing among those of a triangle.
+   *
+   * @param mesh the coarsest mesh or one refined from it
+   * @param t a triangle
+   * @return 0, 1 or 2; −1 if fields are regular at all three
+   */
+  int in(Mesh mesh, int t) {
+    int corner = -1;
+    double least = CornerExponents.REGULAR;
+    for (int k = 0; k < 3; k++) {
+      int v = mesh.vertex(t, k);
+      if (v < exponents.length && !Double.isNaN(exponents[v])) {
+        double own = exponent(mesh, t, k);
+        if (own < least) {
+          least = own;
+          corner = k;
+        }
+      }
+    }
+    return corner;
+  }
+
+  /**
+   * The α of r^α for the field in a triangle that touches a corner. A triangle longer than a thin
+   * part that ends there is wide sees the edge of a sheet; so does a slender one.
+   *
+   * @param mesh the mesh
+   * @param t the triangle
+   * @param k which of its vertices is the corner
+   */
+  double exponent(Mesh mesh, int t, int k) {
+    int v = mesh.vertex(t, k);
+    boolean far = longestSide(mesh, t) > FAR * shortestSides[v] || slenderness(mesh, t) > SLENDER;
+    return far ? Math.min(exponents[v], SLIT) : exponents[v];
   }
 
   /** Length over height of a triangle. */
   static double slenderness(Mesh mesh, int t) {
-    double longest = 0;
-    for (int k = 0; k < 3; k++) {
-      longest = Math.max(longest, mesh.sideLength(mesh.side(t, k)));
-    }
+    double longest = longestSide(mesh, t);
     return longest * longest / (2 * mesh.area(t));
+  }
+
+  /** The longest side of a triangle, m. */
+  static double longestSide(Mesh mesh, int t) {
+    return Math.max(
+        mesh.sideLength(mesh.side(t, 0)),
+        Math.max(mesh.sideLength(mesh.side(t, 1)), mesh.sideLength(mesh.side(t, 2))));
+  }
+
+  /** The angle of a triangle at one of its vertices, rad. */
+  static double angle(Mesh mesh, int t, int k) {
+    int v = mesh.vertex(t, k);
+    int a = mesh.vertex(t, (k + 1) % 3);
+    int b = mesh.vertex(t, (k + 2) % 3);
+    double ax = mesh.x(a) - mesh.x(v);
+    double ay = mesh.y(a) - mesh.y(v);
+    double bx = mesh.x(b) - mesh.x(v);
+    double by = mesh.y(b) - mesh.y(v);
+    return Math.atan2(ax * by - ay * bx, ax * bx + ay * by);
   }
 }

@@ -18,6 +18,7 @@ final class FieldSolution implements Solution {
 
   private final Partition partition;
   private final Conditions conditions;
+  private final Corners corners;
   private final Discretisation d;
   private final double[][] fields;
   private final ConductanceMatrix matrix;
@@ -32,6 +33,7 @@ final class FieldSolution implements Solution {
   FieldSolution(
       Partition partition,
       Conditions conditions,
+      Corners corners,
       Discretisation d,
       double[][] fields,
       ConductanceMatrix matrix,
@@ -41,6 +43,7 @@ final class FieldSolution implements Solution {
       int passes) {
     this.partition = partition;
     this.conditions = conditions;
+    this.corners = corners;
     this.d = d;
     this.fields = fields;
     this.matrix = matrix;
@@ -70,6 +73,11 @@ final class FieldSolution implements Solution {
   /** The triangles beside the coldest and warmest surface points at these temperatures, °C. */
   BitSet besideExtremes(double[] temperaturesC) {
     return new SurfaceExtremes(d, nodal(d, fields, temperaturesC)).triangles(d);
+  }
+
+  /** The corners of the drawing. */
+  Corners corners() {
+    return corners;
   }
 
   /** What each pass proved, in order. */

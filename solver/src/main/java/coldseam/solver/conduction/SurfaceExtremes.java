@@ -55,6 +55,40 @@ final class SurfaceExtremes {
     }
   }
 
+  /**
+   * Whether a side with a film would hold the coldest or warmest point of its space, were it colder
+   * or warmer by a margin.
+   */
+  boolean mayBeExceeded(Discretisation d, double[] nodalC, int s, double marginK) {
+    Outline o = d.outline;
+    double a = nodalC[o.start[s]];
+    double m = nodalC[o.middle[s]];
+    double b = nodalC[o.end[s]];
+    return Math.min(Math.min(a, b), m) - marginK < coldestC[o.space[s]]
+        || Math.max(Math.max(a, b), m) + marginK > warmestC[o.space[s]];
+  }
+
+  /** Distance of a triangle's centre from the nearest end of a side with an extreme point, m. */
+  double distance(Discretisation d, int t) {
+    double x = d.centreX[t] / 3;
+    double y = d.centreY[t] / 3;
+    double nearest = Double.POSITIVE_INFINITY;
+    for (int i = 0; i < coldestSide.length; i++) {
+      if (coldestSide[i] >= 0) {
+        nearest = Math.min(nearest, distance(d, coldestSide[i], x, y));
+        nearest = Math.min(nearest, distance(d, warmestSide[i], x, y));
+      }
+    }
+    return nearest;
+  }
+
+  private static double distance(Discretisation d, int side, double x, double y) {
+    int a = d.outline.start[side];
+    int b = d.outline.end[side];
+    return Math.min(
+        Math.hypot(d.mesh.x(a) - x, d.mesh.y(a) - y), Math.hypot(d.mesh.x(b) - x, d.mesh.y(b) - y));
+  }
+
   /** Value of the parabola where it turns between its ends, else its middle. */
   private static double turningPoint(double a, double m, double b) {
     double slope = (b - a) / 2;

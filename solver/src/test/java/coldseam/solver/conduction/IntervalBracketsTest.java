@@ -7,6 +7,7 @@ import static org.assertj.core.api.Assertions.assertThat;
 
 import coldseam.solver.detail.Material;
 import coldseam.solver.detail.Space;
+import java.util.ArrayList;
 import java.util.List;
 import org.apache.commons.math3.stat.regression.SimpleRegression;
 import org.junit.jupiter.api.Test;
@@ -30,9 +31,28 @@ class IntervalBracketsTest {
     return ((FieldSolution) sketch.solve()).proved();
   }
 
+  /**
+   * Histories to the accuracy asked for and to coarser ones: a run takes but two or three passes.
+   */
+  private static List<List<AdaptiveLoop.Proved>> histories(Sketch sketch, double... times) {
+    double finest = sketch.goal().accuracy().couplingRelative();
+    List<List<AdaptiveLoop.Proved>> histories = new ArrayList<>();
+    for (double each : times) {
+      histories.add(history(sketch.accuracy(each * finest)));
+    }
+    return histories;
+  }
+
   private static void holds(Sketch sketch, double exact, double lastPlace) {
-    List<AdaptiveLoop.Proved> history = history(sketch);
-    assertThat(history).hasSizeGreaterThan(2);
+    int meshes = 0;
+    for (List<AdaptiveLoop.Proved> history : histories(sketch, 100, 10, 1)) {
+      holds(history, exact, lastPlace);
+      meshes += history.size();
+    }
+    assertThat(meshes).isGreaterThan(4);
+  }
+
+  private static void holds(List<AdaptiveLoop.Proved> history, double exact, double lastPlace) {
     double up = Double.POSITIVE_INFINITY;
     double lo = Double.NEGATIVE_INFINITY;
     for (AdaptiveLoop.Proved pass : history) {
@@ -259,7 +279,10 @@ class IntervalBracketsTest {
     }
   }
 
-  /** Gap against unknowns over the last decade: order 2, singular corners or not. */
+  /**
+   * Gap against unknowns over the last decade, of runs to several accuracies: order 2, singular
+   * corners or not.
+   */
   @Test
   void the_gap_closes_at_the_best_rate() {
     assertThat(slope(corner(1, 1, 5, 5, material("stone", 1)).accuracy(1e-6)))
@@ -271,15 +294,18 @@ class IntervalBracketsTest {
   }
 
   private static double slope(Sketch sketch) {
-    List<AdaptiveLoop.Proved> history = history(sketch);
-    int most = history.get(history.size() - 1).unknowns();
+    List<AdaptiveLoop.Proved> meshes = new ArrayList<>();
+    for (List<AdaptiveLoop.Proved> history : histories(sketch, 81, 27, 9, 3, 1)) {
+      meshes.addAll(history.subList(1, history.size()));
+    }
+    int most = meshes.get(meshes.size() - 1).unknowns();
     SimpleRegression line = new SimpleRegression();
-    for (AdaptiveLoop.Proved pass : history) {
-      if (pass.unknowns() >= most / 10.0) {
-        line.addData(Math.log(pass.unknowns()), Math.log(pass.gap()[0][0]));
+    for (AdaptiveLoop.Proved mesh : meshes) {
+      if (mesh.unknowns() >= most / 10.0) {
+        line.addData(Math.log(mesh.unknowns()), Math.log(mesh.gap()[0][0]));
       }
     }
-    assertThat(line.getN()).isGreaterThan(2);
+    assertThat(line.getN()).isGreaterThan(4);
     return line.getSlope();
   }
 }
