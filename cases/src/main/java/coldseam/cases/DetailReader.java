@@ -1,6 +1,7 @@
 package coldseam.cases;
 
 import coldseam.solver.detail.Accuracy;
+import coldseam.solver.detail.AirCavity;
 import coldseam.solver.detail.Area;
 import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.Geometry;
@@ -60,7 +61,12 @@ final class DetailReader {
     if (spacesNode.isPresent()) {
       spaces.read(spacesNode.get(), materials.materials());
     }
-    Fills fills = new Fills(pass, materials, spaces);
+    CavityReader cavities = new CavityReader(pass, spaces);
+    Node air = top.nodeOrNull("cavities");
+    if (air != null) {
+      cavities.read(air, materials.materials());
+    }
+    Fills fills = new Fills(pass, materials, spaces, cavities);
     if (variant.isPresent()) {
       variant.get().replaceFills(fills);
     }
@@ -68,6 +74,9 @@ final class DetailReader {
     if (variant.isPresent()) {
       variant.get().reportNotReplaced(problems, fills);
     }
+    Node uncoveredNode = top.nodeOrNull("uncovered");
+    Optional<AirCavity> uncovered =
+        uncoveredNode == null ? Optional.empty() : cavities.uncovered(uncoveredNode);
     StretchReader stretches = new StretchReader(pass, spaces);
     Node node = top.nodeOrNull("stretches");
     if (node != null) {
@@ -96,7 +105,7 @@ final class DetailReader {
             title,
             Geometry.PLANE,
             view,
-            areas,
+            uncovered.isPresent() ? Uncovered.under(areas, uncovered.get()) : areas,
             spaces.good(),
             stretches.stretches(),
             flanks.flanks(),

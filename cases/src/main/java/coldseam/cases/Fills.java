@@ -2,6 +2,7 @@ package coldseam.cases;
 
 import coldseam.cases.library.Entry;
 import coldseam.cases.library.Library;
+import coldseam.solver.detail.AirCavity;
 import coldseam.solver.detail.Assumption;
 import coldseam.solver.detail.Fill;
 import coldseam.solver.detail.Hollow;
@@ -16,23 +17,25 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 
-/** What names mean as fills: materials of the case, spaces, {@code hollow}, the library. */
+/** What names mean as fills: materials of the case, spaces, air, {@code hollow}, the library. */
 final class Fills {
   static final String HOLLOW = "hollow";
 
   private final Pass pass;
   private final MaterialReader materials;
   private final SpaceReader spaces;
+  private final CavityReader cavities;
   private final Map<String, Node.Scalar> replacements = new LinkedHashMap<>();
   private final Set<String> replaced = new HashSet<>();
   private final Set<String> assumed = new HashSet<>();
   private final Map<String, Optional<Fill>> known = new HashMap<>();
   private final Map<String, Material> turned = new HashMap<>();
 
-  Fills(Pass pass, MaterialReader materials, SpaceReader spaces) {
+  Fills(Pass pass, MaterialReader materials, SpaceReader spaces, CavityReader cavities) {
     this.pass = pass;
     this.materials = materials;
     this.spaces = spaces;
+    this.cavities = cavities;
   }
 
   /** From now on, shapes of that name or fill are filled by another. */
@@ -90,6 +93,10 @@ final class Fills {
     if (space != null) {
       return space.isPresent() ? Optional.of(space.get()) : Optional.empty();
     }
+    Optional<AirCavity> air = cavities.cavities().get(name);
+    if (air != null) {
+      return air.isPresent() ? Optional.of(air.get()) : Optional.empty();
+    }
     Optional<Material> material = materials.materials().get(name);
     if (material != null) {
       Optional<Entry> entry = materials.libraryEntry(name);
@@ -111,7 +118,10 @@ final class Fills {
     }
     // The library's own name, so that two ways to write it are one material.
     String own = entry.get().name();
-    boolean taken = materials.materials().containsKey(own) || spaces.spaces().containsKey(own);
+    boolean taken =
+        materials.materials().containsKey(own)
+            || spaces.spaces().containsKey(own)
+            || cavities.cavities().containsKey(own);
     String called = taken ? name : own;
     assume(called, entry.get());
     return Optional.of(MaterialReader.of(called, entry.get()));
@@ -130,6 +140,7 @@ final class Fills {
   private void reportUnknown(Node node, String name) {
     List<String> valid = new ArrayList<>(materials.materials().keySet());
     valid.addAll(spaces.spaces().keySet());
+    valid.addAll(cavities.cavities().keySet());
     valid.add(HOLLOW);
     String right = Problems.suggestion(name, valid);
     if (name.equals(GlazingReader.GAP)) {

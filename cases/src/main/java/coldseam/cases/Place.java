@@ -29,6 +29,8 @@ enum Place {
   HUMIDITY(Dimension.SHARE, "", 0, 1, "0 to 100 %, e.g. `50 %`"),
   /** ε. */
   EMISSIVITY(Dimension.BARE, "", 0, 1, "0 to 1, e.g. `0.9`"),
+  /** Openings of an air layer, mm² per metre or per m². */
+  OPENINGS(Dimension.BARE, "", 0, 1e9, "mm2 per metre of length, 0 or more, e.g. `800`"),
   /** μ. */
   VAPOUR_RESISTANCE(Dimension.BARE, "", 0, 1e9, "a number, 0 or more, e.g. `60`"),
   /** By what part of itself a conductivity may be off. */

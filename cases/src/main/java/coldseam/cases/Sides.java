@@ -4,6 +4,7 @@ import coldseam.mesh.partition.LabelledArea;
 import coldseam.mesh.partition.Partition;
 import coldseam.mesh.plane.Point;
 import coldseam.mesh.plane.Resolution;
+import coldseam.solver.detail.AirCavity;
 import coldseam.solver.detail.Area;
 import coldseam.solver.detail.Fill;
 import coldseam.solver.detail.Material;
@@ -46,7 +47,8 @@ final class Sides {
   }
 
   static boolean conducts(Fill fill) {
-    return fill instanceof Material material && material.conductivityWPerMK() > 0;
+    return fill instanceof AirCavity
+        || fill instanceof Material material && material.conductivityWPerMK() > 0;
   }
 
   /** Whether a later area that does not conduct might hide part of a conducting one. */

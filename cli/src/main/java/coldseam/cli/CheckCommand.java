@@ -92,8 +92,8 @@ final class CheckCommand implements Command {
               detail -> {
                 Solver.Inspection inspection = Solver.inspect(detail);
                 return typed.has(JSON)
-                    ? Sheet.understoodJson(subject, inspection, detail) + "\n"
-                    : Sheet.understood(subject, inspection, detail, here.outInk());
+                    ? Sheet.understoodJson(subject, inspection) + "\n"
+                    : Sheet.understood(subject, inspection, here.outInk());
               });
       if (variant.equals(asked)) {
         shown = text;

@@ -2,6 +2,8 @@ package coldseam.solver;
 
 import coldseam.mesh.partition.Partition;
 import coldseam.mesh.plane.Resolution;
+import coldseam.solver.air.Cavities;
+import coldseam.solver.air.Cavity;
 import coldseam.solver.conduction.Conduction;
 import coldseam.solver.conduction.Progress;
 import coldseam.solver.conduction.Solution;
@@ -35,8 +37,10 @@ public final class Solver {
   private Solver() {}
 
   /**
-   * What is understood of a detail before anything is solved.
+   * What is understood of a detail before anything is solved; conductivities of cavities are those
+   * of a coarse mesh.
    *
+   * @param detail the detail as it is to be solved: its fills are the labels of the partition
    * @param partition the resolved section
    * @param heatLoss conditions with the films for heat loss
    * @param surface conditions with the films for surface temperatures
@@ -45,6 +49,7 @@ public final class Solver {
    * @param warnings sentences, each with its figures
    */
   public record Inspection(
+      Detail detail,
       Partition partition,
       Conditions heatLoss,
       Conditions surface,
@@ -62,6 +67,7 @@ public final class Solver {
   public static Inspection inspect(Detail detail) {
     Resolved resolved = Resolved.of(detail);
     return new Inspection(
+        resolved.plan().detail(),
         resolved.partition(),
         resolved.heatLoss(),
         resolved.surface(),
@@ -82,13 +88,19 @@ public final class Solver {
   public static Result solve(Detail detail, Accuracy accuracy, Progress progress) {
     StageTimes times = new StageTimes();
     Resolved resolved = Resolved.of(detail);
-    Plan plan = resolved.plan();
     times.ended("resolve");
 
-    boolean surfaceNeeded = plan.surfaceNeeded();
-    boolean shared = surfaceNeeded && plan.sameFilms();
-    Solution heatLoss =
-        resolved.solveHeatLoss(accuracy, plan.heatLossTemperatures(shared), progress);
+    boolean surfaceNeeded = resolved.plan().surfaceNeeded();
+    boolean shared = surfaceNeeded && resolved.plan().sameFilms();
+    Agreed agreed =
+        resolved.solve(
+            resolved.goal(
+                accuracy,
+                resolved.plan().psiWanted(),
+                resolved.plan().heatLossTemperatures(shared)),
+            progress);
+    Plan plan = agreed.resolved().plan();
+    Solution heatLoss = agreed.solution();
     Map<Subtraction.OfDetail, OtherCoupling> others = solveOthers(resolved, accuracy, progress);
     times.ended("heat loss");
 
@@ -100,7 +112,7 @@ public final class Solver {
           Optional.of(
               Conduction.solveNext(
                   heatLoss,
-                  resolved.surface(),
+                  agreed.resolved().surfaceAgreeing(accuracy, heatLoss),
                   new Conduction.Goal(
                       accuracy,
                       false,
@@ -111,7 +123,9 @@ public final class Solver {
     }
     times.ended("surface temperatures");
 
-    return plan.result(heatLoss, surface, others, times);
+    List<Cavity> cavities =
+        agreed.cavities().isPresent() ? agreed.cavities().get().cavities() : List.of();
+    return plan.result(heatLoss, surface, others, cavities, times);
   }
 
   private static Map<Subtraction.OfDetail, OtherCoupling> solveOthers(
@@ -120,10 +134,11 @@ public final class Solver {
     for (Map.Entry<Subtraction.OfDetail, Resolved> entry : resolved.others().entrySet()) {
       Subtraction.OfDetail of = entry.getKey();
       Resolved other = entry.getValue();
-      Conduction.Goal goal = other.goal(accuracy, true, Conduction.Temperatures.NONE);
-      Solution solution = Conduction.solve(other.partition(), other.heatLoss(), goal, progress);
+      Agreed agreed =
+          other.solve(other.goal(accuracy, true, Conduction.Temperatures.NONE), progress);
       try {
-        couplings.put(of, other.plan().coupling(solution, of.warm(), of.cold()));
+        couplings.put(
+            of, agreed.resolved().plan().coupling(agreed.solution(), of.warm(), of.cold()));
       } catch (DetailException e) {
         throw nested(of, e);
       }
@@ -167,13 +182,23 @@ public final class Solver {
     }
   }
 
+  /**
+   * A detail whose cavities agree with its solution, as far as that could be reached.
+   *
+   * @param cavities as the solution shows them
+   */
+  private record Agreed(Resolved resolved, Solution solution, Optional<Cavities> cavities) {}
+
   /** A detail with its partition, conditions and plan, and the details it subtracts. */
   private record Resolved(
+      Detail drawn,
       Partition partition,
       Conditions heatLoss,
       Conditions surface,
       Plan plan,
-      Map<Subtraction.OfDetail, Resolved> others) {
+      Map<Subtraction.OfDetail, Resolved> others,
+      Optional<Cavities> cavities,
+      Optional<Solution> start) {
     static Resolved of(Detail detail) {
       if (detail.geometry() != Geometry.PLANE) {
         throw new DetailException(
@@ -181,21 +206,46 @@ public final class Solver {
                 new Fault("section", "", "only plane sections can be solved", Optional.empty())));
       }
       Detail ready = FrameDetail.prepared(detail);
-      Partition first = partition(ready);
-      Detail placed = CornerZones.placed(ready, first);
-      return of(placed, placed == ready ? first : partition(placed));
+      Optional<Cavities> air = Cavities.of(ready);
+      Detail laid = air.isPresent() ? air.get().detail() : ready;
+      Partition first = air.isPresent() ? air.get().partition() : partition(laid);
+      Detail placed = CornerZones.placed(laid, first);
+      Partition partition = placed == laid ? first : partition(placed);
+      Resolved resolved = of(placed, placed, partition, others(placed), air, Optional.empty());
+      if (air.isEmpty()) {
+        return resolved;
+      }
+      Solution coarse = Conduction.solveCoarsely(partition, resolved.heatLoss);
+      Cavities directed = air.get().after(coarse, Cavities.TOLERANCE, resolved.plan::temperatures);
+      return resolved.settled(directed, coarse, Cavities.TOLERANCE);
     }
 
-    private static Resolved of(Detail detail, Partition partition) {
+    /** The same with conductivities of cavities that agree with the temperatures on a mesh. */
+    private Resolved settled(Cavities from, Solution near, double tolerance) {
+      return with(from.settledNear(near, heatLoss, tolerance, plan::temperatures), near);
+    }
+
+    /** The same with other conductivities of cavities, to be solved from a mesh on. */
+    private Resolved with(Cavities settled, Solution from) {
+      return of(
+          drawn, settled.in(drawn), partition, others, Optional.of(settled), Optional.of(from));
+    }
+
+    private static Resolved of(
+        Detail drawn,
+        Detail detail,
+        Partition partition,
+        Map<Subtraction.OfDetail, Resolved> others,
+        Optional<Cavities> cavities,
+        Optional<Solution> start) {
       Conditions heatLoss = Conditions.of(detail, partition, FilmSet.HEAT_LOSS);
       Conditions surface = Conditions.of(detail, partition, FilmSet.SURFACE);
-      Map<Subtraction.OfDetail, Resolved> others = others(detail);
       Map<Subtraction.OfDetail, Plan> plans = new LinkedHashMap<>();
       for (Map.Entry<Subtraction.OfDetail, Resolved> other : others.entrySet()) {
         plans.put(other.getKey(), other.getValue().plan());
       }
       Plan plan = Plan.of(detail, partition, heatLoss, surface, plans);
-      return new Resolved(partition, heatLoss, surface, plan, others);
+      return new Resolved(drawn, partition, heatLoss, surface, plan, others, cavities, start);
     }
 
     private static Map<Subtraction.OfDetail, Resolved> others(Detail detail) {
@@ -234,10 +284,47 @@ public final class Solver {
       }
     }
 
-    Solution solveHeatLoss(
-        Accuracy accuracy, Conduction.Temperatures temperatures, Progress progress) {
-      Conduction.Goal goal = goal(accuracy, plan.psiWanted(), temperatures);
-      return Conduction.solve(partition, heatLoss, goal, progress);
+    /**
+     * Solves with the films for heat loss, and again as long as the conductivities of cavities do
+     * not agree with the temperatures.
+     */
+    Agreed solve(Conduction.Goal goal, Progress progress) {
+      Solution solution =
+          start.isPresent()
+              ? Conduction.solveFrom(start.get(), heatLoss, goal, progress)
+              : Conduction.solve(partition, heatLoss, goal, progress);
+      if (cavities.isEmpty()) {
+        return new Agreed(this, solution, cavities);
+      }
+      double tolerance = Cavities.tolerance(goal.accuracy().couplingRelative());
+      Cavities after = cavities.get().after(solution, tolerance, plan::temperatures);
+      if (after.settled()) {
+        Resolved resolved = after.found() ? with(after, solution) : this;
+        return new Agreed(resolved, solution, Optional.of(after));
+      }
+      if (after.passes() >= Cavities.MOST_PASSES) {
+        return new Agreed(this, Conduction.unproved(solution, after.unsettled()), cavities);
+      }
+      return settled(after, solution, tolerance).solve(goal, progress);
+    }
+
+    /**
+     * Conditions for surface temperatures, with conductivities of cavities that agree with them.
+     */
+    Conditions surfaceAgreeing(Accuracy accuracy, Solution heatLossSolution) {
+      if (cavities.isEmpty() || !cavities.get().found()) {
+        return surface;
+      }
+      double[] temperatures = plan.temperatures(heatLossSolution);
+      return cavities
+          .get()
+          .restarted()
+          .settledNear(
+              heatLossSolution,
+              surface,
+              Cavities.tolerance(accuracy.couplingRelative()),
+              solution -> temperatures.clone())
+          .in(surface);
     }
 
     Conduction.Goal goal(Accuracy accuracy, boolean psi, Conduction.Temperatures temperatures) {

@@ -7,6 +7,7 @@ import coldseam.solver.detail.Conditions;
 import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.Fill;
 import coldseam.solver.detail.Space;
+import coldseam.solver.detail.VentilatedAir;
 import coldseam.solver.result.Result;
 import java.util.ArrayList;
 import java.util.Comparator;
@@ -105,7 +106,7 @@ final class DrawnSection {
       }
       int label = partition.faceLabel(face);
       faces.add(new Face(label, rings, 2 * partition.faceArea(face) / perimeter));
-      if (!(fills.get(label) instanceof Space)) {
+      if (solid(label)) {
         bounds = bounds.with(rings.get(0).bounds());
       }
     }
@@ -244,7 +245,9 @@ final class DrawnSection {
 
   /** Whether a label's fill is drawn as something solid or hollow, not as open air. */
   boolean solid(int label) {
-    return label != Partition.NONE && !(fills.get(label) instanceof Space);
+    return label != Partition.NONE
+        && !(fills.get(label) instanceof Space)
+        && !(fills.get(label) instanceof VentilatedAir);
   }
 
   /** Whether heat is conducted in a fill. */

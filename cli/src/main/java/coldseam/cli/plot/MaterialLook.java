@@ -3,7 +3,6 @@ package coldseam.cli.plot;
 import coldseam.solver.detail.Fill;
 import coldseam.solver.detail.Hollow;
 import coldseam.solver.detail.Material;
-import coldseam.solver.detail.Space;
 import java.awt.Color;
 import java.util.ArrayList;
 import java.util.EnumMap;
@@ -93,7 +92,7 @@ record MaterialLook(Hatch hatch, Color tone, Color line, double turn, double pit
     if (fill instanceof Hollow) {
       return Kind.HOLLOW;
     }
-    if (fill instanceof Space) {
+    if (!(fill instanceof Material)) {
       return Kind.AIR;
     }
     Material material = (Material) fill;

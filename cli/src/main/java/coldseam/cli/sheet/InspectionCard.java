@@ -22,10 +22,10 @@ final class InspectionCard {
   private final Units units;
   private final StringBuilder text = new StringBuilder();
 
-  InspectionCard(Subject subject, Solver.Inspection inspection, Detail detail, Ink ink) {
+  InspectionCard(Subject subject, Solver.Inspection inspection, Ink ink) {
     this.subject = subject;
     this.inspection = inspection;
-    this.detail = detail;
+    this.detail = inspection.detail();
     this.ink = ink;
     this.units = Units.of(subject);
   }

@@ -11,6 +11,10 @@ import java.util.Locale;
 
 /** What is understood of a case, as one JSON object. */
 record JsonInspection(Subject subject, Solver.Inspection inspection, Detail detail) {
+  JsonInspection(Subject subject, Solver.Inspection inspection) {
+    this(subject, inspection, inspection.detail());
+  }
+
   String text() {
     Json json = Json.onOneLine().object();
     JsonResults.head(json, subject);

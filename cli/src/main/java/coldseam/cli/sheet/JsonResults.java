@@ -38,6 +38,7 @@ record JsonResults(Subject subject, Result result) {
     weights(json);
     shares(json);
     flanks(json, result.flanks());
+    new CavitySection(result.cavities()).write(json);
     assumptions(json, result.assumptions());
     json.member("warnings", result.warnings());
     json.object("balance")
@@ -91,6 +92,9 @@ record JsonResults(Subject subject, Result result) {
           .member("estimatedHalfWidth_W_per_mK", halfWidth)
           .member("estimatedRelative", relative)
           .member("reason", reason);
+    }
+    if (!result.cavities().isEmpty()) {
+      json.member("holdsFor", "the conductivities of air cavities as listed");
     }
     json.member("reached", new Reached(subject.accuracy()).by(result))
         .member("largestDisplacement_mm", result.largestDisplacementM() * MM)

@@ -2,7 +2,6 @@ package coldseam.cli.sheet;
 
 import coldseam.cli.text.Ink;
 import coldseam.solver.Solver;
-import coldseam.solver.detail.Detail;
 import coldseam.solver.result.Result;
 import java.util.List;
 
@@ -52,13 +51,11 @@ public final class Sheet {
    *
    * @param subject what it is about
    * @param inspection what was understood
-   * @param detail the detail it was understood of
    * @param ink colours, or none
    * @return lines, each ended by a line feed
    */
-  public static String understood(
-      Subject subject, Solver.Inspection inspection, Detail detail, Ink ink) {
-    return new InspectionCard(subject, inspection, detail, ink).text();
+  public static String understood(Subject subject, Solver.Inspection inspection, Ink ink) {
+    return new InspectionCard(subject, inspection, ink).text();
   }
 
   /**
@@ -66,12 +63,10 @@ public final class Sheet {
    *
    * @param subject what it is about
    * @param inspection what was understood
-   * @param detail the detail it was understood of
    * @return the object on one line, without a line feed at the end
    */
-  public static String understoodJson(
-      Subject subject, Solver.Inspection inspection, Detail detail) {
-    return new JsonInspection(subject, inspection, detail).text();
+  public static String understoodJson(Subject subject, Solver.Inspection inspection) {
+    return new JsonInspection(subject, inspection).text();
   }
 
   /**

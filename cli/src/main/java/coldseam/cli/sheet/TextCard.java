@@ -47,7 +47,11 @@ final class TextCard {
     new ShareSection(result, units, ink).write(text);
     new SurfaceSection(result, units, ink).write(text);
     flanks(text, result.flanks(), ink);
-    assumptions(text, result.assumptions(), names(result.flanks()), ink);
+    CavitySection cavities = new CavitySection(result.cavities());
+    cavities.write(text, units, ink);
+    List<String> shown = names(result.flanks());
+    shown.addAll(cavities.names());
+    assumptions(text, result.assumptions(), shown, ink);
     warnings(text, result.warnings(), ink);
     foot();
     return text.toString();
@@ -401,8 +405,8 @@ final class TextCard {
   /**
    * What was assumed, under its source.
    *
-   * @param shown flanks whose layers and lengths are on the sheet already: only where they come
-   *     from is said of them
+   * @param shown flanks and cavities that are on the sheet already: only where they come from is
+   *     said of them
    */
   static void assumptions(
       StringBuilder text, List<Assumption> assumptions, List<String> shown, Ink ink) {
@@ -428,8 +432,11 @@ final class TextCard {
   }
 
   private static String line(Assumption assumption, List<String> shown) {
-    for (String flank : shown) {
-      String end = " of flank '" + flank + "'";
+    for (String name : shown) {
+      if (assumption.what().startsWith(name + " at (")) {
+        return "cavities, as above";
+      }
+      String end = " of flank '" + name + "'";
       if (assumption.what().endsWith(end)) {
         int stem = assumption.what().length() - end.length();
         return assumption.what().substring(0, stem) + " of flanks, as above";

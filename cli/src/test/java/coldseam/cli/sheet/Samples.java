@@ -1,9 +1,15 @@
 package coldseam.cli.sheet;
 
 import coldseam.mesh.plane.Point;
+import coldseam.solver.air.Cavity;
+import coldseam.solver.cavity.CavityBox;
+import coldseam.solver.cavity.Emissivities;
+import coldseam.solver.cavity.RadiationForm;
+import coldseam.solver.cavity.Ventilation;
 import coldseam.solver.conduction.Certificate;
 import coldseam.solver.conduction.Quantity;
 import coldseam.solver.detail.Accuracy;
+import coldseam.solver.detail.AirCavity;
 import coldseam.solver.detail.Assumption;
 import coldseam.solver.detail.Bracket;
 import coldseam.solver.detail.Detail;
@@ -177,6 +183,38 @@ final class Samples {
                 Map.of(
                     DimensionSystem.EXTERNAL,
                     new Result.Length(1.5, Optional.empty(), Optional.empty(), "outer face")))),
+        List.of(
+            new Cavity(
+                "cavity 1",
+                "air",
+                new Point(0.045, 0.0421),
+                324e-6,
+                AirCavity.Rule.FRAME,
+                Ventilation.SLIGHTLY_VENTILATED,
+                0.005,
+                Optional.of("outdoors"),
+                Optional.of(
+                    new Cavity.Counted(
+                        new CavityBox(0.054, 0.006),
+                        new Point(0, -1),
+                        new Emissivities(0.9, 0.25),
+                        0.205031,
+                        RadiationForm.PRODUCT,
+                        AirCavity.Temperatures.FOUND,
+                        false,
+                        OptionalDouble.of(7.5),
+                        OptionalDouble.of(9.25),
+                        5))),
+            new Cavity(
+                "cavity 2",
+                "air",
+                new Point(0.5, 0.5),
+                0.01,
+                AirCavity.Rule.LAYER,
+                Ventilation.WELL_VENTILATED,
+                0.02,
+                Optional.of("outdoors"),
+                Optional.empty())),
         List.of(
             new Assumption("film of indoors, walls", "0.13 m²·K/W", "ISO 6946, Rsi horizontal")),
         List.of("the cut-off plane at the top is 0.8 m from the slab, less than 1 m"),

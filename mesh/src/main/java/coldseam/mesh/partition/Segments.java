@@ -1,5 +1,8 @@
 package coldseam.mesh.partition;
 
+import coldseam.mesh.plane.Predicates;
+import coldseam.mesh.plane.Resolution;
+
 /** Lengths, and distances of points to straight segments. */
 final class Segments {
   private Segments() {}
@@ -31,5 +34,22 @@ final class Segments {
       return length(px - bx, py - by);
     }
     return Math.abs(dx * (py - ay) - dy * (px - ax)) / Math.sqrt(square);
+  }
+
+  /** Whether the segments a–b and c–d cross, or touch within the closing length. */
+  static boolean meet(
+      double ax, double ay, double bx, double by, double cx, double cy, double dx, double dy) {
+    int c = Predicates.orientation(ax, ay, bx, by, cx, cy);
+    int d = Predicates.orientation(ax, ay, bx, by, dx, dy);
+    int a = Predicates.orientation(cx, cy, dx, dy, ax, ay);
+    int b = Predicates.orientation(cx, cy, dx, dy, bx, by);
+    if (c != d && a != b) {
+      return true;
+    }
+    double near = Resolution.STANDARD.closeM();
+    return distance(ax, ay, cx, cy, dx, dy) <= near
+        || distance(bx, by, cx, cy, dx, dy) <= near
+        || distance(cx, cy, ax, ay, bx, by) <= near
+        || distance(dx, dy, ax, ay, bx, by) <= near;
   }
 }

@@ -6,6 +6,7 @@ import coldseam.mesh.triangulation.SizeField;
 import coldseam.mesh.triangulation.Triangulator;
 import coldseam.solver.detail.Accuracy;
 import coldseam.solver.detail.Conditions;
+import java.util.List;
 import java.util.function.IntPredicate;
 
 /** Solves one detail with one film set: the adaptive loop and nothing else. */
@@ -75,6 +76,75 @@ public final class Conduction {
     Corners corners = Corners.of(coarse, conditions);
     return new AdaptiveLoop(partition, conditions, goal, progress, corners, Double.NaN, true)
         .run(StartMesh.of(coarse));
+  }
+
+  /**
+   * Solves, beginning with the mesh of another solution.
+   *
+   * @param start a solution of the same partition, from this class
+   * @param conditions conditions on its edges
+   * @param goal what to meet
+   * @param progress told of each pass
+   * @return the solution on the final mesh
+   */
+  public static Solution solveFrom(
+      Solution start, Conditions conditions, Goal goal, Progress progress) {
+    Corners corners = ((FieldSolution) start).corners();
+    return new AdaptiveLoop(
+            start.partition(), conditions, goal, progress, corners, Double.NaN, true)
+        .run(start.mesh());
+  }
+
+  /**
+   * The unit fields on the mesh that {@link #solve} begins with: nothing is proved.
+   *
+   * @param partition the partition of the detail
+   * @param conditions conditions on its edges
+   * @return the fields
+   */
+  public static Solution solveCoarsely(Partition partition, Conditions conditions) {
+    Mesh coarse = Triangulator.triangulate(partition, new Conducting(conditions), SizeField.NONE);
+    Corners corners = Corners.of(coarse, conditions);
+    return fields(partition, conditions, corners, StartMesh.of(coarse));
+  }
+
+  /**
+   * The unit fields on the mesh of another solution: nothing is proved and nothing refined.
+   *
+   * @param other a solution of the same partition, from this class
+   * @param conditions conditions on its edges
+   * @return the fields
+   */
+  public static Solution solveOnMeshOf(Solution other, Conditions conditions) {
+    return fields(other.partition(), conditions, ((FieldSolution) other).corners(), other.mesh());
+  }
+
+  private static Solution fields(
+      Partition partition, Conditions conditions, Corners corners, Mesh mesh) {
+    Discretisation d = new Discretisation(mesh, conditions);
+    double[][] fields = Assembly.unitFields(d);
+    return new FieldSolution(
+        partition,
+        conditions,
+        corners,
+        d,
+        fields,
+        ConductanceMatrix.of(d, fields),
+        null,
+        new History(Double.NaN),
+        List.of(),
+        1);
+  }
+
+  /**
+   * A solution of which nothing counts as proved.
+   *
+   * @param solution from this class
+   * @param reason why not, as a sentence without a full stop
+   * @return the same fields
+   */
+  public static Solution unproved(Solution solution, String reason) {
+    return ((FieldSolution) solution).unproved(reason);
   }
 
   /**

@@ -27,6 +27,10 @@ final class FieldSolution implements Solution {
   private final List<AdaptiveLoop.Proved> proved;
   private final int passes;
   private final boolean[][] meeting;
+
+  /** Why bounds prove nothing although there are some; empty if they do. */
+  private final String doubt;
+
   private volatile StretchFlows stretchFlows;
   private volatile Dissipation dissipation;
 
@@ -41,6 +45,22 @@ final class FieldSolution implements Solution {
       History history,
       List<AdaptiveLoop.Proved> proved,
       int passes) {
+    this(partition, conditions, corners, d, fields, matrix, bound, history, proved, passes, "");
+  }
+
+  private FieldSolution(
+      Partition partition,
+      Conditions conditions,
+      Corners corners,
+      Discretisation d,
+      double[][] fields,
+      ConductanceMatrix matrix,
+      TwoSidedBound bound,
+      History history,
+      List<AdaptiveLoop.Proved> proved,
+      int passes,
+      String doubt) {
+    this.doubt = doubt;
     this.partition = partition;
     this.conditions = conditions;
     this.corners = corners;
@@ -52,6 +72,11 @@ final class FieldSolution implements Solution {
     this.proved = proved;
     this.passes = passes;
     meeting = d.meeting();
+  }
+
+  FieldSolution unproved(String reason) {
+    return new FieldSolution(
+        partition, conditions, corners, d, fields, matrix, bound, history, proved, passes, reason);
   }
 
   /** Guessed error over the sum of the indicators, the worst of the spaces. */
@@ -146,6 +171,9 @@ final class FieldSolution implements Solution {
     }
     if (bound != null) {
       double proved = bound.halfWidth(x, y);
+      if (!doubt.isEmpty()) {
+        return new Quantity(value, new Certificate.NotCertified(doubt, proved));
+      }
       return new Quantity(value, new Certificate.Certified(value - proved, value + proved));
     }
     double halfWidth = Math.sqrt(history.error(x) * history.error(y));
@@ -154,7 +182,7 @@ final class FieldSolution implements Solution {
 
   @Override
   public Optional<MatrixBounds> bounds() {
-    if (bound == null) {
+    if (bound == null || !doubt.isEmpty()) {
       return Optional.empty();
     }
     double[][] upper = new double[d.spaces][];
@@ -196,7 +224,7 @@ final class FieldSolution implements Solution {
   public Dissipation dissipation() {
     Dissipation ready = dissipation;
     if (ready == null) {
-      ready = new Dissipation(conditions, d, fields, bound);
+      ready = new Dissipation(conditions, d, fields, doubt.isEmpty() ? bound : null);
       dissipation = ready;
     }
     return ready;

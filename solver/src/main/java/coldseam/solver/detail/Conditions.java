@@ -3,6 +3,7 @@ package coldseam.solver.detail;
 import coldseam.mesh.partition.Partition;
 import java.util.BitSet;
 import java.util.List;
+import java.util.Map;
 
 /** What happens on every edge of the outline of the conducting section, for one film set. */
 public final class Conditions {
@@ -52,6 +53,39 @@ public final class Conditions {
     stretchCount = reading.detail().stretches().size();
     cutOffPlanes = List.copyOf(reading.cutOffPlanes());
     assumptions = List.copyOf(reading.assumptions());
+  }
+
+  private Conditions(Conditions other, Material[] materials) {
+    filmSet = other.filmSet;
+    partition = other.partition;
+    this.materials = materials;
+    kinds = other.kinds;
+    spaces = other.spaces;
+    films = other.films;
+    flows = other.flows;
+    roles = other.roles;
+    glazing = other.glazing;
+    symmetry = other.symmetry;
+    spaceCount = other.spaceCount;
+    stretchCount = other.stretchCount;
+    cutOffPlanes = other.cutOffPlanes;
+    assumptions = other.assumptions;
+  }
+
+  /**
+   * The same conditions with other conductivities.
+   *
+   * @param byName materials in place of those of the same name
+   * @return the conditions
+   */
+  public Conditions with(Map<String, Material> byName) {
+    Material[] replaced = materials.clone();
+    for (int label = 0; label < replaced.length; label++) {
+      if (replaced[label] != null) {
+        replaced[label] = byName.getOrDefault(replaced[label].name(), replaced[label]);
+      }
+    }
+    return new Conditions(this, replaced);
   }
 
   /**

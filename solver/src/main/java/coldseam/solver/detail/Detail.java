@@ -58,6 +58,27 @@ public record Detail(
   }
 
   /**
+   * The same detail with other areas and assumptions.
+   *
+   * @param otherAreas in the order laid
+   * @param otherAssumptions in place of the present ones
+   * @return the detail
+   */
+  public Detail with(List<Area> otherAreas, List<Assumption> otherAssumptions) {
+    return new Detail(
+        title,
+        geometry,
+        view,
+        otherAreas,
+        spaces,
+        stretches,
+        flanks,
+        wanted,
+        otherAssumptions,
+        cornerZones);
+  }
+
+  /**
    * The distinct fills of the areas in the order first laid; a fill's index is its label.
    *
    * @throws IllegalArgumentException if two different fills have one name

@@ -36,6 +36,11 @@ final class OutlineReading {
     this.partition = partition;
     this.filmSet = filmSet;
     fills = detail.fills();
+    for (Fill fill : fills) {
+      if (fill instanceof AirCavity) {
+        throw new IllegalArgumentException(fill.name() + " has not been taken apart yet");
+      }
+    }
     materials = conductingMaterials(fills);
     int edges = partition.edgeCount();
     kinds = new Kind[edges];
@@ -86,6 +91,8 @@ final class OutlineReading {
         throw new IllegalArgumentException(space.name() + " is laid but not among the spaces");
       }
       face(edge, index, space.films(filmSet));
+    } else if (fills.get(label) instanceof VentilatedAir air) {
+      face(edge, detail.spaceIndex(air.space()), air.film());
     } else {
       kinds[edge] = Kind.HOLLOW;
     }

@@ -2,6 +2,7 @@ package coldseam.solver.result;
 
 import coldseam.mesh.partition.Partition;
 import coldseam.mesh.plane.Point;
+import coldseam.solver.air.Cavity;
 import coldseam.solver.conduction.Conduction;
 import coldseam.solver.conduction.Solution;
 import coldseam.solver.detail.Assumption;
@@ -118,6 +119,11 @@ public final class Plan {
       Conditions surface,
       Map<Subtraction.OfDetail, Plan> others) {
     return new Plan(detail, partition, heatLoss, surface, others);
+  }
+
+  /** The detail as it is solved. */
+  public Detail detail() {
+    return detail;
   }
 
   /** Every flank that has a U, named or found, in the order named, then found. */
@@ -310,6 +316,7 @@ public final class Plan {
    * @param surfaceSolution the one for surface temperatures; the same one if {@link #sameFilms()};
    *     empty if not {@link #surfaceNeeded()}
    * @param others L2D of each detail that a ψ subtracts
+   * @param cavities every air cavity
    * @param timesMs milliseconds by stage, in the order run; asked for last
    * @return the result
    */
@@ -317,6 +324,7 @@ public final class Plan {
       Solution heatLossSolution,
       Optional<Solution> surfaceSolution,
       Map<Subtraction.OfDetail, OtherCoupling> others,
+      List<Cavity> cavities,
       Supplier<Map<String, Double>> timesMs) {
     Couplings couplings = new Couplings(detail, heatLossSolution);
     double[] temperatures = couplings.temperatures();
@@ -354,6 +362,7 @@ public final class Plan {
         Sharing.of(detail, heatLossSolution, temperatures),
         Weights.of(detail, surfaces, coldestFields, sets),
         flanks(),
+        cavities,
         assumptions(),
         List.copyOf(allWarnings),
         balances.balance(),

@@ -1,6 +1,7 @@
 package coldseam.solver.result;
 
 import coldseam.mesh.plane.Point;
+import coldseam.solver.air.Cavity;
 import coldseam.solver.conduction.Certificate;
 import coldseam.solver.conduction.Quantity;
 import coldseam.solver.conduction.Solution;
@@ -30,6 +31,8 @@ import java.util.OptionalDouble;
  * @param weights temperature weighting factors of the coldest point of each space and of the named
  *     points; empty for fewer than three spaces
  * @param flanks every flank, named or found
+ * @param cavities every air cavity as it was found and given a conductivity; the bounds of all
+ *     numbers hold for these conductivities
  * @param assumptions everything chosen for the user
  * @param warnings sentences, each with its figures
  * @param balance in = out
@@ -54,6 +57,7 @@ public record Result(
     Shares shares,
     List<Weight> weights,
     List<FlankResult> flanks,
+    List<Cavity> cavities,
     List<Assumption> assumptions,
     List<String> warnings,
     Balance balance,
