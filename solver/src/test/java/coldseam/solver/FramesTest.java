@@ -187,9 +187,7 @@ class FramesTest {
     assertThat(result.psi().get(0).valueWPerMK().value()).isCloseTo(0.0523, offset(0.0001));
   }
 
-  /**
-   * Sensitivities of ψ_g against runs with another conductivity: of the spacer and of the frame.
-   */
+  /** Sensitivities of ψ_g against a run with another conductivity of the spacer. */
   @Test
   void what_the_glass_edge_hangs_on() {
     Result base = withGlazing(material("stainless steel", 17), 0.2).solve(1e-4);
@@ -197,6 +195,10 @@ class FramesTest {
     double slope =
         (more.psi().get(0).valueWPerMK().value() - base.psi().get(0).valueWPerMK().value())
             / Math.log(1.01);
+    // Euler: ψ is of degree 1 in all conductivities and films together, those of the panel
+    // included.
+    assertThat(base.psi().get(0).sensitivities().stream().mapToDouble(s -> s.slope()).sum())
+        .isCloseTo(base.psi().get(0).valueWPerMK().value(), offset(1e-4));
     assertThat(base.psi().get(0).sensitivities())
         .filteredOn(s -> s.of().equals("stainless steel"))
         .singleElement()
@@ -299,6 +301,39 @@ class FramesTest {
     assertThat(result.warnings())
         .anyMatch(w -> w.contains("150 mm") && w.contains("190 mm"))
         .anyMatch(w -> w.contains("add up to 270 mm") && w.contains("300 mm"));
+  }
+
+  /** ISO 10077-2: b_f is the larger of both projections, and lengths are those of that side. */
+  @Test
+  void the_wider_side_counts() {
+    DrawnDetail d = new DrawnDetail();
+    d.box(room("indoors", 20), 0, 18, 300, 120);
+    d.box(outdoors(0), 0, -40, 300, 18);
+    d.polygon(WOOD, 0, 0, 100, 0, 100, 18, 80, 18, 80, 80, 0, 80);
+    d.infill(Role.PANEL, PANEL, 80, 18, 300, 18, 300, 46, 80, 46);
+    d.want(wanted(CornerRule.LIMITED, OptionalDouble.empty(), List.of()));
+    Result.Frame frame = d.solve(1e-3).frame().orElseThrow();
+    assertThat(frame.innerM()).isCloseTo(0.080, offset(1e-9));
+    assertThat(frame.outerM()).isCloseTo(0.100, offset(1e-9));
+    assertThat(frame.width().valueM()).isCloseTo(0.100, offset(1e-9));
+    assertThat(frame.panels().get(0).lengthM().getAsDouble()).isCloseTo(0.200, offset(1e-9));
+    assertThat(frame.width().from().orElseThrow().y()).isCloseTo(0, offset(1e-9));
+    assertThat(frame.width().to().orElseThrow().x()).isCloseTo(0.100, offset(1e-9));
+  }
+
+  @Test
+  void a_spacer_that_is_not_marked_is_told() {
+    DrawnDetail d = frame(CornerRule.LIMITED);
+    box(d, GLASS, 95, 18, 300, 22);
+    box(d, GLASS, 95, 42, 300, 46);
+    box(d, GAS, 95, 22, 300, 42);
+    assertThat(d.inspect().warnings()).noneMatch(w -> w.contains("not marked"));
+    d.box(material("spacer", 2), 98, 22, 104, 42);
+    assertThat(d.inspect().warnings())
+        .filteredOn(w -> w.contains("not marked"))
+        .singleElement()
+        .asString()
+        .startsWith("area ");
   }
 
   @Test

@@ -70,7 +70,7 @@ final class FlankFinder {
 
   /** Whether a frame is asked for and the plane is not the end of its glazing or panel. */
   private boolean sideOfFrame(CutOffPlane plane) {
-    return frame && FramePlan.role(outline, plane) == Area.Role.OTHER;
+    return frame && FrameOutline.role(outline, plane) == Area.Role.OTHER;
   }
 
   List<PlacedFlank> flanks() {
@@ -256,7 +256,7 @@ final class FlankFinder {
     double up = run.y() * upX - run.x() * upY;
     double right = run.y() * upY + run.x() * upX;
     String side;
-    Area.Role role = FramePlan.role(outline, plane);
+    Area.Role role = FrameOutline.role(outline, plane);
     if (frame && role != Area.Role.OTHER) {
       side = FrameTransmittances.name(role);
     } else if (Math.abs(up) > Math.abs(right)) {

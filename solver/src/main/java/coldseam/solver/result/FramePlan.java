@@ -1,9 +1,7 @@
 package coldseam.solver.result;
 
-import coldseam.mesh.plane.Point;
 import coldseam.solver.detail.Area;
 import coldseam.solver.detail.Assumption;
-import coldseam.solver.detail.CutOffPlane;
 import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.Fault;
 import coldseam.solver.detail.Wanted;
@@ -54,6 +52,7 @@ final class FramePlan {
 
   private final Detail detail;
   private final Outline outline;
+  private final FrameOutline lines;
   private final Wanted.Frame wanted;
   private final List<Fault> faults = new ArrayList<>();
   private final List<String> warnings = new ArrayList<>();
@@ -71,6 +70,7 @@ final class FramePlan {
   private FramePlan(Detail detail, Outline outline, List<PlacedFlank> flanks, Wanted.Frame wanted) {
     this.detail = detail;
     this.outline = outline;
+    lines = new FrameOutline(outline);
     this.wanted = wanted;
     SpaceGroups groups = new SpaceGroups(detail, "frame", "");
     warm = groups.indices(wanted.warm());
@@ -115,17 +115,6 @@ final class FramePlan {
     return new Fault("frame", "", message, Optional.empty());
   }
 
-  /** What the outline along a cut-off plane belongs to: one glazing or panel, or something else. */
-  static Area.Role role(Outline outline, CutOffPlane plane) {
-    Area.Role role = outline.conditions().role(plane.edges().get(0));
-    for (int edge : plane.edges()) {
-      if (outline.conditions().role(edge) != role) {
-        return Area.Role.OTHER;
-      }
-    }
-    return role;
-  }
-
   /** Glazings and panels that separate the two sides, from left to right, then upwards. */
   private List<PlacedFlank> held(List<PlacedFlank> flanks) {
     List<PlacedFlank> held = new ArrayList<>();
@@ -133,7 +122,7 @@ final class FramePlan {
       if (flank.plane().isPresent()
           && Couplings.contains(warm, flank.warm())
           && Couplings.contains(cold, flank.cold())
-          && role(outline, flank.plane().get()) != Area.Role.OTHER) {
+          && FrameOutline.role(outline, flank.plane().get()) != Area.Role.OTHER) {
         held.add(flank);
       }
     }
@@ -165,10 +154,10 @@ final class FramePlan {
                   + held.size()
                   + " glazings or panels"));
     }
-    Direction axis = axis(held.get(0));
+    Direction axis = lines.axis(held.get(0));
     boolean typed = wanted.widthM().isPresent() && !wanted.visibleM().isEmpty();
     for (PlacedFlank flank : held) {
-      if (!typed && Math.abs(axis.cross(axis(flank))) > PARALLEL_SINE) {
+      if (!typed && Math.abs(axis.cross(lines.axis(flank))) > PARALLEL_SINE) {
         faults.add(
             fault(
                 "its glazings do not lie in one plane; state `width` and `visible` of the frame"));
@@ -177,14 +166,14 @@ final class FramePlan {
     if (!faults.isEmpty()) {
       return;
     }
-    double inner = extent(warm, axis);
-    double outer = extent(cold, axis);
+    double inner = lines.extent(warm, axis);
+    double outer = lines.extent(cold, axis);
     wholeM = Math.max(inner, outer);
     innerM = inner;
     outerM = outer;
     for (PlacedFlank flank : held) {
-      innerM -= visible(flank.warmEnd().orElseThrow());
-      outerM -= visible(flank.coldEnd().orElseThrow());
+      innerM -= lines.visible(flank.warmEnd().orElseThrow());
+      outerM -= lines.visible(flank.coldEnd().orElseThrow());
     }
     widthM = wanted.widthM().orElse(Math.max(innerM, outerM));
     if (!(widthM > 0)) {
@@ -192,60 +181,8 @@ final class FramePlan {
       return;
     }
     placeLengths(held, axis);
+    warnings.addAll(UnmarkedGlazing.warnings(detail.areas()));
     describe();
-  }
-
-  /** Along the glazing, out of the section. */
-  private Direction axis(PlacedFlank flank) {
-    CutOffPlane plane = flank.plane().orElseThrow();
-    Direction run = outline.direction(plane.first(), plane.last());
-    return new Direction(run.y(), -run.x());
-  }
-
-  /** Width of the surfaces that face one side, seen square to the glazing. */
-  private double extent(int[] spaces, Direction axis) {
-    double low = Double.POSITIVE_INFINITY;
-    double high = Double.NEGATIVE_INFINITY;
-    for (int edge = 0; edge < outline.partition().edgeCount(); edge++) {
-      if (outline.contains(edge) && Couplings.contains(spaces, outline.conditions().space(edge))) {
-        for (int vertex : new int[] {outline.start(edge), outline.end(edge)}) {
-          low = Math.min(low, along(axis, vertex));
-          high = Math.max(high, along(axis, vertex));
-        }
-      }
-    }
-    return high - low;
-  }
-
-  /** How far the glazing or panel is seen from its end on, m. */
-  private double visible(FlankEnd end) {
-    Area.Role role = outline.conditions().role(end.face());
-    int at = end.vertex();
-    int edge = end.face();
-    int guard = outline.partition().edgeCount();
-    while (edge >= 0
-        && guard-- > 0
-        && role != Area.Role.OTHER
-        && outline.conditions().space(edge) == end.space()
-        && outline.conditions().role(edge) == role
-        && straight(end.vertex(), at, far(edge, end))) {
-      at = far(edge, end);
-      edge = end.forward() ? outline.next(edge) : outline.previous(edge);
-    }
-    return outline.distance(end.vertex(), at);
-  }
-
-  private int far(int edge, FlankEnd end) {
-    return end.forward() ? outline.end(edge) : outline.start(edge);
-  }
-
-  private boolean straight(int from, int at, int to) {
-    if (at == from) {
-      return true;
-    }
-    Direction line = outline.direction(from, to);
-    return line.dot(outline.direction(at, to)) > 0
-        && Math.abs(outline.across(line, from, at)) <= Outline.offset(outline.distance(from, to));
   }
 
   /** The lengths with the lines to draw them on, all in one line beside the frame. */
@@ -253,19 +190,19 @@ final class FramePlan {
     boolean inside = innerM >= outerM;
     PlacedFlank first = held.get(0);
     Direction away = outline.direction(end(first, !inside).vertex(), end(first, inside).vertex());
-    double level = level(inside ? warm : cold, away);
+    double level = lines.level(inside ? warm : cold, away);
     String seen = "seen from " + (inside ? "inside" : "outside");
     for (int i = 0; i < held.size(); i++) {
       FlankEnd end = end(held.get(i), inside);
-      Area.Role role = role(outline, held.get(i).plane().orElseThrow());
-      double cut = along(axis, end.vertex());
-      double edge = cut - axis.dot(axis(held.get(i))) * visible(end);
+      Area.Role role = FrameOutline.role(outline, held.get(i).plane().orElseThrow());
+      double cut = lines.along(axis, end.vertex());
+      double edge = cut - axis.dot(lines.axis(held.get(i))) * lines.visible(end);
       Result.Length length =
           wanted.visibleM().isEmpty()
               ? new Result.Length(
-                  visible(end),
-                  Optional.of(at(axis, edge, away, level)),
-                  Optional.of(at(axis, cut, away, level)),
+                  lines.visible(end),
+                  Optional.of(lines.at(axis, edge, away, level)),
+                  Optional.of(lines.at(axis, cut, away, level)),
                   "visible length " + seen)
               : stated(wanted.visibleM().get(i), "visible length stated");
       infills.add(new Infill(held.get(i), role, length));
@@ -273,8 +210,8 @@ final class FramePlan {
         width =
             new Result.Length(
                 widthM,
-                Optional.of(at(axis, edge - widthM, away, level)),
-                Optional.of(at(axis, edge, away, level)),
+                Optional.of(lines.at(axis, edge - widthM, away, level)),
+                Optional.of(lines.at(axis, edge, away, level)),
                 "projected width " + seen);
       }
     }
@@ -289,32 +226,6 @@ final class FramePlan {
 
   private static FlankEnd end(PlacedFlank flank, boolean inside) {
     return (inside ? flank.warmEnd() : flank.coldEnd()).orElseThrow();
-  }
-
-  private double along(Direction direction, int vertex) {
-    return direction.dot(outline.partition().x(vertex), outline.partition().y(vertex));
-  }
-
-  /** How far the surfaces that face one side stand out. */
-  private double level(int[] spaces, Direction away) {
-    double level = Double.NEGATIVE_INFINITY;
-    for (int edge = 0; edge < outline.partition().edgeCount(); edge++) {
-      if (outline.contains(edge) && Couplings.contains(spaces, outline.conditions().space(edge))) {
-        level = Math.max(level, along(away, outline.start(edge)));
-        level = Math.max(level, along(away, outline.end(edge)));
-      }
-    }
-    return level;
-  }
-
-  /** The place at a distance along each of two directions square to each other. */
-  private Point at(Direction one, double first, Direction other, double second) {
-    Point origin = outline.partition().origin();
-    double square = 1 - one.dot(other) * one.dot(other);
-    double a = (first - one.dot(other) * second) / square;
-    double b = (second - one.dot(other) * first) / square;
-    return new Point(
-        origin.x() + a * one.x() + b * other.x(), origin.y() + a * one.y() + b * other.y());
   }
 
   private void describe() {
