@@ -19,7 +19,6 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.concurrent.FutureTask;
 
 /** Solves cases: card, data, plots. */
 final class SolveCommand implements Command {
@@ -93,12 +92,6 @@ final class SolveCommand implements Command {
       throws UsageException, CaseException, IOException {
     contradictions(typed);
     List<Job> jobs = jobs(typed, here);
-    if (!typed.has(NO_PLOTS) && anyFolder(jobs)) {
-      // A task keeps to itself what goes wrong; drawing will say it again.
-      Thread plots = new Thread(new FutureTask<>(new Preparation(), null), "prepare plots");
-      plots.setDaemon(true);
-      plots.start();
-    }
     int code = ExitCode.DONE;
     boolean first = true;
     for (Job job : jobs) {
@@ -107,23 +100,6 @@ final class SolveCommand implements Command {
       first = false;
     }
     return code;
-  }
-
-  private static boolean anyFolder(List<Job> jobs) {
-    for (Job job : jobs) {
-      if (job.folder().isPresent()) {
-        return true;
-      }
-    }
-    return false;
-  }
-
-  /** Makes ready for plots while the case is solved. */
-  private static final class Preparation implements Runnable {
-    @Override
-    public void run() {
-      Plots.prepare();
-    }
   }
 
   private static void contradictions(Syntax.Typed typed) throws UsageException {

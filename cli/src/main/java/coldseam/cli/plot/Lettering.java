@@ -22,9 +22,9 @@ record Lettering(float size, boolean bold, Color ink) {
   static final Lettering MEASURE = new Lettering(10, false, Palette.INK);
   static final Lettering REFERENCE = new Lettering(10, true, Palette.REFERENCE);
 
-  /** Java's logical sans-serif face, which becomes {@code sans-serif} in an SVG. */
+  /** Java's logical sans-serif face, for pixels. */
   Font font() {
-    return new NamedFont(Font.SANS_SERIF, bold ? Font.BOLD : Font.PLAIN, size);
+    return new Font(Font.SANS_SERIF, bold ? Font.BOLD : Font.PLAIN, 1).deriveFont(size);
   }
 
   /** Height of a line of this text, points. */

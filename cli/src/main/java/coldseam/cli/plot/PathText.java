@@ -9,17 +9,20 @@ import java.awt.geom.PathIterator;
 final class PathText {
   private static final int PARTS = 100;
 
-  private final StringBuilder out = new StringBuilder();
+  private final StringBuilder out;
   private long x;
   private long y;
   private long startX;
   private long startY;
   private char last;
 
-  private PathText() {}
+  private PathText(StringBuilder out) {
+    this.out = out;
+  }
 
-  static String of(PathIterator path) {
-    PathText text = new PathText();
+  /** Writes path data behind what is there. */
+  static void of(PathIterator path, StringBuilder out) {
+    PathText text = new PathText(out);
     double[] c = new double[6];
     for (; !path.isDone(); path.next()) {
       switch (path.currentSegment(c)) {
@@ -30,7 +33,6 @@ final class PathText {
         default -> text.close();
       }
     }
-    return text.out.toString();
   }
 
   private void move(double toX, double toY) {
@@ -93,10 +95,20 @@ final class PathText {
 
   private void number(long hundredths) {
     char before = out.charAt(out.length() - 1);
+    if (hundredths >= 0 && before >= '0' && before <= '9') {
+      out.append(' ');
+    }
+    write(hundredths, out);
+  }
+
+  /** Writes a number in hundredths. */
+  static void number(double value, StringBuilder out) {
+    write(Math.round(value * PARTS), out);
+  }
+
+  private static void write(long hundredths, StringBuilder out) {
     if (hundredths < 0) {
       out.append('-');
-    } else if (before >= '0' && before <= '9') {
-      out.append(' ');
     }
     long size = Math.abs(hundredths);
     long whole = size / PARTS;

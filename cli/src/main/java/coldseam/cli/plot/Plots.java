@@ -151,20 +151,6 @@ public final class Plots {
   }
 
   /**
-   * Loads what drawing needs, which takes as long as drawing: worth doing on another thread while a
-   * detail is solved.
-   */
-  public static void prepare() {
-    SvgCanvas canvas = SvgCanvas.blank("prepared");
-    canvas.layer("all");
-    Polyline line = new Polyline.Builder().add(0, 0).add(9, 0).add(9, 9.5).closed();
-    canvas.fill(Polyline.path(List.of(line)), Palette.PAPER);
-    canvas.stroke(Polyline.path(List.of(line)), Palette.INK, Pen.CUT_OFF);
-    canvas.text("prepared", 1, 1, Lettering.LABEL, Canvas.Anchor.MIDDLE, 1);
-    canvas.document(9, 9, "prepared", "prepared");
-  }
-
-  /**
    * Draws one plot as PNG, two pixels a point.
    *
    * @param kind which

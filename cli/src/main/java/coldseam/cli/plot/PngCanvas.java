@@ -1,7 +1,10 @@
 package coldseam.cli.plot;
 
+import java.awt.Color;
 import java.awt.Graphics2D;
 import java.awt.RenderingHints;
+import java.awt.Shape;
+import java.awt.geom.AffineTransform;
 import java.awt.image.BufferedImage;
 import java.io.ByteArrayOutputStream;
 import java.io.IOException;
@@ -19,7 +22,6 @@ final class PngCanvas extends Canvas {
   private final BufferedImage image;
 
   private PngCanvas(Graphics2D graphics, BufferedImage image) {
-    super(graphics);
     this.graphics = graphics;
     this.image = image;
   }
@@ -74,18 +76,40 @@ final class PngCanvas extends Canvas {
   }
 
   @Override
-  double beforeAnchor(String text, Lettering lettering, Anchor anchor) {
+  void fill(Shape shape, Color colour) {
+    graphics.setPaint(colour);
+    graphics.fill(shape);
+  }
+
+  @Override
+  void stroke(Shape shape, Color colour, Pen pen) {
+    graphics.setPaint(colour);
+    graphics.setStroke(pen.stroke());
+    graphics.draw(shape);
+  }
+
+  @Override
+  void text(String text, double x, double y, Lettering lettering, Anchor anchor, double turn) {
+    if (text.isEmpty()) {
+      return;
+    }
+    graphics.setFont(lettering.font());
+    graphics.setPaint(lettering.ink());
+    AffineTransform saved = graphics.getTransform();
+    graphics.rotate(turn, x, y);
+    double before = beforeAnchor(text, lettering, anchor);
+    graphics.drawString(text, (float) (x - before), (float) y);
+    graphics.setTransform(saved);
+  }
+
+  /** How far to the right of its start the anchor of a text lies. */
+  private double beforeAnchor(String text, Lettering lettering, Anchor anchor) {
     if (anchor == Anchor.START) {
       return 0;
     }
     double width =
         lettering.font().getStringBounds(text, graphics.getFontRenderContext()).getWidth();
     return anchor == Anchor.MIDDLE ? width / 2 : width;
-  }
-
-  @Override
-  void written(Anchor anchor) {
-    // Nothing is left to do.
   }
 
   byte[] bytes() {

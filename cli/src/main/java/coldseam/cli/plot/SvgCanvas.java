@@ -1,82 +1,24 @@
 package coldseam.cli.plot;
 
-import java.awt.Dimension;
+import java.awt.Color;
 import java.awt.Shape;
 import java.awt.geom.PathIterator;
-import java.text.DecimalFormat;
-import java.text.DecimalFormatSymbols;
-import java.util.ArrayList;
-import java.util.List;
-import java.util.Locale;
-import javax.xml.parsers.DocumentBuilderFactory;
-import javax.xml.parsers.ParserConfigurationException;
-import org.apache.batik.svggen.DefaultErrorHandler;
-import org.apache.batik.svggen.DefaultExtensionHandler;
-import org.apache.batik.svggen.DefaultStyleHandler;
-import org.apache.batik.svggen.ImageHandlerBase64Encoder;
-import org.apache.batik.svggen.SVGGeneratorContext;
-import org.apache.batik.svggen.SVGGraphics2D;
-import org.apache.batik.svggen.SVGIDGenerator;
-import org.apache.batik.svggen.SVGShape;
-import org.w3c.dom.Document;
-import org.w3c.dom.Element;
-import org.w3c.dom.Node;
-import org.w3c.dom.NodeList;
 
-/** Writes SVG: text stays text, anchored where it was put, so that any sans-serif face fits. */
+/**
+ * Writes SVG as it is drawn, element after element: text stays text, anchored where it was put, so
+ * that any sans-serif face fits. Nothing of it is kept but the text itself, since a tree of
+ * elements takes longer to build than a detail to solve.
+ */
 final class SvgCanvas extends Canvas {
   static final String SVG = "http://www.w3.org/2000/svg";
 
-  /** Batik's settings, with a number format of its own: the common one is for one thread only. */
-  private static final class Context extends SVGGeneratorContext {
-    Context(Document document) {
-      super(document);
-      setIDGenerator(new SVGIDGenerator());
-      setExtensionHandler(new DefaultExtensionHandler());
-      setImageHandler(new ImageHandlerBase64Encoder());
-      setStyleHandler(new DefaultStyleHandler());
-      setErrorHandler(new DefaultErrorHandler());
-      setComment(null);
-      GraphicContextDefaults defaults = new GraphicContextDefaults();
-      defaults.setFont(Lettering.LABEL.font());
-      setGraphicContextDefaults(defaults);
-      decimalFormat = new DecimalFormat("0.##", DecimalFormatSymbols.getInstance(Locale.ROOT));
-    }
-  }
-
-  /** Batik's graphics, writing shapes as {@link PathText} does. */
-  private static final class Shapes extends SVGGraphics2D {
-    Shapes(SVGGeneratorContext context) {
-      super(context, false);
-      shapeConverter =
-          new SVGShape(context) {
-            @Override
-            public Element toSVG(Shape shape) {
-              Element path = context.getDOMFactory().createElementNS(SVG, "path");
-              PathIterator pieces = shape.getPathIterator(null);
-              if (pieces.getWindingRule() == PathIterator.WIND_EVEN_ODD) {
-                path.setAttribute("fill-rule", "evenodd");
-              }
-              path.setAttribute("d", PathText.of(pieces));
-              return path;
-            }
-          };
-    }
-  }
-
-  private final SVGGraphics2D graphics;
-  private final Document document;
-  private final List<Element> layers = new ArrayList<>();
-  private final List<Anchor> anchors = new ArrayList<>();
-  private String layer = "ground";
-
   private final String name;
+  private final StringBuilder out = new StringBuilder(1 << 16);
+  private String layer = "ground";
+  private boolean open;
 
-  private SvgCanvas(SVGGraphics2D graphics, Document document, String name) {
-    super(graphics);
+  private SvgCanvas(String name) {
     this.name = name;
-    this.graphics = graphics;
-    this.document = document;
   }
 
   /**
@@ -85,17 +27,7 @@ final class SvgCanvas extends Canvas {
    * @param name begins every id, so that several drawings can stand in one document
    */
   static SvgCanvas blank(String name) {
-    Document document;
-    try {
-      document =
-          DocumentBuilderFactory.newDefaultInstance()
-              .newDocumentBuilder()
-              .getDOMImplementation()
-              .createDocument(SVG, "svg", null);
-    } catch (ParserConfigurationException e) {
-      throw new IllegalStateException("this Java has no XML document builder", e);
-    }
-    return new SvgCanvas(new Shapes(new Context(document)), document, name);
+    return new SvgCanvas(name);
   }
 
   @Override
@@ -104,22 +36,107 @@ final class SvgCanvas extends Canvas {
     layer = id;
   }
 
-  @Override
-  double beforeAnchor(String text, Lettering lettering, Anchor anchor) {
-    return 0;
-  }
-
-  @Override
-  void written(Anchor anchor) {
-    anchors.add(anchor);
+  /** A layer begins with the first thing drawn in it. */
+  private void openLayer() {
+    if (!open) {
+      out.append("<g id=\"").append(name).append('-').append(layer).append("\">\n");
+      open = true;
+    }
   }
 
   private void closeLayer() {
-    Element group = graphics.getTopLevelGroup(false);
-    if (group.hasChildNodes()) {
-      group.setAttribute("id", name + "-" + layer);
-      layers.add(group);
+    if (open) {
+      out.append("</g>\n");
+      open = false;
     }
+  }
+
+  @Override
+  void fill(Shape shape, Color colour) {
+    if (path(shape)) {
+      colour(" fill", colour);
+      out.append("/>\n");
+    }
+  }
+
+  @Override
+  void stroke(Shape shape, Color colour, Pen pen) {
+    if (path(shape)) {
+      out.append(" fill=\"none\"");
+      colour(" stroke", colour);
+      out.append(" stroke-width=\"");
+      PathText.number(pen.width(), out);
+      if (pen.dashes().length > 0) {
+        out.append("\" stroke-dasharray=\"");
+        for (int i = 0; i < pen.dashes().length; i++) {
+          PathText.number(pen.dashes()[i], i == 0 ? out : out.append(' '));
+        }
+      }
+      out.append("\"/>\n");
+    }
+  }
+
+  /** Begins a path, unless the shape is empty. */
+  private boolean path(Shape shape) {
+    PathIterator pieces = shape.getPathIterator(null);
+    if (pieces.isDone()) {
+      return false;
+    }
+    openLayer();
+    out.append("<path");
+    if (pieces.getWindingRule() == PathIterator.WIND_EVEN_ODD) {
+      out.append(" fill-rule=\"evenodd\"");
+    }
+    out.append(" d=\"");
+    PathText.of(pieces, out);
+    out.append('"');
+    return true;
+  }
+
+  private void colour(String attribute, Color colour) {
+    out.append(attribute).append("=\"#");
+    for (int shift = 20; shift >= 0; shift -= 4) {
+      out.append(Character.forDigit(colour.getRGB() >> shift & 0xF, 16));
+    }
+    if (colour.getAlpha() < 255) {
+      out.append('"').append(attribute).append("-opacity=\"");
+      PathText.number(colour.getAlpha() / 255.0, out);
+    }
+    out.append('"');
+  }
+
+  @Override
+  void text(String text, double x, double y, Lettering lettering, Anchor anchor, double turn) {
+    if (text.isEmpty()) {
+      return;
+    }
+    openLayer();
+    out.append("<text x=\"");
+    PathText.number(x, out);
+    out.append("\" y=\"");
+    PathText.number(y, out);
+    out.append("\" font-size=\"");
+    PathText.number(lettering.size(), out);
+    out.append('"');
+    if (lettering.bold()) {
+      out.append(" font-weight=\"bold\"");
+    }
+    colour(" fill", lettering.ink());
+    if (anchor != Anchor.START) {
+      out.append(" text-anchor=\"").append(anchor == Anchor.MIDDLE ? "middle" : "end").append('"');
+    }
+    if (turn != 0) {
+      out.append(" transform=\"rotate(");
+      PathText.number(Math.toDegrees(turn), out);
+      out.append(' ');
+      PathText.number(x, out);
+      out.append(' ');
+      PathText.number(y, out);
+      out.append(")\"");
+    }
+    out.append('>');
+    escape(text);
+    out.append("</text>\n");
   }
 
   /**
@@ -129,56 +146,45 @@ final class SvgCanvas extends Canvas {
    * @param height of the sheet, points
    * @param title what a reader who cannot see the plot is told first
    * @param description what it shows, in a few sentences
-   * @return the whole document as text
+   * @return the whole document as text: no document type, nothing from elsewhere
    */
   String document(double width, double height, String title, String description) {
     closeLayer();
-    graphics.setSVGCanvasSize(new Dimension((int) width, (int) height));
-    Element root = graphics.getRoot();
-    while (root.hasChildNodes()) {
-      root.removeChild(root.getFirstChild());
-    }
-    root.setAttribute("viewBox", "0 0 " + (int) width + " " + (int) height);
-    root.setAttribute("font-family", "sans-serif");
-    root.setAttribute("role", "img");
-    root.setAttribute("aria-labelledby", name + "-title " + name + "-desc");
-    root.appendChild(told("title", title));
-    root.appendChild(told("desc", description));
-    for (Element layer : layers) {
-      root.appendChild(layer);
-    }
-    anchor(root);
-    return SvgText.of(root);
+    String drawn = out.toString();
+    out.setLength(0);
+    int w = (int) width;
+    int h = (int) height;
+    out.append("<?xml version=\"1.0\" encoding=\"UTF-8\"?>\n<svg xmlns=\"").append(SVG);
+    out.append("\" width=\"").append(w).append("\" height=\"").append(h);
+    out.append("\" viewBox=\"0 0 ").append(w).append(' ').append(h);
+    out.append("\" font-family=\"sans-serif\" role=\"img\" aria-labelledby=\"");
+    out.append(name).append("-title ").append(name).append("-desc\">\n");
+    told("title", title);
+    told("desc", description);
+    return out.append(drawn).append("</svg>\n").toString();
   }
 
-  private Element told(String name, String text) {
-    Element element = document.createElementNS(SVG, name);
-    element.setAttribute("id", this.name + "-" + name);
-    element.appendChild(document.createTextNode(text));
-    return element;
+  private void told(String element, String text) {
+    out.append('<').append(element).append(" id=\"").append(name).append('-').append(element);
+    out.append("\">");
+    escape(text);
+    out.append("</").append(element).append(">\n");
   }
 
-  private void anchor(Element root) {
-    NodeList texts = root.getElementsByTagNameNS(SVG, "text");
-    if (texts.getLength() != anchors.size()) {
-      throw new IllegalStateException("a text of the plot was lost on its way into the SVG");
-    }
-    int i = 0;
-    for (Element text : inOrder(texts)) {
-      Anchor anchor = anchors.get(i++);
-      text.removeAttribute("xml:space");
-      if (anchor != Anchor.START) {
-        text.setAttribute("text-anchor", anchor == Anchor.MIDDLE ? "middle" : "end");
+  private void escape(String text) {
+    for (int i = 0; i < text.length(); i++) {
+      char c = text.charAt(i);
+      switch (c) {
+        case '<' -> out.append("&lt;");
+        case '>' -> out.append("&gt;");
+        case '&' -> out.append("&amp;");
+        case '"' -> out.append("&quot;");
+        default -> {
+          if (c >= ' ' || c == '\n' || c == '\t') {
+            out.append(c);
+          }
+        }
       }
     }
-  }
-
-  private static List<Element> inOrder(NodeList nodes) {
-    List<Element> elements = new ArrayList<>(nodes.getLength());
-    for (int i = 0; i < nodes.getLength(); i++) {
-      Node node = nodes.item(i);
-      elements.add((Element) node);
-    }
-    return elements;
   }
 }

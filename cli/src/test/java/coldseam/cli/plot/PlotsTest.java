@@ -196,7 +196,6 @@ class PlotsTest {
   @Test
   void plots_drawn_at_once_are_those_drawn_one_by_one() {
     Solved corner = Solved.shipped("corner.yaml");
-    Plots.prepare();
     var drawn = Plots.of(corner.result(), corner.caption()).svgs(List.of(Kind.values()));
     assertThat(drawn.keySet()).containsExactly(Kind.values());
     drawn.forEach((kind, svg) -> assertThat(svg).isEqualTo(corner.svg(kind)));
