@@ -135,12 +135,12 @@ final class OutputFolder {
     }
   }
 
-  /** A name that no other solve uses at the same time: of this process and this moment. */
+  /** A name that no other solve uses: of this moment. */
   private String stageName() {
     return "."
         + folder.getFileName()
         + "-"
-        + ProcessHandle.current().pid()
+        + Long.toString(System.currentTimeMillis(), Character.MAX_RADIX)
         + "-"
         + Long.toString(System.nanoTime() & Long.MAX_VALUE, Character.MAX_RADIX);
   }

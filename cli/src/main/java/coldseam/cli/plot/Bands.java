@@ -1,6 +1,5 @@
 package coldseam.cli.plot;
 
-import java.awt.Color;
 import java.awt.geom.Line2D;
 import java.awt.geom.Rectangle2D;
 import java.util.ArrayList;
@@ -30,16 +29,16 @@ final class Bands {
   }
 
   /** Fills everything. */
-  void fillAll(Canvas canvas, Color colour) {
+  void fillAll(Canvas canvas, Colour colour) {
     fill(canvas, contours.all(), colour);
   }
 
   /** Fills where the values are at or above a level. */
-  void fill(Canvas canvas, int level, Color colour) {
+  void fill(Canvas canvas, int level, Colour colour) {
     fill(canvas, contours.atOrAbove(level), colour);
   }
 
-  private void fill(Canvas canvas, List<Polyline> region, Color colour) {
+  private void fill(Canvas canvas, List<Polyline> region, Colour colour) {
     List<Polyline> rings = new ArrayList<>();
     for (Polyline ring : region) {
       Polyline simple = Simplification.of(ring, SIMPLIFIED / panel.pointsPerM());
@@ -75,7 +74,7 @@ final class Bands {
    * @param colours of the bands, one more than levels
    */
   static void scale(
-      Canvas canvas, Box box, List<String> levels, List<Boolean> heavy, List<Color> colours) {
+      Canvas canvas, Box box, List<String> levels, List<Boolean> heavy, List<Colour> colours) {
     int bands = levels.size() + 1;
     double top = box.y0() + 2;
     for (int k = 0; k < bands; k++) {

@@ -1,6 +1,5 @@
 package coldseam.cli.plot;
 
-import java.awt.Color;
 import java.awt.Shape;
 
 /** What a plot is drawn on: shapes of Java2D and lines of text, written as SVG or as pixels. */
@@ -19,9 +18,9 @@ abstract class Canvas {
    */
   abstract void layer(String id);
 
-  abstract void fill(Shape shape, Color colour);
+  abstract void fill(Shape shape, Colour colour);
 
-  abstract void stroke(Shape shape, Color colour, Pen pen);
+  abstract void stroke(Shape shape, Colour colour, Pen pen);
 
   /**
    * Writes a line of text.

@@ -4,7 +4,6 @@ import coldseam.cli.plot.Plots.Caption;
 import coldseam.cli.text.Digits;
 import coldseam.solver.conduction.Solution;
 import coldseam.solver.result.Result;
-import java.awt.Color;
 import java.awt.geom.Line2D;
 import java.awt.geom.Path2D;
 import java.util.ArrayList;
@@ -180,13 +179,13 @@ final class HeatFlowView extends View {
     return said;
   }
 
-  private Color colour(int band) {
+  private Colour colour(int band) {
     double part = (band + 0.5) / (levels.size() + 1);
     return Palette.flow(tubes.isPresent() ? QUIET * part : part);
   }
 
-  private List<Color> colours() {
-    List<Color> colours = new ArrayList<>();
+  private List<Colour> colours() {
+    List<Colour> colours = new ArrayList<>();
     for (int band = 0; band <= levels.size(); band++) {
       colours.add(colour(band));
     }

@@ -3,7 +3,6 @@ package coldseam.cli.plot;
 import coldseam.cli.text.Digits;
 import coldseam.mesh.triangulation.Mesh;
 import coldseam.solver.conduction.TemperatureField;
-import java.awt.Color;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
@@ -96,12 +95,12 @@ final class Isotherms {
     return new Traced(panel, new Bands(Contours.of(patch, traced), panel));
   }
 
-  private Color colour(int band) {
+  private Colour colour(int band) {
     return Palette.temperature((band + 0.5) / bands());
   }
 
-  private List<Color> colours() {
-    List<Color> colours = new ArrayList<>();
+  private List<Colour> colours() {
+    List<Colour> colours = new ArrayList<>();
     for (int band = 0; band < bands(); band++) {
       colours.add(colour(band));
     }

@@ -1,6 +1,5 @@
 package coldseam.cli.plot;
 
-import java.awt.Color;
 import java.awt.Font;
 
 /**
@@ -10,7 +9,7 @@ import java.awt.Font;
  * @param bold whether bold
  * @param ink its colour
  */
-record Lettering(float size, boolean bold, Color ink) {
+record Lettering(float size, boolean bold, Colour ink) {
   static final Lettering TITLE = new Lettering(18, true, Palette.INK);
   static final Lettering SUBTITLE = new Lettering(12.5f, false, Palette.INK);
   static final Lettering HEADING = new Lettering(11.5f, true, Palette.INK);
@@ -33,7 +32,7 @@ record Lettering(float size, boolean bold, Color ink) {
   }
 
   /** The same in another colour. */
-  Lettering in(Color other) {
+  Lettering in(Colour other) {
     return new Lettering(size, bold, other);
   }
 }

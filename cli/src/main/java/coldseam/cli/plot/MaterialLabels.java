@@ -1,7 +1,6 @@
 package coldseam.cli.plot;
 
 import coldseam.cli.plot.Canvas.Anchor;
-import java.awt.Color;
 import java.awt.geom.Path2D;
 import java.awt.geom.Rectangle2D;
 import java.util.ArrayList;
@@ -114,7 +113,7 @@ final class MaterialLabels {
   private static void write(Canvas canvas, String name, Box box, double turn, MaterialLook look) {
     canvas.fill(new Rectangle2D.Double(box.x0(), box.y0(), box.width(), box.height()), look.tone());
     double drop = Lettering.LABEL.size() * TextWidths.CAPITAL / 2;
-    Color ink = Palette.luminance(look.tone()) < DARK ? Palette.PAPER : Palette.INK;
+    Colour ink = Palette.luminance(look.tone()) < DARK ? Palette.PAPER : Palette.INK;
     canvas.text(
         name,
         box.midX() - Math.sin(turn) * drop,

@@ -3,7 +3,6 @@ package coldseam.cli.plot;
 import coldseam.solver.detail.Fill;
 import coldseam.solver.detail.Hollow;
 import coldseam.solver.detail.Material;
-import java.awt.Color;
 import java.util.ArrayList;
 import java.util.EnumMap;
 import java.util.List;
@@ -21,7 +20,7 @@ import java.util.Map;
  * @param turn of the hatch, radians; relative to the longest side of a face for layers' hatches
  * @param pitch between two hatch lines, points
  */
-record MaterialLook(Hatch hatch, Color tone, Color line, double turn, double pitch) {
+record MaterialLook(Hatch hatch, Colour tone, Colour line, double turn, double pitch) {
   private static final List<String> GROUND =
       List.of("soil", "ground", "earth", "clay", "silt", "sand", "gravel", "hardcore", "fill");
   private static final List<String> TIMBER =
@@ -63,7 +62,7 @@ record MaterialLook(Hatch hatch, Color tone, Color line, double turn, double pit
 
     /** The look of the n-th material of this kind in a detail. */
     MaterialLook look(int n) {
-      Color tone = new Color(tones[n % tones.length]);
+      Colour tone = new Colour(tones[n % tones.length]);
       double turned = turn + (turn == 0 ? 0 : (n % 2) * Math.PI / 2);
       double wider = pitch * (1 + 0.45 * (n / 2)) * (turn == 0 ? 1 + 0.3 * (n % 2) : 1);
       Hatch kind = this == MASONRY && n >= 2 ? Hatch.PAIRS : hatch;

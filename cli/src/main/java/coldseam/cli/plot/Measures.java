@@ -1,7 +1,6 @@
 package coldseam.cli.plot;
 
 import coldseam.cli.plot.Canvas.Anchor;
-import java.awt.Color;
 import java.awt.geom.Path2D;
 import java.util.List;
 import java.util.Optional;
@@ -110,7 +109,7 @@ final class Measures {
   }
 
   /** The dimension line with its ticks and extension lines. */
-  private void lines(Polyline line, double offset, List<Double> marks, Color ink) {
+  private void lines(Polyline line, double offset, List<Double> marks, Colour ink) {
     double length = line.length();
     double ux = (line.x(1) - line.x(0)) / length;
     double uy = (line.y(1) - line.y(0)) / length;

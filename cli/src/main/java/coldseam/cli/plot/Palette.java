@@ -1,25 +1,23 @@
 package coldseam.cli.plot;
 
-import java.awt.Color;
-
 /**
  * The colours. Both scales run through ever lighter or ever darker colours, so that they keep their
  * order in grey and for readers who tell hues apart badly; nothing is told by colour alone.
  */
 final class Palette {
-  static final Color PAPER = Color.WHITE;
-  static final Color INK = new Color(0x22262B);
-  static final Color SECOND_INK = new Color(0x5A626A);
-  static final Color RULE = new Color(0xB9BEC4);
+  static final Colour PAPER = new Colour(0xFFFFFF);
+  static final Colour INK = new Colour(0x22262B);
+  static final Colour SECOND_INK = new Colour(0x5A626A);
+  static final Colour RULE = new Colour(0xB9BEC4);
 
   /** Inside surfaces, and everything said of them. */
-  static final Color INSIDE = new Color(0x94501C);
+  static final Colour INSIDE = new Colour(0x94501C);
 
   /** Outside surfaces. */
-  static final Color OUTSIDE = new Color(0x2A5A8A);
+  static final Colour OUTSIDE = new Colour(0x2A5A8A);
 
   /** Reference lengths of ψ. */
-  static final Color REFERENCE = new Color(0x6B2F77);
+  static final Colour REFERENCE = new Colour(0x6B2F77);
 
   private static final int[] TEMPERATURE = {
     0x2C427A, 0x46699B, 0x7793B0, 0xB0A69E, 0xDDB484, 0xF6D9A0, 0xFDF4D6
@@ -35,7 +33,7 @@ final class Palette {
    *
    * @param part 0 for the coldest, 1 for the warmest
    */
-  static Color temperature(double part) {
+  static Colour temperature(double part) {
     return along(TEMPERATURE, part);
   }
 
@@ -44,29 +42,29 @@ final class Palette {
    *
    * @param part 0 for the least, 1 for the most
    */
-  static Color flow(double part) {
+  static Colour flow(double part) {
     return along(FLOW, part);
   }
 
-  private static Color along(int[] stops, double part) {
+  private static Colour along(int[] stops, double part) {
     double place = Math.max(0, Math.min(1, part)) * (stops.length - 1);
     int below = Math.min((int) place, stops.length - 2);
-    return mix(new Color(stops[below]), new Color(stops[below + 1]), place - below);
+    return mix(new Colour(stops[below]), new Colour(stops[below + 1]), place - below);
   }
 
   /** A colour between two, 0 for the first and 1 for the second. */
-  static Color mix(Color a, Color b, double part) {
-    return new Color(
-        (int) Math.round(a.getRed() + part * (b.getRed() - a.getRed())),
-        (int) Math.round(a.getGreen() + part * (b.getGreen() - a.getGreen())),
-        (int) Math.round(a.getBlue() + part * (b.getBlue() - a.getBlue())));
+  static Colour mix(Colour a, Colour b, double part) {
+    long red = Math.round(a.red() + part * (b.red() - a.red()));
+    long green = Math.round(a.green() + part * (b.green() - a.green()));
+    long blue = Math.round(a.blue() + part * (b.blue() - a.blue()));
+    return new Colour((int) (red << 16 | green << 8 | blue));
   }
 
   /** Relative luminance, 0 black to 1 white (WCAG 2.1). */
-  static double luminance(Color colour) {
-    return 0.2126 * linear(colour.getRed())
-        + 0.7152 * linear(colour.getGreen())
-        + 0.0722 * linear(colour.getBlue());
+  static double luminance(Colour colour) {
+    return 0.2126 * linear(colour.red())
+        + 0.7152 * linear(colour.green())
+        + 0.0722 * linear(colour.blue());
   }
 
   private static double linear(int channel) {

@@ -76,14 +76,14 @@ final class PngCanvas extends Canvas {
   }
 
   @Override
-  void fill(Shape shape, Color colour) {
-    graphics.setPaint(colour);
+  void fill(Shape shape, Colour colour) {
+    graphics.setPaint(new Color(colour.rgb()));
     graphics.fill(shape);
   }
 
   @Override
-  void stroke(Shape shape, Color colour, Pen pen) {
-    graphics.setPaint(colour);
+  void stroke(Shape shape, Colour colour, Pen pen) {
+    graphics.setPaint(new Color(colour.rgb()));
     graphics.setStroke(pen.stroke());
     graphics.draw(shape);
   }
@@ -94,7 +94,7 @@ final class PngCanvas extends Canvas {
       return;
     }
     graphics.setFont(lettering.font());
-    graphics.setPaint(lettering.ink());
+    graphics.setPaint(new Color(lettering.ink().rgb()));
     AffineTransform saved = graphics.getTransform();
     graphics.rotate(turn, x, y);
     double before = beforeAnchor(text, lettering, anchor);

@@ -1,7 +1,6 @@
 package coldseam.cli.plot;
 
 import coldseam.solver.detail.Conditions;
-import java.awt.Color;
 import java.awt.geom.Path2D;
 import java.util.ArrayList;
 import java.util.List;
@@ -25,7 +24,7 @@ final class SectionLines {
   }
 
   /** Joints between materials, and sheets too thin to show otherwise. */
-  void joints(Canvas canvas, Color colour, Pen pen) {
+  void joints(Canvas canvas, Colour colour, Pen pen) {
     canvas.layer(name("joints"));
     List<Polyline> lines = new ArrayList<>();
     for (Polyline joint : section.joints()) {

@@ -2,7 +2,6 @@ package coldseam.cli.plot;
 
 import coldseam.solver.detail.Conditions;
 import coldseam.solver.detail.Exposure;
-import java.awt.Color;
 import java.awt.geom.Path2D;
 import java.util.ArrayList;
 import java.util.Comparator;
@@ -154,7 +153,7 @@ final class SurfaceMarks {
 
   /** Writes a value beside its surface, or with a leader where there is more room. */
   private boolean value(
-      Canvas canvas, Ground ground, SpaceLabels labels, Polyline line, String text, Color ink) {
+      Canvas canvas, Ground ground, SpaceLabels labels, Polyline line, String text, Colour ink) {
     Lettering lettering = Lettering.SMALL.in(ink);
     double width = TextWidths.of(text, lettering) + 2;
     double height = lettering.size() * 1.15;
@@ -176,7 +175,7 @@ final class SurfaceMarks {
     return place.isPresent();
   }
 
-  private Color ink(DrawnSection.Surface surface) {
+  private Colour ink(DrawnSection.Surface surface) {
     if (surface.space() < 0) {
       return Palette.INK;
     }

@@ -1,6 +1,5 @@
 package coldseam.cli.plot;
 
-import java.awt.Color;
 import java.awt.Shape;
 import java.awt.geom.PathIterator;
 
@@ -52,7 +51,7 @@ final class SvgCanvas extends Canvas {
   }
 
   @Override
-  void fill(Shape shape, Color colour) {
+  void fill(Shape shape, Colour colour) {
     if (path(shape)) {
       colour(" fill", colour);
       out.append("/>\n");
@@ -60,7 +59,7 @@ final class SvgCanvas extends Canvas {
   }
 
   @Override
-  void stroke(Shape shape, Color colour, Pen pen) {
+  void stroke(Shape shape, Colour colour, Pen pen) {
     if (path(shape)) {
       out.append(" fill=\"none\"");
       colour(" stroke", colour);
@@ -93,14 +92,10 @@ final class SvgCanvas extends Canvas {
     return true;
   }
 
-  private void colour(String attribute, Color colour) {
+  private void colour(String attribute, Colour colour) {
     out.append(attribute).append("=\"#");
     for (int shift = 20; shift >= 0; shift -= 4) {
-      out.append(Character.forDigit(colour.getRGB() >> shift & 0xF, 16));
-    }
-    if (colour.getAlpha() < 255) {
-      out.append('"').append(attribute).append("-opacity=\"");
-      PathText.number(colour.getAlpha() / 255.0, out);
+      out.append(Character.forDigit(colour.rgb() >> shift & 0xF, 16));
     }
     out.append('"');
   }
