@@ -7,6 +7,7 @@ import java.nio.file.LinkOption;
 import java.nio.file.Path;
 import java.nio.file.StandardCopyOption;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Collection;
 import java.util.LinkedHashSet;
 import java.util.List;
@@ -101,7 +102,7 @@ final class OutputFolder {
   }
 
   /**
-   * Writes files.
+   * Writes files. One that is there already with the same content is left alone, with its date.
    *
    * @param files name and content of each
    * @throws UsageException if something came in the way
@@ -113,16 +114,21 @@ final class OutputFolder {
     Path stage = null;
     try {
       makeParents(folder.getParent(), made);
+      boolean fresh = Files.notExists(folder);
       stage = Files.createDirectory(folder.resolveSibling(stageName()));
+      List<String> changed = new ArrayList<>();
       for (Map.Entry<String, byte[]> file : files.entrySet()) {
-        writer.write(stage.resolve(file.getKey()), file.getValue());
+        if (fresh || !holds(folder.resolve(file.getKey()), file.getValue())) {
+          writer.write(stage.resolve(file.getKey()), file.getValue());
+          changed.add(file.getKey());
+        }
       }
-      if (Files.notExists(folder)) {
+      if (fresh) {
         writer.write(stage.resolve(LIST), list(files.keySet()));
         Files.move(stage, folder, StandardCopyOption.ATOMIC_MOVE);
         stage = null;
       } else {
-        replace(stage, files.keySet());
+        replace(stage, files.keySet(), changed);
       }
       made.clear();
     } finally {
@@ -145,15 +151,29 @@ final class OutputFolder {
         + Long.toString(System.nanoTime() & Long.MAX_VALUE, Character.MAX_RADIX);
   }
 
-  private void replace(Path stage, Set<String> names) throws IOException {
+  /** Whether a file has this content already. */
+  private static boolean holds(Path file, byte[] content) throws IOException {
+    return Files.isRegularFile(file)
+        && Files.size(file) == content.length
+        && Arrays.equals(Files.readAllBytes(file), content);
+  }
+
+  /** Moves what changed into the folder; the list names everything old and new until the end. */
+  private void replace(Path stage, Set<String> names, List<String> changed) throws IOException {
     Set<String> before = listed();
-    Set<String> both = new LinkedHashSet<>(before);
-    both.addAll(names);
-    writer.write(stage.resolve(LIST), list(both));
-    writer.write(stage.resolve("last"), list(names));
-    moveOver(stage.resolve(LIST), folder.resolve(LIST));
-    for (String name : names) {
+    boolean sameNames = before.equals(names);
+    if (!sameNames) {
+      Set<String> both = new LinkedHashSet<>(before);
+      both.addAll(names);
+      writer.write(stage.resolve(LIST), list(both));
+      writer.write(stage.resolve("last"), list(names));
+      moveOver(stage.resolve(LIST), folder.resolve(LIST));
+    }
+    for (String name : changed) {
       moveOver(stage.resolve(name), folder.resolve(name));
+    }
+    if (sameNames) {
+      return;
     }
     for (String name : before) {
       if (!names.contains(name)) {
