@@ -49,7 +49,7 @@ class ColourTest {
   @Test
   void ink_reads_on_paper() {
     double paper = Palette.luminance(Palette.PAPER) + 0.05;
-    for (java.awt.Colour ink :
+    for (Colour ink :
         List.of(
             Palette.INK, Palette.SECOND_INK, Palette.INSIDE, Palette.OUTSIDE, Palette.REFERENCE)) {
       // WCAG 2.1, 1.4.3: contrast of text at least 4.5 to 1.
