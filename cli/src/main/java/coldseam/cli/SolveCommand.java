@@ -284,19 +284,18 @@ final class SolveCommand implements Command {
 
   private static Map<String, byte[]> files(Job job, Result result, Syntax.Typed typed)
       throws UsageException {
-    Map<String, byte[]> files = new LinkedHashMap<>();
-    files.put("result.json", bytes(Sheet.json(job.subject(), result, true) + "\n"));
-    files.put("result.csv", bytes(Sheet.csv(job.subject(), result)));
     Plots plots =
         Plots.of(
             result,
             new Plots.Caption(
                 job.subject().variant(), job.from().unit(), job.from().metresPerUnit()));
+    Plots.Begun begun = plots.begin(typed.has(NO_PLOTS) ? List.of() : PLOTS);
+    Map<String, byte[]> files = new LinkedHashMap<>();
+    files.put("result.json", bytes(Sheet.json(job.subject(), result, true) + "\n"));
+    files.put("result.csv", bytes(Sheet.csv(job.subject(), result)));
     try {
-      if (!typed.has(NO_PLOTS)) {
-        for (Map.Entry<Plots.Kind, String> svg : plots.svgs(PLOTS).entrySet()) {
-          files.put(svg.getKey().stem() + ".svg", bytes(svg.getValue()));
-        }
+      for (Map.Entry<Plots.Kind, String> svg : begun.finish().entrySet()) {
+        files.put(svg.getKey().stem() + ".svg", bytes(svg.getValue()));
       }
       for (Plots.Kind kind : PLOTS) {
         if (typed.has(PNG)) {

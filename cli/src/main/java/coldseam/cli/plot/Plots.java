@@ -101,26 +101,51 @@ public final class Plots {
    * @return one XML document each, in the order given
    */
   public Map<Kind, String> svgs(List<Kind> kinds) {
-    Map<Kind, FutureTask<String>> tasks = new LinkedHashMap<>();
-    for (Kind kind : kinds) {
-      tasks.put(kind, new FutureTask<>(new Drawing(this, kind)));
+    return begin(kinds).finish();
+  }
+
+  /**
+   * Begins to draw several plots as SVG on other threads, if the machine has the processors.
+   *
+   * @param kinds which
+   * @return the work begun; {@link Begun#finish()} draws what is left
+   */
+  public Begun begin(List<Kind> kinds) {
+    return new Begun(this, kinds);
+  }
+
+  /** Plots being drawn. */
+  public static final class Begun {
+    private final Map<Kind, FutureTask<String>> tasks = new LinkedHashMap<>();
+
+    private Begun(Plots plots, List<Kind> kinds) {
+      for (Kind kind : kinds) {
+        tasks.put(kind, new FutureTask<>(new Drawing(plots, kind)));
+      }
+      int others = Math.min(kinds.size(), Runtime.getRuntime().availableProcessors()) - 1;
+      for (int i = 0; i < others; i++) {
+        // A task runs once, whoever comes first.
+        Thread thread = new Thread(new Work(new ArrayList<>(tasks.values())), "plots");
+        thread.setDaemon(true);
+        thread.start();
+      }
     }
-    List<FutureTask<String>> inOrder = new ArrayList<>(tasks.values());
-    int others = Math.min(kinds.size(), Runtime.getRuntime().availableProcessors()) - 1;
-    for (int i = 0; i < others; i++) {
-      // A task runs once, whoever comes first.
-      Thread thread = new Thread(new Work(inOrder), "plots");
-      thread.setDaemon(true);
-      thread.start();
+
+    /**
+     * Draws what is left, from the end, and waits for the rest.
+     *
+     * @return one XML document each, in the order asked for
+     */
+    public Map<Kind, String> finish() {
+      List<FutureTask<String>> fromTheEnd = new ArrayList<>(tasks.values());
+      Collections.reverse(fromTheEnd);
+      new Work(fromTheEnd).run();
+      Map<Kind, String> drawn = new LinkedHashMap<>();
+      for (Map.Entry<Kind, FutureTask<String>> task : tasks.entrySet()) {
+        drawn.put(task.getKey(), result(task.getKey(), task.getValue()));
+      }
+      return drawn;
     }
-    List<FutureTask<String>> fromTheEnd = new ArrayList<>(inOrder);
-    Collections.reverse(fromTheEnd);
-    new Work(fromTheEnd).run();
-    Map<Kind, String> drawn = new LinkedHashMap<>();
-    for (Map.Entry<Kind, FutureTask<String>> task : tasks.entrySet()) {
-      drawn.put(task.getKey(), result(task.getKey(), task.getValue()));
-    }
-    return drawn;
   }
 
   private record Drawing(Plots plots, Kind kind) implements Callable<String> {
