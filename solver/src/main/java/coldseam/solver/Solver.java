@@ -92,16 +92,17 @@ public final class Solver {
 
     boolean surfaceNeeded = resolved.plan().surfaceNeeded();
     boolean shared = surfaceNeeded && resolved.plan().sameFilms();
+    Accuracy ofEach = accuracy.sharingPsi(1 + resolved.others().size());
     Agreed agreed =
         resolved.solve(
             resolved.goal(
-                accuracy,
+                ofEach,
                 resolved.plan().psiWanted(),
                 resolved.plan().heatLossTemperatures(shared)),
             progress);
     Plan plan = agreed.resolved().plan();
     Solution heatLoss = agreed.solution();
-    Map<Subtraction.OfDetail, OtherCoupling> others = solveOthers(resolved, accuracy, progress);
+    Map<Subtraction.OfDetail, OtherCoupling> others = solveOthers(resolved, ofEach, progress);
     times.ended("heat loss");
 
     Optional<Solution> surface = Optional.empty();

@@ -12,7 +12,9 @@ import static org.assertj.core.api.Assertions.within;
 
 import coldseam.mesh.plane.Point;
 import coldseam.solver.conduction.Certificate;
+import coldseam.solver.conduction.Progress;
 import coldseam.solver.conduction.Quantity;
+import coldseam.solver.detail.Accuracy;
 import coldseam.solver.detail.DetailException;
 import coldseam.solver.detail.FilmSet;
 import coldseam.solver.detail.Material;
@@ -311,6 +313,21 @@ class JunctionsTest {
         .satisfies(term -> assertThat(term.uWPerM2K()).isEmpty());
     assertThat(result.assumptions())
         .anyMatch(a -> a.what().equals("in 'plain wall': film at indoors, heat loss"));
+  }
+
+  /** The half-widths of both details add up in ψ, and their sum is what was asked for. */
+  @Test
+  void a_detail_and_one_taken_off_share_the_accuracy() {
+    for (double asked = 2e-4; asked < 2e-3; asked *= 1.2) {
+      Result result =
+          Solver.solve(
+              halfSlab()
+                  .psi("half", IN, OUT, Map.of(), INTERNAL, off("itself", halfSlab(), IN))
+                  .detail(),
+              new Accuracy(1, 1, asked, 1, 100_000),
+              Progress.SILENT);
+      assertThat(psi(result, "half").valueWPerMK().halfWidth()).isPositive().isLessThan(asked);
+    }
   }
 
   @Test

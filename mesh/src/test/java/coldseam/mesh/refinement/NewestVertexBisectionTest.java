@@ -151,6 +151,77 @@ class NewestVertexBisectionTest {
     assertThat(inFoil).isGreaterThan(64);
   }
 
+  /**
+   * Halving sides towards the end of a foil within a wall: no cell is cut across while it is long,
+   * so no triangle at the end stays slender, and each round that is wanted comes in the end.
+   */
+  @Test
+  void cellsAreSquareBeforeTheyAreCutAcross() {
+    Mesh mesh =
+        mesh(
+            17,
+            new double[][] {
+              {0, 0, 0, 0.2, 1.2}, {1, 0.1, 0.3, 0.1001, 1.2}, {2, 0.2, 0, 0.3, 1.2}
+            });
+    double cos = Math.cos(Math.toRadians(17));
+    double sin = Math.sin(Math.toRadians(17));
+    double x = cos * 0.1 - sin * 0.3 - mesh.origin().x();
+    double y = sin * 0.1 + cos * 0.3 - mesh.origin().y();
+    Mesh cut = mesh;
+    for (int round = 0; round < 10; round++) {
+      BitSet touching = new BitSet();
+      BitSet sides = sidesAt(cut, x, y);
+      for (int h = sides.nextSetBit(0); h >= 0; h = sides.nextSetBit(h + 1)) {
+        touching.set(h / 3);
+      }
+      cut = NewestVertexBisection.refine(cut, touching).mesh();
+    }
+    for (int round = 0; round < 36; round++) {
+      mesh = NewestVertexBisection.refineSides(mesh, sidesAt(mesh, x, y)).mesh();
+    }
+    assertThat(mostSlender(mesh, x, y)).isLessThan(7);
+    assertThat(mostSlender(cut, x, y)).isGreaterThan(20);
+    assertThat(longestAt(mesh, x, y)).isLessThan(1e-5);
+  }
+
+  /** The sides that meet at a point, 3t + k. */
+  private static BitSet sidesAt(Mesh mesh, double x, double y) {
+    BitSet sides = new BitSet();
+    for (int t = 0; t < mesh.triangleCount(); t++) {
+      for (int k = 0; k < 3; k++) {
+        int v = mesh.vertex(t, k);
+        if (Math.hypot(mesh.x(v) - x, mesh.y(v) - y) < 1e-9) {
+          sides.set(3 * t + (k + 1) % 3);
+          sides.set(3 * t + (k + 2) % 3);
+        }
+      }
+    }
+    return sides;
+  }
+
+  private static double longestAt(Mesh mesh, double x, double y) {
+    double longest = 0;
+    BitSet sides = sidesAt(mesh, x, y);
+    for (int h = sides.nextSetBit(0); h >= 0; h = sides.nextSetBit(h + 1)) {
+      longest = Math.max(longest, mesh.sideLength(mesh.side(h / 3, h % 3)));
+    }
+    return longest;
+  }
+
+  /** The largest length over height of the triangles at a point. */
+  private static double mostSlender(Mesh mesh, double x, double y) {
+    double most = 0;
+    BitSet sides = sidesAt(mesh, x, y);
+    for (int h = sides.nextSetBit(0); h >= 0; h = sides.nextSetBit(h + 1)) {
+      double longest = 0;
+      for (int k = 0; k < 3; k++) {
+        longest = Math.max(longest, mesh.sideLength(mesh.side(h / 3, k)));
+      }
+      most = Math.max(most, longest * longest / (2 * mesh.area(h / 3)));
+    }
+    return most;
+  }
+
   @Test
   void refiningAtOnePointEndsAtTheSmallestSize() {
     Mesh mesh = plate();

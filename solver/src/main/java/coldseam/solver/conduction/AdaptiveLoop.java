@@ -16,6 +16,9 @@ final class AdaptiveLoop {
   /** Part of an accuracy that a proved half-width may take: the middle is better than its proof. */
   private static final double PART_OF_PROVED = 0.6;
 
+  /** The same with more than two spaces: a ψ may join several, and with them their half-widths. */
+  private static final double PART_OF_SEVERAL = 0.35;
+
   /** The same where temperatures are asked for: near singular corners they are last to settle. */
   private static final double PART_WITH_TEMPERATURES = 0.12;
 
@@ -239,7 +242,8 @@ final class AdaptiveLoop {
       absolute = Math.min(absolute, accuracy.psiWPerMK());
     }
     boolean everywhere = goal.temperatures() == Conduction.Temperatures.EVERYWHERE;
-    double provedPart = everywhere ? PART_WITH_TEMPERATURES : PART_OF_PROVED;
+    double provedPart =
+        everywhere ? PART_WITH_TEMPERATURES : d.spaces > 2 ? PART_OF_SEVERAL : PART_OF_PROVED;
     double guessedPart = proving ? PART_OF_RELATIVE : PART_FOR_SURFACES;
     double relativePart = bound == null ? guessedPart : provedPart;
     double absolutePart = bound == null ? 3 * guessedPart : provedPart;

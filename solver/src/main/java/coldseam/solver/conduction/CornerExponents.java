@@ -23,6 +23,9 @@ final class CornerExponents {
   /** Stands for r log r. */
   private static final double LOGARITHMIC = 1;
 
+  /** Where the search begins: below the least α of conductors that touch in a point. */
+  private static final double LEAST = 1.0 / 1024;
+
   private static final double STEP = 1.0 / 16;
   private static final double PRECISION = 1e-4;
 
@@ -183,16 +186,17 @@ final class CornerExponents {
     if (closed && sectors == 1) {
       return REGULAR;
     }
-    double low = 0.5 * STEP;
+    double low = LEAST;
     double before = condition(low);
-    for (double high = low + STEP; high < REGULAR; high += STEP) {
+    for (double high = 0.5 * STEP; high < REGULAR; high += STEP) {
       double value = condition(high);
       if (value > 0 != before > 0) {
-        double root = bisect(high - STEP, high, before > 0);
+        double root = bisect(low, high, before > 0);
         if (Math.abs(root - 1) > LINEAR) {
           return root;
         }
       }
+      low = high;
       before = value;
     }
     return REGULAR;

@@ -46,4 +46,21 @@ public record Accuracy(
     double smallest = Math.min(couplingWPerMK, psiWPerMK);
     return NEGLIGIBLE * Math.min(smallest, STANDARD.couplingWPerMK);
   }
+
+  /**
+   * What each of several couplings has to meet whose errors add up in one ψ.
+   *
+   * @param couplings how many
+   * @return the same but for the half-width of ψ, which they share
+   */
+  public Accuracy sharingPsi(int couplings) {
+    return couplings == 1
+        ? this
+        : new Accuracy(
+            couplingRelative,
+            couplingWPerMK,
+            psiWPerMK / couplings,
+            transmittanceRelative,
+            mostUnknowns);
+  }
 }
