@@ -35,9 +35,6 @@ final class CaseReader {
           "variants",
           "expect");
 
-  /** The version of the format that is read. */
-  static final String VERSION = "1";
-
   /** More variants in one file are refused: a study is not a case. */
   private static final int MOST_VARIANTS = 200;
 
@@ -76,13 +73,12 @@ final class CaseReader {
       throw new CaseException(problems.inOrder());
     }
     Fields top = new Fields(problems, "a case", root.get(), KEYS);
-    checkVersion(top);
-    String title = title(top);
-    if (top.has("note")) {
-      Fields.text(problems, "`note`", top.get("note").get());
-    }
-    LengthUnit unit = unit(top);
-    List<Node.Entry> values = values(top);
+    Heading heading = new Heading(problems, top, "case");
+    heading.checkVersion();
+    String title = heading.title();
+    heading.note();
+    LengthUnit unit = heading.unit();
+    List<Node.Entry> values = heading.values();
     List<Variant> variants = variants(top, values);
     List<String> names = new ArrayList<>();
     for (Variant variant : variants) {
@@ -107,53 +103,6 @@ final class CaseReader {
 
   private DetailReader reader(Fields top, Pass pass, Optional<Variant> variant) {
     return new DetailReader(top, pass, new OtherCases(pass, chain, others), variant);
-  }
-
-  private void checkVersion(Fields top) {
-    Optional<Node> version = top.require("coldseam", "begin with `coldseam: 1`");
-    if (version.isEmpty()) {
-      return;
-    }
-    boolean known =
-        version.get() instanceof Node.Scalar scalar
-            && scalar.style() == Node.Style.PLAIN
-            && scalar.text().equals(VERSION);
-    if (!known) {
-      problems.add(
-          version.get(),
-          "this is format " + Node.describe(version.get()) + " of a case, which is not known here",
-          "write `coldseam: 1`");
-    }
-  }
-
-  private String title(Fields top) {
-    Optional<Node> node = top.require("title", "add `title: ` and what the detail is");
-    return node.isEmpty() ? "" : Fields.text(problems, "`title`", node.get()).orElse("");
-  }
-
-  private LengthUnit unit(Fields top) {
-    Optional<String> word = top.word("unit", LengthUnit.NAMES);
-    return word.isPresent() ? LengthUnit.named(word.get()) : LengthUnit.MM;
-  }
-
-  private List<Node.Entry> values(Fields top) {
-    if (!top.has("values")) {
-      return List.of();
-    }
-    List<Node.Entry> values = new ArrayList<>();
-    for (Node.Entry entry : Fields.named(problems, "`values`", top.get("values").get())) {
-      if (NamedValues.canBeNamed(entry.key().text())) {
-        values.add(entry);
-      } else {
-        problems.add(
-            entry.key(),
-            "`" + Node.shortened(entry.key().text()) + "` cannot be calculated with",
-            Expression.FUNCTIONS.contains(entry.key().text())
-                ? "choose a name that means nothing yet"
-                : "name values by words of letters and digits, beginning with a letter");
-      }
-    }
-    return values;
   }
 
   private List<Variant> variants(Fields top, List<Node.Entry> values) {

@@ -44,6 +44,37 @@ final class OtherCases {
    * @return the subtraction, or empty if a mistake was reported
    */
   Optional<Subtraction> read(Node fileNode, Optional<Node> variantNode, Node between) {
+    Optional<Named> named = named(fileNode, variantNode);
+    return named.isEmpty() ? Optional.empty() : subtraction(named.get(), between);
+  }
+
+  /**
+   * Another case as it was named.
+   *
+   * @param typed its file as typed
+   * @param read the case
+   * @param variant the variant meant, empty for the base case
+   */
+  record Named(String typed, Case read, Optional<String> variant) {
+    /** File and variant in words. */
+    String words() {
+      return variant.isPresent() ? typed + ", " + variant.get() : typed;
+    }
+
+    /** The detail of the variant meant. */
+    Detail detail() throws CaseException {
+      return read.detail(variant);
+    }
+  }
+
+  /**
+   * Reads another case.
+   *
+   * @param fileNode its path relative to this file's folder
+   * @param variantNode the name of a variant of it
+   * @return the case, or empty if a mistake was reported
+   */
+  Optional<Named> named(Node fileNode, Optional<Node> variantNode) {
     Optional<String> typed = Fields.text(problems, "`case`", fileNode);
     if (typed.isEmpty()) {
       return Optional.empty();
@@ -67,14 +98,13 @@ final class OtherCases {
         return Optional.empty();
       }
     }
-    return subtraction(typed.get(), other.get(), variant, between);
+    return Optional.of(new Named(typed.get(), other.get(), variant));
   }
 
-  private Optional<Subtraction> subtraction(
-      String typed, Case other, Optional<String> variant, Node between) {
+  private Optional<Subtraction> subtraction(Named named, Node between) {
     Detail detail;
     try {
-      detail = other.detail(variant);
+      detail = named.detail();
     } catch (CaseException e) {
       problems.add(between, "its case cannot be read: " + e.getMessage(), "mend that case first");
       return Optional.empty();
@@ -84,13 +114,12 @@ final class OtherCases {
       spaces.put(space.name(), Optional.of(space));
     }
     Optional<PairReader.Sides> sides =
-        new PairReader(problems, spaces).read(between, "`between` of `" + typed + "`");
+        new PairReader(problems, spaces).read(between, "`between` of `" + named.typed() + "`");
     if (sides.isEmpty()) {
       return Optional.empty();
     }
-    String name = variant.isPresent() ? typed + ", " + variant.get() : typed;
     return Optional.of(
-        new Subtraction.OfDetail(name, detail, sides.get().warm(), sides.get().cold()));
+        new Subtraction.OfDetail(named.words(), detail, sides.get().warm(), sides.get().cold()));
   }
 
   private Optional<Case> other(Node node, String typed) {

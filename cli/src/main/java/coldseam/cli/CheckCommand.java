@@ -3,6 +3,7 @@ package coldseam.cli;
 import coldseam.cases.Case;
 import coldseam.cases.CaseException;
 import coldseam.cases.Problem;
+import coldseam.cases.WindowFile;
 import coldseam.cli.sheet.Sheet;
 import coldseam.cli.sheet.Subject;
 import coldseam.cli.text.Json;
@@ -53,8 +54,7 @@ final class CheckCommand implements Command {
     boolean first = true;
     for (String name : typed.operands()) {
       try {
-        Case from = CaseList.read(List.of(name), NAME, here).get(0);
-        String shown = show(from, typed, here);
+        String shown = show(name, typed, here);
         if (!typed.has(QUIET)) {
           here.out().print(first || typed.has(JSON) ? shown : "\n\n" + shown);
         }
@@ -73,6 +73,18 @@ final class CheckCommand implements Command {
       return ExitCode.BAD_INPUT;
     }
     throw new CaseException(problems);
+  }
+
+  private static String show(String name, Syntax.Typed typed, Surroundings here)
+      throws UsageException, CaseException {
+    Path file = here.cwd().resolve(CaseList.path(name, NAME));
+    if (WindowFile.is(file)) {
+      if (typed.has(VARIANT)) {
+        throw new UsageException(NAME, name + " is a window file, which has no variants");
+      }
+      return WindowJobs.understood(WindowFile.read(file), typed.has(JSON), here);
+    }
+    return show(CaseList.read(List.of(name), NAME, here).get(0), typed, here);
   }
 
   private static String show(Case from, Syntax.Typed typed, Surroundings here)

@@ -2,6 +2,7 @@ package coldseam.cli;
 
 import coldseam.cases.Case;
 import coldseam.cases.CaseException;
+import coldseam.cases.WindowFile;
 import coldseam.cli.plot.NoFontException;
 import coldseam.cli.plot.Plots;
 import coldseam.cli.sheet.Sheet;
@@ -22,16 +23,16 @@ import java.util.Optional;
 
 /** Solves cases: card, data, plots. */
 final class SolveCommand implements Command {
-  private static final String NAME = "solve";
-  private static final String VARIANT = "--variant";
+  static final String NAME = "solve";
+  static final String VARIANT = "--variant";
   private static final String VARIANTS = "--variants";
   private static final String OUT = "--out";
-  private static final String JSON = "--json";
+  static final String JSON = "--json";
   private static final String PNG = "--png";
   private static final String NO_PLOTS = "--no-plots";
   private static final String ACCURACY = "--accuracy";
   private static final String MOST_UNKNOWNS = "--most-unknowns";
-  private static final String QUIET = "--quiet";
+  static final String QUIET = "--quiet";
 
   private static final List<Plots.Kind> PLOTS =
       List.of(Plots.Kind.SECTION, Plots.Kind.TEMPERATURE, Plots.Kind.HEAT_FLOW, Plots.Kind.SHARES);
@@ -46,7 +47,8 @@ final class SolveCommand implements Command {
         "Solves each case and prints its card. Data and plots go to a folder beside the case file,"
             + " balcony.coldseam for balcony.yaml: result.json, result.csv, section.svg,"
             + " temperature.svg, heat-flow.svg and shares.svg; a variant has a folder of its own in it. What an"
-            + " earlier solve wrote there is replaced, nothing else.",
+            + " earlier solve wrote there is replaced, nothing else. A window file gives the U_w of a"
+            + " whole window; the cases it names are solved for it, and it is written as data only.",
         List.of(
             new Syntax.Option(VARIANT, "NAME", "solve this variant instead of the base case"),
             new Syntax.Option(VARIANTS, "", "solve the base case and every variant"),
@@ -91,12 +93,25 @@ final class SolveCommand implements Command {
   public int run(Syntax.Typed typed, Surroundings here)
       throws UsageException, CaseException, IOException {
     contradictions(typed);
-    List<Job> jobs = jobs(typed, here);
+    List<String> cases = new ArrayList<>();
+    List<String> windows = new ArrayList<>();
+    for (String operand : typed.operands()) {
+      boolean window = WindowFile.is(here.cwd().resolve(CaseList.path(operand, NAME)));
+      (window ? windows : cases).add(operand);
+    }
+    Map<Path, String> taken = new LinkedHashMap<>();
+    List<WindowSolve> whole =
+        windows.isEmpty() ? List.of() : WindowSolve.read(windows, cases, typed, here, taken);
+    List<Job> jobs = jobs(cases, typed, here, taken);
     int code = ExitCode.DONE;
     boolean first = true;
     for (Job job : jobs) {
       Result result = solve(job, typed, here);
       code = ExitCode.worse(code, conclude(job, result, typed, here, first));
+      first = false;
+    }
+    for (WindowSolve job : whole) {
+      code = ExitCode.worse(code, job.conclude(typed, here, first));
       first = false;
     }
     return code;
@@ -114,11 +129,11 @@ final class SolveCommand implements Command {
     }
   }
 
-  private static List<Job> jobs(Syntax.Typed typed, Surroundings here)
+  private static List<Job> jobs(
+      List<String> cases, Syntax.Typed typed, Surroundings here, Map<Path, String> taken)
       throws UsageException, CaseException, IOException {
     List<Job> jobs = new ArrayList<>();
-    Map<Path, String> taken = new LinkedHashMap<>();
-    for (Case from : CaseList.read(typed.operands(), NAME, here)) {
+    for (Case from : CaseList.read(cases, NAME, here)) {
       List<Optional<String>> variants = new ArrayList<>();
       if (typed.has(VARIANT)) {
         variants.add(CaseList.variant(from, typed.value(VARIANT), NAME));
@@ -130,16 +145,10 @@ final class SolveCommand implements Command {
           }
         }
       }
-      Accuracy accuracy = from.accuracy();
-      if (typed.has(ACCURACY)) {
-        accuracy = AccuracyOption.read(accuracy, typed.value(ACCURACY));
-      }
-      if (typed.has(MOST_UNKNOWNS)) {
-        accuracy = AccuracyOption.limit(accuracy, typed.value(MOST_UNKNOWNS));
-      }
+      Accuracy accuracy = accuracy(from.accuracy(), typed);
       String shown = here.shown(from.file());
       for (Optional<String> variant : variants) {
-        Optional<OutputFolder> folder = folder(from, variant, typed, here, taken);
+        Optional<OutputFolder> folder = folder(from.file(), variant, typed, here, taken);
         if (folder.isPresent()) {
           folder.get().check(names(typed));
         }
@@ -151,8 +160,20 @@ final class SolveCommand implements Command {
     return jobs;
   }
 
-  private static Optional<OutputFolder> folder(
-      Case from,
+  /** The accuracy of a case, changed by what was typed. */
+  static Accuracy accuracy(Accuracy ofCase, Syntax.Typed typed) throws UsageException {
+    Accuracy accuracy = ofCase;
+    if (typed.has(ACCURACY)) {
+      accuracy = AccuracyOption.read(accuracy, typed.value(ACCURACY));
+    }
+    if (typed.has(MOST_UNKNOWNS)) {
+      accuracy = AccuracyOption.limit(accuracy, typed.value(MOST_UNKNOWNS));
+    }
+    return accuracy;
+  }
+
+  static Optional<OutputFolder> folder(
+      Path written,
       Optional<String> variant,
       Syntax.Typed typed,
       Surroundings here,
@@ -161,7 +182,7 @@ final class SolveCommand implements Command {
     if (typed.has(JSON) && !typed.has(OUT)) {
       return Optional.empty();
     }
-    Path file = here.cwd().resolve(from.file());
+    Path file = here.cwd().resolve(written);
     String stem = stem(file.getFileName().toString());
     Path folder;
     if (!typed.has(OUT)) {
@@ -214,7 +235,7 @@ final class SolveCommand implements Command {
     }
   }
 
-  private record Solving(Accuracy accuracy, Progress progress) implements CaseList.Work<Result> {
+  record Solving(Accuracy accuracy, Progress progress) implements CaseList.Work<Result> {
     @Override
     public Result on(Detail detail) {
       return Solver.solve(detail, accuracy, progress);
@@ -253,7 +274,7 @@ final class SolveCommand implements Command {
     return ExitCode.ACCURACY;
   }
 
-  private static void write(OutputFolder folder, Map<String, byte[]> files) throws UsageException {
+  static void write(OutputFolder folder, Map<String, byte[]> files) throws UsageException {
     try {
       folder.write(files);
     } catch (IOException e) {
@@ -308,7 +329,7 @@ final class SolveCommand implements Command {
     return files;
   }
 
-  private static byte[] bytes(String text) {
+  static byte[] bytes(String text) {
     return text.getBytes(StandardCharsets.UTF_8);
   }
 }

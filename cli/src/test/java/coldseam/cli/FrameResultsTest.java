@@ -18,7 +18,7 @@ import org.junit.jupiter.api.io.TempDir;
 
 /** A frame as it is shown: both runs, the lengths, and what is taken off. */
 class FrameResultsTest {
-  private static final String FRAME =
+  static final String FRAME =
       """
       coldseam: 1
       title: Frame

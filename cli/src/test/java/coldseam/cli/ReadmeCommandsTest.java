@@ -29,7 +29,7 @@ class ReadmeCommandsTest {
   @Test
   void the_commands_at_the_head_of_every_shipped_case() throws IOException {
     List<Path> shipped = new ArrayList<>();
-    for (String folder : List.of("cases/demo", "cases/published")) {
+    for (String folder : List.of("cases/demo", "cases/published", "cases/windows")) {
       try (Stream<Path> files = Files.list(Root.folder().resolve(folder))) {
         files.filter(file -> file.toString().endsWith(".yaml")).sorted().forEach(shipped::add);
       }
@@ -78,7 +78,7 @@ class ReadmeCommandsTest {
 
   private void copyCases() throws IOException {
     Path from = Root.folder().resolve("cases");
-    for (String folder : List.of("demo", "published")) {
+    for (String folder : List.of("demo", "published", "windows")) {
       Path to = Files.createDirectories(dir.resolve("cases").resolve(folder));
       try (Stream<Path> files = Files.list(from.resolve(folder))) {
         for (Path file : files.filter(Files::isRegularFile).toList()) {

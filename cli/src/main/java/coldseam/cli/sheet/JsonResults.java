@@ -115,7 +115,7 @@ record JsonResults(Subject subject, Result result) {
   }
 
   /** Value, bounds and what is known of them, names ending in the unit. */
-  private static void quantity(Json json, Quantity quantity, String unit) {
+  static void quantity(Json json, Quantity quantity, String unit) {
     json.member("value_" + unit, quantity.value());
     if (quantity.certificate() instanceof Certificate.Certified proved) {
       json.member("lower_" + unit, proved.lower())

@@ -2,6 +2,7 @@ package coldseam.cli.sheet;
 
 import coldseam.cli.text.Ink;
 import coldseam.solver.Solver;
+import coldseam.solver.detail.Assumption;
 import coldseam.solver.result.Result;
 import java.util.List;
 
@@ -47,6 +48,39 @@ public final class Sheet {
   }
 
   /**
+   * The card of a window.
+   *
+   * @param of the window and its U_w
+   * @param ink colours, or none
+   * @return lines, each ended by a line feed
+   */
+  public static String card(WindowSubject of, Ink ink) {
+    return new WindowCard(of, ink).text();
+  }
+
+  /**
+   * A window as one JSON object; {@code window-result.schema.json} beside this program says what
+   * stands in it.
+   *
+   * @param of the window and its U_w
+   * @param indented many lines instead of one
+   * @return the object, without a line feed at the end
+   */
+  public static String json(WindowSubject of, boolean indented) {
+    return new WindowData(of).json(indented);
+  }
+
+  /**
+   * A window as comma-separated values (RFC 4180, UTF-8): a heading, then one row a term.
+   *
+   * @param of the window and its U_w
+   * @return lines, each ended by a line feed
+   */
+  public static String csv(WindowSubject of) {
+    return new WindowData(of).csv();
+  }
+
+  /**
    * What is understood of a case, for the terminal.
    *
    * @param subject what it is about
@@ -67,6 +101,33 @@ public final class Sheet {
    */
   public static String understoodJson(Subject subject, Solver.Inspection inspection) {
     return new JsonInspection(subject, inspection).text();
+  }
+
+  /**
+   * What is understood of a window file, for the terminal.
+   *
+   * @param subject title, file and units of the window file
+   * @param cases file and variant of each case that is solved for it
+   * @param assumptions everything chosen for the user
+   * @param ink colours, or none
+   * @return lines, each ended by a line feed
+   */
+  public static String understood(
+      Subject subject, List<String> cases, List<Assumption> assumptions, Ink ink) {
+    return new WindowInspection(subject, cases, assumptions).text(ink);
+  }
+
+  /**
+   * What is understood of a window file, as one JSON object.
+   *
+   * @param subject title, file and units of the window file
+   * @param cases file and variant of each case that is solved for it
+   * @param assumptions everything chosen for the user
+   * @return the object on one line, without a line feed at the end
+   */
+  public static String understoodJson(
+      Subject subject, List<String> cases, List<Assumption> assumptions) {
+    return new WindowInspection(subject, cases, assumptions).json();
   }
 
   /**
