@@ -40,7 +40,8 @@ final class CavityReader {
   static final List<String> FORMS = List.of("earlier", "2017");
   static final List<String> TEMPERATURES = List.of("fixed", "found");
 
-  private static final double MM2 = 1e-6;
+  /** mm² in a m². */
+  private static final double MM2_PER_M2 = 1e6;
 
   private final Pass pass;
   private final Problems problems;
@@ -164,7 +165,10 @@ final class CavityReader {
       return Double.isNaN(mm2)
           ? Optional.empty()
           : Optional.of(
-              new Exchange(Ventilation.ofOpenings(mm2 * MM2), OptionalDouble.of(mm2 * MM2), to));
+              new Exchange(
+                  Ventilation.ofOpenings(mm2 / MM2_PER_M2),
+                  OptionalDouble.of(mm2 / MM2_PER_M2),
+                  to));
     }
     if (to.isPresent()) {
       problems.add(

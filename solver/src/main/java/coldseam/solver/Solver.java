@@ -4,6 +4,7 @@ import coldseam.mesh.partition.Partition;
 import coldseam.mesh.plane.Resolution;
 import coldseam.solver.air.Cavities;
 import coldseam.solver.air.Cavity;
+import coldseam.solver.air.SlightLayers;
 import coldseam.solver.conduction.Conduction;
 import coldseam.solver.conduction.Progress;
 import coldseam.solver.conduction.Solution;
@@ -19,6 +20,7 @@ import coldseam.solver.detail.FrameDetail;
 import coldseam.solver.detail.Geometry;
 import coldseam.solver.detail.Subtraction;
 import coldseam.solver.detail.Wanted;
+import coldseam.solver.result.Interpolation;
 import coldseam.solver.result.OtherCoupling;
 import coldseam.solver.result.Plan;
 import coldseam.solver.result.Result;
@@ -88,6 +90,12 @@ public final class Solver {
   public static Result solve(Detail detail, Accuracy accuracy, Progress progress) {
     StageTimes times = new StageTimes();
     Resolved resolved = Resolved.of(detail);
+    if (resolved.cavities().isPresent()) {
+      Optional<SlightLayers> slight = resolved.cavities().get().slightLayers(detail);
+      if (slight.isPresent()) {
+        return between(slight.get(), accuracy, progress);
+      }
+    }
     times.ended("resolve");
 
     boolean surfaceNeeded = resolved.plan().surfaceNeeded();
@@ -127,6 +135,30 @@ public final class Solver {
     List<Cavity> cavities =
         agreed.cavities().isPresent() ? agreed.cavities().get().cavities() : List.of();
     return plan.result(heatLoss, surface, others, cavities, times);
+  }
+
+  private static Result between(SlightLayers slight, Accuracy accuracy, Progress progress) {
+    for (Wanted wanted : slight.unventilated().wanted()) {
+      if (wanted instanceof Wanted.Frame) {
+        throw new DetailException(
+            List.of(
+                new Fault(
+                    "cavity",
+                    "",
+                    "a frame cannot hold slightly ventilated air layers ("
+                        + String.join(", ", slight.names())
+                        + "); make them cavities of the frame by `rule: frame`",
+                    Optional.empty())));
+      }
+    }
+    return Interpolation.between(
+        solve(slight.unventilated(), accuracy, progress),
+        solve(slight.wellVentilated(), accuracy, progress),
+        slight.wellShare(),
+        slight.names(),
+        slight.openingsStated()
+            ? "from their openings"
+            : "openings taken as 1000 mm² since only the class is stated");
   }
 
   private static Map<Subtraction.OfDetail, OtherCoupling> solveOthers(
@@ -270,7 +302,19 @@ public final class Solver {
 
     private static Resolved resolveOther(Subtraction.OfDetail of) {
       try {
-        return of(of.detail());
+        Resolved other = of(of.detail());
+        if (other.cavities.isPresent()
+            && other.cavities.get().slightLayers(of.detail()).isPresent()) {
+          throw new DetailException(
+              List.of(
+                  new Fault(
+                      "cavity",
+                      "",
+                      "slightly ventilated air layers cannot be taken off; state `unventilated` or"
+                          + " `well`",
+                      Optional.empty())));
+        }
+        return other;
       } catch (DetailException e) {
         throw nested(of, e);
       }

@@ -22,6 +22,11 @@ final class AirPieces {
   /** Part of itself by which the area of a piece may change when it is cut. */
   private static final double AREA_KEPT = 1e-9;
 
+  /** From left to right and upwards, by the lower left corner of the box round a piece. */
+  static final Comparator<Piece> LEFT_TO_RIGHT =
+      Comparator.comparingDouble((Piece p) -> rounded(left(p)))
+          .thenComparingDouble(p -> rounded(bottom(p)));
+
   private final Detail detail;
   private final List<Fill> fills;
   private final Partition partition;
@@ -69,9 +74,7 @@ final class AirPieces {
         }
       }
     }
-    pieces.sort(
-        Comparator.comparingDouble((Piece p) -> rounded(left(p)))
-            .thenComparingDouble(p -> rounded(bottom(p))));
+    pieces.sort(LEFT_TO_RIGHT);
     return pieces;
   }
 

@@ -193,7 +193,8 @@ public final class Cavities {
     do {
       Solution solution = Conduction.solveOnMeshOf(near, now.in(conditions));
       now = now.after(solution, tolerance, temperaturesC);
-    } while (!now.settled() && now.passes() < MOST_PASSES);
+      // one is left for the solution that is proved
+    } while (!now.settled() && now.passes() < MOST_PASSES - 1);
     return now;
   }
 
@@ -252,6 +253,17 @@ public final class Cavities {
   /** Solutions looked at so far. */
   public int passes() {
     return state.passes();
+  }
+
+  /**
+   * The slightly ventilated air layers among the cavities.
+   *
+   * @param detail the detail as drawn, to be solved with the layers unventilated and well
+   *     ventilated
+   * @throws coldseam.solver.detail.DetailException if two of them have different openings
+   */
+  public Optional<SlightLayers> slightLayers(Detail detail) {
+    return SlightLayers.of(detail, laid.groups(), shapes);
   }
 
   /** Every cavity, from left to right. */

@@ -186,10 +186,11 @@ final class LaidAir {
       }
     }
     if (finer.size() > pieces.size()) {
-      pieces = finer;
+      pieces = new ArrayList<>(finer);
+      pieces.sort(AirPieces.LEFT_TO_RIGHT);
       parent = new int[finer.size()];
       for (int p = 0; p < parent.length; p++) {
-        parent[p] = from.get(p);
+        parent[p] = from.get(finer.indexOf(pieces.get(p)));
       }
       layPieces();
     }
