@@ -59,6 +59,9 @@ final class CavitySection {
           Digits.significant(as.conductivityWPerMK(), 4) + (as.stated() ? " stated" : ""));
     }
     text.append(table.text());
+    if (passes == 0) {
+      return;
+    }
     String note =
         "Settled in "
             + passes

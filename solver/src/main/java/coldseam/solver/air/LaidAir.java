@@ -11,9 +11,9 @@ import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.Fill;
 import coldseam.solver.detail.FilmRule;
 import coldseam.solver.detail.Material;
+import coldseam.solver.detail.Space;
 import coldseam.solver.detail.VentilatedAir;
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Set;
@@ -25,6 +25,9 @@ import java.util.Set;
 final class LaidAir {
   /** Conductivity of still air, until a cavity has its own, W/(m·K). */
   private static final double STILL_W_PER_MK = 0.025;
+
+  /** Width at a bend of a layer over its thickness, up to which it is cut there. */
+  private static final double BEND = 1.2;
 
   private static final FilmRule STILL_AIR =
       new FilmRule(
@@ -54,6 +57,9 @@ final class LaidAir {
   /** The piece that each piece was cut from where openings are wide, or itself. */
   private int[] parent;
 
+  /** The class of each piece that is a leg of a layer, or null. */
+  private Piece.Classed[] inherited;
+
   private Detail detail;
   private Partition partition;
   private Rims rims;
@@ -66,10 +72,9 @@ final class LaidAir {
     for (int p = 0; p < parent.length; p++) {
       parent[p] = p;
     }
+    inherited = new Piece.Classed[pieces.size()];
     layPieces();
-    if (!pieces.isEmpty()) {
-      cutWherePartOfItIsOutdoors();
-    }
+    cutAgain();
     groups = grouped();
     boolean same = groups.size() == pieces.size();
     for (Group group : groups) {
@@ -104,7 +109,7 @@ final class LaidAir {
       areas.add(area(pieces.get(p), Material.of(names.get(p), STILL_W_PER_MK)));
     }
     lay(areas, names);
-    classed = Ventilations.of(detail, rims, pieces);
+    classed = Ventilations.of(detail, rims, pieces, inherited);
   }
 
   private List<Area> others() {
@@ -134,6 +139,9 @@ final class LaidAir {
     for (Fill fill : drawn.fills()) {
       taken.add(fill.name());
     }
+    for (Space space : drawn.spaces()) {
+      taken.add(space.name());
+    }
     String stem = "cavity ";
     while (true) {
       List<String> names = new ArrayList<>(count);
@@ -151,49 +159,68 @@ final class LaidAir {
     }
   }
 
-  /**
-   * A frame's air that is open to a space by a wide mouth belongs to that space only as far as its
-   * narrowest part is wide as well; what lies behind a slit is a cavity that opens by that slit.
-   */
-  private void cutWherePartOfItIsOutdoors() {
+  /** Cuts pieces once more where they are as narrow as {@link #widthToCut}. */
+  private void cutAgain() {
     List<Piece> finer = new ArrayList<>();
     List<Integer> from = new ArrayList<>();
-    int[] label = new int[pieces.size()];
-    Arrays.fill(label, -1);
-    List<Fill> fills = detail.fills();
-    for (int l = 0; l < fills.size(); l++) {
-      for (int p = 0; p < pieces.size(); p++) {
-        if (detail.areas().get(detail.areas().size() - pieces.size() + p).fill() == fills.get(l)) {
-          label[p] = l;
-        }
-      }
-    }
+    int[] faceOfPiece = faces();
     for (int p = 0; p < pieces.size(); p++) {
-      Piece.Classed of = classed.get(p);
-      boolean wide = of.well() && of.rule() == Rule.FRAME && !of.ventilationStated();
-      for (int face = 0; wide && face < partition.faceCount(); face++) {
-        if (partition.faceLabel(face) == label[p]) {
-          for (List<List<Point>> rings :
-              Throats.pieces(partition, face, Ventilation.SLIGHTLY_VENTILATED_SLIT_M)) {
-            finer.add(pieces.get(p).with(rings));
-            from.add(p);
-          }
-        }
-      }
-      if (!wide) {
+      double width = widthToCut(p);
+      if (width == 0) {
         finer.add(pieces.get(p));
+        from.add(p);
+        continue;
+      }
+      for (List<List<Point>> rings : Throats.pieces(partition, faceOfPiece[p], width)) {
+        finer.add(pieces.get(p).with(rings));
         from.add(p);
       }
     }
-    if (finer.size() > pieces.size()) {
-      pieces = new ArrayList<>(finer);
-      pieces.sort(AirPieces.LEFT_TO_RIGHT);
-      parent = new int[finer.size()];
-      for (int p = 0; p < parent.length; p++) {
-        parent[p] = from.get(finer.indexOf(pieces.get(p)));
-      }
-      layPieces();
+    if (finer.size() == pieces.size()) {
+      return;
     }
+    pieces = new ArrayList<>(finer);
+    pieces.sort(AirPieces.LEFT_TO_RIGHT);
+    parent = new int[finer.size()];
+    inherited = new Piece.Classed[finer.size()];
+    for (int p = 0; p < parent.length; p++) {
+      int before = from.get(finer.indexOf(pieces.get(p)));
+      boolean leg = classed.get(before).rule() == Rule.LAYER;
+      parent[p] = leg ? -1 - p : before;
+      inherited[p] = leg ? classed.get(before) : null;
+    }
+    layPieces();
+  }
+
+  /**
+   * The width down to which a piece is cut again, m; 0 for not at all.
+   *
+   * <p>A frame's air that is open to a space by a wide mouth belongs to that space only as far as
+   * its narrowest part is wide as well; what lies behind a slit is a cavity that opens by that
+   * slit. A layer that goes round corners is cut there into straight legs, each with its own
+   * direction of heat flow.
+   */
+  private double widthToCut(int p) {
+    Piece.Classed of = classed.get(p);
+    if (of.rule() == Rule.LAYER) {
+      return BEND * pieces.get(p).thicknessIfBentM();
+    }
+    return of.well() && !of.ventilationStated() ? Ventilation.SLIGHTLY_VENTILATED_SLIT_M : 0;
+  }
+
+  /** The face of each piece. */
+  private int[] faces() {
+    int[] face = new int[pieces.size()];
+    List<Fill> fills = detail.fills();
+    int first = detail.areas().size() - pieces.size();
+    for (int f = 0; f < partition.faceCount(); f++) {
+      for (int p = 0; p < face.length; p++) {
+        if (detail.areas().get(first + p).fill() == fills.get(partition.faceLabel(f))) {
+          face[p] = f;
+        }
+      }
+    }
+    return face;
   }
 
   /** Pieces of one parent that touch and are not well ventilated are one cavity. */

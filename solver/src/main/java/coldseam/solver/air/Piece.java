@@ -77,6 +77,31 @@ record Piece(Area source, AirCavity fill, List<List<Point>> rings, AirCavity.Set
     return sum;
   }
 
+  /**
+   * Thickness of a strip that goes round corners, m: that of the straight strip of the same area
+   * and perimeter. 0 if the piece is a rectangle or no strip.
+   */
+  double thicknessIfBentM() {
+    double perimeter = 0;
+    for (List<Point> ring : rings) {
+      for (int i = 0; i < ring.size(); i++) {
+        perimeter += ring.get(i).distance(ring.get((i + 1) % ring.size()));
+      }
+    }
+    double area = areaM2();
+    Axes axes = Axes.of(rings.get(0));
+    double box = axes.extent(rings.get(0), 0) * axes.extent(rings.get(0), 1);
+    double half = perimeter / 2;
+    double root = Math.sqrt(Math.max(0, half * half - 4 * area));
+    double thickness = (half - root) / 2;
+    double length = (half + root) / 2;
+    boolean bent = area < (1 - Limits.TIE) * box && thickness < STRIP * length;
+    return bent ? thickness : 0;
+  }
+
+  /** Thickness over length up to which a piece of a layer is a strip. */
+  private static final double STRIP = 0.25;
+
   private static double signedArea(List<Point> ring) {
     Point o = ring.get(0);
     double twice = 0;

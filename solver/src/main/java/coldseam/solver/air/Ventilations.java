@@ -24,9 +24,11 @@ final class Ventilations {
   private final Rims rims;
   private final List<Piece> pieces;
   private final int[] space;
+  private final Piece.Classed[] inherited;
   private final Piece.Classed[] classed;
 
-  private Ventilations(Detail detail, Rims rims, List<Piece> pieces) {
+  private Ventilations(Detail detail, Rims rims, List<Piece> pieces, Piece.Classed[] inherited) {
+    this.inherited = inherited;
     this.detail = detail;
     this.rims = rims;
     this.pieces = pieces;
@@ -40,10 +42,12 @@ final class Ventilations {
    * @param detail a detail in which every piece is a fill of its own
    * @param rims their rims
    * @param pieces the pieces
+   * @param inherited the class of each piece that is not to be found anew, else null
    * @return one class a piece
    */
-  static List<Piece.Classed> of(Detail detail, Rims rims, List<Piece> pieces) {
-    Ventilations ventilations = new Ventilations(detail, rims, pieces);
+  static List<Piece.Classed> of(
+      Detail detail, Rims rims, List<Piece> pieces, Piece.Classed[] inherited) {
+    Ventilations ventilations = new Ventilations(detail, rims, pieces, inherited);
     ventilations.classAll();
     return List.of(ventilations.classed);
   }
@@ -57,7 +61,7 @@ final class Ventilations {
         if (space[p] != NONE) {
           continue;
         }
-        classed[p] = classOf(p);
+        classed[p] = inherited[p] == null ? classOf(p) : inherited[p];
         if (classed[p].well()) {
           space[p] = detail.spaceIndex(classed[p].space().orElseThrow());
           changed = true;

@@ -203,6 +203,29 @@ class AirLayersTest {
     assertThat(cavity.ventilation()).isEqualTo(Ventilation.WELL_VENTILATED);
   }
 
+  /** Each leg has the thickness and the direction of its own: 0.1831 beside, 0.1623 above. */
+  @Test
+  void a_layer_round_a_corner_is_cut_into_its_legs() {
+    DrawnDetail drawn =
+        new DrawnDetail()
+            .view(View.UPRIGHT)
+            .box(outdoors(0), -200, -0.0, 1000, 1300)
+            .box(material("brick", 0.77), 0, 0, 1000, 1000)
+            .box(AirCavity.of("air"), 100, 0, 1000, 900)
+            .box(material("wool", 0.04), 150, 0, 1000, 850)
+            .box(room("indoors", 20), 300, 0, 1000, 700);
+    Result result = drawn.solve(1e-3);
+    assertThat(result.cavities()).hasSize(2);
+    for (Cavity cavity : result.cavities()) {
+      Cavity.Counted as = cavity.counted().orElseThrow();
+      assertThat(as.box().depthM()).isCloseTo(0.05, within(1e-9));
+      double r = Math.abs(as.direction().y()) > 0.5 ? 0.1623 : 0.1831;
+      assertThat(0.05 / as.conductivityWPerMK()).isCloseTo(r, within(1e-4));
+    }
+    assertThat(result.cavities().get(0).areaM2() + result.cavities().get(1).areaM2())
+        .isCloseTo(0.05 * (900 + 850) / 1000, within(1e-9));
+  }
+
   @Test
   void a_layer_thicker_than_the_standard_knows_is_solved_with_its_thickest() {
     Result result = wall(air(Settings.NONE), 450).view(View.UPRIGHT).solve(1e-3);
