@@ -134,7 +134,7 @@ final class LineLabels {
 
   private boolean free(double[] at, double width, double turn, Lettering lettering) {
     double half = lettering.size() / 2;
-    for (double lift : new double[] {-half, 0, half}) {
+    for (double lift : new double[] {-half, -half / 2, 0, half / 2, half}) {
       if (ground.blocked(row(at[0], at[1], width, turn, lift), Ground.ANYWHERE) > 0) {
         return false;
       }
@@ -170,7 +170,7 @@ final class LineLabels {
         lettering,
         Anchor.MIDDLE,
         place.turn());
-    for (double lift : new double[] {-half, 0, half}) {
+    for (double lift : new double[] {-half, -half / 2, 0, half / 2, half}) {
       ground.take(row(place.x(), place.y(), width, place.turn(), lift));
     }
   }

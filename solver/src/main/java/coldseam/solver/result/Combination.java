@@ -46,9 +46,20 @@ final class Combination {
 
   /** Adds a conductance times a factor. */
   Combination add(double factor, ByPart conductance) {
+    return add(factor, conductance, "");
+  }
+
+  /**
+   * Adds a conductance times a factor.
+   *
+   * @param factor of either sign
+   * @param conductance as it depends on its parts
+   * @param of which other detail it is of, to tell its parts from others of their name; or empty
+   */
+  Combination add(double factor, ByPart conductance, String of) {
     double size = Math.abs(factor);
     for (ByPart.Entry entry : conductance.entries()) {
-      Row row = row(entry.part());
+      Row row = row(entry.part(), of);
       row.slope += factor * entry.slope();
       if (factor > 0) {
         row.upper += size * entry.slope();
@@ -77,11 +88,16 @@ final class Combination {
     return this;
   }
 
-  private Row row(Part part) {
+  private Row row(Part part, String of) {
+    boolean taken = false;
     for (Row row : rows) {
       if (row.part.same(part)) {
         return row;
       }
+      taken |= row.part.name().equals(part.name());
+    }
+    if (taken && !of.isEmpty()) {
+      return row(part.called(part.name() + " in " + of), "");
     }
     Row row = new Row(part);
     rows.add(row);

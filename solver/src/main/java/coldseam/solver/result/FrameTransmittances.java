@@ -200,8 +200,26 @@ final class FrameTransmittances {
         psi,
         List.copyOf(subtracted),
         List.of(),
-        known ? sum.sensitivities() : List.of(),
+        known ? merged(sum.sensitivities()) : List.of(),
         known ? sum.tolerance(psi) : Optional.empty());
+  }
+
+  /** A cavity may conduct otherwise in each run: as one thing it counts with both. */
+  private static List<Result.Sensitivity> merged(List<Result.Sensitivity> all) {
+    List<Result.Sensitivity> merged = new ArrayList<>();
+    for (Result.Sensitivity one : all) {
+      int known = 0;
+      while (known < merged.size() && !merged.get(known).of().equals(one.of())) {
+        known++;
+      }
+      if (known == merged.size()) {
+        merged.add(one);
+      } else {
+        double slope = merged.get(known).slope() + one.slope();
+        merged.set(known, new Result.Sensitivity(one.of(), one.film(), slope));
+      }
+    }
+    return List.copyOf(merged);
   }
 
   private static List<Result.Subtracted> terms(FramePlan plan) {

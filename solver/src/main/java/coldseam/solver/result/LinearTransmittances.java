@@ -128,7 +128,7 @@ final class LinearTransmittances {
         if (other.isEmpty()) {
           return Optional.empty();
         }
-        all.add(-1, other.get());
+        all.add(-1, other.get(), term.name());
         continue;
       }
       Bracket u = term.uWPerM2K().get();

@@ -54,6 +54,11 @@ record Part(
     return parts;
   }
 
+  /** The same under another name. */
+  Part called(String other) {
+    return new Part(other, film, conductivityWPerMK, crossConductivityWPerMK, relativeTolerance);
+  }
+
   /** Whether it is the same material or film, so that one factor holds for both. */
   boolean same(Part other) {
     return film == other.film
