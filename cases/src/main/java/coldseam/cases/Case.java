@@ -27,6 +27,14 @@ public interface Case {
    */
   Detail detail(Optional<String> variant) throws CaseException;
 
+  /**
+   * Places in the drawings used that the reader should look at.
+   *
+   * @param variant a name of {@link #variants()}, empty for the base case
+   * @return in the order found; none of a case without drawings
+   */
+  List<Doubt> doubts(Optional<String> variant);
+
   /** The accuracy asked for in the case, the standard one where it says nothing. */
   Accuracy accuracy();
 

@@ -17,6 +17,19 @@ public final class CaseFile {
    *     is a folder, is not text or is too large
    */
   public static Case read(Path file) throws CaseException {
-    return new CaseReader(file, List.of(CaseReader.normalised(file)), new HashMap<>()).read();
+    return read(file, List.of());
+  }
+
+  /**
+   * Reads a case and checks all of it, variants included.
+   *
+   * @param file the file
+   * @param drawings drawings outside of the case's folder that it may take shapes from
+   * @return the case
+   * @throws CaseException with every problem found, in line order
+   */
+  public static Case read(Path file, List<Path> drawings) throws CaseException {
+    List<Path> chain = List.of(CaseReader.normalised(file));
+    return new CaseReader(file, chain, new HashMap<>(), new OpenedDrawings(drawings)).read();
   }
 }

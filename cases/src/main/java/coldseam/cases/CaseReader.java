@@ -19,6 +19,7 @@ final class CaseReader {
           "up",
           "geometry",
           "values",
+          "drawings",
           "materials",
           "spaces",
           "cavities",
@@ -41,6 +42,7 @@ final class CaseReader {
   private final Path file;
   private final List<Path> chain;
   private final Map<Path, Optional<Case>> others;
+  private final OpenedDrawings drawings;
   private final Problems problems;
 
   /**
@@ -49,11 +51,14 @@ final class CaseReader {
    * @param file the file
    * @param chain the files being read, this one last, normalised
    * @param others the files read before
+   * @param drawings the drawings opened before
    */
-  CaseReader(Path file, List<Path> chain, Map<Path, Optional<Case>> others) {
+  CaseReader(
+      Path file, List<Path> chain, Map<Path, Optional<Case>> others, OpenedDrawings drawings) {
     this.file = file;
     this.chain = chain;
     this.others = others;
+    this.drawings = drawings;
     this.problems = new Problems(file.toString());
   }
 
@@ -72,6 +77,7 @@ final class CaseReader {
     if (root.isEmpty()) {
       throw new CaseException(problems.inOrder());
     }
+    Marks.report(root.get(), problems);
     Fields top = new Fields(problems, "a case", root.get(), KEYS);
     Heading heading = new Heading(problems, top, "case");
     heading.checkVersion();
@@ -87,12 +93,12 @@ final class CaseReader {
     ReadCase.Builder builder = new ReadCase.Builder(file, title, names, unit);
     Pass base = pass(top, problems, unit, values, Optional.empty());
     DetailReader reader = reader(top, base, Optional.empty());
-    builder.add(Optional.empty(), reader.read(title, names), base.places());
+    builder.add(Optional.empty(), reader.read(title, names), base);
     for (Variant variant : variants) {
-      Problems own = new Problems(file.toString());
+      Problems own = problems.another();
       Pass pass = pass(top, own, unit, values, Optional.of(variant));
       DetailReader ofVariant = reader(top.reportingTo(own), pass, Optional.of(variant));
-      builder.add(Optional.of(variant.name()), ofVariant.read(title, names), pass.places());
+      builder.add(Optional.of(variant.name()), ofVariant.read(title, names), pass);
       problems.addOfVariant(variant.name(), own);
     }
     if (!problems.none()) {
@@ -142,7 +148,7 @@ final class CaseReader {
       variant.get().replaceValues(named);
     }
     named.workOutAll();
-    Pass pass = new Pass(file, into, new Quantities(into, named, unit));
+    Pass pass = new Pass(file, into, new Quantities(into, named, unit), drawings);
     if (!top.has("unit")) {
       pass.assume("unit of bare lengths", unit.name(), "by convention of this tool");
     }

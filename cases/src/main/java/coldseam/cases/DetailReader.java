@@ -70,7 +70,12 @@ final class DetailReader {
     if (variant.isPresent()) {
       variant.get().replaceFills(fills);
     }
-    List<Area> areas = section(fills, spacesNode.isPresent());
+    DrawingsReader drawings = new DrawingsReader(pass);
+    Node drawn = top.nodeOrNull("drawings");
+    if (drawn != null) {
+      drawings.read(drawn);
+    }
+    List<Area> areas = section(fills, drawings, spacesNode.isPresent());
     if (variant.isPresent()) {
       variant.get().reportNotReplaced(problems, fills);
     }
@@ -150,13 +155,13 @@ final class DetailReader {
     return wanted;
   }
 
-  private List<Area> section(Fills fills, boolean haveSpaces) {
+  private List<Area> section(Fills fills, DrawingsReader drawings, boolean haveSpaces) {
     Optional<Node> node = top.require("section", "add `section:` with the shapes in order");
     if (node.isEmpty()) {
       return List.of();
     }
     pass.place("section", "", top.keyNode("section"));
-    List<Area> areas = new SectionReader(pass, fills).read(node.get());
+    List<Area> areas = new SectionReader(pass, fills, drawings).read(node.get());
     if (problems.none() && haveSpaces) {
       boolean conducts = false;
       for (Area area : areas) {

@@ -153,7 +153,7 @@ final class OtherCases {
     List<Path> longer = new ArrayList<>(chain);
     longer.add(normal);
     try {
-      return Optional.of(new CaseReader(file, longer, read).read());
+      return Optional.of(new CaseReader(file, longer, read, pass.drawings()).read());
     } catch (CaseException e) {
       Problem first = e.problems().get(0);
       int more = e.problems().size() - 1;

@@ -1,5 +1,6 @@
 package coldseam.cases;
 
+import coldseam.mesh.plane.Point;
 import coldseam.solver.detail.Assumption;
 import java.nio.file.Path;
 import java.util.ArrayList;
@@ -12,13 +13,16 @@ final class Pass {
   private final Path file;
   private final Problems problems;
   private final Quantities quantities;
+  private final OpenedDrawings drawings;
   private final List<Assumption> assumptions = new ArrayList<>();
+  private final List<Doubt> doubts = new ArrayList<>();
   private final Map<String, Node> places = new HashMap<>();
 
-  Pass(Path file, Problems problems, Quantities quantities) {
+  Pass(Path file, Problems problems, Quantities quantities, OpenedDrawings drawings) {
     this.file = file;
     this.problems = problems;
     this.quantities = quantities;
+    this.drawings = drawings;
   }
 
   /** The case file, which other files are named relative to. */
@@ -40,6 +44,20 @@ final class Pass {
 
   void assume(Assumption assumption) {
     assumptions.add(assumption);
+  }
+
+  /** The drawings opened so far. */
+  OpenedDrawings drawings() {
+    return drawings;
+  }
+
+  /** Remembers a place in a drawing to look at. */
+  void doubt(Point where, String text) {
+    doubts.add(new Doubt(where, text));
+  }
+
+  List<Doubt> doubts() {
+    return doubts;
   }
 
   List<Assumption> assumptions() {

@@ -54,6 +54,8 @@ enum Place {
   WEIGHT(Dimension.SHARE, "", -100, 100, "a factor, mostly 0 to 1, e.g. `0.8`"),
   /** A component of a direction. */
   DIRECTION(Dimension.BARE, "", -1e6, 1e6, "a number; only the ratio of the two counts"),
+  /** How much larger the thing is than its drawing. */
+  SCALE(Dimension.BARE, "", 1e-6, 1e6, "a number more than 0, e.g. `10` of a drawing 1:10"),
   /** How many. */
   COUNT(Dimension.BARE, "", 1, 100_000, "a whole number, 1 or more");
 

@@ -15,7 +15,11 @@ final class Problems {
 
   private final String file;
   private final List<Problem> found = new ArrayList<>();
+  private int hidden;
   private final Set<String> known = new HashSet<>();
+
+  /** Places with a mark of what is undecided; nothing else that is wrong there is worth a word. */
+  private final Set<Long> undecided;
 
   /**
    * Starts with none.
@@ -23,7 +27,27 @@ final class Problems {
    * @param file the file as the user named it
    */
   Problems(String file) {
+    this(file, new HashSet<>());
+  }
+
+  private Problems(String file, Set<Long> undecided) {
     this.file = file;
+    this.undecided = undecided;
+  }
+
+  /** Starts with none for another way through the same file. */
+  Problems another() {
+    return new Problems(file, undecided);
+  }
+
+  /** Adds a mark of what is undecided; whatever else is wrong at its place is not added. */
+  void undecided(Node at, String wrong, String hint) {
+    add(at, wrong, hint.isEmpty() ? "write what it is" : hint);
+    undecided.add(place(at.line(), at.column()));
+  }
+
+  private static long place(int line, int column) {
+    return (long) line << 32 | column;
   }
 
   void add(Node at, String wrong, String right) {
@@ -37,7 +61,9 @@ final class Problems {
 
   /** Adds a problem unless the same is already known of the same place. */
   void add(Problem problem) {
-    if (known.add(key(problem))) {
+    if (undecided.contains(place(problem.line(), problem.column()))) {
+      hidden++;
+    } else if (known.add(key(problem))) {
       found.add(problem);
     }
   }
@@ -65,8 +91,9 @@ final class Problems {
     return found.isEmpty();
   }
 
+  /** How many there are; also grows by what is kept quiet. */
   int count() {
-    return found.size();
+    return found.size() + hidden;
   }
 
   /** Everything in line order; beyond {@link #MOST_LISTED} only how many more there are. */

@@ -17,6 +17,7 @@ final class ReadCase implements Case {
   private final List<String> variants;
   private final LengthUnit unit;
   private final Map<Optional<String>, Detail> details;
+  private final Map<Optional<String>, List<Doubt>> doubts;
   private final List<Map<String, Node>> places;
   private final Accuracy accuracy;
   private final List<Expectation> expectations;
@@ -27,6 +28,7 @@ final class ReadCase implements Case {
     this.variants = List.copyOf(from.variants);
     this.unit = from.unit;
     this.details = Map.copyOf(from.details);
+    this.doubts = Map.copyOf(from.doubts);
     this.places = List.copyOf(from.places);
     this.accuracy = accuracy;
     this.expectations = List.copyOf(expectations);
@@ -39,6 +41,7 @@ final class ReadCase implements Case {
     private final List<String> variants;
     private final LengthUnit unit;
     private final Map<Optional<String>, Detail> details = new HashMap<>();
+    private final Map<Optional<String>, List<Doubt>> doubts = new HashMap<>();
     private final List<Map<String, Node>> places = new ArrayList<>();
 
     Builder(Path file, String title, List<String> variants, LengthUnit unit) {
@@ -53,13 +56,14 @@ final class ReadCase implements Case {
      *
      * @param variant its variant, empty for the base case
      * @param detail the detail, empty if a mistake was reported
-     * @param placesOfPass where things are written, by part and name
+     * @param pass where things are written, and what is doubtful
      */
-    void add(Optional<String> variant, Optional<Detail> detail, Map<String, Node> placesOfPass) {
+    void add(Optional<String> variant, Optional<Detail> detail, Pass pass) {
       if (detail.isPresent()) {
         details.put(variant, detail.get());
       }
-      places.add(placesOfPass);
+      places.add(pass.places());
+      doubts.put(variant, List.copyOf(pass.doubts()));
     }
 
     ReadCase build(Accuracy accuracy, List<Expectation> expectations) {
@@ -97,6 +101,11 @@ final class ReadCase implements Case {
                   right.isEmpty() ? Optional.of("the case has none") : Optional.of(right))));
     }
     return detail;
+  }
+
+  @Override
+  public List<Doubt> doubts(Optional<String> variant) {
+    return doubts.getOrDefault(variant, List.of());
   }
 
   @Override

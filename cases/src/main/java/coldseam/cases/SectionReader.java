@@ -23,8 +23,14 @@ final class SectionReader {
       List.of("group", "part", "mirror", "rotate", "move", "repeat");
   private static final List<String> ANY_KEYS =
       List.of(
-          "fill", "box", "polygon", "disc", "strip", "stack", "layers", "group", "name", "surface",
-          "part", "glazing", "mirror", "rotate", "move", "repeat");
+          "fill", "box", "polygon", "disc", "strip", "drawing", "around", "stack", "layers",
+          "group", "name", "surface", "part", "glazing", "layer", "look", "at", "mirror", "rotate",
+          "move", "repeat");
+  private static final List<String> AROUND_KEYS =
+      List.of("fill", "name", "surface", "part", "around");
+
+  /** What an entry may be beside a plain shape. */
+  private static final List<String> OTHER_KINDS = List.of("stack", "group", "drawing", "around");
 
   /** In the order of {@link Area.Role} after the first. */
   private static final List<String> PARTS = List.of("glazing", "panel");
@@ -37,16 +43,20 @@ final class SectionReader {
   private final ShapeReader shapes;
   private final StackReader stacks;
   private final GlazingReader glazings;
+  private final DrawnEntryReader drawn;
+  private final AroundReader arounds;
   private final List<String> names = new ArrayList<>();
   private boolean full;
 
-  SectionReader(Pass pass, Fills fills) {
+  SectionReader(Pass pass, Fills fills, DrawingsReader drawings) {
     this.pass = pass;
     this.problems = pass.problems();
     this.fills = fills;
     this.shapes = new ShapeReader(pass);
     this.stacks = new StackReader(pass, fills);
     this.glazings = new GlazingReader(pass);
+    this.drawn = new DrawnEntryReader(pass, drawings);
+    this.arounds = new AroundReader(problems);
   }
 
   /**
@@ -56,7 +66,11 @@ final class SectionReader {
    * @return the areas without a mistake
    */
   List<Area> read(Node node) {
+    int before = problems.count();
     List<Area> areas = entries(node, "section", "`section`");
+    if (problems.count() == before) {
+      areas = arounds.laid(areas);
+    }
     int corners = 0;
     for (Area area : areas) {
       for (List<Point> ring : area.rings()) {
@@ -86,7 +100,7 @@ final class SectionReader {
     List<Area> areas = new ArrayList<>();
     int index = 1;
     for (Node item : sequence.items()) {
-      areas.addAll(entry(item, path + "[" + index + "]"));
+      areas.addAll(entry(item, path + "[" + index + "]", areas.size()));
       if (tooMany(item, areas.size())) {
         return List.of();
       }
@@ -106,13 +120,13 @@ final class SectionReader {
     return full;
   }
 
-  private List<Area> entry(Node node, String path) {
+  private List<Area> entry(Node node, String path, int laidBefore) {
     if (node instanceof Node.Mapping mapping) {
       List<String> kinds = new ArrayList<>();
       for (Node.Entry entry : mapping.entries()) {
         String key = entry.key().text();
-        boolean kind = ShapeReader.SHAPES.contains(key) || key.equals("stack");
-        if ((kind || key.equals("group")) && !kinds.contains(key)) {
+        boolean kind = ShapeReader.SHAPES.contains(key) || OTHER_KINDS.contains(key);
+        if (kind && !kinds.contains(key)) {
           kinds.add(key);
         }
       }
@@ -127,6 +141,8 @@ final class SectionReader {
         return switch (kinds.get(0)) {
           case "stack" -> stack(node, path);
           case "group" -> group(node, path);
+          case "drawing" -> drawn(node, path);
+          case "around" -> around(node, path, laidBefore);
           default -> shape(kinds.get(0), node, path);
         };
       }
@@ -137,7 +153,8 @@ final class SectionReader {
       problems.add(
           node,
           "this entry has no shape",
-          "add `box`, `polygon`, `disc` or `strip`, or write a `stack` or a `group`");
+          "add `box`, `polygon`, `disc`, `strip`, `drawing` or `around`, or write a `stack` or a"
+              + " `group`");
     }
     return List.of();
   }
@@ -174,6 +191,54 @@ final class SectionReader {
       return List.of();
     }
     return List.of(new Area(called, fill.get(), rings.get(), glazing, role));
+  }
+
+  /** Shapes taken from a drawing. */
+  private List<Area> drawn(Node node, String path) {
+    Fields fields = new Fields(problems, "this entry", node, DrawnEntryReader.KEYS);
+    Optional<String> name = name(fields);
+    boolean glazing = fields.word("surface", SURFACES).isPresent();
+    Area.Role role = role(fields);
+    Optional<Node> fillNode = fields.require("fill", "add `fill: ` and a material or a space");
+    Optional<Fill> fill = fillNode.isEmpty() ? Optional.empty() : fills.find(fillNode.get(), name);
+    List<List<List<Point>>> shapes = drawn.read(fields);
+    fill.ifPresent(f -> pass.place("section", f.name(), node));
+    List<Area> areas = new ArrayList<>();
+    for (int i = 0; i < shapes.size() && fill.isPresent(); i++) {
+      String at = shapes.size() == 1 ? path : path + ".shape[" + (i + 1) + "]";
+      String called = called(at, name, fill);
+      pass.place("section", called, node);
+      areas.add(new Area(called, fill.get(), shapes.get(i), glazing, role));
+    }
+    return areas;
+  }
+
+  /** An open region, laid when everything else is known. */
+  private List<Area> around(Node node, String path, int laidBefore) {
+    Fields fields = new Fields(problems, "this entry", node, AROUND_KEYS);
+    Optional<String> name = name(fields);
+    boolean glazing = fields.word("surface", SURFACES).isPresent();
+    Area.Role role = role(fields);
+    Optional<Node> fillNode = fields.require("fill", "add `fill: ` and a material or a space");
+    Optional<Fill> fill = fillNode.isEmpty() ? Optional.empty() : fills.find(fillNode.get(), name);
+    Optional<Point> at =
+        fields.has("around")
+            ? pass.quantities().point(fields.get("around").get(), "`around`")
+            : Optional.empty();
+    if (path.contains(".group")) {
+      problems.add(
+          fields.keyNode("around"),
+          "an open region cannot be part of a group",
+          "write this entry on its own, outside of the group");
+      return List.of();
+    }
+    if (fill.isPresent() && at.isPresent()) {
+      String called = called(path, name, fill);
+      pass.place("section", called, node);
+      pass.place("section", fill.get().name(), node);
+      arounds.add(laidBefore, node, called, fill.get(), at.get(), glazing, role);
+    }
+    return List.of();
   }
 
   /** What a shape is to a frame. */

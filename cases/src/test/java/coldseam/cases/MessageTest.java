@@ -168,8 +168,8 @@ class MessageTest {
             + " from [49.5, 51.2071] to [49.5, -50]; lay it in pieces that do not overlap",
         "18:48: `towards` runs along the face; name a side that the face looks to",
         "19:5: this entry has `box` and `disc` at once; write an entry of its own for each",
-        "20:5: this entry has no shape; add `box`, `polygon`, `disc` or `strip`, or write a `stack`"
-            + " or a `group`",
+        "20:5: this entry has no shape; add `box`, `polygon`, `disc`, `strip`, `drawing` or `around`,"
+            + " or write a `stack` or a `group`",
         "21:6: this box has no key `fil`; did you mean `fill`?",
         "22:6: this group has no key `fill`; known are `group`, `part`, `mirror`, `rotate`, `move` and"
             + " `repeat`");

@@ -5,7 +5,6 @@ import java.io.IOException;
 import java.io.InputStream;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -19,6 +18,7 @@ import java.util.zip.GZIPInputStream;
  * @param onPaper whether that unit is one of a sheet of paper, which may be drawn to a scale
  * @param leftOut what is no part of the section as read
  * @param remarks what else the file says of itself, sentences
+ * @param extent its larger dimension
  * @param deviation how far chords may be from their curves
  */
 public record Drawing(
@@ -27,6 +27,7 @@ public record Drawing(
     boolean onPaper,
     List<LeftOut> leftOut,
     List<String> remarks,
+    double extent,
     double deviation) {
   /** Copies the lists. */
   public Drawing {
@@ -58,7 +59,13 @@ public record Drawing(
     LeftOuts leftOut = new LeftOuts();
     new DxfUnfolding(reader, fine, leftOut).all();
     return new Drawing(
-        fine.pieces(), reader.unit(), false, leftOut.all(), reader.remarks(), deviation);
+        fine.pieces(),
+        reader.unit(),
+        false,
+        leftOut.all(),
+        reader.remarks(),
+        rough.extent(),
+        deviation);
   }
 
   private static Drawing svg(byte[] bytes, OptionalDouble asked) throws DrawingException {
@@ -70,8 +77,8 @@ public record Drawing(
     double deviation = deviation(rough, asked);
     Tracing fine = Tracing.fine(deviation);
     new SvgUnfolding(tree, page, fine, leftOut).all();
-    List<String> remarks = new ArrayList<>();
-    return new Drawing(fine.pieces(), page.unit(), true, leftOut.all(), remarks, deviation);
+    return new Drawing(
+        fine.pieces(), page.unit(), true, leftOut.all(), List.of(), rough.extent(), deviation);
   }
 
   private static double deviation(Tracing rough, OptionalDouble asked) {

@@ -1,5 +1,5 @@
 /**
- * Spelling: which valid words are most like a misspelt one. The entry is {@link
- * coldseam.cases.words.Spelling}.
+ * Spelling: which valid words are most like a misspelt one; and the mark of what is undecided. The
+ * entry is {@link coldseam.cases.words.Spelling}.
  */
 package coldseam.cases.words;

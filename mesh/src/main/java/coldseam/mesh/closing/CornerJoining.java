@@ -55,7 +55,7 @@ final class CornerJoining {
     for (int p = 0; p < n; p++) {
       moved[p] = corners.at(p);
       joinedTo[p] = p;
-      meeting.add(new TreeSet<>(corners.lines(p)));
+      meeting.add(new TreeSet<>(corners.cornered(p)));
     }
     room();
     joinPlaces();
@@ -70,7 +70,7 @@ final class CornerJoining {
     Arrays.fill(roomM, Double.POSITIVE_INFINITY);
     for (int p = 0; p < roomM.length; p++) {
       for (int e : corners.edgesNear(p)) {
-        if (!corners.lines(p).contains(corners.line(e))) {
+        if (!corners.lines(p).contains(corners.line(e)) || nextToTouched(e, p)) {
           continue;
         }
         double d;
@@ -86,6 +86,20 @@ final class CornerJoining {
         }
       }
     }
+  }
+
+  /** Whether an edge goes on from an edge that passes through a place, or is that edge. */
+  private boolean nextToTouched(int edge, int place) {
+    if (corners.cornered(place).contains(corners.line(edge))) {
+      return false;
+    }
+    for (int e : corners.touched(place)) {
+      boolean next = corners.ends(edge, corners.from(e)) || corners.ends(edge, corners.to(e));
+      if (next && corners.line(e) == corners.line(edge)) {
+        return true;
+      }
+    }
+    return false;
   }
 
   /** Whether an edge belongs to the other end of an open line that ends here. */
@@ -124,14 +138,39 @@ final class CornerJoining {
   }
 
   private boolean mayMeet(int p, int q, double distance) {
-    if (corners.looseEnd(p) && corners.looseEnd(q)) {
-      double[] u = corners.inward(p);
-      double[] v = corners.inward(q);
-      if (u[0] * v[0] + u[1] * v[1] > SIDE_BY_SIDE) {
+    for (int one : corners.ending(p)) {
+      for (int other : corners.ending(q)) {
+        double[] u = corners.inward(one, p);
+        double[] v = corners.inward(other, q);
+        if (one != other && u[0] * v[0] + u[1] * v[1] > SIDE_BY_SIDE) {
+          return false;
+        }
+      }
+    }
+    if (ownEnds(p, q, distance)) {
+      return true;
+    }
+    for (int line : corners.lines(p)) {
+      if (corners.lines(q).contains(line) && !alongOneEdge(p, q, line)) {
         return false;
       }
     }
-    return Collections.disjoint(corners.lines(p), corners.lines(q)) || ownEnds(p, q, distance);
+    return true;
+  }
+
+  /** Whether two places lie on one edge of a line, one of them between its corners. */
+  private boolean alongOneEdge(int p, int q, int line) {
+    for (int e : corners.touched(p)) {
+      if (corners.line(e) == line && (corners.ends(e, q) || corners.touched(q).contains(e))) {
+        return true;
+      }
+    }
+    for (int e : corners.touched(q)) {
+      if (corners.line(e) == line && corners.ends(e, p)) {
+        return true;
+      }
+    }
+    return false;
   }
 
   /** Whether two places are the ends of one open line, and of nothing else in common. */
@@ -153,7 +192,9 @@ final class CornerJoining {
     for (int i = 1; i < drawn.points().size(); i++) {
       length += drawn.points().get(i - 1).distance(drawn.points().get(i));
     }
-    return length >= LONGER * distance;
+    double[] u = corners.inward(line, p);
+    double[] v = corners.inward(line, q);
+    return length >= LONGER * distance && u[0] * v[0] + u[1] * v[1] <= SIDE_BY_SIDE;
   }
 
   private void joinPair(Near pair) {
@@ -249,7 +290,8 @@ final class CornerJoining {
   private Near nearestEdge(int place) throws TangledLinesException {
     Near nearest = null;
     for (int e : corners.edgesNear(place)) {
-      if (meeting.get(place).contains(corners.line(e))) {
+      if (corners.lines(place).contains(corners.line(e))
+          || meeting.get(place).contains(corners.line(e))) {
         continue;
       }
       double d = corners.distance(e, place);

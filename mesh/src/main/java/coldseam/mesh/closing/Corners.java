@@ -27,6 +27,8 @@ final class Corners {
   private final int[][] placeOf;
   private final Places places = new Places();
   private final List<Set<Integer>> meeting = new ArrayList<>();
+  private final List<Set<Integer>> cornered = new ArrayList<>();
+  private final Map<Integer, List<Integer>> touched = new HashMap<>();
   private final List<int[]> edges = new ArrayList<>();
   private final STRtree edgeTree = new STRtree();
   private final Map<Long, List<Integer>> grid = new HashMap<>();
@@ -78,9 +80,11 @@ final class Corners {
   /** Adds to the lines of each place those that pass through it. */
   private void touch() throws TangledLinesException {
     for (int p = 0; p < places.count(); p++) {
+      cornered.add(new TreeSet<>(meeting.get(p)));
       for (int e : edgesNear(p)) {
         if (!ends(e, p) && distance(e, p) <= SNAP_M) {
           meeting.get(p).add(edges.get(e)[0]);
+          touched.computeIfAbsent(p, k -> new ArrayList<>(1)).add(e);
         }
       }
     }
@@ -101,6 +105,16 @@ final class Corners {
   /** The lines that have a corner at a place or pass through it. */
   Set<Integer> lines(int place) {
     return meeting.get(place);
+  }
+
+  /** The lines that have a corner at a place. */
+  Set<Integer> cornered(int place) {
+    return cornered.get(place);
+  }
+
+  /** The edges that pass through a place without a corner of theirs there. */
+  List<Integer> touched(int place) {
+    return touched.getOrDefault(place, List.of());
   }
 
   int placeOf(int line, int corner) {
@@ -169,13 +183,15 @@ final class Corners {
     }
   }
 
-  /** Whether a place is an end of an open line and nothing else is there. */
-  boolean looseEnd(int place) {
-    if (meeting.get(place).size() != 1) {
-      return false;
+  /** The open lines that end at a place. */
+  List<Integer> ending(int place) {
+    List<Integer> ending = new ArrayList<>();
+    for (int line : cornered.get(place)) {
+      if (!lines.get(line).closed() && (first(line) == place) != (last(line) == place)) {
+        ending.add(line);
+      }
     }
-    int line = meeting.get(place).iterator().next();
-    return !lines.get(line).closed() && (first(line) == place) != (last(line) == place);
+    return ending;
   }
 
   int first(int line) {
@@ -186,9 +202,8 @@ final class Corners {
     return placeOf[line][placeOf[line].length - 1];
   }
 
-  /** Where a line goes from its loose end, as a unit vector. */
-  double[] inward(int place) {
-    int line = meeting.get(place).iterator().next();
+  /** Where an open line goes from its end at a place, as a unit vector. */
+  double[] inward(int line, int place) {
     int n = placeOf[line].length;
     boolean begins = first(line) == place;
     Coordinate a = places.at(place);

@@ -115,6 +115,23 @@ class ClosingTest {
   }
 
   @Test
+  void a_gap_along_another_line_is_joined() throws TangledLinesException {
+    // A room drawn exactly, and a wall beside it whose inner line ends 0.3 mm short of its corner.
+    List<DrawnLine> drawn =
+        List.of(
+            box(-600, 0, 0, 500),
+            line(0, 0, 0, 499.7),
+            line(0, 500, 100, 500),
+            line(100, 500, 100, 0),
+            line(100, 0, 0, 0));
+    Joined joined = Closing.join(drawn, 0.001);
+    assertThat(joined.joins()).hasSize(1);
+    Cells wall = Closing.cells(joined.lines().subList(1, 5));
+    assertThat(areasMm2(wall)).hasSize(1);
+    assertThat(areasMm2(wall).get(0)).isCloseTo(50_000, within(1e-6));
+  }
+
+  @Test
   void an_open_line_closes_on_itself() throws TangledLinesException {
     Joined joined = Closing.join(List.of(line(0, 0, 80, 0, 80, 60, 0, 60, 0.2, 0.5)), 0.001);
     assertThat(areasMm2(Closing.cells(joined.lines()))).hasSize(1);

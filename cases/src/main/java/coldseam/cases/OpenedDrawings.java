@@ -1,0 +1,64 @@
+package coldseam.cases;
+
+import coldseam.cases.drawing.Drawing;
+import coldseam.cases.drawing.DrawingException;
+import coldseam.cases.drawing.DrawnShapes;
+import coldseam.cases.drawing.Placement;
+import java.nio.file.Path;
+import java.util.HashMap;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Map;
+import java.util.OptionalDouble;
+import java.util.Set;
+
+/** The drawings that cases take shapes from, each read once. */
+final class OpenedDrawings {
+  private final Set<Path> named = new HashSet<>();
+  private final Map<Asked, Drawing> drawings = new HashMap<>();
+  private final Map<Placed, DrawnShapes> shapes = new HashMap<>();
+
+  /** A file and how fine its curves are to be. */
+  private record Asked(Path file, OptionalDouble deviation) {}
+
+  /** A drawing put in place. */
+  private record Placed(Asked asked, Placement placement) {}
+
+  /**
+   * Starts with none open.
+   *
+   * @param named drawings that may be read wherever they are, the user having named them
+   */
+  OpenedDrawings(List<Path> named) {
+    for (Path file : named) {
+      this.named.add(CaseReader.normalised(file));
+    }
+  }
+
+  /** Whether a file may be read for a case: it lies in the case's folder, or the user named it. */
+  boolean mayBeRead(Path file, Path folder) {
+    Path real = CaseReader.normalised(file);
+    return real.startsWith(CaseReader.normalised(folder)) || named.contains(real);
+  }
+
+  Drawing drawing(Path file, OptionalDouble deviation) throws DrawingException {
+    Asked asked = new Asked(CaseReader.normalised(file), deviation);
+    Drawing known = drawings.get(asked);
+    if (known == null) {
+      known = Drawing.read(file, deviation);
+      drawings.put(asked, known);
+    }
+    return known;
+  }
+
+  DrawnShapes shapes(Path file, OptionalDouble deviation, Placement placement)
+      throws DrawingException {
+    Placed placed = new Placed(new Asked(CaseReader.normalised(file), deviation), placement);
+    DrawnShapes known = shapes.get(placed);
+    if (known == null) {
+      known = DrawnShapes.of(drawing(file, deviation), placement);
+      shapes.put(placed, known);
+    }
+    return known;
+  }
+}
