@@ -1,5 +1,6 @@
 package coldseam.cases;
 
+import coldseam.cases.drawing.OpenRegions;
 import coldseam.mesh.plane.Point;
 import coldseam.solver.detail.Area;
 import coldseam.solver.detail.Fill;
@@ -37,7 +38,9 @@ final class AroundReader {
     }
     List<Point> points = new ArrayList<>();
     asked.forEach(one -> points.add(one.at()));
-    Optional<OpenRegions> regions = OpenRegions.of(areas, points);
+    List<List<List<Point>>> shapes = new ArrayList<>();
+    areas.forEach(area -> shapes.add(area.rings()));
+    Optional<OpenRegions> regions = OpenRegions.of(shapes, points);
     if (regions.isEmpty()) {
       problems.add(asked.get(0).node(), "there is nothing to lie around", "lay a shape first");
       return areas;

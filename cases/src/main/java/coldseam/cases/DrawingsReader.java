@@ -5,6 +5,7 @@ import coldseam.cases.drawing.DrawingException;
 import coldseam.cases.drawing.DrawingUnit;
 import coldseam.cases.drawing.DrawnShapes;
 import coldseam.cases.drawing.LeftOut;
+import coldseam.cases.drawing.Piece;
 import coldseam.cases.drawing.Placement;
 import coldseam.mesh.plane.Point;
 import java.nio.file.InvalidPathException;
@@ -19,7 +20,7 @@ import java.util.OptionalDouble;
 /** Reads {@code drawings}: files, and how they come to lie in the section. */
 final class DrawingsReader {
   static final List<String> KEYS =
-      List.of("file", "unit", "scale", "origin", "tolerance", "deviation");
+      List.of("file", "unit", "scale", "origin", "tolerance", "deviation", "without");
   static final List<String> UNITS = List.of("mm", "cm", "m", "in", "ft");
 
   /** Marks of one drawing beyond this many are counted only. */
@@ -120,13 +121,35 @@ final class DrawingsReader {
             ? drawing.extent() * metresPerUnit * Placement.STANDARD_TOLERANCE
             : toleranceM;
     Placement placement = new Placement(metresPerUnit, origin, tolerance);
-    DrawnShapes shapes = pass.drawings().shapes(file, deviation, placement);
+    DrawnShapes shapes = pass.drawings().shapes(file, deviation, without(fields, fine), placement);
     Source source = new Source(name, fine, shapes);
     if (typed.isEmpty()) {
       pass.assume("unit of drawing " + name, unit.get().symbol(), "the file");
     }
     remark(source, tolerance, fine.deviation() * metresPerUnit);
     return Optional.of(source);
+  }
+
+  /** The layers that are not taken. */
+  private List<String> without(Fields fields, Drawing drawing) {
+    if (!fields.has("without")) {
+      return List.of();
+    }
+    Node node = fields.get("without").get();
+    List<Node> each = node instanceof Node.Sequence list ? list.items() : List.of(node);
+    List<String> known = new ArrayList<>();
+    for (Piece piece : drawing.pieces()) {
+      if (!known.contains(piece.layer())) {
+        known.add(piece.layer());
+      }
+    }
+    List<String> layers = new ArrayList<>();
+    for (Node one : each) {
+      Optional<String> layer = Fields.text(problems, "a layer of `without`", one);
+      // A new version of a drawing may do without a layer that is not taken anyway.
+      layer.filter(known::contains).ifPresent(layers::add);
+    }
+    return layers;
   }
 
   private void remark(Source source, double toleranceM, double deviationM) {

@@ -22,7 +22,7 @@ final class OpenedDrawings {
   private record Asked(Path file, OptionalDouble deviation) {}
 
   /** A drawing put in place. */
-  private record Placed(Asked asked, Placement placement) {}
+  private record Placed(Asked asked, List<String> without, Placement placement) {}
 
   /**
    * Starts with none open.
@@ -51,12 +51,13 @@ final class OpenedDrawings {
     return known;
   }
 
-  DrawnShapes shapes(Path file, OptionalDouble deviation, Placement placement)
+  DrawnShapes shapes(Path file, OptionalDouble deviation, List<String> without, Placement placement)
       throws DrawingException {
-    Placed placed = new Placed(new Asked(CaseReader.normalised(file), deviation), placement);
+    Asked asked = new Asked(CaseReader.normalised(file), deviation);
+    Placed placed = new Placed(asked, without, placement);
     DrawnShapes known = shapes.get(placed);
     if (known == null) {
-      known = DrawnShapes.of(drawing(file, deviation), placement);
+      known = DrawnShapes.of(drawing(file, deviation).without(without), placement);
       shapes.put(placed, known);
     }
     return known;

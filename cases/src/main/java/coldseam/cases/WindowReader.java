@@ -65,7 +65,8 @@ final class WindowReader {
       named.put(entry.key().text(), entry.value());
     }
     named.workOutAll();
-    pass = new Pass(file, problems, new Quantities(problems, named, unit));
+    OpenedDrawings drawings = new OpenedDrawings(List.of());
+    pass = new Pass(file, problems, new Quantities(problems, named, unit), drawings);
     if (!top.has("unit")) {
       pass.assume("unit of bare lengths", unit.name(), "by convention of this tool");
     }

@@ -56,7 +56,7 @@ class DrawingsInPlaceTest {
             - {fill: outdoors, around: [500, 500]}
             - {fill: brick, drawing: detail, layer: BRICK}
             - {fill: wool, drawing: detail, look: ANSI37}
-            - {fill: slab, drawing: detail, at: [[-300, 400], [100, 400]]}
+            - {fill: slab, drawing: detail, at: [[-300, 400], [100, 400], [270, 400]]}
           """;
 
   @TempDir private Path folder;
@@ -219,8 +219,7 @@ class DrawingsInPlaceTest {
     refused("drawing: detail, layer: ROOM", "drawing: plan, layer: ROOM", "no drawing `plan`");
     refused(", layer: ROOM", "", "does not say what to take");
     refused("layer: ROOM", "layer: ROOM, at: [1, 1]", "has both `at` and `layer`");
-    refused(
-        "[-300, 400], [100, 400]", "[-900, 400], [100, 400]", "no lines of the drawing enclose");
+    refused("[100, 400]", "[-900, 400]", "no lines of the drawing enclose");
     refused("file: detail.dxf", "file: detial.dxf", "4:18", "there is no such file");
     refused("file: detail.dxf", "file: ../detail.dxf", "outside of the folder", "--drawing");
     refused("around: [500, 500]", "around: [300, 800]", "a shape covers it");

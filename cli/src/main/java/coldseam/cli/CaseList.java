@@ -40,11 +40,32 @@ final class CaseList {
    */
   static List<Case> read(List<String> names, String command, Surroundings here)
       throws CaseException, UsageException {
+    return read(names, List.of(), command, here);
+  }
+
+  /**
+   * Reads cases that may take shapes from drawings outside of their folders.
+   *
+   * @param names files as typed
+   * @param drawings the drawings, as typed
+   * @param command the command they were typed after
+   * @param here where relative names start from
+   * @return the cases, in order
+   * @throws CaseException with the mistakes of all files
+   * @throws UsageException if a name is none
+   */
+  static List<Case> read(
+      List<String> names, List<String> drawings, String command, Surroundings here)
+      throws CaseException, UsageException {
+    List<Path> named = new ArrayList<>();
+    for (String drawing : drawings) {
+      named.add(here.cwd().resolve(path(drawing, command)));
+    }
     List<Case> cases = new ArrayList<>();
     List<Problem> problems = new ArrayList<>();
     for (String name : names) {
       try {
-        cases.add(CaseFile.read(here.cwd().resolve(path(name, command))));
+        cases.add(CaseFile.read(here.cwd().resolve(path(name, command)), named));
       } catch (CaseException mistakes) {
         problems.addAll(mistakes.problems());
       }

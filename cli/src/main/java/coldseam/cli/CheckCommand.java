@@ -2,15 +2,22 @@ package coldseam.cli;
 
 import coldseam.cases.Case;
 import coldseam.cases.CaseException;
+import coldseam.cases.Doubt;
 import coldseam.cases.Problem;
 import coldseam.cases.WindowFile;
+import coldseam.cli.plot.Understood;
 import coldseam.cli.sheet.Sheet;
 import coldseam.cli.sheet.Subject;
 import coldseam.cli.text.Json;
+import coldseam.mesh.partition.Defect;
 import coldseam.solver.Solver;
+import coldseam.solver.detail.DefectWords;
+import coldseam.solver.detail.Detail;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 
 /** Reads and checks cases without solving. */
@@ -18,6 +25,9 @@ final class CheckCommand implements Command {
   private static final String NAME = "check";
   private static final String VARIANT = "--variant";
   private static final String JSON = "--json";
+  private static final String OUT = "--out";
+  private static final String FORCE = "--force";
+  private static final String DRAWING = "--drawing";
   private static final String QUIET = "--quiet";
 
   @Override
@@ -33,6 +43,14 @@ final class CheckCommand implements Command {
             + " listed in one go, with line and column.",
         List.of(
             new Syntax.Option(VARIANT, "NAME", "show this variant instead of the base case"),
+            new Syntax.Option(
+                OUT,
+                "FILE",
+                "write the section as understood to this SVG file, everything to look at circled"
+                    + " and numbered"),
+            new Syntax.Option(FORCE, "", "replace that file if it is there"),
+            new Syntax.Option(
+                DRAWING, "FILE", "a drawing outside of the case's folder that it may read"),
             new Syntax.Option(
                 JSON,
                 "",
@@ -51,6 +69,13 @@ final class CheckCommand implements Command {
   @Override
   public int run(Syntax.Typed typed, Surroundings here) throws UsageException, CaseException {
     List<Problem> problems = new ArrayList<>();
+    if (typed.has(OUT)) {
+      if (typed.operands().size() > 1) {
+        throw new UsageException(
+            NAME, "--out takes the picture of one case; check them one by one");
+      }
+      new NewFiles(NAME, typed.has(FORCE), here).check(picture(typed, here));
+    }
     boolean first = true;
     for (String name : typed.operands()) {
       try {
@@ -84,7 +109,53 @@ final class CheckCommand implements Command {
       }
       return WindowJobs.understood(WindowFile.read(file), typed.has(JSON), here);
     }
-    return show(CaseList.read(List.of(name), NAME, here).get(0), typed, here);
+    List<String> drawings = typed.has(DRAWING) ? List.of(typed.value(DRAWING)) : List.of();
+    return show(CaseList.read(List.of(name), drawings, NAME, here).get(0), typed, here);
+  }
+
+  private static Path picture(Syntax.Typed typed, Surroundings here) throws UsageException {
+    return here.cwd().resolve(CaseList.path(typed.value(OUT), NAME));
+  }
+
+  /** Writes the section as understood; tells the list in words that its numbers refer to. */
+  private static String draw(
+      Case from,
+      Optional<String> variant,
+      Detail detail,
+      Solver.Inspection inspection,
+      Syntax.Typed typed,
+      Surroundings here)
+      throws UsageException {
+    List<String> names = new ArrayList<>();
+    detail.fills().forEach(fill -> names.add(fill.name()));
+    List<Understood.Mark> marks = new ArrayList<>();
+    for (Doubt doubt : from.doubts(variant)) {
+      marks.add(new Understood.Mark(doubt.where(), doubt.text()));
+    }
+    for (Defect defect : inspection.partition().defects()) {
+      if (defect.kind() != Defect.Kind.LINE_OFF_EDGE) {
+        marks.add(new Understood.Mark(defect.where(), DefectWords.of(defect, names)));
+      }
+    }
+    String svg =
+        Understood.svg(
+            from.title(),
+            "Section as understood" + variant.map(v -> " · variant “" + v + "”").orElse(""),
+            inspection.partition(),
+            detail.fills(),
+            marks);
+    Path file = picture(typed, here);
+    new NewFiles(NAME, typed.has(FORCE), here)
+        .write(Map.of(file, svg.getBytes(StandardCharsets.UTF_8)));
+    StringBuilder list = new StringBuilder("\nShown in " + here.shown(file) + ", by number\n");
+    int number = 1;
+    for (String name : names) {
+      list.append("  ").append(number++).append("  ").append(name).append('\n');
+    }
+    for (Understood.Mark mark : marks) {
+      list.append("  ").append(number++).append("  ").append(mark.text()).append('\n');
+    }
+    return list.toString();
   }
 
   private static String show(Case from, Syntax.Typed typed, Surroundings here)
@@ -94,28 +165,39 @@ final class CheckCommand implements Command {
     List<Optional<String>> all = new ArrayList<>(List.of(Optional.empty()));
     from.variants().forEach(variant -> all.add(Optional.of(variant)));
     String shown = "";
+    Shown last = null;
     for (Optional<String> variant : all) {
       Subject subject =
           Subject.of(from, here.shown(from.file()), variant, from.accuracy(), Main.VERSION);
-      String text =
+      Shown one =
           CaseList.work(
               from,
               variant,
               detail -> {
                 Solver.Inspection inspection = Solver.inspect(detail);
-                return typed.has(JSON)
-                    ? Sheet.understoodJson(subject, inspection) + "\n"
-                    : Sheet.understood(subject, inspection, here.outInk());
+                String text =
+                    typed.has(JSON)
+                        ? Sheet.understoodJson(subject, inspection) + "\n"
+                        : Sheet.understood(subject, inspection, here.outInk());
+                return new Shown(text, inspection.detail(), inspection);
               });
       if (variant.equals(asked)) {
-        shown = text;
+        shown = one.text();
+        last = one;
       }
+    }
+    if (typed.has(OUT) && last != null) {
+      String list = draw(from, asked, last.detail(), last.inspection(), typed, here);
+      shown += typed.has(JSON) ? "" : list;
     }
     if (!typed.has(JSON) && !from.variants().isEmpty()) {
       shown += "\nVariants, checked too: " + String.join(", ", from.variants()) + "\n";
     }
     return shown;
   }
+
+  /** What was understood of a case or variant, in words and as it is drawn. */
+  private record Shown(String text, Detail detail, Solver.Inspection inspection) {}
 
   private static String json(String file, CaseException mistakes, Surroundings here) {
     Json json = Json.onOneLine().object().member("coldseam", Main.VERSION).member("file", file);

@@ -16,7 +16,8 @@ public final class Main {
   /** The version, as in the build. */
   static final String VERSION = "0.1.0-SNAPSHOT";
 
-  private static final List<String> NAMES = List.of("solve", "check", "materials", "prove");
+  private static final List<String> NAMES =
+      List.of("solve", "check", "draft", "materials", "prove");
 
   private Main() {}
 
@@ -119,6 +120,7 @@ public final class Main {
     return switch (name) {
       case "solve" -> new SolveCommand();
       case "check" -> new CheckCommand();
+      case "draft" -> new DraftCommand();
       case "materials" -> new MaterialsCommand();
       case "prove" -> new ProveCommand();
       default -> throw unknown(name);

@@ -32,6 +32,7 @@ final class SolveCommand implements Command {
   private static final String NO_PLOTS = "--no-plots";
   private static final String ACCURACY = "--accuracy";
   private static final String MOST_UNKNOWNS = "--most-unknowns";
+  private static final String DRAWING = "--drawing";
   static final String QUIET = "--quiet";
 
   private static final List<Plots.Kind> PLOTS =
@@ -71,6 +72,8 @@ final class SolveCommand implements Command {
                 MOST_UNKNOWNS,
                 "N",
                 "stop refining at this size; ends with 3 if the accuracy is not reached by then"),
+            new Syntax.Option(
+                DRAWING, "FILE", "a drawing outside of the case's folder that it may read"),
             new Syntax.Option(QUIET, "", "print no card; files are written all the same")),
         List.of(
             new Syntax.Example(
@@ -133,7 +136,7 @@ final class SolveCommand implements Command {
       List<String> cases, Syntax.Typed typed, Surroundings here, Map<Path, String> taken)
       throws UsageException, CaseException, IOException {
     List<Job> jobs = new ArrayList<>();
-    for (Case from : CaseList.read(cases, NAME, here)) {
+    for (Case from : CaseList.read(cases, drawings(typed), NAME, here)) {
       List<Optional<String>> variants = new ArrayList<>();
       if (typed.has(VARIANT)) {
         variants.add(CaseList.variant(from, typed.value(VARIANT), NAME));
@@ -170,6 +173,10 @@ final class SolveCommand implements Command {
       accuracy = AccuracyOption.limit(accuracy, typed.value(MOST_UNKNOWNS));
     }
     return accuracy;
+  }
+
+  private static List<String> drawings(Syntax.Typed typed) {
+    return typed.has(DRAWING) ? List.of(typed.value(DRAWING)) : List.of();
   }
 
   static Optional<OutputFolder> folder(

@@ -165,7 +165,9 @@ class ArchitectureTest {
       String text = Files.readString(source);
       for (String mark :
           List.of("TODO", "FIXME", "XXX", "@SuppressWarnings", "printStackTrace()")) {
-        if (text.contains(mark)) {
+        // The one place where the program itself writes the mark, into a drafted case.
+        boolean written = mark.equals("TODO") && source.endsWith("words/Undecided.java");
+        if (text.contains(mark) && !written) {
           marked.add(source.getFileName() + ": " + mark);
         }
       }

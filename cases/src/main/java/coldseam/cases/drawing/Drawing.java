@@ -5,6 +5,7 @@ import java.io.IOException;
 import java.io.InputStream;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -48,6 +49,24 @@ public record Drawing(
   public static Drawing read(Path file, OptionalDouble deviation) throws DrawingException {
     byte[] bytes = unpacked(bytes(file));
     return markup(bytes) ? svg(bytes, deviation) : dxf(bytes, deviation);
+  }
+
+  /**
+   * The drawing without some of its layers.
+   *
+   * @param layers their names
+   */
+  public Drawing without(List<String> layers) {
+    if (layers.isEmpty()) {
+      return this;
+    }
+    List<Piece> kept = new ArrayList<>();
+    for (Piece piece : pieces) {
+      if (!layers.contains(piece.layer())) {
+        kept.add(piece);
+      }
+    }
+    return new Drawing(kept, unit, onPaper, leftOut, remarks, extent, deviation);
   }
 
   private static Drawing dxf(byte[] bytes, OptionalDouble asked) throws DrawingException {

@@ -17,7 +17,7 @@ public final class DrawingException extends Exception {
    * @param wrong a sentence without a full stop
    * @param right what would be right, without a full stop; may be empty
    */
-  DrawingException(int line, String wrong, String right) {
+  public DrawingException(int line, String wrong, String right) {
     super(wrong);
     this.line = line;
     this.wrong = wrong;

@@ -4,6 +4,7 @@ import coldseam.mesh.partition.Defect;
 import coldseam.mesh.partition.Partition;
 import coldseam.mesh.plane.Point;
 import coldseam.mesh.plane.Resolution;
+import coldseam.solver.detail.DefectWords;
 import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.Fault;
 import coldseam.solver.detail.Fill;
@@ -33,51 +34,15 @@ final class SectionChecks {
 
   List<String> warnings() {
     List<String> warnings = new ArrayList<>();
+    List<String> names = detail.fills().stream().map(Fill::name).toList();
     for (Defect defect : partition.defects()) {
       if (defect.kind() != Defect.Kind.LINE_OFF_EDGE) {
-        warnings.add(words(defect));
+        warnings.add(DefectWords.of(defect, names));
       }
     }
     warnings.addAll(stretchesPartlyOff());
     warnings.addAll(stretchesOverlaid());
     return warnings;
-  }
-
-  private String words(Defect defect) {
-    String fills = fills(defect.labels());
-    String at = " at " + Wording.place(defect.where());
-    String size = Wording.length(defect.sizeM());
-    return switch (defect.kind()) {
-      case CLOSED_GAP -> "gap of " + size + " between " + fills + at + ": closed";
-      case GAP -> "gap of " + size + " between " + fills + at + ": left open, no heat crosses it";
-      case SLIVER -> "sliver " + size + " thin of " + fills + at + ": is it meant?";
-      case UNCOVERED ->
-          "place enclosed by "
-              + fills
-              + at
-              + " that nothing covers, mean width "
-              + size
-              + ": no heat crosses it";
-      case SELF_CROSSING ->
-          "outline of " + fills + " crosses itself" + at + ": filled by the even-odd rule";
-      case ZERO_AREA -> "shape of " + fills + at + " has no area: left out";
-      case HIDDEN -> "shape of " + fills + at + " is covered by later ones: nothing of it is left";
-      case LINE_OFF_EDGE -> throw new IllegalStateException("stretches are checked on their own");
-    };
-  }
-
-  private String fills(List<Integer> labels) {
-    List<Fill> fills = detail.fills();
-    List<String> names = new ArrayList<>();
-    for (int label : labels) {
-      if (label >= 0 && label < fills.size()) {
-        names.add("'" + fills.get(label).name() + "'");
-      }
-    }
-    int last = names.size() - 1;
-    return last < 1
-        ? String.join("", names)
-        : String.join(", ", names.subList(0, last)) + " and " + names.get(last);
   }
 
   private List<String> stretchesPartlyOff() {

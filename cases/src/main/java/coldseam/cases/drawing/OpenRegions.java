@@ -1,10 +1,9 @@
-package coldseam.cases;
+package coldseam.cases.drawing;
 
 import coldseam.mesh.partition.LabelledArea;
 import coldseam.mesh.partition.Partition;
 import coldseam.mesh.plane.Point;
 import coldseam.mesh.plane.Resolution;
-import coldseam.solver.detail.Area;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -13,7 +12,7 @@ import java.util.Optional;
  * The ground that no shape of a section covers: of the box around all shapes, widened on a side
  * where a point lies beyond it to hold the point and half as much again, each connected region.
  */
-final class OpenRegions {
+public final class OpenRegions {
   private static final int COVERED = 0;
   private static final int OPEN = 1;
 
@@ -26,11 +25,11 @@ final class OpenRegions {
   /**
    * Finds the regions.
    *
-   * @param areas what covers the ground
+   * @param shapes what covers the ground, each as closed rings by the even-odd rule, m
    * @param points places that are to lie in the box
    * @return the regions, or empty if nothing is drawn
    */
-  static Optional<OpenRegions> of(List<Area> areas, List<Point> points) {
+  public static Optional<OpenRegions> of(List<List<List<Point>>> shapes, List<Point> points) {
     double[] box = {
       Double.POSITIVE_INFINITY,
       Double.POSITIVE_INFINITY,
@@ -38,9 +37,9 @@ final class OpenRegions {
       Double.NEGATIVE_INFINITY
     };
     List<LabelledArea> laid = new ArrayList<>();
-    for (Area area : areas) {
-      laid.add(new LabelledArea(COVERED, area.rings()));
-      for (List<Point> ring : area.rings()) {
+    for (List<List<Point>> shape : shapes) {
+      laid.add(new LabelledArea(COVERED, shape));
+      for (List<Point> ring : shape) {
         for (Point p : ring) {
           box[0] = Math.min(box[0], p.x());
           box[1] = Math.min(box[1], p.y());
@@ -74,7 +73,7 @@ final class OpenRegions {
   }
 
   /** Numbers of all regions. */
-  List<Integer> all() {
+  public List<Integer> all() {
     List<Integer> open = new ArrayList<>();
     for (int face = 0; face < partition.faceCount(); face++) {
       if (partition.faceLabel(face) == OPEN) {
@@ -85,7 +84,7 @@ final class OpenRegions {
   }
 
   /** The number of the region that holds a point, or −1. */
-  int at(Point p) {
+  public int at(Point p) {
     double x = p.x() - partition.origin().x();
     double y = p.y() - partition.origin().y();
     for (int face : all()) {
@@ -109,7 +108,7 @@ final class OpenRegions {
   }
 
   /** The rings of a region, m. */
-  List<List<Point>> rings(int region) {
+  public List<List<Point>> rings(int region) {
     List<List<Point>> rings = new ArrayList<>();
     Point o = partition.origin();
     for (int[] ring : partition.faceRings(region)) {
