@@ -67,44 +67,73 @@ final class DraftPlan {
       if (shape.look().isEmpty() && hatched(shape)) {
         passedOver++;
       } else if (shape.divided() || shape.layer().isEmpty() && shape.look().isEmpty()) {
-        List<Point> points = new ArrayList<>();
-        for (Shape face : faces) {
-          if (DrawnShapes.holds(shape, face.inner())) {
-            points.add(tidy(face));
-          }
-        }
-        if (!points.isEmpty()) {
-          String called = shape.layer().isEmpty() ? "face" : shape.layer();
-          add(
-              new DraftedFill(
-                  unique(called, true),
-                  Kind.FACES,
-                  shape.layer(),
-                  "",
-                  points,
-                  List.of(shape),
-                  shape.areaM2(),
-                  shape.line()));
-        }
+        faces(shape, faces);
       } else {
         groups
             .computeIfAbsent(shape.layer() + '\n' + shape.look(), k -> new ArrayList<>())
             .add(shape);
       }
     }
+    for (List<Shape> lines : List.copyOf(groups.values())) {
+      Shape first = lines.get(0);
+      List<String> looks = looks(first.layer());
+      if (first.look().isEmpty() && looks.size() == 1) {
+        // One kind of hatch and some outlines without: all of the layer is one thing.
+        List<Shape> hatched = groups.get(first.layer() + '\n' + looks.get(0));
+        hatched.addAll(lines);
+        groups.remove(first.layer() + '\n');
+      } else if (first.look().isEmpty() && looks.size() > 1) {
+        groups.remove(first.layer() + '\n');
+        for (Shape shape : lines) {
+          faces(shape, faces);
+        }
+      }
+    }
     groups.values().forEach(this::layer);
+  }
+
+  /** Takes a shape by the faces that lie in it. */
+  private void faces(Shape shape, List<Shape> faces) {
+    List<Point> points = new ArrayList<>();
+    for (Shape face : faces) {
+      if (DrawnShapes.holds(shape, face.inner())) {
+        points.add(tidy(face));
+      }
+    }
+    if (!points.isEmpty()) {
+      String called = shape.layer().isEmpty() ? "face" : shape.layer();
+      add(
+          new DraftedFill(
+              unique(called, true),
+              Kind.FACES,
+              shape.layer(),
+              "",
+              points,
+              List.of(shape),
+              shape.areaM2(),
+              shape.line()));
+    }
+  }
+
+  /** How shapes of a layer are filled. */
+  private List<String> looks(String layer) {
+    List<String> looks = new ArrayList<>();
+    for (Shape shape : drawn.find(Optional.of(layer), Optional.empty())) {
+      if (!shape.look().isEmpty() && !looks.contains(shape.look())) {
+        looks.add(shape.look());
+      }
+    }
+    return looks;
   }
 
   private void layer(List<Shape> shapes) {
     Shape first = shapes.get(0);
     double area = shapes.stream().mapToDouble(Shape::areaM2).sum();
-    boolean several =
-        drawn.find(Optional.of(first.layer()), Optional.empty()).stream()
-            .anyMatch(s -> !s.look().equals(first.look()) && !(s.look().isEmpty() && hatched(s)));
+    boolean several = looks(first.layer()).size() > 1;
     String name =
         first.layer().isEmpty()
             ? first.look()
-            : several && !first.look().isEmpty()
+            : (several || LayerNames.general(first.layer())) && !first.look().isEmpty()
                 ? first.layer() + " " + first.look()
                 : first.layer();
     String look = several || first.layer().isEmpty() ? first.look() : "";

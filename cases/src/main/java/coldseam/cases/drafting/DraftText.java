@@ -90,7 +90,8 @@ final class DraftText {
             + file
             + ". Every "
             + mark
-            + " is to be replaced: materials, spaces, and whatever else the drawing does not tell."
+            + " is to be replaced: materials, spaces, how lengths are measured, and whatever else the"
+            + " drawing does not tell."
             + " `cli/coldseam check` lists what is left; "
             + picture
             + " shows what was understood, numbered as below.");
@@ -98,13 +99,17 @@ final class DraftText {
       comment("", "Warning: " + warning + ".");
     }
     out.append("coldseam: 1\n");
-    int slash = Math.max(file.lastIndexOf('/'), file.lastIndexOf('\\'));
-    int dot = file.lastIndexOf('.');
-    String stem = file.substring(slash + 1, dot > slash ? dot : file.length());
-    out.append("title: ").append(quoted(stem)).append('\n');
+    out.append("title: ").append(quoted(stem())).append('\n');
     out.append("unit: ").append(scaling.unit().map(DrawingUnit::symbol).orElse(unitMark()));
     out.append('\n');
     out.append("view: vertical                       # or: plan\n\n");
+  }
+
+  /** The name of the drawing without its folder and what it ends in. */
+  private String stem() {
+    int slash = Math.max(file.lastIndexOf('/'), file.lastIndexOf('\\'));
+    int dot = file.indexOf('.', slash + 1);
+    return file.substring(slash + 1, dot > slash + 1 ? dot : file.length());
   }
 
   private static String unitMark() {
@@ -112,7 +117,11 @@ final class DraftText {
   }
 
   private void drawings() {
-    out.append("drawings:\n  drawing:\n    file: ").append(quoted(file)).append('\n');
+    out.append("drawings:\n  ")
+        .append(quoted(stem()))
+        .append(":\n    file: ")
+        .append(quoted(file))
+        .append('\n');
     if (scaling.drawnUnit().isEmpty()) {
       out.append("    unit: ").append(Undecided.mark("mm, cm, m, in or ft; the file names none"));
       out.append('\n');
@@ -146,7 +155,8 @@ final class DraftText {
       if (named(fill)) {
         any = true;
         out.append("  ").append(quoted(fill.name())).append(": ");
-        List<String> like = MaterialGuess.of(fill.name());
+        List<String> like =
+            MaterialGuess.of(LayerNames.general(fill.layer()) ? fill.name() : fill.layer());
         String hint =
             like.isEmpty()
                 ? "a name of the library or {conductivity: …}"
@@ -184,7 +194,7 @@ final class DraftText {
       out.append("  - {fill: ").append(fillOf(fill));
       switch (fill.kind()) {
         case LAYER -> {
-          out.append(", drawing: drawing");
+          out.append(", drawing: ").append(quoted(stem()));
           if (!fill.layer().isEmpty()) {
             out.append(", layer: ").append(quoted(fill.layer()));
           }
@@ -193,7 +203,7 @@ final class DraftText {
           }
         }
         case FACES, GAPS -> {
-          out.append(", drawing: drawing, at: ");
+          out.append(", drawing: ").append(quoted(stem())).append(", at: ");
           List<String> points = new ArrayList<>();
           fill.points().forEach(p -> points.add(point(p)));
           out.append(points.size() == 1 ? points.get(0) : "[" + String.join(", ", points) + "]");
@@ -228,9 +238,10 @@ final class DraftText {
   }
 
   private void psi() {
-    out.append("psi:   # leave away the dimensions that your calculation does not use\n");
-    out.append("  external: {between: [indoors, outdoors], dimensions: external}\n");
-    out.append("  internal: {between: [indoors, outdoors], dimensions: internal}\n");
+    out.append("psi:\n  junction:\n    between: [indoors, outdoors]\n    dimensions: ");
+    out.append(
+        Undecided.mark("external, internal or overall-internal, as your calculation has it"));
+    out.append('\n');
   }
 
   private void lists() {

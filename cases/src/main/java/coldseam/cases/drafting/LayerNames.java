@@ -45,6 +45,39 @@ final class LayerNames {
 
   private LayerNames() {}
 
+  /** Words that say of a layer how it is drawn, not what is drawn. */
+  private static final List<String> GENERAL =
+      List.of(
+          "",
+          "0",
+          "hatch",
+          "hatches",
+          "hatching",
+          "pattern",
+          "patterns",
+          "fill",
+          "fills",
+          "layer",
+          "solid",
+          "poche",
+          "section",
+          "cut",
+          "lines",
+          "line",
+          "outline",
+          "default");
+
+  /** Whether a name says nothing of what is drawn. */
+  static boolean general(String layer) {
+    for (String word : words(layer)) {
+      boolean number = Character.isDigit(word.charAt(0));
+      if (!GENERAL.contains(word) && !number) {
+        return false;
+      }
+    }
+    return true;
+  }
+
   /** The words of a name, small. */
   static List<String> words(String name) {
     List<String> words = new ArrayList<>();

@@ -18,7 +18,13 @@ final class OuterSides {
   private static final double TIP = 0.1;
 
   /** Share of a side below which a piece of it says nothing. */
-  private static final double NOTHING = 0.01;
+  private static final double NOTHING = 0.003;
+
+  /** How far inside the box a side is walked along, as a share of the larger dimension. */
+  private static final double INSIDE = 0.002;
+
+  /** The same for the tips of sheets. */
+  private static final double JUST_INSIDE = 0.0001;
 
   /** How far beyond a face the air is laid, as a share of the larger dimension. */
   private static final double BEYOND = 0.1;
@@ -64,7 +70,8 @@ final class OuterSides {
   private double face(
       Point corner, double ux, double uy, double inX, double inY, double length, double depth) {
     double step = length / SAMPLES;
-    double inside = Math.max(length, depth) * 1e-4;
+    double inside = INSIDE * Math.max(length, depth);
+    double just = JUST_INSIDE * Math.max(length, depth);
     double middle = Double.NaN;
     double longest = 0;
     int from = -1;
@@ -72,7 +79,8 @@ final class OuterSides {
       double s = (i + 0.5) * step;
       boolean drawn =
           i < SAMPLES
-              && over(corner.x() + s * ux + inside * inX, corner.y() + s * uy + inside * inY) >= 0;
+              && (over(corner.x() + s * ux + inside * inX, corner.y() + s * uy + inside * inY) >= 0
+                  || over(corner.x() + s * ux + just * inX, corner.y() + s * uy + just * inY) >= 0);
       if (drawn && from < 0) {
         from = i;
       } else if (!drawn && from >= 0) {
@@ -113,14 +121,14 @@ final class OuterSides {
     if (run > deep * inward) {
       return true;
     }
-    double inside = depth * 1e-4;
+    double just = JUST_INSIDE * Math.max(right - left, top - bottom);
     int first = -1;
     boolean single = true;
     for (int i = from; i < to; i++) {
       double s = (i + 0.5) * step;
-      int shape = over(corner.x() + s * ux + inside * inX, corner.y() + s * uy + inside * inY);
-      single &= first < 0 || shape == first;
-      first = shape;
+      int shape = over(corner.x() + s * ux + just * inX, corner.y() + s * uy + just * inY);
+      single &= first < 0 || shape < 0 || shape == first;
+      first = Math.max(first, shape);
     }
     return single && run < TIP * Math.min(right - left, top - bottom);
   }

@@ -163,13 +163,29 @@ public final class DrawnShapes {
       if (cell.depth() % 2 == 0 && !thin(cell)) {
         boolean divided = false;
         for (Cells.Cell other : cells) {
-          divided |= other != cell && other.group() == cell.group() && !thin(other);
+          divided |= other != cell && !thin(other) && dividedBy(cell, other, own);
         }
         int line = drawing.pieces().get(pieceOf[numbers.get(cell.lines().get(0))]).line();
         closed.add(new Shape(cell.rings(), layer, "", line, divided, cell.inner(), cell.areaM2()));
       }
     }
     return closed;
+  }
+
+  /**
+   * Whether an open line runs between two faces of one group. Closed outlines that overlap do not
+   * divide each other: the two are one thing drawn in parts.
+   */
+  private static boolean dividedBy(Cells.Cell cell, Cells.Cell other, List<DrawnLine> lines) {
+    if (cell.group() != other.group()) {
+      return false;
+    }
+    for (int line : cell.lines()) {
+      if (!lines.get(line).closed() && other.lines().contains(line)) {
+        return true;
+      }
+    }
+    return false;
   }
 
   /** Whether a face is thinner than the length to which gaps are closed anyway. */
@@ -302,6 +318,9 @@ public final class DrawnShapes {
   private List<Mark> marks(List<Joined.Join> places) {
     List<Mark> marks = new ArrayList<>();
     for (Joined.Join place : places) {
+      if (place.distanceM() <= Resolution.STANDARD.closeM()) {
+        continue;
+      }
       Piece piece = drawing.pieces().get(pieceOf[place.line()]);
       marks.add(new Mark(place.to(), place.distanceM(), piece.layer(), piece.line()));
     }

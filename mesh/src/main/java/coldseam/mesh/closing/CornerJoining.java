@@ -5,7 +5,9 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.Collections;
 import java.util.List;
+import java.util.Map;
 import java.util.Set;
+import java.util.TreeMap;
 import java.util.TreeSet;
 import org.locationtech.jts.geom.Coordinate;
 
@@ -19,6 +21,9 @@ final class CornerJoining {
 
   /** Cosine of the angle below which two loose ends run side by side, as those of a sheet do. */
   private static final double SIDE_BY_SIDE = Math.cos(Math.toRadians(30));
+
+  /** Sine of the least angle at which two lines meet in a place worth the name. */
+  private static final double LEAST_SINE = 0.1;
 
   private static final double SNAP_M = Places.SNAP_M;
 
@@ -223,13 +228,66 @@ final class CornerJoining {
   }
 
   private void settlePlaces() {
+    Map<Integer, List<Integer>> clusters = new TreeMap<>();
     for (int p = 0; p < joinedTo.length; p++) {
       int r = root(p);
       if (r != p) {
-        moved[p] = corners.at(r);
-        joins.add(join(p, corners.at(r), r));
+        clusters.computeIfAbsent(r, k -> new ArrayList<>(List.of(r))).add(p);
       }
     }
+    for (Map.Entry<Integer, List<Integer>> cluster : clusters.entrySet()) {
+      Coordinate target = target(cluster.getKey(), cluster.getValue());
+      for (int p : cluster.getValue()) {
+        if (target.distance(corners.at(p)) > SNAP_M) {
+          int other = p == cluster.getKey() ? cluster.getValue().get(1) : cluster.getKey();
+          moved[p] = target;
+          joins.add(join(p, target, other));
+        }
+      }
+    }
+  }
+
+  /**
+   * Where places that are joined come to lie: where something fits already; else where the first
+   * two loose ends would meet if they went on, so that their lines keep their directions.
+   */
+  private Coordinate target(int kept, List<Integer> places) {
+    if (corners.lines(kept).size() > 1) {
+      return corners.at(kept);
+    }
+    List<Integer> ends = new ArrayList<>();
+    for (int p : places) {
+      if (!corners.ending(p).isEmpty()) {
+        ends.add(p);
+      }
+    }
+    for (int i = 0; i < ends.size(); i++) {
+      for (int j = i + 1; j < ends.size(); j++) {
+        Coordinate meeting = meeting(ends.get(i), ends.get(j));
+        boolean near = meeting != null;
+        for (int p : places) {
+          near = near && meeting.distance(corners.at(p)) <= toleranceM;
+        }
+        if (near) {
+          return meeting;
+        }
+      }
+    }
+    return corners.at(kept);
+  }
+
+  /** Where two open lines would meet if they went on beyond their ends; null if nowhere. */
+  private Coordinate meeting(int p, int q) {
+    double[] u = corners.inward(corners.ending(p).get(0), p);
+    double[] v = corners.inward(corners.ending(q).get(0), q);
+    double sine = u[0] * v[1] - u[1] * v[0];
+    if (Math.abs(sine) < LEAST_SINE) {
+      return null;
+    }
+    Coordinate a = corners.at(p);
+    Coordinate b = corners.at(q);
+    double t = ((b.x - a.x) * v[1] - (b.y - a.y) * v[0]) / sine;
+    return new Coordinate(a.x + t * u[0], a.y + t * u[1]);
   }
 
   private int root(int place) {
