@@ -78,7 +78,7 @@ class ReadmeCommandsTest {
 
   private void copyCases() throws IOException {
     Path from = Root.folder().resolve("cases");
-    for (String folder : List.of("demo", "published", "windows")) {
+    for (String folder : List.of("demo", "demo/drawings", "published", "windows")) {
       Path to = Files.createDirectories(dir.resolve("cases").resolve(folder));
       try (Stream<Path> files = Files.list(from.resolve(folder))) {
         for (Path file : files.filter(Files::isRegularFile).toList()) {

@@ -5,6 +5,7 @@ import coldseam.cases.drawing.DrawingException;
 import coldseam.cases.drawing.DrawnShapes;
 import coldseam.cases.drawing.DrawnShapes.Shape;
 import coldseam.cases.drawing.OpenRegions;
+import coldseam.cases.words.Undecided;
 import coldseam.mesh.closing.Cells;
 import coldseam.mesh.closing.Closing;
 import coldseam.mesh.closing.DrawnLine;
@@ -66,7 +67,7 @@ final class DraftPlan {
     for (Shape shape : drawn.all()) {
       if (shape.look().isEmpty() && hatched(shape)) {
         passedOver++;
-      } else if (shape.divided() || shape.layer().isEmpty() && shape.look().isEmpty()) {
+      } else if (shape.divided() || noName(shape)) {
         faces(shape, faces);
       } else {
         groups
@@ -90,6 +91,13 @@ final class DraftPlan {
       }
     }
     groups.values().forEach(this::layer);
+  }
+
+  /** Whether a shape cannot be taken by a name: it has none, or one that would be misread. */
+  private static boolean noName(Shape shape) {
+    return shape.layer().isEmpty() && shape.look().isEmpty()
+        || Undecided.hint(shape.layer()).isPresent()
+        || Undecided.hint(shape.look()).isPresent();
   }
 
   /** Takes a shape by the faces that lie in it. */
@@ -154,7 +162,8 @@ final class DraftPlan {
   }
 
   private String unique(String name, boolean numbered) {
-    String plain = name.isBlank() ? "area" : name.strip();
+    boolean unusable = name.isBlank() || Undecided.hint(name).isPresent();
+    String plain = unusable ? "area" : name.strip();
     if (!numbered && names.add(plain)) {
       return plain;
     }

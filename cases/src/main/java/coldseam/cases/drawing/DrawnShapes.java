@@ -8,8 +8,10 @@ import coldseam.mesh.closing.TangledLinesException;
 import coldseam.mesh.plane.Point;
 import coldseam.mesh.plane.Resolution;
 import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 
@@ -305,7 +307,7 @@ public final class DrawnShapes {
     return inside;
   }
 
-  /** Corners that were joined. */
+  /** Places where corners were joined, each with the widest gap. */
   public List<Mark> joins() {
     return marks(joined.joins());
   }
@@ -316,15 +318,20 @@ public final class DrawnShapes {
   }
 
   private List<Mark> marks(List<Joined.Join> places) {
-    List<Mark> marks = new ArrayList<>();
+    // Of what is joined in one place the widest gap is told.
+    Map<Point, Mark> widest = new LinkedHashMap<>();
     for (Joined.Join place : places) {
       if (place.distanceM() <= Resolution.STANDARD.closeM()) {
         continue;
       }
       Piece piece = drawing.pieces().get(pieceOf[place.line()]);
-      marks.add(new Mark(place.to(), place.distanceM(), piece.layer(), piece.line()));
+      Mark mark = new Mark(place.to(), place.distanceM(), piece.layer(), piece.line());
+      Mark known = widest.get(place.to());
+      if (known == null || known.sizeM() < mark.sizeM()) {
+        widest.put(place.to(), mark);
+      }
     }
-    return marks;
+    return new ArrayList<>(widest.values());
   }
 
   /**

@@ -100,7 +100,7 @@ final class SvgUnfolding {
     }
     String label = e.attribute("inkscape:label");
     boolean layer = e.attribute("inkscape:groupmode").equals("layer");
-    String name = label.isEmpty() ? decoded(e.attribute("id")) : label;
+    String name = (label.isEmpty() ? decoded(e.attribute("id")) : label).strip();
     if (layer) {
       return paint.on(name, true);
     }
