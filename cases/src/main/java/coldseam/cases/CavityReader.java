@@ -37,7 +37,7 @@ final class CavityReader {
           "at", "rule", "ventilation", "openings", "to", "emissivity", "direction", "conductivity");
   static final List<String> RULES = List.of("frame", "layer");
   static final List<String> VENTILATIONS = List.of("unventilated", "slightly", "well");
-  static final List<String> FORMS = List.of("earlier", "2017");
+  static final List<String> FORMS = List.of("earlier", "2017", "radiosity");
   static final List<String> TEMPERATURES = List.of("fixed", "found");
 
   /** mm² in a m². */
@@ -87,19 +87,29 @@ final class CavityReader {
     Settings settings = settings(fields);
     Optional<String> word = fields.word("form", FORMS);
     Optional<RadiationForm> form =
-        word.isEmpty()
-            ? Optional.empty()
-            : Optional.of(word.get().equals("2017") ? RadiationForm.SERIES : RadiationForm.PRODUCT);
-    Temperatures temperatures =
-        fields.word("temperatures", TEMPERATURES).orElse("fixed").equals("found")
-            ? Temperatures.FOUND
-            : Temperatures.FIXED;
+        word.isEmpty() ? Optional.empty() : Optional.of(form(word.get()));
+    String met = fields.word("temperatures", TEMPERATURES).orElse("");
+    Temperatures temperatures = met.equals("found") ? Temperatures.FOUND : Temperatures.FIXED;
+    if (word.orElse("").equals("radiosity") && met.equals("fixed")) {
+      problems.add(
+          fields.get("temperatures").get(),
+          fields.what() + " has fixed temperatures, but radiosity follows from those of the faces",
+          "write `temperatures: found`, or leave it away");
+    }
     double throat = throat(fields);
     List<Single> singles = fields.has("single") ? singles(fields) : List.of();
     // a number that hangs on a broken value is none, though its mistake stands elsewhere
     return problems.count() > before || Double.isNaN(throat)
         ? Optional.empty()
         : Optional.of(new AirCavity(name, settings, form, temperatures, throat, false, singles));
+  }
+
+  private static RadiationForm form(String word) {
+    return switch (word) {
+      case "2017" -> RadiationForm.SERIES;
+      case "radiosity" -> RadiationForm.RADIOSITY;
+      default -> RadiationForm.PRODUCT;
+    };
   }
 
   private double throat(Fields fields) {

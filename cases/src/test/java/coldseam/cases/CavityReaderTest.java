@@ -89,6 +89,18 @@ class CavityReaderTest {
   }
 
   @Test
+  void radiosity_goes_with_temperatures_that_are_found() throws Exception {
+    AirCavity air = air("{form: radiosity}");
+    assertThat(air.form()).contains(RadiationForm.RADIOSITY);
+    assertThat(air.temperatures()).isEqualTo(Temperatures.FOUND);
+    assertThat(air("{form: radiosity, temperatures: found}")).isEqualTo(air);
+    says(
+        HEAD + "cavities:\n  air: {form: radiosity, temperatures: fixed}\n" + SECTION,
+        "9:40: cavity `air` has fixed temperatures, but radiosity follows from those of the faces;"
+            + " write `temperatures: found`, or leave it away");
+  }
+
+  @Test
   void uncovered_air_lies_under_everything_and_counts_where_enclosed() throws Exception {
     Detail detail = detail(HEAD + "cavities: {gap: {}, air: {}}\nuncovered: gap\n" + SECTION);
     assertThat(detail.areas().get(0).fill())
@@ -113,7 +125,7 @@ class CavityReaderTest {
             + SECTION,
         "9:15: `rule` is `frame` or `layer`, not `frames`; did you mean `frame`?",
         "9:36: `ventilation` is `unventilated`, `slightly` or `well`, not `closed`",
-        "9:50: `form` is `earlier` or `2017`, not `2012`; did you mean `2017`?",
+        "9:50: `form` is `earlier`, `2017` or `radiosity`, not `2012`; did you mean `2017`?",
         "9:70: `temperatures` is `fixed` or `found`, not `10`",
         "10:19: `openings` of cavity `gap` is negative: -1; it is mm2 per metre of length, 0 or"
             + " more, e.g. `800`",

@@ -104,9 +104,7 @@ public final class Solver {
     Agreed agreed =
         resolved.solve(
             resolved.goal(
-                ofEach,
-                resolved.plan().psiWanted(),
-                resolved.plan().heatLossTemperatures(shared)),
+                ofEach, resolved.plan().psiWanted(), resolved.plan().heatLossTemperatures(shared)),
             progress);
     Plan plan = agreed.resolved().plan();
     Solution heatLoss = agreed.solution();

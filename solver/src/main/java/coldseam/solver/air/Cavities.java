@@ -2,6 +2,7 @@ package coldseam.solver.air;
 
 import coldseam.mesh.partition.Partition;
 import coldseam.mesh.plane.Point;
+import coldseam.solver.cavity.RadiationForm;
 import coldseam.solver.conduction.Conduction;
 import coldseam.solver.conduction.Solution;
 import coldseam.solver.detail.AirCavity;
@@ -39,13 +40,20 @@ public final class Cavities {
   private final List<Shape> shapes;
   private final Settling settling;
   private final Map<String, Integer> numbers;
+  private final Map<Integer, Enclosure> enclosures;
   private final Settled state;
   private final boolean found;
 
-  private Cavities(LaidAir laid, List<Shape> shapes, Map<String, Integer> numbers, Settled state) {
+  private Cavities(
+      LaidAir laid,
+      List<Shape> shapes,
+      Map<String, Integer> numbers,
+      Map<Integer, Enclosure> enclosures,
+      Settled state) {
     this.laid = laid;
     this.shapes = shapes;
     this.numbers = numbers;
+    this.enclosures = enclosures;
     this.state = state;
     settling = new Settling(laid.groups(), shapes, laid.detail().view());
     boolean any = false;
@@ -75,17 +83,30 @@ public final class Cavities {
     Axes section = Axes.of(laid.partition());
     List<Shape> shapes = new ArrayList<>();
     Map<String, Integer> numbers = new HashMap<>();
+    Map<Integer, Enclosure> enclosures = new HashMap<>();
     for (int c = 0; c < laid.groups().size(); c++) {
       LaidAir.Group group = laid.groups().get(c);
       shapes.add(new Shape(group.pieces(), List.of(c), laid.rims(), section));
       numbers.put(group.name(), c);
+      if (radiates(group)) {
+        enclosures.put(c, Enclosure.of(group, c, laid.rims()));
+      }
     }
-    Cavities cavities = new Cavities(laid, shapes, numbers, Settled.begin(laid.groups().size()));
+    Cavities cavities =
+        new Cavities(laid, shapes, numbers, enclosures, Settled.begin(laid.groups().size()));
     return Optional.of(cavities.with(cavities.undirected()));
   }
 
+  /** Whether radiation in a cavity is worked out face by face. */
+  private static boolean radiates(LaidAir.Group group) {
+    Piece piece = group.pieces().get(0);
+    return !group.well()
+        && piece.fill().form(group.classed().rule()) == RadiationForm.RADIOSITY
+        && piece.settings().conductivityWPerMK().isEmpty();
+  }
+
   private Cavities with(Settled other) {
-    return new Cavities(laid, shapes, numbers, other);
+    return new Cavities(laid, shapes, numbers, enclosures, other);
   }
 
   /** Before any heat flow is known: the mean of both directions. */
@@ -95,7 +116,7 @@ public final class Cavities {
     for (int c = 0; c < n; c++) {
       double product = 1;
       for (int axis = 0; axis < 2; axis++) {
-        product *= settling.conductivity(c, axis, true, Double.NaN, Double.NaN);
+        product *= settling.conductivity(c, axis, true, Double.NaN, Double.NaN, Double.NaN);
       }
       begin.conductivityWPerMK()[c] = Math.sqrt(product);
     }
@@ -237,7 +258,8 @@ public final class Cavities {
       // no heat flows: take the way it would flow from the first space
       temperatures[0] += 1;
     }
-    return new Readings(solution.temperatures(temperatures), solution.conditions(), numbers);
+    return new Readings(
+        solution.temperatures(temperatures), solution.conditions(), numbers, enclosures);
   }
 
   /** Whether the conductivities agree with the temperatures. */

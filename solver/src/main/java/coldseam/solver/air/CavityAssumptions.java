@@ -1,5 +1,6 @@
 package coldseam.solver.air;
 
+import coldseam.solver.cavity.RadiationForm;
 import coldseam.solver.cavity.Ventilation;
 import coldseam.solver.detail.AirCavity;
 import coldseam.solver.detail.AirCavity.Rule;
@@ -32,6 +33,9 @@ final class CavityAssumptions {
         fill.temperatures() == Temperatures.FIXED
             ? ", fixed temperatures"
             : ", temperatures from the solution";
+    if (fill.form(group.classed().rule()) == RadiationForm.RADIOSITY) {
+      return "cavities: " + RadiationForm.RADIOSITY.words() + temperatures;
+    }
     return group.classed().rule() == Rule.FRAME
         ? "cavities: " + fill.form(Rule.FRAME).words() + temperatures
         : "air layers: ISO 6946, R from thickness, emissivity and direction" + temperatures;
@@ -46,6 +50,7 @@ final class CavityAssumptions {
     TreeSet<String> throats = new TreeSet<>();
     boolean proposedFrame = false;
     boolean proposedLayer = false;
+    boolean radiating = false;
     for (int c = 0; c < cavities.size(); c++) {
       Piece.Classed classed = laid.groups().get(c).classed();
       AirCavity fill = laid.groups().get(c).pieces().get(0).fill();
@@ -55,6 +60,8 @@ final class CavityAssumptions {
           unknown.addAll(shapes.get(c).unknown());
         }
       }
+      radiating |=
+          !laid.groups().get(c).well() && fill.form(classed.rule()) == RadiationForm.RADIOSITY;
       proposedFrame |= !classed.ruleStated() && classed.rule() == Rule.FRAME;
       proposedLayer |= !classed.ruleStated() && classed.rule() == Rule.LAYER;
     }
@@ -71,6 +78,16 @@ final class CavityAssumptions {
               "throats that part air",
               String.join("; ", throats),
               "ISO 10077-2, cavities joined by 2 mm or less count as separate"));
+    }
+    if (radiating) {
+      lines.add(
+          new Assumption(
+              "radiation between the faces of cavities",
+              "face by face, then counted as the conductivity that dissipates as much in the same"
+                  + " temperatures: L2D is not below that of the exchange itself; mouths, throats"
+                  + " and cut-off planes reflect",
+              "ISO 10077-2:2017 allows radiosity (from memory); the way it is counted is this"
+                  + " tool's"));
     }
     if (proposedFrame) {
       lines.add(

@@ -24,6 +24,7 @@ final class Readings {
   private final double[] warmest;
   private final double[] sum;
   private final double[] length;
+  private final Enclosure.Reading[] radiating;
 
   /**
    * Reads.
@@ -31,8 +32,13 @@ final class Readings {
    * @param field the temperatures
    * @param conditions say which label is what and what each edge faces
    * @param numbers number of each cavity by name
+   * @param enclosures of the cavities whose faces exchange radiation
    */
-  Readings(TemperatureField field, Conditions conditions, Map<String, Integer> numbers) {
+  Readings(
+      TemperatureField field,
+      Conditions conditions,
+      Map<String, Integer> numbers,
+      Map<Integer, Enclosure> enclosures) {
     this.field = field;
     this.conditions = conditions;
     mesh = field.mesh();
@@ -43,6 +49,10 @@ final class Readings {
     warmest = filled(count, Double.NEGATIVE_INFINITY);
     sum = new double[count];
     length = new double[count];
+    radiating = new Enclosure.Reading[count];
+    for (Map.Entry<Integer, Enclosure> entry : enclosures.entrySet()) {
+      radiating[entry.getKey()] = entry.getValue().new Reading();
+    }
     int labels = 0;
     for (int t = 0; t < mesh.triangleCount(); t++) {
       labels = Math.max(labels, mesh.label(t) + 1);
@@ -79,8 +89,37 @@ final class Readings {
         double side = mesh.sideLength(mesh.side(t, k));
         sum[cavity] += side * (a + 4 * m + b) / 6;
         length[cavity] += side;
+        if (radiating[cavity] != null) {
+          radiating[cavity].addSide(
+              x(t, (k + 1) % 3), y(t, (k + 1) % 3), x(t, (k + 2) % 3), y(t, (k + 2) % 3), a, m, b);
+        }
       }
     }
+    if (radiating[cavity] != null) {
+      double squares = 0;
+      for (int k = 0; k < 3; k++) {
+        // Middles of the sides integrate a polynomial of degree two.
+        double[] at = field.gradient(t, k == 0 ? 0 : 0.5, k == 1 ? 0 : 0.5, k == 2 ? 0 : 0.5);
+        squares += at[0] * at[0] + at[1] * at[1];
+      }
+      radiating[cavity].addGradient(squares * THIRD * mesh.area(t));
+    }
+  }
+
+  private double x(int t, int corner) {
+    return mesh.origin().x() + mesh.x(mesh.vertex(t, corner));
+  }
+
+  private double y(int t, int corner) {
+    return mesh.origin().y() + mesh.y(mesh.vertex(t, corner));
+  }
+
+  /**
+   * What the radiation between the faces of a cavity amounts to as a conductivity, W/(m·K); NaN if
+   * it is not worked out face by face.
+   */
+  double radiatingWPerMK(int cavity) {
+    return radiating[cavity] == null ? Double.NaN : radiating[cavity].conductivityWPerMK();
   }
 
   /** Whether a side of a triangle is a face of its cavity: no mouth, cut-off or throat. */

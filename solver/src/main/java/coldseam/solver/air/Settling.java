@@ -77,7 +77,8 @@ final class Settling {
       direct(c, readings, axis, forward, turns);
       difference[c] = readings.differenceK(c);
       mean[c] = readings.meanC(c);
-      answer[c] = conductivity(c, axis[c], forward[c], difference[c], mean[c]);
+      answer[c] =
+          conductivity(c, axis[c], forward[c], difference[c], mean[c], readings.radiatingWPerMK(c));
       double x = now.conductivityWPerMK()[c];
       worst = Math.max(worst, Math.abs(answer[c] - x) / x);
       next[c] = axis[c] == now.axis()[c] ? secant(now, c, answer[c]) : answer[c];
@@ -123,8 +124,13 @@ final class Settling {
     return groups.get(c).pieces().get(0).settings();
   }
 
-  /** λ_eq of a cavity, W/(m·K). */
-  double conductivity(int c, int axis, boolean forward, double difference, double mean) {
+  /**
+   * λ_eq of a cavity, W/(m·K).
+   *
+   * @param radiating what radiation face by face amounts to; NaN if it is not known, or not asked
+   */
+  double conductivity(
+      int c, int axis, boolean forward, double difference, double mean, double radiating) {
     if (settings(c).conductivityWPerMK().isPresent()) {
       return settings(c).conductivityWPerMK().getAsDouble();
     }
@@ -140,6 +146,9 @@ final class Settling {
               ? EquivalentConductivity.at(box, faces, form, difference, CELSIUS + mean)
               : EquivalentConductivity.fixed(box, faces, form);
       boolean slightly = groups.get(c).classed().ventilation() == Ventilation.SLIGHTLY_VENTILATED;
+      if (!Double.isNaN(radiating)) {
+        return (slightly ? 2 : 1) * (closed.gasConductivityWPerMK() + radiating);
+      }
       return (slightly ? closed.slightlyVentilated() : closed).conductivityWPerMK();
     }
     // thicker than the standard knows: its resistance hardly grows any more
@@ -149,6 +158,9 @@ final class Settling {
         found
             ? new AirLayer(thickness, flow, faces, difference, mean)
             : AirLayer.of(thickness, flow, faces);
+    if (!Double.isNaN(radiating)) {
+      return box.depthM() * layer.convectionWPerM2K() + radiating;
+    }
     double resistance =
         layer.dividedAt(box.widthM())
             ? layer.dividedResistanceM2KPerW(box.widthM(), form)

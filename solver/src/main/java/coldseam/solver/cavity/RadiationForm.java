@@ -14,7 +14,12 @@ public enum RadiationForm {
    * Resistances in series, 1/(1/ε₁ + 1/ε₂ − 2 + 1/F): ISO 6946:2017, annex D, and, <em>from
    * memory</em>, ISO 10077-2:2017.
    */
-  SERIES("ISO 10077-2:2017: 4 sigma Tm^3 / (1/eps1 + 1/eps2 - 2 + 1/F)");
+  SERIES("ISO 10077-2:2017: 4 sigma Tm^3 / (1/eps1 + 1/eps2 - 2 + 1/F)"),
+  /**
+   * Face by face with view factors, {@link Radiosity}; ISO 10077-2:2017 allows it (<em>from
+   * memory</em>). As long as no temperatures of faces are known it counts as {@link #SERIES}.
+   */
+  RADIOSITY("ISO 10077-2:2017: net radiation of grey faces, view factors by crossed strings");
 
   private final String words;
 
@@ -38,7 +43,7 @@ public enum RadiationForm {
     double viewed = viewFactor(depthOverWidth);
     return switch (this) {
       case PRODUCT -> faces.exchange() * viewed;
-      case SERIES -> 1 / (1 / faces.first() + 1 / faces.second() - 2 + 1 / viewed);
+      case SERIES, RADIOSITY -> 1 / (1 / faces.first() + 1 / faces.second() - 2 + 1 / viewed);
     };
   }
 

@@ -16,7 +16,8 @@ import java.util.OptionalDouble;
  * @param name unique among the fills of a detail
  * @param settings what is stated for all of it
  * @param form how radiation is written; empty: as before 2017 in frames, as in 2017 in layers
- * @param temperatures where the temperatures in the formulas come from
+ * @param temperatures where the temperatures in the formulas come from; found if the form is
+ *     radiosity
  * @param throatM places up to this width part it, m
  * @param enclosedOnly whether an area of it counts only where other areas enclose it: laid first
  *     and over everything, it fills what is left uncovered inside the section
@@ -117,9 +118,13 @@ public record AirCavity(
    */
   public record Single(Point inside, Settings settings) {}
 
-  /** Copies the list. */
+  /** Checks the figures. */
   public AirCavity {
     singles = List.copyOf(singles);
+    if (form.isPresent() && form.get() == RadiationForm.RADIOSITY) {
+      // There is no radiosity without temperatures.
+      temperatures = Temperatures.FOUND;
+    }
     if (name.isEmpty()) {
       throw new IllegalArgumentException("an air cavity needs a name");
     }
