@@ -39,7 +39,8 @@ final class CavitySection {
     for (Cavity cavity : cavities) {
       String at = "(" + units.length(cavity.at().x()) + ", " + units.length(cavity.at().y()) + ")";
       if (cavity.counted().isEmpty()) {
-        table.row(cavity.name(), at, words(cavity) + ", part of " + cavity.space().orElse(""));
+        String part = "part of " + cavity.space().orElse("");
+        table.row(cavity.name(), at, words(cavity), "", "", "", "", part);
         continue;
       }
       Cavity.Counted as = cavity.counted().get();
@@ -56,7 +57,7 @@ final class CavitySection {
               : Digits.shortest(as.emissivities().first(), 2)
                   + " "
                   + Digits.shortest(as.emissivities().second(), 2),
-          Digits.significant(as.conductivityWPerMK(), 4) + (as.stated() ? " stated" : ""));
+          Digits.significant(as.conductivityWPerMK(), 4) + note(as));
     }
     text.append(table.text());
     if (passes == 0) {
@@ -68,6 +69,19 @@ final class CavitySection {
             + (passes == 1 ? " pass" : " passes")
             + "; every ± holds for these conductivities";
     text.append("  ").append(ink.faint(note)).append('\n');
+  }
+
+  private static String note(Cavity.Counted as) {
+    if (as.stated()) {
+      return " stated";
+    }
+    return as.differenceK().isEmpty()
+        ? ""
+        : " at "
+            + Digits.fixed(as.differenceK().getAsDouble(), 1)
+            + " K, "
+            + Digits.fixed(as.meanC().getAsDouble(), 1)
+            + " °C";
   }
 
   private static String words(Cavity cavity) {

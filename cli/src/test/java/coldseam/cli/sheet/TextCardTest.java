@@ -57,6 +57,19 @@ class TextCardTest {
   }
 
   @Test
+  void cavities_are_listed_with_what_they_count_as() {
+    assertThat(card())
+        .contains(
+            """
+            Air cavities  heat flows along d; d, b and places in mm, λ in W/(m·K)
+                        at                                   d  b  flow  ε         λ
+              cavity 1  (45, 42.1)  slightly ventilated     54  6  ↓     0.9 0.25  0.2050 at 7.5 K, 9.2 °C
+              cavity 2  (500, 500)  layer, well ventilated                         part of outdoors
+              Settled in 5 passes; every ± holds for these conductivities
+            """);
+  }
+
+  @Test
   void what_it_rests_on_and_who_decides_stand_on_it() {
     assertThat(card())
         .contains("Assumed\n  ISO 6946, Rsi horizontal\n    film of indoors, walls: 0.13 m²·K/W\n")

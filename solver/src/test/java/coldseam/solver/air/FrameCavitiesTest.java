@@ -259,6 +259,31 @@ class FrameCavitiesTest {
             not -> assertThat(not.reason()).contains("did not settle in 12 passes"));
   }
 
+  /** However obliquely heat flows, the directions of the boxes come to rest. */
+  @ParameterizedTest
+  @EnumSource(Temperatures.class)
+  void directions_come_to_rest_in_oblique_flow(Temperatures temperatures) {
+    for (int left = 0; left <= 20; left++) {
+      DrawnDetail drawn =
+          new DrawnDetail()
+              .box(space("left", left, Exposure.INSIDE, 0.05), -20, 0, 0, 90)
+              .box(space("below", 20 - left, Exposure.INSIDE, 0.05), 0, -20, 90, 0)
+              .box(space("outdoors", -1, Exposure.OUTSIDE, 0.05), 90, 0, 110, 110)
+              .box(space("outdoors", -1, Exposure.OUTSIDE, 0.05), 0, 90, 90, 110)
+              .box(material("frame", 0.05), 0, 0, 90, 90);
+      AirCavity air = air(temperatures, Optional.empty());
+      for (int i = 0; i < 9; i++) {
+        double x = 5 + 29.0 * (i % 3);
+        double y = 5 + 29.0 * (i / 3);
+        drawn.box(air, x, y, x + (i % 2 == 0 ? 8 : 24), y + (i % 2 == 0 ? 24 : 8));
+      }
+      Result result = Solver.solve(drawn.detail(), Accuracy.STANDARD, Progress.SILENT);
+      assertThat(result.couplings().get(0).valueWPerMK().certificate())
+          .isInstanceOf(Certificate.Certified.class);
+      assertThat(counted(result, 0).passes()).isLessThanOrEqualTo(Cavities.MOST_PASSES);
+    }
+  }
+
   @Test
   void a_point_in_no_cavity_is_a_mistake() {
     AirCavity air =
