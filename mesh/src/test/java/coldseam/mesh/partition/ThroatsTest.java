@@ -75,6 +75,15 @@ class ThroatsTest {
   }
 
   @Test
+  void a_step_within_a_straight_channel_does_not_part_it() {
+    double[] dumbbell = {
+      0, 0, 20, 0, 20, 9, 30, 9, 30, 0, 50, 0, 50, 20, 30, 20, 30, 10.8, 25, 10.8, 25, 11, 20, 11,
+      20, 20, 0, 20
+    };
+    assertThat(areas(0, dumbbell)).containsExactly(19.0, 400.0, 400.0);
+  }
+
+  @Test
   void a_channel_of_more_than_2_mm_joins() {
     double[] dumbbell = {
       0, 0, 20, 0, 20, 9, 30, 9, 30, 0, 50, 0, 50, 20, 30, 20, 30, 11.01, 20, 11.01, 20, 20, 0, 20

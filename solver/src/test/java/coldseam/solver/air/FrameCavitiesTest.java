@@ -121,6 +121,33 @@ class FrameCavitiesTest {
     assertThat(counted(result, 0).conductivityWPerMK()).isCloseTo(0.142834, within(1e-5));
   }
 
+  /** A slit is as wide as from end to end, however its mouth is drawn. */
+  @Test
+  void a_kinked_mouth_is_no_wider() {
+    Result result =
+        block().box(AIR, 47, 40, 53, 80).polygon(outdoors(0), 47, 80, 50, 70, 53, 80).solve(1e-3);
+    assertThat(result.cavities().get(0).slitM()).isCloseTo(0.006, within(1e-9));
+    assertThat(result.cavities().get(0).ventilation()).isEqualTo(Ventilation.SLIGHTLY_VENTILATED);
+  }
+
+  /** A rectangle counts as itself though it lies askew in the section. */
+  @Test
+  void a_cavity_has_axes_of_its_own() {
+    double c = Math.cos(Math.toRadians(30));
+    double s = Math.sin(Math.toRadians(30));
+    double[] corners = {-10, -2.5, 10, -2.5, 10, 2.5, -10, 2.5};
+    double[] turned = new double[8];
+    for (int i = 0; i < 8; i += 2) {
+      turned[i] = 50 + c * corners[i] - s * corners[i + 1];
+      turned[i + 1] = 40 + s * corners[i] + c * corners[i + 1];
+    }
+    Cavity.Counted as = counted(block().polygon(AIR, turned).solve(1e-3), 0);
+    assertThat(as.box().depthM()).isCloseTo(0.005, within(1e-9));
+    assertThat(as.box().widthM()).isCloseTo(0.020, within(1e-9));
+    assertThat(as.direction().x()).isCloseTo(-s, within(1e-9));
+    assertThat(as.direction().y()).isCloseTo(c, within(1e-9));
+  }
+
   /** A groove 20 mm wide is outdoors; the chamber behind a slit of 6 mm in it is a cavity. */
   @Test
   void only_what_is_wide_open_belongs_to_the_space() {
