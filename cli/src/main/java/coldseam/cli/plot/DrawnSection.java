@@ -163,7 +163,7 @@ final class DrawnSection {
   private static boolean isSurface(Conditions.Kind kind) {
     return switch (kind) {
       case FILM, FIXED, FLOW, HOLLOW -> true;
-      case NONE, CUT_OFF -> false;
+      case NONE, CUT_OFF, AXIS -> false;
     };
   }
 

@@ -173,7 +173,7 @@ final class AdaptiveLoop {
   }
 
   private void estimate() {
-    indicator = new HierarchicalIndicator(d, fields, wanted);
+    indicator = HierarchicalIndicator.of(d, fields, wanted);
     sums = new double[d.spaces + 1];
     for (int f = 0; f < sums.length; f++) {
       if (wanted[f]) {
@@ -315,7 +315,8 @@ final class AdaptiveLoop {
   /** Square of the temperature error that a triangle causes elsewhere, over what it may be. */
   private double jumpWish(int field, int t) {
     double size = d.mesh.area(t) / d.extentSquared;
-    double error = indicator.energy[field][t] / QuadraticElement.conductivity(d.couplings, t);
+    double conductance = d.body.depthM(t) * QuadraticElement.conductivity(d.couplings, t);
+    double error = indicator.energy[field][t] / conductance;
     return size * error / (TemperatureErrors.MAY * TemperatureErrors.MAY);
   }
 

@@ -58,6 +58,7 @@ final class Assembly {
 
   /** What multiplies fixed nodes in ∫∇φ_p·λ∇φ_q over the triangles goes to the loads. */
   private void fixedNodes() {
+    ElementSum.Entries conduction = d.body.conduction();
     for (int t = 0; t < d.mesh.triangleCount() && d.unknowns < d.nodeCount; t++) {
       int at = QuadraticElement.NODES * t;
       for (int p = 0; p < QuadraticElement.NODES; p++) {
@@ -67,7 +68,7 @@ final class Assembly {
         for (int q = 0; q < QuadraticElement.NODES; q++) {
           int free = d.unknown[d.nodes[at + q]];
           if (free >= 0) {
-            toLoads(free, d.nodes[at + p], QuadraticElement.stiffness(d.couplings, t, p, q));
+            toLoads(free, d.nodes[at + p], conduction.entry(t, p, q));
           }
         }
       }
@@ -80,12 +81,7 @@ final class Assembly {
     for (int i = 0; i < member.length; i++) {
       member[i] = d.unknown[d.nodes[i]];
     }
-    return ElementSum.of(
-        d.unknowns,
-        QuadraticElement.NODES,
-        member,
-        new QuadraticElement.Stiffness(d.couplings),
-        films);
+    return ElementSum.of(d.unknowns, QuadraticElement.NODES, member, d.body.conduction(), films);
   }
 
   /** ∫φ_p φ_q/Rs over the surfaces with a film, and ∫φ_p/Rs for the space behind it. */
@@ -95,15 +91,14 @@ final class Assembly {
       if (o.kind[s] != Conditions.Kind.FILM) {
         continue;
       }
-      double unit = o.lengthM[s] / (30 * o.filmM2KPerW[s]);
-      add(o.start[s], o.start[s], 4 * unit);
-      add(o.end[s], o.end[s], 4 * unit);
-      add(o.middle[s], o.middle[s], 16 * unit);
-      add(o.start[s], o.middle[s], 2 * unit);
-      add(o.end[s], o.middle[s], 2 * unit);
-      add(o.start[s], o.end[s], -unit);
+      add(o.start[s], o.start[s], o.film(s, 0, 0));
+      add(o.end[s], o.end[s], o.film(s, 2, 2));
+      add(o.middle[s], o.middle[s], o.film(s, 1, 1));
+      add(o.start[s], o.middle[s], o.film(s, 0, 1));
+      add(o.end[s], o.middle[s], o.film(s, 2, 1));
+      add(o.start[s], o.end[s], o.film(s, 0, 2));
       if (o.space[s] < d.spaces - 1) {
-        spread(s, load[o.space[s]], 30 * unit);
+        spread(s, load[o.space[s]], 1 / o.filmM2KPerW[s]);
       }
     }
   }
@@ -113,16 +108,16 @@ final class Assembly {
     Outline o = d.outline;
     for (int s = 0; s < o.count; s++) {
       if (o.kind[s] == Conditions.Kind.FLOW) {
-        spread(s, load[solved.length - 1], o.lengthM[s] * o.flowWPerM2[s]);
+        spread(s, load[solved.length - 1], o.flowWPerM2[s]);
       }
     }
   }
 
-  private void spread(int s, double[] b, double total) {
+  private void spread(int s, double[] b, double density) {
     Outline o = d.outline;
-    toLoad(b, o.start[s], total / 6);
-    toLoad(b, o.middle[s], 4 * total / 6);
-    toLoad(b, o.end[s], total / 6);
+    toLoad(b, o.start[s], density * o.area(s, 0));
+    toLoad(b, o.middle[s], density * o.area(s, 1));
+    toLoad(b, o.end[s], density * o.area(s, 2));
   }
 
   private void toLoad(double[] b, int node, double value) {

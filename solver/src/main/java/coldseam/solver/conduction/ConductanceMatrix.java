@@ -40,7 +40,7 @@ final class ConductanceMatrix {
     }
     double prescribed = 0;
     for (int s = 0; s < d.outline.count; s++) {
-      prescribed += d.outline.lengthM[s] * d.outline.flowWPerM2[s];
+      prescribed += d.outline.areaM2[s] * d.outline.flowWPerM2[s];
     }
     return new ConductanceMatrix(a, driven, prescribed, -bound.middle(n, n));
   }
@@ -61,7 +61,7 @@ final class ConductanceMatrix {
     Outline o = d.outline;
     for (int s = 0; s < o.count; s++) {
       if (o.kind[s] == Conditions.Kind.FLOW) {
-        double flow = o.lengthM[s] * o.flowWPerM2[s];
+        double flow = o.areaM2[s] * o.flowWPerM2[s];
         prescribed += flow;
         flowEnergy += flow * o.mean(s, fields[n]);
         for (int i = 0; i < n; i++) {
@@ -75,7 +75,7 @@ final class ConductanceMatrix {
   private static double energy(Discretisation d, double[][] fields, int i, int j) {
     double sum = 0;
     for (int t = 0; t < d.mesh.triangleCount(); t++) {
-      sum += QuadraticElement.energy(d.couplings, d.nodes, t, fields[i], fields[j]);
+      sum += d.body.conducted(t, fields[i], fields[j]);
     }
     Outline o = d.outline;
     for (int s = 0; s < o.count; s++) {

@@ -20,8 +20,8 @@ final class ConjugateProblem {
   private final Discretisation d;
   private final StreamSpace space;
 
-  /** Couplings of the triangles for λ/det λ. */
-  private final double[] couplings;
+  /** The resistance of the triangles. */
+  private final ElementSum.Entries resistance;
 
   private final int[] unknown;
   private final int[] jumpUnknown;
@@ -38,7 +38,7 @@ final class ConjugateProblem {
   private ConjugateProblem(Discretisation d, StreamSpace space) {
     this.d = d;
     this.space = space;
-    couplings = couplings(d);
+    resistance = d.body.resistance();
     unknown = new int[d.nodeCount];
     int found = number(d, space, unknown);
     jumpUnknown = new int[space.cuts];
@@ -71,7 +71,7 @@ final class ConjugateProblem {
     int found = 0;
     for (boolean last : new boolean[] {false, true}) {
       for (int n : d.inOrder) {
-        if (space.chain[n] != n || space.pinned[n]) {
+        if (space.chain[n] != n || space.pinned[n] || space.tiedToAxis(n)) {
           unknown[n] = -1;
         } else if (shared[n] == last) {
           unknown[n] = found++;
@@ -79,18 +79,6 @@ final class ConjugateProblem {
       }
     }
     return found;
-  }
-
-  /** Couplings of λ/det λ: those of λ over det λ. */
-  static double[] couplings(Discretisation d) {
-    double[] conjugate = new double[d.couplings.length];
-    for (int t = 0; t < d.mesh.triangleCount(); t++) {
-      double root = QuadraticElement.conductivity(d.couplings, t);
-      for (int k = 0; k < 3; k++) {
-        conjugate[3 * t + k] = d.couplings[3 * t + k] / (root * root);
-      }
-    }
-    return conjugate;
   }
 
   /**
@@ -137,11 +125,7 @@ final class ConjugateProblem {
       }
       for (int p = 0; p < QuadraticElement.NODES; p++) {
         for (int q = 0; q <= p; q++) {
-          add(
-              space.nodes[at + p],
-              space.nodes[at + q],
-              QuadraticElement.stiffness(couplings, t, p, q),
-              p == q);
+          add(space.nodes[at + p], space.nodes[at + q], resistance.entry(t, p, q), p == q);
         }
       }
       Arrays.fill(member, at, at + QuadraticElement.NODES, -1);
@@ -155,16 +139,15 @@ final class ConjugateProblem {
       if (o.kind[s] != Conditions.Kind.FILM) {
         continue;
       }
-      double unit = o.filmM2KPerW[s] / (3 * o.lengthM[s]);
       int start = streamStart(d, space, s);
       int middle = streamMiddle(d, space, s);
       int end = streamEnd(d, space, s);
-      add(start, start, 7 * unit, true);
-      add(end, end, 7 * unit, true);
-      add(middle, middle, 16 * unit, true);
-      add(start, end, unit, false);
-      add(start, middle, -8 * unit, false);
-      add(end, middle, -8 * unit, false);
+      add(start, start, o.resistance(s, 0, 0), true);
+      add(end, end, o.resistance(s, 2, 2), true);
+      add(middle, middle, o.resistance(s, 1, 1), true);
+      add(start, end, o.resistance(s, 0, 2), false);
+      add(start, middle, o.resistance(s, 0, 1), false);
+      add(end, middle, o.resistance(s, 2, 1), false);
     }
   }
 
@@ -264,12 +247,7 @@ final class ConjugateProblem {
   }
 
   private SparseSymmetric matrix() {
-    return ElementSum.of(
-        unknowns,
-        QuadraticElement.NODES,
-        member,
-        new QuadraticElement.Stiffness(couplings),
-        others);
+    return ElementSum.of(unknowns, QuadraticElement.NODES, member, resistance, others);
   }
 
   private void solve(double[][] fields) {
@@ -289,6 +267,7 @@ final class ConjugateProblem {
         }
         field[n] = flows ? value + given(n) : value;
       }
+      space.followAxis(field);
     }
   }
 }

@@ -3,6 +3,7 @@ package coldseam.solver.conduction;
 import coldseam.mesh.triangulation.Mesh;
 import coldseam.solver.algebra.FillReducingOrder;
 import coldseam.solver.detail.Conditions;
+import coldseam.solver.detail.Geometry;
 import java.util.Arrays;
 import java.util.HashMap;
 import java.util.Map;
@@ -27,6 +28,9 @@ final class Discretisation {
 
   /** Three times the y of each triangle's centre, m. */
   final double[] centreY;
+
+  /** What the section stands for. */
+  final Body body;
 
   final Outline outline;
 
@@ -66,7 +70,14 @@ final class Discretisation {
       QuadraticElement.couplings(mesh, t, conditions.material(mesh.label(t)), couplings, 3 * t);
     }
     extentSquared = extentSquared(mesh);
-    outline = new Outline(mesh, conditions);
+    double[] conjugate = QuadraticElement.conjugate(couplings);
+    if (conditions.geometry() == Geometry.PLANE) {
+      body = new Prism(nodes, couplings, conjugate);
+      outline = new Outline(mesh, conditions);
+    } else {
+      body = new BodyOfRevolution(mesh, nodes, couplings, conjugate);
+      outline = new RingOutline(mesh, conditions);
+    }
     fixedSpace = new int[nodeCount];
     Arrays.fill(fixedSpace, FREE);
     boolean flow = false;

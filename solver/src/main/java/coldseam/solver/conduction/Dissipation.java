@@ -86,7 +86,7 @@ public final class Dissipation {
       double[][] r = resisted.get(partOf[d.mesh.label(t)]);
       for (int i = 0; i < last; i++) {
         for (int j = i; j < last; j++) {
-          e[i][j] += QuadraticElement.energy(d.couplings, d.nodes, t, fields[i], fields[j]);
+          e[i][j] += d.body.conducted(t, fields[i], fields[j]);
           r[i][j] += bound == null ? 0 : bound.resistance(t, i, j);
         }
       }

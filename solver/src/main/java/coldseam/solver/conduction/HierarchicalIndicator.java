@@ -12,9 +12,9 @@ import java.util.Arrays;
  * quartics, one for each side, see what cubics miss by symmetry and are taken one by one. It steers
  * refinement; it is no bound.
  */
-final class HierarchicalIndicator {
+class HierarchicalIndicator {
   /** Local cubics: L_a L_b (L_a − L_b) of the three sides, and L_0 L_1 L_2. */
-  private static final int SIZE = 4;
+  static final int SIZE = 4;
 
   /** −∂/∂G_k of the matrix of the cubics, SIZE × SIZE for each side k. */
   private static final double[][] CUBICS = new double[3][SIZE * SIZE];
@@ -38,18 +38,26 @@ final class HierarchicalIndicator {
   /** How many times what is seen a slender triangle may lack (measured on sheet-metal details). */
   private static final double MOST_UNSEEN = 6;
 
-  private final Discretisation d;
+  final Discretisation d;
   private final int[] unknown;
   private final double[] sideStiffness;
   private final double[] matrix = new double[SIZE * SIZE];
   private final double[] local = new double[SIZE];
   private final double[] derivatives = new double[9];
+  private final double[] residuals = new double[7];
 
   /** Energy lacking by field and triangle. */
   final double[][] energy;
 
   /** Largest error seen on the sides of each triangle by field, in units of the field. */
   final double[][] amplitude;
+
+  /** Estimates for what the section stands for, see the constructor. */
+  static HierarchicalIndicator of(Discretisation d, double[][] fields, boolean[] wanted) {
+    return d.body instanceof BodyOfRevolution
+        ? new RingIndicator(d, fields, wanted)
+        : new HierarchicalIndicator(d, fields, wanted);
+  }
 
   /**
    * Estimates.
@@ -100,7 +108,7 @@ final class HierarchicalIndicator {
     double[] values = new double[capacity];
     int count = 0;
     for (int t = 0; t < d.mesh.triangleCount(); t++) {
-      localMatrix(t);
+      localMatrix(t, matrix);
       double inside = matrix[SIZE * SIZE - 1];
       for (int p = 0; p < 3; p++) {
         int row = unknown[d.mesh.side(t, p)];
@@ -124,23 +132,25 @@ final class HierarchicalIndicator {
       if (o.kind[s] == Conditions.Kind.FILM) {
         rows[count] = unknown[side];
         columns[count] = unknown[side];
-        values[count++] = o.lengthM[s] / o.filmM2KPerW[s] / 210;
-        sideStiffness[side] += o.lengthM[s] / o.filmM2KPerW[s] / 630;
+        values[count++] = o.areaM2[s] / o.filmM2KPerW[s] / 210;
+        sideStiffness[side] += o.areaM2[s] / o.filmM2KPerW[s] / 630;
       }
     }
     return unknowns == 0 ? null : SymmetricSystem.factor(unknowns, rows, columns, values, count);
   }
 
-  private void localMatrix(int t) {
+  /** Writes the energies of the cubics of a triangle, SIZE × SIZE. */
+  void localMatrix(int t, double[] out) {
     double g0 = -d.couplings[3 * t];
     double g1 = -d.couplings[3 * t + 1];
     double g2 = -d.couplings[3 * t + 2];
-    for (int i = 0; i < matrix.length; i++) {
-      matrix[i] = g0 * CUBICS[0][i] + g1 * CUBICS[1][i] + g2 * CUBICS[2][i];
+    for (int i = 0; i < out.length; i++) {
+      out[i] = g0 * CUBICS[0][i] + g1 * CUBICS[1][i] + g2 * CUBICS[2][i];
     }
   }
 
-  private double quartic(int t, int k) {
+  /** The energy of the quartic of a side in a triangle. */
+  double quartic(int t, int k) {
     return -d.couplings[3 * t] * QUARTICS[0][k]
         - d.couplings[3 * t + 1] * QUARTICS[1][k]
         - d.couplings[3 * t + 2] * QUARTICS[2][k];
@@ -177,26 +187,44 @@ final class HierarchicalIndicator {
         double c = cubic[unknown[side]];
         double q = quartic[side];
         energy[field][o.triangle[s]] +=
-            o.lengthM[s] / o.filmM2KPerW[s] * (c * c / 210 + q * q / 630);
+            o.areaM2[s] / o.filmM2KPerW[s] * (c * c / 210 + q * q / 630);
       }
     }
   }
 
   /** The residual of a triangle tested with its cubics (those inside eliminated) and quartics. */
   private void load(int t, double[] u, double[] source, double[] cubicLoad, double[] quarticLoad) {
-    localMatrix(t);
+    localMatrix(t, matrix);
     QuadraticElement.derivativesAtCorners(d.nodes, t, u, derivatives);
-    source[t] = QuadraticElement.divergence(d.couplings, d.nodes, t, u);
+    residuals(t, u, derivatives, residuals);
+    source[t] = residuals[3];
     for (int k = 0; k < 3; k++) {
       int side = d.mesh.side(t, k);
       if (unknown[side] < 0) {
         continue;
       }
-      double first = QuadraticElement.sideFlux(d.couplings, t, k, (k + 1) % 3, derivatives);
-      double last = QuadraticElement.sideFlux(d.couplings, t, k, (k + 2) % 3, derivatives);
-      double inside = matrix[k * SIZE + 3] / matrix[SIZE * SIZE - 1] * source[t] / 60;
-      cubicLoad[unknown[side]] -= sign(t, k) * ((first - last) / 60 + inside);
-      quarticLoad[side] += source[t] / 90 - (first + last) / 60;
+      double inside = matrix[k * SIZE + 3] / matrix[SIZE * SIZE - 1] * source[t];
+      cubicLoad[unknown[side]] += sign(t, k) * (residuals[k] - inside);
+      quarticLoad[side] += residuals[4 + k];
+    }
+  }
+
+  /**
+   * Writes −∫∇u·λ∇ψ over a triangle for the cubics ψ, that inside last, then for the quartics.
+   *
+   * @param t the triangle
+   * @param u nodal values
+   * @param corners what {@link QuadraticElement#derivativesAtCorners} wrote of them
+   * @param out seven numbers
+   */
+  void residuals(int t, double[] u, double[] corners, double[] out) {
+    double divergence = QuadraticElement.divergence(d.couplings, d.nodes, t, u);
+    out[3] = divergence / 60;
+    for (int k = 0; k < 3; k++) {
+      double first = QuadraticElement.sideFlux(d.couplings, t, k, (k + 1) % 3, corners);
+      double last = QuadraticElement.sideFlux(d.couplings, t, k, (k + 2) % 3, corners);
+      out[k] = (last - first) / 60;
+      out[4 + k] = divergence / 90 - (first + last) / 60;
     }
   }
 
@@ -205,23 +233,25 @@ final class HierarchicalIndicator {
     for (int s = 0; s < o.count; s++) {
       int side = o.middle[s] - d.mesh.vertexCount();
       if (o.kind[s] == Conditions.Kind.FILM) {
-        double conductance = o.lengthM[s] / o.filmM2KPerW[s];
+        double conductance = 1 / o.filmM2KPerW[s];
         double ambient = o.space[s] == field ? 1 : 0;
         double first = ambient - u[o.start[s]];
         double middle = ambient - u[o.middle[s]];
         double last = ambient - u[o.end[s]];
         int sign = o.start[s] < o.end[s] ? 1 : -1;
-        cubicLoad[unknown[side]] += sign * conductance * (first - last) / 60;
-        quarticLoad[side] += conductance * (middle / 30 + ((first + last) / 2 - middle) / 70);
+        cubicLoad[unknown[side]] += sign * conductance * o.againstCubic(s, first, middle, last);
+        quarticLoad[side] += conductance * o.againstQuartic(s, first, middle, last);
       } else if (o.kind[s] == Conditions.Kind.FLOW && field == d.spaces) {
-        quarticLoad[side] += o.lengthM[s] * o.flowWPerM2[s] / 30;
+        int sign = o.start[s] < o.end[s] ? 1 : -1;
+        cubicLoad[unknown[side]] += sign * o.flowWPerM2[s] * o.againstCubic(s, 1, 1, 1);
+        quarticLoad[side] += o.flowWPerM2[s] * o.againstQuartic(s, 1, 1, 1);
       }
     }
   }
 
   private void gather(int t, int field, double source, double[] cubic, double[] quartic) {
-    localMatrix(t);
-    double inside = source / 60;
+    localMatrix(t, matrix);
+    double inside = source;
     double lacking = 0;
     double most = 0;
     for (int k = 0; k < 3; k++) {
@@ -280,12 +310,12 @@ final class HierarchicalIndicator {
     }
   }
 
-  private static double along(double[] derivative, int k) {
+  static double along(double[] derivative, int k) {
     return derivative[(k + 2) % 3] - derivative[(k + 1) % 3];
   }
 
   /** ∂/∂L_i of the side cubics, the cubic inside, the side quartics. */
-  private static void barycentricDerivatives(double[] l, double[][] out) {
+  static void barycentricDerivatives(double[] l, double[][] out) {
     for (int k = 0; k < 3; k++) {
       int a = (k + 1) % 3;
       int b = (k + 2) % 3;

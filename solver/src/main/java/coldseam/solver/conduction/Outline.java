@@ -9,7 +9,7 @@ import java.util.Arrays;
  * the order of their triangles. Side s runs from node {@code start[s]} over {@code middle[s]} to
  * {@code end[s]}, counter-clockwise around the section.
  */
-final class Outline {
+class Outline {
   final int count;
   final int[] triangle;
   final int[] sideOfTriangle;
@@ -18,6 +18,10 @@ final class Outline {
   final int[] middle;
   final int[] end;
   final double[] lengthM;
+
+  /** What of the body's surface a side stands for, m². */
+  final double[] areaM2;
+
   final Conditions.Kind[] kind;
   final int[] space;
   final double[] filmM2KPerW;
@@ -48,6 +52,7 @@ final class Outline {
     middle = new int[n];
     end = new int[n];
     lengthM = new double[n];
+    areaM2 = new double[n];
     kind = new Conditions.Kind[n];
     space = new int[n];
     filmM2KPerW = new double[n];
@@ -57,6 +62,7 @@ final class Outline {
     for (int s = 0; s < n; s++) {
       read(mesh, conditions, s, found[s]);
     }
+    measure(mesh);
   }
 
   private static boolean carries(Conditions conditions, int edge) {
@@ -87,6 +93,11 @@ final class Outline {
     at[corner] = s;
   }
 
+  /** Measures the areas: of a prism, a square metre for every metre of its section. */
+  void measure(Mesh mesh) {
+    System.arraycopy(lengthM, 0, areaM2, 0, count);
+  }
+
   /** Index of a triangle's side here, or −1. */
   int of(int t, int k) {
     return at[3 * t + k];
@@ -115,8 +126,111 @@ final class Outline {
             + ub * (4 * vb + 2 * vm - va));
   }
 
-  /** ∫u along a side over its length. */
+  /** ∫u over the surface of a side over its area. */
   double mean(int s, double[] u) {
     return (u[start[s]] + 4 * u[middle[s]] + u[end[s]]) / 6;
+  }
+
+  /** ∫φ_p over the surface of a side, p of 0, 1, 2 for start, middle, end, m². */
+  double area(int s, int p) {
+    return (p == 1 ? 4 : 1) * lengthM[s] / 6;
+  }
+
+  /** ∫φ_p φ_q/Rs over the surface of a side with a film. */
+  double film(int s, int p, int q) {
+    double unit = lengthM[s] / (30 * filmM2KPerW[s]);
+    if (p == 1 || q == 1) {
+      return p == q ? 16 * unit : 2 * unit;
+    }
+    return p == q ? 4 * unit : -unit;
+  }
+
+  /**
+   * ∫Rs φ_p′ φ_q′/ω along a side with a film, for stream functions, ω the depth behind it; nodes
+   * whose values follow from those of the ends have entries of 0.
+   */
+  double resistance(int s, int p, int q) {
+    double unit = filmM2KPerW[s] / (3 * lengthM[s]);
+    if (p == 1 || q == 1) {
+      return p == q ? 16 * unit : -8 * unit;
+    }
+    return p == q ? 7 * unit : unit;
+  }
+
+  /**
+   * ∫Rs S′V′/ω along a side with a film.
+   *
+   * @param s the side
+   * @param sp rise of S along the first half
+   * @param sq rise of S along the second half
+   * @param vp rise of V along the first half
+   * @param vq rise of V along the second half
+   */
+  double resisted(int s, double sp, double sq, double vp, double vq) {
+    return filmM2KPerW[s]
+        / (6 * lengthM[s])
+        * ((3 * sp - sq) * (3 * vp - vq)
+            + 4 * (sp + sq) * (vp + vq)
+            + (3 * sq - sp) * (3 * vq - vp));
+  }
+
+  /** How many numbers {@link #misfit} writes at most. */
+  int misfitSize() {
+    return 3;
+  }
+
+  /**
+   * Writes what Rs S′/ω and space − u differ by along a side with a film, in a form of its own.
+   *
+   * @param s the side
+   * @param u nodal values
+   * @param space value of the side's space
+   * @param first rise of S along the first half
+   * @param second rise of S along the second half
+   * @param out takes it
+   */
+  void misfit(int s, double[] u, double space, double first, double second, double[] out) {
+    double scale = filmM2KPerW[s] / lengthM[s];
+    out[0] = u[start[s]] - space - scale * (3 * first - second);
+    out[1] = u[middle[s]] - space - scale * (first + second);
+    out[2] = u[end[s]] - space - scale * (3 * second - first);
+  }
+
+  /** The gap between the energies of temperatures and of fluxes in a film, see {@link Body#gap}. */
+  double gap(int s, double[] one, double[] other) {
+    return lengthM[s]
+        / (30 * filmM2KPerW[s])
+        * (one[0] * (4 * other[0] + 2 * other[1] - other[2])
+            + one[1] * (2 * other[0] + 16 * other[1] + 2 * other[2])
+            + one[2] * (4 * other[2] + 2 * other[1] - other[0]));
+  }
+
+  /**
+   * ∫φ f ω along a side for the shape function of one of its ends.
+   *
+   * @param s the side
+   * @param atStart whether it is the start's
+   * @param own linear f there, times the side's length
+   * @param far f at the other end, times the side's length
+   */
+  double atEnd(int s, boolean atStart, double own, double far) {
+    return own / 6;
+  }
+
+  /**
+   * ∫ψ f over the surface of a side for ψ = t(1 − t)(1 − 2t), t from 0 at its start to 1.
+   *
+   * @param s the side
+   * @param a quadratic f at the start
+   * @param m in the middle
+   * @param b at the end
+   */
+  double againstCubic(int s, double a, double m, double b) {
+    return lengthM[s] * (a - b) / 60;
+  }
+
+  /** The same for ψ = t(1 − t)(1 − 2t)². */
+  double againstQuartic(int s, double a, double m, double b) {
+    return lengthM[s] * (m / 30 + ((a + b) / 2 - m) / 70);
   }
 }

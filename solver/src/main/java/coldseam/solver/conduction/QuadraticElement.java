@@ -47,6 +47,18 @@ final class QuadraticElement {
     out[at + 2] = -turned(xx, xy, yy, x0, y0, x2, y2) / fourAreas;
   }
 
+  /** Couplings of λ/det λ: those of λ over det λ. */
+  static double[] conjugate(double[] g) {
+    double[] conjugate = new double[g.length];
+    for (int t = 0; t < g.length / 3; t++) {
+      double root = conductivity(g, t);
+      for (int k = 0; k < 3; k++) {
+        conjugate[3 * t + k] = g[3 * t + k] / (root * root);
+      }
+    }
+    return conjugate;
+  }
+
   /** √det λ of a triangle's material, W/(m·K). */
   static double conductivity(double[] g, int t) {
     double g0 = g[3 * t];
@@ -94,27 +106,6 @@ final class QuadraticElement {
 
   private static double sum(double[] g, int at) {
     return g[at] + g[at + 1] + g[at + 2];
-  }
-
-  /**
-   * ∫∇φ_p·λ∇u over a triangle, from differences.
-   *
-   * @param g couplings of all triangles
-   * @param nodes nodes of all triangles
-   * @param t the triangle
-   * @param p a local node
-   * @param u nodal values
-   */
-  static double residual(double[] g, int[] nodes, int t, int p, double[] u) {
-    int at = NODES * t;
-    double own = u[nodes[at + p]];
-    double sum = 0;
-    for (int q = 0; q < NODES; q++) {
-      if (q != p) {
-        sum += stiffness(g, t, p, q) * (u[nodes[at + q]] - own);
-      }
-    }
-    return sum;
   }
 
   /**

@@ -3,6 +3,7 @@ package coldseam.solver.conduction;
 import coldseam.mesh.triangulation.Mesh;
 import coldseam.mesh.triangulation.Topology;
 import coldseam.solver.detail.Conditions;
+import coldseam.solver.detail.Geometry;
 import java.util.Arrays;
 
 /**
@@ -47,6 +48,9 @@ final class StreamSpace {
 
   /** For each cut its given jump in the field of the given flows; NaN where it is unknown. */
   final double[] givenJump;
+
+  /** What holds beside the axis of a body of revolution; null for a prism. */
+  private final AxisTies ties;
 
   private final Mesh mesh;
   private final Conditions conditions;
@@ -104,6 +108,19 @@ final class StreamSpace {
     }
     fanJumps = null;
     pinned = pins();
+    ties = conditions.geometry() == Geometry.PLANE ? null : new AxisTies(mesh, nodes);
+  }
+
+  /** Whether a node's value follows from those of two others, see {@link AxisTies}. */
+  boolean tiedToAxis(int node) {
+    return ties != null && ties.tied(node);
+  }
+
+  /** Sets the values that follow from others. */
+  void followAxis(double[] stream) {
+    if (ties != null) {
+      ties.follow(stream);
+    }
   }
 
   /** How often a node adds the jump of a cut. */
@@ -120,7 +137,7 @@ final class StreamSpace {
   private boolean flowGiven(int halfSide) {
     return switch (kind(halfSide)) {
       case FILM, FIXED -> false;
-      case NONE, FLOW, CUT_OFF, HOLLOW -> true;
+      case NONE, FLOW, CUT_OFF, HOLLOW, AXIS -> true;
     };
   }
 
@@ -138,7 +155,21 @@ final class StreamSpace {
     int a = mesh.vertex(t, (halfSide % 3 + 1) % 3);
     int b = mesh.vertex(t, (halfSide % 3 + 2) % 3);
     double length = Math.hypot(mesh.x(b) - mesh.x(a), mesh.y(b) - mesh.y(a));
-    return length * conditions.flowWPerM2(mesh.partitionEdge(t, halfSide % 3));
+    double area = length;
+    if (conditions.geometry() == Geometry.AXISYMMETRIC) {
+      area *= (Circumference.at(mesh, a) + Circumference.at(mesh, b)) / 2;
+    }
+    return area * conditions.flowWPerM2(mesh.partitionEdge(t, halfSide % 3));
+  }
+
+  /** What of the flow across a half-side enters along its first half. */
+  private double shareOfFirstHalf(int halfSide) {
+    if (conditions.geometry() == Geometry.PLANE) {
+      return 0.5;
+    }
+    double a = Circumference.at(mesh, mesh.vertex(halfSide / 3, (halfSide % 3 + 1) % 3));
+    double b = Circumference.at(mesh, mesh.vertex(halfSide / 3, (halfSide % 3 + 2) % 3));
+    return (3 * a + b) / (4 * (a + b));
   }
 
   // --- cuts ---
@@ -331,7 +362,8 @@ final class StreamSpace {
       }
       before = last;
       double flow = flowIn(h);
-      tie(middle, mesh.vertexCount() + mesh.side(t, k), head, sofar, fall + flow / 2, nodeJumps);
+      double half = flow == 0 ? 0 : flow * shareOfFirstHalf(h);
+      tie(middle, mesh.vertexCount() + mesh.side(t, k), head, sofar, fall + half, nodeJumps);
       fall += flow;
       int end = mesh.vertex(t, (k + 2) % 3);
       if (end == head) {

@@ -88,8 +88,8 @@ final class StretchFlows {
     for (int s = 0; s < o.count; s++) {
       double ambient = o.space[s] == field ? 1 : 0;
       switch (o.kind[s]) {
-        case FILM -> inflow[s] = o.lengthM[s] / o.filmM2KPerW[s] * (ambient - o.mean(s, u));
-        case FLOW -> inflow[s] = field == d.spaces ? o.lengthM[s] * o.flowWPerM2[s] : 0;
+        case FILM -> inflow[s] = o.areaM2[s] / o.filmM2KPerW[s] * (ambient - o.mean(s, u));
+        case FLOW -> inflow[s] = field == d.spaces ? o.areaM2[s] * o.flowWPerM2[s] : 0;
         default -> {
           if (reaction == null) {
             reaction = reactions(u, field);
@@ -111,24 +111,22 @@ final class StretchFlows {
       for (int p = 0; p < QuadraticElement.NODES; p++) {
         int node = d.nodes[QuadraticElement.NODES * t + p];
         if (d.fixed(node)) {
-          reaction[node] += QuadraticElement.residual(d.couplings, d.nodes, t, p, u);
+          reaction[node] += d.body.residual(d.nodes, t, p, u);
         }
       }
     }
     Outline o = d.outline;
     for (int s = 0; s < o.count; s++) {
       if (o.kind[s] == Conditions.Kind.FLOW && field == d.spaces) {
-        double flow = o.lengthM[s] * o.flowWPerM2[s];
-        reaction[o.start[s]] -= flow / 6;
-        reaction[o.end[s]] -= flow / 6;
+        reaction[o.start[s]] -= o.area(s, 0) * o.flowWPerM2[s];
+        reaction[o.end[s]] -= o.area(s, 2) * o.flowWPerM2[s];
       } else if (o.kind[s] == Conditions.Kind.FILM) {
         double ambient = o.space[s] == field ? 1 : 0;
-        double unit = o.lengthM[s] / (30 * o.filmM2KPerW[s]);
         double a = ambient - u[o.start[s]];
         double m = ambient - u[o.middle[s]];
         double b = ambient - u[o.end[s]];
-        reaction[o.start[s]] -= unit * (4 * a + 2 * m - b);
-        reaction[o.end[s]] -= unit * (4 * b + 2 * m - a);
+        reaction[o.start[s]] -= o.film(s, 0, 0) * a + o.film(s, 0, 1) * m + o.film(s, 0, 2) * b;
+        reaction[o.end[s]] -= o.film(s, 2, 0) * a + o.film(s, 2, 1) * m + o.film(s, 2, 2) * b;
       }
     }
     return reaction;
@@ -155,7 +153,13 @@ final class StretchFlows {
     int t = d.outline.triangle[side];
     int k = d.outline.sideOfTriangle[side];
     QuadraticElement.derivativesAtCorners(d.nodes, t, u, derivatives);
-    int corner = vertex == d.outline.start[side] ? (k + 1) % 3 : (k + 2) % 3;
-    return QuadraticElement.sideFlux(d.couplings, t, k, corner, derivatives) / 6;
+    boolean start = vertex == d.outline.start[side];
+    int corner = start ? (k + 1) % 3 : (k + 2) % 3;
+    int other = start ? (k + 2) % 3 : (k + 1) % 3;
+    return d.outline.atEnd(
+        side,
+        start,
+        QuadraticElement.sideFlux(d.couplings, t, k, corner, derivatives),
+        QuadraticElement.sideFlux(d.couplings, t, k, other, derivatives));
   }
 }

@@ -45,7 +45,6 @@ final class TwoSidedBound {
   private final StreamSpace space;
   private final double[][] fields;
   private final double[][] streams;
-  private final double[] conjugate;
 
   /**
    * Works the bounds out.
@@ -60,7 +59,6 @@ final class TwoSidedBound {
     this.space = space;
     this.fields = fields;
     this.streams = streams;
-    conjugate = ConjugateProblem.couplings(d);
     int n = d.spaces + 1;
     up = new double[n][n];
     lo = new double[n][n];
@@ -113,26 +111,36 @@ final class TwoSidedBound {
     return worst;
   }
 
-  /** ∫∇u·λ∇v by triangle, or the same of fluxes. */
-  private record Energies(double[] couplings, int[] nodes, double[] u, double[] v)
+  /** The energy of two temperature fields by triangle. */
+  private record Conducted(Body body, double[] u, double[] v) implements TriangleSums.Terms {
+    @Override
+    public void add(int from, int to, double[] sums) {
+      for (int t = from; t < to; t++) {
+        sums[0] += body.conducted(t, u, v);
+      }
+    }
+  }
+
+  /** The energy of the fluxes of two stream functions by triangle. */
+  private record Resisted(Body body, int[] nodes, double[] s, double[] v)
       implements TriangleSums.Terms {
     @Override
     public void add(int from, int to, double[] sums) {
       for (int t = from; t < to; t++) {
-        sums[0] += QuadraticElement.energy(couplings, nodes, t, u, v);
+        sums[0] += body.resisted(nodes, t, s, v);
       }
     }
   }
 
   private double upper(int i, int j) {
-    Energies energies = new Energies(d.couplings, d.nodes, fields[i], fields[j]);
+    Conducted energies = new Conducted(d.body, fields[i], fields[j]);
     double sum = TriangleSums.of(d.mesh.triangleCount(), 1, energies)[0];
     Outline o = d.outline;
     for (int s = 0; s < o.count; s++) {
       if (o.kind[s] == Conditions.Kind.FILM) {
         sum += o.filmEnergy(s, fields[i], unit(s, i), fields[j], unit(s, j));
       } else if (o.kind[s] == Conditions.Kind.FLOW) {
-        double flow = o.lengthM[s] * o.flowWPerM2[s];
+        double flow = o.areaM2[s] * o.flowWPerM2[s];
         sum -= j == d.spaces ? flow * o.mean(s, fields[i]) : 0;
         sum -= i == d.spaces ? flow * o.mean(s, fields[j]) : 0;
       }
@@ -141,7 +149,7 @@ final class TwoSidedBound {
   }
 
   private double lower(int i, int j) {
-    Energies energies = new Energies(conjugate, space.nodes, streams[i], streams[j]);
+    Resisted energies = new Resisted(d.body, space.nodes, streams[i], streams[j]);
     double sum = -TriangleSums.of(d.mesh.triangleCount(), 1, energies)[0];
     Outline o = d.outline;
     for (int s = 0; s < o.count; s++) {
@@ -211,22 +219,15 @@ final class TwoSidedBound {
 
   /** ∫q_i·λ⁻¹q_j over a triangle. */
   double resistance(int t, int i, int j) {
-    return QuadraticElement.energy(conjugate, space.nodes, t, streams[i], streams[j]);
+    return d.body.resisted(space.nodes, t, streams[i], streams[j]);
   }
 
   /** ∫Rs q_in q_jn along a side with a film. */
   double filmResistance(int s, int i, int j) {
     double[] a = streams[i];
     double[] b = streams[j];
-    double ap = rise(s, a, true);
-    double aq = rise(s, a, false);
-    double bp = rise(s, b, true);
-    double bq = rise(s, b, false);
-    return d.outline.filmM2KPerW[s]
-        / (6 * d.outline.lengthM[s])
-        * ((3 * ap - aq) * (3 * bp - bq)
-            + 4 * (ap + aq) * (bp + bq)
-            + (3 * aq - ap) * (3 * bq - bp));
+    return d.outline.resisted(
+        s, rise(s, a, true), rise(s, a, false), rise(s, b, true), rise(s, b, false));
   }
 
   /** Rise of S along the first or second half of a side. */
@@ -247,17 +248,19 @@ final class TwoSidedBound {
       }
     }
     Outline o = d.outline;
-    double[][] film = new double[used][3];
+    double[][] film = new double[used][o.misfitSize()];
     for (int s = 0; s < o.count; s++) {
       if (o.kind[s] != Conditions.Kind.FILM) {
         continue;
       }
       for (int f = 0; f < used; f++) {
-        filmMisfit(s, f, film[f]);
+        double first = rise(s, streams[f], true);
+        double second = rise(s, streams[f], false);
+        o.misfit(s, fields[f], unit(s, f), first, second, film[f]);
       }
       for (int i = 0; i < used; i++) {
         for (int j = i; j < used; j++) {
-          count(o.triangle[s], i, j, product(s, film[i], film[j]));
+          count(o.triangle[s], i, j, o.gap(s, film[i], film[j]));
         }
       }
     }
@@ -273,14 +276,14 @@ final class TwoSidedBound {
 
     @Override
     public void add(int from, int to, double[] sums) {
-      double[][] misfit = new double[used][9];
+      double[][] misfit = new double[used][d.body.misfitSize()];
       for (int t = from; t < to; t++) {
         for (int f = 0; f < used; f++) {
-          misfit(t, f, misfit[f]);
+          d.body.misfit(t, fields[f], space.nodes, streams[f], misfit[f]);
         }
         for (int i = 0; i < used; i++) {
           for (int j = i; j < used; j++) {
-            double part = gap(t, misfit[i], misfit[j]);
+            double part = d.body.gap(t, misfit[i], misfit[j]);
             sums[used * i + j] += part;
             if (i == j) {
               local[i][t] = part;
@@ -288,14 +291,6 @@ final class TwoSidedBound {
           }
         }
       }
-    }
-
-    private double gap(int t, double[] one, double[] other) {
-      double sum = 0;
-      for (int m = 0; m < 9; m++) {
-        sum -= d.couplings[3 * t + m % 3] * one[m] * other[m];
-      }
-      return sum / 3;
     }
   }
 
@@ -306,46 +301,5 @@ final class TwoSidedBound {
     } else {
       gap[j][i] += value;
     }
-  }
-
-  /**
-   * The field λ⁻¹q + ∇u at the three middles of sides, as its components along the three sides: 3m
-   * + k for side k at the middle of side m.
-   */
-  private void misfit(int t, int field, double[] out) {
-    double[] du = new double[9];
-    double[] ds = new double[9];
-    QuadraticElement.derivativesAtMiddles(d.nodes, t, fields[field], du);
-    QuadraticElement.derivativesAtMiddles(space.nodes, t, streams[field], ds);
-    for (int m = 0; m < 3; m++) {
-      for (int k = 0; k < 3; k++) {
-        int a = (k + 1) % 3;
-        int b = (k + 2) % 3;
-        // λ⁻¹ curl S along side k is 2|T| ∇L_k·(λ/det λ)∇S: towards corners a and b from corner k
-        double along =
-            2 * (conjugate[3 * t + b] * ds[3 * m + b] - conjugate[3 * t + a] * ds[3 * m + a]);
-        out[3 * m + k] = du[3 * m + k] + along;
-      }
-    }
-  }
-
-  /** Rs q_n − (δ − u) at start, middle and end of a side with a film, K. */
-  private void filmMisfit(int s, int field, double[] out) {
-    Outline o = d.outline;
-    double first = rise(s, streams[field], true);
-    double second = rise(s, streams[field], false);
-    double scale = o.filmM2KPerW[s] / o.lengthM[s];
-    double delta = unit(s, field);
-    out[0] = fields[field][o.start[s]] - delta - scale * (3 * first - second);
-    out[1] = fields[field][o.middle[s]] - delta - scale * (first + second);
-    out[2] = fields[field][o.end[s]] - delta - scale * (3 * second - first);
-  }
-
-  private double product(int s, double[] a, double[] b) {
-    return d.outline.lengthM[s]
-        / (30 * d.outline.filmM2KPerW[s])
-        * (a[0] * (4 * b[0] + 2 * b[1] - b[2])
-            + a[1] * (2 * b[0] + 16 * b[1] + 2 * b[2])
-            + a[2] * (4 * b[2] + 2 * b[1] - b[0]));
   }
 }

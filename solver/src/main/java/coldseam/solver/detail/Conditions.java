@@ -20,10 +20,13 @@ public final class Conditions {
     /** A cut-off plane: nothing covers the other side, no heat crosses. */
     CUT_OFF,
     /** The rim of an area that conducts nothing: no heat crosses. */
-    HOLLOW
+    HOLLOW,
+    /** The axis of a body of revolution: there is no surface. */
+    AXIS
   }
 
   private final FilmSet filmSet;
+  private final Geometry geometry;
   private final Partition partition;
   private final Material[] materials;
   private final Kind[] kinds;
@@ -40,6 +43,7 @@ public final class Conditions {
 
   Conditions(OutlineReading reading) {
     filmSet = reading.filmSet();
+    geometry = reading.detail().geometry();
     partition = reading.partition();
     materials = reading.materials();
     kinds = reading.kinds();
@@ -57,6 +61,7 @@ public final class Conditions {
 
   private Conditions(Conditions other, Material[] materials) {
     filmSet = other.filmSet;
+    geometry = other.geometry;
     partition = other.partition;
     this.materials = materials;
     kinds = other.kinds;
@@ -112,6 +117,11 @@ public final class Conditions {
   /** The film set. */
   public FilmSet filmSet() {
     return filmSet;
+  }
+
+  /** What the section stands for. */
+  public Geometry geometry() {
+    return geometry;
   }
 
   /** The kind of a partition edge. */

@@ -1,6 +1,7 @@
 package coldseam.solver.detail;
 
 import coldseam.mesh.partition.Partition;
+import coldseam.mesh.plane.Resolution;
 import coldseam.solver.detail.Conditions.Kind;
 import java.util.ArrayList;
 import java.util.BitSet;
@@ -84,7 +85,7 @@ final class OutlineReading {
   private void readFarSide(int edge) {
     int label = conductsLeft(edge) ? partition.rightLabel(edge) : partition.leftLabel(edge);
     if (label == Partition.NONE) {
-      kinds[edge] = Kind.CUT_OFF;
+      kinds[edge] = onAxis(edge) ? Kind.AXIS : Kind.CUT_OFF;
     } else if (fills.get(label) instanceof Space space) {
       int index = detail.spaceIndex(space.name());
       if (index < 0) {
@@ -98,6 +99,17 @@ final class OutlineReading {
     }
   }
 
+  /** Whether an edge lies on the axis of a body of revolution. */
+  private boolean onAxis(int edge) {
+    return detail.geometry() == Geometry.AXISYMMETRIC
+        && onAxis(partition.x(partition.edgeStart(edge)))
+        && onAxis(partition.x(partition.edgeEnd(edge)));
+  }
+
+  private boolean onAxis(double localX) {
+    return Math.abs(partition.origin().x() + localX) <= Resolution.STANDARD.snapM();
+  }
+
   private void readStretches(int edge) {
     boolean zone = false;
     for (int index : partition.linesOn(edge)) {
@@ -109,12 +121,32 @@ final class OutlineReading {
       if (stretch.glazing()) {
         glazing.set(edge);
       }
-      if (stretch.condition().isPresent()) {
+      if (stretch.condition().isPresent() && kinds[edge] == Kind.AXIS) {
+        onAxis(stretch, stretch.condition().get());
+      } else if (stretch.condition().isPresent()) {
         apply(edge, stretch, stretch.condition().get());
       }
     }
     if (zone && reducible(edge)) {
       rules[edge] = FilmRule.ISO_10077_2_REDUCED;
+    }
+  }
+
+  /** The axis has no surface; that no heat crosses it goes without saying. */
+  private void onAxis(Stretch stretch, EdgeCondition condition) {
+    if (!(condition instanceof EdgeCondition.CutOff)) {
+      add(
+          new Fault(
+              "stretch",
+              stretch.name(),
+              "runs along the axis, where a body of revolution has no surface; end it at the axis",
+              Optional.of(stretch.along().get(0))));
+    }
+  }
+
+  private void add(Fault fault) {
+    if (!faults.contains(fault)) {
+      faults.add(fault);
     }
   }
 
@@ -156,15 +188,12 @@ final class OutlineReading {
   }
 
   private void unknownSpace(Stretch stretch, EdgeCondition.Faces faces) {
-    Fault fault =
+    add(
         new Fault(
             "stretch",
             stretch.name(),
             "faces '" + faces.space() + "', which is not one of the spaces",
-            Optional.of(stretch.along().get(0)));
-    if (!faults.contains(fault)) {
-      faults.add(fault);
-    }
+            Optional.of(stretch.along().get(0))));
   }
 
   private void face(int edge, int space, FilmRule rule) {

@@ -32,6 +32,13 @@ final class Sketch {
   private UnaryOperator<Point> move = UnaryOperator.identity();
   private Accuracy accuracy = Accuracy.STANDARD;
   private boolean surfaceTemperatures;
+  private Geometry geometry = Geometry.PLANE;
+
+  /** Turns the section about x = 0. */
+  Sketch revolved() {
+    geometry = Geometry.AXISYMMETRIC;
+    return this;
+  }
 
   /** Moves every point laid after this. */
   Sketch moved(UnaryOperator<Point> by) {
@@ -141,15 +148,7 @@ final class Sketch {
 
   Detail detail() {
     return new Detail(
-        "test",
-        Geometry.PLANE,
-        View.PLAN,
-        areas,
-        spaces,
-        stretches,
-        List.of(),
-        List.of(),
-        List.of());
+        "test", geometry, View.PLAN, areas, spaces, stretches, List.of(), List.of(), List.of());
   }
 
   Partition partition() {

@@ -44,7 +44,7 @@ class StreamFunctionTest {
     return switch (kind) {
       case FILM, FIXED -> conditions.space(edge);
       case FLOW -> -1;
-      case NONE, CUT_OFF, HOLLOW -> -2;
+      case NONE, CUT_OFF, HOLLOW, AXIS -> -2;
     };
   }
 
