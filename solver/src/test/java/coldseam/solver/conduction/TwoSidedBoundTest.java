@@ -12,8 +12,10 @@ import coldseam.mesh.triangulation.Triangulator;
 import coldseam.solver.detail.Conditions;
 import coldseam.solver.detail.DetailException;
 import coldseam.solver.detail.FilmSet;
+import coldseam.solver.detail.Geometry;
 import coldseam.solver.detail.Space;
 import java.util.Random;
+import java.util.function.Function;
 import org.junit.jupiter.api.Test;
 
 /**
@@ -23,6 +25,7 @@ import org.junit.jupiter.api.Test;
  */
 class TwoSidedBoundTest {
   private static final int DETAILS = 1000;
+  private static final int REVOLVED = 500;
 
   /** Relative rounding of sums of energies. */
   private static final double ROUNDING = 1e-10;
@@ -66,6 +69,7 @@ class TwoSidedBoundTest {
             }
           }
         }
+        space.followAxis(s[f]);
       }
       return new Solved(d, complete(u), space, complete(s, 0));
     }
@@ -101,11 +105,20 @@ class TwoSidedBoundTest {
 
   @Test
   void bounds_hold_on_random_details() {
+    bounds_hold(DETAILS, RandomDetails::sketch);
+  }
+
+  @Test
+  void bounds_hold_on_random_bodies_of_revolution() {
+    bounds_hold(REVOLVED, RandomDetails::revolved);
+  }
+
+  private static void bounds_hold(int details, Function<Random, Sketch> draw) {
     int solved = 0;
-    for (int seed = 0; solved < DETAILS; seed++) {
-      assertThat(seed).as("seeds that make a detail").isLessThan(2 * DETAILS);
+    for (int seed = 0; solved < details; seed++) {
+      assertThat(seed).as("seeds that make a detail").isLessThan(3 * details);
       Random random = new Random(seed);
-      Sketch sketch = RandomDetails.sketch(random);
+      Sketch sketch = draw.apply(random);
       Partition partition = sketch.partition();
       Conditions conditions;
       try {
@@ -124,7 +137,10 @@ class TwoSidedBoundTest {
       for (int i = 0; i < 4; i++) {
         double scale = ROUNDING * Math.abs(one.up[i][i]);
         assertThat(two.up[i][i]).as("seed %d", seed).isLessThanOrEqualTo(one.up[i][i] + scale);
-        assertThat(two.lo[i][i]).as("seed %d", seed).isGreaterThanOrEqualTo(one.lo[i][i] - scale);
+        if (conditions.geometry() == Geometry.PLANE) {
+          // what stands for 1/r around the axis is closer on a finer mesh, but not everywhere
+          assertThat(two.lo[i][i]).as("seed %d", seed).isGreaterThanOrEqualTo(one.lo[i][i] - scale);
+        }
       }
       TwoSidedBound noisy = first.noisy(random, 0.1 * random.nextDouble()).bound();
       check(noisy, seed);
