@@ -107,6 +107,36 @@ class WindowsTest {
     assertThat(json.get("warnings")).isEmpty();
   }
 
+  /** ψ of the joint from cases: added as solved, side by side, each case solved once. */
+  @Test
+  void joints_that_are_solved() throws IOException {
+    Cases.write(dir, "corner.yaml", Cases.CORNER);
+    Cases.write(
+        dir,
+        "window.yaml",
+        TYPED
+            + "  installed: {top: 0.01, bottom: {case: corner.yaml, psi: internal},"
+            + " left: 0, right: {case: corner.yaml, psi: internal}}\n");
+    JsonNode corner = JACKSON.readTree(Ran.in(dir, "solve", "corner.yaml", "--json").out());
+    JsonNode psi = corner.get("psi").get(0);
+    JsonNode json = data(Ran.in(dir, "solve", "window.yaml", "--json"));
+    JsonNode window = json.get("U").get(0);
+    JsonNode installed = json.get("U").get(1);
+    double added = 1.23 * (0.01 + psi.get("value_W_per_mK").doubleValue());
+    added += 1.48 * psi.get("value_W_per_mK").doubleValue();
+    assertThat(
+            installed.get("value_W_per_m2K").doubleValue()
+                - window.get("value_W_per_m2K").doubleValue())
+        .isCloseTo(added / 1.23 / 1.48, within(1e-9));
+    double half =
+        2.71 * (psi.get("upper_W_per_mK").doubleValue() - psi.get("lower_W_per_mK").doubleValue());
+    assertThat(
+            installed.get("upper_W_per_m2K").doubleValue()
+                - installed.get("lower_W_per_m2K").doubleValue())
+        .isCloseTo(half / 1.23 / 1.48, within(1e-9));
+    assertThat(json.get("cases")).hasSize(1);
+  }
+
   @Test
   void a_psi_of_another_glazing_is_warned_of() throws IOException {
     Cases.write(dir, "frame.yaml", FrameResultsTest.FRAME);

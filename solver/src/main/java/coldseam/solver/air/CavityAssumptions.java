@@ -84,8 +84,9 @@ final class CavityAssumptions {
           new Assumption(
               "radiation between the faces of cavities",
               "face by face, then counted as the conductivity that dissipates as much in the same"
-                  + " temperatures: L2D is not below that of the exchange itself; mouths, throats"
-                  + " and cut-off planes reflect",
+                  + " temperatures; not certified is the exchange itself, which with the radiation"
+                  + " coefficients found lets no more heat through; mouths, throats and cut-off"
+                  + " planes reflect",
               "ISO 10077-2:2017 allows radiosity (from memory); the way it is counted is this"
                   + " tool's"));
     }

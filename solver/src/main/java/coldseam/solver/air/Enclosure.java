@@ -20,6 +20,13 @@ import java.util.Optional;
 /**
  * The faces of one cavity that exchange radiation, cut from its rim. What is no face, a mouth, a
  * throat or a cut-off plane, reflects everything, so that nothing passes there by radiation.
+ *
+ * <p>The exchange of the faces, Σ_i&lt;j g_ij (T_i − T_j)², is counted as ∫ λ_r |grad T|² over the
+ * cavity, with λ_r such that both are equal in the field T found. The solved problem is then one of
+ * conduction, whose bounds hold for the settled λ_r. What is <em>not</em> certified: the problem
+ * with the faces exchanging heat themselves. Its energy, with the g_ij of T, is the same in T and
+ * least in another field, so that it lets no more heat through than the one solved; where each of
+ * two conductors has one temperature the two agree.
  */
 final class Enclosure {
   /** Faces are no longer than this part of the rim. */
