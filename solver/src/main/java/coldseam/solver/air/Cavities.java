@@ -11,7 +11,6 @@ import coldseam.solver.detail.Area;
 import coldseam.solver.detail.Assumption;
 import coldseam.solver.detail.Conditions;
 import coldseam.solver.detail.Detail;
-import coldseam.solver.detail.Fill;
 import coldseam.solver.detail.Material;
 import coldseam.solver.detail.Wording;
 import java.util.ArrayList;
@@ -326,10 +325,5 @@ public final class Cavities {
         temperatures ? OptionalDouble.of(state.differenceK()[c]) : OptionalDouble.empty(),
         temperatures ? OptionalDouble.of(state.meanC()[c]) : OptionalDouble.empty(),
         state.passes());
-  }
-
-  /** The fills that cavities have become, by name. */
-  public boolean isCavity(Fill fill) {
-    return numbers.containsKey(fill.name());
   }
 }
