@@ -32,6 +32,8 @@ final class CaseReader {
           "frame",
           "points",
           "profiles",
+          "moisture",
+          "require",
           "accuracy",
           "variants",
           "expect");

@@ -94,6 +94,21 @@ final class DetailReader {
     }
     ResultsReader results = new ResultsReader(pass, spaces);
     List<Wanted> wanted = wanted(spaces, results, new PsiReader(pass, spaces, flanks, others));
+    node = top.nodeOrNull("moisture");
+    if (node != null) {
+      Optional<Wanted> moisture =
+          new MoistureReader(pass, spaces).read(top.keyNode("moisture"), node);
+      if (moisture.isPresent()) {
+        wanted.add(moisture.get());
+      }
+    }
+    node = top.nodeOrNull("require");
+    if (node != null) {
+      RequireReader.Names names =
+          new RequireReader.Names(
+              spaces.spaces().keySet(), psiNames(), results.transmittances(), top.has("moisture"));
+      wanted.addAll(new RequireReader(pass).read(top.keyNode("require"), node, names));
+    }
     node = top.nodeOrNull("accuracy");
     if (node != null) {
       accuracy = new AccuracyReader(pass).read(node);
@@ -217,6 +232,19 @@ final class DetailReader {
         floating.add(space.name());
       }
     }
+    ExpectationReader.Names names =
+        new ExpectationReader.Names(
+            spaces.spaces().keySet(),
+            floating,
+            stretches.names(),
+            psiNames(),
+            results.transmittances(),
+            results.points(),
+            variants);
+    expectations = new ExpectationReader(pass, names).read(node);
+  }
+
+  private List<String> psiNames() {
     List<String> psi = new ArrayList<>();
     if (top.get("psi").orElse(null) instanceof Node.Mapping mapping) {
       for (Node.Entry entry : mapping.entries()) {
@@ -226,15 +254,6 @@ final class DetailReader {
     if (top.has("frame")) {
       psi.add(Wanted.Frame.GLASS_EDGE);
     }
-    ExpectationReader.Names names =
-        new ExpectationReader.Names(
-            spaces.spaces().keySet(),
-            floating,
-            stretches.names(),
-            psi,
-            results.transmittances(),
-            results.points(),
-            variants);
-    expectations = new ExpectationReader(pass, names).read(node);
+    return psi;
   }
 }

@@ -30,6 +30,12 @@ enum Place {
       Dimension.TEMPERATURE, "C", -273.15, 5000, "a temperature in °C or F, e.g. `20` or `68 F`"),
   /** φ. */
   HUMIDITY(Dimension.SHARE, "", 0, 1, "0 to 100 %, e.g. `50 %`"),
+  /** f_Rsi. */
+  FACTOR(Dimension.SHARE, "", 0, 1, "0 to 1, e.g. `0.7`"),
+  /** Vapour pressure. */
+  PRESSURE(Dimension.BARE, "", 0, 1e5, "0 to 100000 Pa, e.g. `600`"),
+  /** ψ. */
+  COUPLING(Dimension.CONDUCTIVITY, "W/(m K)", -1e5, 1e5, "a number in W/(m K), e.g. `0.10`"),
   /** ε. */
   EMISSIVITY(Dimension.BARE, "", 0, 1, "0 to 1, e.g. `0.9`"),
   /** Openings of an air layer, mm² per metre or per m². */

@@ -271,14 +271,31 @@ final class SolveCommand implements Command {
       (typed.has(JSON) ? here.err() : here.out())
           .println(written + String.join(", ", names(typed)));
     }
+    int met = requirements(job, result, here);
     if (Sheet.accurateEnough(job.subject(), result)) {
-      return ExitCode.DONE;
+      return met;
     }
     here.err().println(here.errInk().alert(name(job) + ": the accuracy asked for was not reached"));
     for (String line : Sheet.accuracyMissed(job.subject(), result)) {
       here.err().println("  " + line);
     }
-    return ExitCode.ACCURACY;
+    return ExitCode.worse(met, ExitCode.ACCURACY);
+  }
+
+  /** Tells which requirements of the case are not met. */
+  private static int requirements(Job job, Result result, Surroundings here) {
+    if (result.requirements().isEmpty()) {
+      return ExitCode.DONE;
+    }
+    List<String> missed = Sheet.requirementsMissed(result);
+    if (missed.isEmpty()) {
+      return ExitCode.DONE;
+    }
+    here.err().println(here.errInk().alert(name(job) + ": a requirement of the case is not met"));
+    for (String line : missed) {
+      here.err().println("  " + line);
+    }
+    return ExitCode.NOT_MET;
   }
 
   static void write(OutputFolder folder, Map<String, byte[]> files) throws UsageException {

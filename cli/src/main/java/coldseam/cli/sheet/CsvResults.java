@@ -4,6 +4,7 @@ import coldseam.solver.conduction.Certificate;
 import coldseam.solver.conduction.Quantity;
 import coldseam.solver.detail.FilmSet;
 import coldseam.solver.result.Result;
+import coldseam.solver.result.SpaceMoisture;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -55,7 +56,13 @@ final class CsvResults {
           "toleranceUpper_W_per_mK",
           "toleranceHalfWidth_W_per_m2K",
           "toleranceLower_W_per_m2K",
-          "toleranceUpper_W_per_m2K");
+          "toleranceUpper_W_per_m2K",
+          "requiredFRsi",
+          "margin_K",
+          "surfaceHumidity",
+          "outdoors_C",
+          "dewPoint_C",
+          "mouldLimit_C");
 
   private final Subject subject;
   private final Result result;
@@ -101,6 +108,7 @@ final class CsvResults {
             .end();
       }
     }
+    moisture();
     for (Result.Weight weight : result.weights()) {
       row("weight", weight.point())
           .word("between", weight.space())
@@ -120,6 +128,41 @@ final class CsvResults {
         .number("heatFlow_W_per_m", result.balance().sumWPerM())
         .end();
     return text.toString();
+  }
+
+  /** A row a month, then the surface in the month that governs. */
+  private void moisture() {
+    for (SpaceMoisture space : result.moisture()) {
+      for (SpaceMoisture.Month month : space.months()) {
+        row("moisture", month.name())
+            .word("filmSet", Words.name(FilmSet.SURFACE))
+            .word("between", space.space())
+            .word("certified", "false")
+            .number("temperature_C", month.surfaceC())
+            .number("estimatedError_K", month.errorK())
+            .number("fRsi", month.fRsi())
+            .number("requiredFRsi", month.required(space.atSurface()))
+            .number("margin_K", month.marginK(space.atSurface()))
+            .number("surfaceHumidity", month.surfaceHumidity())
+            .number("outdoors_C", month.outsideC())
+            .number("dewPoint_C", month.dewPointC())
+            .number("mouldLimit_C", month.mouldC())
+            .end();
+      }
+      if (space.surface().isPresent()) {
+        for (Result.Sample sample : space.surface().get().samples()) {
+          row("moistureSurface", space.months().get(space.critical().getAsInt()).name())
+              .word("filmSet", Words.name(FilmSet.SURFACE))
+              .word("between", space.space())
+              .word("certified", "false")
+              .number("temperature_C", sample.temperatureC())
+              .number("x_mm", JsonResults.mm(sample.at().x()))
+              .number("y_mm", JsonResults.mm(sample.at().y()))
+              .number("distance_mm", JsonResults.mm(sample.distanceM()))
+              .end();
+        }
+      }
+    }
   }
 
   private void couplings() {

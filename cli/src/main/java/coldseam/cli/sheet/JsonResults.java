@@ -1,5 +1,6 @@
 package coldseam.cli.sheet;
 
+import coldseam.cli.text.Ink;
 import coldseam.cli.text.Json;
 import coldseam.solver.conduction.Certificate;
 import coldseam.solver.conduction.Quantity;
@@ -39,6 +40,8 @@ record JsonResults(Subject subject, Result result) {
     shares(json);
     flanks(json, result.flanks());
     new CavitySection(result.cavities()).write(json);
+    new MoistureSection(result, Units.of(subject), Ink.NONE).write(json);
+    new RequiredSection(result, Ink.NONE).write(json);
     assumptions(json, result.assumptions());
     json.member("warnings", result.warnings());
     json.object("balance")
@@ -365,15 +368,19 @@ record JsonResults(Subject subject, Result result) {
           .member("filmSet", Words.name(profile.filmSet()))
           .array("points");
       for (Result.Sample sample : profile.samples()) {
-        json.object()
-            .member("distance_mm", mm(sample.distanceM()))
-            .numbers("at_mm", mm(sample.at().x()), mm(sample.at().y()))
-            .member("temperature_C", sample.temperatureC())
-            .endObject();
+        sample(json, sample);
       }
       json.endArray().endObject();
     }
     json.endArray();
+  }
+
+  static void sample(Json json, Result.Sample sample) {
+    json.object()
+        .member("distance_mm", mm(sample.distanceM()))
+        .numbers("at_mm", mm(sample.at().x()), mm(sample.at().y()))
+        .member("temperature_C", sample.temperatureC())
+        .endObject();
   }
 
   private void weights(Json json) {

@@ -153,4 +153,14 @@ public final class Sheet {
   public static List<String> accuracyMissed(Subject subject, Result result) {
     return new Reached(subject.accuracy()).inWords(result);
   }
+
+  /**
+   * Which requirements of the case are not met, or too near their limit to tell.
+   *
+   * @param result the result
+   * @return lines without line feeds; none if all are met
+   */
+  public static List<String> requirementsMissed(Result result) {
+    return new RequiredSection(result, Ink.NONE).unmet();
+  }
 }

@@ -46,6 +46,8 @@ final class TextCard {
     new FlowSection(result, units, ink).write(text);
     new ShareSection(result, units, ink).write(text);
     new SurfaceSection(result, units, ink).write(text);
+    new MoistureSection(result, units, ink).write(text);
+    new RequiredSection(result, ink).write(text);
     flanks(text, result.flanks(), ink);
     CavitySection cavities = new CavitySection(result.cavities());
     cavities.write(text, units, ink);

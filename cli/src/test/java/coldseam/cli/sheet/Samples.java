@@ -215,6 +215,8 @@ final class Samples {
                 0.02,
                 Optional.of("outdoors"),
                 Optional.empty())),
+        List.of(),
+        List.of(),
         List.of(
             new Assumption("film of indoors, walls", "0.13 m²·K/W", "ISO 6946, Rsi horizontal")),
         List.of("the cut-off plane at the top is 0.8 m from the slab, less than 1 m"),

@@ -124,4 +124,62 @@ public sealed interface Wanted {
    * @param filmSet which films
    */
   record SurfaceProfile(String name, String space, FilmSet filmSet) implements Wanted {}
+
+  /**
+   * A moisture check of surfaces (ISO 13788).
+   *
+   * @param spaces the spaces judged; empty: every inside space of known humidity
+   * @param outside the spaces that take the temperature of each month; empty: every outside space
+   * @param months empty: the temperatures of the case as the only climate
+   * @param humidity of the air in place of that of each space, 0 to 1
+   * @param excessPa excess of the vapour pressure indoors over that outdoors at 0 °C and below, Pa
+   * @param excessSource where that comes from, in words
+   * @param atSurface relative humidity at the surface that governs
+   */
+  record Moisture(
+      List<String> spaces,
+      List<String> outside,
+      List<Month> months,
+      OptionalDouble humidity,
+      OptionalDouble excessPa,
+      String excessSource,
+      double atSurface)
+      implements Wanted {
+    /** Copies the lists. */
+    public Moisture {
+      spaces = List.copyOf(spaces);
+      outside = List.copyOf(outside);
+      months = List.copyOf(months);
+    }
+
+    /**
+     * The climate of one month.
+     *
+     * @param name its name
+     * @param temperatureC mean temperature outdoors, °C
+     * @param humidity mean relative humidity outdoors, 0 to 1; NaN if it is not needed
+     */
+    public record Month(String name, double temperatureC, double humidity) {}
+  }
+
+  /**
+   * A requirement that the result is to meet.
+   *
+   * @param kind what it is about
+   * @param name of the space, ψ or U; empty for every inside space, and for moisture
+   * @param limit at least this f_Rsi, at most this ψ or U, SI; without meaning for moisture
+   */
+  record Requirement(Kind kind, String name, double limit) implements Wanted {
+    /** What a requirement is about. */
+    public enum Kind {
+      /** f_Rsi of the coldest point, at least. */
+      F_RSI,
+      /** ψ, at most. */
+      PSI,
+      /** U, at most. */
+      U,
+      /** The moisture check in every space it judges. */
+      MOISTURE
+    }
+  }
 }

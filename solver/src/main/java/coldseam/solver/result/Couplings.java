@@ -277,10 +277,23 @@ final class Couplings {
 
   /** Temperature of every space, °C; of the floating ones as they follow from the others. */
   double[] temperatures() {
-    int[] floating = floating(detail);
-    double[] temperatures = new double[count];
+    double[] stated = new double[count];
     for (int i = 0; i < count; i++) {
-      temperatures[i] = contains(floating, i) ? 0 : detail.spaces().get(i).temperatureC();
+      stated[i] = detail.spaces().get(i).temperatureC();
+    }
+    return temperatures(stated);
+  }
+
+  /**
+   * Temperature of every space.
+   *
+   * @param statedC temperatures; those of floating spaces are ignored
+   */
+  double[] temperatures(double[] statedC) {
+    int[] floating = floating(detail);
+    double[] temperatures = statedC.clone();
+    for (int f : floating) {
+      temperatures[f] = 0;
     }
     if (floating.length == 0) {
       return temperatures;

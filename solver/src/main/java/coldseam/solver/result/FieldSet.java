@@ -33,6 +33,18 @@ final class FieldSet {
     trace = new SurfaceTrace(solution.mesh());
   }
 
+  private FieldSet(FieldSet other, double[] temperaturesC) {
+    filmSet = other.filmSet;
+    solution = other.solution;
+    field = solution.temperatures(temperaturesC);
+    trace = other.trace;
+  }
+
+  /** The same solution with other temperatures of its spaces. */
+  FieldSet with(double[] temperaturesC) {
+    return new FieldSet(this, temperaturesC);
+  }
+
   FilmSet filmSet() {
     return filmSet;
   }

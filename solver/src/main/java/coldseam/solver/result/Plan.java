@@ -44,6 +44,8 @@ public final class Plan {
   private final EffectiveTransmittances transmittances;
   private final FrameTransmittances frames;
   private final CutOffChecks cutOffs;
+  private final MoistureChecks moisture;
+  private final Requirements requirements;
   private final boolean module;
   private final List<Assumption> assumptions;
   private final List<String> warnings;
@@ -68,12 +70,15 @@ public final class Plan {
     frames = new FrameTransmittances(detail, outline, flanks, others);
     SectionChecks section = new SectionChecks(detail, outline);
     cutOffs = new CutOffChecks(outline);
+    moisture = new MoistureChecks(detail);
+    requirements = new Requirements(detail);
     module = transmittances.any() && !psi.any();
     List<Fault> faults = new ArrayList<>(finder.faults());
     faults.addAll(planner.faults());
     faults.addAll(transmittances.faults());
     faults.addAll(frames.faults());
     faults.addAll(section.faults());
+    faults.addAll(moisture.faults());
     for (Map.Entry<Subtraction.OfDetail, Plan> other : others.entrySet()) {
       faults.addAll(other.getValue().sides(other.getKey()));
     }
@@ -238,7 +243,8 @@ public final class Plan {
   private static boolean asksFor(Wanted wanted, FilmSet set) {
     return (wanted instanceof Wanted.Temperature point && point.filmSet() == set)
         || (wanted instanceof Wanted.Profile line && line.filmSet() == set)
-        || (wanted instanceof Wanted.SurfaceProfile face && face.filmSet() == set);
+        || (wanted instanceof Wanted.SurfaceProfile face && face.filmSet() == set)
+        || (wanted instanceof Wanted.Moisture && set == FilmSet.SURFACE);
   }
 
   /** Whether both film sets say the same on every edge, so that one solution serves for both. */
@@ -349,13 +355,20 @@ public final class Plan {
       allU.add(frame.get().transmittance());
       allPsi.addAll(frame.get().glassEdge());
     }
+    List<Result.SpaceResult> spaces = surfaces.spaces(balances);
+    List<SpaceMoisture> checked = moisture.evaluate(couplings, coldestFields);
+    List<Result.Required> required = requirements.evaluate(spaces, allPsi, allU, checked);
+    List<Fault> unanswered = Requirements.unanswered(required, requirements.wanted());
+    if (!unanswered.isEmpty()) {
+      throw new DetailException(unanswered);
+    }
     return new Result(
         detail,
         couplings.pairs(),
         List.copyOf(allPsi),
         List.copyOf(allU),
         frame.isPresent() ? Optional.of(frame.get().account()) : Optional.empty(),
-        surfaces.spaces(balances),
+        spaces,
         balances.stretches(),
         profiles.points(),
         profiles.profiles(),
@@ -363,6 +376,8 @@ public final class Plan {
         Weights.of(detail, surfaces, coldestFields, sets),
         flanks(),
         cavities,
+        checked,
+        required,
         assumptions(),
         List.copyOf(allWarnings),
         balances.balance(),
@@ -399,6 +414,7 @@ public final class Plan {
     }
     all.addAll(transmittances.assumptions());
     all.addAll(frames.assumptions());
+    all.addAll(moisture.assumptions());
     if (module && cutOffs.any()) {
       all.add(
           new Assumption(

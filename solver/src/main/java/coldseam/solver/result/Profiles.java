@@ -40,7 +40,12 @@ final class Profiles {
       if (wanted instanceof Wanted.Profile line) {
         profiles.add(alongLine(line));
       } else if (wanted instanceof Wanted.SurfaceProfile surface) {
-        profiles.add(alongSurface(surface));
+        FieldSet set = sets.of(surface.filmSet());
+        profiles.add(
+            new Result.ProfileResult(
+                surface.name(),
+                surface.filmSet(),
+                alongSurface(set, detail.spaceIndex(surface.space()))));
       }
     }
     return profiles;
@@ -66,11 +71,10 @@ final class Profiles {
    * section on the left. Distance goes on from run to run; where one does not continue the other, a
    * sample without temperature stands between.
    */
-  private Result.ProfileResult alongSurface(Wanted.SurfaceProfile surface) {
-    FieldSet set = sets.of(surface.filmSet());
+  static List<Result.Sample> alongSurface(FieldSet set, int space) {
     List<Result.Sample> samples = new ArrayList<>();
     double distance = 0;
-    for (List<SurfaceTrace.Side> run : runs(set, detail.spaceIndex(surface.space()))) {
+    for (List<SurfaceTrace.Side> run : runs(set, space)) {
       Point start = set.trace().point(new SurfaceTrace.Place(run.get(0), 0));
       if (!samples.isEmpty()) {
         samples.add(new Result.Sample(distance, start, Double.NaN));
@@ -88,10 +92,10 @@ final class Profiles {
         distance += length;
       }
     }
-    return new Result.ProfileResult(surface.name(), surface.filmSet(), samples);
+    return samples;
   }
 
-  private static List<List<SurfaceTrace.Side>> runs(FieldSet set, int space) {
+  static List<List<SurfaceTrace.Side>> runs(FieldSet set, int space) {
     Map<Integer, SurfaceTrace.Side> starting = new HashMap<>();
     Set<Integer> ending = new HashSet<>();
     List<SurfaceTrace.Side> sides = new ArrayList<>();

@@ -10,6 +10,7 @@ import coldseam.solver.detail.Bracket;
 import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.DimensionSystem;
 import coldseam.solver.detail.FilmSet;
+import coldseam.solver.detail.Wanted;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -33,6 +34,8 @@ import java.util.OptionalDouble;
  * @param flanks every flank, named or found
  * @param cavities every air cavity as it was found and given a conductivity; the bounds of all
  *     numbers hold for these conductivities
+ * @param moisture moisture checks of surfaces, one entry a space judged; empty if none is asked for
+ * @param requirements what the case requires of its results, in the order written
  * @param assumptions everything chosen for the user
  * @param warnings sentences, each with its figures
  * @param balance in = out
@@ -58,6 +61,8 @@ public record Result(
     List<Weight> weights,
     List<FlankResult> flanks,
     List<Cavity> cavities,
+    List<SpaceMoisture> moisture,
+    List<Required> requirements,
     List<Assumption> assumptions,
     List<String> warnings,
     Balance balance,
@@ -343,4 +348,23 @@ public record Result(
    * @param relative the same over half the sum of their absolute values
    */
   public record Balance(double sumWPerM, double relative) {}
+
+  /**
+   * A requirement of the case and what came of it. An interval decides it where there is one, the
+   * estimated error of a surface temperature where there is none.
+   *
+   * @param kind what it is about
+   * @param name the space, ψ or U
+   * @param value what was found; NaN for moisture
+   * @param error what it is uncertain by; 0 for moisture
+   * @param limit at least this f_Rsi, at most this ψ or U; NaN for moisture
+   * @param verdict whether it is met
+   */
+  public record Required(
+      Wanted.Requirement.Kind kind,
+      String name,
+      double value,
+      double error,
+      double limit,
+      Verdict verdict) {}
 }

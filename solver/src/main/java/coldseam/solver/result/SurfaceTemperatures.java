@@ -54,6 +54,11 @@ final class SurfaceTemperatures {
     span = coldest < 0 ? 0 : high - temperaturesC[coldest];
   }
 
+  /** The estimated error of a surface temperature, K. */
+  double errorK() {
+    return STEADY * span;
+  }
+
   /** What concerns every space, its flow taken from the heat-loss solution. */
   List<Result.SpaceResult> spaces(Balances flows) {
     List<Result.SpaceResult> results = new ArrayList<>();
@@ -123,7 +128,7 @@ final class SurfaceTemperatures {
                 (extreme.temperatureC() - temperaturesC[reference])
                     / (temperaturesC[space] - temperaturesC[reference]))
             : OptionalDouble.empty(),
-        conditions.kind(edge) == Kind.FIXED ? 0 : STEADY * span);
+        conditions.kind(edge) == Kind.FIXED ? 0 : errorK());
   }
 
   /** f_Rsi is given on inside surfaces of spaces warmer than the reference, surface films only. */

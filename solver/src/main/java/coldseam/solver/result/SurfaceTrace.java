@@ -5,6 +5,7 @@ import coldseam.mesh.plane.Point;
 import coldseam.mesh.triangulation.Mesh;
 import coldseam.solver.conduction.TemperatureField;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 
 /**
@@ -38,6 +39,34 @@ final class SurfaceTrace {
       double curvature = 4 * (a + b - 2 * m);
       double s = curvature == 0 ? 0 : (3 * a + b - 4 * m) / curvature;
       return s > 0 && s < 1 ? s : 0;
+    }
+
+    /** What part of the side, 0 to 1, the trace lies below a limit. */
+    double partBelow(TemperatureField field, double limit) {
+      double a = field.atNode(start) - limit;
+      double b = field.atNode(end) - limit;
+      double m = field.atNode(middle) - limit;
+      double square = 2 * (a + b - 2 * m);
+      double linear = 4 * m - 3 * a - b;
+      double[] cuts = {0, 1, 1, 1};
+      double root = linear * linear - 4 * square * a;
+      if (root >= 0) {
+        // The stable pair: q/square and a/q (nothing of a side is lost where either is no number).
+        double q = -(linear + Math.copySign(Math.sqrt(root), linear)) / 2;
+        cuts[1] = inside(q / square);
+        cuts[2] = inside(a / q);
+      }
+      Arrays.sort(cuts);
+      double below = 0;
+      for (int i = 0; i < 3; i++) {
+        double s = (cuts[i] + cuts[i + 1]) / 2;
+        below += a + s * (linear + s * square) < 0 ? cuts[i + 1] - cuts[i] : 0;
+      }
+      return below;
+    }
+
+    private static double inside(double s) {
+      return s > 0 && s < 1 ? s : 1;
     }
   }
 
