@@ -85,7 +85,10 @@ class CommandsTest {
       try (Stream<Path> files = Files.list(Root.folder().resolve(folder))) {
         for (Path file : files.filter(f -> f.toString().endsWith(".yaml")).toList()) {
           Ran ran = Ran.in(dir, "solve", file.toString(), "--variants", "--json");
-          assertThat(ran.code()).as("%s: %s", file, ran.err()).isZero();
+          // a variant may fail what its case requires: that is what it shows
+          assertThat(ran.code())
+              .as("%s: %s", file, ran.err())
+              .isEqualTo(ran.out().contains("\"met\":false") ? ExitCode.NOT_MET : ExitCode.DONE);
           for (String line : ran.out().lines().toList()) {
             assertThat(schema.validate(line, InputFormat.JSON)).as(file.toString()).isEmpty();
             assertThat(JACKSON.readTree(line).get("balance").get("relative").doubleValue())
