@@ -101,6 +101,9 @@ public final class Interpolation {
         well.weights(),
         well.flanks(),
         cavities(layers),
+        well.moisture(),
+        new Requirements(well.detail())
+            .evaluate(well.spaces(), psi, transmittances, well.moisture()),
         assumptions,
         warnings,
         well.balance(),
