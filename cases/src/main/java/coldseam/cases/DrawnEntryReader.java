@@ -141,10 +141,12 @@ final class DrawnEntryReader {
     for (String key : List.of("layer", "look")) {
       boolean layer = key.equals("layer");
       List<String> known = layer ? source.shapes().layers() : source.shapes().looks();
-      if (!fields.has(key) || one(fields, key, known).isPresent()) {
+      boolean found = !fields.has(key) || one(fields, key, known).isPresent();
+      // What is no name at all was reported when it was read.
+      if (found || !(fields.get(key).get() instanceof Node.Scalar scalar)) {
         continue;
       }
-      String typed = ((Node.Scalar) fields.get(key).get()).text().strip();
+      String typed = scalar.text().strip();
       String why = "";
       for (LeftOut left : source.drawing().leftOut()) {
         if (layer && left.layer().equalsIgnoreCase(typed)) {

@@ -23,11 +23,15 @@ class SpoiledCasesTest {
   /** Every key of the format at least once. */
   static final Path EVERYTHING = Path.of("src/test/resources/coldseam/cases/everything.yaml");
 
+  /** Every key of drawings at least once. */
+  static final Path DRAWN = Path.of("src/test/resources/coldseam/cases/drawn.yaml");
+
   @TempDir private Path folder;
 
   static List<Path> samples() {
     List<Path> samples = new ArrayList<>(Written.shipped());
     samples.add(EVERYTHING);
+    samples.add(DRAWN);
     return samples;
   }
 

@@ -39,6 +39,10 @@ final class Written {
     Path file = folder.resolve("case.yaml");
     try {
       Files.writeString(file, text);
+      Path drawing = folder.resolve("drawn.dxf");
+      if (text.contains("drawn.dxf") && Files.notExists(drawing)) {
+        Files.copy(SpoiledCasesTest.DRAWN.resolveSibling("drawn.dxf"), drawing);
+      }
     } catch (IOException e) {
       throw new UncheckedIOException(e);
     }

@@ -51,7 +51,8 @@ final class SvgTree {
       throw broken(e);
     }
     if (tree.root == null || !tree.root.name().equals("svg")) {
-      throw new DrawingException(0, "this is no SVG document", "its first element is `svg`");
+      int line = tree.root == null ? 0 : tree.root.line();
+      throw new DrawingException(line, "this is no SVG document", "its first element is `svg`");
     }
     return tree;
   }
