@@ -70,8 +70,8 @@ final class DetailReader {
     if (variant.isPresent()) {
       variant.get().replaceFills(fills);
     }
-    DrawingsReader drawings = new DrawingsReader(pass);
     Node drawn = top.nodeOrNull("drawings");
+    DrawingsReader drawings = drawn == null ? null : new DrawingsReader(pass);
     if (drawn != null) {
       drawings.read(drawn);
     }

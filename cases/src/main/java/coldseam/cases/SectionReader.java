@@ -43,11 +43,21 @@ final class SectionReader {
   private final ShapeReader shapes;
   private final StackReader stacks;
   private final GlazingReader glazings;
-  private final DrawnEntryReader drawn;
-  private final AroundReader arounds;
+  private final DrawingsReader drawings;
+
+  // Made when first needed: most sections take nothing from drawings and start the sooner.
+  private DrawnEntryReader drawn;
+  private AroundReader arounds;
   private final List<String> names = new ArrayList<>();
   private boolean full;
 
+  /**
+   * Prepares.
+   *
+   * @param pass what the parts of the case share
+   * @param fills what names mean as fills
+   * @param drawings the drawings of the case, null if it has none
+   */
   SectionReader(Pass pass, Fills fills, DrawingsReader drawings) {
     this.pass = pass;
     this.problems = pass.problems();
@@ -55,8 +65,7 @@ final class SectionReader {
     this.shapes = new ShapeReader(pass);
     this.stacks = new StackReader(pass, fills);
     this.glazings = new GlazingReader(pass);
-    this.drawn = new DrawnEntryReader(pass, drawings);
-    this.arounds = new AroundReader(problems);
+    this.drawings = drawings;
   }
 
   /**
@@ -68,7 +77,7 @@ final class SectionReader {
   List<Area> read(Node node) {
     int before = problems.count();
     List<Area> areas = entries(node, "section", "`section`");
-    if (problems.count() == before) {
+    if (arounds != null && problems.count() == before) {
       areas = arounds.laid(areas);
     }
     int corners = 0;
@@ -201,6 +210,9 @@ final class SectionReader {
     Area.Role role = role(fields);
     Optional<Node> fillNode = fields.require("fill", "add `fill: ` and a material or a space");
     Optional<Fill> fill = fillNode.isEmpty() ? Optional.empty() : fills.find(fillNode.get(), name);
+    if (drawn == null) {
+      drawn = new DrawnEntryReader(pass, drawings == null ? new DrawingsReader(pass) : drawings);
+    }
     List<List<List<Point>>> shapes = drawn.read(fields);
     fill.ifPresent(f -> pass.place("section", f.name(), node));
     List<Area> areas = new ArrayList<>();
@@ -236,6 +248,9 @@ final class SectionReader {
       String called = called(path, name, fill);
       pass.place("section", called, node);
       pass.place("section", fill.get().name(), node);
+      if (arounds == null) {
+        arounds = new AroundReader(problems);
+      }
       arounds.add(laidBefore, node, called, fill.get(), at.get(), glazing, role);
     }
     return List.of();
