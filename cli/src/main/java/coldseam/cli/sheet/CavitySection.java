@@ -3,6 +3,7 @@ package coldseam.cli.sheet;
 import coldseam.cli.text.Digits;
 import coldseam.cli.text.Ink;
 import coldseam.cli.text.Json;
+import coldseam.cli.text.Manuscript;
 import coldseam.cli.text.Table;
 import coldseam.mesh.plane.Point;
 import coldseam.solver.air.Cavity;
@@ -24,17 +25,15 @@ final class CavitySection {
     this.cavities = cavities;
   }
 
-  void write(StringBuilder text, Units units, Ink ink) {
+  void write(Manuscript text, Units units, Ink ink) {
     if (cavities.isEmpty()) {
       return;
     }
-    TextCard.heading(
-        text,
-        ink,
+    text.heading(
         "Air cavities",
         "heat flows along d; d, b and places in " + units.unit() + ", λ in W/(m·K)");
     Table table = new Table("lllrrlll", 2, TextCard.PAGE);
-    table.row("", "at", "", "d", "b", "flow", "ε", "λ");
+    table.head("", "at", "", "d", "b", "flow", "ε", "λ");
     int passes = 0;
     for (Cavity cavity : cavities) {
       String at = "(" + units.length(cavity.at().x()) + ", " + units.length(cavity.at().y()) + ")";
@@ -59,7 +58,7 @@ final class CavitySection {
                   + Digits.shortest(as.emissivities().second(), 2),
           Digits.significant(as.conductivityWPerMK(), 4) + note(as));
     }
-    text.append(table.text());
+    text.table(table);
     if (passes == 0) {
       return;
     }
@@ -68,7 +67,7 @@ final class CavitySection {
             + passes
             + (passes == 1 ? " pass" : " passes")
             + "; every ± holds for these conductivities";
-    text.append("  ").append(ink.faint(note)).append('\n');
+    text.note(note);
   }
 
   private static String note(Cavity.Counted as) {

@@ -2,6 +2,7 @@ package coldseam.cli.sheet;
 
 import coldseam.cli.text.Digits;
 import coldseam.cli.text.Ink;
+import coldseam.cli.text.Manuscript;
 import coldseam.cli.text.Table;
 import coldseam.solver.result.Result;
 
@@ -12,10 +13,11 @@ record FlowSection(Result result, Units units, Ink ink) {
   /** A balance that is off by less than this part of what flows is off by rounding alone. */
   private static final double ROUNDING = 1e-9;
 
-  void write(StringBuilder text) {
-    TextCard.heading(
-        text, ink, "Heat flow", "W/m, positive into the detail; ± estimated; films for heat loss");
-    Table table = new Table("lrrrl", 2, TextCard.PAGE);
+  void write(Manuscript text) {
+    text.heading("Heat flow", "W/m, positive into the detail; ± estimated; films for heat loss");
+    Table table =
+        new Table("lrrrl", 2, TextCard.PAGE)
+            .named("space or stretch", "temperature", "heat flow", "±", "note");
     for (Result.SpaceResult space : result.spaces()) {
       row(
           table,
@@ -45,7 +47,7 @@ record FlowSection(Result result, Units units, Ink ink) {
         Digits.fixed(result.balance().sumWPerM(), 2),
         "",
         ink.faint(balance(Math.abs(result.balance().relative()))));
-    text.append(table.text());
+    text.table(table);
   }
 
   private static String balance(double relative) {

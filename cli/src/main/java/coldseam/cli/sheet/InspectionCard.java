@@ -2,6 +2,7 @@ package coldseam.cli.sheet;
 
 import coldseam.cli.text.Digits;
 import coldseam.cli.text.Ink;
+import coldseam.cli.text.Manuscript;
 import coldseam.cli.text.Table;
 import coldseam.solver.Solver;
 import coldseam.solver.detail.Detail;
@@ -20,31 +21,32 @@ final class InspectionCard {
   private final Detail detail;
   private final Ink ink;
   private final Units units;
-  private final StringBuilder text = new StringBuilder();
+  private final Manuscript text;
 
-  InspectionCard(Subject subject, Solver.Inspection inspection, Ink ink) {
+  InspectionCard(Subject subject, Solver.Inspection inspection, Ink ink, Manuscript text) {
     this.subject = subject;
     this.inspection = inspection;
     this.detail = inspection.detail();
     this.ink = ink;
     this.units = Units.of(subject);
+    this.text = text;
   }
 
-  String text() {
-    TextCard.title(text, subject, ink);
+  void write() {
+    TextCard.title(text, subject);
     fills();
     spaces();
     outline();
     TextCard.flanks(text, inspection.flanks(), ink);
     wanted();
-    TextCard.assumptions(text, inspection.assumptions(), List.of(), ink);
-    TextCard.warnings(text, inspection.warnings(), ink);
-    return text.toString();
+    TextCard.assumptions(text, inspection.assumptions(), List.of());
+    TextCard.warnings(text, inspection.warnings());
   }
 
   private void fills() {
-    TextCard.heading(text, ink, "Materials", "λ in W/(m·K); area of the section");
-    Table table = new Table("lrrl", 2, TextCard.PAGE);
+    text.heading("Materials", "λ in W/(m·K); area of the section");
+    Table table =
+        new Table("lrrl", 2, TextCard.PAGE).named("material", "λ, W/(m·K)", "area", "source");
     List<Fill> fills = detail.fills();
     for (int label = 0; label < fills.size(); label++) {
       double area = inspection.partition().labelArea(label);
@@ -58,7 +60,7 @@ final class InspectionCard {
         table.row(hollow.name(), "none", Digits.fixed(area, 4) + " m²", ink.faint("hollow"));
       }
     }
-    text.append(table.text());
+    text.table(table);
   }
 
   static String conductivity(Material material) {
@@ -75,8 +77,9 @@ final class InspectionCard {
   }
 
   private void spaces() {
-    TextCard.heading(text, ink, "Spaces", "");
-    Table table = new Table("lrll", 2, TextCard.PAGE);
+    text.heading("Spaces", "");
+    Table table =
+        new Table("lrll", 2, TextCard.PAGE).named("space", "temperature", "exposure", "humidity");
     for (Space space : detail.spaces()) {
       table.row(
           space.name(),
@@ -88,7 +91,7 @@ final class InspectionCard {
                       + " % relative humidity"
                   : ""));
     }
-    text.append(table.text());
+    text.table(table);
   }
 
   private String temperature(Space space) {
@@ -108,20 +111,21 @@ final class InspectionCard {
   }
 
   private void outline() {
-    TextCard.heading(text, ink, "Outline", "lengths in " + units.unitInWords() + "; Rs in m²·K/W");
-    Table table = new Table("lrl", 2, TextCard.PAGE);
+    text.heading("Outline", "lengths in " + units.unitInWords() + "; Rs in m²·K/W");
+    Table table =
+        new Table("lrl", 2, TextCard.PAGE).named("outline", "length, " + units.unit(), "films");
     for (OutlinePart part : OutlinePart.of(inspection, detail)) {
       table.row(part.name(), units.length(part.lengthM()), ink.faint(part.films()));
     }
     for (OutlinePart part : OutlinePart.stretches(inspection, detail)) {
       table.row("stretch " + part.name(), units.length(part.lengthM()), "");
     }
-    text.append(table.text());
+    text.table(table);
   }
 
   private void wanted() {
-    TextCard.heading(text, ink, "Wanted", "beside couplings, heat flows and coldest surfaces");
-    Table table = new Table("ll", 2, TextCard.PAGE);
+    text.heading("Wanted", "beside couplings, heat flows and coldest surfaces");
+    Table table = new Table("ll", 2, TextCard.PAGE).named("quantity", "how");
     for (Wanted wanted : detail.wanted()) {
       if (wanted instanceof Wanted.Psi psi) {
         table.row(
@@ -158,6 +162,9 @@ final class InspectionCard {
             "surface of " + profile.space() + ", " + TextCard.films(profile.filmSet()));
       }
     }
-    text.append(table.isEmpty() ? "  nothing else\n" : table.text());
+    if (table.isEmpty()) {
+      text.paragraph("nothing else");
+    }
+    text.table(table);
   }
 }

@@ -2,6 +2,7 @@ package coldseam.cli.sheet;
 
 import coldseam.cli.text.Digits;
 import coldseam.cli.text.Ink;
+import coldseam.cli.text.Manuscript;
 import coldseam.cli.text.Table;
 import coldseam.solver.result.Result;
 import java.util.ArrayList;
@@ -16,13 +17,12 @@ record ShareSection(Result result, Units units, Ink ink) {
   private static final int MOST_PSI = 3;
   private static final int DECIMALS = 4;
 
-  void write(StringBuilder text) {
+  void write(Manuscript text) {
     List<Result.Share> shares = result.shares().parts();
     if (shares.isEmpty()) {
       return;
     }
-    TextCard.heading(
-        text, ink, "Shares", "of " + result.shares().referTo() + "; films for heat loss");
+    text.heading("Shares", "of " + result.shares().referTo() + "; films for heat loss");
     List<Result.LinearTransmittance> psi =
         result.psi().subList(0, Math.min(MOST_PSI, result.psi().size()));
     Table table = new Table("lrr" + "r".repeat(psi.size()), 2, TextCard.PAGE);
@@ -39,7 +39,7 @@ record ShareSection(Result result, Units units, Ink ink) {
     if (shown < shares.size()) {
       table.row((shares.size() - shown) + " others", percent(rest));
     }
-    text.append(table.text());
+    text.table(table);
     notes(text, !psi.isEmpty());
   }
 
@@ -53,7 +53,7 @@ record ShareSection(Result result, Units units, Ink ink) {
     for (Result.LinearTransmittance one : psi) {
       cells.add(ink.faint("ψ " + one.name()));
     }
-    table.row(cells.toArray(new String[0]));
+    table.head(cells.toArray(new String[0]));
   }
 
   private static void row(Table table, Result.Share share, List<Result.LinearTransmittance> psi) {
@@ -83,15 +83,13 @@ record ShareSection(Result result, Units units, Ink ink) {
     return share > 0 && share < 0.0005 ? "< 0.1 %" : Digits.fixed(100 * share, 1) + " %";
   }
 
-  private void notes(StringBuilder text, boolean psi) {
+  private void notes(Manuscript text, boolean psi) {
     if (psi) {
-      note(
-          text,
+      text.note(
           "Under ψ: its change in W/(m·K) if a material, or a film by 1/Rs, conducts 10 % more; to"
               + " first order, with what the flanks take off");
     }
-    note(
-        text,
+    text.note(
         "A share says what the number hangs on, not where the heat passes: that is the heat flow"
             + " through each stretch"
             + stretches());
@@ -111,11 +109,5 @@ record ShareSection(Result result, Units units, Ink ink) {
           .append(" W/m");
     }
     return words.toString();
-  }
-
-  private void note(StringBuilder text, String words) {
-    for (String line : Table.wrapped(words, TextCard.PAGE - 2, "").split("\n")) {
-      text.append("  ").append(ink.faint(line)).append('\n');
-    }
   }
 }

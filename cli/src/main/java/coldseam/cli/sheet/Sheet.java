@@ -1,6 +1,7 @@
 package coldseam.cli.sheet;
 
 import coldseam.cli.text.Ink;
+import coldseam.cli.text.TerminalText;
 import coldseam.solver.Solver;
 import coldseam.solver.detail.Assumption;
 import coldseam.solver.result.Result;
@@ -19,7 +20,9 @@ public final class Sheet {
    * @return lines, each ended by a line feed
    */
   public static String card(Subject subject, Result result, Ink ink) {
-    return new TextCard(subject, result, ink).text();
+    TerminalText text = new TerminalText(ink, TextCard.PAGE);
+    new TextCard(subject, result, ink, text).write();
+    return text.text();
   }
 
   /**
@@ -55,7 +58,9 @@ public final class Sheet {
    * @return lines, each ended by a line feed
    */
   public static String card(WindowSubject of, Ink ink) {
-    return new WindowCard(of, ink).text();
+    TerminalText text = new TerminalText(ink, TextCard.PAGE);
+    new WindowCard(of, ink).write(text);
+    return text.text();
   }
 
   /**
@@ -89,7 +94,9 @@ public final class Sheet {
    * @return lines, each ended by a line feed
    */
   public static String understood(Subject subject, Solver.Inspection inspection, Ink ink) {
-    return new InspectionCard(subject, inspection, ink).text();
+    TerminalText text = new TerminalText(ink, TextCard.PAGE);
+    new InspectionCard(subject, inspection, ink, text).write();
+    return text.text();
   }
 
   /**
@@ -114,7 +121,9 @@ public final class Sheet {
    */
   public static String understood(
       Subject subject, List<String> cases, List<Assumption> assumptions, Ink ink) {
-    return new WindowInspection(subject, cases, assumptions).text(ink);
+    TerminalText text = new TerminalText(ink, TextCard.PAGE);
+    new WindowInspection(subject, cases, assumptions).write(text);
+    return text.text();
   }
 
   /**

@@ -2,6 +2,7 @@ package coldseam.cli.sheet;
 
 import coldseam.cli.text.Digits;
 import coldseam.cli.text.Ink;
+import coldseam.cli.text.Manuscript;
 import coldseam.cli.text.Table;
 import coldseam.solver.detail.FilmSet;
 import coldseam.solver.result.Result;
@@ -13,15 +14,17 @@ import java.util.TreeSet;
 record SurfaceSection(Result result, Units units, Ink ink) {
   private static final int MOST_DECIMALS = 2;
 
-  void write(StringBuilder text) {
+  void write(Manuscript text) {
     surfaces(text);
     points(text);
     profiles(text);
     weights(text);
   }
 
-  private void surfaces(StringBuilder text) {
-    Table table = new Table("llrllll", 2, TextCard.PAGE);
+  private void surfaces(Manuscript text) {
+    Table table =
+        new Table("llrllll", 2, TextCard.PAGE)
+            .named("space", "which", "temperature", "factor", "film", "set", "place");
     for (Result.SpaceResult space : result.spaces()) {
       surface(table, space, "coldest", space.coldest());
       surface(table, space, "warmest", space.warmest());
@@ -37,12 +40,10 @@ record SurfaceSection(Result result, Units units, Ink ink) {
     }
     String factor =
         references.isEmpty() ? "" : "; f_Rsi relative to " + String.join(", ", references);
-    TextCard.heading(
-        text,
-        ink,
+    text.heading(
         "Surface temperatures",
         "estimates; Rs in m²·K/W, places in " + units.unitInWords() + factor);
-    text.append(table.text());
+    text.table(table);
   }
 
   private void surface(
@@ -87,12 +88,13 @@ record SurfaceSection(Result result, Units units, Ink ink) {
     return Digits.of(f, Math.abs(point.estimatedErrorK() / difference), 3).value();
   }
 
-  private void points(StringBuilder text) {
+  private void points(Manuscript text) {
     if (result.points().isEmpty()) {
       return;
     }
-    TextCard.heading(text, ink, "Points", "estimates; places in " + units.unitInWords());
-    Table table = new Table("lrll", 2, TextCard.PAGE);
+    text.heading("Points", "estimates; places in " + units.unitInWords());
+    Table table =
+        new Table("lrll", 2, TextCard.PAGE).named("point", "temperature", "films", "place");
     for (Result.PointResult point : result.points()) {
       table.row(
           point.name(),
@@ -100,7 +102,7 @@ record SurfaceSection(Result result, Units units, Ink ink) {
           Words.name(point.filmSet()) + " films",
           ink.faint("at " + units.place(point.at())));
     }
-    text.append(table.text());
+    text.table(table);
   }
 
   private String celsius(double temperatureC) {
@@ -110,12 +112,13 @@ record SurfaceSection(Result result, Units units, Ink ink) {
         : si;
   }
 
-  private void profiles(StringBuilder text) {
+  private void profiles(Manuscript text) {
     if (result.profiles().isEmpty()) {
       return;
     }
-    TextCard.heading(text, ink, "Profiles", "estimates; all points are in --json and result.csv");
-    Table table = new Table("lrll", 2, TextCard.PAGE);
+    text.heading("Profiles", "estimates; all points are in --json and result.csv");
+    Table table =
+        new Table("lrll", 2, TextCard.PAGE).named("profile", "samples", "temperature", "films");
     for (Result.ProfileResult profile : result.profiles()) {
       double least = Double.POSITIVE_INFINITY;
       double most = Double.NEGATIVE_INFINITY;
@@ -133,16 +136,15 @@ record SurfaceSection(Result result, Units units, Ink ink) {
               : Digits.fixed(least, 2) + " to " + Digits.fixed(most, 2) + " °C",
           Words.name(profile.filmSet()) + " films");
     }
-    text.append(table.text());
+    text.table(table);
   }
 
-  private void weights(StringBuilder text) {
+  private void weights(Manuscript text) {
     if (result.weights().isEmpty()) {
       return;
     }
-    TextCard.heading(
-        text, ink, "Temperature weighting factors", "θ = Σ g·θ of the spaces (ISO 10211)");
-    Table table = new Table("lll", 2, TextCard.PAGE);
+    text.heading("Temperature weighting factors", "θ = Σ g·θ of the spaces (ISO 10211)");
+    Table table = new Table("lll", 2, TextCard.PAGE).named("point", "films", "factors g");
     String previous = "";
     FilmSet set = null;
     StringBuilder factors = new StringBuilder();
@@ -159,7 +161,7 @@ record SurfaceSection(Result result, Units units, Ink ink) {
           .append(Digits.fixed(weight.g(), 3));
     }
     flush(table, previous, set, factors);
-    text.append(table.text());
+    text.table(table);
   }
 
   private void flush(Table table, String point, FilmSet set, StringBuilder factors) {

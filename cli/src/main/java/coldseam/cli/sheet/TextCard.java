@@ -2,6 +2,7 @@ package coldseam.cli.sheet;
 
 import coldseam.cli.text.Digits;
 import coldseam.cli.text.Ink;
+import coldseam.cli.text.Manuscript;
 import coldseam.cli.text.Table;
 import coldseam.solver.conduction.Certificate;
 import coldseam.solver.conduction.Quantity;
@@ -19,7 +20,7 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 
-/** The result card on the terminal: numbers first, then what they rest on. */
+/** The result card: numbers first, then what they rest on. */
 final class TextCard {
   static final int PAGE = 96;
 
@@ -30,17 +31,18 @@ final class TextCard {
   private final Result result;
   private final Ink ink;
   private final Units units;
-  private final StringBuilder text = new StringBuilder();
+  private final Manuscript text;
 
-  TextCard(Subject subject, Result result, Ink ink) {
+  TextCard(Subject subject, Result result, Ink ink, Manuscript text) {
     this.subject = subject;
     this.result = result;
     this.ink = ink;
     this.units = Units.of(subject);
+    this.text = text;
   }
 
-  String text() {
-    title(text, subject, ink);
+  void write() {
+    title(text, subject);
     numbers();
     accounts();
     new FlowSection(result, units, ink).write(text);
@@ -53,29 +55,21 @@ final class TextCard {
     cavities.write(text, units, ink);
     List<String> shown = names(result.flanks());
     shown.addAll(cavities.names());
-    assumptions(text, result.assumptions(), shown, ink);
-    warnings(text, result.warnings(), ink);
+    assumptions(text, result.assumptions(), shown);
+    warnings(text, result.warnings());
     foot();
-    return text.toString();
   }
 
-  static void title(StringBuilder text, Subject subject, Ink ink) {
-    text.append(ink.strong(subject.title())).append('\n');
+  static void title(Manuscript text, Subject subject) {
     String variant = subject.variant().isEmpty() ? "" : ", variant " + subject.variant().get();
-    text.append(ink.faint(subject.file() + variant)).append('\n');
-  }
-
-  static void heading(StringBuilder text, Ink ink, String name, String note) {
-    text.append('\n').append(ink.strong(name));
-    if (!note.isEmpty()) {
-      text.append("  ").append(ink.faint(note));
-    }
-    text.append('\n');
+    text.title(subject.title(), subject.file() + variant);
   }
 
   private void numbers() {
-    heading(text, ink, "Result", "films for heat loss; after a ψ, how lengths are measured");
-    Table table = new Table("llrrrlll", 2, PAGE);
+    text.heading("Result", "films for heat loss; after a ψ, how lengths are measured");
+    Table table =
+        new Table("llrrrlll", 2, PAGE)
+            .named("quantity", "between", "value", "±", "± of materials", "unit", "known", "note");
     for (Result.LinearTransmittance psi : result.psi()) {
       boolean plain = psi.of().isEmpty() || psi.of().equals(psi.name()) || psi.of().equals(PLAIN);
       String of = plain ? "" : " of " + psi.of();
@@ -119,7 +113,7 @@ final class TextCard {
           new Scale(4, "W/(m·K)", Units.PSI, Units.PSI_NAME),
           "");
     }
-    text.append(table.text());
+    text.table(table);
     certificate();
   }
 
@@ -211,10 +205,7 @@ final class TextCard {
     if (lines.isEmpty()) {
       return;
     }
-    text.append("  ").append(ink.alert("Accuracy not reached")).append('\n');
-    for (String line : lines) {
-      text.append("    ! ").append(Table.wrapped(line, PAGE - 6, "      ")).append('\n');
-    }
+    text.alerts("Accuracy not reached", lines);
   }
 
   /** What a second ± means. */
@@ -240,9 +231,7 @@ final class TextCard {
   }
 
   private void sentence(String claim, String why) {
-    for (String line : Table.wrapped(claim + why, PAGE - 2, "").split("\n")) {
-      text.append("  ").append(ink.faint(line)).append('\n');
-    }
+    text.note(claim + why);
   }
 
   private void accounts() {
@@ -250,15 +239,13 @@ final class TextCard {
       frame(result.frame().get());
     }
     for (Result.LinearTransmittance psi : result.psi()) {
-      heading(
-          text,
-          ink,
+      text.heading(
           "ψ " + psi.name() + " = L2D less what is counted elsewhere",
           "W/(m·K), "
               + Words.dimensions(psi)
               + (psi.dimensions().isPresent() ? " dimensions" : " lengths"));
       int guarded = Math.max(0, Math.min(4, Digits.decimals(psi.valueWPerMK().halfWidth()) + 1));
-      Table table = new Table("lrl", 2, PAGE);
+      Table table = new Table("lrl", 2, PAGE).named("term", "W/(m·K)", "from");
       table.row(
           coupling(psi),
           Digits.fixed(psi.couplingWPerMK().value(), guarded),
@@ -271,19 +258,15 @@ final class TextCard {
       }
       Digits.Figure value = figure(psi.valueWPerMK(), 1, guarded);
       table.row("ψ", ink.strong(value.value()), ink.faint("± " + value.halfWidth()));
-      text.append(table.text());
+      text.table(table);
     }
   }
 
   /** The run with the panel, what is taken off, and over which width. */
   private void frame(Result.Frame frame) {
-    heading(
-        text,
-        ink,
-        "U frame = (L2D less what passes the panel) over the projected width",
-        "W/(m·K)");
+    text.heading("U frame = (L2D less what passes the panel) over the projected width", "W/(m·K)");
     int guarded = Math.max(0, Math.min(4, Digits.decimals(frame.lossWPerMK().halfWidth()) + 1));
-    Table table = new Table("lrl", 2, PAGE);
+    Table table = new Table("lrl", 2, PAGE).named("term", "W/(m·K)", "from");
     table.row(
         "L2D with the insulating panel", Digits.fixed(frame.couplingWPerMK().value(), guarded), "");
     for (Result.Subtracted term : frame.panels()) {
@@ -298,7 +281,7 @@ final class TextCard {
         ink.strong(loss.value()),
         ink.faint(
             "± " + loss.halfWidth() + ", over " + Digits.fixed(frame.width().valueM(), 4) + " m"));
-    text.append(table.text());
+    text.table(table);
   }
 
   /** U_f has an account of its own, and its inverse means nothing. */
@@ -363,12 +346,12 @@ final class TextCard {
     return words.toString();
   }
 
-  static void flanks(StringBuilder text, List<Result.FlankResult> flanks, Ink ink) {
+  static void flanks(Manuscript text, List<Result.FlankResult> flanks, Ink ink) {
     if (flanks.isEmpty()) {
       return;
     }
-    heading(text, ink, "Flanks", "U in W/(m²·K), films included; layers from warm to cold");
-    Table table = new Table("lrl", 2, PAGE);
+    text.heading("Flanks", "U in W/(m²·K), films included; layers from warm to cold");
+    Table table = new Table("lrl", 2, PAGE).named("flank", "U", "spaces and layers, lengths");
     for (Result.FlankResult flank : flanks) {
       String u = Digits.fixed(flank.uWPerM2K().lower(), 4);
       if (flank.uWPerM2K().upper() > flank.uWPerM2K().lower()) {
@@ -393,7 +376,7 @@ final class TextCard {
         table.row("", "", lengths.toString());
       }
     }
-    text.append(table.text());
+    text.table(table);
   }
 
   private static List<String> names(List<Result.FlankResult> flanks) {
@@ -410,12 +393,11 @@ final class TextCard {
    * @param shown flanks and cavities that are on the sheet already: only where they come from is
    *     said of them
    */
-  static void assumptions(
-      StringBuilder text, List<Assumption> assumptions, List<String> shown, Ink ink) {
+  static void assumptions(Manuscript text, List<Assumption> assumptions, List<String> shown) {
     if (assumptions.isEmpty()) {
       return;
     }
-    heading(text, ink, "Assumed", "");
+    text.heading("Assumed", "");
     Map<String, Set<String>> bySource = new LinkedHashMap<>();
     for (Assumption assumption : assumptions) {
       Set<String> lines = bySource.get(assumption.source());
@@ -426,10 +408,7 @@ final class TextCard {
       lines.add(line(assumption, shown));
     }
     for (Map.Entry<String, Set<String>> source : bySource.entrySet()) {
-      text.append("  ").append(ink.faint(source.getKey())).append('\n');
-      for (String line : source.getValue()) {
-        text.append("    ").append(Table.wrapped(line, PAGE - 4, "      ")).append('\n');
-      }
+      text.sourced(source.getKey(), source.getValue());
     }
   }
 
@@ -447,14 +426,12 @@ final class TextCard {
     return assumption.what() + ": " + assumption.value();
   }
 
-  static void warnings(StringBuilder text, List<String> warnings, Ink ink) {
+  static void warnings(Manuscript text, List<String> warnings) {
     if (warnings.isEmpty()) {
       return;
     }
-    text.append('\n').append(ink.alert("Warnings")).append('\n');
-    for (String warning : warnings) {
-      text.append("  ! ").append(Table.wrapped(warning, PAGE - 4, "    ")).append('\n');
-    }
+    text.alertHeading("Warnings");
+    text.alerts(warnings);
   }
 
   private void foot() {
@@ -465,23 +442,18 @@ final class TextCard {
     double movedMm = result.largestDisplacementM() * 1000;
     String moved = movedMm > 0 ? Digits.shortest(movedMm, 6) : "0";
     String films = result.surface().isPresent() ? " (films for heat loss)" : "";
-    text.append('\n')
-        .append(
-            ink.faint(
-                Digits.grouped(result.triangles())
-                    + " triangles, "
-                    + Digits.grouped(result.unknowns())
-                    + " unknowns"
-                    + films
-                    + (moved.equals("0") ? "" : ", drawing moved by at most " + moved + " mm")
-                    + ", "
-                    + Digits.significant(seconds, 2)
-                    + " s"))
-        .append('\n')
-        .append(ink.faint(Table.wrapped(Words.SAFETY, PAGE, "")))
-        .append('\n')
-        .append(ink.faint("Coldseam " + subject.version()))
-        .append('\n');
+    text.foot(
+        Digits.grouped(result.triangles())
+            + " triangles, "
+            + Digits.grouped(result.unknowns())
+            + " unknowns"
+            + films
+            + (moved.equals("0") ? "" : ", drawing moved by at most " + moved + " mm")
+            + ", "
+            + Digits.significant(seconds, 2)
+            + " s",
+        Words.SAFETY,
+        "Coldseam " + subject.version());
   }
 
   /** The films of a set, as a note. */

@@ -2,6 +2,7 @@ package coldseam.cli.sheet;
 
 import coldseam.cli.text.Digits;
 import coldseam.cli.text.Ink;
+import coldseam.cli.text.Manuscript;
 import coldseam.cli.text.Table;
 import coldseam.solver.conduction.Certificate;
 import coldseam.solver.conduction.Quantity;
@@ -13,26 +14,22 @@ import java.util.List;
 record WindowCard(WindowSubject of, Ink ink) {
   private static final int MOST_DECIMALS = 4;
 
-  String text() {
-    StringBuilder text = new StringBuilder();
-    TextCard.title(text, of.subject(), ink);
+  void write(Manuscript text) {
+    TextCard.title(text, of.subject());
     numbers(text);
     terms(text);
     parts(text);
-    TextCard.assumptions(text, of.assumptions(), List.of(), ink);
-    TextCard.warnings(text, of.warnings(), ink);
-    return text.append('\n')
-        .append(ink.faint(Table.wrapped(Words.SAFETY, TextCard.PAGE, "")))
-        .append('\n')
-        .append(ink.faint("Coldseam " + of.subject().version()))
-        .append('\n')
-        .toString();
+    TextCard.assumptions(text, of.assumptions(), List.of());
+    TextCard.warnings(text, of.warnings());
+    text.foot(Words.SAFETY, "Coldseam " + of.subject().version());
   }
 
-  private void numbers(StringBuilder text) {
+  private void numbers(Manuscript text) {
     WindowTransmittance result = of.transmittance();
-    TextCard.heading(text, ink, "Result", "ISO 10077-1, whole window");
-    Table table = new Table("lrrlll", 2, TextCard.PAGE);
+    text.heading("Result", "ISO 10077-1, whole window");
+    Table table =
+        new Table("lrrlll", 2, TextCard.PAGE)
+            .named("quantity", "value", "±", "unit", "known", "note");
     Units units = Units.of(of.subject());
     String size =
         units.length(of.window().widthM())
@@ -50,17 +47,15 @@ record WindowCard(WindowSubject of, Ink ink) {
       number(table, "U_w installed", installed, "", units);
       certified &= installed.certified();
     }
-    text.append(table.text());
+    text.table(table);
     String claim =
         certified
             ? "Certified: the sum lies within its ±, typed figures taken as they stand"
             : "Not certified where it says estimate: ± is the sum of estimated errors, not a bound";
-    text.append("  ").append(ink.faint(claim)).append('\n');
+    text.note(claim);
     String reason = Words.reason(result.uWPerM2K());
     if (!reason.isEmpty()) {
-      text.append("  ")
-          .append(ink.faint(Table.wrapped("(" + reason + ")", TextCard.PAGE - 2, "  ")))
-          .append('\n');
+      text.note("(" + reason + ")");
     }
   }
 
@@ -87,10 +82,11 @@ record WindowCard(WindowSubject of, Ink ink) {
     return Digits.of(value, quantity.halfWidth() * factor, MOST_DECIMALS);
   }
 
-  private void terms(StringBuilder text) {
-    TextCard.heading(
-        text, ink, "What it is made of", "area times U, length times ψ; share of the sum");
-    Table table = new Table("llrlrlrr", 2, TextCard.PAGE);
+  private void terms(Manuscript text) {
+    text.heading("What it is made of", "area times U, length times ψ; share of the sum");
+    Table table =
+        new Table("llrlrlrr", 2, TextCard.PAGE)
+            .named("term", "name", "amount", "unit", "coefficient", "unit", "W/K", "share");
     WindowTransmittance result = of.transmittance();
     double sum = 0;
     for (Term term : result.terms()) {
@@ -104,7 +100,7 @@ record WindowCard(WindowSubject of, Ink ink) {
     for (Term term : result.installation()) {
       row(table, term, sum);
     }
-    text.append(table.text());
+    text.table(table);
   }
 
   private void row(Table table, Term term, double sum) {
@@ -121,18 +117,18 @@ record WindowCard(WindowSubject of, Ink ink) {
         ink.faint(Digits.fixed(100 * term.valueWPerK() / sum, 1) + " %"));
   }
 
-  private void parts(StringBuilder text) {
+  private void parts(Manuscript text) {
     if (of.parts().isEmpty()) {
       return;
     }
-    TextCard.heading(text, ink, "Cases solved for it", "");
-    Table table = new Table("lrl", 2, TextCard.PAGE);
+    text.heading("Cases solved for it", "");
+    Table table = new Table("lrl", 2, TextCard.PAGE).named("case", "size", "note");
     for (WindowSubject.Part part : of.parts()) {
       table.row(
           part.name(),
           Digits.grouped(part.unknowns()) + " unknowns",
           part.reached() ? "" : ink.alert("accuracy not reached"));
     }
-    text.append(table.text());
+    text.table(table);
   }
 }

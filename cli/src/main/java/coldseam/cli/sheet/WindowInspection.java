@@ -1,7 +1,7 @@
 package coldseam.cli.sheet;
 
-import coldseam.cli.text.Ink;
 import coldseam.cli.text.Json;
+import coldseam.cli.text.Manuscript;
 import coldseam.solver.detail.Assumption;
 import java.util.List;
 
@@ -13,17 +13,15 @@ import java.util.List;
  * @param assumptions everything chosen for the user
  */
 record WindowInspection(Subject subject, List<String> cases, List<Assumption> assumptions) {
-  String text(Ink ink) {
-    StringBuilder text = new StringBuilder();
-    TextCard.title(text, subject, ink);
+  void write(Manuscript text) {
+    TextCard.title(text, subject);
     if (!cases.isEmpty()) {
-      TextCard.heading(text, ink, "Cases that are solved for it", "");
+      text.heading("Cases that are solved for it", "");
       for (String one : cases) {
-        text.append("  ").append(one).append('\n');
+        text.paragraph(one);
       }
     }
-    TextCard.assumptions(text, assumptions, List.of(), ink);
-    return text.toString();
+    TextCard.assumptions(text, assumptions, List.of());
   }
 
   String json() {

@@ -14,6 +14,8 @@ public final class Table {
   private final String indent;
   private final int page;
   private final List<String[]> rows = new ArrayList<>();
+  private String[] names = {};
+  private int heads;
 
   /**
    * An empty table.
@@ -37,6 +39,55 @@ public final class Table {
   public Table row(String... cells) {
     rows.add(cells.clone());
     return this;
+  }
+
+  /**
+   * Adds a row that names the columns; it stands before all others.
+   *
+   * @param cells one a column; missing ones at the end are empty
+   * @return this table
+   */
+  public Table head(String... cells) {
+    rows.add(heads, cells.clone());
+    heads++;
+    return this;
+  }
+
+  /**
+   * Names the columns where there is no row for it: on a page, not on a terminal, where the words
+   * in the cells say enough.
+   *
+   * @param columnNames one a column
+   * @return this table
+   */
+  public Table named(String... columnNames) {
+    names = columnNames.clone();
+    return this;
+  }
+
+  /** The rows that name the columns, then all others. */
+  List<String[]> rows() {
+    return rows;
+  }
+
+  /** How many rows name the columns. */
+  int heads() {
+    return heads;
+  }
+
+  /** Names of the columns where no row has them. */
+  String[] names() {
+    return names;
+  }
+
+  /** Whether a column is set right. */
+  boolean right(int column) {
+    return columns.charAt(column) == 'r';
+  }
+
+  /** Count of columns. */
+  int columns() {
+    return columns.length();
   }
 
   /** Whether there is no row. */
