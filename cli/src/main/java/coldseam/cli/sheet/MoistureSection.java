@@ -3,6 +3,7 @@ package coldseam.cli.sheet;
 import coldseam.cli.text.Digits;
 import coldseam.cli.text.Ink;
 import coldseam.cli.text.Json;
+import coldseam.cli.text.Manuscript;
 import coldseam.cli.text.Table;
 import coldseam.solver.detail.FilmSet;
 import coldseam.solver.result.MoistureLimits;
@@ -20,25 +21,23 @@ record MoistureSection(Result result, Units units, Ink ink) {
 
   private static final double MM = 1000;
 
-  void write(StringBuilder text) {
+  void write(Manuscript text) {
     for (SpaceMoisture space : result.moisture()) {
-      TextCard.heading(
-          text,
-          ink,
+      text.heading(
           "Moisture at the surfaces of " + space.space(),
           "ISO 13788; films for surface temperatures; air " + space.humidity());
-      text.append(months(space));
+      text.table(months(space));
       verdict(text, space, "mould", MoistureLimits.MOULD);
       verdict(text, space, "condensation", MoistureLimits.CONDENSATION);
       surface(text, space);
-      paragraph(text, SCOPE);
+      text.note(SCOPE);
     }
   }
 
-  private String months(SpaceMoisture space) {
+  private Table months(SpaceMoisture space) {
     Table table = new Table("lrrrrrrrrl", 2, TextCard.PAGE);
-    table.row("", "θe", "dew point", "mould", "f_Rsi", "f_Rsi", "θsi", "φsi", "margin", "");
-    table.row("", "°C", "°C", "below °C", "needed", "found", "°C", "%", "K", "");
+    table.head("", "θe", "dew point", "mould", "f_Rsi", "f_Rsi", "θsi", "φsi", "margin", "");
+    table.head("", "°C", "°C", "below °C", "needed", "found", "°C", "%", "K", "");
     for (int m = 0; m < space.months().size(); m++) {
       SpaceMoisture.Month month = space.months().get(m);
       boolean governs = space.critical().isPresent() && space.critical().getAsInt() == m;
@@ -55,10 +54,10 @@ record MoistureSection(Result result, Units units, Ink ink) {
           month.counts() ? Digits.signed(Digits.fixed(month.marginK(space.atSurface()), 2)) : "",
           governs ? ink.faint("governs") : month.counts() ? "" : ink.faint("outdoors not colder"));
     }
-    return table.text();
+    return table;
   }
 
-  private void verdict(StringBuilder text, SpaceMoisture space, String what, double atSurface) {
+  private void verdict(Manuscript text, SpaceMoisture space, String what, double atSurface) {
     if (space.critical().isEmpty()) {
       return;
     }
@@ -70,17 +69,15 @@ record MoistureSection(Result result, Units units, Ink ink) {
           case UNDECIDED -> ink.alert(what + ": too near its limit to tell");
           case NOT_MET -> ink.alert(what + " to be expected");
         };
-    text.append("  ")
-        .append(words)
-        .append(": coldest point ")
-        .append(Digits.signed(Digits.fixed(month.marginK(atSurface), 2)))
-        .append(" K from the limit")
-        .append(month.name().isEmpty() ? "" : " in " + month.name())
-        .append(space.atSurface() == atSurface ? "; this criterion governs" : "")
-        .append('\n');
+    text.paragraph(
+        words
+            + ": coldest point "
+            + Digits.signed(Digits.fixed(month.marginK(atSurface), 2))
+            + " K from the limit"
+            + (month.name().isEmpty() ? "" : " in " + month.name())
+            + (space.atSurface() == atSurface ? "; this criterion governs" : ""));
     if (space.onGlazing() && atSurface == MoistureLimits.MOULD) {
-      paragraph(
-          text,
+      text.note(
           "The coldest point lies on glazing or a frame, which the standard judges by condensation"
               + " alone.");
     }
@@ -99,14 +96,13 @@ record MoistureSection(Result result, Units units, Ink ink) {
     return worst;
   }
 
-  private void surface(StringBuilder text, SpaceMoisture space) {
+  private void surface(Manuscript text, SpaceMoisture space) {
     if (space.surface().isEmpty()) {
       return;
     }
     SpaceMoisture.Surface surface = space.surface().get();
     SpaceMoisture.Month month = space.months().get(space.critical().getAsInt());
-    paragraph(
-        text,
+    text.note(
         "Of "
             + units.length(surface.lengthM())
             + " "
@@ -118,12 +114,6 @@ record MoistureSection(Result result, Units units, Ink ink) {
             + " lie below the limit for mould and "
             + units.length(surface.belowDewPointM())
             + " below the dew point; temperatures along it are in --json and result.csv.");
-  }
-
-  private void paragraph(StringBuilder text, String words) {
-    for (String line : Table.wrapped(words, TextCard.PAGE - 2, "").split("\n")) {
-      text.append("  ").append(ink.faint(line)).append('\n');
-    }
   }
 
   /** One entry a space and month; the one that governs has the surface too. */

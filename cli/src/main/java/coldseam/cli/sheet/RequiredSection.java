@@ -3,6 +3,7 @@ package coldseam.cli.sheet;
 import coldseam.cli.text.Digits;
 import coldseam.cli.text.Ink;
 import coldseam.cli.text.Json;
+import coldseam.cli.text.Manuscript;
 import coldseam.cli.text.Table;
 import coldseam.solver.detail.Wanted.Requirement.Kind;
 import coldseam.solver.result.Result;
@@ -12,16 +13,16 @@ import java.util.List;
 
 /** What a case requires of its results, as rows of the card, as sentences and as data. */
 record RequiredSection(Result result, Ink ink) {
-  void write(StringBuilder text) {
+  void write(Manuscript text) {
     if (result.requirements().isEmpty()) {
       return;
     }
-    TextCard.heading(text, ink, "Required", "as the case states; no statement on local codes");
-    Table table = new Table("llll", 2, TextCard.PAGE);
+    text.heading("Required", "as the case states; no statement on local codes");
+    Table table = new Table("llll", 2, TextCard.PAGE).named("what", "required", "found", "verdict");
     for (Result.Required one : result.requirements()) {
       table.row(name(one), limit(one), found(one), verdict(one));
     }
-    text.append(table.text());
+    text.table(table);
   }
 
   private String verdict(Result.Required one) {
