@@ -3,6 +3,7 @@ package coldseam.cli;
 import coldseam.cases.Case;
 import coldseam.cases.CaseException;
 import coldseam.cases.WindowFile;
+import coldseam.cli.exchange.FieldFile;
 import coldseam.cli.plot.NoFontException;
 import coldseam.cli.plot.Plots;
 import coldseam.cli.sheet.Sheet;
@@ -29,6 +30,8 @@ final class SolveCommand implements Command {
   private static final String OUT = "--out";
   static final String JSON = "--json";
   private static final String PNG = "--png";
+  private static final String VTU = "--vtu";
+  private static final String FIELD = "field.vtu";
   private static final String NO_PLOTS = "--no-plots";
   private static final String ACCURACY = "--accuracy";
   private static final String MOST_UNKNOWNS = "--most-unknowns";
@@ -63,6 +66,10 @@ final class SolveCommand implements Command {
                 "print the result as data, one object on one line for each solve;"
                     + " without --out no file is written"),
             new Syntax.Option(PNG, "", "write each plot as PNG too"),
+            new Syntax.Option(
+                VTU,
+                "",
+                "write temperatures and heat flow as " + FIELD + " too, for viewers of VTK files"),
             new Syntax.Option(NO_PLOTS, "", "write data only"),
             new Syntax.Option(
                 ACCURACY,
@@ -127,7 +134,7 @@ final class SolveCommand implements Command {
     if (typed.has(PNG) && typed.has(NO_PLOTS)) {
       throw new UsageException(NAME, "--png and --no-plots exclude each other");
     }
-    if (typed.has(PNG) && typed.has(JSON) && !typed.has(OUT)) {
+    if ((typed.has(PNG) || typed.has(VTU)) && typed.has(JSON) && !typed.has(OUT)) {
       throw new UsageException(NAME, "--json writes no files unless --out says where: add --out");
     }
   }
@@ -314,6 +321,9 @@ final class SolveCommand implements Command {
   /** Names of the files that one solve writes. */
   private static List<String> names(Syntax.Typed typed) {
     List<String> names = new ArrayList<>(List.of("result.json", "result.csv"));
+    if (typed.has(VTU)) {
+      names.add(FIELD);
+    }
     if (!typed.has(NO_PLOTS)) {
       for (Plots.Kind kind : PLOTS) {
         names.add(kind.stem() + ".svg");
@@ -338,6 +348,9 @@ final class SolveCommand implements Command {
     Map<String, byte[]> files = new LinkedHashMap<>();
     files.put("result.json", bytes(Sheet.json(job.subject(), result, true) + "\n"));
     files.put("result.csv", bytes(Sheet.csv(job.subject(), result)));
+    if (typed.has(VTU)) {
+      files.put(FIELD, bytes(FieldFile.vtu(job.subject().title(), result, Main.VERSION)));
+    }
     try {
       for (Map.Entry<Plots.Kind, String> svg : begun.finish().entrySet()) {
         files.put(svg.getKey().stem() + ".svg", bytes(svg.getValue()));

@@ -104,13 +104,7 @@ final class FlowDensity implements Nodal {
   }
 
   private double[] triangleDensity(int t, double[] l) {
-    Material material = conditions.material(mesh.label(t));
-    double[] gradient = field.gradient(t, l[0], l[1], l[2]);
-    double cos = Math.cos(material.angleRad());
-    double sin = Math.sin(material.angleRad());
-    double along = -material.conductivityWPerMK() * (gradient[0] * cos + gradient[1] * sin);
-    double across = -material.crossConductivityWPerMK() * (gradient[1] * cos - gradient[0] * sin);
-    return new double[] {along * cos - across * sin, along * sin + across * cos};
+    return conditions.material(mesh.label(t)).heatFlowDensity(field.gradient(t, l[0], l[1], l[2]));
   }
 
   /** The density at a place in the section, W/m²; empty array outside. */

@@ -76,4 +76,18 @@ public record Material(
   public boolean isotropic() {
     return conductivityWPerMK == crossConductivityWPerMK;
   }
+
+  /**
+   * The density of heat flow that a temperature gradient drives, q = −Λ grad θ.
+   *
+   * @param gradientKPerM x and y components, K/m
+   * @return x and y components, W/m²
+   */
+  public double[] heatFlowDensity(double[] gradientKPerM) {
+    double cos = Math.cos(angleRad);
+    double sin = Math.sin(angleRad);
+    double along = -conductivityWPerMK * (gradientKPerM[0] * cos + gradientKPerM[1] * sin);
+    double across = -crossConductivityWPerMK * (gradientKPerM[1] * cos - gradientKPerM[0] * sin);
+    return new double[] {along * cos - across * sin, along * sin + across * cos};
+  }
 }
