@@ -26,7 +26,8 @@ class CsvColumnsTest {
           + "heatFlow_W_per_m,temperature_C,estimatedError_K,x_mm,y_mm,distance_mm,Rs_m2K_per_W,"
           + "fRsi,g,share,changePer10Percent_W_per_mK,toleranceHalfWidth_W_per_mK,"
           + "toleranceLower_W_per_mK,toleranceUpper_W_per_mK,toleranceHalfWidth_W_per_m2K,"
-          + "toleranceLower_W_per_m2K,toleranceUpper_W_per_m2K";
+          + "toleranceLower_W_per_m2K,toleranceUpper_W_per_m2K,"
+          + "requiredFRsi,margin_K,surfaceHumidity,outdoors_C,dewPoint_C,mouldLimit_C";
 
   private static Path root() {
     Path folder = Path.of("").toAbsolutePath();
