@@ -275,7 +275,8 @@ public final class Solver {
       for (Map.Entry<Subtraction.OfDetail, Resolved> other : others.entrySet()) {
         plans.put(other.getKey(), other.getValue().plan());
       }
-      Plan plan = Plan.of(detail, partition, heatLoss, surface, plans);
+      boolean provisional = cavities.isPresent() && start.isEmpty();
+      Plan plan = Plan.of(detail, partition, heatLoss, surface, plans, provisional);
       return new Resolved(drawn, partition, heatLoss, surface, plan, others, cavities, start);
     }
 

@@ -234,6 +234,16 @@ class FramesTest {
     assertThat(frameU(two)).isCloseTo(frameU(one), offset(1e-4));
   }
 
+  /** Heat flows horizontally through a sill section too, which stays an upright one. */
+  @Test
+  void an_upright_frame_has_the_films_of_a_plan() {
+    DrawnDetail upright = withPanel(CornerRule.WHOLE).view(coldseam.solver.detail.View.up(0, 1));
+    Result result = upright.solve(1e-4);
+    assertThat(frameU(result)).isCloseTo(1.36278, offset(0.00010));
+    assertThat(result.detail().view().plan()).isFalse();
+    assertThat(result.detail().view().upY()).isEqualTo(1);
+  }
+
   /** Turned by 30° nothing changes: corners, lengths and films follow the drawing. */
   @Test
   void a_turned_frame_is_the_same_frame() {

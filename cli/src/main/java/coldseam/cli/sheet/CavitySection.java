@@ -35,6 +35,7 @@ final class CavitySection {
     Table table = new Table("lllrrlll", 2, TextCard.PAGE);
     table.head("", "at", "", "d", "b", "flow", "ε", "λ");
     int passes = 0;
+    boolean settled = true;
     for (Cavity cavity : cavities) {
       String at = "(" + units.length(cavity.at().x()) + ", " + units.length(cavity.at().y()) + ")";
       if (cavity.counted().isEmpty()) {
@@ -44,6 +45,7 @@ final class CavitySection {
       }
       Cavity.Counted as = cavity.counted().get();
       passes = Math.max(passes, as.passes());
+      settled &= as.settled();
       table.row(
           cavity.name(),
           at,
@@ -62,11 +64,11 @@ final class CavitySection {
     if (passes == 0) {
       return;
     }
+    String counted = passes + (passes == 1 ? " pass" : " passes");
     String note =
-        "Settled in "
-            + passes
-            + (passes == 1 ? " pass" : " passes")
-            + "; every ± holds for these conductivities";
+        settled
+            ? "Settled in " + counted + "; every ± holds for these conductivities"
+            : "Not settled in " + counted + ": nothing is certified";
     text.note(note);
   }
 
@@ -137,15 +139,19 @@ final class CavitySection {
         .numbers("direction", as.direction().x(), as.direction().y())
         .numbers("emissivities", as.emissivities().first(), as.emissivities().second())
         .member("conductivity_W_per_mK", as.conductivityWPerMK())
-        .member("stated", as.stated())
-        .member("form", as.form().words())
-        .member("temperatures", as.temperatures() == Temperatures.FIXED ? "fixed" : "found");
+        .member("stated", as.stated());
+    if (as.form().isPresent()) {
+      json.member("form", as.form().get());
+    } else {
+      json.nothing("form");
+    }
+    json.member("temperatures", as.temperatures() == Temperatures.FIXED ? "fixed" : "found");
     if (as.differenceK().isPresent()) {
       json.member("difference_K", as.differenceK().getAsDouble())
           .member("mean_C", as.meanC().getAsDouble());
     } else {
       json.nothing("difference_K").nothing("mean_C");
     }
-    json.member("passes", as.passes());
+    json.member("passes", as.passes()).member("settled", as.settled());
   }
 }

@@ -319,11 +319,12 @@ public final class Cavities {
         new Point(sign * shape.axes().x(axis), sign * shape.axes().y(axis)),
         settling.emissivities(c, axis),
         state.conductivityWPerMK()[c],
-        fill.form(laid.groups().get(c).classed().rule()),
+        settling.form(c, axis),
         fill.temperatures(),
         laid.groups().get(c).pieces().get(0).settings().conductivityWPerMK().isPresent(),
         temperatures ? OptionalDouble.of(state.differenceK()[c]) : OptionalDouble.empty(),
         temperatures ? OptionalDouble.of(state.meanC()[c]) : OptionalDouble.empty(),
-        state.passes());
+        state.passes(),
+        state.settled());
   }
 }

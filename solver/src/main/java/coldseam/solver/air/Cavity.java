@@ -3,7 +3,6 @@ package coldseam.solver.air;
 import coldseam.mesh.plane.Point;
 import coldseam.solver.cavity.CavityBox;
 import coldseam.solver.cavity.Emissivities;
-import coldseam.solver.cavity.RadiationForm;
 import coldseam.solver.cavity.Ventilation;
 import coldseam.solver.detail.AirCavity.Rule;
 import coldseam.solver.detail.AirCavity.Temperatures;
@@ -40,22 +39,25 @@ public record Cavity(
    * @param direction unit vector in which heat flows
    * @param emissivities of the faces before and behind
    * @param conductivityWPerMK λ_eq, W/(m·K)
-   * @param form how radiation is written
+   * @param form how radiation is written, in words; empty where no shape enters: of a layer wider
+   *     than ten times its thickness, or where the conductivity is stated
    * @param temperatures fixed or found
    * @param stated whether the conductivity is stated in the case
    * @param differenceK temperature difference in the formulas; empty where fixed values hold
    * @param meanC mean temperature in the formulas, °C
-   * @param passes solutions it took to settle
+   * @param passes solutions looked at
+   * @param settled whether the conductivities agree with the temperatures
    */
   public record Counted(
       CavityBox box,
       Point direction,
       Emissivities emissivities,
       double conductivityWPerMK,
-      RadiationForm form,
+      Optional<String> form,
       Temperatures temperatures,
       boolean stated,
       OptionalDouble differenceK,
       OptionalDouble meanC,
-      int passes) {}
+      int passes,
+      boolean settled) {}
 }

@@ -1,5 +1,6 @@
 package coldseam.solver.air;
 
+import coldseam.solver.cavity.AirLayer;
 import coldseam.solver.cavity.RadiationForm;
 import coldseam.solver.cavity.Ventilation;
 import coldseam.solver.detail.AirCavity;
@@ -125,7 +126,7 @@ final class CavityAssumptions {
       value.append(" (closed)");
     }
     if (cavity.counted().isPresent()) {
-      counted(value, cavity.counted().get());
+      counted(value, cavity.rule(), cavity.counted().get());
     }
     String source =
         cavity.counted().isPresent()
@@ -137,7 +138,7 @@ final class CavityAssumptions {
         cavity.name() + " at " + Wording.place(cavity.at()), value.toString(), source);
   }
 
-  private static void counted(StringBuilder value, Cavity.Counted as) {
+  private static void counted(StringBuilder value, Rule rule, Cavity.Counted as) {
     if (!as.stated()) {
       value
           .append(", d ")
@@ -148,6 +149,17 @@ final class CavityAssumptions {
           .append(Wording.figure(as.emissivities().first()))
           .append(" and ")
           .append(Wording.figure(as.emissivities().second()));
+    }
+    if (rule == Rule.LAYER && !as.stated()) {
+      if (as.box().depthM() > AirLayer.THICKEST_M * (1 + Limits.TIE)) {
+        value
+            .append(", with the resistance of ")
+            .append(Wording.length(AirLayer.THICKEST_M))
+            .append(", the thickest that ISO 6946 knows");
+      }
+      if (as.form().isPresent()) {
+        value.append(", a small or divided void (").append(as.form().get()).append(')');
+      }
     }
     if (as.differenceK().isPresent()) {
       value

@@ -168,6 +168,23 @@ final class Settling {
     return box.depthM() / resistance;
   }
 
+  /** How radiation is written; empty where no shape enters, or the conductivity is stated. */
+  Optional<String> form(int c, int axis) {
+    if (settings(c).conductivityWPerMK().isPresent()) {
+      return Optional.empty();
+    }
+    Rule rule = groups.get(c).classed().rule();
+    RadiationForm form = groups.get(c).pieces().get(0).fill().form(rule);
+    if (rule == Rule.FRAME) {
+      return Optional.of(form.words());
+    }
+    CavityBox box = shapes.get(c).box(axis);
+    double thickness = Math.min(box.depthM(), AirLayer.THICKEST_M);
+    return form == RadiationForm.RADIOSITY || AirLayer.divided(thickness, box.widthM())
+        ? Optional.of(form.wordsForLayers())
+        : Optional.empty();
+  }
+
   /**
    * ISO 6946: heat that flows upwards through an inclined layer is taken between horizontal and
    * vertical; downwards it counts as horizontal within 30°.
@@ -188,7 +205,7 @@ final class Settling {
   /** Sine of the angle of the heat flow over the horizontal. */
   private double rise(int c, int axis, boolean forward) {
     Axes axes = shapes.get(c).axes();
-    double up = view.plan() ? 0 : axes.x(axis) * view.upX() + axes.y(axis) * view.upY();
+    double up = view.horizontalFlow() ? 0 : axes.x(axis) * view.upX() + axes.y(axis) * view.upY();
     return forward ? up : -up;
   }
 

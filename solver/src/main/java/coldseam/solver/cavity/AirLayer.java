@@ -124,6 +124,17 @@ public record AirLayer(
    * @return true below ten times the thickness
    */
   public boolean dividedAt(double widthM) {
+    return divided(thicknessM, widthM);
+  }
+
+  /**
+   * Whether a void is a small or divided one.
+   *
+   * @param thicknessM d, along the heat flow, m
+   * @param widthM b, across the heat flow, m
+   * @return true below ten times the thickness
+   */
+  public static boolean divided(double thicknessM, double widthM) {
     return thicknessM > 0 && Rounding.below(widthM, WIDTHS_OF_A_LAYER * thicknessM);
   }
 

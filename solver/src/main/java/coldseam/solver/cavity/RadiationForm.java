@@ -9,27 +9,40 @@ public enum RadiationForm {
    * Product E·F with E = 1/(1/ε₁ + 1/ε₂ − 1): ISO 10077-2:2003 and 2012, ISO 6946:2007. <em>From
    * memory</em>.
    */
-  PRODUCT("ISO 10077-2:2012: 4 sigma Tm^3 E F"),
+  PRODUCT("ISO 10077-2:2012", "ISO 6946:2007, annex B", "4 sigma Tm^3 E F"),
   /**
    * Resistances in series, 1/(1/ε₁ + 1/ε₂ − 2 + 1/F): ISO 6946:2017, annex D, and, <em>from
    * memory</em>, ISO 10077-2:2017.
    */
-  SERIES("ISO 10077-2:2017: 4 sigma Tm^3 / (1/eps1 + 1/eps2 - 2 + 1/F)"),
+  SERIES(
+      "ISO 10077-2:2017", "ISO 6946:2017, annex D", "4 sigma Tm^3 / (1/eps1 + 1/eps2 - 2 + 1/F)"),
   /**
    * Face by face with view factors, {@link Radiosity}; ISO 10077-2:2017 allows it (<em>from
    * memory</em>). As long as no temperatures of faces are known it counts as {@link #SERIES}.
    */
-  RADIOSITY("ISO 10077-2:2017: net radiation of grey faces, view factors by crossed strings");
+  RADIOSITY(
+      "ISO 10077-2:2017",
+      "ISO 10077-2:2017",
+      "net radiation of grey faces, view factors by crossed strings");
 
-  private final String words;
+  private final String ofFrames;
+  private final String ofLayers;
+  private final String formula;
 
-  RadiationForm(String words) {
-    this.words = words;
+  RadiationForm(String ofFrames, String ofLayers, String formula) {
+    this.ofFrames = ofFrames;
+    this.ofLayers = ofLayers;
+    this.formula = formula;
   }
 
-  /** The edition and the formula, for lists of assumptions. */
+  /** The edition of the standard of frames and the formula, for lists of assumptions. */
   public String words() {
-    return words;
+    return ofFrames + ": " + formula;
+  }
+
+  /** The edition of the standard of air layers and the formula, for small or divided voids. */
+  public String wordsForLayers() {
+    return ofLayers + ": " + formula;
   }
 
   /**

@@ -139,7 +139,7 @@ final class FilmChoice {
       return Direction.ANY;
     }
     double rise = rise(edge);
-    if (detail.view().plan() || Math.abs(rise) <= HORIZONTAL_SINE) {
+    if (detail.view().horizontalFlow() || Math.abs(rise) <= HORIZONTAL_SINE) {
       return Direction.HORIZONTAL;
     }
     Space space = detail.spaces().get(reading.spaces()[edge]);

@@ -47,7 +47,7 @@ public final class FrameDetail {
     return new Detail(
         detail.title(),
         detail.geometry(),
-        View.PLAN,
+        detail.view().withHorizontalFlow(),
         areas,
         detail.spaces(),
         detail.stretches(),

@@ -22,11 +22,15 @@ import java.util.Optional;
  * cannot be derived without doubt has a reason instead of a length.
  */
 final class FlankLengths {
-  /** Relative difference up to which two U count as equal. */
-  static final double EQUAL_U = 1e-9;
+  /**
+   * Relative difference up to which two U count as equal: that of one construction of which
+   * conductivities were found at either end.
+   */
+  static final double EQUAL_U = 1e-3;
 
   private final Outline outline;
   private final List<PlacedFlank> flanks;
+  private final boolean provisional;
   private final Map<String, Faces> faces = new HashMap<>();
   private final Map<String, Map<DimensionSystem, Outcome>> outcomes = new HashMap<>();
 
@@ -52,9 +56,15 @@ final class FlankLengths {
 
   private record Partner(PlacedFlank flank, Face face, double gapM) {}
 
-  FlankLengths(Outline outline, List<PlacedFlank> flanks) {
+  /**
+   * Derives the lengths.
+   *
+   * @param provisional whether conductivities are still to be found, so that no U can be compared
+   */
+  FlankLengths(Outline outline, List<PlacedFlank> flanks, boolean provisional) {
     this.outline = outline;
     this.flanks = flanks;
+    this.provisional = provisional;
     for (PlacedFlank flank : flanks) {
       if (flank.plane().isPresent()
           && flank.inner().isPresent()
@@ -325,7 +335,10 @@ final class FlankLengths {
     return Outline.offset(face.walk().lengthM());
   }
 
-  private static boolean equalU(PlacedFlank a, PlacedFlank b) {
+  private boolean equalU(PlacedFlank a, PlacedFlank b) {
+    if (provisional) {
+      return true;
+    }
     Optional<Bracket> ua = a.uWPerM2K();
     Optional<Bracket> ub = b.uWPerM2K();
     return ua.isPresent()

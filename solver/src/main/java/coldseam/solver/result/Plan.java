@@ -55,7 +55,8 @@ public final class Plan {
       Partition partition,
       Conditions heatLoss,
       Conditions surface,
-      Map<Subtraction.OfDetail, Plan> others) {
+      Map<Subtraction.OfDetail, Plan> others,
+      boolean provisional) {
     this.detail = detail;
     this.partition = partition;
     this.heatLoss = heatLoss;
@@ -63,7 +64,7 @@ public final class Plan {
     Outline outline = new Outline(partition, heatLoss);
     FlankFinder finder = new FlankFinder(detail, outline);
     flanks = finder.flanks();
-    lengths = new FlankLengths(outline, flanks);
+    lengths = new FlankLengths(outline, flanks, provisional);
     PsiPlanner planner = new PsiPlanner(detail, outline, flanks, lengths);
     psi = new LinearTransmittances(planner.plans(), detail, heatLoss);
     transmittances = new EffectiveTransmittances(detail, outline);
@@ -113,6 +114,8 @@ public final class Plan {
    * @param heatLoss conditions with the films for heat loss
    * @param surface conditions with the films for surface temperatures
    * @param others the plan of every detail that a ψ subtracts, and of the frame with its panel
+   * @param provisional whether conductivities of cavities are still to be found: nothing that hangs
+   *     on them is held against the detail
    * @return the plan
    * @throws DetailException if a flank has no U, a length or width that is needed cannot be
    *     derived, or a wanted result names what is not there; all such faults together
@@ -122,8 +125,9 @@ public final class Plan {
       Partition partition,
       Conditions heatLoss,
       Conditions surface,
-      Map<Subtraction.OfDetail, Plan> others) {
-    return new Plan(detail, partition, heatLoss, surface, others);
+      Map<Subtraction.OfDetail, Plan> others,
+      boolean provisional) {
+    return new Plan(detail, partition, heatLoss, surface, others, provisional);
   }
 
   /** The detail as it is solved. */

@@ -100,6 +100,28 @@ class AirLayersTest {
     assertThat(cavity.counted().orElseThrow().box().depthM()).isCloseTo(gap / 1000, within(1e-9));
   }
 
+  /**
+   * A shelf parts the layer in two lengths: across the wall both conduct the same, and the external
+   * length is shared by the halves.
+   */
+  @ParameterizedTest
+  @CsvSource({"450, 0", "450, 800", "500, 0"})
+  void a_layer_parted_by_a_shelf_is_the_same_wall_on_either_side(double at, double openings) {
+    AirCavity air = openings == 0 ? AirCavity.of("air") : air(openings(openings));
+    DrawnDetail parted =
+        wall(air, 40)
+            .box(material("shelf", 17), at, 100, at + 6, 325)
+            .psi("shelf", List.of("indoors"), List.of("outdoors"), DimensionSystem.EXTERNAL);
+    Result.LinearTransmittance psi = parted.solve(1e-4).psi().get(0);
+    assertThat(psi.subtracted()).hasSize(2);
+    double length = 0;
+    for (Result.Subtracted flank : psi.subtracted()) {
+      length += flank.lengthM().orElseThrow();
+    }
+    assertThat(length).isCloseTo(1, within(1e-9));
+    assertThat(psi.valueWPerMK().value()).isPositive();
+  }
+
   /** ISO 6946:2017: a void narrower than ten times its thickness; 2017 form, from memory. */
   @ParameterizedTest
   @CsvSource({"20, 20, 0.22747", "50, 20, 0.25247", "20, 100, 0.19429"})
@@ -121,6 +143,41 @@ class AirLayersTest {
             .want(u())
             .solve(1e-4);
     assertThat(resistance(result) - 0.17 - 0.1).isCloseTo(r, within(1e-3 * r));
+  }
+
+  /**
+   * Which edition's formula holds is said, and where a layer is thicker than the standard knows.
+   */
+  @ParameterizedTest
+  @CsvSource({
+    "20, 100, 'a small or divided void (ISO 6946:2017, annex D:'",
+    "350, 1000, 'with the resistance of 300 mm, the thickest that ISO 6946 knows, a small or'"
+  })
+  void what_a_layer_counts_as_is_said(double d, double b, String said) {
+    Settings layer =
+        new Settings(
+            Optional.of(Rule.LAYER),
+            Optional.empty(),
+            Optional.empty(),
+            Optional.empty(),
+            OptionalDouble.empty());
+    Result result =
+        new DrawnDetail()
+            .box(room("indoors", 20), 0, -100, b, 0)
+            .box(outdoors(0), 0, 20 + d, b, 700)
+            .box(material("board", 0.2), 0, 0, b, 10)
+            .box(air(layer), 0, 10, b, 10 + d)
+            .box(material("board 2", 0.2), 0, 10 + d, b, 20 + d)
+            .want(u())
+            .solve(1e-3);
+    assertThat(result.assumptions())
+        .anySatisfy(
+            line -> {
+              assertThat(line.what()).startsWith("cavity 1 at");
+              assertThat(line.value()).contains(said);
+            });
+    assertThat(wall(AirCavity.of("air"), 40).solve(1e-3).cavities().get(0).counted().get().form())
+        .isEmpty();
   }
 
   /** What lies outside a well ventilated layer is left out; Rsi stands behind it. */
