@@ -5,6 +5,7 @@ import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.Fault;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 
 /** A case file that was read without a problem. Immutable. */
@@ -34,6 +35,45 @@ public interface Case {
    * @return in the order found; none of a case without drawings
    */
   List<Doubt> doubts(Optional<String> variant);
+
+  /**
+   * The detail of the base case or of a variant with something changed in it. May be called from
+   * several threads at once.
+   *
+   * @param variant a name of {@link #variants()}, empty for the base case
+   * @param changes named values and fills to replace
+   * @return the detail
+   * @throws CaseException if there is no such value or fill, or the changes do not make a valid
+   *     case
+   */
+  Detail detail(Optional<String> variant, Changes changes) throws CaseException;
+
+  /**
+   * The named values of the base case or of a variant.
+   *
+   * @param variant a name of {@link #variants()}, empty for the base case
+   * @return name and what is written there, in the order written
+   */
+  Map<String, String> values(Optional<String> variant);
+
+  /**
+   * What a variant changes.
+   *
+   * @param variant a name of {@link #variants()}
+   * @return a few words for each change: {@code insulation = 200}
+   */
+  List<String> changes(String variant);
+
+  /**
+   * What it costs, as typed: no number of ours.
+   *
+   * @param variant a name of {@link #variants()}, empty for the base case
+   * @return the text, or empty if none is typed for this one
+   */
+  Optional<String> cost(Optional<String> variant);
+
+  /** Every file that was read for it: its own first, then cases it subtracts and drawings. */
+  List<Path> files();
 
   /** The accuracy asked for in the case, the standard one where it says nothing. */
   Accuracy accuracy();

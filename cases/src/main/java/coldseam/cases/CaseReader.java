@@ -36,6 +36,7 @@ final class CaseReader {
           "require",
           "accuracy",
           "variants",
+          "cost",
           "expect");
 
   /** More variants in one file are refused: a study is not a case. */
@@ -93,6 +94,10 @@ final class CaseReader {
       names.add(variant.name());
     }
     ReadCase.Builder builder = new ReadCase.Builder(file, title, names, unit);
+    Optional<String> cost = Optional.empty();
+    if (top.has("cost")) {
+      cost = Fields.text(problems, "`cost`", top.get("cost").get());
+    }
     Pass base = pass(top, problems, unit, values, Optional.empty());
     DetailReader reader = reader(top, base, Optional.empty());
     builder.add(Optional.empty(), reader.read(title, names), base);
@@ -106,7 +111,11 @@ final class CaseReader {
     if (!problems.none()) {
       throw new CaseException(problems.inOrder());
     }
-    return builder.build(reader.accuracy(), reader.expectations());
+    return builder.build(
+        reader.accuracy(),
+        reader.expectations(),
+        cost,
+        new Rereading(file, chain, others, top, unit, values, variants, drawings));
   }
 
   private DetailReader reader(Fields top, Pass pass, Optional<Variant> variant) {
@@ -149,6 +158,27 @@ final class CaseReader {
     if (variant.isPresent()) {
       variant.get().replaceValues(named);
     }
+    return pass(file, top, into, unit, named, drawings);
+  }
+
+  /**
+   * Starts one way through a file.
+   *
+   * @param file the file
+   * @param top the keys of the case
+   * @param into told what is wrong
+   * @param unit of bare lengths
+   * @param named the values that hold this time
+   * @param drawings the drawings opened before
+   * @return what all parts share
+   */
+  static Pass pass(
+      Path file,
+      Fields top,
+      Problems into,
+      LengthUnit unit,
+      NamedValues named,
+      OpenedDrawings drawings) {
     named.workOutAll();
     Pass pass = new Pass(file, into, new Quantities(into, named, unit), drawings);
     if (!top.has("unit")) {

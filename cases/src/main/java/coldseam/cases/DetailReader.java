@@ -10,6 +10,7 @@ import coldseam.solver.detail.View;
 import coldseam.solver.detail.Wanted;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 
 /** Reads what a detail is made of, for the base case or for one variant of it. */
@@ -19,15 +20,22 @@ final class DetailReader {
   private final Problems problems;
   private final OtherCases others;
   private final Optional<Variant> variant;
+  private final Changes changes;
   private Accuracy accuracy = Accuracy.STANDARD;
   private List<Expectation> expectations = List.of();
 
   DetailReader(Fields top, Pass pass, OtherCases others, Optional<Variant> variant) {
+    this(top, pass, others, variant, Changes.NONE);
+  }
+
+  DetailReader(
+      Fields top, Pass pass, OtherCases others, Optional<Variant> variant, Changes changes) {
     this.top = top;
     this.pass = pass;
     this.problems = pass.problems();
     this.others = others;
     this.variant = variant;
+    this.changes = changes;
   }
 
   Accuracy accuracy() {
@@ -70,6 +78,9 @@ final class DetailReader {
     if (variant.isPresent()) {
       variant.get().replaceFills(fills);
     }
+    for (Map.Entry<String, String> change : changes.fills().entrySet()) {
+      fills.replace(change.getKey(), Rereading.typed(change.getValue()));
+    }
     Node drawn = top.nodeOrNull("drawings");
     DrawingsReader drawings = drawn == null ? null : new DrawingsReader(pass);
     if (drawn != null) {
@@ -78,6 +89,14 @@ final class DetailReader {
     List<Area> areas = section(fills, drawings, spacesNode.isPresent());
     if (variant.isPresent()) {
       variant.get().reportNotReplaced(problems, fills);
+    }
+    for (String old : changes.fills().keySet()) {
+      if (fills.notReplaced().contains(old)) {
+        problems.add(
+            Rereading.typed(old),
+            "no shape has the name or the fill `" + Node.shortened(old) + "`",
+            Problems.suggestion(old, fills.replaceable()));
+      }
     }
     Node uncoveredNode = top.nodeOrNull("uncovered");
     Optional<AirCavity> uncovered =

@@ -12,6 +12,7 @@ import java.util.ArrayList;
 import java.util.HashMap;
 import java.util.HashSet;
 import java.util.LinkedHashMap;
+import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -26,6 +27,7 @@ final class Fills {
   private final SpaceReader spaces;
   private final CavityReader cavities;
   private final Map<String, Node.Scalar> replacements = new LinkedHashMap<>();
+  private final Set<String> met = new LinkedHashSet<>();
   private final Set<String> replaced = new HashSet<>();
   private final Set<String> assumed = new HashSet<>();
   private final Map<String, Optional<Fill>> known = new HashMap<>();
@@ -50,6 +52,11 @@ final class Fills {
     return unused;
   }
 
+  /** The names by which fills can be replaced, once the section is read. */
+  Set<String> replaceable() {
+    return met;
+  }
+
   /**
    * What a shape is filled with.
    *
@@ -61,6 +68,12 @@ final class Fills {
     Optional<String> name = Fields.text(pass.problems(), "`fill`", node);
     if (name.isEmpty()) {
       return Optional.empty();
+    }
+    if (!replacements.isEmpty()) {
+      met.add(name.get());
+      if (shape.isPresent()) {
+        met.add(shape.get());
+      }
     }
     String key = shape.isPresent() && replacements.containsKey(shape.get()) ? shape.get() : "";
     if (key.isEmpty() && replacements.containsKey(name.get())) {

@@ -102,6 +102,11 @@ final class NamedValues implements Unit.Names {
     return false;
   }
 
+  /** What is written where a value is given its number; shortened where that is no number. */
+  String written(String name) {
+    return written.get(name) instanceof Node.Scalar scalar ? scalar.text().strip() : "";
+  }
+
   Collection<String> names() {
     return written.keySet();
   }

@@ -12,7 +12,7 @@ import java.util.Map;
 import java.util.OptionalDouble;
 import java.util.Set;
 
-/** The drawings that cases take shapes from, each read once. */
+/** The drawings that cases take shapes from, each read once. May be shared by threads. */
 final class OpenedDrawings {
   private final Set<Path> named = new HashSet<>();
   private final Map<Asked, Drawing> drawings = new HashMap<>();
@@ -41,7 +41,16 @@ final class OpenedDrawings {
     return real.startsWith(CaseReader.normalised(folder)) || named.contains(real);
   }
 
-  Drawing drawing(Path file, OptionalDouble deviation) throws DrawingException {
+  /** Every file that was read. */
+  synchronized Set<Path> files() {
+    Set<Path> files = new HashSet<>();
+    for (Asked asked : drawings.keySet()) {
+      files.add(asked.file());
+    }
+    return files;
+  }
+
+  synchronized Drawing drawing(Path file, OptionalDouble deviation) throws DrawingException {
     Asked asked = new Asked(CaseReader.normalised(file), deviation);
     Drawing known = drawings.get(asked);
     if (known == null) {
@@ -51,7 +60,8 @@ final class OpenedDrawings {
     return known;
   }
 
-  DrawnShapes shapes(Path file, OptionalDouble deviation, List<String> without, Placement placement)
+  synchronized DrawnShapes shapes(
+      Path file, OptionalDouble deviation, List<String> without, Placement placement)
       throws DrawingException {
     Asked asked = new Asked(CaseReader.normalised(file), deviation);
     Placed placed = new Placed(asked, without, placement);

@@ -21,8 +21,15 @@ final class ReadCase implements Case {
   private final List<Map<String, Node>> places;
   private final Accuracy accuracy;
   private final List<Expectation> expectations;
+  private final Optional<String> cost;
+  private final Rereading again;
 
-  private ReadCase(Builder from, Accuracy accuracy, List<Expectation> expectations) {
+  private ReadCase(
+      Builder from,
+      Accuracy accuracy,
+      List<Expectation> expectations,
+      Optional<String> cost,
+      Rereading again) {
     this.file = from.file;
     this.title = from.title;
     this.variants = List.copyOf(from.variants);
@@ -32,6 +39,8 @@ final class ReadCase implements Case {
     this.places = List.copyOf(from.places);
     this.accuracy = accuracy;
     this.expectations = List.copyOf(expectations);
+    this.cost = cost;
+    this.again = again;
   }
 
   /** Takes the base case and each variant as they are read. */
@@ -66,8 +75,9 @@ final class ReadCase implements Case {
       doubts.put(variant, List.copyOf(pass.doubts()));
     }
 
-    ReadCase build(Accuracy accuracy, List<Expectation> expectations) {
-      return new ReadCase(this, accuracy, expectations);
+    ReadCase build(
+        Accuracy accuracy, List<Expectation> expectations, Optional<String> cost, Rereading again) {
+      return new ReadCase(this, accuracy, expectations, cost, again);
     }
   }
 
@@ -106,6 +116,32 @@ final class ReadCase implements Case {
   @Override
   public List<Doubt> doubts(Optional<String> variant) {
     return doubts.getOrDefault(variant, List.of());
+  }
+
+  @Override
+  public Detail detail(Optional<String> variant, Changes changes) throws CaseException {
+    Detail unchanged = detail(variant);
+    return changes.equals(Changes.NONE) ? unchanged : again.detail(title, variant, changes);
+  }
+
+  @Override
+  public Map<String, String> values(Optional<String> variant) {
+    return again.values(variant);
+  }
+
+  @Override
+  public List<String> changes(String variant) {
+    return again.variant(Optional.of(variant)).get().inWords();
+  }
+
+  @Override
+  public Optional<String> cost(Optional<String> variant) {
+    return variant.isEmpty() ? cost : again.variant(variant).get().cost();
+  }
+
+  @Override
+  public List<Path> files() {
+    return again.files();
   }
 
   @Override

@@ -6,10 +6,11 @@ import java.util.Optional;
 
 /** The named changes of one variant. */
 final class Variant {
-  static final List<String> KEYS = List.of("values", "materials", "fills");
+  static final List<String> KEYS = List.of("values", "materials", "fills", "cost");
 
   private final String name;
   private final Optional<Node> materials;
+  private final Optional<String> cost;
   private final List<Node.Entry> values = new ArrayList<>();
   private final List<Node.Entry> fills = new ArrayList<>();
 
@@ -25,6 +26,10 @@ final class Variant {
     this.name = key.text();
     Fields fields = new Fields(problems, "variant `" + Node.shortened(name) + "`", node, KEYS);
     this.materials = fields.get("materials");
+    this.cost =
+        fields.has("cost")
+            ? Fields.text(problems, "`cost` of " + fields.what(), fields.get("cost").get())
+            : Optional.empty();
     if (fields.has("values")) {
       for (Node.Entry entry :
           Fields.named(problems, "`values` of " + fields.what(), fields.get("values").get())) {
@@ -55,6 +60,51 @@ final class Variant {
 
   Optional<Node> materials() {
     return materials;
+  }
+
+  /** What it costs, as typed. */
+  Optional<String> cost() {
+    return cost;
+  }
+
+  /** A few words for each change. */
+  List<String> inWords() {
+    List<String> words = new ArrayList<>();
+    for (Node.Entry entry : values) {
+      words.add(entry.key().text() + " = " + text(entry.value()));
+    }
+    if (materials.isPresent() && materials.get() instanceof Node.Mapping changed) {
+      for (Node.Entry entry : changed.entries()) {
+        String value = text(entry.value());
+        words.add(entry.key().text() + (value.isEmpty() ? " changed" : " = " + value));
+      }
+    }
+    for (Node.Entry entry : fills) {
+      words.add(entry.key().text() + ": " + text(entry.value()));
+    }
+    return words;
+  }
+
+  /** A value as written; of a material its conductivity, or what it is taken from. */
+  private static String text(Node node) {
+    if (node instanceof Node.Scalar scalar) {
+      return scalar.text().strip();
+    }
+    if (node instanceof Node.Sequence several) {
+      List<String> parts = new ArrayList<>();
+      for (Node item : several.items()) {
+        parts.add(text(item));
+      }
+      return "[" + String.join(", ", parts) + "]";
+    }
+    for (String key : List.of("conductivity", "from", "resistance")) {
+      for (Node.Entry entry : ((Node.Mapping) node).entries()) {
+        if (entry.key().text().equals(key)) {
+          return text(entry.value());
+        }
+      }
+    }
+    return "";
   }
 
   /** Puts the values of the variant in place of those of the base case. */

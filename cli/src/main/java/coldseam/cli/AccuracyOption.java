@@ -1,6 +1,8 @@
 package coldseam.cli;
 
+import coldseam.cases.study.Measure;
 import coldseam.solver.detail.Accuracy;
+import java.math.BigDecimal;
 import java.util.List;
 
 /** Reads the value of {@code --accuracy}: {@code L2D=0.02%,psi=0.0002,U=0.1%}, one or more. */
@@ -60,6 +62,38 @@ final class AccuracyOption {
         base.psiWPerMK(),
         base.transmittanceRelative(),
         most);
+  }
+
+  /**
+   * The half-width of one number as {@link #read} takes it.
+   *
+   * @param kind which number; one that can be proved
+   * @param accuracy the accuracy
+   * @return the value of the option
+   */
+  static String written(Measure.Kind kind, Accuracy accuracy) {
+    return switch (kind) {
+      case PSI -> "psi=" + plain(accuracy.psiWPerMK());
+      case U ->
+          "U="
+              + plain(BigDecimal.valueOf(accuracy.transmittanceRelative()).movePointRight(2))
+              + "%";
+      case L2D ->
+          accuracy.couplingRelative() < 1
+              ? "L2D="
+                  + plain(BigDecimal.valueOf(accuracy.couplingRelative()).movePointRight(2))
+                  + "%"
+              : "L2D=" + plain(accuracy.couplingWPerMK());
+      default -> throw new IllegalArgumentException("surface temperatures have no half-width");
+    };
+  }
+
+  private static String plain(double number) {
+    return plain(BigDecimal.valueOf(number));
+  }
+
+  private static String plain(BigDecimal number) {
+    return number.stripTrailingZeros().toPlainString();
   }
 
   private static Accuracy with(Accuracy a, String name, String typed) throws UsageException {

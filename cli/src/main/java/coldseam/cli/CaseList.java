@@ -3,9 +3,11 @@ package coldseam.cli;
 import coldseam.cases.Case;
 import coldseam.cases.CaseException;
 import coldseam.cases.CaseFile;
+import coldseam.cases.Changes;
 import coldseam.cases.Problem;
 import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.DetailException;
+import coldseam.solver.detail.Fault;
 import java.nio.file.InvalidPathException;
 import java.nio.file.Path;
 import java.util.ArrayList;
@@ -126,10 +128,33 @@ final class CaseList {
    * @throws CaseException if the detail is at fault
    */
   static <T> T work(Case from, Optional<String> variant, Work<T> work) throws CaseException {
+    return work(from, variant, Changes.NONE, work);
+  }
+
+  /**
+   * Works on a detail of a changed case; what is at fault in it is told by its place in the file.
+   *
+   * @param from the case
+   * @param variant the variant, empty for the base case
+   * @param changes what is changed in it
+   * @param work what to do
+   * @param <T> what comes out
+   * @return the outcome
+   * @throws CaseException if the changes make no valid case, or the detail is at fault
+   */
+  static <T> T work(Case from, Optional<String> variant, Changes changes, Work<T> work)
+      throws CaseException {
     try {
-      return work.on(from.detail(variant));
+      return work.on(from.detail(variant, changes));
     } catch (DetailException e) {
-      throw new CaseException(e.faults().stream().map(from::locate).toList());
+      String with = changes == Changes.NONE ? "" : "with " + changes.inWords() + ": ";
+      List<Problem> problems = new ArrayList<>();
+      for (Fault fault : e.faults()) {
+        Problem at = from.locate(fault);
+        String wrong = with + at.wrong();
+        problems.add(new Problem(at.file(), at.line(), at.column(), wrong, at.right()));
+      }
+      throw new CaseException(problems);
     }
   }
 }

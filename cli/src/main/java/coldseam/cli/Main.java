@@ -17,7 +17,7 @@ public final class Main {
   static final String VERSION = "0.1.0-SNAPSHOT";
 
   private static final List<String> NAMES =
-      List.of("solve", "check", "draft", "materials", "prove");
+      List.of("solve", "check", "sweep", "seek", "draft", "materials", "prove");
 
   private Main() {}
 
@@ -121,6 +121,8 @@ public final class Main {
       case "solve" -> new SolveCommand();
       case "check" -> new CheckCommand();
       case "draft" -> new DraftCommand();
+      case "sweep" -> new SweepCommand();
+      case "seek" -> new SeekCommand();
       case "materials" -> new MaterialsCommand();
       case "prove" -> new ProveCommand();
       default -> throw unknown(name);

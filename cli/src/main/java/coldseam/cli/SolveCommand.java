@@ -2,7 +2,10 @@ package coldseam.cli;
 
 import coldseam.cases.Case;
 import coldseam.cases.CaseException;
+import coldseam.cases.Changes;
 import coldseam.cases.WindowFile;
+import coldseam.cases.study.Axis;
+import coldseam.cases.study.StudyException;
 import coldseam.cli.exchange.FieldFile;
 import coldseam.cli.plot.NoFontException;
 import coldseam.cli.plot.Plots;
@@ -27,6 +30,7 @@ final class SolveCommand implements Command {
   static final String NAME = "solve";
   static final String VARIANT = "--variant";
   private static final String VARIANTS = "--variants";
+  private static final String SET = "--set";
   private static final String OUT = "--out";
   static final String JSON = "--json";
   private static final String PNG = "--png";
@@ -56,6 +60,12 @@ final class SolveCommand implements Command {
         List.of(
             new Syntax.Option(VARIANT, "NAME", "solve this variant instead of the base case"),
             new Syntax.Option(VARIANTS, "", "solve the base case and every variant"),
+            new Syntax.Option(
+                SET,
+                "NAME=VALUE",
+                "with this named value, or this material in place of a fill; may be repeated. What"
+                    + " is solved then counts as a variant of that name",
+                true),
             new Syntax.Option(
                 OUT,
                 "FOLDER",
@@ -97,7 +107,12 @@ final class SolveCommand implements Command {
 
   /** One case or variant to solve. */
   private record Job(
-      Case from, Subject subject, Accuracy accuracy, Optional<OutputFolder> folder) {}
+      Case from,
+      Optional<String> variant,
+      Changes changes,
+      Subject subject,
+      Accuracy accuracy,
+      Optional<OutputFolder> folder) {}
 
   @Override
   public int run(Syntax.Typed typed, Surroundings here)
@@ -158,13 +173,20 @@ final class SolveCommand implements Command {
       Accuracy accuracy = accuracy(from.accuracy(), typed);
       String shown = here.shown(from.file());
       for (Optional<String> variant : variants) {
-        Optional<OutputFolder> folder = folder(from.file(), variant, typed, here, taken);
+        Changes changes = changes(from, variant, typed);
+        Optional<String> called = called(variant, changes);
+        Optional<OutputFolder> folder = folder(from.file(), called, typed, here, taken);
         if (folder.isPresent()) {
           folder.get().check(names(typed));
         }
         jobs.add(
             new Job(
-                from, Subject.of(from, shown, variant, accuracy, Main.VERSION), accuracy, folder));
+                from,
+                variant,
+                changes,
+                Subject.of(from, shown, called, accuracy, Main.VERSION),
+                accuracy,
+                folder));
       }
     }
     return jobs;
@@ -184,6 +206,36 @@ final class SolveCommand implements Command {
 
   private static List<String> drawings(Syntax.Typed typed) {
     return typed.has(DRAWING) ? List.of(typed.value(DRAWING)) : List.of();
+  }
+
+  private static Changes changes(Case from, Optional<String> variant, Syntax.Typed typed)
+      throws UsageException {
+    if (!typed.has(SET)) {
+      return Changes.NONE;
+    }
+    Map<String, String> values = new LinkedHashMap<>();
+    Map<String, String> fills = new LinkedHashMap<>();
+    for (String set : typed.values(SET)) {
+      try {
+        Axis axis = Axis.read(set, from, variant);
+        if (axis.settings().size() > 1) {
+          throw new UsageException(NAME, "--set takes one value here; sweep takes several");
+        }
+        (axis.fill() ? fills : values).put(axis.name(), axis.settings().get(0));
+      } catch (StudyException e) {
+        throw new UsageException(NAME, e.getMessage());
+      }
+    }
+    return new Changes(values, fills);
+  }
+
+  /** What is solved is called after its variant and what was set. */
+  private static Optional<String> called(Optional<String> variant, Changes changes) {
+    if (changes == Changes.NONE) {
+      return variant;
+    }
+    String set = changes.inWords();
+    return Optional.of(variant.isPresent() ? variant.get() + ", " + set : set);
   }
 
   static Optional<OutputFolder> folder(
@@ -240,13 +292,17 @@ final class SolveCommand implements Command {
   }
 
   private static Result solve(Job job, Syntax.Typed typed, Surroundings here) throws CaseException {
-    Optional<String> variant = job.subject().variant();
     if (!here.errIsTerminal() || typed.has(QUIET)) {
-      return CaseList.work(job.from(), variant, new Solving(job.accuracy(), Progress.SILENT));
+      return solve(job, Progress.SILENT);
     }
     try (ProgressLine progress = new ProgressLine(here.err(), name(job))) {
-      return CaseList.work(job.from(), variant, new Solving(job.accuracy(), progress));
+      return solve(job, progress);
     }
+  }
+
+  private static Result solve(Job job, Progress progress) throws CaseException {
+    Solving solving = new Solving(job.accuracy(), progress);
+    return CaseList.work(job.from(), job.variant(), job.changes(), solving);
   }
 
   record Solving(Accuracy accuracy, Progress progress) implements CaseList.Work<Result> {

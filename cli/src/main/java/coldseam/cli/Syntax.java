@@ -39,8 +39,13 @@ record Syntax(
    * @param name with its two dashes
    * @param value how its value is shown, empty if it has none
    * @param meaning what it does
+   * @param again whether it may be given more than once
    */
-  record Option(String name, String value, String meaning) {}
+  record Option(String name, String value, String meaning, boolean again) {
+    Option(String name, String value, String meaning) {
+      this(name, value, meaning, false);
+    }
+  }
 
   /**
    * A command line worth showing.
@@ -52,10 +57,10 @@ record Syntax(
 
   /** What was typed after the command's name. */
   static final class Typed {
-    private final Map<String, String> options;
+    private final Map<String, List<String>> options;
     private final List<String> operands;
 
-    Typed(Map<String, String> options, List<String> operands) {
+    Typed(Map<String, List<String>> options, List<String> operands) {
       this.options = Map.copyOf(options);
       this.operands = List.copyOf(operands);
     }
@@ -67,7 +72,12 @@ record Syntax(
 
     /** The value of an option that was given. */
     String value(String option) {
-      return options.get(option);
+      return options.get(option).get(0);
+    }
+
+    /** Every value of an option, in the order given; none if it was not given. */
+    List<String> values(String option) {
+      return options.getOrDefault(option, List.of());
     }
 
     /** Everything that is no option. */
@@ -85,7 +95,7 @@ record Syntax(
    * @throws UsageException at the first word that does not fit
    */
   Typed read(List<String> words) throws UsageException {
-    Map<String, String> given = new HashMap<>();
+    Map<String, List<String>> given = new HashMap<>();
     List<String> rest = new ArrayList<>();
     boolean open = true;
     for (int i = 0; i < words.size(); i++) {
@@ -105,9 +115,14 @@ record Syntax(
           }
           value = words.get(i);
         }
-        if (given.put(option.name, value) != null) {
+        List<String> before = given.get(option.name);
+        if (before == null) {
+          before = new ArrayList<>();
+          given.put(option.name, before);
+        } else if (!option.again) {
           throw wrong(option.name + " is given twice");
         }
+        before.add(value);
       } else {
         rest.add(word);
       }

@@ -12,10 +12,10 @@ import java.util.Optional;
  * it, the key beside and below, the safety words at the foot. Its shape follows the drawing's.
  */
 final class Page {
-  private static final double WIDTH = 960;
-  private static final double MARGIN = 28;
-  private static final double INNER = WIDTH - 2 * MARGIN;
-  private static final double GAP = 18;
+  static final double WIDTH = 960;
+  static final double MARGIN = 28;
+  static final double INNER = WIDTH - 2 * MARGIN;
+  static final double GAP = 18;
   private static final double KEY_WIDTH = 238;
   private static final double BESIDE = INNER - KEY_WIDTH - GAP;
   private static final double HIGHEST = 640;
@@ -35,8 +35,8 @@ final class Page {
   private static final double LEAST_ZOOM = 2.5;
 
   private static final int FOOT_COLUMNS = 3;
-  private static final Lettering FOOT = new Lettering(9.5f, false, Palette.SECOND_INK);
-  private static final String SAFETY =
+  static final Lettering FOOT = new Lettering(9.5f, false, Palette.SECOND_INK);
+  static final String SAFETY =
       "Calculated under the stated assumptions. Local codes and a licensed professional decide."
           + " Thermal changes to loadbearing or fire-separating parts need their approval.";
 
