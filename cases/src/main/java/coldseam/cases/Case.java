@@ -16,6 +16,9 @@ public interface Case {
   /** The title typed in it. */
   String title();
 
+  /** What is typed in it for its sheet. */
+  TitleBlock titleBlock();
+
   /** Names of its variants in the order written. */
   List<String> variants();
 

@@ -14,6 +14,7 @@ final class CaseReader {
           "coldseam",
           "title",
           "note",
+          "sheet",
           "unit",
           "view",
           "up",
@@ -86,6 +87,9 @@ final class CaseReader {
     heading.checkVersion();
     String title = heading.title();
     heading.note();
+    Node sheet = top.nodeOrNull("sheet");
+    TitleBlock block =
+        sheet == null ? TitleBlock.EMPTY : new TitleBlockReader(problems).read(sheet);
     LengthUnit unit = heading.unit();
     List<Node.Entry> values = heading.values();
     List<Variant> variants = variants(top, values);
@@ -115,6 +119,7 @@ final class CaseReader {
         reader.accuracy(),
         reader.expectations(),
         cost,
+        block,
         new Rereading(file, chain, others, top, unit, values, variants, drawings));
   }
 

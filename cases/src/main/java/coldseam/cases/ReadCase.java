@@ -22,6 +22,7 @@ final class ReadCase implements Case {
   private final Accuracy accuracy;
   private final List<Expectation> expectations;
   private final Optional<String> cost;
+  private final TitleBlock titleBlock;
   private final Rereading again;
 
   private ReadCase(
@@ -29,6 +30,7 @@ final class ReadCase implements Case {
       Accuracy accuracy,
       List<Expectation> expectations,
       Optional<String> cost,
+      TitleBlock titleBlock,
       Rereading again) {
     this.file = from.file;
     this.title = from.title;
@@ -40,6 +42,7 @@ final class ReadCase implements Case {
     this.accuracy = accuracy;
     this.expectations = List.copyOf(expectations);
     this.cost = cost;
+    this.titleBlock = titleBlock;
     this.again = again;
   }
 
@@ -76,8 +79,12 @@ final class ReadCase implements Case {
     }
 
     ReadCase build(
-        Accuracy accuracy, List<Expectation> expectations, Optional<String> cost, Rereading again) {
-      return new ReadCase(this, accuracy, expectations, cost, again);
+        Accuracy accuracy,
+        List<Expectation> expectations,
+        Optional<String> cost,
+        TitleBlock titleBlock,
+        Rereading again) {
+      return new ReadCase(this, accuracy, expectations, cost, titleBlock, again);
     }
   }
 
@@ -89,6 +96,11 @@ final class ReadCase implements Case {
   @Override
   public String title() {
     return title;
+  }
+
+  @Override
+  public TitleBlock titleBlock() {
+    return titleBlock;
   }
 
   @Override
