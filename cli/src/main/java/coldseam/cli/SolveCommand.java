@@ -37,6 +37,7 @@ final class SolveCommand implements Command {
   private static final String VTU = "--vtu";
   private static final String FIELD = "field.vtu";
   private static final String NO_PLOTS = "--no-plots";
+  private static final String SHEET = "--sheet";
   private static final String ACCURACY = "--accuracy";
   private static final String MOST_UNKNOWNS = "--most-unknowns";
   private static final String DRAWING = "--drawing";
@@ -80,7 +81,12 @@ final class SolveCommand implements Command {
                 VTU,
                 "",
                 "write temperatures and heat flow as " + FIELD + " too, for viewers of VTK files"),
-            new Syntax.Option(NO_PLOTS, "", "write data only"),
+            new Syntax.Option(NO_PLOTS, "", "write no plots"),
+            new Syntax.Option(
+                SHEET,
+                "",
+                "write sheet.html too: all of it on one page for the project's file, with the"
+                    + " title block of the case; it needs no network"),
             new Syntax.Option(
                 ACCURACY,
                 "LIST",
@@ -112,7 +118,8 @@ final class SolveCommand implements Command {
       Changes changes,
       Subject subject,
       Accuracy accuracy,
-      Optional<OutputFolder> folder) {}
+      Optional<OutputFolder> folder,
+      Optional<SheetFiles> sheet) {}
 
   @Override
   public int run(Syntax.Typed typed, Surroundings here)
@@ -149,7 +156,7 @@ final class SolveCommand implements Command {
     if (typed.has(PNG) && typed.has(NO_PLOTS)) {
       throw new UsageException(NAME, "--png and --no-plots exclude each other");
     }
-    if ((typed.has(PNG) || typed.has(VTU)) && typed.has(JSON) && !typed.has(OUT)) {
+    if ((typed.has(PNG) || typed.has(VTU) || sheet(typed)) && typed.has(JSON) && !typed.has(OUT)) {
       throw new UsageException(NAME, "--json writes no files unless --out says where: add --out");
     }
   }
@@ -179,17 +186,17 @@ final class SolveCommand implements Command {
         if (folder.isPresent()) {
           folder.get().check(names(typed));
         }
-        jobs.add(
-            new Job(
-                from,
-                variant,
-                changes,
-                Subject.of(from, shown, called, accuracy, Main.VERSION),
-                accuracy,
-                folder));
+        Subject subject = Subject.of(from, shown, called, accuracy, Main.VERSION);
+        Optional<SheetFiles> sheet =
+            sheet(typed) ? Optional.of(SheetFiles.of(from, subject, here)) : Optional.empty();
+        jobs.add(new Job(from, variant, changes, subject, accuracy, folder, sheet));
       }
     }
     return jobs;
+  }
+
+  private static boolean sheet(Syntax.Typed typed) {
+    return typed.has(SHEET);
   }
 
   /** The accuracy of a case, changed by what was typed. */
@@ -305,6 +312,13 @@ final class SolveCommand implements Command {
     return CaseList.work(job.from(), job.variant(), job.changes(), solving);
   }
 
+  private static final class Inspecting implements CaseList.Work<Solver.Inspection> {
+    @Override
+    public Solver.Inspection on(Detail detail) {
+      return Solver.inspect(detail);
+    }
+  }
+
   record Solving(Accuracy accuracy, Progress progress) implements CaseList.Work<Result> {
     @Override
     public Result on(Detail detail) {
@@ -320,7 +334,7 @@ final class SolveCommand implements Command {
 
   private static int conclude(
       Job job, Result result, Syntax.Typed typed, Surroundings here, boolean first)
-      throws UsageException {
+      throws UsageException, CaseException {
     if (job.folder().isPresent()) {
       write(job.folder().get(), files(job, result, typed));
     }
@@ -390,17 +404,21 @@ final class SolveCommand implements Command {
         names.add(kind.stem() + ".png");
       }
     }
+    if (typed.has(SHEET)) {
+      names.add(SheetFiles.PAGE);
+    }
     return names;
   }
 
   private static Map<String, byte[]> files(Job job, Result result, Syntax.Typed typed)
-      throws UsageException {
+      throws UsageException, CaseException {
     Plots plots =
         Plots.of(
             result,
             new Plots.Caption(
                 job.subject().variant(), job.from().unit(), job.from().metresPerUnit()));
-    Plots.Begun begun = plots.begin(typed.has(NO_PLOTS) ? List.of() : PLOTS);
+    boolean drawn = !typed.has(NO_PLOTS);
+    Plots.Begun begun = plots.begin(drawn || typed.has(SHEET) ? PLOTS : List.of());
     Map<String, byte[]> files = new LinkedHashMap<>();
     files.put("result.json", bytes(Sheet.json(job.subject(), result, true) + "\n"));
     files.put("result.csv", bytes(Sheet.csv(job.subject(), result)));
@@ -408,13 +426,22 @@ final class SolveCommand implements Command {
       files.put(FIELD, bytes(FieldFile.vtu(job.subject().title(), result, Main.VERSION)));
     }
     try {
-      for (Map.Entry<Plots.Kind, String> svg : begun.finish().entrySet()) {
-        files.put(svg.getKey().stem() + ".svg", bytes(svg.getValue()));
+      Map<Plots.Kind, String> svgs = begun.finish();
+      if (drawn) {
+        for (Map.Entry<Plots.Kind, String> svg : svgs.entrySet()) {
+          files.put(svg.getKey().stem() + ".svg", bytes(svg.getValue()));
+        }
       }
       for (Plots.Kind kind : PLOTS) {
         if (typed.has(PNG)) {
           files.put(kind.stem() + ".png", plots.png(kind));
         }
+      }
+      if (typed.has(SHEET)) {
+        Solver.Inspection inspection =
+            CaseList.work(job.from(), job.variant(), job.changes(), new Inspecting());
+        String page = job.sheet().get().page(result, inspection, plots, svgs);
+        files.put(SheetFiles.PAGE, bytes(page));
       }
     } catch (NoFontException e) {
       throw new UsageException(NAME, e.getMessage());

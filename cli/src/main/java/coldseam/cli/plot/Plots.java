@@ -1,8 +1,11 @@
 package coldseam.cli.plot;
 
+import coldseam.cli.text.Json;
+import coldseam.solver.conduction.Solution;
 import coldseam.solver.result.Result;
 import java.util.ArrayList;
 import java.util.Collections;
+import java.util.IdentityHashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -188,6 +191,34 @@ public final class Plots {
     PngCanvas canvas = PngCanvas.blank(page.width(), page.height());
     view.draw(canvas, page);
     return canvas.bytes();
+  }
+
+  /**
+   * Temperature, heat flow and material on grids over the section, as a JSON object: what a page
+   * shows under a pointer. The temperature plot has those with the films for surface temperatures,
+   * if they were solved, all others those with the films for heat loss.
+   *
+   * @param kinds which plots
+   * @return the object on one line
+   */
+  public String soundings(List<Kind> kinds) {
+    View first = view(kinds.get(0));
+    Soundings soundings = new Soundings(first.figures(), section);
+    Map<Solution, Integer> taken = new IdentityHashMap<>();
+    Json plots = Json.onOneLine().array();
+    for (Kind kind : kinds) {
+      View view = view(kind);
+      Page page = view.page();
+      Solution solution =
+          kind == Kind.TEMPERATURE ? result.surface().orElse(result.heatLoss()) : result.heatLoss();
+      if (!taken.containsKey(solution)) {
+        taken.put(solution, soundings.take(solution, first.temperaturesC(), page));
+      }
+      soundings.write(plots, kind.stem(), page, taken.get(solution));
+    }
+    Json all = Json.onOneLine().object();
+    soundings.write(all);
+    return all.raw("plots", plots.endArray().text()).endObject().text();
   }
 
   private View view(Kind kind) {

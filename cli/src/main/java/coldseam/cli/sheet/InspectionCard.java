@@ -34,13 +34,18 @@ final class InspectionCard {
 
   void write() {
     TextCard.title(text, subject);
-    fills();
-    spaces();
-    outline();
+    given();
     TextCard.flanks(text, inspection.flanks(), ink);
     wanted();
     TextCard.assumptions(text, inspection.assumptions(), List.of());
     TextCard.warnings(text, inspection.warnings());
+  }
+
+  /** Materials, spaces and outline. */
+  void given() {
+    fills();
+    spaces();
+    outline();
   }
 
   private void fills() {
@@ -123,7 +128,8 @@ final class InspectionCard {
     text.table(table);
   }
 
-  private void wanted() {
+  /** What is asked for. */
+  void wanted() {
     text.heading("Wanted", "beside couplings, heat flows and coldest surfaces");
     Table table = new Table("ll", 2, TextCard.PAGE).named("quantity", "how");
     for (Wanted wanted : detail.wanted()) {

@@ -51,6 +51,27 @@ public final class Sheet {
   }
 
   /**
+   * The sheet for the file as one page of HTML, nothing fetched from elsewhere.
+   *
+   * @param subject what it is about
+   * @param result the result
+   * @param inspection what was understood of the case
+   * @param provenance title block and sources
+   * @param pictures the plots as SVG elements, in order
+   * @param soundings what stands under each place of them, as a JSON object
+   * @return the page
+   */
+  public static String page(
+      Subject subject,
+      Result result,
+      Solver.Inspection inspection,
+      Provenance provenance,
+      List<Picture> pictures,
+      String soundings) {
+    return new HtmlSheet(subject, result, inspection, provenance).forScreen(pictures, soundings);
+  }
+
+  /**
    * The card of a window.
    *
    * @param of the window and its U_w

@@ -43,6 +43,14 @@ final class TextCard {
 
   void write() {
     title(text, subject);
+    results();
+    basis();
+    warnings(text, result.warnings());
+    foot();
+  }
+
+  /** The numbers and what they are made of. */
+  void results() {
     numbers();
     accounts();
     new FlowSection(result, units, ink).write(text);
@@ -50,14 +58,16 @@ final class TextCard {
     new SurfaceSection(result, units, ink).write(text);
     new MoistureSection(result, units, ink).write(text);
     new RequiredSection(result, ink).write(text);
+  }
+
+  /** What the numbers rest on. */
+  void basis() {
     flanks(text, result.flanks(), ink);
     CavitySection cavities = new CavitySection(result.cavities());
     cavities.write(text, units, ink);
     List<String> shown = names(result.flanks());
     shown.addAll(cavities.names());
     assumptions(text, result.assumptions(), shown);
-    warnings(text, result.warnings());
-    foot();
   }
 
   static void title(Manuscript text, Subject subject) {
@@ -439,21 +449,23 @@ final class TextCard {
     for (double ms : result.timesMs().values()) {
       seconds += ms / 1000;
     }
+    text.foot(
+        size(result) + ", " + Digits.significant(seconds, 2) + " s",
+        Words.SAFETY,
+        "Coldseam " + subject.version());
+  }
+
+  /** How fine the mesh is, and how exactly it follows the drawing. */
+  static String size(Result result) {
     double movedMm = result.largestDisplacementM() * 1000;
     String moved = movedMm > 0 ? Digits.shortest(movedMm, 6) : "0";
     String films = result.surface().isPresent() ? " (films for heat loss)" : "";
-    text.foot(
-        Digits.grouped(result.triangles())
-            + " triangles, "
-            + Digits.grouped(result.unknowns())
-            + " unknowns"
-            + films
-            + (moved.equals("0") ? "" : ", drawing moved by at most " + moved + " mm")
-            + ", "
-            + Digits.significant(seconds, 2)
-            + " s",
-        Words.SAFETY,
-        "Coldseam " + subject.version());
+    return Digits.grouped(result.triangles())
+        + " triangles, "
+        + Digits.grouped(result.unknowns())
+        + " unknowns"
+        + films
+        + (moved.equals("0") ? "" : ", drawing moved by at most " + moved + " mm");
   }
 
   /** The films of a set, as a note. */

@@ -95,6 +95,13 @@ public final class Json {
     return this;
   }
 
+  /** A member that is JSON already. */
+  public Json raw(String name, String json) {
+    name(name);
+    text.append(json);
+    return this;
+  }
+
   /** A member that is an array of texts, on one line. */
   public Json member(String name, List<String> values) {
     name(name);
