@@ -49,7 +49,11 @@ final class SimpleYaml {
   static Optional<Node> read(String text, int deepest, int mostNodes) {
     for (int i = 0; i < text.length(); i++) {
       char c = text.charAt(i);
-      if (c < ' ' && c != '\n' || c >= 0x7F && c < 0xA0 || c >= 0x2028 && !Character.isLetter(c)) {
+      if (c < ' ' && c != '\n'
+          || c >= 0x7F && c < 0xA0
+          || c >= 0xD800
+          || c == 0x2028
+          || c == 0x2029) {
         return Optional.empty();
       }
     }

@@ -48,9 +48,16 @@ class SimpleYamlTest {
     assertAgreement(text);
   }
 
-  @ParameterizedTest
-  @MethodSource("samples")
-  void agrees_or_steps_back_after_random_changes(Path file) throws IOException {
+  @Test
+  void agrees_or_steps_back_after_random_changes() throws IOException {
+    int read = 0;
+    for (Path file : samples()) {
+      read += readAfterChanges(file);
+    }
+    assertThat(read).isGreaterThan(samples().size() * CHANGES / 20);
+  }
+
+  private static int readAfterChanges(Path file) throws IOException {
     String original = Files.readString(file);
     Random random = new Random(SEED);
     int read = 0;
@@ -72,7 +79,7 @@ class SimpleYamlTest {
       read += simple(text.toString()).isPresent() ? 1 : 0;
       assertAgreement(text.toString());
     }
-    assertThat(read).isPositive();
+    return read;
   }
 
   @ParameterizedTest
