@@ -112,6 +112,7 @@ public final class Solver {
     times.ended("heat loss");
 
     Optional<Solution> surface = Optional.empty();
+    List<String> doubts = new ArrayList<>();
     if (shared) {
       surface = Optional.of(heatLoss);
     } else if (surfaceNeeded) {
@@ -119,7 +120,7 @@ public final class Solver {
           Optional.of(
               Conduction.solveNext(
                   heatLoss,
-                  agreed.resolved().surfaceAgreeing(accuracy, heatLoss),
+                  agreed.resolved().surfaceAgreeing(accuracy, heatLoss, doubts),
                   new Conduction.Goal(
                       accuracy,
                       false,
@@ -132,7 +133,7 @@ public final class Solver {
 
     List<Cavity> cavities =
         agreed.cavities().isPresent() ? agreed.cavities().get().cavities() : List.of();
-    return plan.result(heatLoss, surface, others, cavities, times);
+    return plan.result(heatLoss, surface, others, cavities, doubts, times);
   }
 
   private static Result between(SlightLayers slight, Accuracy accuracy, Progress progress) {
@@ -340,35 +341,62 @@ public final class Solver {
       if (cavities.isEmpty()) {
         return new Agreed(this, solution, cavities);
       }
-      double tolerance = Cavities.tolerance(goal.accuracy().couplingRelative());
+      double tolerance = Cavities.tolerance(share(goal, solution));
       Cavities after = cavities.get().after(solution, tolerance, plan::temperatures);
       if (after.settled()) {
         Resolved resolved = after.found() ? with(after, solution) : this;
         return new Agreed(resolved, solution, Optional.of(after));
       }
       if (after.passes() >= Cavities.MOST_PASSES) {
-        return new Agreed(this, Conduction.unproved(solution, after.unsettled()), cavities);
+        return new Agreed(
+            this,
+            Conduction.unproved(solution, after.unsettled()),
+            Optional.of(after.as(cavities.get())));
       }
       return settled(after, solution, tolerance).solve(goal, progress);
     }
 
+    /** The smallest half-width asked of a coupling as a part of the largest L2D. */
+    private double share(Conduction.Goal goal, Solution solution) {
+      double largest = 0;
+      for (int i = 0; i < drawn.spaces().size(); i++) {
+        largest = Math.max(largest, Math.abs(solution.matrix(i, i)));
+      }
+      double asked = goal.accuracy().couplingWPerMK();
+      if (goal.psiAsked()) {
+        asked = Math.min(asked, goal.accuracy().psiWPerMK());
+      }
+      double share = goal.accuracy().couplingRelative();
+      if (goal.transmittanceAsked()) {
+        share = Math.min(share, goal.accuracy().transmittanceRelative());
+      }
+      return largest > 0 && largest < Double.POSITIVE_INFINITY
+          ? Math.min(share, asked / largest)
+          : share;
+    }
+
     /**
-     * Conditions for surface temperatures, with conductivities of cavities that agree with them.
+     * Conditions for surface temperatures, with conductivities of cavities that agree with them; if
+     * they do not, that is a doubt.
      */
-    Conditions surfaceAgreeing(Accuracy accuracy, Solution heatLossSolution) {
+    Conditions surfaceAgreeing(Accuracy accuracy, Solution heatLossSolution, List<String> doubts) {
       if (cavities.isEmpty() || !cavities.get().found()) {
         return surface;
       }
       double[] temperatures = plan.temperatures(heatLossSolution);
-      return cavities
-          .get()
-          .restarted()
-          .settledNear(
-              heatLossSolution,
-              surface,
-              Cavities.tolerance(accuracy.couplingRelative()),
-              solution -> temperatures.clone())
-          .in(surface);
+      Cavities agreeing =
+          cavities
+              .get()
+              .restarted()
+              .settledNear(
+                  heatLossSolution,
+                  surface,
+                  Cavities.tolerance(accuracy.couplingRelative()),
+                  solution -> temperatures.clone());
+      if (!agreeing.settled()) {
+        doubts.add("with the films for surface temperatures, " + agreeing.unsettled());
+      }
+      return agreeing.in(surface);
     }
 
     Conduction.Goal goal(Accuracy accuracy, boolean psi, Conduction.Temperatures temperatures) {

@@ -49,7 +49,8 @@ final class SharesView extends View {
   SharesView(Result result, Caption caption, DrawnSection section) {
     super(result, caption, section);
     looks = MaterialLook.of(section.fills());
-    psi = result.psi().subList(0, Math.min(MOST_PSI, result.psi().size()));
+    List<Result.LinearTransmittance> known = result.psiWithSensitivities();
+    psi = known.subList(0, Math.min(MOST_PSI, known.size()));
     List<Result.Share> shares = result.shares().parts();
     int shown = shares.size() > MOST_ROWS ? MOST_ROWS - 1 : shares.size();
     double rest = 0;

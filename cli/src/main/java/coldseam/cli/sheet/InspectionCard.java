@@ -148,7 +148,9 @@ final class InspectionCard {
         table.row("U " + u.of(), Words.between(u.warm(), u.cold()) + width);
       } else if (wanted instanceof Wanted.Frame frame) {
         table.row("U frame", Words.between(frame.warm(), frame.cold()) + ", with a panel");
-        table.row("ψ glass edge", "if the glazing is drawn");
+        if (frame.panelRun().isPresent()) {
+          table.row("ψ glass edge", Words.between(frame.warm(), frame.cold()) + ", as drawn");
+        }
       } else if (wanted instanceof Wanted.Temperature point) {
         table.row(
             "point " + point.name(),

@@ -23,8 +23,8 @@ record ShareSection(Result result, Units units, Ink ink) {
       return;
     }
     text.heading("Shares", "of " + result.shares().referTo() + "; films for heat loss");
-    List<Result.LinearTransmittance> psi =
-        result.psi().subList(0, Math.min(MOST_PSI, result.psi().size()));
+    List<Result.LinearTransmittance> psi = result.psiWithSensitivities();
+    psi = psi.subList(0, Math.min(MOST_PSI, psi.size()));
     Table table = new Table("lrr" + "r".repeat(psi.size()), 2, TextCard.PAGE);
     head(table, psi);
     int shown = shares.size() > MOST_ROWS ? MOST_ROWS - 1 : shares.size();

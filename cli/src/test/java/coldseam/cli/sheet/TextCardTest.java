@@ -4,7 +4,10 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.data.Offset.offset;
 
 import coldseam.cli.text.Ink;
+import coldseam.cli.text.TerminalText;
+import coldseam.solver.air.Cavity;
 import coldseam.solver.detail.Accuracy;
+import java.util.List;
 import java.util.Optional;
 import org.junit.jupiter.api.Test;
 
@@ -54,6 +57,39 @@ class TextCardTest {
         .contains(
             "  indoors  coldest  13.12 ± 0.01 °C  f_Rsi 0.725  Rs 0.25,  surface films  at (0, −200)\n")
         .contains("  A  11.23 °C  heat-loss films  at (123.4, −500)\n");
+  }
+
+  /** Cavities that did not settle are not said to have. */
+  @Test
+  void what_did_not_settle_says_so() {
+    Cavity drawn = Samples.estimated().cavities().get(0);
+    Cavity.Counted as = drawn.counted().orElseThrow();
+    Cavity unsettled =
+        new Cavity(
+            drawn.name(),
+            drawn.fill(),
+            drawn.at(),
+            drawn.areaM2(),
+            drawn.rule(),
+            drawn.ventilation(),
+            drawn.slitM(),
+            drawn.space(),
+            Optional.of(
+                new Cavity.Counted(
+                    as.box(),
+                    as.direction(),
+                    as.emissivities(),
+                    as.conductivityWPerMK(),
+                    as.form(),
+                    as.temperatures(),
+                    as.stated(),
+                    as.differenceK(),
+                    as.meanC(),
+                    12,
+                    false)));
+    TerminalText text = new TerminalText(Ink.NONE, TextCard.PAGE);
+    new CavitySection(List.of(unsettled)).write(text, Units.of(Samples.subject()), Ink.NONE);
+    assertThat(text.text()).contains("Not settled in 12 passes: nothing is certified");
   }
 
   @Test

@@ -188,7 +188,7 @@ public final class Cavities {
   /**
    * The relative change of a conductivity that counts as none.
    *
-   * @param couplingRelative relative accuracy asked of L2D
+   * @param couplingRelative accuracy asked of L2D, relative to it
    */
   public static double tolerance(double couplingRelative) {
     return Math.min(TOLERANCE, PART_OF_ACCURACY * couplingRelative);
@@ -231,6 +231,11 @@ public final class Cavities {
       Solution solution, double tolerance, Function<Solution, double[]> temperaturesC) {
     Settled next = settling.step(state, readings(solution, temperaturesC), tolerance);
     return with(next.settled() ? next.keeping(state.conductivityWPerMK()) : next);
+  }
+
+  /** What was found out after a solution, with the conductivities that it was made with. */
+  public Cavities as(Cavities solved) {
+    return with(state.keeping(solved.state.conductivityWPerMK()));
   }
 
   /** The same cavities with passes counted from 0. */

@@ -66,7 +66,7 @@ public final class Interpolation {
     List<Assumption> assumptions = new ArrayList<>();
     for (Assumption line : well.assumptions()) {
       if (!ofLayer(line, layers)) {
-        assumptions.add(line);
+        assumptions.add(ofFlank(line));
       }
     }
     assumptions.add(
@@ -80,8 +80,8 @@ public final class Interpolation {
             SOURCE));
     List<String> warnings = new ArrayList<>(well.warnings());
     warnings.add(
-        "air layers are slightly ventilated: L2D, U and ψ lie between those with the layers"
-            + " unventilated and well ventilated; temperatures, heat flows and shares are those with"
+        "air layers are slightly ventilated: L2D, U, ψ and U of flanks lie between those with the"
+            + " layers unventilated and well ventilated; temperatures, heat flows and shares are those with"
             + " the layers well ventilated");
     Map<String, Double> times = new LinkedHashMap<>(unventilated.timesMs());
     for (Map.Entry<String, Double> stage : well.timesMs().entrySet()) {
@@ -99,7 +99,7 @@ public final class Interpolation {
         well.profiles(),
         well.shares(),
         well.weights(),
-        well.flanks(),
+        flanks(),
         cavities(layers),
         well.moisture(),
         new Requirements(well.detail())
@@ -168,6 +168,53 @@ public final class Interpolation {
         List.of(),
         List.of(),
         Optional.empty());
+  }
+
+  /** Flanks by U between the two, with layers and lengths as they are unventilated. */
+  private List<Result.FlankResult> flanks() {
+    List<Result.FlankResult> all = new ArrayList<>();
+    for (Result.FlankResult of : well.flanks()) {
+      Result.FlankResult flank = of;
+      for (Result.FlankResult one : unventilated.flanks()) {
+        if (one.name().equals(of.name())) {
+          flank =
+              new Result.FlankResult(
+                  one.name(),
+                  between(one.uWPerM2K(), of.uWPerM2K()),
+                  one.warm(),
+                  one.cold(),
+                  one.cutStart(),
+                  one.cutEnd(),
+                  one.layers(),
+                  one.lengthM());
+        }
+      }
+      all.add(flank);
+    }
+    return all;
+  }
+
+  /** The line on the U of a flank says between which two it lies; any other stays. */
+  private Assumption ofFlank(Assumption line) {
+    for (Result.FlankResult flank : flanks()) {
+      if (!line.what().equals(Result.FlankResult.assumption(flank.name()))) {
+        continue;
+      }
+      for (Assumption other : unventilated.assumptions()) {
+        if (other.what().equals(line.what()) && !other.value().equals(line.value())) {
+          return new Assumption(
+              line.what(),
+              Wording.figure(flank.uWPerM2K().mid())
+                  + " W/(m²·K), between "
+                  + other.value()
+                  + " (unventilated) and "
+                  + line.value()
+                  + " (well ventilated)",
+              line.source());
+        }
+      }
+    }
+    return line;
   }
 
   private Result.Subtracted between(

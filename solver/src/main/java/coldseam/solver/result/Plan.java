@@ -327,6 +327,7 @@ public final class Plan {
    *     empty if not {@link #surfaceNeeded()}
    * @param others L2D of each detail that a ψ subtracts
    * @param cavities every air cavity
+   * @param doubts warnings that come of the solutions
    * @param timesMs milliseconds by stage, in the order run; asked for last
    * @return the result
    */
@@ -335,6 +336,7 @@ public final class Plan {
       Optional<Solution> surfaceSolution,
       Map<Subtraction.OfDetail, OtherCoupling> others,
       List<Cavity> cavities,
+      List<String> doubts,
       Supplier<Map<String, Double>> timesMs) {
     Couplings couplings = new Couplings(detail, heatLossSolution);
     double[] temperatures = couplings.temperatures();
@@ -349,6 +351,7 @@ public final class Plan {
     Balances balances = new Balances(detail, heatLossSolution, temperatures);
     Profiles profiles = new Profiles(detail, sets);
     List<String> allWarnings = new ArrayList<>(warnings);
+    allWarnings.addAll(doubts);
     if (!module && !frames.any()) {
       allWarnings.addAll(cutOffs.profiles(lossFields, temperatures));
     }
@@ -404,7 +407,7 @@ public final class Plan {
       if (!flank.typedU() && flank.uWPerM2K().isPresent()) {
         all.add(
             new Assumption(
-                "U of flank '" + flank.name() + "'",
+                Result.FlankResult.assumption(flank.name()),
                 Wording.figure(flank.uWPerM2K().get().mid())
                     + " W/(m²·K): "
                     + String.join(", ", flank.layerWords()),

@@ -11,6 +11,7 @@ import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.DimensionSystem;
 import coldseam.solver.detail.FilmSet;
 import coldseam.solver.detail.Wanted;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -72,6 +73,16 @@ public record Result(
     int triangles,
     int unknowns,
     Map<String, Double> timesMs) {
+  /** The ψ of which it is known what they hang on; of interpolated ones it is not. */
+  public List<LinearTransmittance> psiWithSensitivities() {
+    List<LinearTransmittance> known = new ArrayList<>(psi.size());
+    for (LinearTransmittance one : psi) {
+      if (!one.sensitivities().isEmpty()) {
+        known.add(one);
+      }
+    }
+    return known;
+  }
 
   /**
    * L2D of a pair.
@@ -328,7 +339,12 @@ public record Result(
       Optional<Point> cutStart,
       Optional<Point> cutEnd,
       List<String> layers,
-      Map<DimensionSystem, Length> lengthM) {}
+      Map<DimensionSystem, Length> lengthM) {
+    /** What the assumption on the U of a flank is called. */
+    static String assumption(String name) {
+      return "U of flank '" + name + "'";
+    }
+  }
 
   /**
    * A reference length and the line it was measured along.

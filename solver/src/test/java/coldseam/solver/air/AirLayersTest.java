@@ -220,6 +220,15 @@ class AirLayersTest {
             });
     // a plain wall has no ψ: flanks are interpolated alike
     assertThat(result.psi().get(0).valueWPerMK().value()).isCloseTo(0, within(1e-6));
+    assertThat(result.psiWithSensitivities()).isEmpty();
+    for (Result.FlankResult flank : result.flanks()) {
+      assertThat(flank.uWPerM2K().mid()).isCloseTo(1 / expected, within(1e-9));
+      assertThat(flank.layers()).hasSize(4);
+      assertThat(result.assumptions())
+          .filteredOn(line -> line.what().equals("U of flank '" + flank.name() + "'"))
+          .singleElement()
+          .satisfies(line -> assertThat(line.value()).contains("well ventilated"));
+    }
     assertThat(result.couplings().get(0).valueWPerMK().value())
         .isCloseTo(1 / expected, within(1e-5));
     assertThat(result.assumptions())

@@ -15,6 +15,7 @@ import coldseam.solver.cavity.RadiationForm;
 import coldseam.solver.cavity.Ventilation;
 import coldseam.solver.conduction.Certificate;
 import coldseam.solver.conduction.Progress;
+import coldseam.solver.conduction.Quantity;
 import coldseam.solver.detail.Accuracy;
 import coldseam.solver.detail.AirCavity;
 import coldseam.solver.detail.AirCavity.Rule;
@@ -284,6 +285,25 @@ class FrameCavitiesTest {
         .isInstanceOfSatisfying(
             Certificate.NotCertified.class,
             not -> assertThat(not.reason()).contains("did not settle in 12 passes"));
+    assertThat(counted(result, 0).settled()).isFalse();
+    assertThat(counted(result, 0).passes()).isEqualTo(12);
+  }
+
+  /** An accuracy in W/(m·K) asks as much of the conductivities as the same one as a share. */
+  @Test
+  void an_absolute_accuracy_settles_conductivities_as_closely() {
+    DrawnDetail drawn = block().box(air(Temperatures.FOUND, Optional.empty()), 40, 20, 60, 60);
+    double absolute = 1e-6;
+    Quantity closely =
+        Solver.solve(drawn.detail(), new Accuracy(1e-7, 1, 1, 1, 2_000_000), Progress.SILENT)
+            .couplings()
+            .get(0)
+            .valueWPerMK();
+    Result asked =
+        Solver.solve(drawn.detail(), new Accuracy(10, absolute, 1, 1, 2_000_000), Progress.SILENT);
+    assertThat(counted(asked, 0).settled()).isTrue();
+    assertThat(asked.couplings().get(0).valueWPerMK().value())
+        .isCloseTo(closely.value(), within(absolute));
   }
 
   /** However obliquely heat flows, the directions of the boxes come to rest. */
