@@ -28,6 +28,8 @@ record Dimension(int metre, int watt, int kelvin, int second, int degree, Kind k
   static final Dimension TEMPERATURE = new Dimension(0, 0, 1, 0, 0, Kind.LEVEL);
   static final Dimension TEMPERATURE_DIFFERENCE = of(0, 0, 1, 0, 0);
   static final Dimension LENGTH = of(1, 0, 0, 0, 0);
+  static final Dimension AREA = of(2, 0, 0, 0, 0);
+  static final Dimension VOLUME = of(3, 0, 0, 0, 0);
   static final Dimension ANGLE = of(0, 0, 0, 0, 1);
   static final Dimension CONDUCTIVITY = of(-1, 1, -1, 0, 0);
   static final Dimension RESISTIVITY = of(1, -1, 1, 0, 0);
@@ -91,6 +93,8 @@ record Dimension(int metre, int watt, int kelvin, int second, int degree, Kind k
       TEMPERATURE,
       TEMPERATURE_DIFFERENCE,
       LENGTH,
+      AREA,
+      VOLUME,
       ANGLE,
       CONDUCTIVITY,
       RESISTIVITY,
@@ -106,6 +110,8 @@ record Dimension(int metre, int watt, int kelvin, int second, int degree, Kind k
       "a temperature",
       "a difference of temperatures",
       "a length",
+      "an area",
+      "a volume",
       "an angle",
       "a thermal conductivity",
       "a thermal resistivity",

@@ -51,6 +51,30 @@ final class FileText {
     return decoded(file, bytes);
   }
 
+  /**
+   * Whether a line of a file begins with a key, which tells what kind of file it is.
+   *
+   * @param file the file
+   * @param key the key with its colon
+   * @return false also if it cannot be read
+   */
+  static boolean begins(Path file, String key) {
+    String text;
+    try {
+      if (!Files.isRegularFile(file) || Files.size(file) > MOST_BYTES) {
+        return false;
+      }
+      text = new String(Files.readAllBytes(file), StandardCharsets.UTF_8);
+    } catch (IOException e) {
+      return false;
+    }
+    int at = text.indexOf(key);
+    while (at > 0 && text.charAt(at - 1) != '\n') {
+      at = text.indexOf(key, at + 1);
+    }
+    return at >= 0;
+  }
+
   private static String decoded(Path file, byte[] bytes) throws CaseException {
     CharsetDecoder decoder =
         StandardCharsets.UTF_8

@@ -4,7 +4,7 @@ package coldseam.cases;
  * What kind of number a place in a case wants, and what it may be. Limits stand in SI, °C and
  * degrees; they keep nonsense and overflow out and leave everything that is built far inside.
  */
-enum Place {
+public enum Place {
   /** A coordinate or a displacement. */
   COORDINATE(Dimension.LENGTH, "m", -1e6, 1e6, "a length of at most 1000 km, e.g. `160 mm`"),
   /** The size of something drawn; thinner than the resolution it would vanish. */
@@ -63,7 +63,49 @@ enum Place {
   /** How much larger the thing is than its drawing. */
   SCALE(Dimension.BARE, "", 1e-6, 1e6, "a number more than 0, e.g. `10` of a drawing 1:10"),
   /** How many. */
-  COUNT(Dimension.BARE, "", 1, 100_000, "a whole number, 1 or more");
+  COUNT(Dimension.BARE, "", 1, 100_000, "a whole number, 1 or more"),
+  /** A of a building's element. */
+  AREA(Dimension.AREA, "m2", 0, 1e7, "an area in m2, 0 or more, e.g. `142`"),
+  /** V of a building. */
+  VOLUME(Dimension.VOLUME, "m3", 0, 1e8, "a volume in m3, 0 or more, e.g. `232`"),
+  /** Thickness of a layer where bare lengths count in metres. */
+  THICKNESS(Dimension.LENGTH, "m", 1e-6, 10, "a thickness of up to 10 m, e.g. `160 mm`"),
+  /** χ, or H of something. */
+  POINT_TRANSMITTANCE(Dimension.CONDUCTANCE, "W/K", -1e6, 1e6, "a number in W/K, e.g. `0.02`"),
+  /** H of something that cannot gain heat. */
+  HEAT_TRANSFER(Dimension.CONDUCTANCE, "W/K", 0, 1e7, "0 or more W/K, e.g. `43`"),
+  /** How many, fractions too. */
+  NUMBER(Dimension.BARE, "", 0, 1e7, "a number, 0 or more, e.g. `4`"),
+  /** n. */
+  AIR_CHANGE(Dimension.BARE, "", 0, 100, "air changes per hour, 0 to 100, e.g. `0.45`"),
+  /** Air in m³/h. */
+  AIR_FLOW(Dimension.BARE, "", 0, 1e7, "m3 of air per hour, 0 or more, e.g. `120`"),
+  /** A part of a whole. */
+  PART(Dimension.SHARE, "", 0, 1, "0 to 100 %, e.g. `80 %`"),
+  /** Heat that can only go one way, kWh. */
+  ENERGY(Dimension.BARE, "", 0, 1e12, "kWh, 0 or more, e.g. `2350`"),
+  /** Heat that can go either way, kWh. */
+  SIGNED_ENERGY(Dimension.BARE, "", -1e12, 1e12, "kWh, e.g. `120`"),
+  /** Units of fuel. */
+  FUEL_USED(Dimension.BARE, "", 0, 1e12, "units of the fuel, 0 or more, e.g. `905`"),
+  /** kWh per unit of fuel. */
+  HEATING_VALUE(Dimension.BARE, "", 1e-6, 1e6, "kWh per unit of the fuel, e.g. `10.9`"),
+  /** Heat over fuel by the lower heating value. */
+  NET_EFFICIENCY(Dimension.SHARE, "", 0.01, 1.3, "1 to 130 %, e.g. `97 %`"),
+  /** Heat over fuel by the higher heating value. */
+  GROSS_EFFICIENCY(Dimension.SHARE, "", 0.01, 1, "1 to 100 %, e.g. `88 %`"),
+  /** Heat over electricity. */
+  PERFORMANCE(Dimension.BARE, "", 1, 100, "heat over electricity, 1 or more, e.g. `3.2`"),
+  /** Length of a period. */
+  DAYS(Dimension.BARE, "", 1e-3, 1e5, "days, more than 0, e.g. `212`"),
+  /** K·d. */
+  DEGREE_DAYS(Dimension.BARE, "", 0, 1e6, "kelvins times days, 0 or more, e.g. `3350`"),
+  /** C over floor area, kJ/(m²·K). */
+  CAPACITY(Dimension.BARE, "", 1e-3, 1e5, "kJ/(m2 K), more than 0, e.g. `165`"),
+  /** a₀. */
+  EXPONENT(Dimension.BARE, "", 1e-3, 100, "a number, more than 0, e.g. `1`"),
+  /** τ₀ in hours. */
+  HOURS(Dimension.BARE, "", 1e-3, 1e5, "hours, more than 0, e.g. `15`");
 
   private final Dimension dimension;
   private final String unit;

@@ -1,8 +1,5 @@
 package coldseam.cases;
 
-import java.io.IOException;
-import java.nio.charset.StandardCharsets;
-import java.nio.file.Files;
 import java.nio.file.Path;
 
 /** Reads window files: the profiles and glazings of a whole window. */
@@ -18,20 +15,7 @@ public final class WindowFile {
    * @return false also if it cannot be read
    */
   public static boolean is(Path file) {
-    String text;
-    try {
-      if (!Files.isRegularFile(file) || Files.size(file) > FileText.MOST_BYTES) {
-        return false;
-      }
-      text = new String(Files.readAllBytes(file), StandardCharsets.UTF_8);
-    } catch (IOException e) {
-      return false;
-    }
-    int at = text.indexOf(KEY);
-    while (at > 0 && text.charAt(at - 1) != '\n') {
-      at = text.indexOf(KEY, at + 1);
-    }
-    return at >= 0;
+    return FileText.begins(file, KEY);
   }
 
   /**

@@ -29,7 +29,11 @@ class DemoAccuracyTest {
   void demos_agree_with_their_finest_meshes() throws IOException, CaseException {
     List<Path> files;
     try (Stream<Path> found = Files.list(Path.of("demo"))) {
-      files = found.filter(f -> f.toString().endsWith(".yaml")).sorted().toList();
+      files =
+          found
+              .filter(f -> f.toString().endsWith(".yaml") && !OpenFile.is(f, "building"))
+              .sorted()
+              .toList();
     }
     assertThat(files).hasSizeGreaterThanOrEqualTo(7);
     for (Path file : files) {

@@ -5,6 +5,7 @@ import coldseam.cases.CaseException;
 import coldseam.cases.Doubt;
 import coldseam.cases.Problem;
 import coldseam.cases.WindowFile;
+import coldseam.cases.building.BuildingFile;
 import coldseam.cli.plot.Understood;
 import coldseam.cli.sheet.Sheet;
 import coldseam.cli.sheet.Subject;
@@ -108,6 +109,12 @@ final class CheckCommand implements Command {
         throw new UsageException(NAME, name + " is a window file, which has no variants");
       }
       return WindowJobs.understood(WindowFile.read(file), typed.has(JSON), here);
+    }
+    if (BuildingFile.is(file)) {
+      if (typed.has(VARIANT)) {
+        throw new UsageException(NAME, name + " is a building file, which has no variants");
+      }
+      return LedgerCommand.understood(BuildingFile.read(file), typed.has(JSON), here);
     }
     List<String> drawings = typed.has(DRAWING) ? List.of(typed.value(DRAWING)) : List.of();
     return show(CaseList.read(List.of(name), drawings, NAME, here).get(0), typed, here);

@@ -17,7 +17,7 @@ public final class Main {
   static final String VERSION = "0.1.0-SNAPSHOT";
 
   private static final List<String> NAMES =
-      List.of("solve", "check", "sweep", "seek", "draft", "materials", "prove");
+      List.of("solve", "check", "sweep", "seek", "draft", "materials", "prove", "ledger");
 
   private Main() {}
 
@@ -125,6 +125,7 @@ public final class Main {
       case "seek" -> new SeekCommand();
       case "materials" -> new MaterialsCommand();
       case "prove" -> new ProveCommand();
+      case "ledger" -> new LedgerCommand();
       default -> throw unknown(name);
     };
   }

@@ -3,6 +3,7 @@ package coldseam.cli;
 import coldseam.cases.Case;
 import coldseam.cases.CaseException;
 import coldseam.cases.Expectation;
+import coldseam.cases.building.BuildingFile;
 import coldseam.cli.text.Digits;
 import coldseam.cli.text.Ink;
 import coldseam.cli.text.Json;
@@ -90,6 +91,14 @@ final class ProveCommand implements Command {
       Path path = here.cwd().resolve(CaseList.path(word, NAME));
       if (Files.isDirectory(path)) {
         files.addAll(in(path));
+      } else if (named(word) && BuildingFile.is(path)) {
+        throw new UsageException(
+            NAME,
+            word
+                + " is a building, which expects nothing; "
+                + "cli/coldseam ledger "
+                + word
+                + " draws up its account");
       } else if (named(word)) {
         files.add(path.toString());
       } else {
@@ -116,7 +125,12 @@ final class ProveCommand implements Command {
     List<String> found = List.of();
     if (Files.isDirectory(folder)) {
       try (Stream<Path> entries = Files.list(folder)) {
-        found = entries.map(Path::toString).filter(ProveCommand::named).sorted().toList();
+        found =
+            entries
+                .filter(entry -> named(entry.toString()) && !BuildingFile.is(entry))
+                .map(Path::toString)
+                .sorted()
+                .toList();
       }
     }
     if (found.isEmpty()) {

@@ -4,6 +4,7 @@ import coldseam.cases.Case;
 import coldseam.cases.CaseException;
 import coldseam.cases.Changes;
 import coldseam.cases.WindowFile;
+import coldseam.cases.building.BuildingFile;
 import coldseam.cases.study.Axis;
 import coldseam.cases.study.StudyException;
 import coldseam.cli.exchange.FieldFile;
@@ -165,7 +166,7 @@ final class SolveCommand implements Command {
       List<String> cases, Syntax.Typed typed, Surroundings here, Map<Path, String> taken)
       throws UsageException, CaseException, IOException {
     List<Job> jobs = new ArrayList<>();
-    for (Case from : CaseList.read(cases, drawings(typed), NAME, here)) {
+    for (Case from : read(cases, typed, here)) {
       List<Optional<String>> variants = new ArrayList<>();
       if (typed.has(VARIANT)) {
         variants.add(CaseList.variant(from, typed.value(VARIANT), NAME));
@@ -197,6 +198,22 @@ final class SolveCommand implements Command {
 
   private static boolean sheet(Syntax.Typed typed) {
     return typed.has(SHEET);
+  }
+
+  /** Reads cases; a building among them is told as what it is. */
+  private static List<Case> read(List<String> cases, Syntax.Typed typed, Surroundings here)
+      throws CaseException, UsageException {
+    try {
+      return CaseList.read(cases, drawings(typed), NAME, here);
+    } catch (CaseException mistakes) {
+      for (String name : cases) {
+        if (BuildingFile.is(here.cwd().resolve(CaseList.path(name, NAME)))) {
+          throw new UsageException(
+              NAME, name + " is a building; did you mean: cli/coldseam ledger " + name);
+        }
+      }
+      throw mistakes;
+    }
   }
 
   /** The accuracy of a case, changed by what was typed. */

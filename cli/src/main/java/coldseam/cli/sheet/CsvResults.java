@@ -316,7 +316,7 @@ final class CsvResults {
     }
   }
 
-  private static String quoted(String value) {
+  static String quoted(String value) {
     boolean plain =
         value.indexOf(',') < 0
             && value.indexOf('"') < 0

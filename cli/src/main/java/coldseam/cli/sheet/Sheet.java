@@ -107,6 +107,53 @@ public final class Sheet {
   }
 
   /**
+   * The card of a building's ledger.
+   *
+   * @param of the building and its ledger
+   * @param ink colours, or none
+   * @return lines, each ended by a line feed
+   */
+  public static String card(LedgerSubject of, Ink ink) {
+    TerminalText text = new TerminalText(ink, TextCard.PAGE);
+    new LedgerCard(of, ink).write(text);
+    return text.text();
+  }
+
+  /**
+   * A ledger as one JSON object; {@code ledger.schema.json} beside this program says what stands in
+   * it.
+   *
+   * @param of the building and its ledger
+   * @param indented many lines instead of one
+   * @return the object, without a line feed at the end
+   */
+  public static String json(LedgerSubject of, boolean indented) {
+    return new LedgerData(of).json(indented);
+  }
+
+  /**
+   * The account of a ledger as comma-separated values (RFC 4180, UTF-8): a heading, one row an
+   * item, the sum.
+   *
+   * @param of the building and its ledger
+   * @return lines, each ended by a line feed
+   */
+  public static String accountCsv(LedgerSubject of) {
+    return new LedgerData(of).account();
+  }
+
+  /**
+   * The schedule of a building as comma-separated values (RFC 4180, UTF-8): a heading, one row a
+   * part of the envelope, the sums.
+   *
+   * @param of the building and its ledger
+   * @return lines, each ended by a line feed
+   */
+  public static String scheduleCsv(LedgerSubject of) {
+    return new LedgerData(of).schedule();
+  }
+
+  /**
    * What is understood of a case, for the terminal.
    *
    * @param subject what it is about

@@ -3,6 +3,7 @@ package coldseam.cli.plot;
 import coldseam.cases.Case;
 import coldseam.cases.CaseException;
 import coldseam.cases.CaseFile;
+import coldseam.cases.building.BuildingFile;
 import coldseam.solver.Solver;
 import coldseam.solver.conduction.Progress;
 import coldseam.solver.detail.Accuracy;
@@ -37,7 +38,7 @@ record Solved(String name, Result result, Plots.Caption caption) {
         Stream<Path> published = Files.list(folder.resolve("cases/published"))) {
       files =
           Stream.concat(demo, published)
-              .filter(file -> file.toString().endsWith(".yaml"))
+              .filter(file -> file.toString().endsWith(".yaml") && !BuildingFile.is(file))
               .sorted()
               .toList();
     } catch (IOException e) {
