@@ -1,6 +1,7 @@
 package coldseam.cases;
 
 import coldseam.solver.detail.Accuracy;
+import coldseam.solver.detail.Geometry;
 import java.util.List;
 import java.util.Optional;
 
@@ -8,13 +9,24 @@ import java.util.Optional;
 final class AccuracyReader {
   static final List<String> KEYS = List.of("L2D", "psi", "U");
 
+  /** Those of a body of revolution. */
+  static final List<String> ROUND_KEYS = List.of("L3D", "chi");
+
   /** No bounds narrower than this can be told from rounding. */
   private static final double FINEST = 1e-9;
 
   private final Problems problems;
   private final Quantities quantities;
+  private final boolean round;
 
-  AccuracyReader(Pass pass) {
+  /**
+   * Prepares.
+   *
+   * @param pass what the parts of the case share
+   * @param geometry which results there can be
+   */
+  AccuracyReader(Pass pass, Geometry geometry) {
+    round = geometry == Geometry.AXISYMMETRIC;
     this.problems = pass.problems();
     this.quantities = pass.quantities();
   }
@@ -27,23 +39,46 @@ final class AccuracyReader {
    */
   Accuracy read(Node node) {
     Accuracy standard = Accuracy.STANDARD;
-    Fields fields = new Fields(problems, "`accuracy`", node, KEYS);
+    Fields fields = new Fields(problems, "`accuracy`", node, round ? ROUND_KEYS : KEYS);
     double relative = standard.couplingRelative();
     double absolute = standard.couplingWPerMK();
-    if (fields.has("L2D")) {
+    String coupling = round ? "L3D" : "L2D";
+    if (fields.has(coupling)) {
       // What the case asks for replaces both halves of the standard.
-      Node l2d = fields.get("L2D").get();
-      Value value = quantities.value(l2d, "`L2D` of `accuracy`");
-      boolean share = value.dimension().same(Dimension.SHARE);
-      double typed = checked(l2d, "`L2D`", value, share ? Dimension.SHARE : Dimension.CONDUCTIVITY);
-      if (!Double.isNaN(typed)) {
-        relative = share ? typed : Double.POSITIVE_INFINITY;
-        absolute = share ? Double.POSITIVE_INFINITY : typed;
-      }
+      double[] typed = shareOrNot(fields, coupling);
+      relative = typed == null ? relative : typed[0];
+      absolute = typed == null ? absolute : typed[1];
+    }
+    if (round) {
+      double[] chi = fields.has("chi") ? shareOrNot(fields, "chi") : null;
+      return new Accuracy(
+          relative,
+          absolute,
+          standard.psiWPerMK(),
+          standard.transmittanceRelative(),
+          chi == null ? standard.pointRelative() : Double.isInfinite(chi[0]) ? 0 : chi[0],
+          chi == null ? standard.pointWPerK() : Double.isInfinite(chi[1]) ? 0 : chi[1],
+          standard.mostUnknowns());
     }
     double psi = number(fields, "psi", Dimension.CONDUCTIVITY, standard.psiWPerMK());
     double u = number(fields, "U", Dimension.SHARE, standard.transmittanceRelative());
     return new Accuracy(relative, absolute, psi, u, standard.mostUnknowns());
+  }
+
+  /** A half-width as a share or in its unit, the other of the two infinite; null if wrong. */
+  private double[] shareOrNot(Fields fields, String key) {
+    Node node = fields.get(key).get();
+    String what = "`" + key + "`";
+    Value value = quantities.value(node, what + " of `accuracy`");
+    boolean share = value.dimension().same(Dimension.SHARE);
+    Dimension unit = round ? Dimension.CONDUCTANCE : Dimension.CONDUCTIVITY;
+    double typed = checked(node, what, value, share ? Dimension.SHARE : unit);
+    if (Double.isNaN(typed)) {
+      return null;
+    }
+    return new double[] {
+      share ? typed : Double.POSITIVE_INFINITY, share ? Double.POSITIVE_INFINITY : typed
+    };
   }
 
   private double number(Fields fields, String key, Dimension dimension, double otherwise) {
@@ -61,7 +96,8 @@ final class AccuracyReader {
       return Double.NaN;
     }
     boolean share = dimension.same(Dimension.SHARE);
-    String wanted = share ? "e.g. `0.1 %`" : "in W/(m K), e.g. `0.0002`";
+    String unit = round ? "in W/K" : "in W/(m K)";
+    String wanted = share ? "e.g. `0.1 %`" : unit + ", e.g. `0.0002`";
     boolean fits =
         value.dimension().same(dimension) || value.dimension().kind() == Dimension.Kind.BARE;
     if (!fits) {

@@ -29,6 +29,7 @@ final class CaseReader {
           "stretches",
           "flanks",
           "psi",
+          "chi",
           "U",
           "frame",
           "points",

@@ -22,6 +22,7 @@ final class DetailReader {
   private final Optional<Variant> variant;
   private final Changes changes;
   private Accuracy accuracy = Accuracy.STANDARD;
+  private Geometry geometry = Geometry.PLANE;
   private List<Expectation> expectations = List.of();
 
   DetailReader(Fields top, Pass pass, OtherCases others, Optional<Variant> variant) {
@@ -130,7 +131,7 @@ final class DetailReader {
     }
     node = top.nodeOrNull("accuracy");
     if (node != null) {
-      accuracy = new AccuracyReader(pass).read(node);
+      accuracy = new AccuracyReader(pass, geometry).read(node);
     }
     node = top.nodeOrNull("expect");
     if (node != null) {
@@ -142,7 +143,7 @@ final class DetailReader {
     return Optional.of(
         new Detail(
             title,
-            Geometry.PLANE,
+            geometry,
             view,
             uncovered.isPresent() ? Uncovered.under(areas, uncovered.get()) : areas,
             spaces.good(),
@@ -169,6 +170,16 @@ final class DetailReader {
     Node node = top.nodeOrNull("psi");
     if (node != null) {
       wanted.addAll(psi.read(node));
+    }
+    node = top.nodeOrNull("chi");
+    if (node != null) {
+      if (geometry == Geometry.PLANE) {
+        problems.add(
+            top.keyNode("chi"),
+            "a χ is of a body of revolution, and this is a plane section",
+            "add `geometry: axisymmetric`, or ask for `psi`");
+      }
+      wanted.addAll(new ChiReader(pass, spaces, others).read(node));
     }
     node = top.nodeOrNull("U");
     if (node != null) {
@@ -217,7 +228,10 @@ final class DetailReader {
     if (!top.has("view") && !top.has("frame")) {
       pass.assume("view", "vertical section", "by convention of this tool");
     }
-    top.word("geometry", List.of("plane"));
+    Optional<String> body = top.word("geometry", List.of("plane", "axisymmetric"));
+    if (body.isPresent() && body.get().equals("axisymmetric")) {
+      geometry = Geometry.AXISYMMETRIC;
+    }
     Optional<Node> up = top.get("up");
     if (up.isEmpty()) {
       return plan ? View.PLAN : View.UPRIGHT;
@@ -239,6 +253,17 @@ final class DetailReader {
     return View.up(x, y);
   }
 
+  /** The keys of a mapping of the case. */
+  private List<String> names(String part) {
+    List<String> names = new ArrayList<>();
+    if (top.get(part).orElse(null) instanceof Node.Mapping mapping) {
+      for (Node.Entry entry : mapping.entries()) {
+        names.add(entry.key().text());
+      }
+    }
+    return names;
+  }
+
   private void expect(
       Node node,
       SpaceReader spaces,
@@ -257,19 +282,16 @@ final class DetailReader {
             floating,
             stretches.names(),
             psiNames(),
+            names("chi"),
             results.transmittances(),
             results.points(),
-            variants);
+            variants,
+            geometry);
     expectations = new ExpectationReader(pass, names).read(node);
   }
 
   private List<String> psiNames() {
-    List<String> psi = new ArrayList<>();
-    if (top.get("psi").orElse(null) instanceof Node.Mapping mapping) {
-      for (Node.Entry entry : mapping.entries()) {
-        psi.add(entry.key().text());
-      }
-    }
+    List<String> psi = names("psi");
     if (top.has("frame")) {
       psi.add(Wanted.Frame.GLASS_EDGE);
     }

@@ -7,8 +7,8 @@ import java.util.Optional;
  * A value that a case is expected to give.
  *
  * @param quantity which quantity
- * @param subject whose: two spaces for L2D, the name of a ψ, U, space, stretch or point otherwise;
- *     point and space for a weight
+ * @param subject whose: two spaces for L2D and L3D, the name of a ψ, χ, U, space, stretch or point
+ *     otherwise; point and space for a weight
  * @param value the reference, in the quantity's SI unit (temperatures in °C)
  * @param within the tolerance, same unit, more than 0
  * @param variant the variant it is meant for, empty for the base case
@@ -27,13 +27,17 @@ public record Expectation(
   public enum Quantity {
     /** Coupling coefficient, W/(m·K). */
     L2D,
+    /** Coupling coefficient of a body of revolution, W/K. */
+    L3D,
     /** Linear transmittance, W/(m·K). */
     PSI,
+    /** Point transmittance, W/K. */
+    CHI,
     /** Effective U, W/(m²·K). */
     U,
     /** Total resistance 1/U with films, m²·K/W. */
     R,
-    /** Heat flow of a space or stretch into the detail, W/m. */
+    /** Heat flow of a space or stretch into the detail, W/m; W for a body of revolution. */
     FLOW,
     /** Temperature of a named point or of a floating space, °C. */
     TEMPERATURE,

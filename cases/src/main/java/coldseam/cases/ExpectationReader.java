@@ -1,6 +1,7 @@
 package coldseam.cases;
 
 import coldseam.cases.Expectation.Quantity;
+import coldseam.solver.detail.Geometry;
 import java.util.ArrayList;
 import java.util.Collection;
 import java.util.List;
@@ -10,14 +11,17 @@ import java.util.Optional;
 final class ExpectationReader {
   /** The keys that say which quantity, in the order of {@link Quantity}. */
   static final List<String> QUANTITIES =
-      List.of("L2D", "psi", "U", "R", "flow", "temperature", "coldest", "fRsi", "weight");
+      List.of(
+          "L2D", "L3D", "psi", "chi", "U", "R", "flow", "temperature", "coldest", "fRsi", "weight");
 
   static final List<String> STATUS = List.of("seen", "computed", "memory", "invented");
 
   private static final List<String> KEYS =
       List.of(
           "L2D",
+          "L3D",
           "psi",
+          "chi",
           "U",
           "R",
           "flow",
@@ -33,7 +37,9 @@ final class ExpectationReader {
 
   private static final Dimension[] DIMENSIONS = {
     Dimension.CONDUCTIVITY,
+    Dimension.CONDUCTANCE,
     Dimension.CONDUCTIVITY,
+    Dimension.CONDUCTANCE,
     Dimension.TRANSMITTANCE,
     Dimension.RESISTANCE,
     Dimension.FLOW_PER_LENGTH,
@@ -66,18 +72,22 @@ final class ExpectationReader {
    * @param floating those whose temperature is a result
    * @param stretches stretches
    * @param psi each ψ
+   * @param chi each χ
    * @param transmittances each U
    * @param points points
    * @param variants variants
+   * @param geometry whether couplings are L2D or L3D
    */
   record Names(
       Collection<String> spaces,
       Collection<String> floating,
       Collection<String> stretches,
       Collection<String> psi,
+      Collection<String> chi,
       Collection<String> transmittances,
       Collection<String> points,
-      Collection<String> variants) {}
+      Collection<String> variants,
+      Geometry geometry) {}
 
   /**
    * Reads the expectations.
@@ -172,7 +182,8 @@ final class ExpectationReader {
   private List<String> subject(int which, Fields fields) {
     Node node = fields.get(QUANTITIES.get(which)).get();
     return switch (Quantity.values()[which]) {
-      case L2D -> pair(node, names.spaces(), names.spaces(), "a space");
+      case L2D, L3D -> coupling(which, node);
+      case CHI -> one(node, names.chi(), "a χ");
       case PSI -> one(node, names.psi(), "a ψ");
       case U, R -> one(node, names.transmittances(), "a U");
       case FLOW -> one(node, joined(names.spaces(), names.stretches()), "a space or a stretch");
@@ -182,6 +193,18 @@ final class ExpectationReader {
       case WEIGHT ->
           pair(node, joined(names.points(), names.spaces()), names.spaces(), "a point or a space");
     };
+  }
+
+  /** Two spaces; L2D of a prism, L3D of a body of revolution. */
+  private List<String> coupling(int which, Node node) {
+    boolean ofPrism = Quantity.values()[which] == Quantity.L2D;
+    if (ofPrism != (names.geometry() == Geometry.PLANE)) {
+      problems.add(
+          node,
+          ofPrism ? "a body of revolution has no L2D" : "a plane section has no L3D",
+          ofPrism ? "expect `L3D`" : "expect `L2D`");
+    }
+    return pair(node, names.spaces(), names.spaces(), "a space");
   }
 
   private static Collection<String> joined(Collection<String> a, Collection<String> b) {

@@ -7,7 +7,7 @@ import java.util.List;
 
 /** Reads the value of {@code --accuracy}: {@code L2D=0.02%,psi=0.0002,U=0.1%}, one or more. */
 final class AccuracyOption {
-  private static final List<String> NAMES = List.of("L2D", "psi", "U");
+  private static final List<String> NAMES = List.of("L2D", "psi", "U", "L3D", "chi");
 
   private AccuracyOption() {}
 
@@ -61,6 +61,8 @@ final class AccuracyOption {
         base.couplingWPerMK(),
         base.psiWPerMK(),
         base.transmittanceRelative(),
+        base.pointRelative(),
+        base.pointWPerK(),
         most);
   }
 
@@ -101,12 +103,24 @@ final class AccuracyOption {
     double number = number(name, share ? typed.substring(0, typed.length() - 1).strip() : typed);
     double value = share ? number / 100 : number;
     switch (name) {
-      case "L2D" -> {
+      case "L2D", "L3D" -> {
         return new Accuracy(
             share ? value : Double.MAX_VALUE,
             share ? Double.MAX_VALUE : value,
             a.psiWPerMK(),
             a.transmittanceRelative(),
+            a.pointRelative(),
+            a.pointWPerK(),
+            a.mostUnknowns());
+      }
+      case "chi" -> {
+        return new Accuracy(
+            a.couplingRelative(),
+            a.couplingWPerMK(),
+            a.psiWPerMK(),
+            a.transmittanceRelative(),
+            share ? value : 0,
+            share ? 0 : value,
             a.mostUnknowns());
       }
       case "psi" -> {
@@ -118,6 +132,8 @@ final class AccuracyOption {
             a.couplingWPerMK(),
             value,
             a.transmittanceRelative(),
+            a.pointRelative(),
+            a.pointWPerK(),
             a.mostUnknowns());
       }
       default -> {
@@ -125,7 +141,13 @@ final class AccuracyOption {
           throw wrong("the accuracy of U is a share of it, e.g. U=0.1%");
         }
         return new Accuracy(
-            a.couplingRelative(), a.couplingWPerMK(), a.psiWPerMK(), value, a.mostUnknowns());
+            a.couplingRelative(),
+            a.couplingWPerMK(),
+            a.psiWPerMK(),
+            value,
+            a.pointRelative(),
+            a.pointWPerK(),
+            a.mostUnknowns());
       }
     }
   }

@@ -33,11 +33,16 @@ record Expected(Expectation expectation, OptionalDouble computed) {
     List<String> subject = expectation.subject();
     String name = subject.get(0);
     return switch (expectation.quantity()) {
-      case L2D -> coupling(subject, result);
+      case L2D, L3D -> coupling(subject, result);
       case PSI ->
           result.psi().stream()
               .filter(psi -> psi.name().equals(name))
               .mapToDouble(psi -> psi.valueWPerMK().value())
+              .findFirst();
+      case CHI ->
+          result.chi().stream()
+              .filter(chi -> chi.name().equals(name))
+              .mapToDouble(chi -> chi.valueWPerK().value())
               .findFirst();
       case U ->
           result.transmittances().stream()
@@ -112,6 +117,8 @@ record Expected(Expectation expectation, OptionalDouble computed) {
     String quantity =
         switch (expectation.quantity()) {
           case L2D -> "L2D";
+          case L3D -> "L3D";
+          case CHI -> "χ";
           case PSI -> "ψ";
           case U -> "U";
           case R -> "R";
@@ -128,6 +135,7 @@ record Expected(Expectation expectation, OptionalDouble computed) {
   String unit() {
     return switch (expectation.quantity()) {
       case L2D, PSI -> "W/(m·K)";
+      case L3D, CHI -> "W/K";
       case U -> "W/(m²·K)";
       case R -> "m²·K/W";
       case FLOW -> "W/m";

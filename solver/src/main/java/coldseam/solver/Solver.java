@@ -18,6 +18,7 @@ import coldseam.solver.detail.Fault;
 import coldseam.solver.detail.FilmSet;
 import coldseam.solver.detail.FrameDetail;
 import coldseam.solver.detail.Geometry;
+import coldseam.solver.detail.Revolution;
 import coldseam.solver.detail.Subtraction;
 import coldseam.solver.detail.Wanted;
 import coldseam.solver.result.Interpolation;
@@ -232,12 +233,8 @@ public final class Solver {
       Optional<Cavities> cavities,
       Optional<Solution> start) {
     static Resolved of(Detail detail) {
-      if (detail.geometry() != Geometry.PLANE) {
-        throw new DetailException(
-            List.of(
-                new Fault("section", "", "only plane sections can be solved", Optional.empty())));
-      }
-      Detail ready = FrameDetail.prepared(detail);
+      boolean plane = detail.geometry() == Geometry.PLANE;
+      Detail ready = plane ? FrameDetail.prepared(detail) : Revolution.checked(detail);
       Optional<Cavities> air = Cavities.of(ready);
       Detail laid = air.isPresent() ? air.get().detail() : ready;
       Partition first = air.isPresent() ? air.get().partition() : partition(laid);
@@ -284,13 +281,12 @@ public final class Solver {
     private static Map<Subtraction.OfDetail, Resolved> others(Detail detail) {
       Map<Subtraction.OfDetail, Resolved> others = new LinkedHashMap<>();
       for (Wanted wanted : detail.wanted()) {
-        if (wanted instanceof Wanted.Psi psi) {
-          for (Subtraction subtraction : psi.subtractions()) {
-            if (subtraction instanceof Subtraction.OfDetail of) {
-              others.put(of, resolveOther(of));
-            }
+        for (Subtraction subtraction : wanted.subtractions()) {
+          if (subtraction instanceof Subtraction.OfDetail of) {
+            others.put(of, resolveOther(detail.geometry(), of));
           }
-        } else if (wanted instanceof Wanted.Frame frame) {
+        }
+        if (wanted instanceof Wanted.Frame frame) {
           if (frame.panelRun().isPresent()) {
             Subtraction.OfDetail run = frame.panelRun().get();
             others.put(run, Resolved.of(run.detail()));
@@ -300,8 +296,17 @@ public final class Solver {
       return others;
     }
 
-    private static Resolved resolveOther(Subtraction.OfDetail of) {
+    private static Resolved resolveOther(Geometry geometry, Subtraction.OfDetail of) {
       try {
+        if (of.detail().geometry() != geometry) {
+          throw new DetailException(
+              List.of(
+                  new Fault(
+                      "section",
+                      "",
+                      "one is a prism, the other a body of revolution; take off one of the kind",
+                      Optional.empty())));
+        }
         Resolved other = of(of.detail());
         if (other.cavities.isPresent()
             && other.cavities.get().slightLayers(of.detail()).isPresent()) {
@@ -404,6 +409,7 @@ public final class Solver {
           accuracy,
           psi,
           plan.transmittanceWanted(),
+          plan.pointWanted(),
           plan.takenOffWPerMK(),
           temperatures,
           plan.statedTemperatures());

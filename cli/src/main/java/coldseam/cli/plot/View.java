@@ -2,6 +2,7 @@ package coldseam.cli.plot;
 
 import coldseam.cli.plot.Plots.Caption;
 import coldseam.solver.detail.FilmSet;
+import coldseam.solver.detail.Geometry;
 import coldseam.solver.detail.Space;
 import coldseam.solver.result.Result;
 import java.util.ArrayList;
@@ -91,7 +92,12 @@ abstract class View {
 
   /** The state of certification, for the stamp. */
   String state() {
-    return certified() ? "L2D CERTIFIED" : "NOT CERTIFIED";
+    return certified() ? (round() ? "L3D" : "L2D") + " CERTIFIED" : "NOT CERTIFIED";
+  }
+
+  /** Whether the section is turned about its axis. */
+  final boolean round() {
+    return section.detail().geometry() == Geometry.AXISYMMETRIC;
   }
 
   /** Whether bounds of every coupling are proved. */

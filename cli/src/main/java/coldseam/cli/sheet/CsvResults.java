@@ -62,28 +62,42 @@ final class CsvResults {
           "surfaceHumidity",
           "outdoors_C",
           "dewPoint_C",
-          "mouldLimit_C");
+          "mouldLimit_C",
+          "value_W_per_K",
+          "lower_W_per_K",
+          "upper_W_per_K",
+          "estimatedHalfWidth_W_per_K",
+          "area_m2",
+          "psi_W_per_mK",
+          "heatFlow_W",
+          "changePer10Percent_W_per_K",
+          "toleranceHalfWidth_W_per_K",
+          "toleranceLower_W_per_K",
+          "toleranceUpper_W_per_K");
 
   private final Subject subject;
   private final Result result;
+  private final Counted counted;
   private final StringBuilder text = new StringBuilder();
 
   CsvResults(Subject subject, Result result) {
     this.subject = subject;
     this.result = result;
+    counted = Counted.of(result);
   }
 
   String text() {
     text.append(String.join(",", COLUMNS)).append('\n');
     couplings();
     psi();
+    chi();
     transmittances();
     spaces();
     for (Result.StretchResult stretch : result.stretches()) {
       row("stretch", stretch.name())
           .word("filmSet", Words.name(FilmSet.HEAT_LOSS))
           .word("between", stretch.space())
-          .number("heatFlow_W_per_m", stretch.heatFlowWPerM())
+          .number(counted.heatFlow(), stretch.heatFlowWPerM())
           .number("length_m", stretch.lengthM())
           .end();
     }
@@ -125,7 +139,7 @@ final class CsvResults {
     }
     row("balance", "")
         .word("filmSet", Words.name(FilmSet.HEAT_LOSS))
-        .number("heatFlow_W_per_m", result.balance().sumWPerM())
+        .number(counted.heatFlow(), result.balance().sumWPerM())
         .end();
     return text.toString();
   }
@@ -170,8 +184,8 @@ final class CsvResults {
       row("coupling", "")
           .word("filmSet", Words.name(FilmSet.HEAT_LOSS))
           .word("between", coupling.from() + " – " + coupling.to())
-          .quantity(coupling.valueWPerMK(), "W_per_mK")
-          .tolerance(coupling.tolerance(), "W_per_mK")
+          .quantity(coupling.valueWPerMK(), counted.suffix())
+          .tolerance(coupling.tolerance(), counted.suffix())
           .end();
     }
   }
@@ -211,6 +225,41 @@ final class CsvResults {
     }
   }
 
+  private void chi() {
+    for (Result.PointTransmittance chi : result.chi()) {
+      row("chi", chi.name())
+          .word("filmSet", Words.name(FilmSet.HEAT_LOSS))
+          .word("between", Words.between(chi.warm(), chi.cold()))
+          .quantity(chi.valueWPerK(), "W_per_K")
+          .tolerance(chi.tolerance(), "W_per_K")
+          .end();
+      for (Result.PointTerm term : chi.subtracted()) {
+        Row row =
+            row("subtracted", term.name())
+                .word("filmSet", Words.name(FilmSet.HEAT_LOSS))
+                .word("between", chi.name())
+                .number("value_W_per_K", term.valueWPerK().mid())
+                .number("lower_W_per_K", term.valueWPerK().lower())
+                .number("upper_W_per_K", term.valueWPerK().upper());
+        if (term.areaM2().isPresent()) {
+          row.number("U_W_per_m2K", term.uWPerM2K().orElseThrow().mid())
+              .number("area_m2", term.areaM2().getAsDouble());
+        } else if (term.lengthM().isPresent()) {
+          row.number("psi_W_per_mK", term.psiWPerMK().orElseThrow().mid())
+              .number("length_m", term.lengthM().getAsDouble());
+        }
+        row.end();
+      }
+      for (Result.Sensitivity sensitivity : chi.sensitivities()) {
+        row("sensitivity", sensitivity.of())
+            .word("filmSet", Words.name(FilmSet.HEAT_LOSS))
+            .word("between", chi.name())
+            .number("changePer10Percent_W_per_K", ShareSection.RISE * sensitivity.slope())
+            .end();
+      }
+    }
+  }
+
   private void transmittances() {
     for (Result.EffectiveTransmittance u : result.transmittances()) {
       row("U", u.of())
@@ -233,7 +282,7 @@ final class CsvResults {
       row("space", space.name())
           .word("filmSet", Words.name(FilmSet.HEAT_LOSS))
           .number("temperature_C", space.temperatureC())
-          .number("heatFlow_W_per_m", space.heatFlowWPerM())
+          .number(counted.heatFlow(), space.heatFlowWPerM())
           .end();
       surfacePoint("coldest", space.name(), space.coldest());
       surfacePoint("warmest", space.name(), space.warmest());

@@ -14,7 +14,9 @@ record FlowSection(Result result, Units units, Ink ink) {
   private static final double ROUNDING = 1e-9;
 
   void write(Manuscript text) {
-    text.heading("Heat flow", "W/m, positive into the detail; ± estimated; films for heat loss");
+    text.heading(
+        "Heat flow",
+        counted().flowUnit() + ", positive into the detail; ± estimated; films for heat loss");
     Table table =
         new Table("lrrrl", 2, TextCard.PAGE)
             .named("space or stretch", "temperature", "heat flow", "±", "note");
@@ -50,6 +52,10 @@ record FlowSection(Result result, Units units, Ink ink) {
     text.table(table);
   }
 
+  private Counted counted() {
+    return Counted.of(result);
+  }
+
   private static String balance(double relative) {
     return relative <= ROUNDING
         ? "what flows in flows out"
@@ -66,8 +72,13 @@ record FlowSection(Result result, Units units, Ink ink) {
         "± " + figure.halfWidth(),
         ink.faint(note));
     if (units.customary()) {
-      Digits.Figure us = Digits.of(flow * Units.FLOW, halfWidth * Units.FLOW, MOST_DECIMALS);
-      table.row("", "", Digits.signed(us.value()), "± " + us.halfWidth(), Units.FLOW_NAME);
+      Digits.Figure us =
+          Digits.of(
+              flow * counted().customaryFlow(),
+              halfWidth * counted().customaryFlow(),
+              MOST_DECIMALS);
+      table.row(
+          "", "", Digits.signed(us.value()), "± " + us.halfWidth(), counted().customaryFlowUnit());
     }
   }
 

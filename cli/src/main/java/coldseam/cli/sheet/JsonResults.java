@@ -28,8 +28,11 @@ record JsonResults(Subject subject, Result result) {
     json.object();
     head(json, subject);
     accuracy(json);
-    couplings(json, "coupling", result.couplings());
+    couplings(json, "coupling", result.couplings(), Counted.of(result));
     psi(json);
+    if (!result.chi().isEmpty()) {
+      new PointSection(result).write(json);
+    }
     transmittances(json);
     frame(json);
     spaces(json);
@@ -45,7 +48,7 @@ record JsonResults(Subject subject, Result result) {
     assumptions(json, result.assumptions());
     json.member("warnings", result.warnings());
     json.object("balance")
-        .member("sum_W_per_m", result.balance().sumWPerM())
+        .member(Counted.of(result).sum(), result.balance().sumWPerM())
         .member("relative", result.balance().relative())
         .endObject();
     json.object("mesh")
@@ -87,12 +90,13 @@ record JsonResults(Subject subject, Result result) {
     }
     boolean certified = Words.certified(result);
     json.object("accuracy").member("certified", certified);
+    String suffix = Counted.of(result).suffix();
     if (certified) {
-      json.member("halfWidth_W_per_mK", halfWidth).member("relative", relative);
+      json.member("halfWidth_" + suffix, halfWidth).member("relative", relative);
     } else {
-      json.nothing("halfWidth_W_per_mK")
+      json.nothing("halfWidth_" + suffix)
           .nothing("relative")
-          .member("estimatedHalfWidth_W_per_mK", halfWidth)
+          .member("estimatedHalfWidth_" + suffix, halfWidth)
           .member("estimatedRelative", relative)
           .member("reason", reason);
     }
@@ -104,14 +108,15 @@ record JsonResults(Subject subject, Result result) {
         .endObject();
   }
 
-  private static void couplings(Json json, String name, List<Result.Coupling> couplings) {
+  private static void couplings(
+      Json json, String name, List<Result.Coupling> couplings, Counted counted) {
     json.array(name);
     for (Result.Coupling coupling : couplings) {
       json.object()
           .member("between", List.of(coupling.from(), coupling.to()))
           .member("filmSet", Words.name(FilmSet.HEAT_LOSS));
-      quantity(json, coupling.valueWPerMK(), "W_per_mK");
-      tolerance(json, coupling.tolerance(), "W_per_mK");
+      quantity(json, coupling.valueWPerMK(), counted.suffix());
+      tolerance(json, coupling.tolerance(), counted.suffix());
       json.endObject();
     }
     json.endArray();
@@ -137,7 +142,7 @@ record JsonResults(Subject subject, Result result) {
   }
 
   /** What tolerances of conductivities add; nothing where none is stated. */
-  private static void tolerance(Json json, Optional<Result.Tolerance> stated, String unit) {
+  static void tolerance(Json json, Optional<Result.Tolerance> stated, String unit) {
     if (stated.isEmpty()) {
       return;
     }
@@ -188,7 +193,7 @@ record JsonResults(Subject subject, Result result) {
       }
       json.endArray();
       if (!psi.parts().isEmpty()) {
-        couplings(json, "parts", psi.parts());
+        couplings(json, "parts", psi.parts(), Counted.PER_METRE);
       }
       json.array("sensitivities");
       for (Result.Sensitivity sensitivity : psi.sensitivities()) {
@@ -218,7 +223,7 @@ record JsonResults(Subject subject, Result result) {
   }
 
   /** The middle, and both ends where they differ. */
-  private static void bracket(Json json, String name, String unit, Bracket bracket) {
+  static void bracket(Json json, String name, String unit, Bracket bracket) {
     json.member(name + "_" + unit, bracket.mid());
     if (bracket.upper() > bracket.lower()) {
       String start = name.equals("value") ? "" : name + "_";
@@ -292,7 +297,7 @@ record JsonResults(Subject subject, Result result) {
           .member("temperature_C", space.temperatureC())
           .member("floats", space.floating())
           .member("filmSet", Words.name(FilmSet.HEAT_LOSS))
-          .member("heatFlow_W_per_m", space.heatFlowWPerM());
+          .member(Counted.of(result).heatFlow(), space.heatFlowWPerM());
       if (!Double.isFinite(space.heatFlowWPerM())) {
         json.member("note", "infinite: two fixed temperatures meet");
       }
@@ -340,7 +345,7 @@ record JsonResults(Subject subject, Result result) {
         json.member("space", stretch.space());
       }
       json.member("filmSet", Words.name(FilmSet.HEAT_LOSS))
-          .member("heatFlow_W_per_m", stretch.heatFlowWPerM())
+          .member(Counted.of(result).heatFlow(), stretch.heatFlowWPerM())
           .member("length_m", stretch.lengthM())
           .endObject();
     }

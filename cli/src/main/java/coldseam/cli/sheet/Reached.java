@@ -60,9 +60,17 @@ record Reached(Accuracy asked) {
               asked.negligibleWPerMK() / u.widthM());
       note(missed, "U " + u.of(), u.valueWPerM2K(), allowed, "W/(m²·K)", "U");
     }
+    for (Result.PointTransmittance chi : result.chi()) {
+      double allowed =
+          Math.max(asked.pointWPerK(chi.valueWPerK().value()), asked.negligibleWPerMK())
+              + stated(chi);
+      note(missed, "χ " + chi.name(), chi.valueWPerK(), allowed, "W/K", "chi");
+    }
+    Counted counted = Counted.of(result);
     for (Result.Coupling coupling : result.couplings()) {
-      String what = "L2D " + coupling.from() + " – " + coupling.to();
-      note(missed, what, coupling.valueWPerMK(), allowed(coupling, result), "W/(m·K)", "L2D");
+      String name = counted.coupling();
+      String what = name + " " + coupling.from() + " – " + coupling.to();
+      note(missed, what, coupling.valueWPerMK(), allowed(coupling, result), counted.unit(), name);
     }
     return missed;
   }
@@ -111,6 +119,17 @@ record Reached(Accuracy asked) {
     for (Result.Subtracted term : psi.subtracted()) {
       if (term.uWPerM2K().isPresent()) {
         sum += (term.valueWPerMK().upper() - term.valueWPerMK().lower()) / 2;
+      }
+    }
+    return sum;
+  }
+
+  /** The same of a χ. */
+  private static double stated(Result.PointTransmittance chi) {
+    double sum = 0;
+    for (Result.PointTerm term : chi.subtracted()) {
+      if (term.areaM2().isPresent() || term.lengthM().isPresent()) {
+        sum += (term.valueWPerK().upper() - term.valueWPerK().lower()) / 2;
       }
     }
     return sum;

@@ -106,7 +106,8 @@ record ShareSection(Result result, Units units, Ink ink) {
           .append(stretch.name())
           .append(' ')
           .append(Digits.signed(Digits.fixed(stretch.heatFlowWPerM(), 1)))
-          .append(" W/m");
+          .append(' ')
+          .append(Counted.of(result).flowUnit());
     }
     return words.toString();
   }

@@ -76,7 +76,12 @@ final class TextCard {
   }
 
   private void numbers() {
-    text.heading("Result", "films for heat loss; after a ψ, how lengths are measured");
+    Counted counted = Counted.of(result);
+    text.heading(
+        "Result",
+        counted == Counted.WHOLE
+            ? "films for heat loss; of the whole body of revolution"
+            : "films for heat loss; after a ψ, how lengths are measured");
     Table table =
         new Table("llrrrlll", 2, PAGE)
             .named("quantity", "between", "value", "±", "± of materials", "unit", "known", "note");
@@ -113,14 +118,24 @@ final class TextCard {
           new Scale(3, "m²·K/W", Units.R, Units.R_NAME),
           "");
     }
+    for (Result.PointTransmittance chi : result.chi()) {
+      number(
+          table,
+          "χ " + chi.name() + (chi.of().equals(chi.name()) ? "" : " of " + chi.of()),
+          Words.between(chi.warm(), chi.cold()),
+          chi.valueWPerK(),
+          chi.tolerance(),
+          new Scale(5, counted.unit(), counted.customary(), counted.customaryUnit()),
+          "");
+    }
     for (Result.Coupling coupling : result.couplings()) {
       number(
           table,
-          "L2D",
+          counted.coupling(),
           coupling.from() + " – " + coupling.to(),
           coupling.valueWPerMK(),
           coupling.tolerance(),
-          new Scale(4, "W/(m·K)", Units.PSI, Units.PSI_NAME),
+          new Scale(4, counted.unit(), counted.customary(), counted.customaryUnit()),
           "");
     }
     text.table(table);
@@ -176,7 +191,7 @@ final class TextCard {
   }
 
   /** A quantity in another unit with what is known of it. */
-  private static Digits.Figure figure(Quantity quantity, double factor, int mostDecimals) {
+  static Digits.Figure figure(Quantity quantity, double factor, int mostDecimals) {
     double value = quantity.value() * factor;
     if (quantity.certificate() instanceof Certificate.Certified proved) {
       return Digits.between(value, proved.lower() * factor, proved.upper() * factor, mostDecimals);
@@ -248,6 +263,7 @@ final class TextCard {
     if (result.frame().isPresent()) {
       frame(result.frame().get());
     }
+    new PointSection(result).write(text, ink);
     for (Result.LinearTransmittance psi : result.psi()) {
       text.heading(
           "ψ " + psi.name() + " = L2D less what is counted elsewhere",

@@ -32,6 +32,14 @@ record Units(String unit, double metresPerUnit) {
   /** Btu/(h·ft) in a W/m. */
   static final double FLOW = METRES_PER_FOOT / WATTS_PER_BTU_PER_HOUR;
 
+  /** Btu/(h·°F) in a W/K. */
+  static final double CHI = KELVINS_PER_FAHRENHEIT / WATTS_PER_BTU_PER_HOUR;
+
+  /** Btu/h in a W. */
+  static final double WHOLE_FLOW = 1 / WATTS_PER_BTU_PER_HOUR;
+
+  static final String CHI_NAME = "Btu/(h·°F)";
+  static final String WHOLE_FLOW_NAME = "Btu/h";
   static final String R_NAME = "h·ft²·°F/Btu";
   static final String U_NAME = "Btu/(h·ft²·°F)";
   static final String PSI_NAME = "Btu/(h·ft·°F)";

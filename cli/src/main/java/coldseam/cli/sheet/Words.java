@@ -46,7 +46,7 @@ final class Words {
     return spaces(warm) + " – " + spaces(cold);
   }
 
-  /** Every number that could have proved bounds: couplings, ψ, U and R. */
+  /** Every number that could have proved bounds: couplings, ψ, χ, U and R. */
   static List<Quantity> numbers(Result result) {
     List<Quantity> numbers = new ArrayList<>();
     for (Result.LinearTransmittance psi : result.psi()) {
@@ -55,6 +55,9 @@ final class Words {
     for (Result.EffectiveTransmittance u : result.transmittances()) {
       numbers.add(u.valueWPerM2K());
       numbers.add(u.resistanceM2KPerW());
+    }
+    for (Result.PointTransmittance chi : result.chi()) {
+      numbers.add(chi.valueWPerK());
     }
     for (Result.Coupling coupling : result.couplings()) {
       numbers.add(coupling.valueWPerMK());
@@ -80,6 +83,9 @@ final class Words {
     }
     for (Result.EffectiveTransmittance u : result.transmittances()) {
       add(all, u.tolerance());
+    }
+    for (Result.PointTransmittance chi : result.chi()) {
+      add(all, chi.tolerance());
     }
     for (Result.Coupling coupling : result.couplings()) {
       add(all, coupling.tolerance());

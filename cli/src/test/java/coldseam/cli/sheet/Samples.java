@@ -147,6 +147,7 @@ final class Samples {
                 resistance,
                 0.6,
                 tolerance(u, resistance))),
+        List.of(),
         Optional.empty(),
         List.of(
             space("indoors", 20, coupling.value() * 25),

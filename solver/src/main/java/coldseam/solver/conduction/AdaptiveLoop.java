@@ -54,6 +54,9 @@ final class AdaptiveLoop {
   /** Temperatures wait while energies are off by more than this many times what they may. */
   private static final double ENERGY_FIRST = 4;
 
+  /** The same for a χ: point bridges are small beside what surrounds them. */
+  private static final double LEAST_PART_OF_POINT = 0.001;
+
   /** The loop ends after this many passes whatever is reached. */
   private static final int MOST_PASSES = 60;
 
@@ -267,6 +270,11 @@ final class AdaptiveLoop {
     if (goal.transmittanceAsked() && goal.takenOffWPerMK() > 0) {
       double left = Math.max(conductance - goal.takenOffWPerMK(), LEAST_PART_LEFT * conductance);
       target = Math.min(target, goal.accuracy().transmittanceRelative() * left);
+    }
+    if (goal.pointAsked()) {
+      double left = Math.abs(conductance - goal.takenOffWPerMK());
+      double point = Math.max(left, LEAST_PART_OF_POINT * conductance);
+      target = Math.min(target, goal.accuracy().pointWPerK(point));
     }
     return target;
   }

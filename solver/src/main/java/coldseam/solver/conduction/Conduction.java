@@ -32,7 +32,9 @@ public final class Conduction {
    * @param accuracy the half-widths asked for and the cap on unknowns
    * @param psiAsked whether a ψ is wanted, so that its absolute accuracy counts
    * @param transmittanceAsked whether a U is wanted
-   * @param takenOffWPerMK what is taken off a coupling before the relative accuracy of U counts
+   * @param pointAsked whether a χ is wanted
+   * @param takenOffWPerMK what is taken off a coupling before the relative accuracy of U or χ
+   *     counts
    * @param temperatures which temperatures are wanted
    * @param temperaturesC temperature of every space, °C; decides which points are coldest
    */
@@ -40,6 +42,7 @@ public final class Conduction {
       Accuracy accuracy,
       boolean psiAsked,
       boolean transmittanceAsked,
+      boolean pointAsked,
       double takenOffWPerMK,
       Temperatures temperatures,
       double[] temperaturesC) {
@@ -50,7 +53,7 @@ public final class Conduction {
         boolean transmittanceAsked,
         Temperatures temperatures,
         double[] temperaturesC) {
-      this(accuracy, psiAsked, transmittanceAsked, 0, temperatures, temperaturesC);
+      this(accuracy, psiAsked, transmittanceAsked, false, 0, temperatures, temperaturesC);
     }
   }
 

@@ -8,6 +8,11 @@ import java.util.OptionalDouble;
 
 /** One result asked for, beside what is always given (couplings, flows, coldest surfaces). */
 public sealed interface Wanted {
+  /** What it takes off, where it takes anything off. */
+  default List<Subtraction> subtractions() {
+    return List.of();
+  }
+
   /**
    * A linear transmittance ψ = Σ b·L2D − what is subtracted (ISO 10211:2017, clause 12).
    *
@@ -34,6 +39,28 @@ public sealed interface Wanted {
       warm = List.copyOf(warm);
       cold = List.copyOf(cold);
       weights = Map.copyOf(weights);
+      subtractions = List.copyOf(subtractions);
+    }
+  }
+
+  /**
+   * A point transmittance χ = L3D − Σ U·A − Σ ψ·l of a body of revolution (ISO 10211:2017, clause
+   * 12).
+   *
+   * @param name unique among the χ of a detail
+   * @param of what it is of: "rod", "fixing", "pipe", …
+   * @param warm spaces on the warm side
+   * @param cold spaces on the cold side
+   * @param subtractions what is taken off; empty: every undisturbed construction at a cut-off plane
+   *     that separates the two sides
+   */
+  record Chi(
+      String name, String of, List<String> warm, List<String> cold, List<Subtraction> subtractions)
+      implements Wanted {
+    /** Copies the lists. */
+    public Chi {
+      warm = List.copyOf(warm);
+      cold = List.copyOf(cold);
       subtractions = List.copyOf(subtractions);
     }
   }

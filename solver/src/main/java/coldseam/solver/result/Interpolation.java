@@ -92,6 +92,7 @@ public final class Interpolation {
         couplings,
         psi,
         transmittances,
+        well.chi(),
         well.frame(),
         well.spaces(),
         well.stretches(),

@@ -13,6 +13,7 @@ import coldseam.solver.detail.DetailException;
 import coldseam.solver.detail.Exposure;
 import coldseam.solver.detail.Fault;
 import coldseam.solver.detail.FilmSet;
+import coldseam.solver.detail.Geometry;
 import coldseam.solver.detail.Space;
 import coldseam.solver.detail.Subtraction;
 import coldseam.solver.detail.Wanted;
@@ -43,6 +44,7 @@ public final class Plan {
   private final LinearTransmittances psi;
   private final EffectiveTransmittances transmittances;
   private final FrameTransmittances frames;
+  private final PointTransmittances points;
   private final CutOffChecks cutOffs;
   private final MoistureChecks moisture;
   private final Requirements requirements;
@@ -63,12 +65,14 @@ public final class Plan {
     this.surface = surface;
     Outline outline = new Outline(partition, heatLoss);
     FlankFinder finder = new FlankFinder(detail, outline);
-    flanks = finder.flanks();
+    boolean plane = detail.geometry() == Geometry.PLANE;
+    flanks = plane ? finder.flanks() : List.of();
     lengths = new FlankLengths(outline, flanks, provisional);
     PsiPlanner planner = new PsiPlanner(detail, outline, flanks, lengths);
     psi = new LinearTransmittances(planner.plans(), detail, heatLoss);
     transmittances = new EffectiveTransmittances(detail, outline);
     frames = new FrameTransmittances(detail, outline, flanks, others);
+    points = new PointTransmittances(detail, outline, plane ? List.of() : finder.flanks());
     SectionChecks section = new SectionChecks(detail, outline);
     cutOffs = new CutOffChecks(outline);
     moisture = new MoistureChecks(detail);
@@ -78,6 +82,7 @@ public final class Plan {
     faults.addAll(planner.faults());
     faults.addAll(transmittances.faults());
     faults.addAll(frames.faults());
+    faults.addAll(points.faults());
     faults.addAll(section.faults());
     faults.addAll(moisture.faults());
     for (Map.Entry<Subtraction.OfDetail, Plan> other : others.entrySet()) {
@@ -185,12 +190,19 @@ public final class Plan {
     return transmittances.any() || (frames.any() && !frames.glazed());
   }
 
+  /** Whether a χ is wanted. */
+  public boolean pointWanted() {
+    return points.any();
+  }
+
   /**
    * What is taken off L2D before the relative accuracy of a U counts: Σ U b of the panels of a
-   * frame, W/(m·K); 0 for any other U.
+   * frame, W/(m·K); before that of a χ counts: what the χ takes off, W/K; 0 for any other U.
    */
   public double takenOffWPerMK() {
-    return frames.any() && transmittanceWanted() ? frames.plan().get().takenOffWPerMK() : 0;
+    return frames.any() && transmittanceWanted()
+        ? frames.plan().get().takenOffWPerMK()
+        : points.takenOffWPerK();
   }
 
   /** The lengths of the frame asked for, if one is. */
@@ -374,6 +386,7 @@ public final class Plan {
         couplings.pairs(),
         List.copyOf(allPsi),
         List.copyOf(allU),
+        points.evaluate(couplings, others),
         frame.isPresent() ? Optional.of(frame.get().account()) : Optional.empty(),
         spaces,
         balances.stretches(),
@@ -415,6 +428,7 @@ public final class Plan {
       }
     }
     all.addAll(ofPsi);
+    all.addAll(points.assumptions());
     for (Map.Entry<Subtraction.OfDetail, Plan> other : others.entrySet()) {
       List<Assumption> known = frames.glazed() ? all : List.of();
       all.addAll(other.getValue().heatLossAssumptions(other.getKey().name(), known));

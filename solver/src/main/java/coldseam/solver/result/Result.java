@@ -18,12 +18,14 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 
 /**
- * Everything wanted of one detail. Heat flow is positive from a space into the detail.
+ * Everything wanted of one detail. Heat flow is positive from a space into the detail. Of a body of
+ * revolution all of it counts, not a metre: couplings are in W/K and heat flows in W.
  *
  * @param detail what was solved
  * @param couplings coupling coefficients between all pairs of spaces
  * @param psi linear transmittances in the order asked
  * @param transmittances effective U in the order asked
+ * @param chi point transmittances in the order asked
  * @param frame how U_f, the last of the U, came about, if a frame is asked for
  * @param spaces one entry a space, in the detail's order
  * @param stretches one entry a named stretch, in the detail's order
@@ -53,6 +55,7 @@ public record Result(
     List<Coupling> couplings,
     List<LinearTransmittance> psi,
     List<EffectiveTransmittance> transmittances,
+    List<PointTransmittance> chi,
     Optional<Frame> frame,
     List<SpaceResult> spaces,
     List<StretchResult> stretches,
@@ -182,6 +185,55 @@ public record Result(
       Quantity valueWPerMK,
       List<Subtracted> subtracted,
       List<Coupling> parts,
+      List<Sensitivity> sensitivities,
+      Optional<Tolerance> tolerance) {}
+
+  /**
+   * One term taken off L3D: a surface U·A, a line ψ·l, or another detail's L3D.
+   *
+   * @param name the undisturbed construction or part
+   * @param uWPerM2K U of a surface, W/(m²·K)
+   * @param areaM2 its area, m²; less than 0 where it is missing
+   * @param psiWPerMK conductance of a metre of a line, W/(m·K)
+   * @param lengthM its length, m
+   * @param valueWPerK what is taken off, W/K
+   * @param derivation where it comes from, in words
+   */
+  public record PointTerm(
+      String name,
+      Optional<Bracket> uWPerM2K,
+      OptionalDouble areaM2,
+      Optional<Bracket> psiWPerMK,
+      OptionalDouble lengthM,
+      Bracket valueWPerK,
+      String derivation) {
+    /** The same with another worth, W/K. */
+    PointTerm worth(Bracket otherWPerK) {
+      return new PointTerm(name, uWPerM2K, areaM2, psiWPerMK, lengthM, otherWPerK, derivation);
+    }
+  }
+
+  /**
+   * χ.
+   *
+   * @param name its name in the case
+   * @param of what it is of
+   * @param warm spaces on the warm side
+   * @param cold spaces on the cold side
+   * @param couplingWPerK the L3D it starts from
+   * @param valueWPerK χ, W/K
+   * @param subtracted what was taken off
+   * @param sensitivities ∂χ of every material and film, what is taken off included
+   * @param tolerance what the tolerances of conductivities add; empty if none is stated
+   */
+  public record PointTransmittance(
+      String name,
+      String of,
+      List<String> warm,
+      List<String> cold,
+      Quantity couplingWPerK,
+      Quantity valueWPerK,
+      List<PointTerm> subtracted,
       List<Sensitivity> sensitivities,
       Optional<Tolerance> tolerance) {}
 

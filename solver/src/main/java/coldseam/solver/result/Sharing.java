@@ -4,6 +4,7 @@ import coldseam.solver.conduction.Dissipation;
 import coldseam.solver.conduction.Solution;
 import coldseam.solver.detail.Area;
 import coldseam.solver.detail.Detail;
+import coldseam.solver.detail.Geometry;
 import coldseam.solver.detail.Material;
 import java.util.ArrayList;
 import java.util.Comparator;
@@ -113,7 +114,10 @@ final class Sharing {
       }
     }
     return high.size() + low.size() == x.length
-        ? "L2D " + String.join(" + ", high) + " – " + String.join(" + ", low)
+        ? (detail.geometry() == Geometry.PLANE ? "L2D " : "L3D ")
+            + String.join(" + ", high)
+            + " – "
+            + String.join(" + ", low)
         : "θᵀAθ, the heat flows of all spaces times their temperatures";
   }
 }
