@@ -181,7 +181,7 @@ final class ReadCase implements Case {
     Node node = find(fault.part(), fault.name());
     String message = fault.message();
     if (!fault.name().isEmpty() && !fault.part().equals("section")) {
-      String part = fault.part().equals("psi") ? "ψ" : fault.part();
+      String part = symbol(fault.part());
       message = part + " `" + fault.name() + "`: " + message;
     }
     int cut = message.indexOf("; ");
@@ -192,6 +192,14 @@ final class ReadCase implements Case {
         node == null ? 0 : node.column(),
         cut < 0 ? message : message.substring(0, cut),
         right);
+  }
+
+  private static String symbol(String part) {
+    return switch (part) {
+      case "psi" -> "ψ";
+      case "chi" -> "χ";
+      default -> part;
+    };
   }
 
   /** Where a thing is written, in the base case or else in the first variant that has it. */

@@ -243,7 +243,7 @@ class MessageTest {
         "8:43: stretch `t` has a film but no space; add `space: ` and the space it faces",
         "9:13: flank `f` has no cut-off plane; add `cut: left`, `right`, `top`, `bottom` or `[x,"
             + " y]`, or both `U` and `length`",
-        "10:10: an expectation does not say of what; add one of `L2D`, `psi`, `U`, `R`, `flow`,"
+        "10:10: an expectation does not say of what; add one of `L2D`, `L3D`, `psi`, `chi`, `U`, `R`, `flow`,"
             + " `temperature`, `coldest`, `fRsi` and `weight`",
         "10:10: an expectation has no `within`; add `within: …`, e.g. `0.1 %`",
         "10:10: an expectation has no `source`; add `source: ` and where the value comes from",

@@ -40,10 +40,17 @@ public final class DrawnDetail {
   private final List<Wanted> wanted = new ArrayList<>();
   private UnaryOperator<Point> move = UnaryOperator.identity();
   private View view = View.PLAN;
+  private Geometry geometry = Geometry.PLANE;
 
   /** Moves every point laid after this, m to m. */
   public DrawnDetail moved(UnaryOperator<Point> by) {
     move = by;
+    return this;
+  }
+
+  /** Turns the section about x = 0. */
+  public DrawnDetail revolved() {
+    geometry = Geometry.AXISYMMETRIC;
     return this;
   }
 
@@ -202,8 +209,7 @@ public final class DrawnDetail {
   }
 
   public Detail detail() {
-    return new Detail(
-        "test", Geometry.PLANE, view, areas, spaces, stretches, flanks, wanted, List.of());
+    return new Detail("test", geometry, view, areas, spaces, stretches, flanks, wanted, List.of());
   }
 
   public Partition partition() {

@@ -6,6 +6,7 @@ import coldseam.solver.conduction.Solution;
 import coldseam.solver.detail.Conditions;
 import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.Fill;
+import coldseam.solver.detail.Geometry;
 import coldseam.solver.detail.Space;
 import coldseam.solver.detail.VentilatedAir;
 import coldseam.solver.result.Result;
@@ -73,6 +74,7 @@ final class DrawnSection {
   private final List<CutOff> cutOffs = new ArrayList<>();
   private final List<Polyline> joints = new ArrayList<>();
   private Box bounds = Box.EMPTY;
+  private Optional<Polyline> axis = Optional.empty();
 
   private DrawnSection(Result result) {
     this.result = result;
@@ -88,6 +90,10 @@ final class DrawnSection {
     section.collectSurfaces();
     section.collectCutOffs();
     section.collectJoints();
+    if (result.detail().geometry() == Geometry.AXISYMMETRIC) {
+      double x = -section.partition.origin().x();
+      section.axis = Optional.of(Polyline.of(x, section.bounds.y0(), x, section.bounds.y1()));
+    }
     return section;
   }
 
@@ -298,6 +304,11 @@ final class DrawnSection {
 
   List<Surface> surfaces() {
     return surfaces;
+  }
+
+  /** The axis that the section is turned about, as far as the section goes. */
+  Optional<Polyline> axis() {
+    return axis;
   }
 
   List<CutOff> cutOffs() {

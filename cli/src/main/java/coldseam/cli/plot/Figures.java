@@ -8,8 +8,9 @@ import coldseam.cli.text.Digits;
  * Everything in the results is SI; only what is written is converted.
  *
  * @param caption the unit of lengths
+ * @param whole whether flows and transmittances are of a whole body of revolution, not of a metre
  */
-record Figures(Caption caption) {
+record Figures(Caption caption, boolean whole) {
   /** Between a number and its unit: a space at which no line is broken. */
   static final String JOINED = "\u00a0";
 
@@ -119,13 +120,18 @@ record Figures(Caption caption) {
    * @param halfWidthWPerM how far it may be off
    */
   String flow(double wPerM, double halfWidthWPerM) {
-    double factor = customary() ? FLOW : 1;
+    double factor = customary() ? flowScale() : 1;
     return Digits.of(wPerM * factor, halfWidthWPerM * factor, 3).value();
   }
 
-  /** A ψ or a change of it on the written scale. */
+  /** Btu/(h·ft) in a W/m, or Btu/h in a W. */
+  private double flowScale() {
+    return whole ? 1 / WATTS : FLOW;
+  }
+
+  /** A ψ or χ or a change of it on the written scale. */
   double scaledLinear(double wPerMK) {
-    return customary() ? wPerMK * FLOW * KELVINS : wPerMK;
+    return customary() ? wPerMK * flowScale() * KELVINS : wPerMK;
   }
 
   /** A ψ or a change of it, without its unit. */
@@ -134,20 +140,26 @@ record Figures(Caption caption) {
   }
 
   String linearUnit() {
+    if (whole) {
+      return customary() ? "Btu/(h·°F)" : "W/K";
+    }
     return customary() ? "Btu/(h·ft·°F)" : "W/(m·K)";
   }
 
   /** A heat flow per metre on the written scale. */
   double scaledFlow(double wPerM) {
-    return customary() ? wPerM * FLOW : wPerM;
+    return customary() ? wPerM * flowScale() : wPerM;
   }
 
   /** A heat flow per metre of the written scale in W/m. */
   double flowWPerM(double scaled) {
-    return customary() ? scaled / FLOW : scaled;
+    return customary() ? scaled / flowScale() : scaled;
   }
 
   String flowUnit() {
+    if (whole) {
+      return customary() ? "Btu/h" : "W";
+    }
     return customary() ? "Btu/(h·ft)" : "W/m";
   }
 

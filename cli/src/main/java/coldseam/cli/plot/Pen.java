@@ -13,6 +13,7 @@ record Pen(float width, float... dashes) {
   static final Pen FINE = new Pen(0.7f);
   static final Pen MEDIUM = new Pen(1.1f);
   static final Pen HEAVY = new Pen(1.7f);
+  static final Pen AXIS = new Pen(0.7f, 18, 3, 3, 3);
   static final Pen CUT_OFF = new Pen(1.2f, 11, 3, 2.5f, 3);
 
   private static final float MITER = 4;

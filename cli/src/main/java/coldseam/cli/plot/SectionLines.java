@@ -14,6 +14,7 @@ final class SectionLines {
 
   private static final double SYMMETRY_TICK = 5;
   private static final double BEYOND = 7;
+  private static final double BEYOND_AXIS = 12;
 
   private final DrawnSection section;
   private final Panel panel;
@@ -65,6 +66,21 @@ final class SectionLines {
     canvas.layer(name("cut-off-planes"));
     canvas.stroke(planes, Palette.INK, Pen.CUT_OFF);
     canvas.stroke(ticks, Palette.INK, Pen.MEDIUM);
+    if (section.axis().isPresent()) {
+      Path2D axis = new Path2D.Double();
+      append(longer(section.axis().get().on(panel), BEYOND_AXIS), axis);
+      canvas.layer(name("axis"));
+      canvas.stroke(axis, Palette.INK, Pen.AXIS);
+    }
+  }
+
+  /** A line that reaches beyond both ends. */
+  private static Polyline longer(Polyline line, double by) {
+    double dx = line.x(1) - line.x(0);
+    double dy = line.y(1) - line.y(0);
+    double part = by / Math.hypot(dx, dy);
+    return Polyline.of(
+        line.x(0) - part * dx, line.y(0) - part * dy, line.x(1) + part * dx, line.y(1) + part * dy);
   }
 
   private void plane(DrawnSection.CutOff cutOff, Path2D planes, Path2D ticks) {
@@ -77,13 +93,7 @@ final class SectionLines {
     }
     double ux = dx / length;
     double uy = dy / length;
-    Polyline longer =
-        Polyline.of(
-            line.x(0) - BEYOND * ux,
-            line.y(0) - BEYOND * uy,
-            line.x(1) + BEYOND * ux,
-            line.y(1) + BEYOND * uy);
-    append(longer, planes);
+    append(longer(line, BEYOND), planes);
     if (cutOff.symmetry()) {
       for (int end = 0; end < 2; end++) {
         for (double back : new double[] {1.5, 4.5}) {

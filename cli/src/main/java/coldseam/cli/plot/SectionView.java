@@ -436,5 +436,8 @@ final class SectionView extends View {
           "cut-off plane, no heat crosses" + (symmetric ? "; double ticks: symmetry" : ""),
           "");
     }
+    if (section().axis().isPresent()) {
+      key.sample(new Key.Line(Pen.AXIS), "axis of revolution: x is the radius", "");
+    }
   }
 }

@@ -2,7 +2,6 @@ package coldseam.cli.plot;
 
 import coldseam.cli.plot.Plots.Caption;
 import coldseam.solver.detail.FilmSet;
-import coldseam.solver.detail.Geometry;
 import coldseam.solver.detail.Space;
 import coldseam.solver.result.Result;
 import java.util.ArrayList;
@@ -23,7 +22,7 @@ abstract class View {
     this.result = result;
     this.caption = caption;
     this.section = section;
-    figures = new Figures(caption);
+    figures = new Figures(caption, round());
   }
 
   final Result result() {
@@ -97,7 +96,7 @@ abstract class View {
 
   /** Whether the section is turned about its axis. */
   final boolean round() {
-    return section.detail().geometry() == Geometry.AXISYMMETRIC;
+    return section.axis().isPresent();
   }
 
   /** Whether bounds of every coupling are proved. */

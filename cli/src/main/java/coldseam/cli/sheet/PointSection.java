@@ -3,6 +3,7 @@ package coldseam.cli.sheet;
 import coldseam.cli.text.Digits;
 import coldseam.cli.text.Ink;
 import coldseam.cli.text.Json;
+import coldseam.cli.text.Manuscript;
 import coldseam.cli.text.Table;
 import coldseam.solver.detail.FilmSet;
 import coldseam.solver.result.Result;
