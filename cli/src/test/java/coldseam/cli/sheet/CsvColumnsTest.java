@@ -27,7 +27,10 @@ class CsvColumnsTest {
           + "fRsi,g,share,changePer10Percent_W_per_mK,toleranceHalfWidth_W_per_mK,"
           + "toleranceLower_W_per_mK,toleranceUpper_W_per_mK,toleranceHalfWidth_W_per_m2K,"
           + "toleranceLower_W_per_m2K,toleranceUpper_W_per_m2K,"
-          + "requiredFRsi,margin_K,surfaceHumidity,outdoors_C,dewPoint_C,mouldLimit_C";
+          + "requiredFRsi,margin_K,surfaceHumidity,outdoors_C,dewPoint_C,mouldLimit_C,"
+          + "value_W_per_K,lower_W_per_K,upper_W_per_K,estimatedHalfWidth_W_per_K,area_m2,"
+          + "psi_W_per_mK,heatFlow_W,changePer10Percent_W_per_K,toleranceHalfWidth_W_per_K,"
+          + "toleranceLower_W_per_K,toleranceUpper_W_per_K";
 
   private static Path root() {
     Path folder = Path.of("").toAbsolutePath();
@@ -70,14 +73,15 @@ class CsvColumnsTest {
   void every_quantity_is_told_in_the_readme() throws Exception {
     String readme = Files.readString(root().resolve("README.md"));
     Set<String> met = new TreeSet<>();
-    for (String name : List.of("balcony.yaml", "timber-stud.yaml", "cellar.yaml")) {
+    for (String name :
+        List.of("balcony.yaml", "timber-stud.yaml", "cellar.yaml", "rod-through-wall.yaml")) {
       List<String[]> rows = rows(name);
       for (String[] row : rows.subList(1, rows.size())) {
         met.add(row[2]);
       }
     }
     assertThat(met)
-        .contains("coupling", "psi", "subtracted", "U", "R", "space", "coldest", "share");
+        .contains("coupling", "psi", "chi", "subtracted", "U", "R", "space", "coldest", "share");
     for (String quantity : met) {
       assertThat(readme).contains("`" + quantity + "`");
     }
