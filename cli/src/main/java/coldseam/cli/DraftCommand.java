@@ -91,7 +91,7 @@ final class DraftCommand implements Command {
     Draft draft = draft(drawing, shown, String.valueOf(picture.getFileName()), said);
     Map<Path, byte[]> written = new LinkedHashMap<>();
     written.put(picture, picture(draft, stem(file)).getBytes(StandardCharsets.UTF_8));
-    written.put(file, draft.text().getBytes(StandardCharsets.UTF_8));
+    written.put(file, here.named(draft.text()).getBytes(StandardCharsets.UTF_8));
     files.write(written);
     List<String> warnings = new ArrayList<>(draft.warnings());
     if (shown.startsWith("..") || Path.of(shown).isAbsolute()) {
@@ -106,7 +106,7 @@ final class DraftCommand implements Command {
     if (typed.has(JSON)) {
       here.out().println(json(draft, here.shown(file), here.shown(picture), warnings));
     } else if (!typed.has(QUIET)) {
-      here.out().print(card(draft, here.shown(file), here.shown(picture)));
+      here.out().print(here.named(card(draft, here.shown(file), here.shown(picture))));
     }
     return ExitCode.DONE;
   }

@@ -11,6 +11,7 @@ import java.nio.file.FileSystemException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.Optional;
 
 /** The one place that turns what went wrong into words and an exit code. */
 final class Failure {
@@ -35,8 +36,8 @@ final class Failure {
     }
     if (failure instanceof UsageException usage) {
       String command = usage.command().isEmpty() ? "" : " " + usage.command();
-      err.println(here.errInk().bad("coldseam" + command + ": ") + usage.getMessage());
-      err.println(here.errInk().faint("cli/coldseam" + command + " --help says more"));
+      err.println(here.errInk().bad("coldseam" + command + ": ") + here.named(usage.getMessage()));
+      err.println(here.errInk().faint(here.named("cli/coldseam" + command + " --help says more")));
       return ExitCode.BAD_INPUT;
     }
     if (failure instanceof IOException io) {
@@ -55,7 +56,9 @@ final class Failure {
               problem.line(),
               problem.column(),
               problem.wrong(),
-              problem.right());
+              problem.right().isEmpty()
+                  ? problem.right()
+                  : Optional.of(here.named(problem.right().get())));
       here.err().println(shown.text());
     }
     if (problems.size() > 1) {

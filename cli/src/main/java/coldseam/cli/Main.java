@@ -3,6 +3,8 @@ package coldseam.cli;
 import coldseam.cli.text.Table;
 import java.io.FileDescriptor;
 import java.io.FileOutputStream;
+import java.io.IOException;
+import java.io.InputStream;
 import java.io.PrintStream;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
@@ -16,6 +18,10 @@ public final class Main {
   /** The version, as in the build. */
   static final String VERSION = "0.1.0-SNAPSHOT";
 
+  /** What it is for, in one line. */
+  static final String PURPOSE =
+      "heat flow, ψ, U and surface temperatures of building junctions in two dimensions";
+
   private static final List<String> NAMES =
       List.of("solve", "check", "sweep", "seek", "draft", "materials", "prove", "ledger");
 
@@ -24,9 +30,9 @@ public final class Main {
   /**
    * Runs the program and ends the process.
    *
-   * <p>Three system properties tell what only the launcher knows: {@code coldseam.home}, the folder
-   * with {@code cases}; {@code coldseam.out} and {@code coldseam.err}, {@code terminal} if somebody
-   * looks at that stream.
+   * <p>System properties tell what only the launcher knows: {@code coldseam.home}, the folder with
+   * {@code cases}; {@code coldseam.program}, how the program is started; {@code coldseam.out} and
+   * {@code coldseam.err}, {@code terminal} if somebody looks at that stream.
    *
    * @param args what was typed
    */
@@ -44,7 +50,8 @@ public final class Main {
                 System.getenv(),
                 "terminal".equals(System.getProperty("coldseam.out")),
                 "terminal".equals(System.getProperty("coldseam.err")),
-                home.isEmpty() ? Optional.empty() : Optional.of(Path.of(home))));
+                home.isEmpty() ? Optional.empty() : Optional.of(Path.of(home)),
+                System.getProperty("coldseam.program", Surroundings.IN_SOURCES)));
     out.flush();
     err.flush();
     System.exit(code);
@@ -86,29 +93,41 @@ public final class Main {
 
   private static int dispatch(List<String> words, Surroundings here) throws Exception {
     if (words.isEmpty()) {
-      here.err().print(overview());
+      here.err().print(here.named(overview()));
       return ExitCode.BAD_INPUT;
     }
     String name = words.get(0);
     List<String> rest = words.subList(1, words.size());
     switch (name) {
       case "--version" -> {
-        here.out().println("coldseam " + VERSION);
+        here.out().println(version());
         return ExitCode.DONE;
       }
       case "--help", "-h" -> {
-        here.out().print(overview());
+        here.out().print(here.named(overview()));
+        return ExitCode.DONE;
+      }
+      case "--completion" -> {
+        if (rest.size() != 1) {
+          throw new UsageException("", "--completion needs the name of a shell: bash or zsh");
+        }
+        here.out().print(new Completions(syntaxes()).script(rest.get(0)));
+        return ExitCode.DONE;
+      }
+      case "--man" -> {
+        here.out().print(ManualPage.of(syntaxes()));
         return ExitCode.DONE;
       }
       case "help" -> {
-        here.out().print(rest.isEmpty() ? overview() : command(rest.get(0)).syntax().help());
+        String text = rest.isEmpty() ? overview() : command(rest.get(0)).syntax().help();
+        here.out().print(here.named(text));
         return ExitCode.DONE;
       }
       default -> {
         Command command = command(name);
         Syntax.Typed typed = command.syntax().read(rest);
         if (typed.has("--help")) {
-          here.out().print(command.syntax().help());
+          here.out().print(here.named(command.syntax().help()));
           return ExitCode.DONE;
         }
         return command.run(typed, here);
@@ -128,6 +147,22 @@ public final class Main {
       case "ledger" -> new LedgerCommand();
       default -> throw unknown(name);
     };
+  }
+
+  private static List<Syntax> syntaxes() throws UsageException {
+    List<Syntax> syntaxes = new ArrayList<>();
+    for (String name : NAMES) {
+      syntaxes.add(command(name).syntax());
+    }
+    return syntaxes;
+  }
+
+  /** The version, and the licences of the program and of what it comes with. */
+  static String version() throws IOException {
+    try (InputStream notice = Main.class.getResourceAsStream("/coldseam/NOTICE")) {
+      String text = new String(notice.readAllBytes(), StandardCharsets.UTF_8);
+      return "coldseam " + VERSION + text.substring(text.indexOf('\n')).stripTrailing();
+    }
   }
 
   private static UsageException unknown(String name) {
@@ -155,13 +190,16 @@ public final class Main {
     }
     return "coldseam "
         + VERSION
-        + ": heat flow, ψ, U and surface temperatures of building junctions in two dimensions\n\n"
+        + ": "
+        + PURPOSE
+        + "\n\n"
         + "  cli/coldseam COMMAND [OPTION…] …\n\n"
         + "Commands\n"
         + commands.text()
         + "\nExamples\n"
         + String.join("", examples)
-        + "\nEvery command has --help, --json for machines and --quiet; --version is the program's."
+        + "\nEvery command has --help, --json for machines and --quiet. Of the program: --version and"
+        + "\nlicences, --man the manual page, --completion bash or zsh a script for that shell."
         + "\nExit codes: 0 done; 1 done, but a stated requirement is not met; 2 bad input or usage;"
         + "\n3 accuracy not reached; 70 a defect of the program.\n";
   }

@@ -16,6 +16,7 @@ import java.util.Optional;
  * @param outIsTerminal whether somebody looks at {@code out}
  * @param errIsTerminal whether somebody looks at {@code err}
  * @param home the folder of the program with its {@code cases}, if known
+ * @param program how the user starts the program: {@code cli/coldseam} in its sources
  */
 record Surroundings(
     PrintStream out,
@@ -24,7 +25,39 @@ record Surroundings(
     Map<String, String> environment,
     boolean outIsTerminal,
     boolean errIsTerminal,
-    Optional<Path> home) {
+    Optional<Path> home,
+    String program) {
+  /** How the program is started in its sources, and called in texts until it is known better. */
+  static final String IN_SOURCES = "cli/coldseam";
+
+  /** Surroundings in the sources of the program. */
+  Surroundings(
+      PrintStream out,
+      PrintStream err,
+      Path cwd,
+      Map<String, String> environment,
+      boolean outIsTerminal,
+      boolean errIsTerminal,
+      Optional<Path> home) {
+    this(out, err, cwd, environment, outIsTerminal, errIsTerminal, home, IN_SOURCES);
+  }
+
+  /** A text of ours that calls the program as the user does. */
+  String named(String text) {
+    return named(text, program);
+  }
+
+  /**
+   * A text of ours that calls the program so.
+   *
+   * @param text the text, with the name it has in the sources
+   * @param program the name
+   * @return the text
+   */
+  static String named(String text, String program) {
+    return program.equals(IN_SOURCES) ? text : text.replace(IN_SOURCES + " ", program + " ");
+  }
+
   /** How to print on {@code out}: in colour on a terminal, unless NO_COLOR is set. */
   Ink outInk() {
     return outIsTerminal && colour() ? Ink.TERMINAL : Ink.NONE;

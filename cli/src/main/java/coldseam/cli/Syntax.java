@@ -154,6 +154,13 @@ record Syntax(
             .orElse("there is no option " + typed + "; there are " + String.join(", ", names)));
   }
 
+  /** Every option, {@code --help} last. */
+  List<Option> all() {
+    List<Option> all = new ArrayList<>(options);
+    all.add(HELP);
+    return all;
+  }
+
   private UsageException wrong(String message) {
     return new UsageException(command, message);
   }
@@ -165,10 +172,9 @@ record Syntax(
     text.append("  cli/coldseam ").append(command).append(" [OPTION…] ").append(operands);
     text.append("\n\n").append(Table.wrapped(description, PAGE, "")).append("\n\nOptions\n");
     Table table = new Table("ll", 2, PAGE);
-    for (Option option : options) {
+    for (Option option : all()) {
       table.row((option.name + " " + option.value).strip(), option.meaning);
     }
-    table.row(HELP.name, HELP.meaning);
     text.append(table.text()).append('\n');
     text.append(examples.size() == 1 ? "Example\n" : "Examples\n");
     for (Example example : examples) {

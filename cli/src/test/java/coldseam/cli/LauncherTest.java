@@ -90,7 +90,7 @@ class LauncherTest {
   void it_starts_from_anywhere_and_makes_its_archive_once() throws Exception {
     Path link = Files.createSymbolicLink(dir.resolve("seam"), home.resolve("cli/coldseam"));
     Ran first = start(Map.of(), link.toString(), "--version").end();
-    assertThat(first).isEqualTo(new Ran(0, "coldseam " + Main.VERSION + "\n", ""));
+    assertThat(first).isEqualTo(new Ran(0, Main.version() + "\n", ""));
     Path archive = home.resolve("cli/target/launch/classes.jsa");
     assertThat(archive).isNotEmptyFile();
     Object made = Files.getLastModifiedTime(archive);
@@ -116,8 +116,8 @@ class LauncherTest {
     String program = home.resolve("cli/coldseam").toString();
     Started one = start(Map.of(), program, "--version");
     Started other = start(Map.of(), program, "--version");
-    assertThat(one.end()).isEqualTo(new Ran(0, "coldseam " + Main.VERSION + "\n", ""));
-    assertThat(other.end()).isEqualTo(new Ran(0, "coldseam " + Main.VERSION + "\n", ""));
+    assertThat(one.end()).isEqualTo(new Ran(0, Main.version() + "\n", ""));
+    assertThat(other.end()).isEqualTo(new Ran(0, Main.version() + "\n", ""));
     try (Stream<Path> files = Files.list(home.resolve("cli/target/launch"))) {
       assertThat(files.map(file -> file.getFileName().toString()))
           .containsExactlyInAnyOrder("classes.jsa", "java");
@@ -132,8 +132,7 @@ class LauncherTest {
     Files.createDirectory(home.resolve("cli/target/launch"));
     Files.writeString(home.resolve("cli/target/launch/classes.jsa"), "no archive");
     Files.writeString(home.resolve("cli/target/launch/java"), JAVA_HOME + "/bin/java\n");
-    assertThat(launch(Map.of(), "--version"))
-        .isEqualTo(new Ran(0, "coldseam " + Main.VERSION + "\n", ""));
+    assertThat(launch(Map.of(), "--version")).isEqualTo(new Ran(0, Main.version() + "\n", ""));
   }
 
   @Test

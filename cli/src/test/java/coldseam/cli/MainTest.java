@@ -41,9 +41,12 @@ class MainTest {
   }
 
   @Test
-  void the_version_is_that_of_the_build() {
+  void the_version_is_that_of_the_build() throws IOException {
     assertThat(Main.VERSION).isEqualTo(System.getProperty("coldseam.version"));
-    assertThat(Ran.in(dir, "--version").out()).isEqualTo("coldseam " + Main.VERSION + "\n");
+    assertThat(Ran.in(dir, "--version").out())
+        .startsWith("coldseam " + Main.VERSION + "\n")
+        .contains("Apache License, Version 2.0", "Eclipse Public License", "as is")
+        .isEqualTo(Main.version() + "\n");
   }
 
   @Test
