@@ -142,7 +142,8 @@ final class Completions {
       described.append('\n');
       cases.append("    ").append(command.command()).append(")\n      _arguments -s");
       for (Syntax.Option option : command.all()) {
-        String spec = option.name() + (option.value().isEmpty() ? "" : "=");
+        String spec =
+            (option.again() ? "*" : "") + option.name() + (option.value().isEmpty() ? "" : "=");
         spec += "[" + round(option.meaning()) + "]";
         if (!option.value().isEmpty()) {
           spec += ":" + option.value() + ":" + zsh(option.value());

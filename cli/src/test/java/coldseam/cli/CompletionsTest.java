@@ -102,7 +102,7 @@ class CompletionsTest {
       String ofMan = man.substring(man.indexOf(head) + 4);
       ofMan = ofMan.substring(0, ofMan.indexOf(".SH "));
       for (String option : options) {
-        assertThat(ofZsh).containsPattern("'" + option + "=?\\[");
+        assertThat(ofZsh).containsPattern("'[*]?" + option + "=?\\[");
         assertThat(ofMan).contains(".B " + option.replace("-", "\\-"));
       }
       if (there("bash")) {
