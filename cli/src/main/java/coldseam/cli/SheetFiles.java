@@ -1,6 +1,7 @@
 package coldseam.cli;
 
 import coldseam.cases.Case;
+import coldseam.cli.plot.PdfDocument;
 import coldseam.cli.plot.Plots;
 import coldseam.cli.sheet.Picture;
 import coldseam.cli.sheet.Provenance;
@@ -23,6 +24,15 @@ import java.util.Map;
 /** The sheet for the file, as a page for a browser and as PDF. */
 record SheetFiles(Subject subject, Provenance provenance) {
   static final String PAGE = "sheet.html";
+  static final String PDF = "sheet.pdf";
+
+  /** Room for a plot within the margins of a page, points: A4, or Letter, which is less tall. */
+  private static final double PLOT_WIDTH = 510;
+
+  private static final double PLOT_HEIGHT = 620;
+
+  /** Room for the section, which follows the title block and the question. */
+  private static final double SECTION_HEIGHT = 470;
 
   /** The plots that show values under a pointer. */
   private static final List<Plots.Kind> SOUNDED =
@@ -77,6 +87,27 @@ record SheetFiles(Subject subject, Provenance provenance) {
       pictures.add(new Picture(kind.stem(), caption(kind), markup));
     }
     return Sheet.page(subject, result, inspection, provenance, pictures, plots.soundings(SOUNDED));
+  }
+
+  /**
+   * The sheet as PDF: A4, or Letter for a case drawn in inches.
+   *
+   * @param result the result
+   * @param inspection what was understood of the case
+   * @param plots plots of the result
+   * @param kinds which of them
+   * @return the bytes of the file
+   */
+  byte[] pdf(Result result, Solver.Inspection inspection, Plots plots, List<Plots.Kind> kinds) {
+    List<Picture> pictures = new ArrayList<>();
+    for (Plots.Kind kind : kinds) {
+      String element =
+          PdfDocument.element(
+              plots, kind, PLOT_WIDTH, kind == Plots.Kind.SECTION ? SECTION_HEIGHT : PLOT_HEIGHT);
+      pictures.add(new Picture(kind.stem(), caption(kind), element));
+    }
+    String html = Sheet.paper(subject, result, inspection, provenance, pictures);
+    return PdfDocument.of(html, plots, "Coldseam " + subject.version());
   }
 
   private static String caption(Plots.Kind kind) {

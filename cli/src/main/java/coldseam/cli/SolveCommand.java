@@ -39,6 +39,7 @@ final class SolveCommand implements Command {
   private static final String FIELD = "field.vtu";
   private static final String NO_PLOTS = "--no-plots";
   private static final String SHEET = "--sheet";
+  private static final String PDF = "--pdf";
   private static final String ACCURACY = "--accuracy";
   private static final String MOST_UNKNOWNS = "--most-unknowns";
   private static final String DRAWING = "--drawing";
@@ -88,6 +89,7 @@ final class SolveCommand implements Command {
                 "",
                 "write sheet.html too: all of it on one page for the project's file, with the"
                     + " title block of the case; it needs no network"),
+            new Syntax.Option(PDF, "", "write the same as sheet.pdf"),
             new Syntax.Option(
                 ACCURACY,
                 "LIST",
@@ -197,7 +199,7 @@ final class SolveCommand implements Command {
   }
 
   private static boolean sheet(Syntax.Typed typed) {
-    return typed.has(SHEET);
+    return typed.has(SHEET) || typed.has(PDF);
   }
 
   /** Reads cases; a building among them is told as what it is. */
@@ -424,6 +426,9 @@ final class SolveCommand implements Command {
     if (typed.has(SHEET)) {
       names.add(SheetFiles.PAGE);
     }
+    if (typed.has(PDF)) {
+      names.add(SheetFiles.PDF);
+    }
     return names;
   }
 
@@ -454,11 +459,16 @@ final class SolveCommand implements Command {
           files.put(kind.stem() + ".png", plots.png(kind));
         }
       }
-      if (typed.has(SHEET)) {
+      if (job.sheet().isPresent()) {
+        SheetFiles sheet = job.sheet().get();
         Solver.Inspection inspection =
             CaseList.work(job.from(), job.variant(), job.changes(), new Inspecting());
-        String page = job.sheet().get().page(result, inspection, plots, svgs);
-        files.put(SheetFiles.PAGE, bytes(page));
+        if (typed.has(SHEET)) {
+          files.put(SheetFiles.PAGE, bytes(sheet.page(result, inspection, plots, svgs)));
+        }
+        if (typed.has(PDF)) {
+          files.put(SheetFiles.PDF, sheet.pdf(result, inspection, plots, PLOTS));
+        }
       }
     } catch (NoFontException e) {
       throw new UsageException(NAME, e.getMessage());

@@ -221,7 +221,7 @@ public final class Plots {
     return all.raw("plots", plots.endArray().text()).endObject().text();
   }
 
-  private View view(Kind kind) {
+  View view(Kind kind) {
     return switch (kind) {
       case SECTION -> new SectionView(result, caption, section);
       case TEMPERATURE -> new TemperatureView(result, caption, section);

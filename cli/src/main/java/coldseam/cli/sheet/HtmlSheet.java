@@ -78,7 +78,9 @@ final class HtmlSheet {
     StringBuilder page = new StringBuilder("<html lang=\"en\">\n<head>\n");
     head(page);
     page.append("<style>").append(resource("paper.css"));
-    page.append("@page { @bottom-left { content: \"").append(runningTitle()).append("\" } }\n");
+    page.append("@page { size: ").append(subject.unit().equals("in") ? "Letter" : "A4");
+    page.append("; @bottom-left { font-family: sheet; font-size: 7pt; color: #5a626a; content: \"");
+    page.append(runningTitle()).append("\" } }\n");
     page.append("</style>\n</head>\n");
     body(page, pictures);
     return page.append("</body>\n</html>\n").toString();

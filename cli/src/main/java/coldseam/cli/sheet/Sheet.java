@@ -72,6 +72,25 @@ public final class Sheet {
   }
 
   /**
+   * The sheet for the file as HTML to be set on paper, without a script.
+   *
+   * @param subject what it is about
+   * @param result the result
+   * @param inspection what was understood of the case
+   * @param provenance title block and sources
+   * @param pictures elements that stand for the plots, in order
+   * @return the page, well-formed
+   */
+  public static String paper(
+      Subject subject,
+      Result result,
+      Solver.Inspection inspection,
+      Provenance provenance,
+      List<Picture> pictures) {
+    return new HtmlSheet(subject, result, inspection, provenance).forPaper(pictures);
+  }
+
+  /**
    * The card of a window.
    *
    * @param of the window and its U_w
