@@ -134,6 +134,9 @@ class ArchitectureTest {
     room("org.snakeyaml..", "coldseam.cases..");
     room("com.ezylang..", "coldseam.cases..");
     room("java.awt..", "coldseam.cli.plot..");
+    room("com.openhtmltopdf..", "coldseam.cli.plot..");
+    room("org.apache.pdfbox..", "coldseam.cli.plot..");
+    room("org.apache.fontbox..", "coldseam.cli.plot..");
   }
 
   private static void room(String library, String room) {
