@@ -71,7 +71,7 @@ final class CavityAssumptions {
           new Assumption(
               "emissivity of " + String.join(", ", unknown) + " in cavities",
               Wording.figure(Limits.EMISSIVITY) + ", none is stated",
-              "ISO 10077-2 and ISO 6946, non-metallic surfaces"));
+              "ISO 10077-2 and ISO 6946, unless a lower one of a metallic surface is secured"));
     }
     if (!throats.isEmpty()) {
       lines.add(

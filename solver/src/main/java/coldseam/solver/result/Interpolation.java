@@ -24,6 +24,9 @@ public final class Interpolation {
   private static final String SOURCE =
       "ISO 6946:2017, total resistance interpolated; in two dimensions by extension of this tool";
 
+  /** Part of what all couplings of a space come to that may be lost by taking them one by one. */
+  private static final double LOST = 0.02;
+
   private final Result unventilated;
   private final Result well;
   private final double share;
@@ -43,7 +46,9 @@ public final class Interpolation {
    * @param layers names of the layers
    * @param openings where their openings come from, in words
    * @return couplings, U and ψ interpolated; everything else of the well ventilated detail
-   * @throws DetailException if a ψ takes off something that only one of the two has
+   * @throws DetailException if a ψ takes off something that only one of the two has, or if heat
+   *     passes to another space once the layers are well ventilated, so that there is no one total
+   *     resistance
    */
   public static Result between(
       Result unventilated, Result well, double wellShare, List<String> layers, String openings) {
@@ -51,6 +56,7 @@ public final class Interpolation {
   }
 
   private Result result(List<String> layers, String openings) {
+    checkSameWay(layers);
     List<Result.Coupling> couplings = new ArrayList<>();
     for (Result.Coupling one : well.couplings()) {
       couplings.add(coupling(one));
@@ -116,14 +122,55 @@ public final class Interpolation {
         times);
   }
 
-  private Result.Coupling coupling(Result.Coupling of) {
+  /**
+   * What the couplings of each space come to has to lie between that unventilated and well
+   * ventilated. It does where heat takes the same way in both; where it passes to one space in the
+   * one and to another in the other, every single resistance goes with the larger and heat is lost.
+   */
+  private void checkSameWay(List<String> layers) {
+    for (Result.SpaceResult space : well.spaces()) {
+      double one = 0;
+      double other = 0;
+      double sum = 0;
+      for (Result.Coupling of : well.couplings()) {
+        if (of.from().equals(space.name()) || of.to().equals(space.name())) {
+          double with = of.valueWPerMK().value();
+          double without = unventilated(of).value();
+          one += without;
+          other += with;
+          sum += harmonic(without, with);
+        }
+      }
+      if (sum < (1 - LOST) * harmonic(one, other)) {
+        throw new DetailException(
+            List.of(
+                new Fault(
+                    "cavity",
+                    "",
+                    "the slightly ventilated air layers ("
+                        + String.join(", ", layers)
+                        + ") lead heat from '"
+                        + space.name()
+                        + "' to another space than it passes to with them unventilated, so that"
+                        + " there is no one total resistance to interpolate; state `unventilated`"
+                        + " or `well`, or the space beyond the layer as `to`",
+                    Optional.empty())));
+      }
+    }
+  }
+
+  private Quantity unventilated(Result.Coupling of) {
     for (Result.Coupling other : unventilated.couplings()) {
       if (other.from().equals(of.from()) && other.to().equals(of.to())) {
-        return new Result.Coupling(
-            of.from(), of.to(), between(other.valueWPerMK(), of.valueWPerMK()), Optional.empty());
+        return other.valueWPerMK();
       }
     }
     throw new IllegalStateException("no coupling of " + of.from() + " and " + of.to());
+  }
+
+  private Result.Coupling coupling(Result.Coupling of) {
+    return new Result.Coupling(
+        of.from(), of.to(), between(unventilated(of), of.valueWPerMK()), Optional.empty());
   }
 
   private Result.EffectiveTransmittance transmittance(int i) {

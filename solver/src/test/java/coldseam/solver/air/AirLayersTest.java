@@ -240,6 +240,30 @@ class AirLayersTest {
     assertThat(result.cavities().get(0).ventilation()).isEqualTo(Ventilation.SLIGHTLY_VENTILATED);
   }
 
+  /** Ventilated from an attic, the layer of a roof leads heat there and no more to the outdoors. */
+  @Test
+  void heat_that_passes_to_another_space_has_no_total_resistance() {
+    AirCavity attic =
+        air(
+            settings(
+                Optional.of(
+                    new Exchange(
+                        Ventilation.SLIGHTLY_VENTILATED,
+                        OptionalDouble.of(900e-6),
+                        Optional.of("attic"))),
+                Optional.empty()));
+    DrawnDetail drawn = wall(attic, 50).box(room("attic", 5), 1000, 300, 1100, 320);
+    DetailException e = catchThrowableOfType(DetailException.class, () -> drawn.solve(1e-3));
+    assertThat(e.faults().get(0).message())
+        .contains("(cavity 1)")
+        .contains("to another space")
+        .contains("no one total resistance");
+    DrawnDetail beside = wall(air(openings(900)), 50).box(room("attic", 5), 1000, 300, 1100, 320);
+    Result result = beside.solve(1e-3);
+    assertThat(result.couplings()).hasSize(3);
+    assertThat(result.couplings().get(0).valueWPerMK().certified()).isTrue();
+  }
+
   @Test
   void two_layers_with_different_openings_have_no_common_share() {
     AirCavity other =
