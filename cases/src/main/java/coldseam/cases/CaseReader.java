@@ -26,6 +26,7 @@ final class CaseReader {
           "cavities",
           "section",
           "uncovered",
+          "ground",
           "stretches",
           "flanks",
           "psi",

@@ -8,6 +8,7 @@ import coldseam.solver.detail.Geometry;
 import coldseam.solver.detail.Space;
 import coldseam.solver.detail.View;
 import coldseam.solver.detail.Wanted;
+import coldseam.solver.ground.GroundSection;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
@@ -99,6 +100,14 @@ final class DetailReader {
             Problems.suggestion(old, fills.replaceable()));
       }
     }
+    Optional<GroundReader.Ground> ground = Optional.empty();
+    Node groundNode = top.nodeOrNull("ground");
+    if (groundNode != null) {
+      ground = ground(groundNode, view, spaces, fills);
+      if (ground.isPresent() && problems.none()) {
+        areas = GroundReader.laid(ground.get(), areas);
+      }
+    }
     Node uncoveredNode = top.nodeOrNull("uncovered");
     Optional<AirCavity> uncovered =
         uncoveredNode == null ? Optional.empty() : cavities.uncovered(uncoveredNode);
@@ -114,6 +123,7 @@ final class DetailReader {
     }
     ResultsReader results = new ResultsReader(pass, spaces);
     List<Wanted> wanted = wanted(spaces, results, new PsiReader(pass, spaces, flanks, others));
+    List<String> psi = psiNames(ground, spaces);
     node = top.nodeOrNull("moisture");
     if (node != null) {
       Optional<Wanted> moisture =
@@ -126,7 +136,7 @@ final class DetailReader {
     if (node != null) {
       RequireReader.Names names =
           new RequireReader.Names(
-              spaces.spaces().keySet(), psiNames(), results.transmittances(), top.has("moisture"));
+              spaces.spaces().keySet(), psi, results.transmittances(), top.has("moisture"));
       wanted.addAll(new RequireReader(pass).read(top.keyNode("require"), node, names));
     }
     node = top.nodeOrNull("accuracy");
@@ -135,12 +145,16 @@ final class DetailReader {
     }
     node = top.nodeOrNull("expect");
     if (node != null) {
-      expect(node, spaces, stretches, results, variants);
+      List<String> named = new ArrayList<>(stretches.names());
+      if (ground.isPresent()) {
+        named.add(GroundSection.FLOOR_SURFACE);
+      }
+      expect(node, spaces, named, psi, results, variants);
     }
     if (!problems.none()) {
       return Optional.empty();
     }
-    return Optional.of(
+    Detail detail =
         new Detail(
             title,
             geometry,
@@ -150,7 +164,20 @@ final class DetailReader {
             stretches.stretches(),
             flanks.flanks(),
             wanted,
-            pass.assumptions()));
+            pass.assumptions());
+    return ground.isEmpty()
+        ? Optional.of(detail)
+        : new GroundWork(pass, ground.get(), areas).complete(detail);
+  }
+
+  private Optional<GroundReader.Ground> ground(
+      Node node, View view, SpaceReader spaces, Fills fills) {
+    Node key = top.keyNode("ground");
+    if (!view.equals(View.UPRIGHT)) {
+      problems.add(
+          key, "the ground lies below", "draw a vertical view with up as up: leave `up` away");
+    }
+    return new GroundReader(pass, spaces).read(key, node, fills);
   }
 
   private void frame(Node node, SpaceReader spaces, ResultsReader results, List<Wanted> wanted) {
@@ -267,7 +294,8 @@ final class DetailReader {
   private void expect(
       Node node,
       SpaceReader spaces,
-      StretchReader stretches,
+      List<String> stretches,
+      List<String> psi,
       ResultsReader results,
       List<String> variants) {
     List<String> floating = new ArrayList<>();
@@ -280,8 +308,8 @@ final class DetailReader {
         new ExpectationReader.Names(
             spaces.spaces().keySet(),
             floating,
-            stretches.names(),
-            psiNames(),
+            stretches,
+            psi,
             names("chi"),
             results.transmittances(),
             results.points(),
@@ -290,8 +318,11 @@ final class DetailReader {
     expectations = new ExpectationReader(pass, names).read(node);
   }
 
-  private List<String> psiNames() {
+  private List<String> psiNames(Optional<GroundReader.Ground> ground, SpaceReader spaces) {
     List<String> psi = names("psi");
+    if (ground.isPresent()) {
+      psi.addAll(GroundWork.names(ground.get(), spaces.spaces().size()));
+    }
     if (top.has("frame")) {
       psi.add(Wanted.Frame.GLASS_EDGE);
     }

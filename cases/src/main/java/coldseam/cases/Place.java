@@ -19,6 +19,8 @@ public enum Place {
   RESISTANCE(Dimension.RESISTANCE, "m2 K/W", 1e-6, 1e6, "more than 0 m2 K/W, e.g. `R-13`"),
   /** U. */
   TRANSMITTANCE(Dimension.TRANSMITTANCE, "W/(m2 K)", 0, 1e5, "0 to 100000 W/(m2 K), e.g. `1.4`"),
+  /** Wind, m/s. */
+  SPEED(Dimension.BARE, "", 0, 100, "0 to 100 m/s, e.g. `4`"),
   /** ψ. */
   LINEAR_TRANSMITTANCE(
       Dimension.CONDUCTIVITY, "W/(m K)", -1e4, 1e4, "a number in W/(m K), e.g. `0.08`"),

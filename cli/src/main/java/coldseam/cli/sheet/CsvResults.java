@@ -122,6 +122,7 @@ final class CsvResults {
             .end();
       }
     }
+    floorEdge();
     moisture();
     for (Result.Weight weight : result.weights()) {
       row("weight", weight.point())
@@ -142,6 +143,19 @@ final class CsvResults {
         .number(counted.heatFlow(), result.balance().sumWPerM())
         .end();
     return text.toString();
+  }
+
+  private void floorEdge() {
+    if (result.floorEdge().isPresent() && result.floorEdge().get().factorWPerMK().isPresent()) {
+      Result.FloorEdge edge = result.floorEdge().get();
+      row("F-factor", edge.of().surface())
+          .word("filmSet", Words.name(FilmSet.HEAT_LOSS))
+          .word("between", edge.of().warm() + " – " + edge.of().cold())
+          .word("certified", "false")
+          .number("value_W_per_mK", edge.factorWPerMK().getAsDouble())
+          .number("estimatedHalfWidth_W_per_mK", edge.errorWPerMK())
+          .end();
+    }
   }
 
   /** A row a month, then the surface in the month that governs. */

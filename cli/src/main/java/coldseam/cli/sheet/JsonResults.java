@@ -43,6 +43,7 @@ record JsonResults(Subject subject, Result result) {
     shares(json);
     flanks(json, result.flanks());
     new CavitySection(result.cavities()).write(json);
+    new FloorEdgeSection(result, Units.of(subject), Ink.NONE).write(json);
     new MoistureSection(result, Units.of(subject), Ink.NONE).write(json);
     new RequiredSection(result, Ink.NONE).write(json);
     assumptions(json, result.assumptions());

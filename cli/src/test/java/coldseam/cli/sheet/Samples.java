@@ -217,6 +217,7 @@ final class Samples {
                 0.02,
                 Optional.of("outdoors"),
                 Optional.empty())),
+        Optional.empty(),
         List.of(),
         List.of(),
         List.of(

@@ -209,4 +209,42 @@ public sealed interface Wanted {
       MOISTURE
     }
   }
+
+  /**
+   * The edge of a floor next to the ground (ISO 13370), with the figures that its ψ rest on.
+   *
+   * @param kind "slab on the ground", "suspended floor" or "cellar"
+   * @param warm the space over the floor
+   * @param cold the space outdoors
+   * @param surface the stretch of the floor's surface
+   * @param characteristicM B', m
+   * @param soilWPerMK conductivity of the ground, W/(m·K)
+   * @param wallM thickness of the wall, m
+   * @param equivalentM equivalent thickness d_t (of what lies on the ground), m
+   * @param resistanceM2KPerW R of the floor without films, m²·K/W
+   * @param layers of the floor, in words
+   * @param floorUWPerM2K U of the floor by the formulas, W/(m²·K)
+   * @param wallUWPerM2K U of walls below the ground by the formulas, if there are any, W/(m²·K)
+   * @param factor whether the slab-edge F-factor is wanted
+   */
+  record FloorEdge(
+      String kind,
+      String warm,
+      String cold,
+      String surface,
+      double characteristicM,
+      double soilWPerMK,
+      double wallM,
+      double equivalentM,
+      double resistanceM2KPerW,
+      List<String> layers,
+      double floorUWPerM2K,
+      OptionalDouble wallUWPerM2K,
+      boolean factor)
+      implements Wanted {
+    /** Copies the list. */
+    public FloorEdge {
+      layers = List.copyOf(layers);
+    }
+  }
 }

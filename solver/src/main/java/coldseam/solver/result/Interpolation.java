@@ -108,6 +108,7 @@ public final class Interpolation {
         well.weights(),
         flanks(),
         cavities(layers),
+        well.floorEdge(),
         well.moisture(),
         new Requirements(well.detail())
             .evaluate(well.spaces(), psi, transmittances, well.moisture()),

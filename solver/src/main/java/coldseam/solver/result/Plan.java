@@ -396,6 +396,7 @@ public final class Plan {
         Weights.of(detail, surfaces, coldestFields, sets),
         flanks(),
         cavities,
+        FloorEdges.evaluate(detail, temperatures, balances.stretches(), couplings),
         checked,
         required,
         assumptions(),

@@ -37,6 +37,7 @@ import java.util.OptionalDouble;
  * @param flanks every flank, named or found
  * @param cavities every air cavity as it was found and given a conductivity; the bounds of all
  *     numbers hold for these conductivities
+ * @param floorEdge the edge of a floor next to the ground, if one is asked for
  * @param moisture moisture checks of surfaces, one entry a space judged; empty if none is asked for
  * @param requirements what the case requires of its results, in the order written
  * @param assumptions everything chosen for the user
@@ -65,6 +66,7 @@ public record Result(
     List<Weight> weights,
     List<FlankResult> flanks,
     List<Cavity> cavities,
+    Optional<FloorEdge> floorEdge,
     List<SpaceMoisture> moisture,
     List<Required> requirements,
     List<Assumption> assumptions,
@@ -435,4 +437,15 @@ public record Result(
       double error,
       double limit,
       Verdict verdict) {}
+
+  /**
+   * The edge of a floor next to the ground.
+   *
+   * @param of what its ψ rest on
+   * @param factorWPerMK slab-edge F-factor: heat flow into the surface of the half floor for each
+   *     metre of edge and kelvin between indoors and outdoors, W/(m·K); empty if it is not asked
+   *     for or has no meaning
+   * @param errorWPerMK estimated error of it
+   */
+  public record FloorEdge(Wanted.FloorEdge of, OptionalDouble factorWPerMK, double errorWPerMK) {}
 }
