@@ -103,7 +103,7 @@ final class DetailReader {
     Optional<GroundReader.Ground> ground = Optional.empty();
     Node groundNode = top.nodeOrNull("ground");
     if (groundNode != null) {
-      ground = ground(groundNode, view, spaces, fills);
+      ground = ground(groundNode, view, geometry, spaces, fills);
       if (ground.isPresent() && problems.none()) {
         areas = GroundReader.laid(ground.get(), areas);
       }
@@ -171,8 +171,11 @@ final class DetailReader {
   }
 
   private Optional<GroundReader.Ground> ground(
-      Node node, View view, SpaceReader spaces, Fills fills) {
+      Node node, View view, Geometry geometry, SpaceReader spaces, Fills fills) {
     Node key = top.keyNode("ground");
+    if (geometry != Geometry.PLANE) {
+      problems.add(key, "a body of revolution has no ground", "leave `geometry` or `ground` away");
+    }
     if (!view.equals(View.UPRIGHT)) {
       problems.add(
           key, "the ground lies below", "draw a vertical view with up as up: leave `up` away");

@@ -201,14 +201,16 @@ public record GroundSection(
     double resistance = 0;
     double depth = 0;
     double bottom = Double.NaN;
+    boolean through = false;
     Fill below = null;
     for (LayerProbe.Piece piece : LayerProbe.pieces(areas, from, to)) {
       boolean ends = piece.fill() == null || piece.fill() instanceof Space;
       boolean ground = piece.fill() != null && piece.fill().name().equals(soil.name());
-      if (below == null && (ends || ground)) {
+      if (!through && (ends || ground)) {
+        through = true;
         below = piece.fill();
         bottom = from.y() + dy * depth;
-      } else if (below == null) {
+      } else if (!through) {
         resistance += piece.resistance(dx, dy);
         words.add(piece.fill().name() + " " + Wording.length(piece.lengthM()));
       }
@@ -218,7 +220,7 @@ public record GroundSection(
       depth += piece.lengthM();
     }
     double end = from.y() + dy * depth;
-    return new Floor(words, resistance, below == null ? end : bottom, below, end);
+    return new Floor(words, resistance, through ? bottom : end, below, end);
   }
 
   /**
