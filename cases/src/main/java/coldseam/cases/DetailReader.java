@@ -104,7 +104,7 @@ final class DetailReader {
     Node groundNode = top.nodeOrNull("ground");
     if (groundNode != null) {
       ground = ground(groundNode, view, geometry, spaces, fills);
-      if (ground.isPresent() && problems.none()) {
+      if (ground.isPresent() && Double.isFinite(GroundReader.top(areas))) {
         areas = GroundReader.laid(ground.get(), areas);
       }
     }

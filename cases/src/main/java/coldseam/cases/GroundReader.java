@@ -160,6 +160,9 @@ final class GroundReader {
     if (problems.count() > before || wall.isEmpty() || sides.isEmpty() || soil.isEmpty()) {
       return Optional.empty();
     }
+    if (Double.isNaN(floor) || Double.isNaN(ground) || Double.isNaN(width)) {
+      return Optional.empty();
+    }
     Optional<Space> indoors = spaces.spaces().get(sides.get().warm().get(0));
     Optional<Space> outdoors = spaces.spaces().get(sides.get().cold().get(0));
     if (indoors.isEmpty() || outdoors.isEmpty()) {

@@ -3,21 +3,22 @@ package coldseam.cli.sheet;
 import coldseam.cli.text.Digits;
 import coldseam.cli.text.Ink;
 import coldseam.cli.text.Json;
+import coldseam.cli.text.Manuscript;
 import coldseam.cli.text.Table;
 import coldseam.solver.detail.Wanted;
 import coldseam.solver.result.Result;
 
 /** The edge of a floor next to the ground, as rows of the card and as data. */
 record FloorEdgeSection(Result result, Units units, Ink ink) {
-  void write(StringBuilder text) {
+  void write(Manuscript text) {
     if (result.floorEdge().isEmpty()) {
       return;
     }
     Result.FloorEdge edge = result.floorEdge().get();
     Wanted.FloorEdge of = edge.of();
-    TextCard.heading(
-        text, ink, "Ground", of.kind() + "; ISO 13370, whose U is no part of the certificate");
-    Table table = new Table("lrll", 2, TextCard.PAGE);
+    text.heading("Ground", of.kind() + "; ISO 13370, whose U is no part of the certificate");
+    Table table =
+        new Table("lrll", 2, TextCard.PAGE).named("quantity", "value", "unit", "note");
     table.row("width of the floor B'", Digits.fixed(of.characteristicM(), 3), "m", "");
     table.row("conductivity of the ground", Digits.shortest(of.soilWPerMK(), 4), "W/(m·K)", "");
     table.row(
@@ -52,7 +53,7 @@ record FloorEdgeSection(Result result, Units units, Ink ink) {
               + Units.PSI_NAME
               + ink.faint("; through the floor's surface, estimate"));
     }
-    text.append(table.text());
+    text.table(table);
   }
 
   private void row(
