@@ -17,8 +17,7 @@ record FloorEdgeSection(Result result, Units units, Ink ink) {
     Result.FloorEdge edge = result.floorEdge().get();
     Wanted.FloorEdge of = edge.of();
     text.heading("Ground", of.kind() + "; ISO 13370, whose U is no part of the certificate");
-    Table table =
-        new Table("lrll", 2, TextCard.PAGE).named("quantity", "value", "unit", "note");
+    Table table = new Table("lrll", 2, TextCard.PAGE).named("quantity", "value", "unit", "note");
     table.row("width of the floor B'", Digits.fixed(of.characteristicM(), 3), "m", "");
     table.row("conductivity of the ground", Digits.shortest(of.soilWPerMK(), 4), "W/(m·K)", "");
     table.row(
