@@ -2,6 +2,7 @@ package coldseam.cases;
 
 import coldseam.cases.library.Entry;
 import coldseam.cases.library.Library;
+import coldseam.cases.words.Spelling;
 import coldseam.solver.detail.Assumption;
 import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.Material;
@@ -160,10 +161,13 @@ public final class OpenFile {
     }
     Optional<Entry> entry = Library.find(typed.get());
     if (entry.isEmpty()) {
-      String near = Problems.suggestion(typed.get(), materials.keySet());
+      Optional<String> near = Spelling.nearest(typed.get(), materials.keySet());
+      List<String> listed = near.map(List::of).orElseGet(() -> Library.nearest(typed.get()));
       name.wrong(
           "`" + Node.shortened(typed.get()) + "` is no material of this file or of the library",
-          near.isEmpty() ? "see `cli/coldseam materials`" : near);
+          listed.isEmpty()
+              ? "see `cli/coldseam materials`, or add it to `materials`"
+              : "did you mean " + Fields.orList(listed) + "?");
       return Optional.empty();
     }
     Material material = MaterialReader.of(typed.get(), entry.get());

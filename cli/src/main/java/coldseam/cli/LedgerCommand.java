@@ -32,6 +32,7 @@ final class LedgerCommand implements Command {
   private static final String NO_PLOTS = "--no-plots";
   private static final String QUIET = "--quiet";
   private static final String ACCURACY = "--accuracy";
+  private static final String MOST_UNKNOWNS = "--most-unknowns";
 
   private static final String DATA = "ledger.json";
   private static final String ACCOUNT = "ledger.csv";
@@ -64,6 +65,11 @@ final class LedgerCommand implements Command {
             new Syntax.Option(NO_PLOTS, "", "write data only"),
             new Syntax.Option(
                 ACCURACY, "LIST", "half-widths instead of those of the cases, e.g. psi=0.0002"),
+            new Syntax.Option(
+                MOST_UNKNOWNS,
+                "N",
+                "stop refining a case at this size; ends with 3 if its accuracy is not reached by"
+                    + " then"),
             new Syntax.Option(QUIET, "", "print no card; files are written all the same")),
         List.of(
             new Syntax.Example(
@@ -159,10 +165,7 @@ final class LedgerCommand implements Command {
     List<Result> results = new ArrayList<>();
     List<WindowSubject.Part> parts = new ArrayList<>();
     for (Building.Part part : from.parts()) {
-      Accuracy accuracy = part.from().accuracy();
-      if (typed.has(ACCURACY)) {
-        accuracy = AccuracyOption.read(accuracy, typed.value(ACCURACY));
-      }
+      Accuracy accuracy = accuracy(part, typed);
       Result result = solve(part, accuracy, typed, here);
       Subject of =
           Subject.of(
@@ -176,6 +179,14 @@ final class LedgerCommand implements Command {
     }
     BuildingAccount account = from.account(results);
     return new LedgerSubject(subject(from, here), account, parts, from.assumptions());
+  }
+
+  private static Accuracy accuracy(Building.Part part, Syntax.Typed typed) throws UsageException {
+    try {
+      return SolveCommand.accuracy(part.from().accuracy(), typed);
+    } catch (UsageException e) {
+      throw new UsageException(NAME, e.getMessage());
+    }
   }
 
   private static Result solve(

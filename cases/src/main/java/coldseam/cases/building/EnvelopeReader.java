@@ -291,7 +291,7 @@ final class EnvelopeReader {
               new Coefficient.Solved(
                   part(source.get()),
                   one.name(),
-                  "ψ " + one.name() + " of " + source.get().words(),
+                  source.get().words() + ": " + one.name(),
                   psi.get()));
         }
       }

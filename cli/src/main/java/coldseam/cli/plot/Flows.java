@@ -120,10 +120,11 @@ record Flows(List<Band> in, List<Band> out) {
     return List.copyOf(left);
   }
 
-  double sum() {
-    double sum = 0;
+  /** Everything that comes in, kWh. */
+  Uncertain sum() {
+    Uncertain sum = Uncertain.ZERO;
     for (Band band : in) {
-      sum += band.size();
+      sum = sum.plus(band.energy());
     }
     return sum;
   }

@@ -2,6 +2,7 @@ package coldseam.cli.plot;
 
 import coldseam.cli.plot.Canvas.Anchor;
 import coldseam.cli.text.Digits;
+import coldseam.solver.ledger.Uncertain;
 import java.awt.geom.Line2D;
 import java.awt.geom.Path2D;
 import java.awt.geom.Rectangle2D;
@@ -45,7 +46,7 @@ final class LedgerDrawing {
       Flows.Band band, List<String> label, double wall, double bar, double thickness) {}
 
   void draw(Canvas canvas) {
-    double sum = flows.sum();
+    double sum = flows.sum().value();
     if (!(sum > 0)) {
       canvas.layer("nothing");
       canvas.text(
@@ -174,7 +175,11 @@ final class LedgerDrawing {
     double y = barTop(sum, scale);
     Rectangle2D bar = new Rectangle2D.Double(middle - BAR / 2, y, BAR, sum * scale);
     canvas.fill(bar, Palette.INK);
-    String text = Digits.fixed(sum, 0) + Figures.JOINED + "kWh in = out";
+    Uncertain all = flows.sum();
+    String text =
+        Digits.between(all.value(), all.lower(), all.upper(), 0).value()
+            + Figures.JOINED
+            + "kWh in = out";
     canvas.text(text, middle, top - 8, Lettering.STRONG, Anchor.MIDDLE);
   }
 

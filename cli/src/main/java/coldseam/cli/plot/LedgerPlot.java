@@ -110,6 +110,16 @@ public final class LedgerPlot {
     return Digits.between(number.value(), number.lower(), number.upper(), decimals).value();
   }
 
+  /** kWh with their ±, where they have one. */
+  private static String energy(Uncertain number) {
+    double half = Math.max(number.halfWidth(), number.tolerance());
+    if (half <= 1e-12 * Math.abs(number.value())) {
+      return number(number, 0) + unit("kWh");
+    }
+    return Digits.between(number.value(), number.widestLower(), number.widestUpper(), 0).text()
+        + unit("kWh");
+  }
+
   private static String unit(String unit) {
     return Figures.JOINED + unit;
   }
@@ -118,11 +128,14 @@ public final class LedgerPlot {
     Key key = new Key();
     if (ledger.outcome() instanceof Ledger.Designed outcome) {
       key.heading("To buy");
-      key.row("heat needed", number(outcome.needKWh(), 0) + unit("kWh"));
+      key.row("heat needed", energy(outcome.needKWh()));
       for (Entry entry : ledger.entries()) {
         if (entry.in() && entry.kind() != Entry.Kind.GAIN && entry.kind() != Entry.Kind.HEAT) {
-          key.row(entry.name(), number(entry.energyKWh(), 0) + unit("kWh"));
+          key.row(entry.name(), energy(entry.energyKWh()));
         }
+      }
+      if (outcome.needKWh().widestUpper() > outcome.needKWh().widestLower()) {
+        key.note("±: intervals and tolerances of U, ψ and χ, all at their worst together.");
       }
       if (outcome.gainKWh() > 0) {
         key.row(
@@ -131,7 +144,7 @@ public final class LedgerPlot {
       }
     } else if (ledger.outcome() instanceof Ledger.Metered outcome) {
       key.heading("Not explained by the data");
-      key.row("remainder", number(outcome.remainderKWh(), 0) + unit("kWh"));
+      key.row("remainder", energy(outcome.remainderKWh()));
       key.row("of what came in", Digits.fixed(100 * Math.abs(outcome.share()), 1) + unit("%"));
       key.note(
           outcome.remainderKWh().value() <= 0

@@ -74,17 +74,17 @@ record LedgerCard(LedgerSubject of, Ink ink) {
     if (!wide && !tolerant) {
       return;
     }
-    String says =
-        wide
-            ? (closing.proved()
-                    ? "±: intervals of U, ψ and χ, all at their worst together"
-                    : "±: intervals of U, ψ and χ, some of them estimates")
-                + (tolerant ? "; second ±" : "")
-            : "±";
-    if (tolerant) {
-      says += ": conductivities anywhere within their tolerances, all at their worst together";
+    String says = "";
+    if (wide) {
+      says =
+          closing.proved()
+              ? "±: intervals of U, ψ and χ, all at their worst together. "
+              : "±: intervals of U, ψ and χ, some of them estimates. ";
     }
-    text.note(says);
+    if (tolerant) {
+      says += "(±): conductivities anywhere within their tolerances, all at their worst together. ";
+    }
+    text.note(says.strip());
   }
 
   private Uncertain closing() {

@@ -228,7 +228,7 @@ record LedgerData(LedgerSubject of) {
     json.endObject();
   }
 
-  /** The account, one row an item, the sum last. */
+  /** The account, one row an item, then the sum and the words on every sheet. */
   String account() {
     StringBuilder text =
         new StringBuilder(
@@ -241,10 +241,11 @@ record LedgerData(LedgerSubject of) {
     }
     row(text, "", "sum", "sum");
     numbers(text, Uncertain.exact(ledger.sumKWh()));
-    return text.toString();
+    row(text, "", "note", Words.SAFETY);
+    return text.append(",,,,,\n").toString();
   }
 
-  /** The schedule, one row a part, then the sums. */
+  /** The schedule, one row a part, then the sums and the words on every sheet. */
   String schedule() {
     StringBuilder text =
         new StringBuilder(
@@ -286,7 +287,12 @@ record LedgerData(LedgerSubject of) {
         Double.NaN,
         envelope.bridgeShare().value());
     sum(text, "air", envelope.airWPerK(), Double.NaN, Double.NaN);
-    return text.toString();
+    return text.append(quoted(of.subject().file()))
+        .append(",note,")
+        .append(quoted(Words.SAFETY))
+        .append(",".repeat(17))
+        .append('\n')
+        .toString();
   }
 
   private void sum(StringBuilder text, String name, Uncertain h, double area, double share) {

@@ -144,10 +144,10 @@ final class LedgerWords {
     return halfWidth(number, CONDUCTANCE_DECIMALS);
   }
 
-  /** The ± for tolerances; empty if there are none. */
+  /** The ± for tolerances, in brackets; empty if there are none. */
   static String tolerance(Uncertain number, int decimals) {
     return significant(number.tolerance(), number)
-        ? "± " + Digits.outward(number.tolerance(), 2, decimals)
+        ? "(± " + Digits.outward(number.tolerance(), 2, decimals) + ")"
         : "";
   }
 
