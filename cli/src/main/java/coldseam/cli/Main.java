@@ -23,7 +23,8 @@ public final class Main {
       "heat flow, ψ, U and surface temperatures of building junctions in two dimensions";
 
   private static final List<String> NAMES =
-      List.of("solve", "check", "sweep", "seek", "draft", "materials", "prove", "ledger");
+      List.of(
+          "solve", "check", "compare", "sweep", "seek", "draft", "materials", "prove", "ledger");
 
   private Main() {}
 
@@ -140,6 +141,7 @@ public final class Main {
       case "solve" -> new SolveCommand();
       case "check" -> new CheckCommand();
       case "draft" -> new DraftCommand();
+      case "compare" -> new CompareCommand();
       case "sweep" -> new SweepCommand();
       case "seek" -> new SeekCommand();
       case "materials" -> new MaterialsCommand();

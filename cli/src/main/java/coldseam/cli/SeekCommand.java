@@ -8,6 +8,7 @@ import coldseam.cases.study.Measure.Knowledge;
 import coldseam.cases.study.Seek;
 import coldseam.cases.study.StudyException;
 import coldseam.cases.study.Target;
+import coldseam.cli.sheet.Sheet;
 import coldseam.cli.text.Digits;
 import coldseam.cli.text.Ink;
 import coldseam.cli.text.Json;
@@ -167,7 +168,7 @@ final class SeekCommand implements Command {
     if (outcome.answer().isPresent()) {
       text.append("  ").append(again(asked, outcome.answer().get(), here)).append('\n');
     }
-    return text.append(ink.faint(Notice.SAFETY)).append('\n').toString();
+    return text.append(ink.faint(Sheet.safety())).append('\n').toString();
   }
 
   private static String name(Seek.Outcome outcome) {

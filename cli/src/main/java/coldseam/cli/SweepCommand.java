@@ -11,6 +11,7 @@ import coldseam.cases.study.Shard;
 import coldseam.cases.study.Study;
 import coldseam.cases.study.StudyException;
 import coldseam.cases.study.Sweep;
+import coldseam.cli.sheet.Sheet;
 import coldseam.cli.sheet.StudyLine;
 import coldseam.cli.sheet.StudyTable;
 import coldseam.cli.sheet.Subject;
@@ -331,7 +332,7 @@ final class SweepCommand implements Command {
       out.println("Written to " + files.shown() + "/: " + files.linesName() + also);
     }
     if (!typed.has(JSON)) {
-      here.out().println(here.outInk().faint(Notice.SAFETY));
+      here.out().println(here.outInk().faint(Sheet.safety()));
     }
   }
 }

@@ -23,7 +23,9 @@ class MainTest {
 
   @ParameterizedTest
   @ValueSource(
-      strings = {"solve", "check", "sweep", "seek", "draft", "materials", "prove", "ledger"})
+      strings = {
+        "solve", "check", "compare", "sweep", "seek", "draft", "materials", "prove", "ledger"
+      })
   void the_help_of_a_command(String command) throws IOException {
     Ran ran = Ran.in(dir, command, "--help");
     assertThat(ran.code()).isZero();

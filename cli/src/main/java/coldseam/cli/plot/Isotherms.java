@@ -45,18 +45,23 @@ final class Isotherms {
   private final double[] traced;
 
   Isotherms(TemperatureField field, Figures figures, List<Critical> critical) {
+    this(field, figures, critical, range(field));
+  }
+
+  /**
+   * Isotherms of one field on a scale that others share.
+   *
+   * @param field the temperatures
+   * @param figures how they are written
+   * @param critical isotherms that matter
+   * @param rangeC least and greatest temperature of the scale, °C
+   */
+  Isotherms(TemperatureField field, Figures figures, List<Critical> critical, double[] rangeC) {
     this.field = field;
     this.figures = figures;
     this.critical = critical;
-    double least = Double.POSITIVE_INFINITY;
-    double most = Double.NEGATIVE_INFINITY;
-    int nodes = field.mesh().vertexCount() + field.mesh().sideCount();
-    for (int node = 0; node < nodes; node++) {
-      least = Math.min(least, field.atNode(node));
-      most = Math.max(most, field.atNode(node));
-    }
-    double low = figures.scaled(least);
-    double high = figures.scaled(most);
+    double low = figures.scaled(rangeC[0]);
+    double high = figures.scaled(rangeC[1]);
     step = Levels.step(high - low);
     levels = Levels.between(low, high, step);
     traced = new double[levels.size() + critical.size()];
@@ -67,6 +72,18 @@ final class Isotherms {
       traced[levels.size() + i] = critical.get(i).temperatureC();
     }
     Arrays.sort(traced);
+  }
+
+  /** Least and greatest temperature of a field, °C. */
+  static double[] range(TemperatureField field) {
+    double least = Double.POSITIVE_INFINITY;
+    double most = Double.NEGATIVE_INFINITY;
+    int nodes = field.mesh().vertexCount() + field.mesh().sideCount();
+    for (int node = 0; node < nodes; node++) {
+      least = Math.min(least, field.atNode(node));
+      most = Math.max(most, field.atNode(node));
+    }
+    return new double[] {least, most};
   }
 
   /** Between two isotherms, on the written scale. */

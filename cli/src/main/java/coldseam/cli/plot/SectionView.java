@@ -255,7 +255,7 @@ final class SectionView extends View {
     return key;
   }
 
-  private record Swatch(MaterialLook look) implements Key.Sample {
+  record Swatch(MaterialLook look) implements Key.Sample {
     @Override
     public void draw(Canvas canvas, Box box) {
       swatch(canvas, box, look);

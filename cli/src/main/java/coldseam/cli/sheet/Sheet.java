@@ -1,6 +1,7 @@
 package coldseam.cli.sheet;
 
 import coldseam.cli.text.Ink;
+import coldseam.cli.text.Table;
 import coldseam.cli.text.TerminalText;
 import coldseam.solver.Solver;
 import coldseam.solver.detail.Assumption;
@@ -9,7 +10,14 @@ import java.util.List;
 
 /** Writes a result for people and for machines, and what is understood of a case before solving. */
 public final class Sheet {
+  private static final int PAGE = 92;
+
   private Sheet() {}
+
+  /** The limits of what is calculated, for the foot of whatever is printed; several lines. */
+  public static String safety() {
+    return Table.wrapped(Words.SAFETY, PAGE, "");
+  }
 
   /**
    * The card for the terminal, at most 92 columns wide unless a name is very long.

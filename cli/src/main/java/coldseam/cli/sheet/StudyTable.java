@@ -168,11 +168,11 @@ public final class StudyTable {
     return List.of(number(measure.value()), number(measure.lower()), number(measure.upper()));
   }
 
-  private static String number(double value) {
+  static String number(double value) {
     return Double.isFinite(value) ? Double.toString(value) : "";
   }
 
-  private static void line(StringBuilder text, List<String> cells) {
+  static void line(StringBuilder text, List<String> cells) {
     for (int i = 0; i < cells.size(); i++) {
       String cell = cells.get(i);
       boolean quoted = false;
