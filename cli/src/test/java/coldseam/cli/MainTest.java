@@ -24,7 +24,15 @@ class MainTest {
   @ParameterizedTest
   @ValueSource(
       strings = {
-        "solve", "check", "compare", "sweep", "seek", "draft", "materials", "prove", "ledger"
+        "solve",
+        "check",
+        "compare",
+        "sweep",
+        "seek",
+        "draft",
+        "materials",
+        "prove",
+        "ledger"
       })
   void the_help_of_a_command(String command) throws IOException {
     Ran ran = Ran.in(dir, command, "--help");
