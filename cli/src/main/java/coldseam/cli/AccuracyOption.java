@@ -80,6 +80,9 @@ final class AccuracyOption {
           "U="
               + plain(BigDecimal.valueOf(accuracy.transmittanceRelative()).movePointRight(2))
               + "%";
+      case CHI -> "chi=" + plain(accuracy.pointWPerK());
+      case L3D ->
+          "L3D=" + plain(BigDecimal.valueOf(accuracy.couplingRelative()).movePointRight(2)) + "%";
       case L2D ->
           accuracy.couplingRelative() < 1
               ? "L2D="

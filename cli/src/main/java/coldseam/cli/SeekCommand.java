@@ -51,7 +51,7 @@ final class SeekCommand implements Command {
             new Syntax.Option(
                 UNTIL,
                 "TARGET",
-                "psi, U, L2D, fRsi or coldest, with a name after a point where there are several,"
+                "psi, U, L2D, chi, L3D, fRsi or coldest, with a name after a point where there are several,"
                     + " then <= or >= and a number"),
             new Syntax.Option(STEP, "S", "between values tried; default a round one"),
             new Syntax.Option(LARGEST, "", "find the largest value instead of the smallest"),

@@ -95,8 +95,9 @@ public final class Comparison {
     }
     boolean[] ranked =
         switch (first.kind()) {
-          case L2D -> likeWithLike(first, measures, this::sameOutline, "outlines");
+          case L2D, L3D -> likeWithLike(first, measures, this::sameOutline, "outlines");
           case PSI -> likeWithLike(first, measures, this::sameFlanks, "U of the flanks");
+          case CHI -> likeWithLike(first, measures, this::sameTerms, "U of the wall");
           case COLDEST -> new boolean[alternatives.size()];
           case U, F_RSI -> all(measures);
         };
@@ -226,10 +227,38 @@ public final class Comparison {
     return a.dimensions().equals(b.dimensions()) && sameFlanks(a, b);
   }
 
+  /** The χ of a name in a result. */
+  private static Optional<Result.PointTransmittance> chi(Alternative alternative, String name) {
+    for (Result.PointTransmittance chi : alternative.result().chi()) {
+      if (chi.name().equals(name)) {
+        return Optional.of(chi);
+      }
+    }
+    return Optional.empty();
+  }
+
+  private boolean sameTerms(int one, int other, String name) {
+    return same(
+        terms(chi(alternatives.get(one), name).get()),
+        terms(chi(alternatives.get(other), name).get()));
+  }
+
+  /** U or ψ of everything that is taken off a χ, in order of size. */
+  private static List<Bracket> terms(Result.PointTransmittance chi) {
+    List<Bracket> terms = new ArrayList<>();
+    for (Result.PointTerm term : chi.subtracted()) {
+      terms.add(term.uWPerM2K().or(term::psiWPerMK).orElse(term.valueWPerK()));
+    }
+    terms.sort(Comparator.comparingDouble(Bracket::lower));
+    return terms;
+  }
+
   private static boolean sameFlanks(
       Result.LinearTransmittance one, Result.LinearTransmittance other) {
-    List<Bracket> a = references(one);
-    List<Bracket> b = references(other);
+    return same(references(one), references(other));
+  }
+
+  private static boolean same(List<Bracket> a, List<Bracket> b) {
     if (a.size() != b.size()) {
       return false;
     }

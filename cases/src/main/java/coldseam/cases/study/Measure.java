@@ -2,6 +2,7 @@ package coldseam.cases.study;
 
 import coldseam.solver.conduction.Certificate;
 import coldseam.solver.conduction.Quantity;
+import coldseam.solver.detail.Geometry;
 import coldseam.solver.result.Result;
 import java.util.ArrayList;
 import java.util.List;
@@ -30,6 +31,10 @@ public record Measure(
     PSI("psi", "ψ", "W/(m·K)", "W_per_mK"),
     /** U, W/(m²·K). */
     U("U", "U", "W/(m²·K)", "W_per_m2K"),
+    /** χ, W/K. */
+    CHI("chi", "χ", "W/K", "W_per_K"),
+    /** L3D of a body of revolution, W/K. */
+    L3D("L3D", "L3D", "W/K", "W_per_K"),
     /** Coldest surface temperature, °C. */
     COLDEST("coldest", "coldest surface", "°C", "C"),
     /** Temperature factor. */
@@ -84,7 +89,7 @@ public record Measure(
   }
 
   /**
-   * Every number of a result that studies look at, in the order ψ, U, L2D, surfaces.
+   * Every number of a result that studies look at, in the order ψ, χ, U, L2D or L3D, surfaces.
    *
    * @param result the result
    * @return the numbers, finite ones only
@@ -94,11 +99,15 @@ public record Measure(
     for (Result.LinearTransmittance psi : result.psi()) {
       add(all, Kind.PSI, psi.name(), psi.valueWPerMK());
     }
+    for (Result.PointTransmittance chi : result.chi()) {
+      add(all, Kind.CHI, chi.name(), chi.valueWPerK());
+    }
     for (Result.EffectiveTransmittance u : result.transmittances()) {
       add(all, Kind.U, u.of(), u.valueWPerM2K());
     }
     for (Result.Coupling coupling : result.couplings()) {
-      add(all, Kind.L2D, coupling.from() + " – " + coupling.to(), coupling.valueWPerMK());
+      Kind kind = result.detail().geometry() == Geometry.AXISYMMETRIC ? Kind.L3D : Kind.L2D;
+      add(all, kind, coupling.from() + " – " + coupling.to(), coupling.valueWPerMK());
     }
     for (Result.SpaceResult space : result.spaces()) {
       if (space.coldest().isPresent() && space.coldest().get().fRsi().isPresent()) {

@@ -394,38 +394,33 @@ public final class Seek {
    */
   private Accuracy narrowed(double halfWidth, double value) {
     Accuracy a = accuracy;
+    double relative = a.couplingRelative();
+    double coupling = a.couplingWPerMK();
+    double psi = a.psiWPerMK();
+    double u = a.transmittanceRelative();
+    double pointRelative = a.pointRelative();
+    double point = a.pointWPerK();
     double size = Math.abs(value);
     switch (target.kind()) {
-      case PSI -> {
-        return new Accuracy(
-            a.couplingRelative(),
-            a.couplingWPerMK(),
-            within(halfWidth, a.psiWPerMK()),
-            a.transmittanceRelative(),
-            a.mostUnknowns());
+      case PSI -> psi = within(halfWidth, psi);
+      case U -> u = within(100 * halfWidth / size, 100 * u) / 100;
+      case CHI -> {
+        point = within(halfWidth, a.pointWPerK(value));
+        pointRelative = 0;
       }
-      case U -> {
-        double percent = within(100 * halfWidth / size, 100 * a.transmittanceRelative());
-        return new Accuracy(
-            a.couplingRelative(),
-            a.couplingWPerMK(),
-            a.psiWPerMK(),
-            percent / 100,
-            a.mostUnknowns());
+      case L3D -> {
+        relative = within(100 * halfWidth / size, 100 * relative) / 100;
+        coupling = Double.MAX_VALUE;
       }
       case L2D -> {
-        double asked = Math.min(a.couplingWPerMK(), a.couplingRelative() * size);
-        return new Accuracy(
-            Double.MAX_VALUE,
-            within(halfWidth, asked),
-            a.psiWPerMK(),
-            a.transmittanceRelative(),
-            a.mostUnknowns());
+        coupling = within(halfWidth, Math.min(coupling, relative * size));
+        relative = Double.MAX_VALUE;
       }
       default -> {
         return a;
       }
     }
+    return new Accuracy(relative, coupling, psi, u, pointRelative, point, a.mostUnknowns());
   }
 
   private static double within(double wanted, double asked) {

@@ -78,7 +78,7 @@ class SweepTest {
     String key = sweep(wall, "thickness=80..120/3").key(Accuracy.STANDARD, "1");
     assertThat(sweep(wall, "lambda=0.03,0.04").key(Accuracy.STANDARD, "1")).isEqualTo(key);
     assertThat(sweep(wall, "lambda=0.03,0.04").key(Accuracy.STANDARD, "2")).isNotEqualTo(key);
-    Accuracy finer = new Accuracy(0.001, 0.001, 0.001, 0.001, 2_000_000);
+    Accuracy finer = new Accuracy(0.001, 0.001, 0.001, 0.001, 0.01, 0.0005, 2_000_000);
     assertThat(sweep(wall, "thickness=80..120/3").key(finer, "1")).isNotEqualTo(key);
     Axis axis = Axis.read("thickness=80..120/3", wall, Optional.of("massive"));
     assertThat(Sweep.of(wall, Optional.of("massive"), List.of(axis)).key(Accuracy.STANDARD, "1"))

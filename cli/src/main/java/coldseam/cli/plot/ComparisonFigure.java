@@ -126,6 +126,7 @@ public final class ComparisonFigure {
       looks.put(key, ofAll.get(number++));
     }
     for (Column column : content.columns()) {
+      DrawnSection section = DrawnSection.of(column.result());
       List<MaterialLook> own = new ArrayList<>();
       for (Fill fill : column.result().detail().fills()) {
         own.add(looks.get(key(fill)));
@@ -133,12 +134,16 @@ public final class ComparisonFigure {
       all.add(
           new Drawn(
               column,
-              DrawnSection.of(column.result()),
+              section,
               own,
               Wrapping.of(column.name(), width - 24, Lettering.STRONG),
               new Isotherms(
-                  temperatures(column.result()), new Figures(column.caption()), List.of(), range)));
+                  temperatures(column.result()), figures(column, section), List.of(), range)));
     }
+  }
+
+  private static Figures figures(Column column, DrawnSection section) {
+    return new Figures(column.caption(), section.axis().isPresent());
   }
 
   /** Materials are the same if they have the same name and conductivity. */
@@ -229,7 +234,7 @@ public final class ComparisonFigure {
     new SurfaceMarks(one.section(), panel).fringes(canvas);
     lines.outline(canvas);
     lines.keepClear(ground);
-    ScaleBar.draw(canvas, panel, ground, one.section(), new Figures(one.column().caption()));
+    ScaleBar.draw(canvas, panel, ground, one.section(), figures(one.column(), one.section()));
     List<List<String>> spaces = new ArrayList<>();
     for (Result.SpaceResult space : one.column().result().spaces()) {
       spaces.add(List.of(space.name()));
@@ -247,14 +252,14 @@ public final class ComparisonFigure {
     lines.outline(canvas);
     Ground ground = SectionLines.ground(one.section(), panel);
     lines.keepClear(ground);
-    new ColdestPoints(one.column().result(), one.section(), new Figures(one.column().caption()))
+    new ColdestPoints(one.column().result(), one.section(), figures(one.column(), one.section()))
         .draw(canvas, panel, ground, Optional.empty());
     traced.label(canvas, ground, one.section(), false);
   }
 
   private Key key() {
     Drawn first = all.get(0);
-    Figures figures = new Figures(first.column().caption());
+    Figures figures = figures(first.column(), first.section());
     Key key = new Key();
     key.heading("Materials, λ in " + figures.conductivityUnit());
     List<String> done = new ArrayList<>();

@@ -7,6 +7,7 @@ import coldseam.cases.study.Measure.Knowledge;
 import coldseam.cases.study.Point;
 import coldseam.cli.text.Json;
 import coldseam.solver.detail.FilmSet;
+import coldseam.solver.detail.Geometry;
 import coldseam.solver.result.Result;
 import java.util.ArrayList;
 import java.util.List;
@@ -44,16 +45,24 @@ public final class StudyLine {
       JsonResults.quantity(json, psi.valueWPerMK(), Kind.PSI.unitInNames());
       json.endObject();
     }
+    json.endArray().array("chi");
+    for (Result.PointTransmittance chi : result.chi()) {
+      json.object().member("name", chi.name());
+      JsonResults.quantity(json, chi.valueWPerK(), Kind.CHI.unitInNames());
+      json.endObject();
+    }
     json.endArray().array("U");
     for (Result.EffectiveTransmittance u : result.transmittances()) {
       json.object().member("of", u.of());
       JsonResults.quantity(json, u.valueWPerM2K(), Kind.U.unitInNames());
       json.endObject();
     }
+    boolean round = result.detail().geometry() == Geometry.AXISYMMETRIC;
+    Kind couplings = round ? Kind.L3D : Kind.L2D;
     json.endArray().array("coupling");
     for (Result.Coupling coupling : result.couplings()) {
       json.object().member("between", List.of(coupling.from(), coupling.to()));
-      JsonResults.quantity(json, coupling.valueWPerMK(), Kind.L2D.unitInNames());
+      JsonResults.quantity(json, coupling.valueWPerMK(), couplings.unitInNames());
       json.endObject();
     }
     json.endArray().array("spaces");
@@ -122,6 +131,9 @@ public final class StudyLine {
     for (Object psi : Lines.array(line.data().get("psi"))) {
       add(measures, Kind.PSI, String.valueOf(Lines.object(psi).get("name")), psi);
     }
+    for (Object chi : Lines.array(line.data().get("chi"))) {
+      add(measures, Kind.CHI, String.valueOf(Lines.object(chi).get("name")), chi);
+    }
     for (Object u : Lines.array(line.data().get("U"))) {
       add(measures, Kind.U, String.valueOf(Lines.object(u).get("of")), u);
     }
@@ -130,7 +142,8 @@ public final class StudyLine {
       for (Object name : Lines.array(Lines.object(coupling).get("between"))) {
         names.add(String.valueOf(name));
       }
-      add(measures, Kind.L2D, String.join(" – ", names), coupling);
+      boolean round = Lines.object(coupling).containsKey("value_" + Kind.L3D.unitInNames());
+      add(measures, round ? Kind.L3D : Kind.L2D, String.join(" – ", names), coupling);
     }
     for (Object read : Lines.array(line.data().get("spaces"))) {
       Map<String, Object> space = Lines.object(read);
