@@ -129,4 +129,25 @@ class RoundResultsTest {
     assertThat(flow.contains("\u00a0W into the detail")).isTrue();
     assertThat(flow.contains("W/m ") || flow.contains("W/m<")).isFalse();
   }
+
+  /** A better conductor loses more: the bracket of the seek runs in W/K. */
+  @Test
+  void sweeps_and_seeks_run_over_chi() throws IOException {
+    Cases.write(
+        dir,
+        "rod.yaml",
+        ROD.replace("materials:", "values: {steel: 50}\nmaterials:")
+            .replace("steel: {conductivity: 50}", "steel: {conductivity: steel}"));
+    Ran sweep = Ran.in(dir, "sweep", "rod.yaml", "--set", "steel=10..50/3", "--json");
+    assertThat(sweep.code()).as(sweep.err()).isZero();
+    assertThat(sweep.out().lines())
+        .hasSize(3)
+        .allMatch(line -> line.contains("\"chi\":[{\"name\":\"rod\",\"value_W_per_K\":"))
+        .noneMatch(line -> line.contains("W_per_mK"));
+    Ran seek =
+        Ran.in(
+            dir, "seek", "rod.yaml", "--set", "steel=1..50", "--until", "chi <= 0.005", "--json");
+    assertThat(seek.code()).as(seek.err()).isZero();
+    assertThat(seek.out()).contains("chi");
+  }
 }
