@@ -1,6 +1,7 @@
 package coldseam.cli;
 
 import coldseam.cases.Expectation;
+import coldseam.solver.detail.Geometry;
 import coldseam.solver.result.Result;
 import java.util.List;
 import java.util.OptionalDouble;
@@ -10,8 +11,9 @@ import java.util.OptionalDouble;
  *
  * @param expectation what was expected
  * @param computed what came out, in the same unit; empty if there is no such result
+ * @param whole whether heat flows are of a whole body of revolution, not of a metre
  */
-record Expected(Expectation expectation, OptionalDouble computed) {
+record Expected(Expectation expectation, OptionalDouble computed, boolean whole) {
   /**
    * Looks up what came out.
    *
@@ -20,7 +22,10 @@ record Expected(Expectation expectation, OptionalDouble computed) {
    * @return both
    */
   static Expected in(Expectation expectation, Result result) {
-    return new Expected(expectation, find(expectation, result));
+    return new Expected(
+        expectation,
+        find(expectation, result),
+        result.detail().geometry() == Geometry.AXISYMMETRIC);
   }
 
   /** Whether it came out within the tolerance; a result that does not exist did not. */
@@ -138,7 +143,7 @@ record Expected(Expectation expectation, OptionalDouble computed) {
       case L3D, CHI -> "W/K";
       case U -> "W/(m²·K)";
       case R -> "m²·K/W";
-      case FLOW -> "W/m";
+      case FLOW -> whole ? "W" : "W/m";
       case TEMPERATURE, COLDEST -> "°C";
       case F_RSI, WEIGHT -> "";
     };

@@ -41,10 +41,10 @@ final class ScaleBar {
   }
 
   /** Draws an arrow upwards, or says that the section is horizontal, at the lower right. */
-  static void direction(Canvas canvas, Panel panel, Ground ground, View view) {
+  static void direction(Canvas canvas, Panel panel, Ground ground, View view, String plan) {
     double x = panel.frame().x1() - 10;
     double y = panel.frame().y1() - 9;
-    String text = view.plan() ? "plan" : "up";
+    String text = view.plan() ? plan : "up";
     double width = TextWidths.of(text, Lettering.SMALL);
     ground.take(new Box(x - width - 26, y - 24, x + 6, y + 6));
     canvas.text(text, x, y, Lettering.SMALL, Anchor.END);

@@ -207,7 +207,8 @@ abstract class View {
     if (panel.name().equals(Panel.ZOOM)) {
       ground.take(Zoom.words(panel));
     } else {
-      ScaleBar.direction(canvas, panel, ground, section.detail().view());
+      String plan = round() ? "level" : "plan";
+      ScaleBar.direction(canvas, panel, ground, section.detail().view(), plan);
     }
     ScaleBar.draw(canvas, panel, ground, section, figures);
   }

@@ -264,7 +264,9 @@ final class TextCard {
     if (result.frame().isPresent()) {
       frame(result.frame().get());
     }
-    new PointSection(result).write(text, ink);
+    if (!result.chi().isEmpty()) {
+      new PointSection(result).write(text, ink);
+    }
     for (Result.LinearTransmittance psi : result.psi()) {
       text.heading(
           "ψ " + psi.name() + " = L2D less what is counted elsewhere",
