@@ -424,10 +424,8 @@ public final class Seek {
   }
 
   private static double within(double wanted, double asked) {
-    double least = FINEST * asked;
-    return wanted >= asked || Double.isNaN(wanted)
-        ? asked
-        : new BigDecimal(Math.max(least, wanted)).round(TYPED).doubleValue();
+    double narrow = Double.isNaN(wanted) ? asked : Math.max(FINEST * asked, wanted);
+    return BigDecimal.valueOf(Math.min(narrow, asked)).round(TYPED).doubleValue();
   }
 
   /** Whether no solve is surely on the wrong side of one before it. */
