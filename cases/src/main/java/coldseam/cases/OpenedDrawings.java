@@ -15,6 +15,7 @@ import java.util.Set;
 /** The drawings that cases take shapes from, each read once. May be shared by threads. */
 final class OpenedDrawings {
   private final Set<Path> named = new HashSet<>();
+  private final Set<Path> wanted = new HashSet<>();
   private final Map<Asked, Drawing> drawings = new HashMap<>();
   private final Map<Placed, DrawnShapes> shapes = new HashMap<>();
 
@@ -41,6 +42,11 @@ final class OpenedDrawings {
     return real.startsWith(CaseReader.normalised(folder)) || named.contains(real);
   }
 
+  /** Every file that was to be read, whether it could be or not. */
+  synchronized Set<Path> asked() {
+    return Set.copyOf(wanted);
+  }
+
   /** Every file that was read. */
   synchronized Set<Path> files() {
     Set<Path> files = new HashSet<>();
@@ -52,6 +58,7 @@ final class OpenedDrawings {
 
   synchronized Drawing drawing(Path file, OptionalDouble deviation) throws DrawingException {
     Asked asked = new Asked(CaseReader.normalised(file), deviation);
+    wanted.add(asked.file());
     Drawing known = drawings.get(asked);
     if (known == null) {
       known = Drawing.read(file, deviation);

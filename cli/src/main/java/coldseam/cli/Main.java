@@ -24,7 +24,7 @@ public final class Main {
 
   private static final List<String> NAMES =
       List.of(
-          "solve", "check", "compare", "sweep", "seek", "draft", "materials", "prove", "ledger");
+          "solve", "check", "compare", "sweep", "seek", "draft", "materials", "prove", "ledger", "watch");
 
   private Main() {}
 
@@ -147,6 +147,7 @@ public final class Main {
       case "materials" -> new MaterialsCommand();
       case "prove" -> new ProveCommand();
       case "ledger" -> new LedgerCommand();
+      case "watch" -> new WatchCommand();
       default -> throw unknown(name);
     };
   }

@@ -32,7 +32,8 @@ class MainTest {
         "draft",
         "materials",
         "prove",
-        "ledger"
+        "ledger",
+        "watch"
       })
   void the_help_of_a_command(String command) throws IOException {
     Ran ran = Ran.in(dir, command, "--help");

@@ -6,6 +6,7 @@ import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Set;
@@ -22,12 +23,12 @@ class ReadmeCommandsTest {
   @TempDir Path dir;
 
   @Test
-  void the_commands_of_the_readme() throws IOException {
+  void the_commands_of_the_readme() throws Exception {
     run(commands(List.of(Root.folder().resolve("README.md")), "", 8));
   }
 
   @Test
-  void the_commands_at_the_head_of_every_shipped_case() throws IOException {
+  void the_commands_at_the_head_of_every_shipped_case() throws Exception {
     List<Path> shipped = new ArrayList<>();
     for (String folder : List.of("cases/demo", "cases/published", "cases/windows")) {
       try (Stream<Path> files = Files.list(Root.folder().resolve(folder))) {
@@ -42,9 +43,13 @@ class ReadmeCommandsTest {
     run(commands(shipped, "#", shipped.size()));
   }
 
-  private void run(Set<String> commands) throws IOException {
+  private void run(Set<String> commands) throws Exception {
     copyCases();
     for (String command : commands) {
+      if (command.contains(" watch ")) {
+        follow(words(command));
+        continue;
+      }
       Ran ran = Ran.in(dir, words(command));
       assertThat(ran.code()).as("%s: %s", command, ran.err()).isEqualTo(ending(command));
       assertThat(ran.out()).as(command).isNotBlank();
@@ -55,6 +60,13 @@ class ReadmeCommandsTest {
   private static int ending(String command) {
     int at = command.indexOf("# ends with ");
     return at < 0 ? 0 : Integer.parseInt(command.substring(at + 12).strip());
+  }
+
+  /** The command that goes on until it is stopped. */
+  private void follow(String[] words) throws Exception {
+    try (Watching watching = new Watching(dir, Arrays.copyOfRange(words, 1, words.length))) {
+      assertThat(watching.scene().get("state").textValue()).isEqualTo("solved");
+    }
   }
 
   /** Command lines of our program; at the start of a line, after a mark and blanks. */

@@ -107,6 +107,36 @@ class ZipTest {
     assertThat(unknown.err()).contains("see `coldseam materials`").doesNotContain("cli/coldseam");
   }
 
+  /** Ctrl-C sends the signal INT to what the launcher has become. */
+  @Test
+  void watch_ends_at_ctrl_c_without_a_word() throws Exception {
+    Path out = Files.createTempFile(dir, "out", "");
+    Path err = Files.createTempFile(dir, "err", "");
+    ProcessBuilder builder =
+        new ProcessBuilder(
+                home.resolve("bin/coldseam").toString(),
+                "watch",
+                home.resolve("cases/demo/balcony.yaml").toString())
+            .redirectOutput(out.toFile())
+            .redirectError(err.toFile());
+    builder.environment().put("JAVA_HOME", System.getProperty("java.home"));
+    Process process = builder.start();
+    try {
+      long end = System.nanoTime() + TimeUnit.MINUTES.toNanos(2);
+      while (!Files.readString(out).contains("solved in")) {
+        assertThat(process.isAlive() && System.nanoTime() < end).as(Files.readString(err)).isTrue();
+        Thread.sleep(20);
+      }
+      String pid = Long.toString(process.pid());
+      assertThat(new ProcessBuilder("kill", "-INT", pid).start().waitFor()).isZero();
+      assertThat(process.waitFor(30, TimeUnit.SECONDS)).as("it ends").isTrue();
+      assertThat(process.exitValue()).isEqualTo(128 + 2);
+      assertThat(err).isEmptyFile();
+    } finally {
+      process.destroyForcibly();
+    }
+  }
+
   private static String unknownMaterial() throws IOException {
     String text = Cases.WALL.replace("brick: {conductivity: 0.5}", "brick: stuff of nobody");
     return Cases.write(dir, "unknown.yaml", text).toString();
