@@ -24,7 +24,16 @@ public final class Main {
 
   private static final List<String> NAMES =
       List.of(
-          "solve", "check", "compare", "sweep", "seek", "draft", "materials", "prove", "ledger", "watch");
+          "solve",
+          "check",
+          "compare",
+          "sweep",
+          "seek",
+          "draft",
+          "materials",
+          "prove",
+          "ledger",
+          "watch");
 
   private Main() {}
 
