@@ -134,6 +134,15 @@ final class SolveCommand implements Command {
       boolean window = WindowFile.is(here.cwd().resolve(CaseList.path(operand, NAME)));
       (window ? windows : cases).add(operand);
     }
+    if (sheet(typed) && !windows.isEmpty()) {
+      throw new UsageException(
+          NAME,
+          windows.get(0)
+              + " is a window, which has no sheet; ask for one of each frame case, or leave away "
+              + SHEET
+              + " and "
+              + PDF);
+    }
     Map<Path, String> taken = new LinkedHashMap<>();
     List<WindowSolve> whole =
         windows.isEmpty() ? List.of() : WindowSolve.read(windows, cases, typed, here, taken);

@@ -28,6 +28,8 @@ import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.TestInstance;
 import org.junit.jupiter.api.io.TempDir;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.ValueSource;
 import org.w3c.dom.Document;
 import org.w3c.dom.Element;
 import org.w3c.dom.NamedNodeMap;
@@ -124,7 +126,31 @@ class SheetTest {
   @Test
   void every_table_has_named_columns_and_rows() {
     assertThat(elements("table")).hasSizeGreaterThan(5);
-    for (Element table : elements("table")) {
+    everyTableIsNamed(page);
+  }
+
+  /**
+   * Frames, cavities, moisture, floating spaces and bodies of revolution have tables of their own.
+   */
+  @ParameterizedTest
+  @ValueSource(strings = {"frame-pvc", "winter-check", "rod-through-wall", "cellar"})
+  void sheets_of_every_kind_are_well_formed_with_named_tables(String name) throws Exception {
+    String given = Root.folder().resolve("cases/demo/" + name + ".yaml").toString();
+    Ran ran = Ran.in(folder, "solve", given, "--sheet", "--no-plots", "--quiet", "--out", name);
+    assertThat(ran.err()).isEmpty();
+    Document other =
+        DocumentBuilderFactory.newInstance()
+            .newDocumentBuilder()
+            .parse(folder.resolve(name).resolve("sheet.html").toFile());
+    everyTableIsNamed(other);
+    assertThat(other.getElementsByTagName("svg").getLength()).isEqualTo(4);
+    assertThat(other.getDocumentElement().getTextContent()).contains(SAFETY);
+  }
+
+  private static void everyTableIsNamed(Document of) {
+    NodeList tables = of.getElementsByTagName("table");
+    for (int t = 0; t < tables.getLength(); t++) {
+      Element table = (Element) tables.item(t);
       Set<String> scopes = new TreeSet<>();
       NodeList heads = table.getElementsByTagName("th");
       for (int i = 0; i < heads.getLength(); i++) {
@@ -141,6 +167,15 @@ class SheetTest {
       }
       assertThat(widths).as(words(table)).hasSize(1);
     }
+  }
+
+  @Test
+  void a_window_has_none_and_says_so() {
+    String window = Root.folder().resolve("cases/windows/fixed-light.yaml").toString();
+    Ran ran = Ran.in(folder, "solve", window, "--sheet", "--out", "window");
+    assertThat(ran.code()).isEqualTo(ExitCode.BAD_INPUT);
+    assertThat(ran.err()).contains("is a window, which has no sheet");
+    assertThat(folder.resolve("window")).doesNotExist();
   }
 
   /** HTML living standard, 4.3.11: headings of a section rank below that of its parent. */

@@ -36,8 +36,28 @@ final class HtmlSheet {
   HtmlSheet(Subject subject, Result result, Solver.Inspection inspection, Provenance provenance) {
     this.subject = subject;
     this.result = result;
-    this.inspection = inspection;
+    this.inspection = solved(inspection, result);
     this.provenance = provenance;
+  }
+
+  /**
+   * What was understood, with the conductivities of cavities as they were found in solving. Where
+   * the surface temperatures were not asked for, or were solved on a section of their own, it stays
+   * as it was before.
+   */
+  private static Solver.Inspection solved(Solver.Inspection before, Result result) {
+    if (result.surface().isEmpty()
+        || result.surface().get().partition() != result.heatLoss().partition()) {
+      return before;
+    }
+    return new Solver.Inspection(
+        result.detail(),
+        result.heatLoss().partition(),
+        result.heatLoss().conditions(),
+        result.surface().get().conditions(),
+        before.flanks(),
+        before.assumptions(),
+        before.warnings());
   }
 
   /**
@@ -190,17 +210,30 @@ final class HtmlSheet {
       text.paragraph(question.get());
     }
     given.wanted();
+    text.note(accuracy());
+  }
+
+  private String accuracy() {
     Accuracy asked = subject.accuracy();
-    text.note(
-        "Accuracy asked for, half-widths: L2D the smaller of "
+    boolean round = Counted.of(result) == Counted.WHOLE;
+    String couplings =
+        (round ? "L3D the smaller of " : "L2D the smaller of ")
             + Digits.shortest(100 * asked.couplingRelative(), 4)
             + " % and "
-            + Digits.shortest(asked.couplingWPerMK(), 6)
-            + " W/(m·K); ψ "
-            + Digits.shortest(asked.psiWPerMK(), 6)
-            + " W/(m·K); U "
-            + Digits.shortest(100 * asked.transmittanceRelative(), 4)
-            + " %");
+            + Digits.shortest(asked.couplingWPerMK(), 6);
+    String rest =
+        round
+            ? " W/K; χ the larger of "
+                + Digits.shortest(100 * asked.pointRelative(), 4)
+                + " % and "
+                + Digits.shortest(asked.pointWPerK(), 6)
+                + " W/K"
+            : " W/(m·K); ψ "
+                + Digits.shortest(asked.psiWPerMK(), 6)
+                + " W/(m·K); U "
+                + Digits.shortest(100 * asked.transmittanceRelative(), 4)
+                + " %";
+    return "Accuracy asked for, half-widths: " + couplings + rest;
   }
 
   private void checks() {

@@ -140,6 +140,8 @@ final class InspectionCard {
                 + ", "
                 + Words.name(psi.dimensions())
                 + " dimensions");
+      } else if (wanted instanceof Wanted.Chi chi) {
+        table.row("χ " + chi.name(), Words.between(chi.warm(), chi.cold()));
       } else if (wanted instanceof Wanted.Transmittance u) {
         String width =
             u.widthM().isPresent()
