@@ -6,13 +6,13 @@ import java.util.List;
 /**
  * How gains are used when the losses of every step are known.
  *
- * <p>The need rises with the losses of every step, and gains not used fall: by the formula of η, η
- * · γ rises with γ and its slope lies between 0 and 1, and so does that of used gains over losses;
- * a greater H shortens the time constant, which lowers η.
+ * <p>At a given time constant the gains used rise with the losses, by 0 to 1 kWh for each: η · γ
+ * rises with γ and is concave. A greater H shortens the time constant, and fewer gains are used. So
+ * the need rises with the losses either way, and its ends come from the ends of the losses; gains
+ * used are bounded by the losses of one end with the time constant of the other.
  */
 public final class GainUse {
   private final Climate climate;
-  private final double conductanceWPerK;
   private final double[] gainKWh;
   private final Utilisation utilisation;
   private final double storeKWh;
@@ -38,14 +38,8 @@ public final class GainUse {
   /** All steps, and what is left to buy or to get rid of. */
   record Outcome(List<Step> steps, double usedKWh, double needKWh, double unusedKWh) {}
 
-  GainUse(
-      Climate climate,
-      Envelope envelope,
-      List<Gain> gains,
-      Utilisation utilisation,
-      double storeKWh) {
+  GainUse(Climate climate, List<Gain> gains, Utilisation utilisation, double storeKWh) {
     this.climate = climate;
-    this.conductanceWPerK = envelope.transmissionWPerK().value() + envelope.airWPerK().value();
     this.gainKWh = new double[climate.steps().size()];
     for (Gain gain : gains) {
       for (int i = 0; i < gainKWh.length; i++) {
@@ -67,16 +61,30 @@ public final class GainUse {
   /**
    * Uses the gains.
    *
-   * @param lossKWh losses of each step, kWh
+   * @param losses of each step, kWh, and after them H of the whole envelope, W/K
    * @return what becomes of them
    */
-  Outcome of(double[] lossKWh) {
+  Outcome of(double[] losses) {
+    return of(losses, losses);
+  }
+
+  /**
+   * Uses the gains by losses and a time constant of their own.
+   *
+   * @param losses of each step, kWh, and after them H of the whole envelope, W/K
+   * @param forTimeConstant the same for the time constant
+   * @return what becomes of them
+   */
+  Outcome of(double[] losses, double[] forTimeConstant) {
     List<Step> steps = new ArrayList<>();
     double used = 0;
     double left = storeKWh;
     double surplus = 0;
-    for (int i = 0; i < lossKWh.length; i++) {
-      Step step = step(climate.steps().get(i), gainKWh[i], lossKWh[i]);
+    for (int i = 0; i < gainKWh.length; i++) {
+      double drive = climate.steps().get(i).outdoorKiloKelvinHours();
+      double overAll =
+          drive > 0 ? forTimeConstant[i] / drive : forTimeConstant[forTimeConstant.length - 1];
+      Step step = step(climate.steps().get(i).name(), gainKWh[i], losses[i], overAll);
       steps.add(step);
       used += step.usedKWh();
       surplus += step.gainKWh() - step.usedKWh();
@@ -86,12 +94,10 @@ public final class GainUse {
     return new Outcome(steps, used, Math.max(0, left), surplus + Math.max(0, -left));
   }
 
-  private Step step(Climate.Step step, double gain, double loss) {
-    double drive = step.outdoorKiloKelvinHours();
-    double overAll = drive > 0 && loss > 0 ? loss / drive : conductanceWPerK;
+  private Step step(String name, double gain, double loss, double overAll) {
     Utilisation.Use use = utilisation.of(gain, loss, overAll);
     // Where nothing is lost, what comes in through the envelope is not used either.
     double used = loss <= 0 ? loss : use.factor() * gain;
-    return new Step(step.name(), gain, loss, overAll, use, used);
+    return new Step(name, gain, loss, overAll, use, used);
   }
 }

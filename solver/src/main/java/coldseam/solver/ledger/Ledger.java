@@ -142,11 +142,13 @@ public record Ledger(Envelope envelope, Climate climate, List<Entry> entries, Ou
       Supply supply) {
     requireGains(climate, gains);
     Losses losses = new Losses(envelope, climate);
-    GainUse use = new GainUse(climate, envelope, gains, utilisation, storeKWh);
+    GainUse use = new GainUse(climate, gains, utilisation, storeKWh);
     List<Uncertain> lost = losses.perStep();
-    Uncertain need = Uncertain.through(lost, ends -> use.of(ends).needKWh());
-    Uncertain used = Uncertain.through(lost, ends -> use.of(ends).usedKWh());
-    Uncertain unused = Uncertain.through(lost, ends -> use.of(ends).unusedKWh());
+    List<Uncertain> all = new ArrayList<>(lost);
+    all.add(envelope.transmissionWPerK().plus(envelope.airWPerK()));
+    Uncertain need = Uncertain.through(all, ends -> use.of(ends).needKWh());
+    Uncertain used = Uncertain.through(all, (ends, others) -> use.of(ends, others).usedKWh());
+    Uncertain unused = Uncertain.through(all, (ends, others) -> use.of(ends, others).unusedKWh());
     List<Entry> entries = new ArrayList<>(entries(gains));
     List<Entry> bought = bought(need, supply);
     entries.addAll(bought);
@@ -155,11 +157,13 @@ public record Ledger(Envelope envelope, Climate climate, List<Entry> entries, Ou
       entries.add(new Entry(Entry.Kind.UNUSED_GAIN, "gains not used", unused.times(-1)));
     }
     store(entries, storeKWh);
-    double[] central = new double[lost.size()];
-    Uncertain loss = Uncertain.ZERO;
+    double[] central = new double[all.size()];
     for (int i = 0; i < central.length; i++) {
-      central[i] = lost.get(i).value();
-      loss = loss.plus(lost.get(i));
+      central[i] = all.get(i).value();
+    }
+    Uncertain loss = Uncertain.ZERO;
+    for (Uncertain step : lost) {
+      loss = loss.plus(step);
     }
     return new Ledger(
         envelope,

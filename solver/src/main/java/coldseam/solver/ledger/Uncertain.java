@@ -3,6 +3,7 @@ package coldseam.solver.ledger;
 import coldseam.solver.conduction.Certificate;
 import coldseam.solver.conduction.Quantity;
 import java.util.List;
+import java.util.function.ToDoubleBiFunction;
 import java.util.function.ToDoubleFunction;
 
 /**
@@ -178,12 +179,45 @@ public record Uncertain(
     double b = monotone.applyAsDouble(ends(numbers, Uncertain::upper));
     double c = monotone.applyAsDouble(ends(numbers, Uncertain::widestLower));
     double d = monotone.applyAsDouble(ends(numbers, Uncertain::widestUpper));
-    String doubt = "";
-    for (Uncertain number : numbers) {
-      doubt = doubt.isEmpty() ? number.doubt : doubt;
-    }
     return new Uncertain(
-        value, Math.min(a, b), Math.max(a, b), Math.min(c, d), Math.max(c, d), doubt);
+        value, Math.min(a, b), Math.max(a, b), Math.min(c, d), Math.max(c, d), doubt(numbers));
+  }
+
+  /**
+   * What comes of numbers by way of a function of two copies of them that rises, or falls, with
+   * every number of the one and does the opposite with every number of the other.
+   *
+   * @param numbers its arguments
+   * @param opposed the function
+   * @return its value, with the ends that opposite ends of the numbers give
+   */
+  static Uncertain through(
+      List<Uncertain> numbers, ToDoubleBiFunction<double[], double[]> opposed) {
+    double[] value = ends(numbers, Uncertain::value);
+    double[] lower = ends(numbers, Uncertain::lower);
+    double[] upper = ends(numbers, Uncertain::upper);
+    double[] least = ends(numbers, Uncertain::widestLower);
+    double[] most = ends(numbers, Uncertain::widestUpper);
+    double a = opposed.applyAsDouble(lower, upper);
+    double b = opposed.applyAsDouble(upper, lower);
+    double c = opposed.applyAsDouble(least, most);
+    double d = opposed.applyAsDouble(most, least);
+    return new Uncertain(
+        opposed.applyAsDouble(value, value),
+        Math.min(a, b),
+        Math.max(a, b),
+        Math.min(c, d),
+        Math.max(c, d),
+        doubt(numbers));
+  }
+
+  private static String doubt(List<Uncertain> numbers) {
+    for (Uncertain number : numbers) {
+      if (!number.proved()) {
+        return number.doubt;
+      }
+    }
+    return "";
   }
 
   private static double[] ends(List<Uncertain> numbers, ToDoubleFunction<Uncertain> end) {

@@ -83,7 +83,9 @@ public sealed interface Utilisation {
     @Override
     public Use of(double gain, double loss, double conductanceWPerK) {
       if (!(conductanceWPerK > 0)) {
-        return new Use(gain / loss, Double.NaN, Double.NaN, gain > 0 ? loss / gain : 1);
+        // Nothing cools the building down: all is used that there is room for.
+        double most = gain > 0 ? Math.min(1, loss / gain) : 1;
+        return new Use(gain / loss, Double.NaN, Double.NaN, most);
       }
       double tau = capacityJPerK / (SECONDS_PER_HOUR * conductanceWPerK);
       double a = a0 + tau / tau0H;

@@ -146,9 +146,9 @@ class LedgerTest {
     assertThat(withUnused).isGreaterThan(500);
   }
 
-  /** The need of any building whose figures lie within their intervals lies within the need's. */
+  /** Whatever building has its figures within their intervals, every item lies within its own. */
   @Test
-  void the_need_lies_within_its_interval() {
+  void everything_lies_within_its_interval() {
     Random random = new Random(SEED + 1);
     int wide = 0;
     for (int i = 0; i < 300; i++) {
@@ -179,6 +179,16 @@ class LedgerTest {
             .isBetween(need.widestLower() - rounding, need.widestUpper() + rounding);
         assertThat(((Ledger.Designed) other.outcome()).boughtKWh().value())
             .isBetween(bought.widestLower() - rounding, bought.widestUpper() + rounding);
+        for (Entry entry : ledger.entries()) {
+          for (Entry moving : other.entries()) {
+            if (moving.kind() == entry.kind() && moving.name().equals(entry.name())) {
+              Uncertain interval = entry.energyKWh();
+              assertThat(moving.energyKWh().value())
+                  .as(entry.name())
+                  .isBetween(interval.widestLower() - rounding, interval.widestUpper() + rounding);
+            }
+          }
+        }
       }
       wide += need.tolerance() > 0 ? 1 : 0;
     }
