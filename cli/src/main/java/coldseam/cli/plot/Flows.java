@@ -100,18 +100,21 @@ record Flows(List<Band> in, List<Band> out) {
     };
   }
 
-  /** The bands, the smallest of plane elements and gains summed up if there are too many. */
+  /** The bands, the smallest summed up if there are too many; what the figure is for stays. */
   private static List<Band> readable(List<Band> bands) {
     List<Band> left = new ArrayList<>(bands);
     Uncertain rest = Uncertain.ZERO;
     int count = 0;
     while (left.size() + (count > 0 ? 1 : 0) > MOST_BANDS) {
-      Band least = left.get(0);
-      for (Band band : left) {
-        least = band.size() < least.size() ? band : least;
+      int least = -1;
+      for (int i = 0; i < left.size(); i++) {
+        Look look = left.get(i).look();
+        boolean stays = look == Look.REMAINDER || look == Look.BRIDGES;
+        if (!stays && (least < 0 || left.get(i).size() < left.get(least).size())) {
+          least = i;
+        }
       }
-      left.remove(least);
-      rest = rest.plus(least.energy());
+      rest = rest.plus(left.remove(least).energy());
       count++;
     }
     if (count > 0) {

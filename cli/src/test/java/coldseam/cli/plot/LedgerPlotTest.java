@@ -124,7 +124,7 @@ class LedgerPlotTest {
       parts.add(
           part(Envelope.Kind.ELEMENT, "a plane element with a rather long name " + i, 1 + i % 7));
     }
-    parts.add(part(Envelope.Kind.JUNCTION, "edge", 2));
+    parts.add(part(Envelope.Kind.JUNCTION, "edge", 0.5));
     Read plot = Read.of(new LedgerPlot("House of many parts", designed(parts)).svg());
     List<Box> boxes = new ArrayList<>();
     Element labels = plot.layers("ledger-labels").get(0);
@@ -145,7 +145,7 @@ class LedgerPlotTest {
         assertThat(boxes.get(i).meets(boxes.get(k))).as(i + " and " + k).isFalse();
       }
     }
-    assertThat(labels.getTextContent()).contains(" others");
+    assertThat(labels.getTextContent()).contains(" others").contains("junctions and points");
   }
 
   /** More by the data than came in: the remainder comes in; junctions may lessen what leaves. */
