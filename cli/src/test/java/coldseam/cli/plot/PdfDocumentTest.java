@@ -7,14 +7,19 @@ import java.awt.Color;
 import java.awt.image.BufferedImage;
 import java.io.ByteArrayInputStream;
 import java.io.IOException;
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Set;
 import java.util.TreeSet;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 import javax.imageio.ImageIO;
 import org.apache.pdfbox.Loader;
 import org.apache.pdfbox.pdmodel.PDDocument;
 import org.apache.pdfbox.rendering.ImageType;
 import org.apache.pdfbox.rendering.PDFRenderer;
 import org.apache.pdfbox.text.PDFTextStripper;
+import org.apache.pdfbox.text.TextPosition;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.EnumSource;
@@ -133,15 +138,39 @@ class PdfDocumentTest {
         .replace('\u00a0', ' ');
   }
 
-  @Test
-  void turned_text_stays_on_the_page() throws IOException {
-    Plots plots = balcony();
-    Solved solved = Solved.shipped("balcony.yaml");
-    assertThat(solved.result().psi()).isNotEmpty();
-    try (PDDocument document = Loader.loadPDF(alone(plots, Kind.SECTION))) {
-      String text = new PDFTextStripper().getText(document).replaceAll("\\s+", "");
-      assertThat(text).contains("topflank,external1700").contains("bottomflank,internal1300");
+  /** Places and letters of text that reads upwards. */
+  private static final class Upwards extends PDFTextStripper {
+    private final List<String> letters = new ArrayList<>();
+
+    @Override
+    protected void processTextPosition(TextPosition text) {
+      if (text.getDir() == 90 && !text.getUnicode().isBlank()) {
+        letters.add(text.getUnicode() + Math.round(text.getTextMatrix().getTranslateX()));
+      }
     }
+  }
+
+  /** Turned a quarter to the left, on the line and with the letters that the SVG has. */
+  @Test
+  void turned_text_is_where_the_svg_has_it() throws IOException {
+    Plots plots = balcony();
+    List<String> expected = new ArrayList<>();
+    Matcher turned =
+        Pattern.compile("<text x=\"([0-9.]+)\"[^>]*rotate\\(-90 [^>]*>([^<]*)</text>")
+            .matcher(plots.svg(Kind.SECTION));
+    while (turned.find()) {
+      for (char letter : letters(turned.group(2)).toCharArray()) {
+        if (letter != ' ') {
+          expected.add("" + letter + Math.round(Double.parseDouble(turned.group(1))));
+        }
+      }
+    }
+    Upwards found = new Upwards();
+    try (PDDocument document = Loader.loadPDF(alone(plots, Kind.SECTION))) {
+      found.getText(document);
+    }
+    assertThat(expected).hasSizeGreaterThan(100);
+    assertThat(found.letters).containsExactlyInAnyOrderElementsOf(expected);
   }
 
   @Test
