@@ -33,6 +33,7 @@ final class CaseReader {
           "chi",
           "U",
           "frame",
+          "framing",
           "points",
           "profiles",
           "moisture",

@@ -6,6 +6,7 @@ import coldseam.solver.detail.Area;
 import coldseam.solver.detail.Detail;
 import coldseam.solver.detail.Geometry;
 import coldseam.solver.detail.Space;
+import coldseam.solver.detail.Stretch;
 import coldseam.solver.detail.View;
 import coldseam.solver.detail.Wanted;
 import coldseam.solver.ground.GroundSection;
@@ -100,6 +101,14 @@ final class DetailReader {
             Problems.suggestion(old, fills.replaceable()));
       }
     }
+    Optional<FramingReader.Framing> framing = Optional.empty();
+    Node framingNode = top.nodeOrNull("framing");
+    if (framingNode != null) {
+      framing = new FramingReader(pass, spaces).read(top.keyNode("framing"), framingNode, areas);
+      if (framing.isPresent() && framing.get().clip().isPresent()) {
+        areas = framing.get().clip().get().of(areas);
+      }
+    }
     Optional<GroundReader.Ground> ground = Optional.empty();
     Node groundNode = top.nodeOrNull("ground");
     if (groundNode != null) {
@@ -124,6 +133,7 @@ final class DetailReader {
     ResultsReader results = new ResultsReader(pass, spaces);
     List<Wanted> wanted = wanted(spaces, results, new PsiReader(pass, spaces, flanks, others));
     List<String> psi = psiNames(ground, spaces);
+    List<Stretch> modulePlanes = framing(framing, areas, results, wanted);
     node = top.nodeOrNull("moisture");
     if (node != null) {
       Optional<Wanted> moisture =
@@ -161,7 +171,7 @@ final class DetailReader {
             view,
             uncovered.isPresent() ? Uncovered.under(areas, uncovered.get()) : areas,
             spaces.good(),
-            stretches.stretches(),
+            with(stretches.stretches(), modulePlanes),
             flanks.flanks(),
             wanted,
             pass.assumptions());
@@ -181,6 +191,36 @@ final class DetailReader {
           key, "the ground lies below", "draw a vertical view with up as up: leave `up` away");
     }
     return new GroundReader(pass, spaces).read(key, node, fills);
+  }
+
+  /** Adds what a framing asks for; the planes at the ends of its module are given back. */
+  private List<Stretch> framing(
+      Optional<FramingReader.Framing> framing,
+      List<Area> areas,
+      ResultsReader results,
+      List<Wanted> wanted) {
+    if (framing.isEmpty()) {
+      return List.of();
+    }
+    String of = framing.get().of();
+    if (results.transmittances().contains(of)) {
+      problems.add(
+          top.keyNode("framing"),
+          "there is a U of `" + Node.shortened(of) + "` already",
+          "leave that one away, or call this one otherwise by `of`");
+    }
+    results.transmittances().add(of);
+    wanted.addAll(framing.get().wanted());
+    return framing.get().clip().isEmpty() ? List.of() : framing.get().clip().get().planes(areas);
+  }
+
+  private static List<Stretch> with(List<Stretch> stretches, List<Stretch> more) {
+    if (more.isEmpty()) {
+      return stretches;
+    }
+    List<Stretch> all = new ArrayList<>(stretches);
+    all.addAll(more);
+    return all;
   }
 
   private void frame(Node node, SpaceReader spaces, ResultsReader results, List<Wanted> wanted) {

@@ -19,6 +19,12 @@ public enum Place {
   RESISTANCE(Dimension.RESISTANCE, "m2 K/W", 1e-6, 1e6, "more than 0 m2 K/W, e.g. `R-13`"),
   /** U. */
   TRANSMITTANCE(Dimension.TRANSMITTANCE, "W/(m2 K)", 0, 1e5, "0 to 100000 W/(m2 K), e.g. `1.4`"),
+  /** A part of an area. */
+  FRACTION(Dimension.SHARE, "", 0, 1, "0 to 100 %, e.g. `21 %`"),
+  /** Level of air voids. */
+  VOID_LEVEL(Dimension.BARE, "", 0, 2, "0, 1 or 2"),
+  /** Rain in mm a day, or fasteners in 1 m². */
+  AMOUNT(Dimension.BARE, "", 0, 1e4, "a number, 0 or more, e.g. `2`"),
   /** Wind, m/s. */
   SPEED(Dimension.BARE, "", 0, 100, "0 to 100 m/s, e.g. `4`"),
   /** ψ. */

@@ -43,6 +43,9 @@ record JsonResults(Subject subject, Result result) {
     shares(json);
     flanks(json, result.flanks());
     new CavitySection(result.cavities()).write(json);
+    if (!result.framings().isEmpty()) {
+      new FramingSection(result, Units.of(subject), Ink.NONE).write(json);
+    }
     new FloorEdgeSection(result, Units.of(subject), Ink.NONE).write(json);
     new MoistureSection(result, Units.of(subject), Ink.NONE).write(json);
     new RequiredSection(result, Ink.NONE).write(json);

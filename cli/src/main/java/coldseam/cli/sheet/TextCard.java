@@ -53,6 +53,7 @@ final class TextCard {
   void results() {
     numbers();
     accounts();
+    new FramingSection(result, units, ink).write(text);
     new FloorEdgeSection(result, units, ink).write(text);
     new FlowSection(result, units, ink).write(text);
     new ShareSection(result, units, ink).write(text);

@@ -217,6 +217,7 @@ final class Samples {
                 0.02,
                 Optional.of("outdoors"),
                 Optional.empty())),
+        List.of(),
         Optional.empty(),
         List.of(),
         List.of(),

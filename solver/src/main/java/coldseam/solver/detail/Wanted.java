@@ -247,4 +247,66 @@ public sealed interface Wanted {
       layers = List.copyOf(layers);
     }
   }
+
+  /**
+   * A framed wall, or layers alone, beside the two resistance limits of ISO 6946.
+   *
+   * @param of the U it belongs to
+   * @param alongY whether its faces run along y, else along x
+   * @param layer the fill whose share in R is wanted and that corrections refer to; empty for none
+   * @param fractions of the area of the whole wall
+   * @param corrections to U
+   */
+  record Framing(
+      String of,
+      boolean alongY,
+      String layer,
+      Optional<Fractions> fractions,
+      Optional<Corrections> corrections)
+      implements Wanted {
+    /**
+     * What the whole wall is made of; parts of 1.
+     *
+     * @param cavity insulation alone
+     * @param studs studs
+     * @param headers plates, headers and other framing
+     */
+    public record Fractions(double cavity, double studs, double headers) {}
+
+    /** Shape of a part of a roof with a tapered layer. */
+    public enum Taper {
+      /** A rectangle. */
+      RECTANGLE,
+      /** A triangle, thickest at its apex. */
+      THICKEST_AT_APEX,
+      /** A triangle, thinnest at its apex. */
+      THINNEST_AT_APEX
+    }
+
+    /**
+     * Corrections of ISO 6946; 0 where there is none.
+     *
+     * @param voidLevel air voids, 0 to 2
+     * @param fastenersPerM2 1/m²
+     * @param fastenerWPerMK conductivity of a fastener
+     * @param fastenerM2 its cross-section, m²
+     * @param insulationM thickness of the insulation they pass, m
+     * @param throughM length of a fastener in it, m
+     * @param rainMmPerDay mean rain on an inverted roof, mm a day
+     * @param rainFactor f·x
+     * @param taper shape of a tapered layer on top of what is drawn
+     * @param taperM2KPerW its R where it is thickest
+     */
+    public record Corrections(
+        int voidLevel,
+        double fastenersPerM2,
+        double fastenerWPerMK,
+        double fastenerM2,
+        double insulationM,
+        double throughM,
+        double rainMmPerDay,
+        double rainFactor,
+        Optional<Taper> taper,
+        double taperM2KPerW) {}
+  }
 }

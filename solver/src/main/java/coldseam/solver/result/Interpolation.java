@@ -108,6 +108,7 @@ public final class Interpolation {
         well.weights(),
         flanks(),
         cavities(layers),
+        well.framings(),
         well.floorEdge(),
         well.moisture(),
         new Requirements(well.detail())

@@ -46,6 +46,7 @@ public final class Plan {
   private final FrameTransmittances frames;
   private final PointTransmittances points;
   private final CutOffChecks cutOffs;
+  private final Framings framings;
   private final MoistureChecks moisture;
   private final Requirements requirements;
   private final boolean module;
@@ -75,6 +76,7 @@ public final class Plan {
     points = new PointTransmittances(detail, outline, plane ? List.of() : finder.flanks());
     SectionChecks section = new SectionChecks(detail, outline);
     cutOffs = new CutOffChecks(outline);
+    framings = new Framings(detail, partition, heatLoss);
     moisture = new MoistureChecks(detail);
     requirements = new Requirements(detail);
     module = transmittances.any() && !psi.any();
@@ -84,6 +86,7 @@ public final class Plan {
     faults.addAll(frames.faults());
     faults.addAll(points.faults());
     faults.addAll(section.faults());
+    faults.addAll(framings.faults());
     faults.addAll(moisture.faults());
     for (Map.Entry<Subtraction.OfDetail, Plan> other : others.entrySet()) {
       faults.addAll(other.getValue().sides(other.getKey()));
@@ -396,6 +399,7 @@ public final class Plan {
         Weights.of(detail, surfaces, coldestFields, sets),
         flanks(),
         cavities,
+        framings.evaluate(allU),
         FloorEdges.evaluate(detail, temperatures, balances.stretches(), couplings),
         checked,
         required,

@@ -37,6 +37,7 @@ import java.util.OptionalDouble;
  * @param flanks every flank, named or found
  * @param cavities every air cavity as it was found and given a conductivity; the bounds of all
  *     numbers hold for these conductivities
+ * @param framings framed walls beside their two resistance limits
  * @param floorEdge the edge of a floor next to the ground, if one is asked for
  * @param moisture moisture checks of surfaces, one entry a space judged; empty if none is asked for
  * @param requirements what the case requires of its results, in the order written
@@ -66,6 +67,7 @@ public record Result(
     List<Weight> weights,
     List<FlankResult> flanks,
     List<Cavity> cavities,
+    List<Framing> framings,
     Optional<FloorEdge> floorEdge,
     List<SpaceMoisture> moisture,
     List<Required> requirements,
@@ -448,4 +450,74 @@ public record Result(
    * @param errorWPerMK estimated error of it
    */
   public record FloorEdge(Wanted.FloorEdge of, OptionalDouble factorWPerMK, double errorWPerMK) {}
+
+  /**
+   * A framed wall beside its two resistance limits (ISO 6946); R in m²·K/W, films included unless
+   * said otherwise.
+   *
+   * @param wanted what was asked for
+   * @param resistance R of the module as solved, with what is known of it
+   * @param films mean of both films together
+   * @param parallelR R by parallel paths: no resistance is higher
+   * @param isothermalR R by isothermal planes: none is lower
+   * @param besideR R beside all framing
+   * @param framingR R straight through the framing
+   * @param framedShare part of the width that framing takes
+   * @param metal whether metal bridges a layer
+   * @param meanR mean of the two limits; empty where ISO 6946 does not allow it
+   * @param meanError its greatest relative error
+   * @param framingWPerMK what the framing of one module adds, for each metre: (U − 1/R
+   *     beside)·width
+   * @param layerR R of the layer asked for, beside the framing
+   * @param effectiveR what is left of it: R less everything else beside the framing
+   * @param wholeWPerM2K U of the whole wall by parallel paths of its fractions
+   * @param wholeSolvedWPerM2K U as solved, with what framing beyond that drawn adds straight
+   *     through
+   * @param corrected U with corrections
+   */
+  public record Framing(
+      Wanted.Framing wanted,
+      Quantity resistance,
+      double films,
+      double parallelR,
+      double isothermalR,
+      double besideR,
+      double framingR,
+      double framedShare,
+      boolean metal,
+      OptionalDouble meanR,
+      double meanError,
+      double framingWPerMK,
+      OptionalDouble layerR,
+      OptionalDouble effectiveR,
+      OptionalDouble wholeWPerM2K,
+      OptionalDouble wholeSolvedWPerM2K,
+      Optional<Corrected> corrected) {
+    /** Part of the resistance beside the framing that is lost by it, 0 to 1. */
+    public double lostShare() {
+      return 1 - resistance.value() / besideR;
+    }
+  }
+
+  /**
+   * Corrections of ISO 6946 to a U; W/(m²·K).
+   *
+   * @param voids ΔU_g
+   * @param fasteners ΔU_f
+   * @param rain ΔU_r
+   * @param uncorrected U without them
+   * @param tapered U of the part with a tapered layer, not corrected
+   */
+  public record Corrected(
+      double voids, double fasteners, double rain, double uncorrected, OptionalDouble tapered) {
+    /** Whether all of it together may be left out. */
+    public boolean negligible() {
+      return voids + fasteners + rain < TransmittanceRules.NEGLIGIBLE * uncorrected;
+    }
+
+    /** U with all corrections. */
+    public double u() {
+      return uncorrected + voids + fasteners + rain;
+    }
+  }
 }
