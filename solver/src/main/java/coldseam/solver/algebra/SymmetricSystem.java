@@ -45,8 +45,8 @@ public final class SymmetricSystem {
    * @return the factored system
    * @throws IllegalArgumentException if an unknown has no diagonal entry or an index is out of
    *     range
-   * @throws IllegalStateException if the matrix is not positive definite or has entries that are
-   *     not finite
+   * @throws NotPositiveDefiniteException if the matrix is not positive definite or has entries that
+   *     are not finite
    */
   public static SymmetricSystem factor(
       int unknowns, int[] rows, int[] columns, double[] values, int count) {
@@ -58,8 +58,8 @@ public final class SymmetricSystem {
    *
    * @param matrix the matrix
    * @return the factored system
-   * @throws IllegalStateException if the matrix is not positive definite or has entries that are
-   *     not finite
+   * @throws NotPositiveDefiniteException if the matrix is not positive definite or has entries that
+   *     are not finite
    */
   public static SymmetricSystem factor(SparseSymmetric matrix) {
     Factor factor =

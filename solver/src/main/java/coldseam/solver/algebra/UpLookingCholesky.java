@@ -28,7 +28,7 @@ final class UpLookingCholesky implements Factor {
   /**
    * Factors a matrix.
    *
-   * @throws IllegalStateException if it is not positive definite or not finite
+   * @throws NotPositiveDefiniteException if it is not positive definite or not finite
    */
   static UpLookingCholesky of(SparseSymmetric matrix) {
     int n = matrix.unknowns();
@@ -126,8 +126,7 @@ final class UpLookingCholesky implements Factor {
       }
       double pivot = values[own] - solveRow(x, column, rowStart[k], rowStart[k + 1], fill);
       if (!(pivot > 0) || Double.isInfinite(pivot)) {
-        throw new IllegalStateException(
-            "the system of " + n + " unknowns is not positive definite: pivot " + k + " " + pivot);
+        throw new NotPositiveDefiniteException(k, n, pivot);
       }
       diagonal[k] = Math.sqrt(pivot);
     }

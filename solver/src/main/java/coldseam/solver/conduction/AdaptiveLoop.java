@@ -2,6 +2,7 @@ package coldseam.solver.conduction;
 
 import coldseam.mesh.partition.Partition;
 import coldseam.mesh.triangulation.Mesh;
+import coldseam.solver.algebra.NotPositiveDefiniteException;
 import coldseam.solver.detail.Accuracy;
 import coldseam.solver.detail.Conditions;
 import java.util.ArrayList;
@@ -9,6 +10,7 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.concurrent.CancellationException;
 import java.util.concurrent.CompletableFuture;
+import java.util.concurrent.CompletionException;
 import java.util.function.Supplier;
 
 /** Solve, estimate, mark, refine, until what is asked is met. */
@@ -152,6 +154,14 @@ final class AdaptiveLoop {
 
   private void solve(Mesh mesh) {
     d = new Discretisation(mesh, conditions);
+    try {
+      solve();
+    } catch (NotPositiveDefiniteException e) {
+      throw Slivers.explained(d, conditions, e);
+    }
+  }
+
+  private void solve() {
     meeting = d.meeting();
     if (proving && d.spaces > 1 && !meetsAnywhere()) {
       solveBothSides();
@@ -214,14 +224,29 @@ final class AdaptiveLoop {
       CompletableFuture<double[][]> other =
           CompletableFuture.supplyAsync(new StreamFunctions(d, space));
       fields = Assembly.unitFields(d);
-      streams = other.join();
+      streams = joined(other);
     }
     bound = new TwoSidedBound(d, fields, space, streams);
     matrix = ConductanceMatrix.of(d, bound);
     proved.add(new Proved(d.unknowns, bound.up, bound.lo, bound.gap));
     if (!(bound.mismatch() <= MISMATCH * bound.allowance)) {
-      throw new IllegalStateException(
-          "the two ways to the gap of the bounds disagree by " + bound.mismatch());
+      throw Slivers.explained(
+          d,
+          conditions,
+          new IllegalStateException(
+              "the two ways to the gap of the bounds disagree by " + bound.mismatch()));
+    }
+  }
+
+  /** What another thread found; what it threw is thrown as it is. */
+  private static double[][] joined(CompletableFuture<double[][]> other) {
+    try {
+      return other.join();
+    } catch (CompletionException e) {
+      if (e.getCause() instanceof RuntimeException cause) {
+        throw cause;
+      }
+      throw e;
     }
   }
 

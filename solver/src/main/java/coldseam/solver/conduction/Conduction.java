@@ -4,6 +4,7 @@ import coldseam.mesh.partition.Partition;
 import coldseam.mesh.triangulation.Mesh;
 import coldseam.mesh.triangulation.SizeField;
 import coldseam.mesh.triangulation.Triangulator;
+import coldseam.solver.algebra.NotPositiveDefiniteException;
 import coldseam.solver.detail.Accuracy;
 import coldseam.solver.detail.Conditions;
 import java.util.List;
@@ -125,7 +126,12 @@ public final class Conduction {
   private static Solution fields(
       Partition partition, Conditions conditions, Corners corners, Mesh mesh) {
     Discretisation d = new Discretisation(mesh, conditions);
-    double[][] fields = Assembly.unitFields(d);
+    double[][] fields;
+    try {
+      fields = Assembly.unitFields(d);
+    } catch (NotPositiveDefiniteException e) {
+      throw Slivers.explained(d, conditions, e);
+    }
     return new FieldSolution(
         partition,
         conditions,

@@ -67,6 +67,19 @@ final class QuadraticElement {
     return 2 * Math.sqrt(g0 * g1 + g1 * g2 + g2 * g0);
   }
 
+  /**
+   * How much of the figures of a triangle cancels in its energies: relative rounding errors grow by
+   * so much. 1 if it has a right angle, whatever its proportions; about the square of length over
+   * height if it is blunt or sharp; infinite if nothing is left.
+   */
+  static double cancellation(double[] g, int t) {
+    double p = g[3 * t] * g[3 * t + 1];
+    double q = g[3 * t + 1] * g[3 * t + 2];
+    double r = g[3 * t + 2] * g[3 * t];
+    double left = p + q + r;
+    return left > 0 ? (Math.abs(p) + Math.abs(q) + Math.abs(r)) / left : Double.POSITIVE_INFINITY;
+  }
+
   private static double turned(
       double xx, double xy, double yy, double ax, double ay, double bx, double by) {
     return xx * ay * by - xy * (ay * bx + ax * by) + yy * ax * bx;

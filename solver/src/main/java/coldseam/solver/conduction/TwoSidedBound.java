@@ -17,7 +17,8 @@ import coldseam.solver.detail.Conditions;
  *
  * <p>What is assumed: the section is exactly that of the partition, its conductivities constant in
  * each label; all energies are sums of products of differences of nodal values, whose rounding is
- * covered by the allowance of {@link #ROUNDING} times the energy and more for stretched triangles.
+ * covered by the allowance of {@link #ROUNDING} times the energy and more for stretched and for
+ * blunt triangles.
  */
 final class TwoSidedBound {
   /** Relative rounding allowance of an energy for triangles of aspect up to {@link #ASPECT}. */
@@ -25,6 +26,12 @@ final class TwoSidedBound {
 
   /** The allowance grows with the aspect over this. */
   static final double ASPECT = 1000;
+
+  /** Triangles whose figures cancel less than this are covered by the general allowance. */
+  private static final double CANCELLING = 1000;
+
+  /** Rounding errors that go into the energy of one triangle. */
+  private static final double ROUNDINGS = 16;
 
   /** Upper energies, W/(m·K); the last row and column belong to the given flows. */
   final double[][] up;
@@ -64,7 +71,6 @@ final class TwoSidedBound {
     lo = new double[n][n];
     gap = new double[n][n];
     local = new double[n][d.mesh.triangleCount()];
-    allowance = ROUNDING * Math.max(1, aspect() / ASPECT);
     int used = d.hasFlow ? n : n - 1;
     for (int i = 0; i < used; i++) {
       for (int j = i; j < used; j++) {
@@ -75,6 +81,7 @@ final class TwoSidedBound {
       }
     }
     gaps(used);
+    allowance = Math.max(ROUNDING * Math.max(1, aspect() / ASPECT), cancelled(used));
   }
 
   /** Largest disagreement of the two ways to the gap, relative to the energies. */
@@ -107,6 +114,28 @@ final class TwoSidedBound {
         longest = Math.max(longest, dx * dx + dy * dy);
       }
       worst = Math.max(worst, longest / (2 * d.mesh.area(t)));
+    }
+    return worst;
+  }
+
+  /**
+   * What may be lost to rounding in the energies of triangles whose figures nearly cancel, relative
+   * to the energy of the field that loses most.
+   */
+  private double cancelled(int used) {
+    double[] lost = new double[used];
+    for (int t = 0; t < d.mesh.triangleCount(); t++) {
+      double cancellation = QuadraticElement.cancellation(d.couplings, t);
+      for (int f = 0; f < used && cancellation > CANCELLING; f++) {
+        double energy =
+            Math.abs(d.body.conducted(t, fields[f], fields[f]))
+                + Math.abs(d.body.resisted(space.nodes, t, streams[f], streams[f]));
+        lost[f] += ROUNDINGS * Math.ulp(1.0) * cancellation * energy;
+      }
+    }
+    double worst = 0;
+    for (int f = 0; f < used; f++) {
+      worst = lost[f] > 0 ? Math.max(worst, lost[f] / scale(f)) : worst;
     }
     return worst;
   }
