@@ -1,5 +1,6 @@
 package coldseam.cases;
 
+import coldseam.cases.words.Invisible;
 import java.util.Optional;
 
 /**
@@ -12,6 +13,14 @@ import java.util.Optional;
  * @param right what would be right, a sentence without a full stop
  */
 public record Problem(String file, int line, int column, String wrong, Optional<String> right) {
+  /** Whatever a file says is shown without what a terminal would act on. */
+  public Problem {
+    wrong = Invisible.shown(wrong);
+    if (right.isPresent()) {
+      right = Optional.of(Invisible.shown(right.get()));
+    }
+  }
+
   /** The problem in one line: {@code file:line:column: what is wrong; what would be right}. */
   public String text() {
     StringBuilder text = new StringBuilder(file);

@@ -1,9 +1,11 @@
 package coldseam.cases;
 
+import coldseam.cases.words.Invisible;
 import java.util.ArrayList;
 import java.util.HashMap;
 import java.util.Iterator;
 import java.util.List;
+import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import org.snakeyaml.engine.v2.api.LoadSettings;
@@ -120,6 +122,14 @@ final class YamlTree {
     if (event instanceof ScalarEvent scalar) {
       if (scalar.getTag().isPresent()) {
         throw refuse(event, "tags such as `!!str` are not used here", "leave the tag away");
+      }
+      int invisible = Invisible.first(scalar.getValue());
+      if (invisible >= 0) {
+        String code = Integer.toHexString(0x10000 | scalar.getValue().charAt(invisible));
+        throw refuse(
+            event,
+            "an invisible character stands here, U+" + code.substring(1).toUpperCase(Locale.ROOT),
+            "leave it away");
       }
       node = scalar(scalar);
     } else {

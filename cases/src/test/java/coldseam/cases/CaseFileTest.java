@@ -109,6 +109,17 @@ class CaseFileTest {
     assertThat(said("a: *b\n")).contains(":1:4: `*b` refers to nothing written before it");
   }
 
+  /** Nothing that a terminal acts on comes from a file to a message or a card. */
+  @Test
+  void invisible_characters_are_refused() throws IOException {
+    assertThat(said("coldseam: 1\ntitle: \"a\\e[31mb\"\n"))
+        .isEqualTo(
+            "FOLDER/case.yaml:2:8: an invisible character stands here, U+001B; leave it away");
+    assertThat(said("coldseam: 1\ntitle: a\u202Eb\n")).contains("U+202E");
+    assertThat(said("coldseam: 1\ntitle: \"a\\ud800b\"\n")).contains("U+D800");
+    assertThat(said("coldseam: 1\nti\u0085tle: x\n")).doesNotContain("\u0085");
+  }
+
   @Test
   void bombs_are_refused() throws IOException {
     StringBuilder aliases = new StringBuilder("a0: &a0 [x, x, x, x, x, x, x, x, x, x]\n");

@@ -5,6 +5,7 @@ import java.nio.file.Files;
 import java.nio.file.LinkOption;
 import java.nio.file.Path;
 import java.nio.file.StandardCopyOption;
+import java.nio.file.StandardOpenOption;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
@@ -60,30 +61,23 @@ final class NewFiles {
    */
   void write(Map<Path, byte[]> files) throws UsageException {
     List<Path> laid = new ArrayList<>();
-    try {
+    try (Staged staged = new Staged()) {
       for (Map.Entry<Path, byte[]> file : files.entrySet()) {
         check(file.getKey());
-        Path folder = file.getKey().toAbsolutePath().getParent();
-        Path beside = Files.createTempFile(folder, ".coldseam-", ".part");
+        Staged.sweep(file.getKey());
+        Path beside = staged.take(Staged.beside(file.getKey().toAbsolutePath()));
         laid.add(beside);
-        Files.write(beside, file.getValue());
+        Files.write(beside, file.getValue(), StandardOpenOption.CREATE_NEW);
       }
       int i = 0;
       for (Path file : files.keySet()) {
         Files.move(
             laid.get(i), file, StandardCopyOption.ATOMIC_MOVE, StandardCopyOption.REPLACE_EXISTING);
+        staged.moved(laid.get(i));
         i++;
       }
     } catch (IOException e) {
       throw new UsageException(command, "cannot write: " + Failure.words(e));
-    } finally {
-      for (Path beside : laid) {
-        try {
-          Files.deleteIfExists(beside);
-        } catch (IOException e) {
-          here.err().println("left behind: " + here.shown(beside));
-        }
-      }
     }
   }
 }

@@ -111,11 +111,11 @@ final class OutputFolder {
   void write(Map<String, byte[]> files) throws UsageException, IOException {
     check(files.keySet());
     List<Path> made = new ArrayList<>();
-    Path stage = null;
-    try {
+    try (Staged staged = new Staged()) {
       makeParents(folder.getParent(), made);
+      Staged.sweep(folder);
       boolean fresh = Files.notExists(folder);
-      stage = Files.createDirectory(folder.resolveSibling(stageName()));
+      Path stage = Files.createDirectory(staged.take(Staged.beside(folder)));
       List<String> changed = new ArrayList<>();
       for (Map.Entry<String, byte[]> file : files.entrySet()) {
         if (fresh || !holds(folder.resolve(file.getKey()), file.getValue())) {
@@ -126,29 +126,16 @@ final class OutputFolder {
       if (fresh) {
         writer.write(stage.resolve(LIST), list(files.keySet()));
         Files.move(stage, folder, StandardCopyOption.ATOMIC_MOVE);
-        stage = null;
+        staged.moved(stage);
       } else {
         replace(stage, files.keySet(), changed);
       }
       made.clear();
     } finally {
-      if (stage != null) {
-        delete(stage);
-      }
       for (int i = made.size() - 1; i >= 0; i--) {
         Files.deleteIfExists(made.get(i));
       }
     }
-  }
-
-  /** A name that no other solve uses: of this moment. */
-  private String stageName() {
-    return "."
-        + folder.getFileName()
-        + "-"
-        + Long.toString(System.currentTimeMillis(), Character.MAX_RADIX)
-        + "-"
-        + Long.toString(System.nanoTime() & Long.MAX_VALUE, Character.MAX_RADIX);
   }
 
   /** Whether a file has this content already. */
@@ -213,18 +200,5 @@ final class OutputFolder {
       }
     }
     return names;
-  }
-
-  private static void delete(Path stage) throws IOException {
-    try (var entries = Files.newDirectoryStream(stage)) {
-      for (Path entry : entries) {
-        if (Files.isDirectory(entry, LinkOption.NOFOLLOW_LINKS)) {
-          delete(entry);
-        } else {
-          Files.delete(entry);
-        }
-      }
-    }
-    Files.delete(stage);
   }
 }

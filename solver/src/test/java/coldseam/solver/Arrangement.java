@@ -38,7 +38,10 @@ record Arrangement(List<Shape> shapes, List<Space> spaces, UnaryOperator<Point> 
    */
   record Shape(Fill fill, double[] xy) {}
 
-  static Arrangement random(Random random) {
+  /** The arrangement of a number. */
+  static Arrangement of(long number) {
+    // numbers that follow each other make generators that begin alike
+    Random random = new Random(number * 0x9E3779B97F4A7C15L);
     List<Space> spaces = spaces(random);
     List<Fill> fills = new ArrayList<>(List.of(new Hollow("hollow")));
     for (int i = 0; i < 2 + random.nextInt(4); i++) {
@@ -46,6 +49,9 @@ record Arrangement(List<Shape> shapes, List<Space> spaces, UnaryOperator<Point> 
     }
     List<Shape> shapes = new ArrayList<>();
     ground(random, spaces, (Material) fills.get(1), shapes);
+    for (Space more : spaces.subList(2, spaces.size())) {
+      shapes.add(new Shape(more, outline(random, shapes)));
+    }
     int count = 1 + random.nextInt(random.nextInt(8) == 0 ? 40 : 8);
     for (int i = 0; i < count; i++) {
       boolean open = random.nextInt(6) == 0;
@@ -86,8 +92,7 @@ record Arrangement(List<Shape> shapes, List<Space> spaces, UnaryOperator<Point> 
     double dx = FAR[random.nextInt(FAR.length)] / 1000;
     double dy = -FAR[random.nextInt(FAR.length)] / 1000;
     return p ->
-        new Point(
-            dx + mirror * (p.x() * cos - p.y() * sin), dy + p.x() * sin + p.y() * cos);
+        new Point(dx + mirror * (p.x() * cos - p.y() * sin), dy + p.x() * sin + p.y() * cos);
   }
 
   private static double[] outline(Random random, List<Shape> before) {

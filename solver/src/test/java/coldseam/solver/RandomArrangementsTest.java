@@ -36,12 +36,19 @@ class RandomArrangementsTest {
   private static final int ORDINARY = 120;
   private static final int MOST_UNKNOWNS = 12_000;
 
+  /** In less out over what passes. */
+  private static final double BALANCE = 1e-9;
+
+  /** Rounding errors that go into the sum of flows. */
+  private static final double ROUNDINGS = 64;
+
   /** Points nearer to an edge than this may have been moved across it, m. */
   private static final double NEAR_EDGE_M = 5e-6;
 
   private int solved;
   private int certified;
   private int balances;
+  private int beyond;
   private double worstBalance;
   private double slowestS;
   private int slowestSeed;
@@ -53,7 +60,7 @@ class RandomArrangementsTest {
     List<String> failures = new ArrayList<>();
     for (int seed = first; seed < first + count; seed++) {
       long start = System.nanoTime();
-      Arrangement arrangement = Arrangement.random(new Random(seed));
+      Arrangement arrangement = Arrangement.of(seed);
       try {
         one(arrangement, seed);
       } catch (RuntimeException | AssertionError | StackOverflowError | OutOfMemoryError e) {
@@ -67,7 +74,7 @@ class RandomArrangementsTest {
         String.format(
             Locale.ROOT,
             "%d arrangements: %d solved, %d of them certified, %d explained, %d failed; %d"
-                + " balances within %.1e; slowest %.1f s (%d)",
+                + " balances of films within %.1e, %d of them beyond 1e-9; slowest %.1f s (%d)",
             count,
             solved,
             certified,
@@ -75,6 +82,7 @@ class RandomArrangementsTest {
             failures.size(),
             balances,
             worstBalance,
+            beyond,
             slowestS,
             slowestSeed);
     System.getLogger("coldseam.test").log(System.Logger.Level.INFO, told);
@@ -136,9 +144,12 @@ class RandomArrangementsTest {
 
   /**
    * The flows through the films of all spaces, from the temperatures of the surfaces, add up to 0.
-   * Where a surface has a fixed temperature what enters there is what is left, and nothing is shown.
+   * Where a surface has a fixed temperature what enters there is what is left, and nothing is
+   * shown. The balance of the result, which is that of the middle of the bounds, is 0 in any case.
    */
   private double balanced(Result result) {
+    double stated = result.balance().relative();
+    assertThat(Double.isNaN(stated) || Math.abs(stated) < BALANCE).as("balance stated").isTrue();
     Solution solution = result.heatLoss();
     double[] temperaturesC = new double[result.spaces().size()];
     for (int i = 0; i < temperaturesC.length; i++) {
@@ -172,10 +183,30 @@ class RandomArrangementsTest {
         }
       }
     }
-    double relative = size == 0 ? 0 : Math.abs(sum) / (size / 2);
-    assertThat(relative).as("balance").isLessThan(1e-9);
     balances++;
+    double relative = size == 0 ? 0 : Math.abs(sum) / (size / 2);
+    double rounding = size == 0 ? 0 : ROUNDINGS * Math.ulp(1.0) * stiffest(solution) * 40 / size;
+    assertThat(relative).as("balance, rounding %.1e", rounding).isLessThan(BALANCE + rounding);
+    beyond += relative > BALANCE ? 1 : 0;
     return relative;
+  }
+
+  /** Largest conductance across a triangle, W/(m·K): what the last digit of a temperature moves. */
+  private static double stiffest(Solution solution) {
+    Mesh mesh = solution.mesh();
+    double most = 0;
+    for (int t = 0; t < mesh.triangleCount(); t++) {
+      double longest = 0;
+      for (int k = 0; k < 3; k++) {
+        longest = Math.max(longest, mesh.sideLength(mesh.side(t, k)));
+      }
+      double conductivity =
+          solution.conditions().conducts(mesh.label(t))
+              ? solution.conditions().material(mesh.label(t)).conductivityWPerMK()
+              : 0;
+      most = Math.max(most, conductivity * longest * longest / (2 * mesh.area(t)));
+    }
+    return most;
   }
 
   /** The mesh has at a point what was laid there last. */

@@ -112,6 +112,9 @@ public record Drawing(
     if (!Files.exists(file)) {
       throw new DrawingException(0, "there is no such file", "check the path");
     }
+    if (!Files.isRegularFile(file)) {
+      throw new DrawingException(0, "this is no ordinary file", "name an SVG or DXF file");
+    }
     try (InputStream in = Files.newInputStream(file)) {
       return limited(in);
     } catch (IOException e) {

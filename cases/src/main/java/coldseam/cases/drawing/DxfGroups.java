@@ -1,5 +1,6 @@
 package coldseam.cases.drawing;
 
+import coldseam.cases.words.Invisible;
 import java.nio.ByteBuffer;
 import java.nio.charset.CharacterCodingException;
 import java.nio.charset.Charset;
@@ -86,7 +87,7 @@ final class DxfGroups {
 
   static String shortened(String text) {
     String plain = text.length() <= 40 ? text : text.substring(0, 37) + "...";
-    return plain.replace('\t', ' ');
+    return Invisible.shown(plain.replace('\t', ' ').replace('\n', ' '));
   }
 
   private String line() throws DrawingException {
@@ -151,7 +152,7 @@ final class DxfGroups {
 
   /** The value as a text, unescaped. */
   String text() {
-    return unescaped(value.strip());
+    return Invisible.shown(unescaped(value.strip()));
   }
 
   private static String unescaped(String text) {

@@ -1,6 +1,8 @@
 package coldseam.cases.drawing;
 
+import coldseam.cases.words.Invisible;
 import java.io.ByteArrayInputStream;
+import java.io.StringReader;
 import java.util.ArrayDeque;
 import java.util.Deque;
 import java.util.HashMap;
@@ -40,9 +42,9 @@ final class SvgTree {
    */
   static SvgTree read(byte[] bytes, LeftOuts leftOut) throws DrawingException {
     SvgTree tree = new SvgTree(leftOut);
+    String text = SvgEncoding.decoded(bytes);
     try {
-      XMLStreamReader reader =
-          factory(leftOut).createXMLStreamReader(new ByteArrayInputStream(bytes));
+      XMLStreamReader reader = factory(leftOut).createXMLStreamReader(new StringReader(text));
       while (reader.hasNext()) {
         tree.take(reader, reader.next());
       }
@@ -161,7 +163,8 @@ final class SvgTree {
       String space = reader.getAttributeNamespace(i);
       String key = reader.getAttributeLocalName(i);
       boolean editor = INKSCAPE.equals(space);
-      attributes.put(editor ? "inkscape:" + key : key, reader.getAttributeValue(i));
+      attributes.put(
+          editor ? "inkscape:" + key : key, Invisible.shown(reader.getAttributeValue(i)));
     }
     String space = reader.getNamespaceURI();
     boolean svg = space == null || space.isEmpty() || space.equals(SVG);

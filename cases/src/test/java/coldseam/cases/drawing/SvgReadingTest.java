@@ -292,4 +292,50 @@ class SvgReadingTest {
     assertThatThrownBy(() -> document("<html/>")).hasMessageContaining("no SVG document");
     assertThatThrownBy(() -> document("")).hasMessageContaining("empty");
   }
+
+  /** By mark of byte order, by name, or UTF-8; XML 1.0, appendix F. */
+  @Test
+  void encodings_are_known_by_mark_or_name() throws Exception {
+    String body =
+        "<svg xmlns='http://www.w3.org/2000/svg'><g id='Wärme'><rect width='1' height='1'/></g></svg>";
+    String latin = "<?xml version='1.0' encoding='ISO-8859-1'?>" + body;
+    for (byte[] bytes :
+        List.of(
+            body.getBytes(StandardCharsets.UTF_8),
+            ("\uFEFF" + body).getBytes(StandardCharsets.UTF_8),
+            ("\uFEFF" + body).getBytes(StandardCharsets.UTF_16LE),
+            ("\uFEFF" + body).getBytes(StandardCharsets.UTF_16BE),
+            body.getBytes(StandardCharsets.UTF_16LE),
+            latin.getBytes(StandardCharsets.ISO_8859_1))) {
+      Path file = Files.write(folder.resolve("encoded.svg"), bytes);
+      Drawing drawing = Drawing.read(file, OptionalDouble.empty());
+      assertThat(drawing.pieces()).extracting(Piece::layer).containsExactly("Wärme");
+    }
+  }
+
+  @Test
+  void what_is_not_in_the_encoding_is_told_with_its_line() throws Exception {
+    String head = "<svg xmlns='http://www.w3.org/2000/svg'>\n<g id='W";
+    byte[] latin = (head + "ärme'/></svg>").getBytes(StandardCharsets.ISO_8859_1);
+    Path file = Files.write(folder.resolve("latin.svg"), latin);
+    assertThatThrownBy(() -> Drawing.read(file, OptionalDouble.empty()))
+        .isInstanceOfSatisfying(
+            DrawingException.class,
+            e -> {
+              assertThat(e.wrong()).isEqualTo("a character here is not in the encoding UTF-8");
+              assertThat(e.line()).isEqualTo(2);
+            });
+    Files.writeString(file, "<?xml version='1.0' encoding='klingon'?><svg/>");
+    assertThatThrownBy(() -> Drawing.read(file, OptionalDouble.empty()))
+        .hasMessageContaining("`klingon` is no encoding known here");
+    Files.writeString(file, "<?xml version='1.0' encoding=?><svg/>");
+    assertThatThrownBy(() -> Drawing.read(file, OptionalDouble.empty()))
+        .hasMessageContaining("is no encoding known here");
+  }
+
+  @Test
+  void names_hold_nothing_that_a_terminal_acts_on() throws DrawingException {
+    Drawing drawing = read("<g id='a&#x9b;31m&#x202e;b'><rect width='1' height='1'/></g>");
+    assertThat(drawing.pieces().get(0).layer()).isEqualTo("a\uFFFD31m\uFFFDb");
+  }
 }

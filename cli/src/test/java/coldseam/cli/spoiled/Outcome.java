@@ -35,7 +35,8 @@ final class Outcome {
       Pattern.compile(
           "^[^:]+: (this is not a text file|this file is empty|this drawing is larger|"
               + "this is a DWG file|this is a binary DXF file|this packed file is damaged|"
-              + "there is no such file|no outline in this drawing).*");
+              + "there is no such file|there is no outline in this drawing|"
+              + "no lines of this drawing enclose anything).*");
 
   private static final ObjectMapper MAPPER = new ObjectMapper();
 

@@ -7,7 +7,9 @@ import java.util.regex.MatchResult;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 
-/** An SVG text spoiled by elements, attributes and numbers, and with what no drawing should hold. */
+/**
+ * An SVG text spoiled by elements, attributes and numbers, and with what no drawing should hold.
+ */
 final class SpoiledSvg {
   private static final Pattern NUMBER = Pattern.compile("-?\\d+(\\.\\d+)?");
   private static final Pattern ATTRIBUTE = Pattern.compile("[\\w:-]+=\"([^\"<>]*)\"");

@@ -70,9 +70,16 @@ final class PartitionBuilder {
   private Partition merged(Boundaries all, int[] topOfLoop, int[] loopLabels, Doubts doubts) {
     Merging merging = new Merging(all, loopLabels, snapM);
     Boundaries edges = merging.merged();
-    displacementM += merging.largestShiftM();
     HalfEdges merged = new HalfEdges(edges.x, edges.y, edges.start, edges.end);
     FaceRings rings = new FaceRings(edges, merged, loopLabels);
+    if (PartitionCheck.withoutArea(rings).isPresent()) {
+      // vertices on edges that are straight but for the resolution hold a thinner face open
+      merging = new Merging(all, loopLabels, 0);
+      edges = merging.merged();
+      merged = new HalfEdges(edges.x, edges.y, edges.start, edges.end);
+      rings = new FaceRings(edges, merged, loopLabels);
+    }
+    displacementM += merging.largestShiftM();
     PartitionCheck.faces(edges, merged, rings, loopLabels);
     PartitionCheck.merging(halves.loopArea, loopLabels, edges, rings, merging.largestShiftM());
     doubts.addFaces(edges, merged, rings, topOfLoop, closeM);

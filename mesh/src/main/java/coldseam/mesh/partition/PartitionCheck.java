@@ -4,6 +4,7 @@ import java.util.Arrays;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 
 /**
  * What must hold for every partition. The checks cost little and run every time; a failure is a
@@ -83,12 +84,21 @@ final class PartitionCheck {
         throw fault("an edge with one face on both sides", edges, halves.from(h));
       }
     }
+    Optional<FaceRings.Face> empty = withoutArea(rings);
+    if (empty.isPresent()) {
+      throw fault("a face without area", edges, empty.get().rings().get(0)[0]);
+    }
+  }
+
+  /** A face with fewer than three corners, or no area within them. */
+  static Optional<FaceRings.Face> withoutArea(FaceRings rings) {
     List<FaceRings.Face> all = rings.faces();
     for (FaceRings.Face face : all) {
       if (!(rings.area(face) > 0) || face.rings().get(0).length < 3) {
-        throw fault("a face without area", edges, face.rings().get(0)[0]);
+        return Optional.of(face);
       }
     }
+    return Optional.empty();
   }
 
   /**

@@ -440,4 +440,48 @@ class PartitionTest {
         .isInstanceOf(IllegalArgumentException.class)
         .hasMessageContaining("nothing of the areas is left");
   }
+
+  /**
+   * A triangle whose corner lies on its long side but for rounding, beside edges straight but for
+   * the resolution: its sides stay apart. Found at random.
+   */
+  @Test
+  void a_face_thinner_than_the_resolution_keeps_an_area() {
+    Partition partition =
+        of(
+            laid(
+                List.of(
+                    polygon(
+                        1,
+                        0.25,
+                        0.7967077200708055,
+                        0.034618501662032067,
+                        0.5,
+                        0.4,
+                        0.2,
+                        0.30530177167101226,
+                        0.2,
+                        0.85,
+                        0.2),
+                    box(1, -0.05, 0.35, 0.7, 0.75),
+                    polygon(
+                        0,
+                        0.027620439000348163,
+                        0.630444725666762,
+                        0.49384275260198876,
+                        0.5250682160448936,
+                        0.21638059175687908,
+                        0.390222362833381,
+                        0.4118672575653366,
+                        0.49684225731080176,
+                        0.35115787121768426,
+                        0.3394413262752752,
+                        0.046422340136243136,
+                        0.40595518359187344),
+                    box(1, -0.1, 0.5, 0.95, 0.75)),
+                p -> new Point(p.x() + 1, p.y())));
+    for (int face = 0; face < partition.faceCount(); face++) {
+      assertThat(partition.faceArea(face)).isPositive();
+    }
+  }
 }

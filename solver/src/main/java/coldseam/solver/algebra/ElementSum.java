@@ -159,7 +159,7 @@ public final class ElementSum {
           int r = member[at + q];
           if (r >= 0 && r <= c) {
             double entry = entries.entry(element, p, q);
-            if (entry != 0) {
+            if (entry != 0 || r == c) {
               add(r, entry);
             }
           }
