@@ -139,6 +139,15 @@ final class GlazingReader {
           "with the gaps left away it is " + Figures.of(1 / (FILMS_M2K_PER_W + panes)));
       return Optional.empty();
     }
+    if (gaps / resistance < MaterialReader.LEAST_CONDUCTIVITY_W_PER_MK) {
+      problems.add(
+          fields.get("U").get(),
+          "the gaps of the glazing would have a conductivity of "
+              + Figures.of(gaps / resistance)
+              + " W/(m K)",
+          "check its U, e.g. `1.1`, in W/(m2 K)");
+      return Optional.empty();
+    }
     Material gas = material(new Edge("gas", 0, gaps / resistance));
     pass.assume(
         "conductivity of " + gas.name() + " in the glazing",
@@ -165,6 +174,13 @@ final class GlazingReader {
     double conductivity =
         pass.quantities()
             .read(conductivityNode.get(), "`conductivity` of " + what, Place.CONDUCTIVITY);
+    if (conductivity > 0 && conductivity < MaterialReader.LEAST_CONDUCTIVITY_W_PER_MK) {
+      problems.add(
+          conductivityNode.get(),
+          "`conductivity` of " + what + " is below anything known",
+          "still air has 0.025; write 0 if no heat is to pass");
+      return Optional.empty();
+    }
     return Double.isNaN(height) || Double.isNaN(conductivity)
         ? Optional.empty()
         : Optional.of(new Edge(key, height, conductivity));

@@ -188,4 +188,24 @@ class FrameReaderTest {
             "29:23: `spacer` of `glazing` has no `conductivity`; add `conductivity: `",
             "30:5: this stack has both `glazing` and `part`; a glazing is one already");
   }
+
+  @Test
+  void a_glazing_that_conducts_next_to_nothing() {
+    String stack =
+        "  - stack: {face: [[90, 46], [300, 46]], towards: down}\n    layers: "
+            + "[[glass, 4], [gap, 20], [glass, 4]]\n    glazing: ";
+    assertThat(
+            Written.problems(
+                folder,
+                FRAME
+                    + stack
+                    + "{U: 1e-300}\n"
+                    + stack
+                    + "{U: 1, spacer: {height: 6, conductivity: 1e-300}}\n"))
+        .containsExactly(
+            "15:18: the gaps of the glazing would have a conductivity of 2E-302 W/(m K); check its"
+                + " U, e.g. `1.1`, in W/(m2 K)",
+            "18:55: `conductivity` of `spacer` of `glazing` is below anything known; still air has"
+                + " 0.025; write 0 if no heat is to pass");
+  }
 }

@@ -3,6 +3,7 @@ package coldseam.cli;
 import coldseam.cases.Case;
 import coldseam.cases.CaseException;
 import coldseam.cases.Changes;
+import coldseam.cases.Problem;
 import coldseam.cases.WindowFile;
 import coldseam.cases.building.BuildingFile;
 import coldseam.cases.study.Axis;
@@ -147,6 +148,9 @@ final class SolveCommand implements Command {
     List<WindowSolve> whole =
         windows.isEmpty() ? List.of() : WindowSolve.read(windows, cases, typed, here, taken);
     List<Job> jobs = jobs(cases, typed, here, taken);
+    if (jobs.size() + whole.size() > 1) {
+      resolveAll(jobs, whole, here);
+    }
     int code = ExitCode.DONE;
     boolean first = true;
     for (Job job : jobs) {
@@ -159,6 +163,29 @@ final class SolveCommand implements Command {
       first = false;
     }
     return code;
+  }
+
+  /** Finds what is at fault in any of several before the first is solved and written. */
+  private static void resolveAll(List<Job> jobs, List<WindowSolve> windows, Surroundings here)
+      throws CaseException {
+    List<Problem> problems = new ArrayList<>();
+    for (Job job : jobs) {
+      try {
+        CaseList.work(job.from(), job.subject().variant(), Solver::inspect);
+      } catch (CaseException mistakes) {
+        problems.addAll(mistakes.problems());
+      }
+    }
+    for (WindowSolve window : windows) {
+      try {
+        WindowJobs.understood(window.from(), false, here);
+      } catch (CaseException mistakes) {
+        problems.addAll(mistakes.problems());
+      }
+    }
+    if (!problems.isEmpty()) {
+      throw new CaseException(problems);
+    }
   }
 
   private static void contradictions(Syntax.Typed typed) throws UsageException {

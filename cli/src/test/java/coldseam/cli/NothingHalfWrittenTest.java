@@ -79,6 +79,20 @@ class NothingHalfWrittenTest {
     assertThat(solved).isGreaterThanOrEqualTo(1);
   }
 
+  /** A mistake that shows only when the second of two is resolved keeps the first from writing. */
+  @Test
+  void a_fault_in_a_variant_keeps_all_from_being_written() throws IOException {
+    String apart =
+        Cases.WALL.replace(
+            "materials: {brick: {conductivity: 0.25}}", "fills: {indoors: outdoors}");
+    Cases.write(dir, "wall.yaml", apart);
+    Ran ran = Ran.in(dir, "solve", "wall.yaml", "--variants", "--no-plots");
+    assertThat(ran.code()).as(ran.err()).isEqualTo(ExitCode.BAD_INPUT);
+    assertThat(ran.err()).startsWith("wall.yaml:").contains("touches no material");
+    assertThat(ran.out()).isEmpty();
+    assertThat(names()).containsExactly("wall.yaml");
+  }
+
   /** Every scalar of the file replaced by nonsense in turn. */
   @Test
   void a_case_spoiled_anywhere_is_solved_or_explained() throws IOException {

@@ -39,6 +39,9 @@ class RandomArrangementsTest {
   /** In less out over what passes. */
   private static final double BALANCE = 1e-9;
 
+  /** Rounding over what passes beyond which nothing passes: no material joins the spaces. */
+  private static final double NOTHING_FLOWS = 1e-4;
+
   /** Rounding errors that go into the sum of flows. */
   private static final double ROUNDINGS = 64;
 
@@ -183,9 +186,12 @@ class RandomArrangementsTest {
         }
       }
     }
-    balances++;
     double relative = size == 0 ? 0 : Math.abs(sum) / (size / 2);
     double rounding = size == 0 ? 0 : ROUNDINGS * Math.ulp(1.0) * stiffest(solution) * 40 / size;
+    if (rounding > NOTHING_FLOWS) {
+      return 0;
+    }
+    balances++;
     assertThat(relative).as("balance, rounding %.1e", rounding).isLessThan(BALANCE + rounding);
     beyond += relative > BALANCE ? 1 : 0;
     return relative;

@@ -10,9 +10,9 @@ import java.util.Random;
 import java.util.stream.Stream;
 
 /**
- * What is spoiled: every case, window file and drawing that ships, the demo drawings as they stand
- * in a case, and what has been found to break something. All of it is copied to a folder of its
- * own, so that cases find the cases and drawings they name.
+ * What is spoiled: every case, window file, building and drawing that ships, the demo drawings as
+ * they stand in a case, and what has been found to break something. All of it is copied to a folder
+ * of its own, so that cases find the cases and drawings they name.
  */
 final class Corpus {
   private static final List<String> SHIPPED = List.of("awkward", "demo", "published", "windows");
@@ -21,6 +21,7 @@ final class Corpus {
   private final List<Path> cases = new ArrayList<>();
   private final List<Path> drawings = new ArrayList<>();
   private final List<Path> hosts = new ArrayList<>();
+  private final List<Path> found = new ArrayList<>();
 
   /**
    * One spoiled file in its place, and what to do with it.
@@ -46,6 +47,10 @@ final class Corpus {
     copy(own, root.resolve("own"));
     for (Path file : files(root)) {
       String name = file.getFileName().toString();
+      if (file.getParent().endsWith("found")) {
+        found.add(file);
+        continue;
+      }
       if (name.startsWith("in-place-")) {
         Path drawing = root.resolve("demo/drawings").resolve(drawingOf(file));
         Files.copy(drawing, file.resolveSibling(drawing.getFileName()));
@@ -88,6 +93,36 @@ final class Corpus {
     return files(root);
   }
 
+  /** What broke something once, as it was; the part of a name after {@code --} is a drawing's. */
+  List<Input> foundBefore() throws IOException {
+    List<Input> inputs = new ArrayList<>();
+    for (Path file : found) {
+      String name = file.getFileName().toString();
+      byte[] bytes = Files.readAllBytes(file);
+      int mark = name.indexOf("--");
+      if (mark >= 0) {
+        for (Path host : hosts) {
+          if (name.substring(mark + 2).equals(drawingOf(host))) {
+            Path drawing = host.resolveSibling(drawingOf(host));
+            inputs.add(new Input(drawing, bytes, List.of(solve(host.getFileName().toString()))));
+          }
+        }
+      } else if (name.endsWith(".yaml")) {
+        Path place = root.resolve("demo/spoiled.yaml");
+        Path inPlace = root.resolve("own/spoiled.yaml");
+        boolean drawn = text(bytes).contains("drawings:");
+        inputs.add(
+            new Input(
+                drawn ? inPlace : place, bytes, List.of(solve("spoiled.yaml", "--variants"))));
+      } else {
+        Path place = root.resolve("demo/drawings/spoiled" + name.substring(name.lastIndexOf('.')));
+        inputs.add(
+            new Input(place, bytes, List.of(List.of("draft", place.getFileName().toString()))));
+      }
+    }
+    return inputs;
+  }
+
   /**
    * The spoiled input of a number.
    *
@@ -109,6 +144,12 @@ final class Corpus {
             : SpoiledYaml.of(text(bytes), Files.readString(other), random)
                 .getBytes(StandardCharsets.UTF_8);
     Path file = seed.resolveSibling("spoiled.yaml");
+    if (text(bytes).contains("\nbuilding:")) {
+      List<String> ledger = new ArrayList<>(solve("spoiled.yaml"));
+      ledger.set(0, "ledger");
+      return new Input(
+          file, spoiled, List.of(random.nextBoolean() ? ledger : List.of("check", "spoiled.yaml")));
+    }
     List<String> command =
         switch (random.nextInt(6)) {
           case 0, 1 -> List.of("check", "spoiled.yaml");

@@ -36,7 +36,8 @@ final class Outcome {
           "^[^:]+: (this is not a text file|this file is empty|this drawing is larger|"
               + "this is a DWG file|this is a binary DXF file|this packed file is damaged|"
               + "there is no such file|there is no outline in this drawing|"
-              + "no lines of this drawing enclose anything).*");
+              + "no lines of this drawing enclose anything).*"
+              + "|.*spoiled.yaml is (a building; did you mean|no building).*");
 
   private static final ObjectMapper MAPPER = new ObjectMapper();
 
@@ -148,7 +149,10 @@ final class Outcome {
   }
 
   private void placed(String line) {
-    boolean summary = line.endsWith(" mistakes") || line.startsWith("warning: ");
+    boolean summary =
+        line.endsWith(" mistakes")
+            || line.startsWith("warning: ")
+            || line.endsWith(" --help says more");
     if (!summary && !PLACED.matcher(line).matches() && !WHOLE_FILE.matcher(line).matches()) {
       faults.add("no place: " + line);
     }

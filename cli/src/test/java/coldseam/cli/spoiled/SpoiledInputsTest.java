@@ -51,7 +51,7 @@ class SpoiledInputsTest {
     Corpus corpus = new Corpus(repository, folder);
     List<Path> clean = corpus.all();
     for (long number = first; number < first + count; number++) {
-      if (!watched(corpus, repository, number)) {
+      if (!watched(corpus.input(number), repository, number)) {
         corpus = new Corpus(repository, Files.createDirectory(folder.resolve("after-" + number)));
         clean = corpus.all();
       }
@@ -71,6 +71,18 @@ class SpoiledInputsTest {
     assertThat(codes.keySet()).contains(0, 2);
   }
 
+  @Test
+  void what_broke_something_once() throws Exception {
+    Path repository = repository();
+    Corpus corpus = new Corpus(repository, folder);
+    List<Corpus.Input> inputs = corpus.foundBefore();
+    for (int i = 0; i < inputs.size(); i++) {
+      watched(inputs.get(i), repository, i);
+    }
+    assertThat(failures).isEmpty();
+    assertThat(inputs).hasSizeGreaterThan(5);
+  }
+
   private static Path repository() {
     String told = System.getProperty("coldseam.root", "");
     Path at = told.isEmpty() ? Path.of("").toAbsolutePath() : Path.of(told);
@@ -85,8 +97,7 @@ class SpoiledInputsTest {
    *
    * @return false if it hangs
    */
-  private boolean watched(Corpus corpus, Path repository, long number) throws Exception {
-    Corpus.Input input = corpus.input(number);
+  private boolean watched(Corpus.Input input, Path repository, long number) throws Exception {
     Outcome[] outcome = new Outcome[1];
     Throwable[] thrown = new Throwable[1];
     Thread runner =
