@@ -336,7 +336,7 @@ final class SimpleYaml {
         if (c == ',' || c == ']' || c == '}') {
           break;
         }
-        if (c == '[' || c == '{' || c == ':' && ",[]{}".indexOf(peek(1)) >= 0 || c == '?') {
+        if (c == '[' || c == '{' || c == ':' && ",[]{}".indexOf(peek(1)) >= 0) {
           throw new BeyondException();
         }
       }
