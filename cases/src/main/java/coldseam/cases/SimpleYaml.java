@@ -1,5 +1,6 @@
 package coldseam.cases;
 
+import coldseam.cases.words.Invisible;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -49,13 +50,12 @@ final class SimpleYaml {
   static Optional<Node> read(String text, int deepest, int mostNodes) {
     for (int i = 0; i < text.length(); i++) {
       char c = text.charAt(i);
-      if (c < ' ' && c != '\n'
-          || c >= 0x7F && c < 0xA0
-          || c >= 0xD800
-          || c == 0x2028
-          || c == 0x2029) {
+      if (c == '\t' || c >= 0xD800) {
         return Optional.empty();
       }
+    }
+    if (Invisible.first(text) >= 0) {
+      return Optional.empty();
     }
     try {
       return Optional.of(new SimpleYaml(text, deepest, mostNodes).document());

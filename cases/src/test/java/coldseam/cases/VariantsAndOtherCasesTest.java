@@ -153,6 +153,6 @@ class VariantsAndOtherCasesTest {
     assertThat(Written.problems(folder, subtracting("{case: \"a\\0b\", " + between + "}")))
         .singleElement()
         .asString()
-        .contains("is no file name");
+        .contains("an invisible character stands here, U+0000");
   }
 }

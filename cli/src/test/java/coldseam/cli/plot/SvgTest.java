@@ -45,7 +45,7 @@ class SvgTest {
       assertThat(svg)
           .containsPattern(
               solved.result().couplings().stream().allMatch(c -> c.valueWPerMK().certified())
-                  ? "L2D CERTIFIED|TEMPERATURES ARE ESTIMATES"
+                  ? "L[23]D CERTIFIED|TEMPERATURES ARE ESTIMATES"
                   : "NOT CERTIFIED")
           .contains("licensed professional decide");
     }
