@@ -125,8 +125,7 @@ final class OutputFolder {
       }
       if (fresh) {
         writer.write(stage.resolve(LIST), list(files.keySet()));
-        Files.move(stage, folder, StandardCopyOption.ATOMIC_MOVE);
-        staged.moved(stage);
+        staged.move(stage, folder);
       } else {
         replace(stage, files.keySet(), changed);
       }

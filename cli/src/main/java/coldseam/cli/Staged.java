@@ -5,6 +5,7 @@ import java.nio.file.DirectoryStream;
 import java.nio.file.Files;
 import java.nio.file.LinkOption;
 import java.nio.file.Path;
+import java.nio.file.StandardCopyOption;
 import java.nio.file.attribute.FileTime;
 import java.util.ArrayList;
 import java.util.List;
@@ -59,6 +60,18 @@ final class Staged implements AutoCloseable {
   synchronized Path take(Path path) {
     laid.add(path);
     return path;
+  }
+
+  /**
+   * Moves a whole folder to its place, never while it is being deleted because the run ends.
+   *
+   * @param from what was taken charge of
+   * @param to where nothing is yet
+   * @throws IOException if it cannot be moved, or has been deleted
+   */
+  synchronized void move(Path from, Path to) throws IOException {
+    Files.move(from, to, StandardCopyOption.ATOMIC_MOVE);
+    laid.remove(from);
   }
 
   /** Lets go of what has been moved to its place. */

@@ -102,8 +102,17 @@ class ChromiumTest {
   }
 
   private String hover(String plot, double x, double y) throws Exception {
-    double[] at = inWindow(plot, x, y);
-    browser.call("Input.dispatchMouseEvent", "type", "mouseMoved", "x", at[0], "y", at[1]);
+    // The page may still be scrolling when the pointer is placed.
+    for (int attempt = 0; attempt < 20; attempt++) {
+      double[] at = inWindow(plot, x, y);
+      browser.call("Input.dispatchMouseEvent", "type", "mouseMoved", "x", at[0], "y", at[1]);
+      double[] after = inWindow(plot, x, y);
+      if (Math.hypot(after[0] - at[0], after[1] - at[1]) < 0.5
+          && !sounding(plot).contains("outside")) {
+        break;
+      }
+      Thread.sleep(50);
+    }
     return sounding(plot);
   }
 
