@@ -179,6 +179,10 @@ final class ReadCase implements Case {
   @Override
   public Problem locate(Fault fault) {
     Node node = find(fault.part(), fault.name());
+    if (node == null) {
+      // the stretches and flanks that the ground brings along stand nowhere else
+      node = find("ground", "");
+    }
     String message = fault.message();
     if (!fault.name().isEmpty() && !fault.part().equals("section")) {
       String part = symbol(fault.part());
